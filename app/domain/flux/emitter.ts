@@ -1,6 +1,6 @@
-import type { Beam } from '#app/domain/flux/beam'
-import type { HeaterFrame } from '#app/domain/layout/body'
-import type { Vec3 } from '#app/domain/vector'
+import type { Beam } from '#app/domain/flux/beam.ts'
+import type { HeaterFrame } from '#app/domain/layout/body.ts'
+import type { Vec3 } from '#app/domain/vector.ts'
 
 /** A tubular element: the centre of its axis (which runs along the emitter's u), its length m, its radiant power W. */
 export interface Element {

@@ -1,6 +1,6 @@
-import type { HeaterModel } from '#app/domain/heaters/heater-model'
-import type { MountedHeater } from '#app/domain/layout/layout'
-import { add, cross, radians, scale, type Vec3 } from '#app/domain/vector'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { MountedHeater } from '#app/domain/layout/layout.ts'
+import { add, cross, radians, scale, type Vec3 } from '#app/domain/vector.ts'
 
 /** The heater's own directions: u along the element, w the beam axis out of the reflector, v = w × u. */
 export interface HeaterFrame {

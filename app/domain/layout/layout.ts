@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { mountSchema } from '#app/domain/heaters/heater-model'
+import { mountSchema } from '#app/domain/heaters/heater-model.ts'
 
 /** Stated maxima of one job. */
 export const maxHeaters = 200

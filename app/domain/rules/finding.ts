@@ -1,4 +1,4 @@
-import type { Vec3 } from '#app/domain/vector'
+import type { Vec3 } from '#app/domain/vector.ts'
 
 /** The four outcomes of a check. No data is "cannot tell", never a pass. */
 export type Outcome = 'fails' | 'measure first' | 'pass' | 'cannot tell'
