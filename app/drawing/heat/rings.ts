@@ -1,0 +1,47 @@
+import type { Vec2 } from '#app/domain/vector.ts'
+
+/** A closed line; the last point repeats the first. */
+export type Ring = readonly Vec2[]
+
+/** Distance of p from the line through a and b, m. */
+function distanceToLine(p: Vec2, a: Vec2, b: Vec2): number {
+  const [dx, dy] = [b[0] - a[0], b[1] - a[1]]
+  const length = Math.hypot(dx, dy)
+  if (length === 0) return Math.hypot(p[0] - a[0], p[1] - a[1])
+  return Math.abs((p[0] - a[0]) * dy - (p[1] - a[1]) * dx) / length
+}
+
+/** The ring without the points that lie within `tolerance` m of the line between those that stay. */
+export function thinRing(ring: Ring, tolerance: number): Ring {
+  const kept: Vec2[] = []
+  let run: Vec2[] = []
+  for (const [i, point] of ring.entries()) {
+    const last = kept.at(-1)
+    const next = ring[i + 1]
+    if (!last || !next) {
+      kept.push(point)
+      run = []
+      continue
+    }
+    run.push(point)
+    if (run.length > 12 || run.some((skipped) => distanceToLine(skipped, last, next) > tolerance)) {
+      kept.push(point)
+      run = []
+    }
+  }
+  return kept
+}
+
+const figure = (value: number): number => Math.round(value * 1000) / 1000
+
+/** SVG path of closed rings, to the millimetre. */
+export const pathOfRings = (rings: readonly Ring[]): string =>
+  rings
+    .map(
+      (ring) =>
+        `M${ring
+          .slice(0, -1)
+          .map(([x, y]) => `${figure(x)} ${figure(y)}`)
+          .join('L')}Z`,
+    )
+    .join('')
