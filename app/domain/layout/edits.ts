@@ -1,4 +1,5 @@
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
+import { roundLength } from '#app/domain/units.ts'
 
 /** A layout after an edit that makes heaters, with the ids of the new ones in order. */
 export interface Placed {
@@ -14,9 +15,6 @@ export type HeaterChange = Partial<Omit<MountedHeater, 'id' | 'ratedVoltage' | '
   readonly ratedVoltage?: number | null
   readonly stage?: number | null
 }
-
-/** Lengths are kept to 0.1 mm. */
-export const roundLength = (metres: number): number => Math.round(metres * 1e4) / 1e4
 
 /** The same direction within −180 to 180°, to 0.01°. */
 export function roundTurn(degrees: number): number {

@@ -1,5 +1,6 @@
 import { type HeaterPlace, placeHeaters, type Placed } from '#app/domain/layout/edits.ts'
 import { type Layout, maxHeaters } from '#app/domain/layout/layout.ts'
+import { roundLength } from '#app/domain/units.ts'
 import { radians, type Vec2 } from '#app/domain/vector.ts'
 
 /** How heaters repeat: centre to centre m, how many more, and the direction in plan, counter-clockwise from +x. */
@@ -59,7 +60,7 @@ export function spaceEqually(layout: Layout, ids: readonly string[]): Layout {
     ...layout,
     heaters: layout.heaters.map((heater) => {
       const at = places.get(heater.id)
-      return at === undefined ? heater : { ...heater, [along]: Math.round(at * 1e4) / 1e4 }
+      return at === undefined ? heater : { ...heater, [along]: roundLength(at) }
     }),
   }
 }
