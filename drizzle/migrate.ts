@@ -1,19 +1,10 @@
-import { readFileSync } from 'node:fs'
 import path from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { drizzle } from 'drizzle-orm/node-postgres'
 import { migrate } from 'drizzle-orm/node-postgres/migrator'
 import { Client } from 'pg'
-import { z } from 'zod'
 
 const folder = path.join(path.dirname(fileURLToPath(import.meta.url)), 'migrations')
-const journalSchema = z.object({ entries: z.array(z.object({ when: z.number(), tag: z.string() })) })
-
-/** Time of the newest migration of this version of the application: the database is up to date when it has it. */
-export function newestMigration(): number {
-  const journal = journalSchema.parse(JSON.parse(readFileSync(path.join(folder, 'meta/_journal.json'), 'utf8')))
-  return Math.max(...journal.entries.map((entry) => entry.when))
-}
 
 /** Brings a database up to date as its owner. Two at once wait for each other. */
 export async function migrateDatabase(ownerUrl: string): Promise<void> {
