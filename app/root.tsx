@@ -12,8 +12,12 @@ import {
 import { ToastProvider } from '#app/components/toast.tsx'
 import { Wordmark } from '#app/components/wordmark.tsx'
 import { buttonClass } from '#app/components/button.tsx'
+import { middleware as serverMiddleware } from '#app/server/middleware.server.ts'
 import type { Route } from './+types/root'
 import './app.css'
+
+/** Before every loader and action: headers, origin, body limits, membership. */
+export const middleware: Route.MiddlewareFunction[] = serverMiddleware
 
 export const links: Route.LinksFunction = () => [{ rel: 'icon', href: '/icon.svg', type: 'image/svg+xml' }]
 
