@@ -1,0 +1,40 @@
+import type { Emitter } from '#app/domain/flux/emitter.ts'
+import type { Obstruction } from '#app/domain/flux/shading.ts'
+import type { Vec2 } from '#app/domain/vector.ts'
+
+/** What the feels-like map needs besides the emitters. °C, m/s, clo. */
+export interface MapConditions {
+  readonly airTemperature: number
+  readonly windSpeed: number
+  /** Mean radiant temperature of the surroundings. */
+  readonly surroundingsTemperature: number
+  readonly clothing: number
+  readonly posture: 'seated' | 'standing'
+  /** Absorptance of clothing and skin, one per emitter in the question's order. */
+  readonly absorptance: readonly number[]
+}
+
+/**
+ * What a map shows. `flux`: irradiance of all emitters on the horizontal plane, W/m². `share`: that of one emitter
+ * alone, W/m². `overlap`: how many emitters give at least the threshold, W/m², each alone. `feels-like`: °C with the
+ * heaters on; which way a person on the map faces is not known, so the mean over all facings is taken.
+ */
+export type MapQuantity =
+  | { readonly kind: 'flux' }
+  | { readonly kind: 'share'; readonly emitterId: string }
+  | { readonly kind: 'overlap'; readonly threshold: number }
+  | { readonly kind: 'feels-like'; readonly conditions: MapConditions }
+
+/** One question to the worker; plain data. Heights and cell size in m. */
+export interface MapQuestion {
+  readonly emitters: readonly Emitter[]
+  readonly floor: readonly Vec2[]
+  /** Height of the horizontal plane above finished floor. */
+  readonly z: number
+  readonly cell: number
+  readonly quantity: MapQuantity
+  /** Values at which isolines are drawn, in the unit of the quantity. */
+  readonly levels: readonly number[]
+  /** Absent: nothing stands in the way. */
+  readonly obstructions?: readonly Obstruction[]
+}
