@@ -1,0 +1,60 @@
+import { eq } from 'drizzle-orm'
+import { briefSchema, type Brief } from '#app/domain/brief/brief.ts'
+import type { Answer, Refusal } from '#app/server/answers.server.ts'
+import { contentHash } from '#drizzle/content-hash.ts'
+import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
+import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
+import { saveRevision, type Revisioned, type Save } from '#app/server/saving.server.ts'
+import type { Member } from '#app/server/session.server.ts'
+import { briefRevisions, briefs, jobs } from '#drizzle/schema.ts'
+
+/** A job's brief and the revision it has. */
+export interface KeptBrief {
+  readonly revision: number
+  readonly brief: Brief
+}
+
+async function readBrief(tx: Transaction, jobId: string, lock: boolean): Promise<KeptBrief | null> {
+  const asked = tx.select({ revision: briefs.revision, body: briefs.body }).from(briefs).where(eq(briefs.jobId, jobId))
+  const [row] = lock ? await asked.for('update') : await asked
+  return row ? { revision: row.revision, brief: briefSchema.parse(row.body) } : null
+}
+
+/** The brief of a job as it is now. Throws when a job has none: every job starts with one. */
+export async function findBrief(job: OpenJob): Promise<KeptBrief> {
+  const kept = await asOrganisation(job.member.organisationId, (tx) => readBrief(tx, job.id, false))
+  if (!kept) throw new Error(`Job ${job.id} has no brief.`)
+  return kept
+}
+
+/** The first revision of a new job's brief. */
+export async function insertBrief(tx: Transaction, member: Member, jobId: string, brief: Brief): Promise<void> {
+  const row = { organisationId: member.organisationId, jobId, revision: 1, body: brief }
+  await tx.insert(briefs).values({ ...row, updatedBy: member.userId })
+  await tx.insert(briefRevisions).values({ ...row, contentHash: contentHash(brief), authorId: member.userId })
+}
+
+const briefOf = ({ id: jobId, member }: OpenJob): Revisioned<Brief> => ({
+  resource: `jobs/${jobId}/brief`,
+  lock: async (tx) => {
+    const kept = await readBrief(tx, jobId, true)
+    return kept && { revision: kept.revision, shown: kept }
+  },
+  write: async (tx, revision, brief, hash) => {
+    const { organisationId, userId } = member
+    await tx
+      .update(briefs)
+      .set({ revision, body: brief, updatedAt: new Date(), updatedBy: userId })
+      .where(eq(briefs.jobId, jobId))
+    await tx
+      .insert(briefRevisions)
+      .values({ organisationId, jobId, revision, body: brief, contentHash: hash, authorId: userId })
+    await tx.update(jobs).set({ place: brief.place }).where(eq(jobs.id, jobId))
+    await touchJob(tx, jobId)
+    return { revision, brief }
+  },
+})
+
+/** Saves a job's brief by the one rule for saving; the job's list shows the brief's place. */
+export const saveBrief = (job: OpenJob, save: Save<Brief>): Promise<Answer | Refusal> =>
+  saveRevision(job.member, briefOf(job), save, () => Promise.resolve(save.body))

@@ -1,0 +1,44 @@
+import { and, eq } from 'drizzle-orm'
+import { briefSchema, type Brief } from '#app/domain/brief/brief.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import { siteSchema, type Site } from '#app/domain/site/site.ts'
+import { modelsByCode } from '#app/server/data/heaters.server.ts'
+import { present, variantColumns, variantOf, type Variant } from '#app/server/data/variants.server.ts'
+import { asOrganisation } from '#app/server/organisation.server.ts'
+import type { Member } from '#app/server/session.server.ts'
+import { briefs, sites, variants } from '#drizzle/schema.ts'
+
+/** A variant with everything its figures rest on, all of one moment. */
+export interface LaidOut {
+  readonly variant: Variant
+  readonly site: Site
+  readonly siteRevision: number
+  readonly brief: Brief
+  readonly briefRevision: number
+  readonly models: ReadonlyMap<string, HeaterModel>
+}
+
+/** A variant of the organisation with its site, brief and catalogue; null when it was deleted. */
+export function findLaidOut(of: { readonly id: string; readonly member: Member }): Promise<LaidOut | null> {
+  return asOrganisation(of.member.organisationId, async (tx) => {
+    const [row] = await tx
+      .select({
+        variant: variantColumns,
+        site: { revision: sites.revision, body: sites.body },
+        brief: { revision: briefs.revision, body: briefs.body },
+      })
+      .from(variants)
+      .innerJoin(sites, eq(sites.jobId, variants.jobId))
+      .innerJoin(briefs, eq(briefs.jobId, variants.jobId))
+      .where(and(eq(variants.id, of.id), present))
+    if (!row) return null
+    return {
+      variant: variantOf(row.variant),
+      site: siteSchema.parse(row.site.body),
+      siteRevision: row.site.revision,
+      brief: briefSchema.parse(row.brief.body),
+      briefRevision: row.brief.revision,
+      models: await modelsByCode(tx),
+    }
+  })
+}

@@ -1,0 +1,59 @@
+import { eq } from 'drizzle-orm'
+import { siteSchema, type Site } from '#app/domain/site/site.ts'
+import type { Answer, Refusal } from '#app/server/answers.server.ts'
+import { contentHash } from '#drizzle/content-hash.ts'
+import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
+import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
+import { saveRevision, type Revisioned, type Save } from '#app/server/saving.server.ts'
+import type { Member } from '#app/server/session.server.ts'
+import { siteRevisions, sites } from '#drizzle/schema.ts'
+
+/** A job's site and the revision it has. */
+export interface KeptSite {
+  readonly revision: number
+  readonly site: Site
+}
+
+async function readSite(tx: Transaction, jobId: string, lock: boolean): Promise<KeptSite | null> {
+  const asked = tx.select({ revision: sites.revision, body: sites.body }).from(sites).where(eq(sites.jobId, jobId))
+  const [row] = lock ? await asked.for('update') : await asked
+  return row ? { revision: row.revision, site: siteSchema.parse(row.body) } : null
+}
+
+/** The site of a job as it is now. Throws when a job has none: every job starts with one. */
+export async function findSite(job: OpenJob): Promise<KeptSite> {
+  const kept = await asOrganisation(job.member.organisationId, (tx) => readSite(tx, job.id, false))
+  if (!kept) throw new Error(`Job ${job.id} has no site.`)
+  return kept
+}
+
+/** The first revision of a new job's site. */
+export async function insertSite(tx: Transaction, member: Member, jobId: string, site: Site): Promise<void> {
+  const row = { organisationId: member.organisationId, jobId, revision: 1, body: site }
+  await tx.insert(sites).values({ ...row, updatedBy: member.userId })
+  await tx.insert(siteRevisions).values({ ...row, contentHash: contentHash(site), authorId: member.userId })
+}
+
+const siteOf = ({ id: jobId, member }: OpenJob): Revisioned<Site> => ({
+  resource: `jobs/${jobId}/site`,
+  lock: async (tx) => {
+    const kept = await readSite(tx, jobId, true)
+    return kept && { revision: kept.revision, shown: kept }
+  },
+  write: async (tx, revision, site, hash) => {
+    const { organisationId, userId } = member
+    await tx
+      .update(sites)
+      .set({ revision, body: site, updatedAt: new Date(), updatedBy: userId })
+      .where(eq(sites.jobId, jobId))
+    await tx
+      .insert(siteRevisions)
+      .values({ organisationId, jobId, revision, body: site, contentHash: hash, authorId: userId })
+    await touchJob(tx, jobId)
+    return { revision, site }
+  },
+})
+
+/** Saves a job's site by the one rule for saving. */
+export const saveSite = (job: OpenJob, save: Save<Site>): Promise<Answer | Refusal> =>
+  saveRevision(job.member, siteOf(job), save, () => Promise.resolve(save.body))

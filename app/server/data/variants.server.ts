@@ -1,0 +1,112 @@
+import { and, asc, eq, isNull } from 'drizzle-orm'
+import { z } from 'zod'
+import type { Action } from '#app/domain/access/roles.ts'
+import { mountedHeaterSchema, type MountedHeater } from '#app/domain/layout/layout.ts'
+import type { OpenJob } from '#app/server/data/jobs.server.ts'
+import { isId, missing } from '#app/server/missing.server.ts'
+import { asOrganisation } from '#app/server/organisation.server.ts'
+import { requireMay, type Member } from '#app/server/session.server.ts'
+import { variants } from '#drizzle/schema.ts'
+
+/** A variant as lists show it; `updatedAt` is ISO 8601. */
+export interface VariantSummary {
+  readonly id: string
+  readonly jobId: string
+  readonly number: number
+  readonly revision: number
+  readonly title: string
+  readonly updatedAt: string
+}
+
+/** A variant with its heaters. */
+export interface Variant extends VariantSummary {
+  readonly heaters: MountedHeater[]
+}
+
+/** A variant that the person who asks may see, and that person. */
+export interface OpenVariant {
+  readonly id: string
+  readonly jobId: string
+  readonly member: Member
+}
+
+/** Columns of a summary. */
+const columns = {
+  id: variants.id,
+  jobId: variants.jobId,
+  number: variants.number,
+  revision: variants.revision,
+  title: variants.title,
+  updatedAt: variants.updatedAt,
+}
+/** Columns of a variant with its heaters. */
+export const variantColumns = { ...columns, heaters: variants.heaters }
+const heatersSchema = z.array(mountedHeaterSchema)
+/** A deleted variant keeps its row so that it can be brought back. */
+export const present = isNull(variants.deletedAt)
+
+/** A row as the rest of the program knows it. */
+export const variantOf = (
+  row: Omit<Variant, 'updatedAt' | 'heaters'> & { updatedAt: Date; heaters: unknown },
+): Variant => ({
+  ...row,
+  updatedAt: row.updatedAt.toISOString(),
+  heaters: heatersSchema.parse(row.heaters),
+})
+
+/** The variants of a job by number, without their heaters. */
+export function listVariants(job: OpenJob): Promise<VariantSummary[]> {
+  return asOrganisation(job.member.organisationId, async (tx) => {
+    const rows = await tx
+      .select(columns)
+      .from(variants)
+      .where(and(eq(variants.jobId, job.id), present))
+      .orderBy(asc(variants.number))
+    return rows.map((row) => ({ ...row, updatedAt: row.updatedAt.toISOString() }))
+  })
+}
+
+/** A variant of a job; null when the job has none by that id or it was deleted. */
+export async function findVariant(job: OpenJob, variantId: string | undefined): Promise<Variant | null> {
+  if (!isId(variantId)) return null
+  const [row] = await asOrganisation(job.member.organisationId, (tx) =>
+    tx
+      .select(variantColumns)
+      .from(variants)
+      .where(and(eq(variants.id, variantId), eq(variants.jobId, job.id), present)),
+  )
+  return row ? variantOf(row) : null
+}
+
+/**
+ * The variant that a URL names, for a person who may do that to it. Throws 401, 403, or 404 when it is not a variant
+ * of the person's organisation or was deleted; `deleted` lets deleted ones through.
+ */
+export async function requireVariant(
+  request: Request,
+  variantId: string | undefined,
+  action: Action,
+  deleted: 'refused' | 'let through' = 'refused',
+): Promise<OpenVariant> {
+  const member = await requireMay(request, action)
+  if (!isId(variantId)) throw missing(request, 'variant')
+  const [row] = await asOrganisation(member.organisationId, (tx) =>
+    tx
+      .select({ id: variants.id, jobId: variants.jobId })
+      .from(variants)
+      .where(deleted === 'refused' ? and(eq(variants.id, variantId), present) : eq(variants.id, variantId)),
+  )
+  if (!row) throw missing(request, 'variant')
+  return { ...row, member }
+}
+
+/** A variant as it is now; null when it was deleted meanwhile. */
+export async function findOpenVariant({ id, member }: OpenVariant): Promise<Variant | null> {
+  const [row] = await asOrganisation(member.organisationId, (tx) =>
+    tx
+      .select(variantColumns)
+      .from(variants)
+      .where(and(eq(variants.id, id), present)),
+  )
+  return row ? variantOf(row) : null
+}
