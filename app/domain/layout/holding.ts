@@ -1,5 +1,6 @@
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
 import { equalSpacings } from '#app/domain/layout/spacing.ts'
+import { nearestOnSegment } from '#app/domain/site/geometry.ts'
 import type { Member, Site } from '#app/domain/site/site.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 
@@ -118,7 +119,7 @@ function nearestLine(lines: readonly HoldingLine[], at: Vec2, pull: number): Hol
   let best: HoldingLine | null = null
   let least = pull
   for (const line of lines) {
-    const distance = distanceToSegment(line.from, line.to, at)
+    const distance = nearestOnSegment(line.from, line.to, at[0], at[1]).distance
     if (distance > least) continue
     least = distance
     best = line
@@ -139,14 +140,4 @@ function footOn(line: HoldingLine, at: Vec2): Vec2 {
   const [tx, ty] = directionOf(line)
   const along = (at[0] - line.from[0]) * tx + (at[1] - line.from[1]) * ty
   return [line.from[0] + tx * along, line.from[1] + ty * along]
-}
-
-/** Distance in plan from a point to the nearest point of a segment, m. */
-export function distanceToSegment(from: Vec2, to: Vec2, at: Vec2): number {
-  const dx = to[0] - from[0]
-  const dy = to[1] - from[1]
-  const squared = dx * dx + dy * dy
-  const part = squared === 0 ? 0 : ((at[0] - from[0]) * dx + (at[1] - from[1]) * dy) / squared
-  const t = Math.min(1, Math.max(0, part))
-  return Math.hypot(at[0] - from[0] - dx * t, at[1] - from[1] - dy * t)
 }

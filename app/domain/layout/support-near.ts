@@ -1,6 +1,6 @@
 import type { HeaterModel, Mount } from '#app/domain/heaters/heater-model.ts'
-import { distanceToSegment } from '#app/domain/layout/holding.ts'
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
+import { nearestOnSegment } from '#app/domain/site/geometry.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 
@@ -19,14 +19,20 @@ const plainReach: Record<Mount, number> = {
 function supportsOf(site: Site, mount: Mount, at: Vec2): { id: string; distance: number }[] {
   switch (mount) {
     case 'wall bracket':
-      return site.walls.map((wall) => ({ id: wall.id, distance: distanceToSegment(wall.from, wall.to, at) }))
+      return site.walls.map((wall) => ({
+        id: wall.id,
+        distance: nearestOnSegment(wall.from, wall.to, at[0], at[1]).distance,
+      }))
     case 'pole clamp':
       return site.poles.map((pole) => ({
         id: pole.id,
         distance: Math.max(0, Math.hypot(at[0] - pole.at[0], at[1] - pole.at[1]) - pole.diameter / 2),
       }))
     default:
-      return site.members.map((member) => ({ id: member.id, distance: distanceToSegment(member.from, member.to, at) }))
+      return site.members.map((member) => ({
+        id: member.id,
+        distance: nearestOnSegment(member.from, member.to, at[0], at[1]).distance,
+      }))
   }
 }
 

@@ -1,5 +1,6 @@
 import { tiltHeaters } from '#app/domain/layout/edits.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import { shortName } from '#app/domain/heaters/short-name.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { degrees, radians, type Vec2 } from '#app/domain/vector.ts'
 import type { Gesture } from '#app/editor/tools/gesture.ts'
@@ -45,6 +46,3 @@ function withinManual(tilt: number, model: HeaterModel | undefined): number {
 /** The manual's limits in words; null when it gives none. */
 export const tiltLimits = (model: HeaterModel | undefined): string | null =>
   model?.tiltDeg ? `Tilt ${model.tiltDeg.min} to ${model.tiltDeg.max}° by the manual of ${shortName(model)}.` : null
-
-/** The model's name without its kind of infrared: "Betony 2.0". */
-export const shortName = (model: HeaterModel): string => model.name.replace(/ (short|medium|long)-wave.*$/, '')
