@@ -1,6 +1,15 @@
-import type { Sensation } from '#app/domain/comfort/sensation.ts'
-import type { Surroundings } from '#app/domain/comfort/surroundings.ts'
-import type { Seat } from '#app/domain/site/site.ts'
+import type { Brief } from '#app/domain/brief/brief.ts'
+import { feelsLike, type Conditions } from '#app/domain/comfort/feels-like.ts'
+import { heatAtSeat, type SeatHeat } from '#app/domain/comfort/seat-heat.ts'
+import { sensationOf, type Sensation } from '#app/domain/comfort/sensation.ts'
+import { sourcesOf, type Sources } from '#app/domain/comfort/sources.ts'
+import { surroundingsAt, type Surroundings } from '#app/domain/comfort/surroundings.ts'
+import type { Obstruction } from '#app/domain/flux/shading.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import { electricalPower } from '#app/domain/heaters/power.ts'
+import type { Layout } from '#app/domain/layout/layout.ts'
+import { isInside } from '#app/domain/site/geometry.ts'
+import type { Seat, Site } from '#app/domain/site/site.ts'
 
 /** The three winds every figure of "feels like" is given for; never one alone. */
 export const windNames = ['calm', 'design', 'gust'] as const
@@ -71,4 +80,145 @@ export interface LayoutTotals {
   readonly costPerEvening: { readonly amount: number; readonly currency: 'EUR' | 'USD' } | null
   /** Heaters whose model is unknown or has no beam data. */
   readonly cannotTell: readonly string[]
+}
+
+/** What a seat's figures depend on. Obstructions absent: nothing stands in the way (the reference case). */
+export interface WarmthInput {
+  readonly site: Site
+  readonly brief: Brief
+  readonly layout: Pick<Layout, 'heaters'>
+  readonly models: ReadonlyMap<string, HeaterModel>
+  readonly obstructions?: readonly Obstruction[]
+}
+
+const sum = (values: readonly number[]): number => values.reduce((total, value) => total + value, 0)
+
+/** Air speed of the calm evening, m/s: the least at which air counts as moving. */
+const calmWind = 0.2
+
+/** Air speed at the seats for each of the three winds, m/s. */
+export const windOf = (brief: Brief, name: WindName): number =>
+  ({ calm: calmWind, design: brief.windDesign, gust: brief.windGust })[name]
+
+/** What the air does to a guest of this seat at one of the three winds. */
+export const conditionsAt = (seat: Seat, brief: Brief, surroundings: Surroundings, wind: WindName): Conditions => ({
+  airTemperature: brief.airTemperature,
+  surroundingsTemperature: surroundings.temperature,
+  wind: windOf(brief, wind),
+  clothing: brief.clothing,
+  posture: seat.posture,
+})
+
+/**
+ * How warm every seat of the site is under a layout: the one function behind the page, the CSV, the comparison and the
+ * API. Throws a RangeError for figures that are not finite.
+ */
+export function seatWarmth(input: WarmthInput): SeatWarmth[] {
+  const sources = sourcesOf(input.layout, input.models)
+  return input.site.seats.map((seat) => warmthOfSeat(seat, sources, input).warmth)
+}
+
+/** The figures of one seat and, from the same call, what each element gives to them. */
+export function warmthOfSeat(
+  seat: Seat,
+  { sources, cannotTell }: Sources,
+  { site, brief, obstructions }: WarmthInput,
+): { readonly warmth: SeatWarmth; readonly heat: SeatHeat } {
+  const heat = heatAtSeat(seat, sources, obstructions)
+  const told = (parts: readonly number[] | undefined) => (sources.length > 0 && parts ? sum(parts) : null)
+  const [body, headHorizontal, field] = [told(heat.body), told(heat.headHorizontal), told(heat.field)]
+  const surroundings = surroundingsAt(seat, site, brief)
+  const pairAt = (name: WindName): FeelsLikePair => {
+    const conditions = conditionsAt(seat, brief, surroundings, name)
+    const after = field === null ? null : feelsLike(field, conditions)
+    return { wind: conditions.wind, before: feelsLike(0, conditions), after }
+  }
+  const pairs = { calm: pairAt('calm'), design: pairAt('design'), gust: pairAt('gust') }
+  const sensed = ({ wind, before, after }: FeelsLikePair) => ({
+    before: sensationOf(before, wind, brief),
+    after: after === null ? null : sensationOf(after, wind, brief),
+  })
+  const warmth: SeatWarmth = {
+    seat,
+    onFloor: isInside(site.floor, seat.x, seat.y),
+    body,
+    byHeater: sharesByHeater(sources, heat.body),
+    head: told(heat.head.parts),
+    headDirection: sources.length > 0 ? heat.head.direction : null,
+    headHorizontal,
+    bodyLargest: told(heat.bodyLargest.parts),
+    headToBody: body === null || headHorizontal === null || body <= 0 ? null : headHorizontal / body,
+    nearInfraredAtEye: told(heat.nearInfrared?.parts),
+    target: targetOutcome(seat, body, brief),
+    field,
+    surroundings,
+    feelsLike: pairs,
+    sensation: { calm: sensed(pairs.calm), design: sensed(pairs.design), gust: sensed(pairs.gust) },
+    cannotTell,
+  }
+  return { warmth, heat }
+}
+
+function sharesByHeater(sources: Sources['sources'], parts: readonly number[]): SeatWarmth['byHeater'] {
+  const shares = new Map<string, number>()
+  sources.forEach(({ heaterId }, i) => shares.set(heaterId, (shares.get(heaterId) ?? 0) + (parts[i] ?? 0)))
+  return [...shares].map(([heaterId, irradiance]) => ({ heaterId, irradiance }))
+}
+
+/** The ends of the band belong to it. */
+function targetOutcome(seat: Seat, body: number | null, { target }: Brief): TargetOutcome {
+  if (seat.priority === 'not heated') return 'not heated'
+  if (body === null) return 'no heater'
+  if (body < target.low) return 'below'
+  return body > target.high ? 'above' : 'in target'
+}
+
+/** What a layout comes to over the seats on the floor: statistics over the primary seats, the head over every seat. */
+export function layoutTotals(
+  warmth: readonly SeatWarmth[],
+  layout: Pick<Layout, 'heaters'>,
+  models: ReadonlyMap<string, HeaterModel>,
+  brief: Brief,
+): LayoutTotals {
+  const standing = warmth.filter(({ onFloor }) => onFloor)
+  const counted = standing.filter(({ seat }) => seat.priority !== 'not heated')
+  const primary = standing.filter(({ seat }) => seat.priority === 'primary')
+  const bodies = figuresOf(primary, ({ body }) => body)
+  const mean = bodies.length === 0 ? null : sum(bodies.map(({ irradiance }) => irradiance)) / bodies.length
+  const [coldest = null, hottest = null] = [bodies[0], bodies.at(-1)]
+  const even = coldest && mean !== null && mean > 0 && bodies.length > 1
+  const power = sum(layout.heaters.map((heater) => powerOf(heater, models)))
+  return {
+    heaters: layout.heaters.length,
+    seatsCounted: counted.length,
+    seatsInTarget: counted.filter(({ target }) => target === 'in target').length,
+    coldest,
+    hottest,
+    mean,
+    evenness: even ? coldest.irradiance / mean : null,
+    headMaximum: figuresOf(standing, ({ head }) => head).at(-1) ?? null,
+    power,
+    ...eveningOf(power, brief),
+    cannotTell: warmth[0]?.cannotTell ?? sourcesOf(layout, models).cannotTell,
+  }
+}
+
+/** The figure of each seat that has one, from the least to the most. */
+const figuresOf = (warmth: readonly SeatWarmth[], figure: (each: SeatWarmth) => number | null) =>
+  warmth
+    .map((each) => ({ seatId: each.seat.id, irradiance: figure(each) }))
+    .filter((each): each is { seatId: string; irradiance: number } => each.irradiance !== null)
+    .sort((a, b) => a.irradiance - b.irradiance)
+
+function powerOf(heater: Layout['heaters'][number], models: ReadonlyMap<string, HeaterModel>): number {
+  const model = models.get(heater.model)
+  return model ? electricalPower(heater, model).power : 0
+}
+
+/** Energy and cost of one evening: power × hours × the share of the time that the heaters are on. */
+function eveningOf(power: number, { energy }: Brief): Pick<LayoutTotals, 'energyPerEvening' | 'costPerEvening'> {
+  if (!energy) return { energyPerEvening: null, costPerEvening: null }
+  const kilowattHours = (power / 1000) * energy.hoursPerEvening * energy.dutyFraction
+  const cost = { amount: kilowattHours * energy.pricePerKwh, currency: energy.currency }
+  return { energyPerEvening: kilowattHours, costPerEvening: cost }
 }
