@@ -27,7 +27,7 @@ const pair = ([a, b]: readonly [number, number]): [number, number] => [metres(a)
 /** One of the three invented jobs: what it is called, its site and brief, and its numbered variants. */
 export interface DemoSite {
   readonly key: 'A' | 'B' | 'C'
-  readonly job: { readonly title: string }
+  readonly job: { readonly name: string; readonly customer: string }
   readonly site: Site
   readonly brief: Brief
   readonly variants: { readonly number: number; readonly title: string; readonly layout: Layout }[]
@@ -38,6 +38,13 @@ const beyondFarEdge = {
   A: { kind: 'water', name: 'the weir' },
   B: { kind: 'drop', name: 'glass parapet, then the street nine floors below' },
   C: { kind: 'garden', name: 'the garden' },
+} as const
+
+/** Who asked for the layout and where it is, as the list of jobs shows them. */
+const enquiries = {
+  A: { customer: 'The Tansy Weir', place: 'River terrace, Tansy Weir' },
+  B: { customer: 'Hotel Quillfinch', place: 'Roof bar, ninth floor' },
+  C: { customer: 'Family at Sallow Lane', place: 'Veranda, Sallow Lane' },
 } as const
 
 const obstacleKinds: readonly (readonly [RegExp, Obstacle['kind']])[] = [
@@ -182,9 +189,9 @@ function siteOf(place: DemoPlace): Site {
   return siteSchema.parse({ ...site, dimensions: place.dims.map((given, i) => dimensionOf(given, i, site)) })
 }
 
-function briefOf({ name, story, design, supply, energy, target }: DemoPlace): Brief {
+function briefOf({ id, story, design, supply, energy, target }: DemoPlace): Brief {
   return briefSchema.parse({
-    place: name,
+    place: enquiries[id].place,
     story,
     season: design.season,
     airTemperature: design.airTempC,
@@ -232,7 +239,7 @@ function layoutOf({ title, heaters }: DemoVariant): Layout {
 export function demoSites(): DemoSite[] {
   return demoFile.sites.map((place) => ({
     key: place.id,
-    job: { title: place.name },
+    job: { name: place.name, customer: enquiries[place.id].customer },
     site: siteOf(place),
     brief: briefOf(place),
     variants: place.variants.map((variant) => ({
