@@ -1,4 +1,16 @@
-import type { RouteConfig } from '@react-router/dev/routes'
+import { index, type RouteConfig, route } from '@react-router/dev/routes'
 
 /** Every URL of the product, one line each. */
-export default [] satisfies RouteConfig
+export default [
+  index('routes/jobs/home.ts'),
+  route('jobs', 'routes/jobs/list.tsx'),
+  route('jobs/new', 'routes/jobs/new.tsx'),
+  route('sign-in', 'routes/account/sign-in.tsx'),
+  route('sign-out', 'routes/account/sign-out.ts'),
+  route('reset-password', 'routes/account/reset-password.tsx'),
+  route('reset-password/:token', 'routes/account/new-password.tsx'),
+  route('outbox', 'routes/account/outbox.tsx'),
+  route('healthz', 'routes/healthz.ts'),
+  route('readyz', 'routes/readyz.ts'),
+  route('*', 'routes/not-found.tsx'),
+] satisfies RouteConfig

@@ -61,7 +61,12 @@ const rooms: readonly Room[] = [
     packages: [/^node:worker_threads$/, /^d3-contour$/],
   },
   { name: 'background jobs', holds: /^workers\/jobs\.ts$/, mayImport: [/^app\/server\//], packages: any },
-  { name: 'start', holds: /^workers\/start\.ts$/, mayImport: [/^drizzle\//, /^app\/server\//], packages: any },
+  {
+    name: 'start',
+    holds: /^workers\/start(-[a-z]+)?\.ts$/,
+    mayImport: [/^drizzle\//, /^app\/server\//, /^workers\/start-[a-z]+\.ts$/],
+    packages: any,
+  },
 ]
 
 const roomOf = (path: string) => rooms.find((room) => room.holds.test(path))

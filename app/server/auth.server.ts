@@ -3,9 +3,11 @@ import { drizzleAdapter } from 'better-auth/adapters/drizzle'
 import { organization } from 'better-auth/plugins'
 import { createAccessControl } from 'better-auth/plugins/access'
 import { defaultStatements, ownerAc } from 'better-auth/plugins/organization/access'
+import { forgetAttempts } from '#app/server/attempts.server.ts'
 import { authDatabase } from '#app/server/db.server.ts'
 import { env } from '#app/server/env.server.ts'
 import { queueMail } from '#app/server/jobs/queue.server.ts'
+import { passwordLimits } from '#app/server/password-limits.server.ts'
 import * as schema from '#drizzle/schema.ts'
 
 /** Seconds for which a link to a new password is good. */
@@ -44,10 +46,11 @@ export const auth = betterAuth({
   emailAndPassword: {
     enabled: true,
     disableSignUp: true,
-    minPasswordLength: 12,
-    maxPasswordLength: 128,
+    minPasswordLength: passwordLimits.least,
+    maxPasswordLength: passwordLimits.most,
     revokeSessionsOnPasswordReset: true,
     resetPasswordTokenExpiresIn: resetSeconds,
+    onPasswordReset: ({ user }) => forgetAttempts(user.email),
     sendResetPassword: ({ user, token }) => queueMail(passwordLetter(user.email, token)),
   },
   plugins: [

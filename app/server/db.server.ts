@@ -7,10 +7,10 @@ import { env } from '#app/server/env.server.ts'
  * A pool that outlives its backends: without the second handler a killed backend of a borrowed connection would end
  * the process. A statement that takes longer than 10 s is cut off.
  */
-function poolOf(connectionString: string, name: string): Pool {
+export function poolOf(connectionString: string, name: string, max = 10): Pool {
   const pool = new Pool({
     connectionString,
-    max: 10,
+    max,
     application_name: name,
     connectionTimeoutMillis: 2500,
     statement_timeout: 10_000,

@@ -5,6 +5,7 @@ import { redirect } from 'react-router'
 import { z } from 'zod'
 import { type Action, type Role, can, roleSchema } from '#app/domain/access/roles.ts'
 import { authDatabase } from '#app/server/db.server.ts'
+import { isRefusedDemo } from '#app/server/demo-address.server.ts'
 import { env } from '#app/server/env.server.ts'
 import { member, organization, session, user } from '#drizzle/schema.ts'
 
@@ -68,7 +69,7 @@ const standings = new WeakMap<Request, Promise<Standing>>()
 async function readStanding(request: Request): Promise<Standing> {
   const token = tokenOf(request)
   const row = token === null ? null : await findRow(token)
-  if (!row) return 'signed out'
+  if (!row || isRefusedDemo(row.email)) return 'signed out'
   const { organisationId, organisationName, role } = row
   if (organisationId === null || organisationName === null || role === null) return 'no organisation'
   return { ...row, organisationId, organisationName, role }
