@@ -4,7 +4,8 @@ import type { DatabaseUrls } from '#drizzle/database-roles.ts'
 import { startLocalDatabase, stopLocalDatabase, withAdmin } from '#drizzle/local-database.ts'
 import { migrateDatabase } from '#drizzle/migrate.ts'
 import { StartProblem } from '#drizzle/postgres-binaries.ts'
-import { hasNoAccounts, seedAccounts } from '#drizzle/seed/accounts.ts'
+import { seedDemo } from '#drizzle/seed/seed.ts'
+import { withStartLock } from '#drizzle/start-lock.ts'
 
 const databaseName = 'inglefield'
 const markName = 'inglefield start'
@@ -92,20 +93,18 @@ async function localDatabase(): Promise<PreparedDatabase> {
   }
 }
 
-/** The demonstration goes into an empty database only, and only where nobody else can reach it. */
-async function seedWhenEmpty(urls: DatabaseUrls): Promise<void> {
-  if (!(await hasNoAccounts(urls.auth))) return
-  console.log('Adding the demonstration …')
-  await seedAccounts(urls.auth)
-}
-
-/** Makes sure that the database is there and up to date. */
+/**
+ * Makes sure that the database is there and up to date. The demonstration goes into an empty database, and only where
+ * nobody else can reach it.
+ */
 export async function prepareDatabase(options: { demo: boolean }): Promise<PreparedDatabase> {
   const urls = givenUrls()
   const database = urls ? { urls, secret: null, release: () => Promise.resolve() } : await localDatabase()
   try {
-    await migrateDatabase(database.urls.owner)
-    if (options.demo) await seedWhenEmpty(database.urls)
+    await withStartLock('.data/prepare.lock', async () => {
+      await migrateDatabase(database.urls.owner)
+      if (options.demo && (await seedDemo(database.urls))) console.log('The demonstration was added.')
+    })
   } catch (problem) {
     await database.release()
     throw problem

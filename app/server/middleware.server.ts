@@ -13,14 +13,14 @@ const mostBytes = { upload: 20_000_000, other: 1_000_000 }
 
 /** What anybody may open, by the pattern of its URL. Everything else asks for a member before its loader runs. */
 const openPatterns = new Set([
-  '/sign-in',
-  '/sign-out',
-  '/reset-password',
-  '/reset-password/:token',
-  '/outbox',
-  '/healthz',
-  '/readyz',
-  '/*',
+  'sign-in',
+  'sign-out',
+  'reset-password',
+  'reset-password/:token',
+  'outbox',
+  'healthz',
+  'readyz',
+  '*',
 ])
 
 const refused = (status: number, error: string) => Response.json({ error, path: '' }, { status })
@@ -50,7 +50,7 @@ const checkOrigin: MiddlewareFunction<Response> = ({ request }) => {
 }
 
 const checkMember: MiddlewareFunction<Response> = async ({ request, pattern }) => {
-  if (!openPatterns.has(pattern)) await requireMember(request)
+  if (!openPatterns.has(pattern.replace(/^\//, ''))) await requireMember(request)
 }
 
 /** What the root route puts before every loader and action, outermost first. */
