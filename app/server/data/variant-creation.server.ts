@@ -3,7 +3,7 @@ import { z } from 'zod'
 import { layoutSchema, type Layout } from '#app/domain/layout/layout.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
-import { insertRevision, lockVariant } from '#app/server/data/variant-revisions.server.ts'
+import { insertRevision, lockVariant, savedLayoutSchema } from '#app/server/data/variant-revisions.server.ts'
 import { present, variantColumns, variantOf, type OpenVariant, type Variant } from '#app/server/data/variants.server.ts'
 import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
 import { answerOnce, gone, staleness, type Save } from '#app/server/saving.server.ts'
@@ -32,7 +32,7 @@ export async function insertVariant(tx: Transaction, member: Member, jobId: stri
 export const variantRequestSchema = z
   .strictObject({
     title: layoutSchema.shape.title.optional(),
-    heaters: layoutSchema.shape.heaters.optional(),
+    heaters: savedLayoutSchema.shape.heaters.optional(),
     copyOf: z.uuid().optional(),
   })
   .refine(({ heaters, copyOf }) => !(heaters && copyOf), { path: ['copyOf'], error: 'Either heaters or a copy.' })
@@ -80,6 +80,12 @@ export function deleteVariant({ id, member }: OpenVariant, expected: number | nu
     return { status: 200, body: { id, revision: kept.revision, deleted: true }, revision: kept.revision }
   })
 }
+
+/** What to bring back: an older revision's layout as a new revision, or a deleted variant as it was. */
+export const restoreSchema = z.union([
+  z.strictObject({ revision: z.int().min(1).max(1_000_000_000) }),
+  z.strictObject({ deleted: z.literal(true) }),
+])
 
 async function bringBack(tx: Transaction, { id }: OpenVariant): Promise<Answer | Refusal> {
   const [row] = await tx.update(variants).set({ deletedAt: null }).where(eq(variants.id, id)).returning(variantColumns)

@@ -58,6 +58,19 @@ export const insertRevision = (
     .insert(variantRevisions)
     .values({ organisationId, variantId, revision, layout, contentHash: hash, authorId: userId })
 
+/** A layout that can be kept: every heater's id once. */
+export const savedLayoutSchema = layoutSchema.extend({
+  heaters: layoutSchema.shape.heaters.superRefine((heaters, context) => {
+    const seen = new Set<string>()
+    heaters.forEach(({ id }, index) => {
+      if (seen.has(id)) {
+        context.addIssue({ code: 'custom', path: [index, 'id'], message: `The id ${id} is there twice.` })
+      }
+      seen.add(id)
+    })
+  }),
+})
+
 /** Saves a variant's title and heaters by the one rule for saving. */
 export const saveVariant = (variant: OpenVariant, save: Save<Layout>): Promise<Answer | Refusal> =>
   saveRevision(variant.member, revisionedVariant(variant), save, () => Promise.resolve(save.body))
