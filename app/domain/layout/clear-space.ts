@@ -1,0 +1,124 @@
+import type { Body } from '#app/domain/layout/body.ts'
+import { leastAlong, type Extent } from '#app/domain/site/convex.ts'
+import type { Plane } from '#app/domain/site/cover.ts'
+import { gapBetween, type Gap } from '#app/domain/site/gap.ts'
+import { add, dot, scale, subtract, type Vec3 } from '#app/domain/vector.ts'
+
+/** How far a body box is grown outward from its faces, m: back (above at tilt 0), sides, ends; the open face stays. */
+export interface Growth {
+  readonly above: number
+  readonly side: number
+  readonly end: number
+}
+
+const none: Growth = { above: 0, side: 0, end: 0 }
+
+/** The tilted body as a solid, grown outward from its faces. */
+export function bodySolid(body: Body, growth: Growth = none): Extent {
+  const { centre, u, v, w, half } = body
+  const ends = half.u + growth.end
+  const sides = half.v + growth.side
+  const back = half.w + growth.above
+  return {
+    middle: centre,
+    farthest: (d) => {
+      const along = dot(d, u) > 0 ? ends : -ends
+      const across = dot(d, v) > 0 ? sides : -sides
+      const down = dot(d, w) > 0 ? half.w : -back
+      return [
+        centre[0] + along * u[0] + across * v[0] + down * w[0],
+        centre[1] + along * u[1] + across * v[1] + down * w[1],
+        centre[2] + along * u[2] + across * v[2] + down * w[2],
+      ]
+    },
+  }
+}
+
+/** Corners of the tilted body. */
+export function bodyCorners({ centre, u, v, w, half }: Body): Vec3[] {
+  const signs = [-1, 1] as const
+  return signs.flatMap((i) =>
+    signs.flatMap((j) =>
+      signs.map((k) => add(add(add(centre, scale(u, i * half.u)), scale(v, j * half.v)), scale(w, k * half.w))),
+    ),
+  )
+}
+
+/**
+ * Distance from the body's worst corner up to a plane, square to the plane, m; negative when a corner is above it:
+ * n·(c − p) − Σ half_i |n·axis_i|.
+ */
+export function gapUpTo(body: Body, plane: Plane): number {
+  const { centre, u, v, w, half } = body
+  const n = plane.normal
+  const reach = half.u * Math.abs(dot(n, u)) + half.v * Math.abs(dot(n, v)) + half.w * Math.abs(dot(n, w))
+  return dot(n, subtract(plane.point, centre)) - reach
+}
+
+/** The worst corner for a plane above and the point of the plane square above it. */
+export function nearestOnPlane(body: Body, plane: Plane): { from: Vec3; to: Vec3 } {
+  const from = bodySolid(body).farthest(plane.normal)
+  return { from, to: add(from, scale(plane.normal, dot(plane.normal, subtract(plane.point, from)))) }
+}
+
+export type Face = 'above' | 'side' | 'end'
+
+/** How an obstacle lies about the body: which face lets it pass most easily, by how much, and what is left of it. */
+export interface Lie {
+  readonly face: Face
+  /** Distance outward from that face, or the bare distance from the body when it lies beyond no face, m. */
+  readonly value: number
+  /** The clearance of that face, m. */
+  readonly limit: number
+  readonly margin: number
+}
+
+/**
+ * How one convex obstacle lies about the body. It passes when it lies wholly beyond one face by that face's clearance,
+ * or else clear of the box grown by all of them; what lies wholly in front of the open face is for the beam's clearance.
+ */
+export function lieAbout(body: Body, obstacle: Extent, clearance: Growth): Lie | null {
+  const faces = beyondFaces(body, obstacle)
+  if (faces.front >= 0) return null
+  const best = (['above', 'side', 'end'] as const)
+    .map((face): Lie => ({ face, value: faces[face], limit: clearance[face], margin: faces[face] - clearance[face] }))
+    .reduce((a, b) => (b.margin > a.margin ? b : a))
+  if (best.margin >= 0) return best
+  const grown = gapBetween(bodySolid(body, clearance), obstacle).distance
+  if (grown > 0) return { ...best, value: gapToBody(body, obstacle).distance, margin: grown }
+  if (best.value >= 0) return best
+  const value = gapToBody(body, obstacle).distance
+  return { ...best, value, margin: value < best.limit ? value - best.limit : best.margin }
+}
+
+/** How far the obstacle lies wholly beyond each face, m; negative where part of it does not. */
+function beyondFaces({ centre, u, v, w, half }: Body, obstacle: Extent): Record<Face | 'front', number> {
+  const beyond = (n: Vec3, reach: number) => leastAlong(obstacle, n) - dot(n, centre) - reach
+  const both = (n: Vec3, reach: number) => Math.max(beyond(n, reach), beyond(scale(n, -1), reach))
+  return {
+    above: beyond(scale(w, -1), half.w),
+    side: both(v, half.v),
+    end: both(u, half.u),
+    front: beyond(w, half.w),
+  }
+}
+
+/** Least distance from the body to an obstacle with its pair of points; 0 when they share a point. */
+export const gapToBody = (body: Body, obstacle: Extent): Gap => gapBetween(bodySolid(body), obstacle)
+
+/** Distance of a point from the body, m; 0 inside. */
+export function distanceFromBody({ centre, u, v, w, half }: Body, point: Vec3): number {
+  const d = subtract(point, centre)
+  return Math.hypot(
+    Math.max(0, Math.abs(dot(d, u)) - half.u),
+    Math.max(0, Math.abs(dot(d, v)) - half.v),
+    Math.max(0, Math.abs(dot(d, w)) - half.w),
+  )
+}
+
+/** The point of the body nearest to a point. */
+export function nearestOfBody({ centre, u, v, w, half }: Body, point: Vec3): Vec3 {
+  const d = subtract(point, centre)
+  const held = (axis: Vec3, reach: number) => scale(axis, Math.min(reach, Math.max(-reach, dot(d, axis))))
+  return add(centre, add(held(u, half.u), add(held(v, half.v), held(w, half.w))))
+}

@@ -1,0 +1,266 @@
+import type { HeaterModel, Mount } from '#app/domain/heaters/heater-model.ts'
+import { bayOf } from '#app/domain/layout/bay.ts'
+import { bodyOf, type Body } from '#app/domain/layout/body.ts'
+import type { MountedHeater } from '#app/domain/layout/layout.ts'
+import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { coverHeightAt } from '#app/domain/site/cover.ts'
+import { nearestOnSegment } from '#app/domain/site/geometry.ts'
+import { memberDirectionDeg, undersideAt } from '#app/domain/site/member.ts'
+import type { Member, Site } from '#app/domain/site/site.ts'
+import { add, scale, type Vec2, type Vec3 } from '#app/domain/vector.ts'
+
+/** Something a heater can be fixed to, as seen from a place in plan. */
+export interface SupportPlace {
+  readonly kind: 'member' | 'wall' | 'pole'
+  readonly id: string
+  readonly name: string
+  /** The point of it nearest to the place, in plan. */
+  readonly point: Vec2
+  /** Sideways distance in plan: to a member's axis, a wall's face, a pole's surface, m. */
+  readonly distance: number
+  /** Lowest and highest point that may carry a heater there, m; null when not known. */
+  readonly from: number | null
+  readonly to: number | null
+}
+
+/** What carries one suspension eye. */
+export interface EyeSupport {
+  readonly eye: Vec3
+  readonly place: SupportPlace | null
+}
+
+/** Why a heater is held or not. */
+export type SupportReason =
+  | 'held'
+  | 'nothing to fix to'
+  | 'out of reach'
+  | 'an eye has no member'
+  | 'support too low'
+  | 'tilt not held'
+  | 'not in a bay'
+  | 'no cover above'
+  | 'reach not stated'
+  | 'eyes not stated'
+  | 'height not known'
+
+/** How a heater is carried. Distances in plan, m. */
+export interface Support {
+  readonly outcome: 'held' | 'not held' | 'cannot tell'
+  readonly reason: SupportReason
+  /** Ids of what carries it, each once. */
+  readonly ids: readonly string[]
+  /** Distance that decides: the worst eye's, or the heater's centre from its nearest support. */
+  readonly distance: number | null
+  readonly reach: number | null
+  /** The nearest thing this mount could be fixed to. */
+  readonly nearest: SupportPlace | null
+  /** For chain and drop rods: each suspension eye with its member. */
+  readonly eyes: readonly EyeSupport[]
+}
+
+const kindOf: Record<Mount, SupportPlace['kind']> = {
+  chain: 'member',
+  'drop rods': 'member',
+  'ceiling bracket': 'member',
+  'beam clamp': 'member',
+  'recess box': 'member',
+  'wall bracket': 'wall',
+  'pole clamp': 'pole',
+}
+
+/** Distances within this of a reach count as within it, m. */
+const closeEnough = 1e-9
+
+/** Angles smaller than this are level, degrees. */
+const levelDeg = 1e-6
+
+/** Everything that this mount could be fixed to, seen from a place in plan, nearest first. */
+export function supportPlaces(site: Site, mount: Mount, [x, y]: Vec2): SupportPlace[] {
+  return placesOf(site, kindOf[mount], x, y).sort((a, b) => a.distance - b.distance)
+}
+
+function placesOf(site: Site, kind: SupportPlace['kind'], x: number, y: number): SupportPlace[] {
+  if (kind === 'member') {
+    return site.members.map((member) => {
+      const { point, distance } = nearestOnSegment(member.from, member.to, x, y)
+      const height = undersideAt(site, member, x, y)
+      return { kind, id: member.id, name: member.name, point, distance, from: null, to: height }
+    })
+  }
+  if (kind === 'wall') {
+    return site.walls.map((wall) => {
+      const { point, distance } = nearestOnSegment(wall.from, wall.to, x, y)
+      return { kind, id: wall.id, name: wall.name, point, distance, from: 0, to: wall.top ?? Infinity }
+    })
+  }
+  return site.poles.map(({ id, name, at, diameter, top }) => {
+    const distance = Math.max(0, Math.hypot(x - at[0], y - at[1]) - diameter / 2)
+    return { kind, id, name, point: at, distance, from: 0, to: top }
+  })
+}
+
+/** The suspension eyes of a body: on the back face over the element's axis, first the one against u; null when not stated. */
+export function suspensionEyes(body: Body, model: HeaterModel): readonly [Vec3, Vec3] | null {
+  if (model.suspensionEyePitch === null) return null
+  const back = add(body.centre, scale(body.w, -body.half.w))
+  const toEye = scale(body.u, model.suspensionEyePitch / 2)
+  return [add(back, scale(toEye, -1)), add(back, toEye)]
+}
+
+/** How far a mount of this model may hold it from its support, m; null when its manual does not say. */
+export function reachOf(model: HeaterModel, mount: Mount): number | null {
+  return model.mountReach[mount] ?? (mount === 'chain' ? houseRules.chainSidewaysLimit.value : null)
+}
+
+/**
+ * How a heater is carried where it is. Chains on one member hang plumb, so each eye of a chain pair must be under a
+ * member (within the sideways limit); rods, brackets and clamps reach as far as the model's manual says; a recess box
+ * lies in a bay under a cover. The support it names is taken when in reach; a heater that names none takes the nearest.
+ */
+export function supportOf(site: Site, heater: MountedHeater, model: HeaterModel): Support {
+  const body = bodyOf(heater, model)
+  const support = carried(site, heater, model, body)
+  if (support.outcome !== 'held' || Math.abs(heater.tiltDeg) < levelDeg) return support
+  if (model.mountsThatHoldTilt.includes(heater.mount)) return support
+  return { ...support, outcome: 'not held', reason: 'tilt not held' }
+}
+
+function carried(site: Site, heater: MountedHeater, model: HeaterModel, body: Body): Support {
+  const places = supportPlaces(site, heater.mount, [heater.x, heater.y])
+  const reach = reachOf(model, heater.mount)
+  const none = { ids: [], distance: places[0]?.distance ?? null, reach, nearest: places[0] ?? null, eyes: [] }
+  if (!places[0]) return { ...none, outcome: 'not held', reason: 'nothing to fix to' }
+  switch (heater.mount) {
+    case 'chain':
+    case 'drop rods':
+      return carriedByEyes(site, heater, suspensionEyes(body, model), none)
+    case 'recess box':
+      return carriedInBay(site, body, none)
+    default:
+      return carriedRigidly(heater, body, places, none)
+  }
+}
+
+type Uncarried = Omit<Support, 'outcome' | 'reason'>
+
+function carriedByEyes(
+  site: Site,
+  heater: MountedHeater,
+  eyes: readonly [Vec3, Vec3] | null,
+  none: Uncarried,
+): Support {
+  if (!eyes) return { ...none, outcome: 'cannot tell', reason: 'eyes not stated' }
+  const { reach } = none
+  if (reach === null) return { ...none, outcome: 'cannot tell', reason: 'reach not stated' }
+  const supports = eyes.map((eye) => eyeSupport(site, heater, eye, reach))
+  const worst = Math.max(...supports.map(({ distance }) => distance))
+  const found = { ...none, eyes: supports.map(({ eye, place }): EyeSupport => ({ eye, place })) }
+  if (supports.some(({ place }) => !place)) {
+    const aside = (none.distance ?? 0) > reach + closeEnough
+    return aside
+      ? { ...found, outcome: 'not held', reason: 'out of reach' }
+      : { ...found, distance: worst, outcome: 'not held', reason: 'an eye has no member' }
+  }
+  const ids = [...new Set(supports.flatMap(({ place }) => place?.id ?? []))]
+  const named = site.members.find(({ id }) => id === heater.memberId)
+  const distance = named && !ids.includes(named.id) ? distanceTo(named, heater) : worst
+  if (named && !ids.includes(named.id)) return { ...found, distance, outcome: 'not held', reason: 'out of reach' }
+  const carriedBy = { ...found, ids, distance: worst }
+  if (supports.some(({ place }) => place?.to === null)) {
+    return { ...carriedBy, outcome: 'cannot tell', reason: 'height not known' }
+  }
+  const low = supports.some(({ eye, place }) => (place?.to ?? Infinity) < eye[2])
+  return low
+    ? { ...carriedBy, outcome: 'not held', reason: 'support too low' }
+    : { ...carriedBy, outcome: 'held', reason: 'held' }
+}
+
+const distanceTo = (member: Member, { x, y }: MountedHeater): number =>
+  nearestOnSegment(member.from, member.to, x, y).distance
+
+/** The member that carries an eye: the one the heater names when in reach, else the nearest in reach. */
+function eyeSupport(site: Site, heater: MountedHeater, eye: Vec3, reach: number): EyeSupport & { distance: number } {
+  const places = supportPlaces(site, heater.mount, [eye[0], eye[1]])
+  const within = places.filter(({ distance }) => distance <= reach + closeEnough)
+  const place = within.find(({ id }) => id === heater.memberId) ?? within[0] ?? null
+  return { eye, place, distance: place?.distance ?? places[0]?.distance ?? Infinity }
+}
+
+function carriedInBay(site: Site, body: Body, none: Uncarried): Support {
+  const bay = bayOf(site, body)
+  const beside = [bay?.left, bay?.right].flatMap((side) => side ?? [])
+  const covered = site.covers.some((cover) => coverHeightAt(cover, body.centre[0], body.centre[1]) !== null)
+  if (!covered) return { ...none, outcome: 'not held', reason: 'no cover above' }
+  const ids = beside.map(({ member }) => member.id)
+  if (beside.length < 2) return { ...none, ids, outcome: 'not held', reason: 'not in a bay' }
+  return { ...none, ids, reach: null, distance: null, outcome: 'held', reason: 'held' }
+}
+
+function carriedRigidly(heater: MountedHeater, body: Body, places: readonly SupportPlace[], none: Uncarried): Support {
+  const named = places.find(({ id }) => id === heater.memberId)
+  const place = named ?? places[0]
+  if (!place) return { ...none, outcome: 'not held', reason: 'nothing to fix to' }
+  const found = { ...none, distance: place.distance }
+  if (none.reach === null) return { ...found, outcome: 'cannot tell', reason: 'reach not stated' }
+  if (place.distance > none.reach + closeEnough) return { ...found, outcome: 'not held', reason: 'out of reach' }
+  const carriedBy = { ...found, ids: [place.id] }
+  if (place.to === null) return { ...carriedBy, outcome: 'cannot tell', reason: 'height not known' }
+  const low = place.kind === 'member' ? place.to < heater.lowestPoint : place.to < body.centre[2]
+  return low
+    ? { ...carriedBy, outcome: 'not held', reason: 'support too low' }
+    : { ...carriedBy, outcome: 'held', reason: 'held' }
+}
+
+/** Lengths are kept to 0.1 mm. */
+const rounded = (metres: number): number => Math.round(metres * 1e4) / 1e4
+
+/** A bracket or clamp is moved to this share of its reach. */
+const shareOfReach = 0.75
+
+/**
+ * The heater moved to the nearest thing that its mount can be fixed to, and naming it: under a member with its element
+ * along it (level, when the mount cannot hold a tilt), in the middle of a bay, or beside a wall or pole at three quarters
+ * of the reach. Null when the site has no such thing. Height stays.
+ */
+export function movedToSupport(site: Site, heater: MountedHeater, model: HeaterModel): MountedHeater | null {
+  const [place] = supportPlaces(site, heater.mount, [heater.x, heater.y])
+  if (!place) return null
+  const tiltDeg = model.mountsThatHoldTilt.includes(heater.mount) ? heater.tiltDeg : 0
+  const moved = { ...heater, memberId: place.id, tiltDeg }
+  if (heater.mount === 'recess box') return movedIntoBay(site, moved, model)
+  if (place.kind !== 'member') return movedBeside(site, moved, place, reachOf(model, heater.mount) ?? 0)
+  const member = site.members.find(({ id }) => id === place.id)
+  const turnDeg = member ? parallelTurn(memberDirectionDeg(member), heater.turnDeg) : heater.turnDeg
+  return { ...moved, x: rounded(place.point[0]), y: rounded(place.point[1]), turnDeg }
+}
+
+/** The direction along an axis, or against it, that is nearer to a turn, degrees within ±180. */
+function parallelTurn(axisDeg: number, turnDeg: number): number {
+  const away = ((((turnDeg - axisDeg) % 180) + 270) % 180) - 90
+  const turn = turnDeg - away
+  return Math.round((((((turn + 180) % 360) + 360) % 360) - 180) * 1e4) / 1e4
+}
+
+function movedBeside(site: Site, heater: MountedHeater, place: SupportPlace, reach: number): MountedHeater {
+  const pole = site.poles.find(({ id }) => id === place.id)
+  const wanted = Math.min(place.distance, shareOfReach * reach) + (pole ? pole.diameter / 2 : 0)
+  const [dx, dy] = [heater.x - place.point[0], heater.y - place.point[1]]
+  const away = Math.hypot(dx, dy)
+  const [ux, uy] = away > 0 ? [dx / away, dy / away] : [1, 0]
+  return { ...heater, x: rounded(place.point[0] + ux * wanted), y: rounded(place.point[1] + uy * wanted) }
+}
+
+/** Into the middle of the bay it is in, square to its members; unchanged where there is no bay. */
+function movedIntoBay(site: Site, heater: MountedHeater, model: HeaterModel): MountedHeater | null {
+  const bay = bayOf(site, bodyOf(heater, model))
+  if (!bay?.left || !bay.right) return null
+  const across = (bay.left.clear - bay.right.clear) / 2
+  const { from, to, id } = bay.left.member
+  const length = Math.hypot(to[0] - from[0], to[1] - from[1]) || 1
+  return {
+    ...heater,
+    memberId: id,
+    x: rounded(heater.x - ((to[1] - from[1]) / length) * across),
+    y: rounded(heater.y + ((to[0] - from[0]) / length) * across),
+  }
+}

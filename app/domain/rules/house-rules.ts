@@ -1,0 +1,37 @@
+/** A house rule: the figure, in SI, and where it comes from. */
+interface HouseRule {
+  readonly value: number
+  readonly source: string
+}
+
+const rule = (value: number, source = 'house rule, no published source'): HouseRule => ({ value, source })
+
+/** Figures that no manual states. Defaults; an engineer may set others. */
+export const houseRules = {
+  /** Band of horizontal irradiance on the body plane, W/m². */
+  targetLow: rule(150),
+  targetHigh: rule(350),
+  /** Largest irradiance in any direction at the head, W/m², for a long and a short stay. */
+  headCautionLongStay: rule(600, 'house caution; no published limit was found'),
+  headCautionShortStay: rule(1000, 'house caution; no published limit was found'),
+  /** A stay of at least this many minutes is a long one. */
+  longStayMinutes: rule(30),
+  /** Largest irradiance in any direction at body, head or eye height, W/m². */
+  irradianceStop: rule(
+    1580,
+    'API Standard 521 (workers, suitably clothed, continuous; from memory); not a comfort or public limit',
+  ),
+  /** Threshold of spread and overlap, W/m². */
+  overlapThreshold: rule(80),
+  /** Tolerance of a coordinate that no dimension moves, m. */
+  tolerance: rule(0.025),
+  /** How far sideways of its member an eye may be for a chain to hang plumb, m. */
+  chainSidewaysLimit: rule(0.02),
+  /** Supply over rated voltage beyond which an option may not be used. */
+  supplyOverRated: rule(1.1),
+  /** Least second numeral of the ingress protection under open sky or an opening roof, and under a closed cover. */
+  ingressOpenSky: rule(5),
+  ingressUnderCover: rule(4),
+  /** Standard acceleration of gravity, m/s². */
+  gravity: rule(9.80665, 'CGPM 1901'),
+} as const
