@@ -1,10 +1,11 @@
+import { largestDirection, netFluxOf, vectorInFront, type NetFlux } from '#app/domain/comfort/net-flux.ts'
 import { fieldBeforeAbsorption } from '#app/domain/comfort/radiant-field.ts'
 import type { Source } from '#app/domain/comfort/sources.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import { irradianceAt, largestIrradianceAt } from '#app/domain/flux/irradiance.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
 import type { Seat } from '#app/domain/site/site.ts'
-import { radians, type Vec3 } from '#app/domain/vector.ts'
+import { dot, radians, type Vec3 } from '#app/domain/vector.ts'
 
 /** The largest irradiance over all directions at a point: where it comes from and what each source gives of it, W/m². */
 export interface LargestParts {
@@ -26,11 +27,44 @@ export interface SeatHeat {
   readonly nearInfrared: LargestParts | null
 }
 
+/** What one element gives a seat, whatever the other elements do. */
+interface ElementHeat {
+  readonly body: number
+  readonly headHorizontal: number
+  readonly field: number
+  readonly atBody: NetFlux | null
+  readonly atHead: NetFlux | null
+}
+
 const up: Vec3 = [0, 0, 1]
 
 /** Middle of the body and of the head of a seat. */
 export const bodyPoint = (seat: Seat): Vec3 => [seat.x, seat.y, seat.bodyHeight]
 export const headPoint = (seat: Seat): Vec3 => [seat.x, seat.y, seat.headHeight]
+
+function elementHeat({ emitter, absorptance }: Source, seat: Seat, obstructions: readonly Obstruction[]): ElementHeat {
+  const [body, head] = [bodyPoint(seat), headPoint(seat)]
+  const receiver = { point: body, posture: seat.posture, facing: radians(seat.facingDeg) }
+  return {
+    body: irradianceAt(emitter, body, up, obstructions),
+    headHorizontal: irradianceAt(emitter, head, up, obstructions),
+    field: absorptance * fieldBeforeAbsorption(emitter, receiver, obstructions),
+    atBody: netFluxOf(emitter, body),
+    atHead: netFluxOf(emitter, head),
+  }
+}
+
+const remembered = new WeakMap<Source, WeakMap<Seat, ElementHeat>>()
+
+/** As `elementHeat` unshaded; found again for the same element and seat, so a drag reckons only the heater that moves. */
+function rememberedHeat(source: Source, seat: Seat): ElementHeat {
+  const bySeat = remembered.get(source) ?? new WeakMap<Seat, ElementHeat>()
+  const known = bySeat.get(seat)
+  if (known) return known
+  const made = elementHeat(source, seat, [])
+  remembered.set(source, bySeat.set(seat, made))
+  return made
+}
 
 /** Heat of every source at one seat; unshaded unless obstructions are given. */
 export function heatAtSeat(
@@ -38,29 +72,42 @@ export function heatAtSeat(
   sources: readonly Source[],
   obstructions: readonly Obstruction[] = [],
 ): SeatHeat {
-  const [body, head] = [bodyPoint(seat), headPoint(seat)]
-  const receiver = { point: body, posture: seat.posture, facing: radians(seat.facingDeg) }
+  const shaded = obstructions.length > 0
+  const heats = sources.map((source) =>
+    shaded ? elementHeat(source, seat, obstructions) : rememberedHeat(source, seat),
+  )
   const emitters = sources.map(({ emitter }) => emitter)
-  const horizontal = (point: Vec3) => emitters.map((emitter) => irradianceAt(emitter, point, up, obstructions))
-  const largestAtHead = largestAt(head, emitters, obstructions)
+  const largest = (point: Vec3, fluxes: readonly (NetFlux | null)[]) =>
+    shaded ? shadedLargest(point, emitters, obstructions) : largestParts(fluxes)
+  const head = largest(
+    headPoint(seat),
+    heats.map(({ atHead }) => atHead),
+  )
+  const body = largest(
+    bodyPoint(seat),
+    heats.map(({ atBody }) => atBody),
+  )
   return {
-    body: horizontal(body),
-    headHorizontal: horizontal(head),
-    head: largestAtHead,
-    bodyLargest: largestAt(body, emitters, obstructions),
-    field: sources.map(
-      ({ emitter, absorptance }) => absorptance * fieldBeforeAbsorption(emitter, receiver, obstructions),
-    ),
-    nearInfrared: nearInfraredAt(head, sources, largestAtHead, obstructions),
+    body: heats.map(({ body }) => body),
+    headHorizontal: heats.map(({ headHorizontal }) => headHorizontal),
+    field: heats.map(({ field }) => field),
+    head,
+    bodyLargest: body,
+    nearInfrared: nearInfraredAt(headPoint(seat), sources, head, obstructions),
   }
 }
 
-function largestAt(point: Vec3, emitters: readonly Emitter[], obstructions: readonly Obstruction[]): LargestParts {
+function largestParts(fluxes: readonly (NetFlux | null)[]): LargestParts {
+  const direction = largestDirection(fluxes)
+  return { direction, parts: fluxes.map((flux) => (flux ? dot(vectorInFront(flux, direction), direction) : 0)) }
+}
+
+function shadedLargest(point: Vec3, emitters: readonly Emitter[], obstructions: readonly Obstruction[]): LargestParts {
   const { direction } = largestIrradianceAt(emitters, point, obstructions)
   return { direction, parts: emitters.map((emitter) => irradianceAt(emitter, point, direction, obstructions)) }
 }
 
-/** As at the head, of the near-infrared share of each source; the same direction where all have the same share. */
+/** As at the head, of the near-infrared share of each source; in the same direction where all have the same share. */
 function nearInfraredAt(
   point: Vec3,
   sources: readonly Source[],
@@ -71,6 +118,8 @@ function nearInfraredAt(
   if (share !== null && sources.every(({ nearInfrared }) => nearInfrared === share)) {
     return { direction: head.direction, parts: head.parts.map((part) => part * share) }
   }
-  const emitters = sources.map(({ nearInfraredEmitter }) => nearInfraredEmitter).filter((each) => each !== null)
-  return emitters.length < sources.length ? null : largestAt(point, emitters, obstructions)
+  const dimmed = sources.flatMap(({ nearInfraredEmitter }) => nearInfraredEmitter ?? [])
+  if (dimmed.length < sources.length) return null
+  if (obstructions.length > 0) return shadedLargest(point, dimmed, obstructions)
+  return largestParts(dimmed.map((emitter) => netFluxOf(emitter, point)))
 }

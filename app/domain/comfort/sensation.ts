@@ -51,13 +51,24 @@ export function predictedMeanVote(input: VoteInput): number {
   return (0.303 * Math.exp(-0.036 * metabolic) + 0.028) * load
 }
 
-/** Root of t = balance(t), which falls with t, by bisection to 1e-6 K. */
+/** Root of t = balance(t), which falls with t: regula falsi after Illinois to 1e-6 K, between bounds that hold it. */
 function surfaceTemperature(skin: number, balance: (surface: number) => number): number {
+  const excess = (surface: number) => balance(surface) - surface
   let [low, high] = [-100, skin + 100]
-  while (high - low > 1e-6) {
-    const middle = (low + high) / 2
-    if (balance(middle) > middle) low = middle
-    else high = middle
+  let [above, below] = [excess(low), excess(high)]
+  for (let turn = 0, side = 0; turn < 100; turn++) {
+    const middle = (low * below - high * above) / (below - above)
+    const now = excess(middle)
+    if (Math.abs(now) < 1e-6) return middle
+    if (now > 0) {
+      ;[low, above] = [middle, now]
+      if (side === 1) below /= 2
+      side = 1
+    } else {
+      ;[high, below] = [middle, now]
+      if (side === -1) above /= 2
+      side = -1
+    }
   }
   return (low + high) / 2
 }

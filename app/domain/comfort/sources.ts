@@ -48,6 +48,17 @@ function sourcesOfHeater(heater: MountedHeater, model: HeaterModel, efficiency: 
   })
 }
 
+const remembered = new WeakMap<MountedHeater, { readonly model: HeaterModel; readonly made: Source[] | null }>()
+
+/** The same objects for the same heater and model, so that what is reckoned from them once is found again. */
+function nominalSources(heater: MountedHeater, model: HeaterModel): Source[] | null {
+  const known = remembered.get(heater)
+  if (known?.model === model) return known.made
+  const made = sourcesOfHeater(heater, model, 'nominal')
+  remembered.set(heater, { model, made })
+  return made
+}
+
 /** Every element of the layout, heater by heater, with the low, nominal or high figure of the radiant efficiency. */
 export function sourcesOf(
   layout: Pick<Layout, 'heaters'>,
@@ -57,7 +68,8 @@ export function sourcesOf(
   const cannotTell: string[] = []
   const sources = layout.heaters.flatMap((heater) => {
     const model = models.get(heater.model)
-    const own = model ? sourcesOfHeater(heater, model, efficiency) : null
+    const nominal = efficiency === 'nominal'
+    const own = model && (nominal ? nominalSources(heater, model) : sourcesOfHeater(heater, model, efficiency))
     if (!own) cannotTell.push(heater.id)
     return own ?? []
   })
