@@ -1,0 +1,99 @@
+import type { Brief } from '#app/domain/brief/brief.ts'
+import type { BriefField } from '#app/domain/brief/brief-field.ts'
+import { eveningFields, guestFields } from '#app/domain/brief/brief-fields.ts'
+import { supplyFields } from '#app/domain/brief/supply-fields.ts'
+import { houseRules } from '#app/domain/rules/house-rules.ts'
+import type { JobRequest } from '#app/domain/job/job-request.ts'
+import { parseLength, type DisplayUnits } from '#app/domain/units.ts'
+
+/** The answers of the enquiry form by field name, and the fields answered with "don't know". */
+export interface EnquiryAnswers {
+  readonly values: Readonly<Record<string, string>>
+  readonly unknown: ReadonlySet<string>
+}
+
+/** What is assumed where nobody knows. House rules, no published source. */
+export const assumedBrief: Omit<Brief, 'place'> = {
+  story: '',
+  season: '',
+  airTemperature: 8,
+  windDesign: 1,
+  windGust: 3,
+  windNote: '',
+  relativeHumidity: 75,
+  surroundingsTemperature: null,
+  clothing: 1.3,
+  activity: 1.2,
+  stayMinutes: 90,
+  supply: {
+    system: 'Single-phase 230 V',
+    phases: 1,
+    phaseVoltage: 230,
+    lineVoltage: null,
+    sparePerPhase: [],
+    distance: null,
+    note: '',
+  },
+  energy: null,
+  target: { low: houseRules.targetLow.value, high: houseRules.targetHigh.value, source: houseRules.targetLow.source },
+  assumed: ['relativeHumidity', 'windGust', 'surroundingsTemperature', 'activity', 'stayMinutes'],
+}
+
+const pick = (fields: readonly BriefField[], ...names: readonly string[]) =>
+  names.flatMap((name) => fields.filter((field) => field.name === name))
+
+/** The few questions that the computation cannot do without; each may be answered with "don't know". */
+export const enquiryFields: readonly BriefField[] = [
+  ...pick(eveningFields, 'airTemperature', 'windDesign'),
+  ...pick(guestFields, 'clothing'),
+  ...pick(supplyFields, 'supply', 'sparePerPhase'),
+  ...pick(guestFields, 'targetLow', 'targetHigh'),
+]
+
+/** The enquiry that the answers make, or what is wrong with them, by field name. */
+export function readEnquiry({
+  values,
+  unknown,
+}: EnquiryAnswers): { readonly asked: JobRequest } | { readonly errors: Record<string, string> } {
+  const errors: Record<string, string> = {}
+  const answer = (name: string) => (values[name] ?? '').trim()
+  const units: DisplayUnits = answer('units') === 'imperial' ? 'imperial' : 'metric'
+  const named = (name: string, what: string, most: number, least = 1) => {
+    const text = answer(name)
+    if (text.length < least) errors[name] = `Give ${what}.`
+    if (text.length > most) errors[name] = `At most ${most} characters. Was ${text.length}.`
+    return text
+  }
+  const length = (name: string, most: number) => {
+    const read = parseLength(answer(name), units, { min: 0.5, max: most })
+    if ('error' in read) errors[name] = read.error
+    return 'error' in read ? 1 : read.metres
+  }
+  const name = named('name', 'the job a name', 120)
+  const customer = named('customer', 'the customer', 120, 0)
+  const place = named('place', 'the place', 120)
+  const floor = unknown.has('floor') ? null : { length: length('along', 100), depth: length('deep', 60) }
+  const brief = withAnswers({ ...assumedBrief, place }, { values, unknown }, units, errors)
+  if (brief.target.low >= brief.target.high) errors['targetHigh'] ??= 'The target ends above where it starts.'
+  if (Object.keys(errors).length > 0) return { errors }
+  return { asked: { name, customer, displayUnits: units, floor, brief } }
+}
+
+function withAnswers(
+  start: Brief,
+  { values, unknown }: EnquiryAnswers,
+  units: DisplayUnits,
+  errors: Record<string, string>,
+): Brief {
+  let brief = start
+  for (const field of enquiryFields) {
+    if (unknown.has(field.name)) {
+      brief = { ...brief, assumed: [...brief.assumed, field.name] }
+      continue
+    }
+    const written = field.write(brief, values[field.name] ?? '', units)
+    if ('error' in written) errors[field.name] = written.error
+    else brief = written.brief
+  }
+  return brief
+}

@@ -1,0 +1,184 @@
+import { randomUUID } from 'node:crypto'
+import { data, Form, redirect, useNavigation } from 'react-router'
+import { z } from 'zod'
+import type { BriefField } from '#app/domain/brief/brief-field.ts'
+import { assumedBrief, enquiryFields, readEnquiry } from '#app/domain/brief/enquiry.ts'
+import type { DisplayUnits } from '#app/domain/units.ts'
+import { Button, ButtonLink } from '#app/components/button.tsx'
+import { ErrorSummary } from '#app/components/error-summary.tsx'
+import { CheckField, SelectField, TextField } from '#app/components/field.tsx'
+import { PageFrame } from '#app/components/page-frame.tsx'
+import { isRefusal } from '#app/server/answers.server.ts'
+import { createJob } from '#app/server/data/job-creation.server.ts'
+import { readForm } from '#app/server/form.server.ts'
+import { requireMay } from '#app/server/session.server.ts'
+import { viewerOf } from '#app/server/viewer.server.ts'
+import type { Route } from './+types/new'
+
+export const meta: Route.MetaFunction = () => [{ title: 'New enquiry · Inglefield' }]
+
+export async function loader({ request }: Route.LoaderArgs) {
+  const member = await requireMay(request, 'create-job')
+  return { viewer: viewerOf(member), key: randomUUID() }
+}
+
+const createdSchema = z.object({ id: z.string() })
+
+/** Longest answer that is kept to be shown again. */
+const longest = 2000
+
+export async function action({ request }: Route.ActionArgs) {
+  const member = await requireMay(request, 'create-job')
+  const form = await readForm(request)
+  const texts = [...form].flatMap(([name, value]) => (typeof value === 'string' ? [[name, value] as const] : []))
+  const values = Object.fromEntries(texts.map(([name, value]) => [name, value.replaceAll('\0', '').slice(0, longest)]))
+  const unknown = texts.flatMap(([name, value]) => (name === 'unknown' ? [value] : []))
+  const refused = (errors: Record<string, string>) => data({ errors, values, unknown }, 400)
+  const read = readEnquiry({ values, unknown: new Set(unknown) })
+  if ('errors' in read) return refused(read.errors)
+  const key = values['key'] ?? ''
+  if (!/^[\w-]{8,100}$/.test(key)) return refused({ name: 'The form is not complete. Open it again.' })
+  const job = await createJob(member, key, read.asked)
+  if (isRefusal(job)) return refused({ name: 'This form was already sent with other answers. Open it again.' })
+  return redirect(`/jobs/${createdSchema.parse(job.body).id}/site`)
+}
+
+const labels: Record<string, string> = {
+  name: 'Job',
+  customer: 'Customer',
+  place: 'Place',
+  along: 'Floor along the house',
+  deep: 'Floor away from it',
+  ...Object.fromEntries(enquiryFields.map(({ name, label }) => [name, label])),
+}
+
+/** Before an answer is given a field shows what would be assumed, as a hint; a target and clothing have a usual value. */
+const prefilled = new Set(['clothing', 'targetLow', 'targetHigh', 'supply'])
+
+export default function NewEnquiryPage({ loaderData, actionData }: Route.ComponentProps) {
+  const sending = useNavigation().state === 'submitting'
+  const errors: Record<string, string> = actionData?.errors ?? {}
+  const values: Record<string, string> = actionData?.values ?? {}
+  const unknown = new Set(actionData?.unknown ?? [])
+  const units: DisplayUnits = values['units'] === 'imperial' ? 'imperial' : 'metric'
+  const problems = Object.entries(errors).map(([id, error]) => ({ id, error, label: labels[id] ?? id }))
+  const text = (name: string) => ({
+    id: name,
+    name,
+    label: labels[name] ?? name,
+    defaultValue: values[name] ?? '',
+    error: errors[name],
+  })
+  const question = (field: BriefField) => (
+    <Question
+      key={field.name}
+      field={field}
+      units={units}
+      typed={values[field.name]}
+      unknown={unknown.has(field.name)}
+      error={errors[field.name]}
+    />
+  )
+  const fields = (...names: string[]) => enquiryFields.filter(({ name }) => names.includes(name)).map(question)
+  return (
+    <PageFrame viewer={loaderData.viewer}>
+      <Form method="post" noValidate className="max-w-3xl pt-1">
+        <h1 className="text-xl font-strong">New enquiry</h1>
+        <p className="mt-1 mb-5 max-w-xl text-base text-ink-2">
+          What is not known is assumed, and stays visible as an assumption until it is confirmed.
+        </p>
+        <ErrorSummary errors={problems} />
+        <input type="hidden" name="key" value={values['key'] ?? loaderData.key} />
+        <Group title="The place">
+          <TextField {...text('name')} hint="As it will be called on drawings" required />
+          <TextField {...text('place')} hint="Town or address" required />
+          <TextField {...text('customer')} aside="may stay open" />
+          <SelectField
+            id="units"
+            name="units"
+            label="Lengths and temperatures in"
+            defaultValue={units}
+            options={[
+              { value: 'metric', label: 'Metres and °C' },
+              { value: 'imperial', label: 'Feet and °F' },
+            ]}
+          />
+        </Group>
+        <Group title="The floor" note="A rectangle to begin with; its outline is refined on the site.">
+          <TextField {...text('along')} hint="Such as 13.20 m or 43 ft 4 in" />
+          <TextField {...text('deep')} hint="Such as 5.4 m or 17' 9&quot;" />
+          <CheckField
+            className="self-start tablet:pt-4.5"
+            name="unknown"
+            value="floor"
+            defaultChecked={unknown.has('floor')}
+            label="Don’t know: 6 × 4 m is assumed"
+          />
+        </Group>
+        <Group title="The evening">{fields('airTemperature', 'windDesign', 'clothing')}</Group>
+        <Group title="The supply">{fields('supply', 'sparePerPhase')}</Group>
+        <Group
+          title="The target"
+          note="Irradiance on the body plane. 150 to 350 W/m² is a house rule, no published source."
+        >
+          {fields('targetLow', 'targetHigh')}
+        </Group>
+        <p className="mt-6 flex gap-3 border-t border-rule pt-4">
+          <Button kind="primary" size="large" type="submit" disabled={sending}>
+            {sending ? 'Opening the job' : 'Open the job'}
+          </Button>
+          <ButtonLink to="/jobs" kind="text" size="large">
+            Leave
+          </ButtonLink>
+        </p>
+      </Form>
+    </PageFrame>
+  )
+}
+
+function Group({ title, note, children }: { title: string; note?: string; children: React.ReactNode }) {
+  return (
+    <section className="border-t border-rule pt-3 pb-5">
+      <h2 className="text-sm font-strong">{title}</h2>
+      {note && <p className="text-xs text-ink-3">{note}</p>}
+      <div className="mt-2 grid gap-x-5 gap-y-3 tablet:grid-cols-3">{children}</div>
+    </section>
+  )
+}
+
+interface QuestionProps {
+  field: BriefField
+  units: DisplayUnits
+  typed: string | undefined
+  unknown: boolean
+  error: string | undefined
+}
+
+const template = { ...assumedBrief, place: '' }
+
+function Question({ field, units, typed, unknown, error }: QuestionProps) {
+  const usual = field.show(template, units)
+  const shared = { id: field.name, name: field.name, label: field.label, hint: field.hint, error }
+  const value = typed ?? (prefilled.has(field.name) ? usual : '')
+  const assumed = usual === '' ? 'left open' : `${usual} ${field.unit(units)}`.trim()
+  return (
+    <div>
+      {field.options ? (
+        <SelectField {...shared} options={field.options} defaultValue={value} />
+      ) : (
+        <TextField {...shared} unit={field.unit(units)} defaultValue={value} inputMode="text" />
+      )}
+      <CheckField
+        className="mt-1 text-xs text-ink-2"
+        name="unknown"
+        value={field.name}
+        defaultChecked={unknown}
+        label={
+          <>
+            Don’t know<span className="sr-only"> {field.label}</span>: {field.options ? 'assumed' : assumed}
+          </>
+        }
+      />
+    </div>
+  )
+}
