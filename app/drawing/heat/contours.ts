@@ -26,6 +26,15 @@ export interface HeatLine {
 export interface HeatPicture {
   readonly bands: readonly HeatBand[]
   readonly lines: readonly HeatLine[]
+  /** Highest points above the last band, where the fill no longer tells and the figure is written. */
+  readonly peaks: readonly HeatPeak[]
+}
+
+/** A point of the floor, m, and the value there. */
+export interface HeatPeak {
+  readonly x: number
+  readonly y: number
+  readonly value: number
 }
 
 /** Lower edges of the fill's bands on the irradiance scale, W/m²: every 25 up to where the scale saturates. */
@@ -66,7 +75,36 @@ export function contoursOf(
     const rings = ringsAt(level)
     return { level, path: pathOfRings(rings), labels: placesOnRing(rings, isInside) }
   })
-  return { bands: bands.filter((band) => band.path !== ''), lines: lines.filter((line) => line.path !== '') }
+  return {
+    bands: bands.filter((band) => band.path !== ''),
+    lines: lines.filter((line) => line.path !== ''),
+    peaks: peaksOf(values, grid, edges.at(-1) ?? Infinity),
+  }
+}
+
+/** Distance between two points that are both called highest, m. */
+const peaksApart = 1
+
+/** Cells above a value that none of their neighbours exceeds, the highest first, at least 1 m from each other. */
+function peaksOf(values: Float32Array, grid: Grid, above: number): HeatPeak[] {
+  const at = (i: number, j: number) => {
+    const isOutside = i < 0 || j < 0 || i >= grid.columns || j >= grid.rows
+    const k = j * grid.columns + i
+    return isOutside || grid.inside[k] !== 1 ? -Infinity : (values[k] ?? -Infinity)
+  }
+  const found: HeatPeak[] = []
+  for (let j = 0; j < grid.rows; j++) {
+    for (let i = 0; i < grid.columns; i++) {
+      const value = at(i, j)
+      if (!(value > above) || neighbours.some(([dx, dy]) => at(i + dx, j + dy) > value)) continue
+      found.push({ x: grid.x0 + (i + 0.5) * grid.cell, y: grid.y0 + (j + 0.5) * grid.cell, value })
+    }
+  }
+  const chosen: HeatPeak[] = []
+  for (const peak of found.sort((a, b) => b.value - a.value)) {
+    if (chosen.every((other) => Math.hypot(other.x - peak.x, other.y - peak.y) >= peaksApart)) chosen.push(peak)
+  }
+  return chosen
 }
 
 function upperEdge(edges: readonly number[], i: number): number {

@@ -1,0 +1,112 @@
+import type { MountedHeater } from '#app/domain/layout/layout.ts'
+import type { Site } from '#app/domain/site/site.ts'
+import { DimensionChain, type ChainStop } from '#app/drawing/plan/dimension-line.tsx'
+import { dimensionText, floorDimension, toleratedText } from '#app/drawing/plan/dimension-text.ts'
+import { extentOf, type PlanView } from '#app/drawing/plan/plan-view.ts'
+import { wallCorners } from '#app/drawing/plan/wall.tsx'
+import type { Pen } from '#app/drawing/pen.ts'
+
+/** Across a row heaters within this distance count as one row, m. */
+const rowWidth = 0.15
+
+/**
+ * The row of heaters that a chain of spacings is drawn for, along x (0) or y (1): the one with a selected heater, else
+ * the fullest, of equals the nearest to the chain (lowest y, highest x). Coordinates in rising order, without repeats.
+ */
+export function rowOf(heaters: readonly MountedHeater[], axis: 0 | 1, selected: ReadonlySet<string>): number[] {
+  const along = (heater: MountedHeater) => (axis === 0 ? heater.x : heater.y)
+  const across = (heater: MountedHeater) => (axis === 0 ? heater.y : -heater.x)
+  const rows: MountedHeater[][] = []
+  for (const heater of [...heaters].sort((a, b) => across(a) - across(b))) {
+    const row = rows.at(-1)
+    const first = row?.[0]
+    if (row && first && across(heater) - across(first) <= rowWidth) row.push(heater)
+    else rows.push([heater])
+  }
+  const chosen =
+    rows.find((row) => row.some(({ id }) => selected.has(id))) ??
+    rows.reduce<MountedHeater[]>((best, row) => (row.length > best.length ? row : best), [])
+  const places = [...new Set(chosen.map((heater) => Math.round(along(heater) * 1000) / 1000))].sort((a, b) => a - b)
+  return places.filter((place, i) => i === 0 || place - (places[i - 1] ?? 0) > 0.01)
+}
+
+/** Spacings along a row from edge to edge of the floor, and the floor's whole length and depth with their tolerance. */
+export function PlanDimensions({
+  site,
+  heaters,
+  selected,
+  view,
+  pen,
+  overall = true,
+  edges = true,
+  upright = true,
+}: {
+  site: Site
+  heaters: readonly MountedHeater[]
+  selected: ReadonlySet<string>
+  view: PlanView
+  pen: Pen
+  /** Whether the floor's whole length and depth are drawn as well. */
+  overall?: boolean
+  /** Whether the chain starts and ends at the floor's edges. */
+  edges?: boolean
+  /** Whether the chain along y is drawn. */
+  upright?: boolean
+}) {
+  const { x, y } = extentOf(site.floor)
+  const below = lowestPx(site, view)
+  const right = view.x0 + view.scale * x[1]
+  const text = (metres: number) => dimensionText(metres, site.displayUnits)
+  const onX = (metres: number): ChainStop => ({ px: view.x0 + view.scale * metres, metres })
+  const onY = (metres: number): ChainStop => ({ px: view.y0 - view.scale * metres, metres })
+  const stopsX = stopsOf(rowOf(heaters, 0, selected), x, edges).map(onX)
+  const stopsY = stopsOf(rowOf(heaters, 1, selected), y, edges)
+    .map(onY)
+    .reverse()
+  const whole = (axis: 0 | 1, metres: number): string => {
+    const dimension = floorDimension(site, axis, metres)
+    return dimension ? toleratedText(dimension, metres, site.displayUnits) : text(metres)
+  }
+  const hasChainX = stopsX.length > 2 || (!edges && stopsX.length === 2)
+  const hasChainY = stopsY.length > 2
+  return (
+    <g>
+      {hasChainX ? (
+        <DimensionChain direction="level" at={below + 17 * pen.k} stops={stopsX} text={text} pen={pen} />
+      ) : null}
+      {overall ? (
+        <DimensionChain
+          direction="level"
+          at={below + (hasChainX ? 38 : 17) * pen.k}
+          stops={x.map(onX)}
+          text={(metres) => whole(0, metres)}
+          pen={pen}
+        />
+      ) : null}
+      {upright && hasChainY ? (
+        <DimensionChain direction="upright" at={right + 19 * pen.k} stops={stopsY} text={text} pen={pen} />
+      ) : null}
+      {upright && overall ? (
+        <DimensionChain
+          direction="upright"
+          at={right + (hasChainY ? 39 : 19) * pen.k}
+          stops={y.map(onY).reverse()}
+          text={(metres) => whole(1, metres)}
+          pen={pen}
+        />
+      ) : null}
+    </g>
+  )
+}
+
+/** Bottom of the floor and of the walls below it, px. */
+export function lowestPx(site: Site, view: PlanView): number {
+  const floor = view.y0 - view.scale * extentOf(site.floor).y[0]
+  return Math.max(floor, ...site.walls.flatMap((wall) => wallCorners(wall, view).map((corner) => corner[1])))
+}
+
+function stopsOf(row: readonly number[], [low, high]: readonly [number, number], edges: boolean): number[] {
+  if (!edges) return [...row]
+  const inner = row.filter((place) => place > low + 0.01 && place < high - 0.01)
+  return [low, ...inner, high]
+}

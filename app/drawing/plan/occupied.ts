@@ -1,0 +1,44 @@
+import type { Vec2 } from '#app/domain/vector.ts'
+
+/** A turned rectangle on the drawing, px: its middle, half its size and its turn in degrees clockwise. */
+export interface Patch {
+  readonly x: number
+  readonly y: number
+  readonly halfWidth: number
+  readonly halfHeight: number
+  readonly turnDeg: number
+}
+
+/** The patch of an upright rectangle. */
+export const patch = (x: number, y: number, width: number, height: number, turnDeg = 0): Patch => ({
+  x,
+  y,
+  halfWidth: width / 2,
+  halfHeight: height / 2,
+  turnDeg,
+})
+
+const axesOf = (p: Patch): readonly [Vec2, Vec2] => {
+  const turn = (p.turnDeg * Math.PI) / 180
+  return [
+    [Math.cos(turn), Math.sin(turn)],
+    [-Math.sin(turn), Math.cos(turn)],
+  ]
+}
+
+const extentAlong = (p: Patch, [ax, ay]: Vec2): number => {
+  const [across, down] = axesOf(p)
+  return p.halfWidth * Math.abs(across[0] * ax + across[1] * ay) + p.halfHeight * Math.abs(down[0] * ax + down[1] * ay)
+}
+
+/** Whether two patches come nearer to each other than `gap` px (separating axes; at corners a little strict). */
+export function meets(a: Patch, b: Patch, gap = 0): boolean {
+  return [...axesOf(a), ...axesOf(b)].every((axis) => {
+    const apart = Math.abs((b.x - a.x) * axis[0] + (b.y - a.y) * axis[1])
+    return apart < extentAlong(a, axis) + extentAlong(b, axis) + gap
+  })
+}
+
+/** Whether a patch is `gap` px clear of all others. */
+export const isClear = (candidate: Patch, others: readonly Patch[], gap: number): boolean =>
+  others.every((other) => !meets(candidate, other, gap))

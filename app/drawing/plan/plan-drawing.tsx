@@ -1,0 +1,289 @@
+import { memo, type ReactNode } from 'react'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { Layout } from '#app/domain/layout/layout.ts'
+import type { Site } from '#app/domain/site/site.ts'
+import type { HeatPicture } from '#app/drawing/heat/contours.ts'
+import { HeatFill, Isolines } from '#app/drawing/heat/heat-fill.tsx'
+import { patternIds, ZonePatterns } from '#app/drawing/heat/patterns.tsx'
+import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
+import { Beyond } from '#app/drawing/plan/beyond.tsx'
+import { PlanDimensions } from '#app/drawing/plan/dimensions.tsx'
+import { PoleMark, TableMark } from '#app/drawing/plan/furniture.tsx'
+import { HeaterMark } from '#app/drawing/plan/heater.tsx'
+import { LineLabels, placeLineLabels, placePeaks } from '#app/drawing/plan/line-labels.tsx'
+import { MemberLines, MemberNames } from '#app/drawing/plan/members.tsx'
+import { notePatch, placeNotes } from '#app/drawing/plan/notes.ts'
+import { ObstacleMark } from '#app/drawing/plan/obstacle.tsx'
+import { outlinePath } from '#app/drawing/plan/outline.ts'
+import { siteTransform, type PlanView } from '#app/drawing/plan/plan-view.ts'
+import { ScaleBar } from '#app/drawing/plan/scale-bar.tsx'
+import { SeatMark, seatsCarryFigures, type SeatSign } from '#app/drawing/plan/seat.tsx'
+import { SectionCutMark, type SectionCut } from '#app/drawing/plan/section-cut.tsx'
+import { takenByHeaters, takenBySite } from '#app/drawing/plan/taken.ts'
+import { WallBand } from '#app/drawing/plan/wall.tsx'
+import type { Pen } from '#app/drawing/pen.ts'
+import { fontFamily } from '#app/drawing/theme.ts'
+import { Words } from '#app/drawing/text/words.tsx'
+
+/** What a plan says beside the site, its heat and its heaters. */
+export interface PlanDetail {
+  /** Names of members, walls, obstacles and of what lies beyond. */
+  readonly names: boolean
+  readonly spacings: boolean
+  /** Whole length and depth of the floor. */
+  readonly overall: boolean
+  readonly scaleBar: boolean
+  /** Figures on the isolines. */
+  readonly lineFigures: boolean
+}
+
+/** Everything a working plan says. */
+export const workingDetail: PlanDetail = {
+  names: true,
+  spacings: true,
+  overall: true,
+  scaleBar: true,
+  lineFigures: true,
+}
+
+/** A plan of the site with the heaters of one variant. */
+export interface PlanProps {
+  /** Unique in the page: names the drawing's patterns and its clip. */
+  readonly name: string
+  readonly site: Site
+  readonly layout: Layout
+  readonly models: ReadonlyMap<string, HeaterModel>
+  readonly view: PlanView
+  readonly pen: Pen
+  readonly quantity: QuantityScale
+  /** The map; null while it is computed and with no heater. */
+  readonly picture: HeatPicture | null
+  /** What each seat's disc says, by seat id; a seat without a sign is drawn empty. */
+  readonly signs: ReadonlyMap<string, SeatSign>
+  readonly detail?: PlanDetail
+  readonly selected?: ReadonlySet<string>
+  /** Id of a seat that a list points at. */
+  readonly pointedSeat?: string | null
+  readonly cuts?: readonly SectionCut[]
+}
+
+const nothing: ReadonlySet<string> = new Set()
+
+/**
+ * The plan as a group, in the order water, floor, fill, dots, hatch, isolines, wall, outline, beams, obstacles, tables,
+ * seats, heaters, dimensions. Heaters, seats and members carry `data-heater`, `data-seat` and `data-member`.
+ */
+export function Plan(props: PlanProps) {
+  const { name, site, layout, models, view, pen, quantity, picture } = props
+  const { detail = workingDetail, selected = nothing, cuts = [] } = props
+  const withFigure = seatsCarryFigures(site.seats, view, pen)
+  const modelOf = (code: string) => models.get(code) ?? null
+  return (
+    <g fontFamily={fontFamily}>
+      <PlanGround {...{ name, site, view, pen }} named={detail.names} />
+      {picture ? <PlanHeat {...{ name, site, view, pen, quantity, picture }} /> : null}
+      {picture && detail.lineFigures ? (
+        <PlanHeatFigures {...{ site, layout, models, view, pen, quantity, picture, withFigure }} named={detail.names} />
+      ) : null}
+      <PlanStructure {...{ name, site, view, pen }} named={detail.names} />
+      {site.seats.map((seat) => (
+        <SeatMarkMemo
+          key={seat.id}
+          {...{ seat, view, pen, withFigure }}
+          sign={props.signs.get(seat.id) ?? null}
+          pointed={props.pointedSeat === seat.id}
+        />
+      ))}
+      {layout.heaters.map((heater) => (
+        <HeaterMarkMemo
+          key={heater.id}
+          {...{ heater, site, view, pen }}
+          model={modelOf(heater.model)}
+          selected={selected.has(heater.id)}
+        />
+      ))}
+      {detail.spacings ? (
+        <PlanDimensions {...{ site, selected, view, pen }} heaters={layout.heaters} overall={detail.overall} />
+      ) : null}
+      {detail.names ? <PlanNames {...{ site, layout, models, view, pen, withFigure, cuts }} /> : null}
+      {cuts.map((cut) => (
+        <SectionCutMark key={cut.letter} {...{ cut, site, view, pen }} />
+      ))}
+      {detail.scaleBar ? (
+        <ScaleBar
+          x={view.width - 54 * pen.k}
+          y={view.height - 21 * pen.k}
+          scale={view.scale}
+          displayUnits={site.displayUnits}
+          pen={pen}
+        />
+      ) : null}
+    </g>
+  )
+}
+
+const SeatMarkMemo = memo(SeatMark)
+const HeaterMarkMemo = memo(HeaterMark)
+
+interface PartProps {
+  readonly name: string
+  readonly site: Site
+  readonly view: PlanView
+  readonly pen: Pen
+}
+
+/** Ground, what lies beyond, and the bare floor, with the patterns and the floor's clip that the rest uses. */
+export const PlanGround = memo(function PlanGround({ name, site, view, pen, named }: PartProps & { named: boolean }) {
+  return (
+    <>
+      <defs>
+        <ZonePatterns name={name} pen={pen} />
+        <ZonePatterns name={`${name}-site`} pen={pen} scale={view.scale} />
+        <clipPath id={patternIds(name).clip}>
+          <path d={outlinePath(site.floor, view)} />
+        </clipPath>
+      </defs>
+      <rect width={view.width} height={view.height} fill={pen.colours.ground} />
+      <Beyond site={site} view={view} pen={pen} named={named} />
+      <path d={outlinePath(site.floor, view)} fill={pen.colours.floor} />
+    </>
+  )
+})
+
+/** The map's fills, zones and isolines, clipped to the floor. */
+export const PlanHeat = memo(function PlanHeat({
+  name,
+  view,
+  pen,
+  quantity,
+  picture,
+}: Omit<PartProps, 'site'> & { quantity: QuantityScale; picture: HeatPicture }) {
+  const transform = siteTransform(view)
+  return (
+    <g clipPath={`url(#${patternIds(name).clip})`}>
+      <HeatFill picture={picture} quantity={quantity} transform={transform} name={`${name}-site`} />
+      <Isolines picture={picture} quantity={quantity} transform={transform} scale={view.scale} pen={pen} />
+    </g>
+  )
+})
+
+interface FigureProps {
+  readonly site: Site
+  readonly layout: Layout
+  readonly models: ReadonlyMap<string, HeaterModel>
+  readonly view: PlanView
+  readonly pen: Pen
+  readonly withFigure: boolean
+}
+
+/** The isolines' figures and the figures of what lies above the scale, clear of seats, tables, heaters and cables. */
+export const PlanHeatFigures = memo(function PlanHeatFigures({
+  quantity,
+  picture,
+  named,
+  ...rest
+}: FigureProps & { quantity: QuantityScale; picture: HeatPicture; named: boolean }) {
+  const { site, layout, models, view, pen, withFigure } = rest
+  const things = [...takenBySite(site, view, pen, withFigure), ...takenByHeaters(layout, models, view, pen)]
+  const notes = named ? placeNotes(site, view, pen, things).map((note) => notePatch(note, pen)) : []
+  const taken = [...things, ...notes]
+  const peaks = placePeaks(picture, quantity, view, pen, taken)
+  return (
+    <>
+      <LineLabels
+        labels={placeLineLabels(picture, quantity, site.floor, view, pen, taken)}
+        quantity={quantity}
+        pen={pen}
+      />
+      {peaks.map((peak) => (
+        <Words
+          key={`${peak.x} ${peak.y}`}
+          x={peak.x}
+          y={peak.y}
+          centred
+          anchor="middle"
+          size={pen.text}
+          weight={600}
+          colour={pen.colours.isoline}
+          halo={pen.colours.halo}
+          haloWidth={pen.text * 0.34}
+        >
+          {peak.text}
+        </Words>
+      ))}
+    </>
+  )
+})
+
+/** Walls, the floor's outline, members, obstacles, poles and tables. */
+export const PlanStructure = memo(function PlanStructure({
+  name,
+  site,
+  view,
+  pen,
+  named,
+}: PartProps & { named: boolean }) {
+  return (
+    <>
+      {site.walls.map((wall) => (
+        <WallBand key={wall.id} {...{ wall, view, pen, named }} hatch={patternIds(name).wall} />
+      ))}
+      <path
+        d={outlinePath(site.floor, view)}
+        fill="none"
+        stroke={pen.colours.line}
+        strokeWidth={pen.weights.outline * pen.k}
+        strokeLinejoin="round"
+      />
+      {site.members.map((member) => (
+        <MemberLines key={member.id} member={member} view={view} pen={pen} />
+      ))}
+      {site.obstacles.map((obstacle) => (
+        <ObstacleMark key={obstacle.id} obstacle={obstacle} view={view} pen={pen} />
+      ))}
+      {site.poles.map((pole) => (
+        <PoleMark key={pole.id} pole={pole} view={view} pen={pen} />
+      ))}
+      {site.tables.map((table) => (
+        <TableMark key={table.id} table={table} view={view} pen={pen} />
+      ))}
+    </>
+  )
+})
+
+/** Names of members and obstacles. */
+export const PlanNames = memo(function PlanNames(props: FigureProps & { cuts: readonly SectionCut[] }) {
+  const { site, layout, models, view, pen, withFigure, cuts } = props
+  const taken = [...takenBySite(site, view, pen, withFigure), ...takenByHeaters(layout, models, view, pen)]
+  const crossed = cuts.filter((cut) => cut.along === 'y').map((cut) => view.x0 + view.scale * cut.at)
+  return (
+    <>
+      <MemberNames members={site.members} view={view} pen={pen} cuts={crossed} />
+      {placeNotes(site, view, pen, taken).map((note) => (
+        <Words
+          key={note.id}
+          x={note.x}
+          y={note.y}
+          anchor={note.anchor}
+          size={pen.text}
+          colour={pen.colours.line}
+          halo={pen.colours.halo}
+          haloWidth={3.2 * pen.k}
+        >
+          {note.text}
+        </Words>
+      ))}
+    </>
+  )
+})
+
+/** A plan as a picture of its own. `label` is its text for those who do not see it; `children` lie over everything. */
+export function PlanDrawing({ label, children, ...plan }: PlanProps & { label: string; children?: ReactNode }) {
+  const { width, height } = plan.view
+  return (
+    <svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="img" aria-label={label}>
+      <Plan {...plan} />
+      {children}
+    </svg>
+  )
+}

@@ -1,0 +1,51 @@
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { Layout } from '#app/domain/layout/layout.ts'
+import type { Site } from '#app/domain/site/site.ts'
+import { heaterNameAt, heaterPatch, heaterPlace } from '#app/drawing/plan/heater-place.ts'
+import { stripOf } from '#app/drawing/plan/obstacle.tsx'
+import { patch, type Patch } from '#app/drawing/plan/occupied.ts'
+import { toScreen, type PlanView } from '#app/drawing/plan/plan-view.ts'
+import { seatRadius } from '#app/drawing/plan/seat.tsx'
+import type { Pen } from '#app/drawing/pen.ts'
+import { textWidth } from '#app/drawing/text/widths.ts'
+
+/** The room that seats, tables, poles and cables take on a plan, px. */
+export function takenBySite(site: Site, view: PlanView, pen: Pen, withFigure: boolean): Patch[] {
+  const disc = 2 * (seatRadius(view, pen, withFigure) + 3 * pen.k)
+  const seats = site.seats.map((seat) => patch(...toScreen(view, [seat.x, seat.y]), disc, disc))
+  const tables = site.tables.map((table) =>
+    patch(...toScreen(view, table.centre), table.size[0] * view.scale, table.size[1] * view.scale, -table.turnDeg),
+  )
+  const poles = site.poles.map((pole) => patch(...toScreen(view, pole.at), 8 * pen.k, 8 * pen.k))
+  const cables = site.obstacles
+    .filter(({ kind }) => kind === 'cable')
+    .flatMap((obstacle) => {
+      const strip = stripOf(obstacle)
+      if (!strip) return []
+      const [x, y] = toScreen(view, [(strip.from[0] + strip.to[0]) / 2, (strip.from[1] + strip.to[1]) / 2])
+      const [across, deep] = [strip.to[0] - strip.from[0], strip.to[1] - strip.from[1]]
+      return [patch(x, y, Math.abs(across) * view.scale + 4, Math.abs(deep) * view.scale + 4)]
+    })
+  return [...seats, ...tables, ...poles, ...cables]
+}
+
+/** The room that heaters and their names take on a plan, px. */
+export function takenByHeaters(
+  layout: Layout,
+  models: ReadonlyMap<string, HeaterModel>,
+  view: PlanView,
+  pen: Pen,
+): Patch[] {
+  return layout.heaters.flatMap((heater) => {
+    const place = heaterPlace(heater, models.get(heater.model) ?? null, view, pen)
+    const width = textWidth(heater.id, pen.text, 600)
+    const chevron = place.length / 2 + 8 * pen.k
+    return [
+      heaterPatch(place),
+      patch(...heaterNameAt(place, width, pen), width, pen.text),
+      ...(heater.tiltDeg === 0
+        ? []
+        : [patch(place.x - place.nameEnd[0] * chevron, place.y - place.nameEnd[1] * chevron, 14 * pen.k, 12 * pen.k)]),
+    ]
+  })
+}
