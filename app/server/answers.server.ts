@@ -1,3 +1,5 @@
+import { canonicalJson } from '#drizzle/content-hash.ts'
+
 /** A request that is refused: the status, why in a sentence, and the field or header by its dotted path. */
 export interface Refusal {
   readonly status: 400 | 403 | 404 | 405 | 409 | 412 | 413 | 422 | 428
@@ -22,14 +24,18 @@ export function isRefusal<T extends object>(result: T | Refusal): result is Refu
 /** The entity tag of a revision: its number in quotes. */
 export const etagOf = (revision: number): string => `"${revision}"`
 
-/** The JSON response to a refusal or an answer; a revision goes out as ETag too. */
+/**
+ * The JSON response to a refusal or an answer; a revision goes out as ETag too. Keys are sorted, so that an answer given
+ * again from storage is the same to the byte.
+ */
 export function respond(result: Answer | Refusal): Response {
   if (isRefusal(result)) {
     const { status, ...said } = result
     return Response.json(said, { status })
   }
-  const headers: HeadersInit = result.revision === null ? {} : { ETag: etagOf(result.revision) }
-  return Response.json(result.body, { status: result.status, headers })
+  const headers = new Headers({ 'Content-Type': 'application/json' })
+  if (result.revision !== null) headers.set('ETag', etagOf(result.revision))
+  return new Response(canonicalJson(result.body), { status: result.status, headers })
 }
 
 /** A refusal as the JSON response of an API route. */
