@@ -2,6 +2,7 @@ import type { Site } from '#app/domain/site/site.ts'
 import { edgeOnScreen, onEdge, type ScreenEdge } from '#app/drawing/plan/outline.ts'
 import type { PlanView } from '#app/drawing/plan/plan-view.ts'
 import type { Pen } from '#app/drawing/pen.ts'
+import { textWidth } from '#app/drawing/text/widths.ts'
 import { Words } from '#app/drawing/text/words.tsx'
 
 type Place = Site['beyond'][number]
@@ -53,16 +54,14 @@ function strokesOf(kind: Place['kind'], edge: ScreenEdge, past: number, k: numbe
   if (kind === 'garden') {
     const tufts = Array.from({ length: Math.floor(edge.length / (26 * k)) }, (_, i) => {
       const along = (i + 0.5) * 26 * k
-      const foot = (12 + (i % 3) * 6) * k
-      return `${lineOn(edge, [
-        [along - 3 * k, foot + 4 * k],
-        [along, foot],
-        [along + 3 * k, foot + 4 * k],
-      ])}${lineOn(edge, [
-        [along, foot],
-        [along, foot + 6 * k],
-      ])}`
-    })
+      const foot = (9 + (i % 3) * 7) * k
+      return [-3, 0, 3].map((lean) =>
+        lineOn(edge, [
+          [along + lean * 0.3 * k, foot],
+          [along + lean * k, foot + (lean === 0 ? 6 : 4.6) * k],
+        ]),
+      )
+    }).flat()
     return [{ path: tufts.join(''), opacity: 0.8 }]
   }
   return [9, 13].map((outward) => ({
@@ -74,8 +73,33 @@ function strokesOf(kind: Place['kind'], edge: ScreenEdge, past: number, k: numbe
   }))
 }
 
-/** What lies beyond the floor's edges: water, a garden, a street or a drop, with its name. */
-export function Beyond({ site, view, pen, named }: { site: Site; view: PlanView; pen: Pen; named: boolean }) {
+/** Where along an edge its name stands: the place nearest the middle that keeps clear of what else stands there, px. */
+function nameAlong(edge: ScreenEdge, width: number, avoid: readonly (readonly [number, number])[]): number {
+  const middles = [0.5, 0.42, 0.58, 0.34, 0.26, 0.66, 0.18, 0.1].map((t) => t * edge.length)
+  const clear = middles.find((along) => {
+    const [x] = onEdge(edge, along, 0)
+    return avoid.every(([from, to]) => x + width / 2 < from - 10 || x - width / 2 > to + 10)
+  })
+  return clear ?? edge.length / 2
+}
+
+/**
+ * What lies beyond the floor's edges: water, a garden, a street or a drop, with its name. `avoid`: stretches of the
+ * drawing's width, px, in which other things stand above the floor.
+ */
+export function Beyond({
+  site,
+  view,
+  pen,
+  named,
+  avoid,
+}: {
+  site: Site
+  view: PlanView
+  pen: Pen
+  named: boolean
+  avoid: readonly (readonly [number, number])[]
+}) {
   return (
     <g>
       {site.beyond.map((place) => {
@@ -83,7 +107,9 @@ export function Beyond({ site, view, pen, named }: { site: Site; view: PlanView;
         if (!edge) return null
         const level = Math.abs(edge.along[0]) > Math.abs(edge.along[1])
         const past = level ? view.width : view.height
-        const [x, y] = onEdge(edge, edge.length / 2, (level ? 29 : 22) * (pen.k < 1 ? 0.72 : 1))
+        const name = sentence(place.name)
+        const along = level ? nameAlong(edge, textWidth(name, pen.text, 500), avoid) : edge.length / 2
+        const [x, y] = onEdge(edge, along, (level ? 29 : 22) * (pen.k < 1 ? 0.72 : 1))
         return (
           <g key={place.edge}>
             {strokesOf(place.kind, edge, past, pen.k).map((stroke, i) => (
@@ -106,7 +132,7 @@ export function Beyond({ site, view, pen, named }: { site: Site; view: PlanView;
                 halo={pen.colours.halo}
                 turn={level ? 0 : -90}
               >
-                {sentence(place.name)}
+                {name}
               </Words>
             ) : null}
           </g>

@@ -69,6 +69,9 @@ export function PlanDimensions({
   }
   const hasChainX = stopsX.length > 2 || (!edges && stopsX.length === 2)
   const hasChainY = stopsY.length > 2
+  const isCrowded = stopsX.some(
+    (stop, i) => i > 1 && i < stopsX.length - 1 && stop.px - (stopsX[i - 1]?.px ?? 0) < 34 * pen.k,
+  )
   return (
     <g>
       {hasChainX ? (
@@ -77,7 +80,7 @@ export function PlanDimensions({
       {overall ? (
         <DimensionChain
           direction="level"
-          at={below + (hasChainX ? 38 : 17) * pen.k}
+          at={below + (isCrowded ? 51 : hasChainX ? 38 : 17) * pen.k}
           stops={x.map(onX)}
           text={(metres) => whole(0, metres)}
           pen={pen}

@@ -33,6 +33,8 @@ const extentAlong = (p: Patch, [ax, ay]: Vec2): number => {
 
 /** Whether two patches come nearer to each other than `gap` px (separating axes; at corners a little strict). */
 export function meets(a: Patch, b: Patch, gap = 0): boolean {
+  const reach = Math.hypot(a.halfWidth, a.halfHeight) + Math.hypot(b.halfWidth, b.halfHeight) + gap * 1.5
+  if (Math.abs(b.x - a.x) > reach || Math.abs(b.y - a.y) > reach) return false
   return [...axesOf(a), ...axesOf(b)].every((axis) => {
     const apart = Math.abs((b.x - a.x) * axis[0] + (b.y - a.y) * axis[1])
     return apart < extentAlong(a, axis) + extentAlong(b, axis) + gap

@@ -12,14 +12,14 @@ import { PoleMark, TableMark } from '#app/drawing/plan/furniture.tsx'
 import { HeaterMark } from '#app/drawing/plan/heater.tsx'
 import { LineLabels, placeLineLabels, placePeaks } from '#app/drawing/plan/line-labels.tsx'
 import { MemberLines, MemberNames } from '#app/drawing/plan/members.tsx'
-import { notePatch, placeNotes } from '#app/drawing/plan/notes.ts'
+import { notePatch, placeNotes, placePoleNames, takenAbove } from '#app/drawing/plan/notes.ts'
 import { ObstacleMark } from '#app/drawing/plan/obstacle.tsx'
 import { outlinePath } from '#app/drawing/plan/outline.ts'
 import { siteTransform, type PlanView } from '#app/drawing/plan/plan-view.ts'
 import { ScaleBar } from '#app/drawing/plan/scale-bar.tsx'
 import { SeatMark, seatsCarryFigures, type SeatSign } from '#app/drawing/plan/seat.tsx'
 import { SectionCutMark, type SectionCut } from '#app/drawing/plan/section-cut.tsx'
-import { takenByHeaters, takenBySite } from '#app/drawing/plan/taken.ts'
+import { takenByHeaters, takenBySite, takenBySmallThings } from '#app/drawing/plan/taken.ts'
 import { WallBand } from '#app/drawing/plan/wall.tsx'
 import type { Pen } from '#app/drawing/pen.ts'
 import { fontFamily } from '#app/drawing/theme.ts'
@@ -68,6 +68,7 @@ export interface PlanProps {
 }
 
 const nothing: ReadonlySet<string> = new Set()
+const noCuts: readonly SectionCut[] = []
 
 /**
  * The plan as a group, in the order water, floor, fill, dots, hatch, isolines, wall, outline, beams, obstacles, tables,
@@ -75,12 +76,12 @@ const nothing: ReadonlySet<string> = new Set()
  */
 export function Plan(props: PlanProps) {
   const { name, site, layout, models, view, pen, quantity, picture } = props
-  const { detail = workingDetail, selected = nothing, cuts = [] } = props
+  const { detail = workingDetail, selected = nothing, cuts = noCuts } = props
   const withFigure = seatsCarryFigures(site.seats, view, pen)
   const modelOf = (code: string) => models.get(code) ?? null
   return (
     <g fontFamily={fontFamily}>
-      <PlanGround {...{ name, site, view, pen }} named={detail.names} />
+      <PlanGround {...{ name, site, view, pen, cuts }} named={detail.names} />
       {picture ? <PlanHeat {...{ name, site, view, pen, quantity, picture }} /> : null}
       {picture && detail.lineFigures ? (
         <PlanHeatFigures {...{ site, layout, models, view, pen, quantity, picture, withFigure }} named={detail.names} />
@@ -122,7 +123,24 @@ export function Plan(props: PlanProps) {
   )
 }
 
-const SeatMarkMemo = memo(SeatMark)
+/** Places on the drawing's width where sections along y are cut, px. */
+const cutsAcross = (cuts: readonly SectionCut[], view: PlanView): number[] =>
+  cuts.filter((cut) => cut.along === 'y').map((cut) => view.x0 + view.scale * cut.at)
+
+/** A sign that says the same is the same sign. */
+const saysTheSame = (a: SeatSign | null, b: SeatSign | null): boolean =>
+  a === b || JSON.stringify(a) === JSON.stringify(b)
+
+const SeatMarkMemo = memo(
+  SeatMark,
+  (before, now) =>
+    before.seat === now.seat &&
+    before.view === now.view &&
+    before.pen === now.pen &&
+    before.withFigure === now.withFigure &&
+    before.pointed === now.pointed &&
+    saysTheSame(before.sign, now.sign),
+)
 const HeaterMarkMemo = memo(HeaterMark)
 
 interface PartProps {
@@ -133,7 +151,16 @@ interface PartProps {
 }
 
 /** Ground, what lies beyond, and the bare floor, with the patterns and the floor's clip that the rest uses. */
-export const PlanGround = memo(function PlanGround({ name, site, view, pen, named }: PartProps & { named: boolean }) {
+export const PlanGround = memo(function PlanGround({
+  name,
+  site,
+  view,
+  pen,
+  named,
+  cuts,
+}: PartProps & { named: boolean; cuts: readonly SectionCut[] }) {
+  const crossed = cutsAcross(cuts, view).map((x) => [x - 14, x + 14] as const)
+  const avoid = named ? [...crossed, ...takenAbove(site, view, pen)] : []
   return (
     <>
       <defs>
@@ -144,7 +171,7 @@ export const PlanGround = memo(function PlanGround({ name, site, view, pen, name
         </clipPath>
       </defs>
       <rect width={view.width} height={view.height} fill={pen.colours.ground} />
-      <Beyond site={site} view={view} pen={pen} named={named} />
+      <Beyond site={site} view={view} pen={pen} named={named} avoid={avoid} />
       <path d={outlinePath(site.floor, view)} fill={pen.colours.floor} />
     </>
   )
@@ -187,7 +214,8 @@ export const PlanHeatFigures = memo(function PlanHeatFigures({
   const things = [...takenBySite(site, view, pen, withFigure), ...takenByHeaters(layout, models, view, pen)]
   const notes = named ? placeNotes(site, view, pen, things).map((note) => notePatch(note, pen)) : []
   const taken = [...things, ...notes]
-  const peaks = placePeaks(picture, quantity, view, pen, taken)
+  const small = [...takenBySmallThings(site, view, pen, withFigure), ...takenByHeaters(layout, models, view, pen)]
+  const peaks = placePeaks(picture, quantity, view, pen, small)
   return (
     <>
       <LineLabels
@@ -255,11 +283,12 @@ export const PlanStructure = memo(function PlanStructure({
 export const PlanNames = memo(function PlanNames(props: FigureProps & { cuts: readonly SectionCut[] }) {
   const { site, layout, models, view, pen, withFigure, cuts } = props
   const taken = [...takenBySite(site, view, pen, withFigure), ...takenByHeaters(layout, models, view, pen)]
-  const crossed = cuts.filter((cut) => cut.along === 'y').map((cut) => view.x0 + view.scale * cut.at)
+  const notes = placeNotes(site, view, pen, taken)
+  const poles = placePoleNames(site, view, pen, [...taken, ...notes.map((note) => notePatch(note, pen))])
   return (
     <>
-      <MemberNames members={site.members} view={view} pen={pen} cuts={crossed} />
-      {placeNotes(site, view, pen, taken).map((note) => (
+      <MemberNames members={site.members} view={view} pen={pen} cuts={cutsAcross(cuts, view)} />
+      {[...notes, ...poles].map((note) => (
         <Words
           key={note.id}
           x={note.x}

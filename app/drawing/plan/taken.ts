@@ -11,11 +11,16 @@ import { textWidth } from '#app/drawing/text/widths.ts'
 
 /** The room that seats, tables, poles and cables take on a plan, px. */
 export function takenBySite(site: Site, view: PlanView, pen: Pen, withFigure: boolean): Patch[] {
-  const disc = 2 * (seatRadius(view, pen, withFigure) + 3 * pen.k)
-  const seats = site.seats.map((seat) => patch(...toScreen(view, [seat.x, seat.y]), disc, disc))
   const tables = site.tables.map((table) =>
     patch(...toScreen(view, table.centre), table.size[0] * view.scale, table.size[1] * view.scale, -table.turnDeg),
   )
+  return [...takenBySmallThings(site, view, pen, withFigure), ...tables]
+}
+
+/** The same without the tables, over which a figure may stand where there is no other room. */
+export function takenBySmallThings(site: Site, view: PlanView, pen: Pen, withFigure: boolean): Patch[] {
+  const disc = 2 * (seatRadius(view, pen, withFigure) + 3 * pen.k)
+  const seats = site.seats.map((seat) => patch(...toScreen(view, [seat.x, seat.y]), disc, disc))
   const poles = site.poles.map((pole) => patch(...toScreen(view, pole.at), 8 * pen.k, 8 * pen.k))
   const cables = site.obstacles
     .filter(({ kind }) => kind === 'cable')
@@ -26,7 +31,7 @@ export function takenBySite(site: Site, view: PlanView, pen: Pen, withFigure: bo
       const [across, deep] = [strip.to[0] - strip.from[0], strip.to[1] - strip.from[1]]
       return [patch(x, y, Math.abs(across) * view.scale + 4, Math.abs(deep) * view.scale + 4)]
     })
-  return [...seats, ...tables, ...poles, ...cables]
+  return [...seats, ...poles, ...cables]
 }
 
 /** The room that heaters and their names take on a plan, px. */

@@ -1,0 +1,139 @@
+import { feelsLike, feelsLikePerField } from '#app/domain/comfort/feels-like.ts'
+import { effectiveAreaShare, meanProjectedAreaFactor, type Posture } from '#app/domain/comfort/projected-area.ts'
+import { addDirected } from '#app/domain/flux/directed-map.ts'
+import type { Emitter } from '#app/domain/flux/emitter.ts'
+import { gridOf, type Grid } from '#app/domain/flux/grid.ts'
+import { irradianceMap, sameData, type FluxMap, type Layer } from '#app/domain/flux/map.ts'
+import type { MapConditions, MapQuestion } from '#app/domain/flux/map-question.ts'
+import type { Obstruction } from '#app/domain/flux/shading.ts'
+import { contoursOf, type HeatPicture } from '#app/drawing/heat/contours.ts'
+
+/** The answer to a question about the map. */
+export interface MapAnswer {
+  readonly grid: Grid
+  /** The quantity at each cell, row by row; NaN outside the floor. */
+  readonly values: Float32Array<ArrayBuffer>
+  /** Greatest value on the floor; null when no cell lies on it. */
+  readonly peak: number | null
+  /** The most that a cell may lack because far heaters are left out on a large site, W/m². */
+  readonly errorBound: number
+  /** Fills and isolines at the question's levels. */
+  readonly picture: HeatPicture
+}
+
+/** What one emitter adds to the radiant field on the floor, before absorption, W/m². */
+interface FieldLayer {
+  readonly emitter: Emitter
+  readonly values: Float64Array
+}
+
+interface FieldMap {
+  readonly grid: Grid
+  readonly posture: Posture
+  readonly obstructions: readonly Obstruction[]
+  readonly layers: readonly FieldLayer[]
+}
+
+/** What is kept between questions; only changed emitters are computed anew. Make one with `emptyMapCache`. */
+export interface MapCache {
+  asked: Pick<MapQuestion, 'floor' | 'z' | 'cell'> | null
+  grid: Grid | null
+  map: FluxMap | null
+  field: FieldMap | null
+}
+
+export const emptyMapCache = (): MapCache => ({ asked: null, grid: null, map: null, field: null })
+
+/** Altitudes for which the mean projected area is tabulated, by their sine. */
+const altitudeSteps = 512
+
+function gridFor(question: MapQuestion, cache: MapCache): Grid {
+  const asked = { floor: question.floor, z: question.z, cell: question.cell }
+  if (cache.grid && sameData(cache.asked, asked)) return cache.grid
+  cache.asked = asked
+  cache.grid = gridOf(question.floor, question.z, question.cell)
+  return cache.grid
+}
+
+/** Mean projected area of a body over all facings, by the sine of the altitude of the radiation. */
+function meanAreaWeights(posture: Posture): Float64Array {
+  return Float64Array.from({ length: altitudeSteps + 1 }, (_, i) =>
+    meanProjectedAreaFactor(posture, Math.asin(i / altitudeSteps)),
+  )
+}
+
+function fieldMap(before: FieldMap | null, grid: Grid, question: MapQuestion, posture: Posture): FieldMap {
+  const obstructions = question.obstructions ?? []
+  const isKept = before?.grid === grid && before.posture === posture && sameData(before.obstructions, obstructions)
+  const known = isKept ? [...before.layers] : []
+  const weights = meanAreaWeights(posture)
+  const layers = question.emitters.map((emitter): FieldLayer => {
+    const same = known.find((layer) => layer.emitter.id === emitter.id && sameData(layer.emitter, emitter))
+    if (same) return same
+    const values = new Float64Array(grid.columns * grid.rows)
+    for (const element of emitter.elements) addDirected(values, grid, emitter, element, weights, obstructions)
+    return { emitter, values }
+  })
+  return { grid, posture, obstructions, layers }
+}
+
+/** Feels-like temperature of a cell: linear in the absorbed field, of which each emitter gives its absorptance. */
+function feelsLikeValues(field: FieldMap, conditions: MapConditions): (at: number) => number {
+  const without = feelsLike(0, conditions)
+  const perField = feelsLikePerField(conditions) * effectiveAreaShare[conditions.posture]
+  const shares = field.layers.map(({ values }, i) => ({ values, absorptance: conditions.absorptance[i] ?? 0 }))
+  return (at) =>
+    without + perField * shares.reduce((sum, { values, absorptance }) => sum + absorptance * (values[at] ?? 0), 0)
+}
+
+/** Value of a layer at a cell of the whole grid; 0 outside the layer's window. */
+function layerValue(grid: Grid, { window, values }: Layer, at: number): number {
+  if (!window) return 0
+  const row = Math.floor(at / grid.columns) - window.firstRow
+  const column = (at % grid.columns) - window.firstColumn
+  if (row < 0 || column < 0 || row >= window.rows || column >= window.columns) return 0
+  return values[row * window.columns + column] ?? 0
+}
+
+/** The question's quantity at a cell, from the maps in the cache. */
+function quantityOf(question: MapQuestion, grid: Grid, cache: MapCache): (at: number) => number {
+  const { quantity, emitters } = question
+  if (quantity.kind === 'feels-like') {
+    const field = fieldMap(cache.field, grid, question, quantity.conditions.posture)
+    cache.field = field
+    return feelsLikeValues(field, quantity.conditions)
+  }
+  const { total, layers } = fluxMapFor(question, grid, cache)
+  if (quantity.kind === 'flux') return (at) => Math.max(0, total[at] ?? 0)
+  if (quantity.kind === 'share') {
+    const own = layers.filter((_, i) => emitters[i]?.id === quantity.emitterId)
+    return (at) => own.reduce((sum, layer) => sum + layerValue(grid, layer, at), 0)
+  }
+  return (at) => layers.reduce((count, layer) => count + (layerValue(grid, layer, at) >= quantity.threshold ? 1 : 0), 0)
+}
+
+function fluxMapFor(question: MapQuestion, grid: Grid, cache: MapCache): FluxMap {
+  cache.map = irradianceMap(cache.map, grid, question.emitters, question.obstructions)
+  return cache.map
+}
+
+/**
+ * Answers a question about the map: values on a grid over the floor, NaN outside it, and their fills and isolines. The
+ * cache is kept by the asker's worker and changed in place. Throws a RangeError for a floor, height, cell size or
+ * emitter without meaning, and on a page's main thread.
+ */
+export function answerMap(question: MapQuestion, cache: MapCache): MapAnswer {
+  if ('document' in globalThis) throw new Error('the map is computed in a worker')
+  const grid = gridFor(question, cache)
+  const valueAt = quantityOf(question, grid, cache)
+  const values = new Float32Array(grid.columns * grid.rows)
+  let peak = -Infinity
+  for (let at = 0; at < values.length; at++) {
+    const value = grid.inside[at] === 1 ? valueAt(at) : NaN
+    values[at] = value
+    if (value > peak) peak = value
+  }
+  const errorBound = question.quantity.kind === 'feels-like' ? 0 : (cache.map?.cutOff.errorBound ?? 0)
+  const picture = contoursOf(values, grid, question.levels, question.edges)
+  return { grid, values, peak: peak === -Infinity ? null : peak, errorBound, picture }
+}
