@@ -34,6 +34,7 @@ export const auth = betterAuth({
   baseURL: env.PUBLIC_ORIGIN,
   secret: env.SESSION_SECRET,
   telemetry: { enabled: false },
+  logger: { level: 'error' },
   database: drizzleAdapter(authDatabase, { provider: 'pg', schema, transaction: true }),
   rateLimit: { enabled: false },
   advanced: {
