@@ -1,16 +1,11 @@
+import type { Conditions } from '#app/domain/comfort/feels-like.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 
-/** What the feels-like map needs besides the emitters. °C, m/s, clo. */
-export interface MapConditions {
-  readonly airTemperature: number
-  readonly windSpeed: number
-  /** Mean radiant temperature of the surroundings. */
-  readonly surroundingsTemperature: number
-  readonly clothing: number
-  readonly posture: 'seated' | 'standing'
-  /** Absorptance of clothing and skin, one per emitter in the question's order. */
+/** What the feels-like map needs besides the emitters. */
+export interface MapConditions extends Conditions {
+  /** Share of the radiation that clothing and skin take up, one per emitter in the question's order. */
   readonly absorptance: readonly number[]
 }
 
@@ -35,6 +30,8 @@ export interface MapQuestion {
   readonly quantity: MapQuantity
   /** Values at which isolines are drawn, in the unit of the quantity. */
   readonly levels: readonly number[]
+  /** Lower edges of the fill's bands; absent: those of the irradiance scale. */
+  readonly edges?: readonly number[]
   /** Absent: nothing stands in the way. */
   readonly obstructions?: readonly Obstruction[]
 }

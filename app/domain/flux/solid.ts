@@ -8,19 +8,23 @@ export interface Face {
   readonly offset: number
 }
 
+/** A straight edge between two corners. */
+export type Edge = readonly [from: Vec3, to: Vec3]
+
 /** A convex solid that can stand in the way of radiation, with the box round it. Lengths m. */
 export type Solid = { readonly low: Vec3; readonly high: Vec3 } & (
-  | { readonly kind: 'convex'; readonly faces: readonly Face[]; readonly corners: readonly Vec3[] }
+  | { readonly kind: 'convex'; readonly faces: readonly Face[]; readonly edges: readonly Edge[] }
   | { readonly kind: 'cylinder'; readonly centre: Vec2; readonly radius: number }
 )
 
-function convex(faces: readonly Face[], corners: readonly Vec3[]): Solid {
+function convex(faces: readonly Face[], edges: readonly Edge[]): Solid {
+  const corners = edges.flat()
   const extreme = (pick: (...values: number[]) => number): Vec3 => [
     pick(...corners.map((corner) => corner[0])),
     pick(...corners.map((corner) => corner[1])),
     pick(...corners.map((corner) => corner[2])),
   ]
-  return { kind: 'convex', faces, corners, low: extreme(Math.min), high: extreme(Math.max) }
+  return { kind: 'convex', faces, edges, low: extreme(Math.min), high: extreme(Math.max) }
 }
 
 /** A box of any attitude: a heater's body, a table top. */
@@ -33,10 +37,12 @@ export function boxSolid({ centre, u, v, w, half }: Body): Solid {
   const faces = axes.flatMap(({ axis, reach }) =>
     [1, -1].map((sign) => ({ normal: scale(axis, sign), offset: sign * dot(axis, centre) + reach })),
   )
-  const corners = [0, 1, 2, 3, 4, 5, 6, 7].map((corner) =>
-    axes.reduce((at, { axis, reach }, bit) => add(at, scale(axis, corner & (1 << bit) ? reach : -reach)), centre),
+  const cornerAt = (corner: number) =>
+    axes.reduce((at, { axis, reach }, bit) => add(at, scale(axis, corner & (1 << bit) ? reach : -reach)), centre)
+  const edges = [0, 1, 2, 3, 4, 5, 6, 7].flatMap((corner) =>
+    [1, 2, 4].filter((bit) => !(corner & bit)).map((bit): Edge => [cornerAt(corner), cornerAt(corner | bit)]),
   )
-  return convex(faces, corners)
+  return convex(faces, edges)
 }
 
 /** A plan rectangle of any turn between two heights. */
@@ -104,11 +110,24 @@ function prismSolid(base: readonly [Vec2, Vec2, Vec2], bottom: number, top: numb
     { normal: [0, 0, 1], offset: top },
     { normal: [0, 0, -1], offset: -bottom },
   ]
-  const corners = base.flatMap(([x, y]): Vec3[] => [
-    [x, y, bottom],
-    [x, y, top],
-  ])
-  return convex([...sides, ...ends], corners)
+  const edges = base.flatMap(([x, y], i): Edge[] => {
+    const [x2, y2] = base[(i + 1) % 3] ?? [x, y]
+    return [
+      [
+        [x, y, bottom],
+        [x, y, top],
+      ],
+      [
+        [x, y, bottom],
+        [x2, y2, bottom],
+      ],
+      [
+        [x, y, top],
+        [x2, y2, top],
+      ],
+    ]
+  })
+  return convex([...sides, ...ends], edges)
 }
 
 /** The convex solids that make up an obstacle's shape; an outline of any form becomes three-sided prisms. */

@@ -1,0 +1,121 @@
+import { windowAround, type Window } from '#app/domain/flux/cells.ts'
+import { cutOffFor, type CutOff } from '#app/domain/flux/cut-off.ts'
+import type { Emitter } from '#app/domain/flux/emitter.ts'
+import type { Grid } from '#app/domain/flux/grid.ts'
+import { addElement } from '#app/domain/flux/kernel.ts'
+import { shadeElement } from '#app/domain/flux/shaded-cells.ts'
+import { maxHeaters } from '#app/domain/layout/layout.ts'
+import type { Obstruction } from '#app/domain/flux/shading.ts'
+
+/** What one emitter gives the cells of a window of the grid, W/m². */
+export interface Layer {
+  readonly emitter: Emitter
+  /** Null: the emitter reaches no cell. */
+  readonly window: Window | null
+  readonly values: Float32Array
+}
+
+/** Irradiance of a horizontal plane over a floor: a layer per emitter and their sum, row by row as the grid. */
+export interface FluxMap {
+  readonly grid: Grid
+  readonly cutOff: CutOff
+  readonly obstructions: readonly Obstruction[]
+  readonly layers: readonly Layer[]
+  readonly total: Float64Array
+  /** How many layers were computed for this map; the others were kept. */
+  readonly computed: number
+}
+
+/** Equality by value of plain data: numbers, strings, null, arrays and objects of them. */
+export function sameData(a: unknown, b: unknown): boolean {
+  if (Object.is(a, b)) return true
+  if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return false
+  const [keysOfA, keysOfB] = [Object.keys(a), Object.keys(b)]
+  return (
+    keysOfA.length === keysOfB.length &&
+    keysOfA.every((key) => sameData(Reflect.get(a, key) ?? null, Reflect.get(b, key) ?? null))
+  )
+}
+
+function layerOf(grid: Grid, emitter: Emitter, radius: number, obstructions: readonly Obstruction[]): Layer {
+  const [x, y] = emitter.elements[0]?.centre ?? [0, 0]
+  const spread = emitter.elements.reduce(
+    (most, { centre }) => Math.max(most, Math.hypot(centre[0] - x, centre[1] - y)),
+    0,
+  )
+  const window = emitter.elements.length === 0 ? null : windowAround(grid, x, y, Math.min(1e6, radius + spread))
+  const values = new Float32Array(window ? window.columns * window.rows : 0)
+  if (!window) return { emitter, window, values }
+  for (const element of emitter.elements) {
+    addElement(values, window, emitter, element, radius)
+    if (obstructions.length > 0) shadeElement(values, window, emitter, element, obstructions, radius)
+  }
+  return { emitter, window, values }
+}
+
+/** Adds a layer to the sum, or takes it out again with sign −1: exact but for the last digit of the sum. */
+function addLayer(total: Float64Array, columns: number, { window, values }: Layer, sign: 1 | -1): void {
+  if (!window) return
+  for (let row = 0, from = 0; row < window.rows; row++) {
+    const start = (window.firstRow + row) * columns + window.firstColumn
+    const end = start + window.columns
+    for (let at = start; at < end; at++, from++) total[at] = (total[at] ?? 0) + sign * (values[from] ?? 0)
+  }
+}
+
+function isSameGrid(a: Grid, b: Grid): boolean {
+  return (
+    a === b || (sameData({ ...a, inside: 0 }, { ...b, inside: 0 }) && a.inside.every((is, i) => is === b.inside[i]))
+  )
+}
+
+/** Refuses what would give a map without meaning or without end. */
+function requireAnswerable(emitters: readonly Emitter[]): void {
+  if (emitters.length > maxHeaters) throw new RangeError(`a map has at most ${maxHeaters} heaters`)
+  const isFinite = ({ frame, elements }: Emitter) =>
+    [frame.u, frame.v, frame.w].flat().every(Number.isFinite) &&
+    elements.every((e) => [...e.centre, e.length, e.radiantPower].every(Number.isFinite))
+  const broken = emitters.find((emitter) => !isFinite(emitter))
+  if (broken) throw new RangeError(`figures of heater ${broken.id} are not finite`)
+}
+
+/**
+ * The map of the emitters on a grid. From the map before, the layers of emitters that are the same by value, and the
+ * sum as far as it holds, are kept: moving one heater costs one layer. The map before must not be used afterwards.
+ * It is computed in a worker; on a page's main thread it throws. A RangeError for more than 200 emitters or figures that
+ * are not finite.
+ */
+export function irradianceMap(
+  before: FluxMap | null,
+  grid: Grid,
+  emitters: readonly Emitter[],
+  obstructions: readonly Obstruction[] = [],
+): FluxMap {
+  requireAnswerable(emitters)
+  if ('document' in globalThis) throw new Error('the map is computed in a worker')
+  const cutOff = cutOffFor(emitters, grid)
+  const kept =
+    before &&
+    isSameGrid(before.grid, grid) &&
+    before.cutOff.radius === cutOff.radius &&
+    sameData(before.obstructions, obstructions)
+      ? before
+      : null
+  const unused = new Set(kept?.layers)
+  const fresh: Layer[] = []
+  const layers = emitters.map((emitter) => {
+    const known = [...unused].find((layer) => layer.emitter.id === emitter.id && sameData(layer.emitter, emitter))
+    if (known) {
+      unused.delete(known)
+      return known
+    }
+    const layer = layerOf(grid, emitter, cutOff.radius, obstructions)
+    fresh.push(layer)
+    return layer
+  })
+  const patched = kept !== null && unused.size + fresh.length < layers.length
+  const total = patched ? kept.total : new Float64Array(grid.columns * grid.rows)
+  if (patched) for (const layer of unused) addLayer(total, grid.columns, layer, -1)
+  for (const layer of patched ? fresh : layers) addLayer(total, grid.columns, layer, 1)
+  return { grid: kept?.grid ?? grid, cutOff, obstructions, layers, total, computed: fresh.length }
+}

@@ -1,0 +1,143 @@
+import type { Cells } from '#app/domain/flux/cells.ts'
+import type { Edge, Solid } from '#app/domain/flux/solid.ts'
+import type { Vec3 } from '#app/domain/vector.ts'
+
+/** The outline that a solid throws from a point source onto a horizontal plane, as the extent of each row of cells. */
+export interface Silhouette {
+  /** For each row the least and the greatest x of the shadow, m; least > greatest where there is none. */
+  readonly least: Float64Array
+  readonly greatest: Float64Array
+}
+
+/** The part of a solid between the plane and the source: straight edges, or an upright cylinder's height. */
+export type Caster =
+  | { readonly kind: 'edges'; readonly edges: readonly Edge[] }
+  | {
+      readonly kind: 'cylinder'
+      readonly x: number
+      readonly y: number
+      readonly radius: number
+      readonly bottom: number
+      readonly top: number
+    }
+
+/** Kept free below the source, as a share of its height over the plane: a shadow from there would run to infinity. */
+const headroom = 0.01
+
+/** An edge cut to the heights bottom … top, and the places where it was cut. */
+function cutEdge(
+  [from, to]: Edge,
+  bottom: number,
+  top: number,
+): { edge: Edge; cuts: { at: Vec3; top: boolean }[] } | null {
+  const rise = to[2] - from[2]
+  const placeAt = (z: number) => (rise === 0 ? 0 : (z - from[2]) / rise)
+  const at = (t: number): Vec3 => [from[0] + t * (to[0] - from[0]), from[1] + t * (to[1] - from[1]), from[2] + t * rise]
+  if (rise === 0) return from[2] < bottom || from[2] > top ? null : { edge: [from, to], cuts: [] }
+  const ends = [placeAt(bottom), placeAt(top)].sort((a, b) => a - b)
+  const start = Math.max(0, ends[0] ?? 0)
+  const end = Math.min(1, ends[1] ?? 1)
+  if (start > end) return null
+  const edge: Edge = [at(start), at(end)]
+  const cuts = edge
+    .map((place, i) => ({ at: place, cut: i === 0 ? start > 0 : end < 1, top: (i === 0) === rise < 0 }))
+    .filter(({ cut }) => cut)
+  return { edge, cuts }
+}
+
+const pairs = (points: readonly Vec3[]): Edge[] =>
+  points.flatMap((a, i) => points.slice(i + 1).map((b): Edge => [a, b]))
+
+/** What of a solid can throw a shadow from a source at `height` onto the plane at z; null when nothing can. */
+export function casterOf(solid: Solid, z: number, height: number): Caster | null {
+  const bottom = Math.max(solid.low[2], z)
+  const top = Math.min(solid.high[2], height - headroom * (height - z))
+  if (top <= bottom) return null
+  if (solid.kind === 'cylinder') {
+    return { kind: 'cylinder', x: solid.centre[0], y: solid.centre[1], radius: solid.radius, bottom, top }
+  }
+  const cut = solid.edges.map((edge) => cutEdge(edge, bottom, top)).filter((each) => each !== null)
+  const cuts = cut.flatMap((each) => each.cuts)
+  const caps = [true, false].flatMap((isTop) => pairs(cuts.filter((c) => c.top === isTop).map((c) => c.at)))
+  return { kind: 'edges', edges: [...cut.map((each) => each.edge), ...caps] }
+}
+
+/** Height of the highest part of a caster. */
+export function topOf(caster: Caster): number {
+  if (caster.kind === 'cylinder') return caster.top
+  return caster.edges.reduce((top, [a, b]) => Math.max(top, a[2], b[2]), -Infinity)
+}
+
+/** Cells' geometry and the extents under way. */
+interface Rows {
+  readonly y0: number
+  readonly cell: number
+  readonly count: number
+  readonly least: Float64Array
+  readonly greatest: Float64Array
+}
+
+function extend(rows: Rows, row: number, x: number): void {
+  if (x < (rows.least[row] ?? 0)) rows.least[row] = x
+  if (x > (rows.greatest[row] ?? 0)) rows.greatest[row] = x
+}
+
+function extendBySegment(rows: Rows, x1: number, y1: number, x2: number, y2: number): void {
+  const low = Math.max(0, Math.ceil((Math.min(y1, y2) - rows.y0) / rows.cell - 0.5))
+  const high = Math.min(rows.count - 1, Math.floor((Math.max(y1, y2) - rows.y0) / rows.cell - 0.5))
+  const slope = y2 === y1 ? 0 : (x2 - x1) / (y2 - y1)
+  for (let row = low; row <= high; row++) extend(rows, row, x1 + (rows.y0 + (row + 0.5) * rows.cell - y1) * slope)
+}
+
+function extendByDisc(rows: Rows, x: number, y: number, radius: number): void {
+  const low = Math.max(0, Math.ceil((y - radius - rows.y0) / rows.cell - 0.5))
+  const high = Math.min(rows.count - 1, Math.floor((y + radius - rows.y0) / rows.cell - 0.5))
+  for (let row = low; row <= high; row++) {
+    const off = rows.y0 + (row + 0.5) * rows.cell - y
+    const half = Math.sqrt(Math.max(0, radius * radius - off * off))
+    extend(rows, row, x - half)
+    extend(rows, row, x + half)
+  }
+}
+
+/** The hull of two discs: both and the two lines that touch them from outside. */
+function extendByDiscs(rows: Rows, a: readonly [number, number, number], b: readonly [number, number, number]): void {
+  extendByDisc(rows, ...a)
+  extendByDisc(rows, ...b)
+  const [dx, dy] = [b[0] - a[0], b[1] - a[1]]
+  const distance = Math.sqrt(dx * dx + dy * dy)
+  const sine = (a[2] - b[2]) / distance
+  if (!(Math.abs(sine) < 1)) return
+  const cosine = Math.sqrt(1 - sine * sine)
+  for (const side of [-1, 1]) {
+    const nx = (sine * dx - side * cosine * dy) / distance
+    const ny = (sine * dy + side * cosine * dx) / distance
+    extendBySegment(rows, a[0] + a[2] * nx, a[1] + a[2] * ny, b[0] + b[2] * nx, b[1] + b[2] * ny)
+  }
+}
+
+/** Writes the silhouette of a caster from a source into the extents of the rows of cells. */
+export function drawSilhouette(into: Silhouette, cells: Cells, caster: Caster, source: Vec3): void {
+  const { least, greatest } = into
+  least.fill(Infinity, 0, cells.rows)
+  greatest.fill(-Infinity, 0, cells.rows)
+  const rows: Rows = { y0: cells.y0, cell: cells.cell, count: cells.rows, least, greatest }
+  const gap = source[2] - cells.z
+  if (caster.kind === 'cylinder') {
+    const [low, high] = [gap / (source[2] - caster.bottom), gap / (source[2] - caster.top)]
+    const disc = (k: number) =>
+      [source[0] + (caster.x - source[0]) * k, source[1] + (caster.y - source[1]) * k, caster.radius * k] as const
+    extendByDiscs(rows, disc(low), disc(high))
+    return
+  }
+  for (const [a, b] of caster.edges) {
+    const [ka, kb] = [gap / (source[2] - a[2]), gap / (source[2] - b[2])]
+    extendBySegment(
+      rows,
+      source[0] + (a[0] - source[0]) * ka,
+      source[1] + (a[1] - source[1]) * ka,
+      source[0] + (b[0] - source[0]) * kb,
+      source[1] + (b[1] - source[1]) * kb,
+    )
+  }
+}
