@@ -57,6 +57,15 @@ export default function JobsPage({ loaderData }: Route.ComponentProps) {
         <h1 className="text-xl font-strong">Jobs</h1>
         <StageLinks {...loaderData} />
       </header>
+      <p
+        aria-hidden="true"
+        className="hidden gap-x-6 pb-1.5 text-2xs text-ink-3 desk:grid desk:grid-cols-[14rem_minmax(0,1fr)_18rem_7rem]"
+      >
+        <span>Job</span>
+        <span>Variants</span>
+        <span>Stage</span>
+        <span>Changed</span>
+      </p>
       <ol className="border-t border-rule" aria-label="Jobs, the one changed last first">
         {jobs.map((job) => (
           <JobRow key={job.id} job={job} />
@@ -120,31 +129,31 @@ function StageLinks({ search, stage, counts, found }: Loaded) {
   return (
     <nav aria-label="Stage" className="-mx-4 flex max-w-full gap-x-5 overflow-x-auto px-4">
       {entry(null, 'All', found)}
-      {counts.map(({ stage: each, count }) => entry(each, named(each), count))}
+      {counts.map(({ stage: each, count }) => entry(each, capital(each), count))}
     </nav>
   )
 }
 
-const named = (stage: Stage) => stage.charAt(0).toUpperCase() + stage.slice(1)
+const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1)
 
 type Job = Loaded['jobs'][number]
 
 function JobRow({ job }: { job: Job }) {
   const seats = job.seats ? `${job.seats} ${job.seats === 1 ? 'seat' : 'seats'}` : 'no seats yet'
   return (
-    <li className="grid gap-x-6 gap-y-3 border-b border-rule py-3.5 desk:grid-cols-[13rem_minmax(0,1fr)_15rem_7rem]">
+    <li className="grid gap-x-6 gap-y-3 border-b border-rule py-3.5 desk:grid-cols-[14rem_minmax(0,1fr)_18rem_7rem]">
       <div className="min-w-0 self-center">
         <h2 className="text-base font-strong">
           <Link to={`/jobs/${job.id}`} className="hover:underline pointer-coarse:inline-block pointer-coarse:py-2">
             {job.name}
           </Link>
         </h2>
-        <p className="text-ink-2">{[job.kind, seats].filter(Boolean).join(', ')}</p>
+        <p className="text-ink-2">{capital([job.kind, seats].filter(Boolean).join(', '))}</p>
         {job.customer && <p className="text-xs text-ink-3">{job.customer}</p>}
       </div>
       <Variants job={job} />
       <div className="self-center">
-        <StageBar filled={stages.indexOf(job.stage) + 1} label={named(job.stage)} />
+        <StageBar filled={stages.indexOf(job.stage) + 1} label={capital(job.stage)} />
         <p className="mt-1 text-ink-2">{openPoint(job)}</p>
       </div>
       <p className="self-center text-ink-2">

@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto'
+import { useState, type ReactNode } from 'react'
 import { data, Form, redirect, useNavigation } from 'react-router'
 import { z } from 'zod'
 import type { BriefField } from '#app/domain/brief/brief-field.ts'
@@ -60,7 +61,7 @@ export default function NewEnquiryPage({ loaderData, actionData }: Route.Compone
   const errors: Record<string, string> = actionData?.errors ?? {}
   const values: Record<string, string> = actionData?.values ?? {}
   const unknown = new Set(actionData?.unknown ?? [])
-  const units: DisplayUnits = values['units'] === 'imperial' ? 'imperial' : 'metric'
+  const [units, setUnits] = useState<DisplayUnits>(values['units'] === 'imperial' ? 'imperial' : 'metric')
   const problems = Object.entries(errors).map(([id, error]) => ({ id, error, label: labels[id] ?? id }))
   const text = (name: string) => ({
     id: name,
@@ -97,7 +98,8 @@ export default function NewEnquiryPage({ loaderData, actionData }: Route.Compone
             id="units"
             name="units"
             label="Lengths and temperatures in"
-            defaultValue={units}
+            value={units}
+            onChange={(event) => setUnits(event.target.value === 'imperial' ? 'imperial' : 'metric')}
             options={[
               { value: 'metric', label: 'Metres and °C' },
               { value: 'imperial', label: 'Feet and °F' },
@@ -136,7 +138,7 @@ export default function NewEnquiryPage({ loaderData, actionData }: Route.Compone
   )
 }
 
-function Group({ title, note, children }: { title: string; note?: string; children: React.ReactNode }) {
+function Group({ title, note, children }: { title: string; note?: string; children: ReactNode }) {
   return (
     <section className="border-t border-rule pt-3 pb-5">
       <h2 className="text-sm font-strong">{title}</h2>
@@ -159,14 +161,25 @@ const template = { ...assumedBrief, place: '' }
 function Question({ field, units, typed, unknown, error }: QuestionProps) {
   const usual = field.show(template, units)
   const shared = { id: field.name, name: field.name, label: field.label, hint: field.hint, error }
-  const value = typed ?? (prefilled.has(field.name) ? usual : '')
+  const [text, setText] = useState(typed ?? null)
+  const value = text ?? (prefilled.has(field.name) ? usual : '')
   const assumed = usual === '' ? 'left open' : `${usual} ${field.unit(units)}`.trim()
   return (
     <div>
       {field.options ? (
-        <SelectField {...shared} options={field.options} defaultValue={value} />
+        <SelectField
+          {...shared}
+          options={field.options}
+          value={value}
+          onChange={(event) => setText(event.target.value)}
+        />
       ) : (
-        <TextField {...shared} unit={field.unit(units)} defaultValue={value} inputMode="text" />
+        <TextField
+          {...shared}
+          unit={field.unit(units)}
+          value={value}
+          onChange={(event) => setText(event.target.value)}
+        />
       )}
       <CheckField
         className="mt-1 text-xs text-ink-2"
