@@ -1,0 +1,31 @@
+import { z } from 'zod'
+import { explainSeat } from '#app/domain/comfort/explain.ts'
+import { windNames } from '#app/domain/comfort/seat-warmth.ts'
+import { isRefusal, respond } from '#app/server/answers.server.ts'
+import { findLaidOut } from '#app/server/data/laid-out.server.ts'
+import { requireVariant } from '#app/server/data/variants.server.ts'
+import { checked } from '#app/server/json-body.server.ts'
+import { missing } from '#app/server/missing.server.ts'
+import type { Route } from './+types/seat-explanation'
+
+const figureSchema = z.discriminatedUnion('quantity', [
+  z.strictObject({ quantity: z.literal('body') }),
+  z.strictObject({ quantity: z.literal('head') }),
+  z.strictObject({ quantity: z.literal('feels-like'), wind: z.enum(windNames) }),
+])
+
+/**
+ * GET /api/variants/:variantId/seats/:seatId/explain?quantity=body, head or feels-like&wind=calm, design or gust: one
+ * figure of a seat with its inputs, formula, source, tolerance and the share of every element.
+ */
+export async function loader({ request, params }: Route.LoaderArgs) {
+  const open = await requireVariant(request, params.variantId, 'view')
+  const { quantity = 'body', ...rest } = Object.fromEntries(new URL(request.url).searchParams)
+  const figure = checked(figureSchema, { quantity, ...rest })
+  if (isRefusal(figure)) return respond(figure)
+  const laid = await findLaidOut(open)
+  if (!laid) throw missing(request, 'variant')
+  const explanation = explainSeat({ ...laid, layout: laid.variant }, params.seatId, figure.value)
+  if (!explanation) throw missing(request, 'seat')
+  return Response.json(explanation)
+}
