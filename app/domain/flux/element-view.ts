@@ -24,7 +24,10 @@ export interface ElementView {
   readonly strength: number
 }
 
-/** Null when the element does not radiate towards the point (behind its beam) or the point lies on its axis. */
+/**
+ * Null when the element does not radiate towards the point (behind its beam) or the point lies on its axis. A RangeError
+ * for places that are not finite.
+ */
 export function elementView(emitter: Emitter, element: Element, point: Vec3): ElementView | null {
   const { u, v, w } = emitter.frame
   const x = point[0] - element.centre[0]
@@ -32,13 +35,17 @@ export function elementView(emitter: Emitter, element: Element, point: Vec3): El
   const z = point[2] - element.centre[2]
   const alongBeam = x * w[0] + y * w[1] + z * w[2]
   const acrossBeam = x * v[0] + y * v[1] + z * v[2]
+  const alongElement = x * u[0] + y * u[1] + z * u[2]
   const h = Math.sqrt(alongBeam * alongBeam + acrossBeam * acrossBeam)
+  if (!Number.isFinite(h + alongElement)) {
+    throw new RangeError(`figures of heater ${emitter.id} or of the point are not finite`)
+  }
   if (!(alongBeam > 0) || h < onElement) return null
   const length = Math.max(element.length, shortest)
   return {
     emitter,
     h,
-    alongElement: x * u[0] + y * u[1] + z * u[2],
+    alongElement,
     acrossBeam,
     alongBeam,
     halfLength: length / 2,
