@@ -19,7 +19,7 @@ const nodes = [
   [0.8611363115940526, 0.34785484513745385],
 ] as const
 
-/** Nearer than this a node lies in the body, m. */
+/** Nearer than this a node lies in the body, and a point on the element's axis, m. */
 const nearest = 1e-6
 
 /**
@@ -63,8 +63,10 @@ function projectedFlux(emitter: Emitter, element: Element, receiver: Receiver, f
 /** Relative intensity that a piece of an element sends back along `towards`, the vector from the point to the piece. */
 function intensityTowards(emitter: Emitter, towards: Vec3, distance: number): number {
   const { u, v, w } = emitter.frame
+  const [across, down] = [-dot(towards, v), -dot(towards, w)]
+  if (Math.abs(across) < nearest && Math.abs(down) < nearest) return 0
   const beta = Math.asin(Math.max(-1, Math.min(1, -dot(towards, u) / distance)))
-  return relativeIntensity(emitter.beam, Math.atan2(-dot(towards, v), -dot(towards, w)), beta)
+  return relativeIntensity(emitter.beam, Math.atan2(across, down), beta)
 }
 
 function projectedAreaTowards({ posture, facing }: Receiver, [x, y, z]: Vec3): number {
