@@ -6,6 +6,7 @@ export default [
   route('jobs', 'routes/jobs/list.tsx'),
   route('jobs/new', 'routes/jobs/new.tsx'),
   route('jobs/:jobId/brief', 'routes/job/brief.tsx'),
+  route('jobs/:jobId/site', 'routes/job/site.tsx'),
   route('sign-in', 'routes/account/sign-in.tsx'),
   route('sign-out', 'routes/account/sign-out.ts'),
   route('reset-password', 'routes/account/reset-password.tsx'),
@@ -24,6 +25,7 @@ export default [
   route('api/variants/:variantId/seats.csv', 'routes/api/seats-csv.ts'),
   route('api/variants/:variantId/seats/:seatId/explain', 'routes/api/seat-explanation.ts'),
   route('api/heaters', 'routes/api/heaters.ts'),
+  route('api/flux', 'routes/api/flux.ts'),
   route('api/*', 'routes/api/not-found.ts'),
   route('*', 'routes/not-found.tsx'),
 ] satisfies RouteConfig

@@ -1,9 +1,11 @@
 import { z } from 'zod'
 import { emitterOf, groupEmitter, type Emitter } from '#app/domain/flux/emitter.ts'
+import { touchesElement } from '#app/domain/flux/irradiance.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { electricalPower } from '#app/domain/heaters/power.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
-import type { Vec3 } from '#app/domain/vector.ts'
+import { lengthOf, subtract, type Vec3 } from '#app/domain/vector.ts'
+import type { FluxPoint } from '#app/drawing/heat/flux-task.ts'
 import { isRefusal, type Refusal } from '#app/server/answers.server.ts'
 import { checked } from '#app/server/json-body.server.ts'
 
@@ -64,12 +66,6 @@ const questionSchema = z.strictObject({
   heaters: z.array(heaterSchema),
   points: z.array(z.strictObject({ x: coordinate, y: coordinate, z: coordinate, normal: normalSchema })),
 })
-
-/** A place and the direction a one-sided plane there looks. */
-export interface FluxPoint {
-  readonly point: Vec3
-  readonly normal: Vec3
-}
 
 /** A checked question: what radiates, where it is asked, and what is worth knowing about the answer. */
 export interface FluxRequest {
@@ -150,6 +146,26 @@ function sourceOf(asked: Group | Modelled, index: number, models: ReadonlyMap<st
   return { emitter: groupEmitter({ ...group, id: path, at: [at.x, at.y, at.z] }), warning: null }
 }
 
+/** Radius of a sphere about the emitter's first element that holds all of them with a margin, m. */
+function reachOf({ elements }: Emitter): number {
+  const first = elements[0]
+  if (!first) return 0
+  return 0.01 + Math.max(...elements.map(({ centre, length }) => lengthOf(subtract(centre, first.centre)) + length / 2))
+}
+
+/** The first point that lies on an element, where irradiance has no meaning. */
+function findTouching(emitters: readonly Emitter[], points: readonly FluxPoint[]): Refusal | null {
+  for (const emitter of emitters) {
+    const [x = 0, y = 0, z = 0] = emitter.elements[0]?.centre ?? []
+    const reach = reachOf(emitter)
+    const index = points.findIndex(
+      ({ at }) => Math.hypot(at[0] - x, at[1] - y, at[2] - z) < reach && touchesElement(emitter, at),
+    )
+    if (index >= 0) return unusable(`points.${index}`, `The point lies on an element of ${emitter.id}.`)
+  }
+  return null
+}
+
 /** The question in a JSON body, checked against the catalogue; refused with 400, 413 or 422 and the path. */
 export function readFluxRequest(json: unknown, models: ReadonlyMap<string, HeaterModel>): FluxRequest | Refusal {
   const excess = findExcess(json)
@@ -160,9 +176,8 @@ export function readFluxRequest(json: unknown, models: ReadonlyMap<string, Heate
   const refused = sources.find((source) => isRefusal(source))
   if (refused) return refused
   const usable = sources.filter((source): source is Source => !isRefusal(source))
-  return {
-    emitters: usable.map(({ emitter }) => emitter),
-    points: question.value.points.map(({ x, y, z: height, normal }) => ({ point: [x, y, height], normal })),
-    warnings: usable.flatMap(({ warning }) => warning ?? []),
-  }
+  const emitters = usable.map(({ emitter }) => emitter)
+  const points = question.value.points.map(({ x, y, z: height, normal }): FluxPoint => ({ at: [x, y, height], normal }))
+  const warnings = usable.flatMap(({ warning }) => warning ?? [])
+  return findTouching(emitters, points) ?? { emitters, points, warnings }
 }

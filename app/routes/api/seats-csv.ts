@@ -1,7 +1,8 @@
-import { seatWarmth } from '#app/domain/comfort/seat-warmth.ts'
+import { refuseComputation } from '#app/server/computation-refusal.server.ts'
 import { findLaidOut } from '#app/server/data/laid-out.server.ts'
 import { requireVariant } from '#app/server/data/variants.server.ts'
 import { attachment } from '#app/server/file-name.server.ts'
+import { seatWarmthOffThread } from '#app/server/flux.server.ts'
 import { missing } from '#app/server/missing.server.ts'
 import { seatsCsv } from '#app/server/seats-csv.server.ts'
 import type { Route } from './+types/seats-csv'
@@ -11,12 +12,16 @@ export async function loader({ request, params }: Route.LoaderArgs) {
   const open = await requireVariant(request, params.variantId, 'export')
   const laid = await findLaidOut(open)
   if (!laid) throw missing(request, 'variant')
-  const { site, variant } = laid
-  const warmth = seatWarmth({ ...laid, layout: variant })
-  return new Response(seatsCsv(warmth), {
-    headers: {
-      'Content-Type': 'text/csv; charset=utf-8',
-      'Content-Disposition': attachment([site.name, `${variant.number}.${variant.revision}`, 'seats'], 'csv'),
-    },
-  })
+  const { site, brief, models, variant } = laid
+  try {
+    const warmth = await seatWarmthOffThread({ site, brief, models, layout: variant })
+    return new Response(seatsCsv(warmth), {
+      headers: {
+        'Content-Type': 'text/csv; charset=utf-8',
+        'Content-Disposition': attachment([site.name, `${variant.number}.${variant.revision}`, 'seats'], 'csv'),
+      },
+    })
+  } catch (problem) {
+    return refuseComputation(problem)
+  }
 }

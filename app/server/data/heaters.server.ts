@@ -18,3 +18,8 @@ export function listModels(member: Member): Promise<HeaterModel[]> {
 export async function modelsByCode(tx: Transaction): Promise<ReadonlyMap<string, HeaterModel>> {
   return new Map((await readModels(tx)).map((model) => [model.code, model]))
 }
+
+/** The organisation's catalogue, a model by its code. */
+export function findModels(member: Member): Promise<ReadonlyMap<string, HeaterModel>> {
+  return asOrganisation(member.organisationId, modelsByCode)
+}
