@@ -22,6 +22,7 @@ export default [
   route('api/variants/:variantId', 'routes/api/variant.ts'),
   route('api/variants/:variantId/restore', 'routes/api/variant-restore.ts'),
   route('api/variants/:variantId/revisions', 'routes/api/variant-revisions.ts'),
+  route('api/variants/:variantId/thumbnail.svg', 'routes/api/thumbnail.ts'),
   route('api/variants/:variantId/seats.csv', 'routes/api/seats-csv.ts'),
   route('api/variants/:variantId/seats/:seatId/explain', 'routes/api/seat-explanation.ts'),
   route('api/heaters', 'routes/api/heaters.ts'),

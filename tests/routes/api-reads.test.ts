@@ -76,6 +76,7 @@ describe('what is another organisation’s', () => {
       `/api/variants/${variant}`,
       `/api/variants/${variant}/revisions`,
       `/api/variants/${variant}/seats.csv`,
+      `/api/variants/${variant}/thumbnail.svg`,
       `/api/variants/${variant}/seats/R1-1/explain`,
     ]
     const foreign = addresses(jobIds['A']!, variantId)
@@ -161,6 +162,38 @@ describe('seats.csv', () => {
       expect(text).toContain(`\n${start}`)
     }
     expect(text).toContain(',-1.0000,1.0000,')
+  })
+})
+
+describe('thumbnail.svg', () => {
+  it('is a plan of its own with heat, every seat and every heater, and runs nothing', async () => {
+    const response = await designer('GET', `/api/variants/${(await variantIds('A')).get(3)}/thumbnail.svg`)
+    expect(response.headers.get('Content-Type')).toBe('image/svg+xml')
+    expect(response.headers.get('Content-Security-Policy')).toMatch(/^default-src 'none'.*sandbox$/)
+    const svg = await response.text()
+    expect(svg).toMatch(/^<svg xmlns="http:\/\/www.w3.org\/2000\/svg"/)
+    expect(svg).not.toMatch(/<script|href=|on[a-z]+=/)
+    expect(svg.match(/<circle[^>]*r="1.3"/g)).toHaveLength(40)
+    expect(svg.match(/<rect[^>]*rotate\(/g)).toHaveLength(12)
+    expect(svg.match(/<path/g)!.length).toBeGreaterThan(10)
+  })
+
+  it('is drawn anew when the variant changes, and without heaters has no heat', async () => {
+    const made = await designer('POST', `/api/jobs/${jobIds['A']}/variants`, {
+      body: { copyOf: (await variantIds('A')).get(2) },
+      headers: { 'Idempotency-Key': crypto.randomUUID() },
+    })
+    const { id } = z.looseObject({ id: z.string() }).parse(await made.json())
+    const read = async () => (await designer('GET', `/api/variants/${id}/thumbnail.svg`)).text()
+    const before = await read()
+    expect(await read()).toBe(before)
+    await designer('PUT', `/api/variants/${id}`, {
+      body: { title: 'Empty', heaters: [] },
+      headers: { 'If-Match': '"1"', 'Idempotency-Key': crypto.randomUUID() },
+    })
+    const after = await read()
+    expect(after.match(/<rect[^>]*rotate\(/g)).toBeNull()
+    expect(after.length).toBeLessThan(before.length / 2)
   })
 })
 
