@@ -64,6 +64,22 @@ interface Source {
   readonly halfLength: number
   readonly body: Body
   readonly angles: HalfAngles
+  /** Rays round the edge of its beam, at equal steps of the turn. */
+  readonly round: readonly Ray[]
+}
+
+const sourcesOfBody = new WeakMap<Body, readonly Source[]>()
+
+/** The elements of a body; kept for as long as the body is. */
+function sourcesOf(body: Body, model: HeaterModel, angles: HalfAngles): readonly Source[] {
+  const known = sourcesOfBody.get(body)
+  if (known) return known
+  const sources = elementCentres(body, model).map((centre): Source => {
+    const bare = { centre, halfLength: model.elementLength / 2, body, angles }
+    return { ...bare, round: Array.from({ length: rays }, (_, i) => edgeRay(bare, i / rays)) }
+  })
+  sourcesOfBody.set(body, sources)
+  return sources
 }
 
 /**
@@ -78,7 +94,7 @@ function isInBeam({ centre, halfLength, body, angles }: Source, point: Vec3): bo
   if (across < angles.across[0] - nearly || across > angles.across[1] + nearly) return false
   const along = dot(d, body.u)
   const beyond = along - Math.max(-halfLength, Math.min(halfLength, along))
-  const angle = Math.atan2(beyond, Math.hypot(down, dot(d, body.v)))
+  const angle = Math.atan2(beyond, Math.sqrt(down * down + dot(d, body.v) ** 2))
   return angle >= angles.along[0] - nearly && angle <= angles.along[1] + nearly
 }
 
@@ -100,10 +116,11 @@ export interface InBeam {
 export function nearestInBeam(body: Body, model: HeaterModel, obstacle: Convex): InBeam | null {
   if (!model.beam) return null
   const angles = halfAnglesOf(model.beam)
+  const sources = sourcesOf(body, model, angles).filter((source) => !isBeside(source, obstacle))
+  if (sources.length === 0) return null
   const gap = gapToBody(body, obstacle)
   let best: InBeam | null = null
-  for (const centre of elementCentres(body, model)) {
-    const source = { centre, halfLength: model.elementLength / 2, body, angles }
+  for (const source of sources) {
     if (isInBeam(source, gap.to)) return { distance: gap.distance, from: gap.from, to: gap.to }
     const point = nearestOnEdge(source, obstacle)
     if (!point) continue
@@ -113,35 +130,66 @@ export function nearestInBeam(body: Body, model: HeaterModel, obstacle: Convex):
   return best
 }
 
-/** Rays in one round of the edge of the beam: a first round, and a finer one when thin things slip through the first. */
-const rounds = [96, 960] as const
+/** Rays in one round of the edge of the beam. */
+const rays = 64
 
-/** Halvings of the step when the best ray is refined. */
-const refinements = 9
+/** Halvings of the step when a ray is refined. */
+const refinements = 8
 
-/** The first point of the obstacle, nearest to the body, on the rays that make the edge of the beam. */
+/** A ray on the edge of the beam: by how much it misses the obstacle, or how far from the body it first meets it. */
+interface Attempt {
+  readonly turn: number
+  readonly miss: number
+  readonly distance: number
+  readonly point: Vec3
+}
+
+/**
+ * The first point of the obstacle, nearest to the body, on the rays that make the edge of the beam. When no ray of a
+ * round hits, those that miss most narrowly are turned towards it: thin things are found so.
+ */
 function nearestOnEdge(source: Source, obstacle: Convex): Vec3 | null {
-  if (isBeside(source, obstacle)) return null
-  let best = { turn: 0, distance: Infinity, point: source.centre }
-  const attempt = (turn: number) => {
-    const { from, direction } = edgeRay(source, turn)
-    const along = obstacle.firstOnRay(from, direction)
-    if (along === null) return
-    const point = add(from, scale(direction, along))
-    const distance = distanceFromBody(source.body, point)
-    if (distance < best.distance) best = { turn, distance, point }
+  const attempt = (turn: number, { from, direction }: Ray = edgeRay(source, turn)): Attempt => {
+    const { enter, leave } = obstacle.alongRay(from, direction)
+    if (enter > leave + thin) return { turn, miss: enter - leave, distance: Infinity, point: from }
+    const point = add(from, scale(direction, enter))
+    return { turn, miss: 0, distance: distanceFromBody(source.body, point), point }
   }
-  for (const rays of rounds) {
-    for (let i = 0; i < rays; i++) attempt(i / rays)
-    if (best.distance === Infinity) continue
-    for (let step = 0.5 / rays, i = 0; i < refinements; i++, step /= 2) {
-      const { turn } = best
-      attempt(turn - step)
-      attempt(turn + step)
-    }
-    return best.point
+  const round = source.round.map((ray, i) => attempt(i / rays, ray))
+  const best = round.reduce((a, b) => (b.distance < a.distance ? b : a))
+  const hit = best.miss === 0 ? best : firstHit(round, attempt)
+  return hit && refined(hit, attempt, (a, b) => a.distance < b.distance).point
+}
+
+/** Solids thinner than this along a ray are still met, in multiples of its direction. */
+const thin = 1e-12
+
+/** Turns the rays that miss more narrowly than their neighbours, until one hits. */
+function firstHit(round: readonly Attempt[], attempt: (turn: number) => Attempt): Attempt | null {
+  const narrow = round.filter(({ miss }, i) => {
+    const before = round[(i + rays - 1) % rays]
+    const after = round[(i + 1) % rays]
+    return before && after && miss <= before.miss && miss <= after.miss
+  })
+  for (const candidate of narrow) {
+    const turned = refined(candidate, attempt, (a, b) => a.miss < b.miss)
+    if (turned.miss === 0) return turned
   }
   return null
+}
+
+/** Turns a ray by ever smaller steps to whichever side is better. */
+function refined(
+  start: Attempt,
+  attempt: (turn: number) => Attempt,
+  better: (a: Attempt, b: Attempt) => boolean,
+): Attempt {
+  let best = start
+  for (let step = 0.5 / rays, i = 0; i < refinements; i++, step /= 2) {
+    const sides = [attempt(best.turn - step), attempt(best.turn + step)]
+    for (const side of sides) if (better(side, best)) best = side
+  }
+  return best
 }
 
 /** The whole obstacle lies behind the element or beyond one of the planes that hold its beam. */
@@ -162,7 +210,7 @@ interface Ray {
 }
 
 /** Ray on the edge of the beam; `turn` from 0 to 1 goes round: one side, one end, the other side, the other end. */
-function edgeRay({ centre, halfLength, body, angles }: Source, turn: number): Ray {
+function edgeRay({ centre, halfLength, body, angles }: Omit<Source, 'round'>, turn: number): Ray {
   const round = (((turn % 1) + 1) % 1) * 4
   const quarter = Math.floor(round)
   const t = round - quarter

@@ -80,14 +80,24 @@ export interface Lie {
 export function lieAbout(body: Body, obstacle: Extent, clearance: Growth): Lie | null {
   const faces = beyondFaces(body, obstacle)
   if (faces.front >= 0) return null
-  const best = (['above', 'side', 'end'] as const)
-    .map((face): Lie => ({ face, value: faces[face], limit: clearance[face], margin: faces[face] - clearance[face] }))
-    .reduce((a, b) => (b.margin > a.margin ? b : a))
+  const all = (['above', 'side', 'end'] as const).map((face): Lie => {
+    const [value, limit] = [faces[face], clearance[face]]
+    return { face, value, limit, margin: value - limit }
+  })
+  const best = all.reduce((a, b) => (b.margin > a.margin ? b : a))
   if (best.margin >= 0) return best
   const grown = gapBetween(bodySolid(body, clearance), obstacle).distance
   if (grown > 0) return { ...best, value: gapToBody(body, obstacle).distance, margin: grown }
   if (best.value >= 0) return best
-  const value = gapToBody(body, obstacle).distance
+  return besideNoFace(all, gapToBody(body, obstacle).distance)
+}
+
+/** An obstacle that lies beyond no face: its bare distance against the clearance that it comes nearest to keeping. */
+function besideNoFace(all: readonly Lie[], value: number): Lie | null {
+  const within = all.filter(({ limit }) => limit > value)
+  const [first, ...rest] = within.length > 0 ? within : all
+  if (!first) return null
+  const best = rest.reduce((a, b) => (b.margin > a.margin ? b : a), first)
   return { ...best, value, margin: value < best.limit ? value - best.limit : best.margin }
 }
 
@@ -103,17 +113,21 @@ function beyondFaces({ centre, u, v, w, half }: Body, obstacle: Extent): Record<
   }
 }
 
+/** The body and an obstacle are at least this far apart, m: the most that a face of the body sets them apart, or 0. */
+export function apartAtLeast(body: Body, obstacle: Extent): number {
+  return Math.max(0, ...Object.values(beyondFaces(body, obstacle)))
+}
+
 /** Least distance from the body to an obstacle with its pair of points; 0 when they share a point. */
 export const gapToBody = (body: Body, obstacle: Extent): Gap => gapBetween(bodySolid(body), obstacle)
 
 /** Distance of a point from the body, m; 0 inside. */
 export function distanceFromBody({ centre, u, v, w, half }: Body, point: Vec3): number {
   const d = subtract(point, centre)
-  return Math.hypot(
-    Math.max(0, Math.abs(dot(d, u)) - half.u),
-    Math.max(0, Math.abs(dot(d, v)) - half.v),
-    Math.max(0, Math.abs(dot(d, w)) - half.w),
-  )
+  const along = Math.max(0, Math.abs(dot(d, u)) - half.u)
+  const across = Math.max(0, Math.abs(dot(d, v)) - half.v)
+  const down = Math.max(0, Math.abs(dot(d, w)) - half.w)
+  return Math.sqrt(along * along + across * across + down * down)
 }
 
 /** The point of the body nearest to a point. */

@@ -7,28 +7,26 @@ export interface Extent {
 }
 
 /**
- * A convex solid that also knows where a ray first meets it: the multiple of the ray's direction, 0 or more; null when
- * the ray misses.
+ * Where a ray is inside a solid, in multiples of its direction, 0 or more. It misses when `enter` is greater than
+ * `leave`; by how much tells how wide it misses, without a jump where it begins to hit.
  */
-export interface Convex extends Extent {
-  readonly firstOnRay: (from: Vec3, direction: Vec3) => number | null
-}
-
-/** Where a ray is inside each of several bounds; the ray misses when it leaves one before it enters another. */
-interface Stretch {
+export interface Stretch {
   enter: number
   leave: number
 }
 
-/** Solids thinner than this along a ray are still met, in multiples of the ray's direction. */
-const thin = 1e-12
+/** A convex solid that also knows where a ray is inside it. */
+export interface Convex extends Extent {
+  readonly alongRay: (from: Vec3, direction: Vec3) => Stretch
+}
 
-const firstOf = ({ enter, leave }: Stretch): number | null => (enter <= leave + thin ? enter : null)
+/** What a stretch is cut to when a ray runs beside a bound for ever. */
+const never = 1e9
 
 /** Keeps of a stretch what lies where `distance` (at the start, growing by `rate` along the ray) is not positive. */
 function keepBelow(stretch: Stretch, distance: number, rate: number): void {
   if (rate === 0) {
-    if (distance > 0) stretch.leave = -Infinity
+    if (distance > 0) stretch.leave = Math.min(stretch.leave, -never * distance)
   } else if (rate < 0) stretch.enter = Math.max(stretch.enter, -distance / rate)
   else stretch.leave = Math.min(stretch.leave, -distance / rate)
 }
@@ -39,13 +37,13 @@ export function axisBox(x: Vec2, y: Vec2, z: Vec2): Convex {
   return {
     middle: [(x[0] + x[1]) / 2, (y[0] + y[1]) / 2, (z[0] + z[1]) / 2],
     farthest: (d) => [d[0] > 0 ? x[1] : x[0], d[1] > 0 ? y[1] : y[0], d[2] > 0 ? z[1] : z[0]],
-    firstOnRay: (from, direction) => {
+    alongRay: (from, direction) => {
       const stretch = { enter: 0, leave: Infinity }
       for (const axis of [0, 1, 2] as const) {
         keepBelow(stretch, from[axis] - ranges[axis][1], direction[axis])
         keepBelow(stretch, ranges[axis][0] - from[axis], -direction[axis])
       }
-      return firstOf(stretch)
+      return stretch
     },
   }
 }
@@ -59,12 +57,12 @@ export function uprightCylinder(centre: Vec2, radius: number, z: Vec2): Convex {
       const out = sideways > 0 ? radius / sideways : 0
       return [centre[0] + dx * out, centre[1] + dy * out, dz > 0 ? z[1] : z[0]]
     },
-    firstOnRay: (from, direction) => {
+    alongRay: (from, direction) => {
       const stretch = { enter: 0, leave: Infinity }
       keepBelow(stretch, from[2] - z[1], direction[2])
       keepBelow(stretch, z[0] - from[2], -direction[2])
       keepInside(stretch, [from[0] - centre[0], from[1] - centre[1]], direction, radius)
-      return firstOf(stretch)
+      return stretch
     },
   }
 }
@@ -74,17 +72,14 @@ function keepInside(stretch: Stretch, [x, y]: Vec2, [dx, dy]: Vec3, radius: numb
   const a = dx * dx + dy * dy
   const c = x * x + y * y - radius * radius
   if (a === 0) {
-    if (c > 0) stretch.leave = -Infinity
+    if (c > 0) stretch.leave = Math.min(stretch.leave, -never * c)
     return
   }
-  const b = x * dx + y * dy
-  const root = Math.sqrt(b * b - a * c)
-  if (Number.isNaN(root)) {
-    stretch.leave = -Infinity
-    return
-  }
-  stretch.enter = Math.max(stretch.enter, (-b - root) / a)
-  stretch.leave = Math.min(stretch.leave, (-b + root) / a)
+  const middle = -(x * dx + y * dy) / a
+  const squared = middle * middle - c / a
+  const half = Math.sign(squared) * Math.sqrt(Math.abs(squared))
+  stretch.enter = Math.max(stretch.enter, middle - half)
+  stretch.leave = Math.min(stretch.leave, middle + half)
 }
 
 /** A corner of an outline in plan with the lowest and highest point of the solid over it, m. */
@@ -112,10 +107,10 @@ export function uprightPrism(corners: readonly Upright[]): Convex {
   return {
     middle: scale(points.reduce(add), 1 / points.length),
     farthest: (d) => farthestOf(points, first, d),
-    firstOnRay: (from, direction) => {
+    alongRay: (from, direction) => {
       const stretch = { enter: 0, leave: Infinity }
       for (const { normal, reach } of bounds) keepBelow(stretch, dot(normal, from) - reach, dot(normal, direction))
-      return firstOf(stretch)
+      return stretch
     },
   }
 }

@@ -36,39 +36,44 @@ function keptParts(thing: object, make: () => readonly Convex[]): readonly Conve
 /** Everything of the site that has a body, covers as thin plates; a member whose underside is not known is left out. */
 export function solidsOf(site: Site): Solid[] {
   return [
-    ...site.covers.map(coverSolid),
     ...site.members.flatMap((member) => memberSolid(site, member) ?? []),
+    ...site.covers.map(coverSolid),
     ...site.walls.map(wallSolid),
     ...site.poles.map((pole): Solid => {
       const parts = keptParts(pole, () => [uprightCylinder(pole.at, pole.diameter / 2, [0, pole.top])])
       return fixed({ of: 'pole', id: pole.id }, pole.name, pole.material, parts)
     }),
-    ...site.obstacles.map(obstacleSolid),
+    ...site.obstacles.map((obstacle) => obstacleSolid(obstacle, nameOf(site, obstacle))),
     ...site.tables.map(tableSolid),
   ]
 }
 
-/** The solid of one thing; null when the site has it not. */
-export function solidOf(site: Site, { of, id }: ThingOf): Solid | null {
-  const only = <T extends { id: string }>(things: readonly T[]) => things.filter((thing) => thing.id === id)
-  const none = { ...site, covers: [], members: [], walls: [], poles: [], obstacles: [], tables: [] }
-  switch (of) {
-    case 'member': {
-      const [member] = only(site.members)
-      return member ? memberSolid(site, member) : null
-    }
-    case 'cover':
-      return solidsOf({ ...none, covers: only(site.covers) })[0] ?? null
-    case 'wall':
-      return solidsOf({ ...none, walls: only(site.walls) })[0] ?? null
-    case 'pole':
-      return solidsOf({ ...none, poles: only(site.poles) })[0] ?? null
-    case 'obstacle':
-      return solidsOf({ ...none, obstacles: only(site.obstacles) })[0] ?? null
-    case 'table':
-      return solidsOf({ ...none, tables: only(site.tables) })[0] ?? null
-    default:
-      return null
+const found = new WeakMap<Site, Map<string, Solid | null>>()
+
+/** The solid of one thing; null when the site has it not. Kept per site. */
+export function solidOf(site: Site, thing: ThingOf): Solid | null {
+  const known = found.get(site) ?? new Map<string, Solid | null>()
+  found.set(site, known)
+  const key = `${thing.of} ${thing.id}`
+  const before = known.get(key)
+  if (before !== undefined) return before
+  const solid = solidsOf(onlyWith(site, thing))[0] ?? null
+  known.set(key, solid)
+  return solid
+}
+
+/** The site with no other solid than one; covers stay for a member to follow, behind it. */
+function onlyWith(site: Site, { of, id }: ThingOf): Site {
+  const only = <T extends { id: string }>(kind: ThingOf['of'], things: T[]): T[] =>
+    of === kind ? things.filter((thing) => thing.id === id) : []
+  return {
+    ...site,
+    covers: of === 'member' ? site.covers : only('cover', site.covers),
+    members: only('member', site.members),
+    walls: only('wall', site.walls),
+    poles: only('pole', site.poles),
+    obstacles: only('obstacle', site.obstacles),
+    tables: only('table', site.tables),
   }
 }
 
@@ -147,14 +152,19 @@ const there: Partial<Record<Obstacle['kind'], string>> = {
   fan: 'turning',
 }
 
-function obstacleSolid(obstacle: Obstacle): Solid {
+/** The obstacle's name, with its id where several have the same name. */
+function nameOf({ obstacles }: Site, { id, name }: Obstacle): string {
+  return obstacles.some((other) => other.name === name && other.id !== id) ? `${name} (${id})` : name
+}
+
+function obstacleSolid(obstacle: Obstacle, name: string): Solid {
   const solid = fixed(
     { of: 'obstacle', id: obstacle.id },
-    obstacle.name,
+    name,
     obstacle.material,
     keptParts(obstacle, () => shapeParts(obstacle.shape)),
   )
-  const state = obstacle.movable ? `${obstacle.name}: ${there[obstacle.kind] ?? 'in its place'}` : null
+  const state = obstacle.movable ? `${name}: ${there[obstacle.kind] ?? 'in its place'}` : null
   return { ...solid, state, furniture: obstacle.kind === 'furniture' }
 }
 

@@ -1,0 +1,43 @@
+import { bodyCorners } from '#app/domain/layout/clear-space.ts'
+import type { HeaterCheck } from '#app/domain/rules/check.ts'
+import { coverOutline } from '#app/domain/site/cover.ts'
+import { convexOutlinesMeet } from '#app/domain/site/geometry.ts'
+import type { Cover, Site } from '#app/domain/site/site.ts'
+import { isCombustible, solidsOf, type Solid } from '#app/domain/site/solids.ts'
+import type { Vec2 } from '#app/domain/vector.ts'
+
+const kept = new WeakMap<Site, readonly Solid[]>()
+
+function siteSolids(site: Site): readonly Solid[] {
+  const known = kept.get(site) ?? solidsOf(site)
+  kept.set(site, known)
+  return known
+}
+
+/** Covers whose outline the body meets in plan: it is judged by their plane. */
+export function coversOver({ site, body }: HeaterCheck): Cover[] {
+  const corners = bodyCorners(body).map(([x, y]): Vec2 => [x, y])
+  const xs = corners.map(([x]) => x)
+  const ys = corners.map(([, y]) => y)
+  const [x0, x1, y0, y1] = [Math.min(...xs), Math.max(...xs), Math.min(...ys), Math.max(...ys)]
+  const around: Vec2[] = [[x0, y0], [x1, y0], [x1, y1], [x0, y1]] // prettier-ignore
+  return site.covers.filter((cover) => convexOutlinesMeet(coverOutline(cover), around))
+}
+
+/**
+ * Everything that a heater may come too near to: not what holds it, nor a member that follows a cover over the heater
+ * and so lies behind it, unless it burns and the cover does not. A recess box sits in its ceiling, between members that
+ * have a rule of their own.
+ */
+export function thingsAbout(check: HeaterCheck): Solid[] {
+  const { site, heater, support } = check
+  const recess = heater.mount === 'recess box'
+  const over = coversOver(check)
+  const behind = ({ rests, combustible }: Solid) =>
+    over.some((cover) => rests.some(({ of, id }) => of === 'cover' && id === cover.id) && (isCombustible(cover.material) || !combustible)) // prettier-ignore
+  return siteSolids(site).filter((solid) => {
+    if (support.ids.includes(solid.id)) return false
+    if (solid.of === 'member') return !recess && !behind(solid)
+    return !recess || !over.some(({ id }) => id === solid.id)
+  })
+}

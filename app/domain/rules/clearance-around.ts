@@ -1,0 +1,75 @@
+import { apartAtLeast, gapToBody, lieAbout, type Face, type Growth, type Lie } from '#app/domain/layout/clear-space.ts'
+import { thingsAbout } from '#app/domain/rules/about-heater.ts'
+import { findingOf, heaterRule, type HeaterCheck } from '#app/domain/rules/check.ts'
+import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
+import { findingsNear, type Left } from '#app/domain/rules/nearest-things.ts'
+import type { Solid } from '#app/domain/site/solids.ts'
+
+/** The manual's clearance for a thing of this kind; null when it does not state all of it. */
+export function clearanceFor({ model }: HeaterCheck, combustible: boolean): Growth | null {
+  const given = combustible ? model.clearanceToCombustible : model.clearanceToNoncombustible
+  if (!given) return null
+  const { above, side, end } = given
+  return above === undefined || side === undefined || end === undefined ? null : { above, side, end }
+}
+
+interface Around {
+  readonly rule: string
+  readonly faces: readonly Face[]
+  readonly titles: (name: string) => Readonly<Record<Outcome, string>>
+  readonly clear: string
+  readonly remedy: string
+}
+
+/** Things whose clearance is not stated cannot be told; the others are judged by the faces that the rule is about. */
+export function clearanceAround(check: HeaterCheck, around: Around, without: (solid: Solid) => boolean): Finding[] {
+  const rule = heaterRule(check, around.rule, 'hard stop', 'm')
+  const things = thingsAbout(check).filter((solid) => !solid.furniture && !without(solid))
+  const unknown = [true, false].flatMap((combustible) => {
+    if (clearanceFor(check, combustible) || !things.some((thing) => thing.combustible === combustible)) return []
+    const title = `The manual states no clearance to ${combustible ? 'combustible' : 'non-combustible'} material`
+    const weight = combustible ? rule.weight : 'soft'
+    return [findingOf({ ...rule, weight }, 'cannot tell', { title, remedy: 'Enter it from the manual.' })]
+  })
+  const known = things.filter(({ combustible }) => clearanceFor(check, combustible))
+  const found = findingsNear(check.site, known, {
+    rule,
+    left: (solid) => leftAround(check, solid, around.faces),
+    atLeast: (solid) => atLeastAround(check, solid),
+    titles: around.titles,
+    clear: around.clear,
+    remedy: around.remedy,
+  })
+  return unknown.length > 0 ? [...unknown, ...found.filter(({ outcome }) => outcome !== 'pass')] : found
+}
+
+/** Its distance from the body less the greatest of its clearances. */
+function atLeastAround(check: HeaterCheck, solid: Solid): number {
+  const { above, side, end } = clearanceFor(check, solid.combustible) ?? { above: 0, side: 0, end: 0 }
+  const apart = Math.min(...solid.parts.map((part) => apartAtLeast(check.body, part)))
+  return apart - Math.max(above, side, end)
+}
+
+/** What a thing leaves of the clearance of the face that lets it pass most easily; null when that is another rule's face. */
+function leftAround(check: HeaterCheck, solid: Solid, faces: readonly Face[]): Left | null {
+  const clearance = clearanceFor(check, solid.combustible)
+  if (!clearance) return null
+  let worst: { lie: Lie; part: number } | null = null
+  solid.parts.forEach((part, i) => {
+    const lie = lieAbout(check.body, part, clearance)
+    if (lie && (!worst || lie.margin < worst.lie.margin)) worst = { lie, part: i }
+  })
+  return leftOf(check, solid, faces, worst)
+}
+
+function leftOf(
+  { body }: HeaterCheck,
+  solid: Solid,
+  faces: readonly Face[],
+  worst: { lie: Lie; part: number } | null,
+): Left | null {
+  const part = worst && solid.parts[worst.part]
+  if (!worst || !part || !faces.includes(worst.lie.face)) return null
+  const near = worst.lie.margin < 1 ? gapToBody(body, part) : null
+  return { ...worst.lie, nearest: near && { from: near.from, to: near.to } }
+}
