@@ -71,7 +71,7 @@ const distanceField: BriefField = {
   name: 'distance',
   label: 'Board to the heaters',
   hint: 'Left open: not known',
-  unit: (units) => (units === 'metric' ? 'm' : 'ft'),
+  unit: noUnit,
   show: ({ supply }, units) => (supply.distance === null ? '' : formatLength(supply.distance, units, 'fine')),
   write: (brief, text, units) => {
     if (text.trim() === '') return { brief: supplyOf(brief, { distance: null }) }

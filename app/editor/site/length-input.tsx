@@ -1,0 +1,25 @@
+import { formatLength, parseLength, type DisplayUnits } from '#app/domain/units.ts'
+import { LengthField } from '#app/components/length-field.tsx'
+
+interface LengthInputProps {
+  readonly label: string
+  readonly units: DisplayUnits
+  readonly value: number | null
+  readonly min?: number
+  readonly max?: number
+  readonly hint?: string
+  readonly disabled?: boolean
+  readonly onCommit: (metres: number) => void
+}
+
+/** A length of the site in the person's units; within 1000 m unless said otherwise. */
+export function LengthInput({ units, min = -1000, max = 1000, ...field }: LengthInputProps) {
+  return (
+    <LengthField
+      {...field}
+      unit=""
+      show={(metres) => formatLength(metres, units, 'fine')}
+      read={(text) => parseLength(text, units, { min, max })}
+    />
+  )
+}
