@@ -1,0 +1,137 @@
+import { describe, expect, it } from 'vitest'
+import { groupEmitter } from '#app/domain/flux/emitter.ts'
+import { gridOf } from '#app/domain/flux/grid.ts'
+import { irradianceAt } from '#app/domain/flux/irradiance.ts'
+import { irradianceMap } from '#app/domain/flux/map.ts'
+import type { Vec3 } from '#app/domain/vector.ts'
+import { cosine } from '#tests/support/emitters.ts'
+
+/**
+ * Rules of the trade (common practice, no source) as a model sees them. The figures were computed apart from this
+ * program, by code of its own, for one reference heater: 3,600 W, three elements 0.90 m long and 0.08 m apart,
+ * cos³α cosβ, radiant efficiency 0.60, underside at 2.50 m, elements 0.05 m above it and square to the line that joins
+ * the heaters, housing 0.24 m wide; plane at 1.0 m; seating 5.4 m along that line by 3.6 m.
+ */
+interface Size {
+  readonly power?: number
+  readonly elements?: number
+  readonly length?: number
+  readonly underside?: number
+}
+
+function heater(x: number, { power = 3600, elements = 3, length = 0.9, underside = 2.5 }: Size = {}) {
+  const offsets = Array.from({ length: elements }, (_, i) => (i - (elements - 1) / 2) * 0.08)
+  return groupEmitter({
+    id: `at ${x}`,
+    at: [x, 0, underside + 0.05],
+    turnDeg: 90,
+    tiltDeg: 0,
+    beam: cosine(3, 1),
+    elements: offsets.map((offset) => ({ offset, length, radiantPower: (0.6 * power) / elements })),
+  })
+}
+
+const up: Vec3 = [0, 0, 1]
+const below = (emitters: readonly ReturnType<typeof heater>[], x: number, y: number, z = 1) =>
+  emitters.reduce((sum, each) => sum + irradianceAt(each, [x, y, z], up), 0)
+
+/** Area, m², over which `holds` is true of the heaters' separate irradiances, by the engine's own map. */
+function areaWhere(
+  emitters: readonly ReturnType<typeof heater>[],
+  width: number,
+  depth: number,
+  holds: (e: number[]) => boolean,
+) {
+  const floor = [
+    [-width / 2, -depth / 2],
+    [width / 2, -depth / 2],
+    [width / 2, depth / 2],
+    [-width / 2, depth / 2],
+  ] as const
+  const map = irradianceMap(null, gridOf(floor, 1, 0.02), emitters)
+  let count = 0
+  for (let at = 0; at < map.total.length; at++) if (holds(map.layers.map(({ values }) => values[at]!))) count++
+  return count * 0.02 * 0.02
+}
+
+const pair = (spacing: number, size: Size = {}) => [heater(-spacing / 2, size), heater(spacing / 2, size)]
+const sum = (values: readonly number[]) => values.reduce((total, value) => total + value, 0)
+const within = (value: number, expected: number, relative: number) =>
+  expect(Math.abs(value / expected - 1), `${value} for ${expected}`).toBeLessThanOrEqual(relative)
+
+describe('two heaters at a spacing', () => {
+  it.each([
+    [1.2, 0.642, 3.27, 538.9],
+    [2.1, 0.782, 0.8, 267.8],
+    [2.4, 0.816, 0.26, 204.1],
+  ])(
+    '%d m: share of the seating with 80 W/m² or more %d, overlap %d m², in the middle %d W/m²',
+    (spacing, share, overlap, middle) => {
+      const both = pair(spacing)
+      const seating = areaWhere(both, 5.4, 3.6, (parts) => sum(parts) >= 80)
+      expect(Math.abs(seating / (5.4 * 3.6) - share)).toBeLessThanOrEqual(0.01)
+      expect(
+        Math.abs(areaWhere(both, 8, 8, (parts) => parts.every((part) => part >= 80)) - overlap),
+      ).toBeLessThanOrEqual(0.05)
+      within(below(both, 0, 0), middle, 0.01)
+    },
+  )
+
+  it('2.1 m: a middle seat gets 231.4 W/m², an edge seat about half, 118.9', () => {
+    within(below(pair(2.1), 0.6, 0.9), 231.4, 0.01)
+    within(below(pair(2.1), 1.95, 0.9), 118.9, 0.01)
+  })
+})
+
+describe('height', () => {
+  it.each([
+    [0.75, 305],
+    [1.0, 405],
+    [1.2, 524],
+    [1.75, 1321],
+  ])('at %d m beneath one heater: %d W/m²', (z, expected) => {
+    within(below([heater(0)], 0, 0, z), expected, 0.01)
+  })
+
+  it('0.20 m lower: the peak rises by 30 %, the outskirts and the overlap shrink, the spread at 150 W/m² grows', () => {
+    const [high, low] = [heater(0), heater(0, { underside: 2.3 })]
+    within(below([high], 0, 0), 404.7, 0.01)
+    within(below([low], 0, 0), 524.2, 0.01)
+    const spread = (one: ReturnType<typeof heater>, least: number) => areaWhere([one], 8, 8, ([part]) => part! >= least)
+    within(spread(high, 80), 7.45, 0.01)
+    within(spread(low, 80), 7.03, 0.01)
+    within(spread(high, 150), 4.06, 0.01)
+    within(spread(low, 150), 4.15, 0.01)
+    const overlap = areaWhere(pair(2.1, { underside: 2.3 }), 8, 8, (parts) => parts.every((part) => part >= 80))
+    within(overlap, 0.6, 0.05)
+  })
+})
+
+describe('size', () => {
+  it.each([
+    [3600, 3, 0.9, 7.45],
+    [2400, 2, 0.75, 5.14],
+    [1200, 1, 0.6, 1.99],
+  ])('%d W spreads 80 W/m² over its own area: smaller heaters over less', (power, elements, length, area) => {
+    within(
+      areaWhere([heater(0, { power, elements, length })], 8, 8, ([part]) => part! >= 80),
+      area,
+      0.01,
+    )
+  })
+})
+
+describe('an upright edge that faces the long side', () => {
+  it.each([
+    [0.1, 1373],
+    [0.3, 558],
+    [0.457, 330],
+    [0.6, 223],
+    [1.0, 98],
+  ])('%d m from the housing receives at most %d W/m²', (distance, expected) => {
+    const x = 0.12 + distance
+    const heights = Array.from({ length: 2500 }, (_, i) => i * 0.001)
+    const peak = Math.max(...heights.map((z) => irradianceAt(heater(0), [x, 0, z], [-1, 0, 0])))
+    within(peak, expected, 0.02)
+  })
+})
