@@ -50,13 +50,15 @@ const pad = 3
 /**
  * Fills and isolines of a grid of values. Cells outside the floor (`inside` 0) and values that are not numbers are never
  * shown: what stands there is continued from the floor so that the fill reaches the outline. Marching squares with
- * linear interpolation by d3-contour: on a smooth field a line is right to the second order of the cell.
+ * linear interpolation by d3-contour: on a smooth field a line is right to the second order of the cell. `written`: the
+ * levels whose figure may be written on the line.
  */
 export function contoursOf(
   values: Float32Array,
   grid: Grid,
   levels: readonly number[] = isolineLevels,
   edges: readonly number[] = bandEdges,
+  written: readonly number[] = levels,
 ): HeatPicture {
   const field = continuedField(values, grid)
   const peak = field.values.reduce((most, value) => (value > most ? value : most), -Infinity)
@@ -73,7 +75,7 @@ export function contoursOf(
   const isInside = insideTest(grid)
   const lines = levels.map((level) => {
     const rings = ringsAt(level)
-    return { level, path: pathOfRings(rings), labels: placesOnRing(rings, isInside) }
+    return { level, path: pathOfRings(rings), labels: written.includes(level) ? placesOnRing(rings, isInside) : [] }
   })
   return {
     bands: bands.filter((band) => band.path !== ''),

@@ -47,14 +47,16 @@ const turn = (from: number, to: number): number => Math.abs(((to - from + 540) %
 const upright = (angle: number): number => (angle > 90 ? angle - 180 : angle <= -90 ? angle + 180 : angle)
 
 function placesOf(points: readonly Vec2[], isInside: (x: number, y: number) => boolean): LinePlace[] {
-  const at = (i: number): Vec2 => points[(i + points.length) % points.length] ?? [NaN, NaN]
+  const count = points.length
+  const at = (i: number): Vec2 => points[(i + count) % count] ?? [NaN, NaN]
+  const inside = points.map(([x, y]) => isInside(x, y))
+  const along = points.map((point, i) => direction(point, at(i + 1)))
+  const bends = along.map((angle, i) => turn(along[(i + count - 1) % count] ?? angle, angle))
+  const under = (i: number, k: number) => (i + k + count) % count
+  const around = Array.from({ length: 2 * reach + 1 }, (_, k) => k - reach)
   return points.flatMap(([x, y], i) => {
-    const under = Array.from({ length: 2 * reach + 1 }, (_, k) => at(i + k - reach))
-    if (!under.every((point) => isInside(point[0], point[1]))) return []
-    const bend = under.slice(2).reduce((sum, point, k) => {
-      const before = under[k + 1] ?? point
-      return sum + turn(direction(under[k] ?? before, before), direction(before, point))
-    }, 0)
+    if (!around.every((k) => inside[under(i, k)])) return []
+    const bend = around.slice(1, -1).reduce((sum, k) => sum + (bends[under(i, k)] ?? 0), 0)
     return [{ x, y, angleDeg: upright(direction(at(i - reach), at(i + reach))), bend }]
   })
 }

@@ -29,6 +29,8 @@ export interface QuantityScale {
   readonly ticks: readonly number[]
   /** Band that is dotted, hatched above it; null where the quantity has no target. */
   readonly target: Target | null
+  /** Whether the highest points above the last band carry their figure. */
+  readonly writesPeaks: boolean
   /** Fill of the band from … to. */
   readonly fill: (from: number, to: number) => string
   readonly format: (value: number) => string
@@ -53,6 +55,7 @@ export function irradianceScale(theme: Theme, target: Target, fine = false): Qua
     labelled: [...new Set([...labelledLevels, target.low, target.high])],
     ticks: [...new Set([0, 100, target.low, 200, 300, target.high, 400, 500, 600])].sort((a, b) => a - b),
     target,
+    writesPeaks: true,
     fill: (from, to) => bandColour(from, to, theme),
     format: whole,
   }
@@ -85,6 +88,7 @@ export function overlapScale(theme: Theme, threshold: number): QuantityScale {
     labelled: [],
     ticks: [0, 1, 2, 3, 4],
     target: null,
+    writesPeaks: false,
     fill: (from) => (from < 0.5 ? floor : hexOf(rgbOf(ramp(Math.round(from + 0.5))))),
     format: (value) => (value >= 4 ? '4 or more' : whole(value)),
   }
@@ -108,6 +112,7 @@ export function feelsLikeScale(theme: Theme, displayUnits: 'metric' | 'imperial'
     labelled: steps(-8, 28, 2),
     ticks: steps(-10, 30, 5),
     target: null,
+    writesPeaks: false,
     fill: (from, to) => hexOf(rgbOf(ramp(from <= -40 ? -10 : (from + to) / 2))),
     format: (value) => whole(fahrenheit ? value * 1.8 + 32 : value),
   }
@@ -138,6 +143,7 @@ export function differenceScale(theme: Theme): QuantityScale {
     labelled: [-200, -100, -50, 50, 100, 200],
     ticks: steps(-300, 300, 100),
     target: null,
+    writesPeaks: false,
     fill: (from, to) => hexOf(rgbOf(ramp(from <= -2000 ? -300 : (from + to) / 2))),
     format: (value) => (value > 0 ? `+${whole(value)}` : whole(value)),
   }

@@ -1,8 +1,8 @@
+import { isInside } from '#app/domain/site/geometry.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 import type { HeatPicture } from '#app/drawing/heat/contours.ts'
 import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
 import { isClear, meets, patch, type Patch } from '#app/drawing/plan/occupied.ts'
-import { isInsideOutline } from '#app/drawing/plan/outline.ts'
 import { toScreen, toSite, type PlanView } from '#app/drawing/plan/plan-view.ts'
 import type { Pen } from '#app/drawing/pen.ts'
 import { textWidth } from '#app/drawing/text/widths.ts'
@@ -66,7 +66,7 @@ function isWithin(box: Patch, outline: readonly Vec2[], view: PlanView): boolean
         box.x + a * Math.cos(turn) - b * Math.sin(turn),
         box.y + a * Math.sin(turn) + b * Math.cos(turn),
       ]
-      return isInsideOutline(outline, toSite(view, corner))
+      return isInside(outline, ...toSite(view, corner))
     }),
   )
 }
@@ -114,6 +114,7 @@ export function placePeaks(
   occupied: readonly Patch[],
 ) {
   const taken = [...occupied]
+  if (!quantity.writesPeaks) return []
   return picture.peaks.flatMap((peak) => {
     const text = quantity.format(peak.value)
     const [cx, cy] = toScreen(view, [peak.x, peak.y])

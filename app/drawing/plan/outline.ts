@@ -14,15 +14,6 @@ export const doubleArea = (outline: readonly Vec2[]): number =>
     return sum + x * nextY - nextX * y
   }, 0)
 
-/** Whether a point lies inside a polygon (even-odd). */
-export function isInsideOutline(outline: readonly Vec2[], [x, y]: Vec2): boolean {
-  return outline.reduce((inside, [x1, y1], i) => {
-    const [x2, y2] = outline[(i + 1) % outline.length] ?? [x1, y1]
-    const crosses = y1 > y !== y2 > y && x < ((x2 - x1) * (y - y1)) / (y2 - y1) + x1
-    return crosses ? !inside : inside
-  }, false)
-}
-
 /** An edge of the floor on the drawing: where it starts, its length, px, and its directions along and outward. */
 export interface ScreenEdge {
   readonly from: Vec2

@@ -157,8 +157,8 @@ export const PlanGround = memo(function PlanGround({
   view,
   pen,
   named,
-  cuts,
-}: PartProps & { named: boolean; cuts: readonly SectionCut[] }) {
+  cuts = noCuts,
+}: PartProps & { named: boolean; cuts?: readonly SectionCut[] }) {
   const crossed = cutsAcross(cuts, view).map((x) => [x - 14, x + 14] as const)
   const avoid = named ? [...crossed, ...takenAbove(site, view, pen)] : []
   return (
@@ -207,9 +207,9 @@ interface FigureProps {
 export const PlanHeatFigures = memo(function PlanHeatFigures({
   quantity,
   picture,
-  named,
+  named = true,
   ...rest
-}: FigureProps & { quantity: QuantityScale; picture: HeatPicture; named: boolean }) {
+}: FigureProps & { quantity: QuantityScale; picture: HeatPicture; named?: boolean }) {
   const { site, layout, models, view, pen, withFigure } = rest
   const things = [...takenBySite(site, view, pen, withFigure), ...takenByHeaters(layout, models, view, pen)]
   const notes = named ? placeNotes(site, view, pen, things).map((note) => notePatch(note, pen)) : []

@@ -1,13 +1,15 @@
+import type { TargetOutcome } from '#app/domain/comfort/seat-warmth.ts'
+import type { SensationWord } from '#app/domain/comfort/sensation.ts'
 import type { Seat } from '#app/domain/site/site.ts'
 import { toScreen, type PlanView } from '#app/drawing/plan/plan-view.ts'
 import type { Pen } from '#app/drawing/pen.ts'
 import { Words } from '#app/drawing/text/words.tsx'
 
 /** How a seat stands against the target. */
-export type SeatOutcome = 'below' | 'in target' | 'above' | 'not heated' | 'no heater'
+export type SeatOutcome = TargetOutcome
 
 /** Words of the seven-point scale that a customer's plan shows as strokes. */
-export type WarmthWord = 'cold' | 'cool' | 'slightly cool' | 'neutral' | 'slightly warm' | 'warm' | 'hot'
+export type WarmthWord = SensationWord
 
 /** What a seat's disc says: a figure inside and a ring by outcome, or strokes for a customer. */
 export type SeatSign =
