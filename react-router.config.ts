@@ -2,6 +2,8 @@ import type { Config } from '@react-router/dev/config'
 
 export default {
   ssr: true,
+  // Behind a proxy the framework does not know its own origin: app/server/origin.server.ts checks every request.
+  allowedActionOrigins: ['**'],
   future: {
     v8_middleware: true,
     v8_splitRouteModules: true,

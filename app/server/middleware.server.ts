@@ -41,7 +41,7 @@ const limitBody: MiddlewareFunction<Response> = ({ request }) => {
   if (said === null) throw refused(411, 'Say how long the body is (Content-Length).')
   const upload = request.headers.get('Content-Type')?.startsWith('multipart/form-data') ?? false
   const most = upload ? mostBytes.upload : mostBytes.other
-  if (Number(said) > most) throw refused(413, `The body is larger than ${most / 1_000_000} MB.`)
+  if (!(Number(said) <= most)) throw refused(413, `The body is larger than ${most / 1_000_000} MB.`)
 }
 
 /** Nothing is changed by a page of somebody else. */

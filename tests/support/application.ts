@@ -143,6 +143,7 @@ export async function openApplication(env: Record<string, string> = {}): Promise
     PUBLIC_ORIGIN: ownOrigin,
     DATABASE_URL: database.urls.app,
     DATABASE_AUTH_URL: database.urls.auth,
+    DATABASE_OWNER_URL: database.urls.owner,
     SESSION_SECRET: secret,
     DATA_FOLDER: folder,
     ...env,

@@ -2,6 +2,7 @@ import { data, Form, Link } from 'react-router'
 import { AccountFrame } from '#app/components/account-frame.tsx'
 import { Button, ButtonLink } from '#app/components/button.tsx'
 import { TextField } from '#app/components/field.tsx'
+import { readFields } from '#app/server/form-fields.server.ts'
 import { setNewPassword } from '#app/server/new-password.server.ts'
 import { passwordLimits } from '#app/server/password-limits.server.ts'
 import type { Route } from './+types/new-password'
@@ -19,8 +20,8 @@ const said = {
 
 /** Sets the password and ends every session of the account. */
 export async function action({ request, params }: Route.ActionArgs) {
-  const password = (await request.formData()).get('password')
-  const outcome = await setNewPassword(params.token, typeof password === 'string' ? password : '')
+  const { password = '' } = await readFields(request)
+  const outcome = await setNewPassword(params.token, password)
   if (outcome === 'done') return data({ done: true, error: null, ended: false })
   if (outcome === 'ended') return data({ done: false, error: null, ended: true }, 400)
   return data({ done: false, error: said[outcome], ended: false }, 400)

@@ -3,6 +3,7 @@ import { z } from 'zod'
 import { AccountFrame } from '#app/components/account-frame.tsx'
 import { Button } from '#app/components/button.tsx'
 import { TextField } from '#app/components/field.tsx'
+import { readFields } from '#app/server/form-fields.server.ts'
 import { askForNewPassword } from '#app/server/new-password.server.ts'
 import type { Route } from './+types/reset-password'
 
@@ -16,11 +17,10 @@ const emailSchema = z.string().trim().max(254).pipe(z.email())
 
 /** Sends a link by mail. The answer is the same whether or not the address is known. */
 export async function action({ request }: Route.ActionArgs) {
-  const typed = (await request.formData()).get('email')
+  const { email: typed = '' } = await readFields(request)
   const email = emailSchema.safeParse(typed)
   if (!email.success) {
-    const kept = typeof typed === 'string' ? typed.slice(0, 254) : ''
-    return data({ email: kept, error: 'An address such as name@example.org.', sent: false }, 400)
+    return data({ email: typed.slice(0, 254), error: 'An address such as name@example.org.', sent: false }, 400)
   }
   await askForNewPassword(email.data)
   return data({ email: email.data, error: null, sent: true })

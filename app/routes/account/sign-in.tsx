@@ -2,6 +2,7 @@ import { data, Form, Link, redirect, useNavigation } from 'react-router'
 import { z } from 'zod'
 import { Button } from '#app/components/button.tsx'
 import { TextField } from '#app/components/field.tsx'
+import { readFields } from '#app/server/form-fields.server.ts'
 import { safePath } from '#app/server/safe-redirect.server.ts'
 import { findMember } from '#app/server/session.server.ts'
 import { signIn } from '#app/server/sign-in.server.ts'
@@ -16,7 +17,10 @@ export async function loader({ request, url }: Route.LoaderArgs) {
   return null
 }
 
-const formSchema = z.object({ email: z.string().trim().max(254), password: z.string().max(1000) })
+const formSchema = z.object({
+  email: z.string().trim().max(254).default(''),
+  password: z.string().max(1000).default(''),
+})
 const tooMany = 'Too many wrong tries for this address. Wait a quarter of an hour, or ask for a new password.'
 const wrong = 'E-mail and password do not belong together. Both are as they were typed.'
 
@@ -26,7 +30,7 @@ function refused(email: string, errors: { email?: string; password?: string }, s
 
 /** Signs in and goes on to where the person wanted to go; works without scripts. */
 export async function action({ request, url }: Route.ActionArgs) {
-  const form = formSchema.safeParse(Object.fromEntries(await request.formData()))
+  const form = formSchema.safeParse(await readFields(request))
   if (!form.success) return refused('', { email: 'At most 254 characters.' }, 400)
   const { email, password } = form.data
   if (!z.email().safeParse(email).success) return refused(email, { email: 'An address such as name@example.org.' }, 400)
