@@ -3,7 +3,7 @@ import { cautionLimits, cautionsAt, eyeLimit, headCaution, relaxedEyeLimit } fro
 import { seatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import { brief, heater, model, modelsOf, seat, site } from '#tests/domain/comfort/terrace.ts'
 
-const warmth = (heaters = [heater('H1')], change = {}) =>
+const warmth = (heaters = [heater('H1', { x: 1, tiltDeg: 20 })], change = {}) =>
   seatWarmth({ site: site([seat('S1')]), brief: brief(), layout: { heaters }, models: modelsOf(model(change)) })[0]!
 
 describe('limits on what falls on a guest', () => {

@@ -83,7 +83,7 @@ describe('first-order tolerance against a seeded Monte Carlo', () => {
     { key: 'B', number: 3, index: 3 },
     { key: 'C', number: 2, index: 4 },
   ] as const
-  it.each(cases)('site $key.$number, seat $index: body, head and feels-like', ({ key, number, index }) => {
+  it.each(cases)('site $key variant $number, seat $index: body, head and feels-like', ({ key, number, index }) => {
     const input = demo(key, number)
     const at = input.site.seats[index]!
     const sampled = bySampling(input, at, figures, defaultFluxTolerances, 3000)
