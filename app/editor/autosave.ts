@@ -1,6 +1,6 @@
 import { sameLayout } from '#app/domain/layout/merge.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
-import type { KeptLayout, Keeping, SaveRequest } from '#app/editor/keeping.ts'
+import type { DeviceCopy, KeptLayout, Keeping, SaveRequest } from '#app/editor/keeping.ts'
 
 /** A save that met another one: both layouts, and what they were made from. */
 export interface SaveConflict {
@@ -13,7 +13,9 @@ export interface SaveConflict {
 
 /** Where the work stands. */
 export type SaveState =
-  | { readonly kind: 'saved' | 'unsaved' | 'saving' }
+  /** `at`: when the server last acknowledged; null before the first time. */
+  | { readonly kind: 'saved'; readonly at: Date | null }
+  | { readonly kind: 'unsaved' | 'saving' }
   | { readonly kind: 'offline'; readonly changes: number }
   | { readonly kind: 'refused'; readonly reason: string }
   | { readonly kind: 'conflict'; readonly conflict: SaveConflict }
@@ -22,6 +24,8 @@ export type SaveState =
 export interface Autosave {
   /** The layout is now this one. */
   changed: (layout: Layout) => void
+  /** Goes on with edits that the device kept over a reload. */
+  resume: (copy: DeviceCopy) => void
   /** Sends now what waits: the connection is back, or the person asks. */
   retry: () => void
   /** Ends a conflict: goes on from the server's revision with this layout. */
@@ -29,6 +33,8 @@ export interface Autosave {
   /** The server's layout changed elsewhere; true when it was taken in because nothing here waits. */
   heardOf: (current: KeptLayout) => boolean
   state: () => SaveState
+  /** The newest revision that is known here. */
+  revision: () => number
   subscribe: (listener: () => void) => () => void
   stop: () => void
 }
@@ -54,8 +60,9 @@ export function startAutosave(
   let changes = 0
   let open: SaveRequest | null = null
   let sending = false
+  let stopped = false
   let timer: ReturnType<typeof setTimeout> | undefined
-  let state: SaveState = { kind: 'saved' }
+  let state: SaveState = { kind: 'saved', at: null }
   const listeners = new Set<() => void>()
 
   const become = (next: SaveState) => {
@@ -86,6 +93,10 @@ export function startAutosave(
         return sameLayout(present, base.layout) ? rest() : void send()
       case 'conflict':
         open = null
+        if (sameLayout(present, answer.current.layout)) {
+          base = answer.current
+          return rest()
+        }
         return become({
           kind: 'conflict',
           conflict: { base: base.layout, mine: present, theirs: answer.current, by: answer.by, at: answer.at },
@@ -95,18 +106,19 @@ export function startAutosave(
         return become({ kind: 'refused', reason: answer.reason })
       case 'unreachable':
         become({ kind: 'offline', changes })
-        return later(delays.again)
+        return stopped ? undefined : later(delays.again)
     }
   }
 
   function rest() {
     changes = 0
     keeping.keepOnDevice(null)
-    become({ kind: 'saved' })
+    become({ kind: 'saved', at: new Date() })
   }
 
   return {
     changed(layout) {
+      stopped = false
       if (layout === present) return
       present = layout
       changes += 1
@@ -115,6 +127,14 @@ export function startAutosave(
       if (state.kind === 'offline') return become({ kind: 'offline', changes })
       if (!sending) become({ kind: 'unsaved' })
       later(delays.rest)
+    },
+    resume(copy) {
+      stopped = false
+      base = copy.base
+      present = copy.layout
+      changes = copy.changes
+      become({ kind: 'unsaved' })
+      void send()
     },
     retry: () => void send(),
     settle(layout) {
@@ -132,10 +152,15 @@ export function startAutosave(
       return true
     },
     state: () => state,
+    revision: () => base.revision,
     subscribe(listener) {
       listeners.add(listener)
       return () => listeners.delete(listener)
     },
-    stop: () => clearTimeout(timer),
+    stop() {
+      stopped = true
+      clearTimeout(timer)
+      if (state.kind === 'unsaved') void send()
+    },
   }
 }

@@ -132,6 +132,43 @@ describe('autosave', () => {
     expect(autosave.heardOf({ layout: moved(3), revision: 9 })).toBe(false)
   })
 
+  it('goes on after a reload with what the device kept, from the revision it was made from', async () => {
+    const remote = server({ layout: first, revision: 7 })
+    const before = startAutosave({ layout: first, revision: 7 }, remote.keeping, delays)
+    remote.pull('out')
+    before.changed(moved(0.1))
+    await vi.advanceTimersByTimeAsync(600)
+    before.stop()
+    const copy = remote.device()
+    if (!copy) throw new Error('nothing kept')
+    remote.pull('in')
+    remote.elsewhere(moved(5))
+    const after = startAutosave({ layout: moved(5), revision: 8 }, remote.keeping, delays)
+    after.resume(copy)
+    await vi.advanceTimersByTimeAsync(10)
+    expect(after.state()).toMatchObject({ kind: 'conflict', conflict: { mine: moved(0.1), base: first } })
+    expect(remote.kept().layout).toEqual(moved(5))
+  })
+
+  it('is at rest when the other copy says the same', async () => {
+    const remote = server({ layout: first, revision: 7 })
+    const autosave = startAutosave({ layout: first, revision: 7 }, remote.keeping, delays)
+    remote.elsewhere(moved(0.1))
+    autosave.changed(moved(0.1))
+    await vi.advanceTimersByTimeAsync(600)
+    expect(autosave.state().kind).toBe('saved')
+    expect(autosave.revision()).toBe(8)
+  })
+
+  it('sends what waits when the page is left', async () => {
+    const remote = server({ layout: first, revision: 7 })
+    const autosave = startAutosave({ layout: first, revision: 7 }, remote.keeping, delays)
+    autosave.changed(moved(0.1))
+    autosave.stop()
+    await vi.advanceTimersByTimeAsync(10)
+    expect(remote.kept().layout).toEqual(moved(0.1))
+  })
+
   it('tells a refusal and tries again with the next change', async () => {
     const remote = server({ layout: first, revision: 7 })
     const save = vi

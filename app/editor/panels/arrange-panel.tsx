@@ -14,6 +14,7 @@ interface ArrangePanelProps {
   readonly selected: readonly string[]
   readonly site: Site
   readonly onEdit: (layout: Layout, selected: readonly string[], said: string) => void
+  readonly onDuplicate: () => void
 }
 
 const directions = [
@@ -24,7 +25,7 @@ const directions = [
 ]
 
 /** Repeats the chosen heaters at a spacing; brings several into line or to equal spacing. */
-export function ArrangePanel({ layout, selected, site, onEdit }: ArrangePanelProps) {
+export function ArrangePanel({ layout, selected, site, onEdit, onDuplicate }: ArrangePanelProps) {
   const [open, setOpen] = useState(false)
   const several = selected.length > 1
   const align = (along: 'x' | 'y') =>
@@ -34,6 +35,9 @@ export function ArrangePanel({ layout, selected, site, onEdit }: ArrangePanelPro
       <div className="flex flex-wrap items-center gap-1">
         <Button kind="text" size="small" aria-expanded={open} onClick={() => setOpen(!open)}>
           Repeat at a spacing
+        </Button>
+        <Button kind="text" size="small" onClick={onDuplicate}>
+          Duplicate
         </Button>
         <Button kind="text" size="small" disabled={!several} onClick={() => align('x')} title="The same place along">
           Align {alongLabel(site).toLowerCase()}
@@ -55,7 +59,7 @@ export function ArrangePanel({ layout, selected, site, onEdit }: ArrangePanelPro
   )
 }
 
-function RepeatForm({ layout, selected, site, onEdit }: ArrangePanelProps) {
+function RepeatForm({ layout, selected, site, onEdit }: Omit<ArrangePanelProps, 'onDuplicate'>) {
   const units = site.displayUnits
   const [spacing, setSpacing] = useState(firstSpacing(site))
   const [count, setCount] = useState('1')

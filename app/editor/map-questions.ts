@@ -1,0 +1,114 @@
+import type { Brief } from '#app/domain/brief/brief.ts'
+import { absorptanceOf } from '#app/domain/comfort/sources.ts'
+import { windOf } from '#app/domain/comfort/seat-warmth.ts'
+import { emitterOf, type Emitter } from '#app/domain/flux/emitter.ts'
+import type { MapQuantity, MapQuestion } from '#app/domain/flux/map-question.ts'
+import { obstructionsOf } from '#app/domain/flux/shading.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
+import { areaOf } from '#app/domain/site/geometry.ts'
+import type { Site } from '#app/domain/site/site.ts'
+import {
+  feelsLikeScale,
+  irradianceScale,
+  overlapScale,
+  shareScale,
+  type QuantityScale,
+} from '#app/drawing/heat/quantity.ts'
+import { fluxFigure } from '#app/editor/figures.ts'
+import { planeHeight, type FluxUnit, type ViewChoice } from '#app/editor/view-choice.ts'
+
+/** What a map is asked about. */
+export interface MapSubject {
+  readonly site: Site
+  readonly brief: Brief
+  readonly layout: Layout
+  readonly models: ReadonlyMap<string, HeaterModel>
+  readonly choice: ViewChoice
+}
+
+/** Cells of a map at rest and while something moves. */
+const cells = { sharp: 24_000, coarse: 3_600 }
+
+/** Side of a map's cells, m: as small as the number of cells allows, never under 20 mm. */
+export function cellOf(site: Site, sharpness: keyof typeof cells): number {
+  const side = Math.sqrt(Math.max(0.01, Math.abs(areaOf(site.floor))) / cells[sharpness])
+  return Math.max(0.02, Math.round(side * 1000) / 1000)
+}
+
+const remembered = new WeakMap<MountedHeater, { model: HeaterModel; emitter: Emitter | null }>()
+
+/** Emitter of a heater; the same object for the same heater and model. */
+function emitterFor(heater: MountedHeater, model: HeaterModel): Emitter | null {
+  const known = remembered.get(heater)
+  if (known?.model === model) return known.emitter
+  const emitter = emitterOf(heater, model)
+  remembered.set(heater, { model, emitter })
+  return emitter
+}
+
+/** The heaters whose heat can be told, as emitters. */
+export function emittersOf(layout: Layout, models: ReadonlyMap<string, HeaterModel>): Emitter[] {
+  return layout.heaters.flatMap((heater) => {
+    const model = models.get(heater.model)
+    return (model && emitterFor(heater, model)) ?? []
+  })
+}
+
+/** How the chosen quantity is coloured and written; irradiance in the person's unit. */
+export function scaleOf(choice: ViewChoice, brief: Brief, units: Site['displayUnits']): QuantityScale {
+  switch (choice.map.kind) {
+    case 'flux':
+      return inUnit(irradianceScale('dusk', brief.target), choice.fluxUnit)
+    case 'share':
+      return inUnit(shareScale('dusk'), choice.fluxUnit)
+    case 'overlap':
+      return overlapScale('dusk', choice.map.threshold)
+    case 'feels-like':
+      return feelsLikeScale('dusk', units)
+  }
+}
+
+const inUnit = (scale: QuantityScale, unit: FluxUnit): QuantityScale =>
+  unit === 'W/m²' ? scale : { ...scale, unit, format: (value) => fluxFigure(value, unit) }
+
+/** The question for the chosen map; null with nothing to map. */
+export function mapQuestion(
+  subject: MapSubject,
+  scale: QuantityScale,
+  sharpness: keyof typeof cells,
+): MapQuestion | null {
+  const { site, layout, models, choice } = subject
+  const emitters = emittersOf(layout, models)
+  if (emitters.length === 0) return null
+  const z = planeHeight(choice.plane, site)
+  return {
+    emitters,
+    floor: site.floor,
+    z,
+    cell: cellOf(site, sharpness),
+    quantity: quantityOf(subject, emitters),
+    levels: scale.levels,
+    edges: scale.edges,
+    ...(choice.shade ? { obstructions: obstructionsOf(site, layout, models) } : {}),
+  }
+}
+
+function quantityOf({ site, brief, layout, models, choice }: MapSubject, emitters: readonly Emitter[]): MapQuantity {
+  const { map } = choice
+  if (map.kind === 'share') return { kind: 'share', emitterId: map.heaterId }
+  if (map.kind !== 'feels-like') return map
+  const waves = new Map(layout.heaters.map((heater) => [heater.id, models.get(heater.model)?.wave]))
+  const underCover = site.covers.length > 0
+  const conditions = {
+    airTemperature: brief.airTemperature,
+    surroundingsTemperature: underCover
+      ? brief.airTemperature
+      : (brief.surroundingsTemperature ?? brief.airTemperature),
+    wind: windOf(brief, map.wind),
+    clothing: brief.clothing,
+    posture: 'seated' as const,
+    absorptance: emitters.map((emitter) => absorptanceOf(waves.get(emitter.id) ?? 'medium-wave')),
+  }
+  return { kind: 'feels-like', conditions }
+}

@@ -1,0 +1,104 @@
+import { memo } from 'react'
+import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { Layout } from '#app/domain/layout/layout.ts'
+import type { Site } from '#app/domain/site/site.ts'
+import type { MapAnswer } from '#app/drawing/heat/map-picture.ts'
+import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
+import type { Pen } from '#app/drawing/pen.ts'
+import { PlanDimensions } from '#app/drawing/plan/dimensions.tsx'
+import { PlanGround, PlanHeat, PlanHeatFigures, PlanNames, PlanStructure } from '#app/drawing/plan/plan-drawing.tsx'
+import type { PlanView } from '#app/drawing/plan/plan-view.ts'
+import { ScaleBar } from '#app/drawing/plan/scale-bar.tsx'
+import { seatsCarryFigures } from '#app/drawing/plan/seat.tsx'
+import { SectionCutMark, type SectionCut } from '#app/drawing/plan/section-cut.tsx'
+import { fluxFigure } from '#app/editor/figures.ts'
+import { PlanHeater, PlanSeat } from '#app/editor/plan-objects.tsx'
+import type { FluxUnit } from '#app/editor/view-choice.ts'
+
+interface PlanMarksProps {
+  readonly site: Site
+  /** As shown: the gesture's while one is under way. */
+  readonly layout: Layout
+  /** As kept: what words on the map keep clear of, so that they stand still during a gesture. */
+  readonly kept: Layout
+  readonly models: ReadonlyMap<string, HeaterModel>
+  readonly warmth: readonly SeatWarmth[]
+  readonly view: PlanView
+  readonly pen: Pen
+  readonly scale: QuantityScale
+  readonly answer: MapAnswer | null
+  readonly selected: ReadonlySet<string>
+  readonly seatId: string | null
+  readonly cuts: readonly SectionCut[]
+  readonly fluxUnit: FluxUnit
+  readonly readOnly: boolean
+  /** Left out where the plan is small. */
+  readonly words: boolean
+  readonly label: string
+}
+
+/** Name of the plan's patterns and clip in this page. */
+const name = 'plan'
+
+/** Everything drawn on the plan, in the order of the drawing; heaters and seats are Tab stops. */
+export function PlanMarks(props: PlanMarksProps) {
+  const { site, layout, kept, models, warmth, view, pen, scale, answer, selected, cuts, words } = props
+  const withFigure = seatsCarryFigures(site.seats, view, pen)
+  const picture = answer?.picture ?? null
+  return (
+    <>
+      <g role="img" aria-label={props.label}>
+        <PlanGround {...{ name, site, view, pen }} named={words} />
+        {picture && <PlanHeat {...{ name, site, view, pen, picture }} quantity={scale} />}
+        {picture && (
+          <PlanHeatFigures {...{ site, models, view, pen, picture, withFigure }} layout={kept} quantity={scale} />
+        )}
+        <PlanStructure {...{ name, site, view, pen }} named={words} />
+      </g>
+      {warmth.map((each) => (
+        <PlanSeat
+          key={each.seat.id}
+          seat={each.seat}
+          figure={each.body === null ? null : fluxFigure(each.body, props.fluxUnit)}
+          outcome={each.target}
+          unit={props.fluxUnit}
+          pointed={props.seatId === each.seat.id}
+          {...{ view, pen, withFigure }}
+        />
+      ))}
+      {layout.heaters.map((heater) => (
+        <PlanHeater
+          key={heater.id}
+          heater={heater}
+          model={models.get(heater.model)}
+          selected={selected.has(heater.id)}
+          readOnly={props.readOnly}
+          {...{ site, view, pen }}
+        />
+      ))}
+      <g aria-hidden="true" pointerEvents="none">
+        <PlanDimensions heaters={layout.heaters} overall={words} {...{ selected, site, view, pen }} />
+        {words && <PlanNames {...{ site, models, view, pen, withFigure, cuts }} layout={kept} />}
+        {words && cuts.map((cut) => <SectionCutMark key={cut.letter} {...{ cut, site, view, pen }} />)}
+      </g>
+    </>
+  )
+}
+
+/** The scale bar at the lower right; it stays there whatever the plan's size. */
+export const PlanScaleBar = memo(function PlanScaleBar({
+  view,
+  pen,
+  units,
+}: {
+  view: PlanView
+  pen: Pen
+  units: Site['displayUnits']
+}) {
+  return (
+    <g aria-hidden="true" pointerEvents="none">
+      <ScaleBar x={view.width - 54} y={view.height - 21} scale={view.scale} displayUnits={units} pen={pen} />
+    </g>
+  )
+})

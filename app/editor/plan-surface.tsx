@@ -1,0 +1,250 @@
+import {
+  useEffect,
+  useImperativeHandle,
+  useMemo,
+  useRef,
+  useState,
+  type Dispatch,
+  type FocusEvent,
+  type PointerEvent as ReactPointerEvent,
+  type RefObject,
+} from 'react'
+import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { Site } from '#app/domain/site/site.ts'
+import { formatLength } from '#app/domain/units.ts'
+import type { Vec2 } from '#app/domain/vector.ts'
+import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
+import { screenPen } from '#app/drawing/pen.ts'
+import { toScreen, workingMargins, type PlanMargins } from '#app/drawing/plan/plan-view.ts'
+import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
+import { shownLayout, type EditorAction, type EditorState } from '#app/editor/editor-state.ts'
+import { emittersOf } from '#app/editor/map-questions.ts'
+import { PlanMarks, PlanScaleBar } from '#app/editor/plan-marks.tsx'
+import { HoldLines, Marquee, PlanHandles } from '#app/editor/plan-overlay.tsx'
+import type { PointedStore } from '#app/editor/pointed.ts'
+import { ReadOut } from '#app/editor/read-out.tsx'
+import type { FluxView } from '#app/editor/use-flux.ts'
+import { usePlanGestures } from '#app/editor/use-plan-gestures.ts'
+import { usePlanKeys } from '#app/editor/use-plan-keys.ts'
+import { usePlanView, type PlanViewing } from '#app/editor/use-plan-view.ts'
+import { useSize } from '#app/editor/use-size.ts'
+import { planeHeight, type ViewChoice } from '#app/editor/view-choice.ts'
+
+interface PlanSurfaceProps {
+  readonly state: EditorState
+  readonly dispatch: Dispatch<EditorAction>
+  readonly site: Site
+  readonly models: ReadonlyMap<string, HeaterModel>
+  readonly warmth: readonly SeatWarmth[]
+  readonly choice: ViewChoice
+  readonly scale: QuantityScale
+  readonly flux: FluxView
+  readonly cuts: readonly SectionCut[]
+  readonly pointed: PointedStore
+  readonly readOnly: boolean
+  readonly hold: boolean
+  readonly touch: boolean
+  /** Names, dimensions and section marks around the floor. */
+  readonly words: boolean
+  readonly coverTolerance: number | null
+  readonly onPlace: (at: Vec2, free: boolean) => void
+  readonly onSeat: (id: string) => void
+  /** Where the row of tools finds the verbs of the view. */
+  readonly viewingRef: RefObject<PlanViewing | null>
+}
+
+const pen = screenPen('dusk')
+const narrowMargins: PlanMargins = { top: 26, right: 28, bottom: 46, left: 28 }
+
+/** The plan to work on: pointer, wheel, fingers and keys; the map below, handles and the tag above. */
+export function PlanSurface(props: PlanSurfaceProps) {
+  const { state, dispatch, site, models, choice, scale, flux, readOnly, hold, touch, pointed } = props
+  const box = useRef<HTMLDivElement>(null)
+  const svg = useRef<SVGSVGElement>(null)
+  const moving = useRef<SVGGElement>(null)
+  const [marquee, setMarquee] = useState<readonly [Vec2, Vec2] | null>(null)
+  const size = useSize(box, { width: 1000, height: 528 })
+  const viewing = usePlanView(site, size, props.words ? workingMargins : narrowMargins, moving)
+  const { view } = viewing
+  const layout = shownLayout(state)
+  const kept = state.history.present
+  const plane = planeHeight(choice.plane, site)
+  const emitters = useMemo(() => emittersOf(layout, models), [layout, models])
+  const selected = useMemo(() => new Set(state.selected), [state.selected])
+  const say = (metres: number) => formatLength(metres, site.displayUnits)
+  const gestures = usePlanGestures(svg, {
+    start: { site, models, layout: kept, plane, say },
+    selected: state.selected,
+    readOnly,
+    hold,
+    placing: state.placing !== null,
+    viewing,
+    dispatch,
+    onPlace: props.onPlace,
+    onSeat: props.onSeat,
+    onMarquee: setMarquee,
+    onPoint: (event, at, screen) =>
+      pointed.set(event.pointerType === 'touch' ? null : { at, screen, seatId: null, by: 'pointer' }),
+  })
+  const keys = usePlanKeys({
+    layout: kept,
+    selected: state.selected,
+    site,
+    models,
+    readOnly,
+    dispatch,
+    onLetGo: gestures.dropGesture,
+    onEnlarge: (factor) => viewing.enlargeAt(factor),
+    onWholePlan: viewing.showAll,
+    onSeat: props.onSeat,
+  })
+  useImperativeHandle(props.viewingRef, () => viewing)
+  useWheel(box, viewing)
+
+  const lead = layout.heaters.find((heater) => heater.id === state.selected[0])
+  const onFocus = (event: FocusEvent<SVGSVGElement>) => {
+    const id = event.target.getAttribute('data-object')
+    const seat = site.seats.find((each) => each.id === id)
+    const heater = layout.heaters.find((each) => each.id === id)
+    const place = seat ?? heater
+    if (!place || !event.target.matches(':focus-visible')) return
+    const at: Vec2 = [place.x, place.y]
+    pointed.set({ at, screen: toScreen(viewing.wanted(), at), seatId: seat?.id ?? null, by: 'focus' })
+  }
+  const onPointerDown = (event: ReactPointerEvent<SVGSVGElement>) => {
+    gestures.onPointerDown(event)
+    const object = event.target instanceof Element ? event.target.closest<SVGGElement>('[data-object]') : null
+    const focusable = object ?? svg.current
+    focusable?.focus({ preventScroll: true })
+  }
+  return (
+    <div ref={box} className="relative min-h-0 flex-1 overflow-hidden bg-dusk-ground select-none">
+      <svg
+        ref={svg}
+        width={view.width}
+        height={view.height}
+        viewBox={`0 0 ${view.width} ${view.height}`}
+        tabIndex={-1}
+        role="group"
+        aria-label={`Plan of ${site.name}`}
+        className={`absolute inset-0 touch-none outline-none ${state.placing ? 'cursor-copy' : ''}`}
+        onPointerDown={onPointerDown}
+        onPointerMove={gestures.onPointerMove}
+        onPointerUp={gestures.onPointerUp}
+        onPointerCancel={gestures.onPointerCancel}
+        onPointerLeave={() => pointed.set(null)}
+        onKeyDown={keys.onKeyDown}
+        onKeyUp={keys.onKeyUp}
+        onFocus={onFocus}
+        onBlur={() => {
+          keys.onBlur()
+          pointed.set(null)
+        }}
+      >
+        <g ref={moving}>
+          <PlanMarks
+            {...{ site, layout, kept, models, view, pen, scale, selected, readOnly }}
+            warmth={props.warmth}
+            answer={flux.answer}
+            seatId={state.seatId}
+            cuts={props.cuts}
+            fluxUnit={choice.fluxUnit}
+            words={props.words}
+            label={`${scale.name} at ${say(plane)} above the floor`}
+          />
+          {state.draft && <HoldLines lines={state.draft.lines} view={view} />}
+          {marquee && <Marquee corners={marquee} view={view} />}
+          {lead && !readOnly && state.selected.length === 1 && (
+            <PlanHandles heater={lead} model={models.get(lead.model)} view={view} plane={plane} touch={touch} />
+          )}
+        </g>
+        {props.words && <PlanScaleBar view={view} pen={pen} units={site.displayUnits} />}
+      </svg>
+      <ReadOut
+        store={pointed}
+        {...{ site, emitters, plane, scale }}
+        answer={flux.answer}
+        mapKind={choice.map.kind}
+        fluxUnit={choice.fluxUnit}
+        width={view.width}
+        height={view.height}
+        coverTolerance={props.coverTolerance}
+      />
+      <PlanNotes {...{ state, site, flux, touch }} />
+    </div>
+  )
+}
+
+/** Wheel and trackpad: a wheel and a pinch enlarge about the pointer, two fingers shift. */
+function useWheel(box: RefObject<HTMLDivElement | null>, viewing: PlanViewing) {
+  const latest = useRef(viewing)
+  useEffect(() => {
+    latest.current = viewing
+  })
+  useEffect(() => {
+    const element = box.current
+    if (!element) return
+    const onWheel = (event: WheelEvent) => {
+      event.preventDefault()
+      const { left, top } = element.getBoundingClientRect()
+      const at: Vec2 = [event.clientX - left, event.clientY - top]
+      const unit = event.deltaMode === 1 ? 16 : 1
+      const fromWheel = event.deltaX === 0 && Math.abs(event.deltaY * unit) >= 40
+      if (event.ctrlKey) return latest.current.enlargeAt(Math.exp(-event.deltaY * unit * 0.01), at)
+      if (fromWheel) return latest.current.enlargeAt(Math.exp(-event.deltaY * unit * 0.0015), at)
+      latest.current.shiftBy(-event.deltaX * unit, -event.deltaY * unit)
+    }
+    element.addEventListener('wheel', onWheel, { passive: false })
+    return () => element.removeEventListener('wheel', onWheel)
+  }, [box])
+}
+
+interface PlanNotesProps {
+  readonly state: EditorState
+  readonly site: Site
+  readonly flux: FluxView
+  readonly touch: boolean
+}
+
+/** Lines over the plan: why something stands where it stands, an empty layout, a map that is slow or cannot be made. */
+function PlanNotes({ state, site, flux, touch }: PlanNotesProps) {
+  const layout = shownLayout(state)
+  const lead = layout.heaters.find((heater) => heater.id === state.selected[0])
+  const say = (metres: number) => formatLength(metres, site.displayUnits)
+  const reason = state.draft?.reason
+  return (
+    <div className="pointer-events-none absolute inset-x-0 top-2 flex flex-col items-center gap-1.5 px-4 text-center">
+      {state.draft && lead && (
+        <p className="rounded-sm bg-[#fbf7f0] px-2 py-1 text-xs text-[#1d2233]">
+          <b className="font-strong">
+            {lead.id} at {say(lead.x)}, {say(lead.y)}
+          </b>
+          {reason && ` ${reason}${touch ? '' : ' Alt lets go.'}`}
+        </p>
+      )}
+      {layout.heaters.length === 0 && (
+        <p className="mt-6 text-base text-dusk-line">No heaters yet. Place one on a beam to see the map.</p>
+      )}
+      <MapNote flux={flux} />
+    </div>
+  )
+}
+
+function MapNote({ flux }: { flux: FluxView }) {
+  const said = {
+    broken: 'No map: it could not be computed on this device. The seats’ figures are exact.',
+    slow: 'The map is being computed.',
+    stopped: 'The map was stopped. The seats’ figures are exact.',
+  }
+  if (flux.state !== 'broken' && flux.state !== 'slow' && flux.state !== 'stopped') return null
+  const [word, act] = flux.state === 'slow' ? ['Cancel', flux.stop] : ['Try again', flux.retry]
+  return (
+    <p role="status" className="pointer-events-auto rounded-sm bg-[#fbf7f0] px-2 py-1 text-xs text-[#1d2233]">
+      {said[flux.state]}{' '}
+      <button type="button" onClick={act} className="min-h-6 cursor-pointer underline pointer-coarse:min-h-11">
+        {word}
+      </button>
+    </p>
+  )
+}

@@ -1,0 +1,237 @@
+import { useCallback, useEffect, useMemo, useRef, useState } from 'react'
+import type { Brief } from '#app/domain/brief/brief.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { Layout } from '#app/domain/layout/layout.ts'
+import type { Site } from '#app/domain/site/site.ts'
+import { IconButton } from '#app/components/button.tsx'
+import { JobFrame, type Viewer } from '#app/components/page-frame.tsx'
+import { SaveState } from '#app/components/status.tsx'
+import { shownLayout } from '#app/editor/editor-state.ts'
+import type { KeptLayout, Keeping } from '#app/editor/keeping.ts'
+import { emittersOf, mapQuestion, scaleOf } from '#app/editor/map-questions.ts'
+import { FiguresRow } from '#app/editor/panels/figures-row.tsx'
+import { ConflictPanel } from '#app/editor/panels/conflict-panel.tsx'
+import { ToolRow } from '#app/editor/panels/tool-row.tsx'
+import { VariantTabs, type VariantTab } from '#app/editor/panels/variant-tabs.tsx'
+import { PlanSurface } from '#app/editor/plan-surface.tsx'
+import { pointedStore } from '#app/editor/pointed.ts'
+import { SidePanels, type SideSubject } from '#app/editor/side-panels.tsx'
+import { statusOf, useAutosave } from '#app/editor/use-autosave.ts'
+import { useEditor } from '#app/editor/use-editor.ts'
+import { useFigures } from '#app/editor/use-figures.ts'
+import { useFlux } from '#app/editor/use-flux.ts'
+import { useMedia, useRoom } from '#app/editor/use-media.ts'
+import type { PlanViewing } from '#app/editor/use-plan-view.ts'
+import { plainView, planeHeight } from '#app/editor/view-choice.ts'
+
+/** Everything the variant page brings to its editor. */
+export interface VariantEditorProps {
+  readonly viewer: Viewer
+  readonly job: { readonly id: string; readonly name: string }
+  readonly variantId: string
+  readonly variants: readonly VariantTab[]
+  readonly initial: KeptLayout
+  /** The server's newest as far as the page has heard. */
+  readonly newest: KeptLayout
+  readonly site: Site
+  readonly brief: Brief
+  readonly catalogue: readonly HeaterModel[]
+  readonly readOnly: boolean
+  readonly keeping: Keeping
+  readonly onCreate: () => void
+  readonly onDuplicate: () => void
+  readonly onDelete: (revision: number) => void
+  /** Makes a variant of its own from this layout. */
+  readonly onMake: (layout: Layout) => Promise<boolean>
+}
+
+/** The variant page: figures, plan, findings and seats of one layout, and the hand that changes it. */
+export function VariantEditor(props: VariantEditorProps) {
+  const { site, brief, catalogue, initial, newest, keeping } = props
+  const room = useRoom()
+  const touch = useMedia('(pointer: coarse)')
+  const readOnly = props.readOnly || room === 'phone'
+  const editor = useEditor({ site, brief, catalogue, initial: initial.layout })
+  const { state, dispatch, models } = editor
+  const kept = state.history.present
+  const layout = shownLayout(state)
+  const [choice, setChoice] = useState(plainView)
+  const [hold, setHold] = useState(true)
+  const [explained, setExplained] = useState<string | null>(null)
+  const [placing, setPlacing] = useState(false)
+  const [pointed] = useState(pointedStore)
+  const viewing = useRef<PlanViewing>(null)
+
+  const onTaken = useCallback(
+    (taken: Layout, said: string) => dispatch({ type: 'edit', layout: taken, said }),
+    [dispatch],
+  )
+  const { autosave, state: save } = useAutosave({
+    initial,
+    newest,
+    layout: kept,
+    keeping,
+    readOnly: props.readOnly,
+    onTaken,
+  })
+
+  const figures = useFigures({ site, brief, layout, models, shade: choice.shade })
+  const scale = useMemo(() => scaleOf(choice, brief, site.displayUnits), [choice, brief, site])
+  const moving = state.draft !== null
+  const question = useMemo(
+    () => mapQuestion({ site, brief, layout, models, choice }, scale, moving ? 'coarse' : 'sharp'),
+    [site, brief, layout, models, choice, scale, moving],
+  )
+  const flux = useFlux(question, state.dropped)
+  const emitters = useMemo(() => emittersOf(layout, models), [layout, models])
+  const onSeat = useCallback((id: string | null) => dispatch({ type: 'seat', id }), [dispatch])
+  const explain = useCallback(
+    (id: string) => {
+      setExplained(id)
+      dispatch({ type: 'seat', id })
+    },
+    [dispatch],
+  )
+  useUndoKeys(editor.dispatch, readOnly)
+
+  const subject: SideSubject = {
+    editor,
+    figures,
+    layout,
+    site,
+    brief,
+    catalogue,
+    choice,
+    readOnly,
+    hold,
+    onHold: setHold,
+    explained,
+    onExplain: setExplained,
+    placing,
+    onPlacing: setPlacing,
+    onSeat,
+  }
+  const legend = {
+    scale,
+    store: pointed,
+    site,
+    emitters,
+    plane: planeHeight(choice.plane, site),
+    answer: flux.answer,
+    isFlux: choice.map.kind === 'flux',
+  }
+  return (
+    <JobFrame
+      viewer={props.viewer}
+      job={props.job}
+      current="variants"
+      bare
+      below={
+        <VariantTabs
+          variants={props.variants}
+          currentId={props.variantId}
+          title={kept.title}
+          readOnly={readOnly}
+          onCreate={props.onCreate}
+          onDuplicate={props.onDuplicate}
+          onRename={(title) => editor.edit({ ...kept, title }, state.selected, 'Renamed')}
+          onDelete={() => props.onDelete(autosave.revision())}
+        />
+      }
+      tools={
+        <>
+          <SaveState status={statusOf(save, props.readOnly)} onRetry={autosave.retry} />
+          {!readOnly && (
+            <span className="flex">
+              <IconButton
+                icon="undo"
+                label="Undo"
+                disabled={state.history.past.length === 0}
+                onClick={() => dispatch({ type: 'undo' })}
+              />
+              <IconButton
+                icon="redo"
+                label="Redo"
+                disabled={state.history.future.length === 0}
+                onClick={() => dispatch({ type: 'redo' })}
+              />
+            </span>
+          )}
+        </>
+      }
+    >
+      <h1 className="sr-only">
+        {kept.title}, a variant of {props.job.name}
+      </h1>
+      <p role="status" className="sr-only">
+        {state.said}
+      </p>
+      <div className="flex min-h-0 flex-1 flex-col desk:h-[calc(100dvh-5.8125rem)] desk:flex-none desk:flex-row">
+        <div className="flex min-h-0 min-w-0 flex-1 flex-col">
+          {save.kind === 'conflict' && (
+            <ConflictPanel
+              conflict={save.conflict}
+              units={site.displayUnits}
+              onSettle={(settled) => {
+                editor.edit(settled, state.selected, 'Saved together')
+                autosave.settle(settled)
+              }}
+              onTwoVariants={async () => {
+                const { mine, theirs } = save.conflict
+                if (!(await props.onMake({ ...mine, title: `${mine.title.slice(0, 108)} (yours)` }))) return
+                editor.edit(theirs.layout, [], 'Two variants made')
+                autosave.settle(theirs.layout)
+              }}
+            />
+          )}
+          <FiguresRow
+            totals={figures.totals}
+            warmth={figures.warmth}
+            brief={brief}
+            units={site.displayUnits}
+            fluxUnit={choice.fluxUnit}
+            onExplain={explain}
+          />
+          <ToolRow
+            {...{ site, layout, choice, viewing, readOnly, legend }}
+            selected={state.selected}
+            onChoice={setChoice}
+            placing={placing}
+            onPlacing={() => {
+              setPlacing(!placing)
+              if (placing) dispatch({ type: 'placing', model: null })
+            }}
+          />
+          <PlanSurface
+            {...{ state, dispatch, site, models, choice, scale, flux, readOnly, hold, touch, pointed }}
+            warmth={figures.warmth}
+            cuts={[]}
+            words={room === 'desk'}
+            coverTolerance={null}
+            onPlace={editor.placeAt}
+            onSeat={explain}
+            viewingRef={viewing}
+          />
+        </div>
+        <SidePanels subject={subject} room={room} />
+      </div>
+    </JobFrame>
+  )
+}
+
+/** Ctrl or Cmd with Z and Y anywhere on the page that is not a field. */
+function useUndoKeys(dispatch: ReturnType<typeof useEditor>['dispatch'], readOnly: boolean) {
+  useEffect(() => {
+    if (readOnly) return
+    const onKeyDown = (event: KeyboardEvent) => {
+      if (!(event.ctrlKey || event.metaKey) || event.defaultPrevented) return
+      if (event.target instanceof Element && event.target.closest('input, textarea, select, dialog')) return
+      const key = event.key.toLowerCase()
+      if (key !== 'z' && key !== 'y') return
+      event.preventDefault()
+      dispatch({ type: key === 'y' || event.shiftKey ? 'redo' : 'undo' })
+    }
+    window.addEventListener('keydown', onKeyDown)
+    return () => window.removeEventListener('keydown', onKeyDown)
+  }, [dispatch, readOnly])
+}

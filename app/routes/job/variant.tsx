@@ -1,0 +1,172 @@
+import { useMemo } from 'react'
+import { data, useNavigate, type ShouldRevalidateFunctionArgs } from 'react-router'
+import useSWR, { type KeyedMutator } from 'swr'
+import { z } from 'zod'
+import { can } from '#app/domain/access/roles.ts'
+import { layoutSchema } from '#app/domain/layout/layout.ts'
+import { useToast } from '#app/components/toast.tsx'
+import type { DeviceCopy, KeptLayout, Keeping } from '#app/editor/keeping.ts'
+import { VariantEditor } from '#app/editor/variant-editor.tsx'
+import { requireJob } from '#app/server/data/jobs.server.ts'
+import { findLaidOut } from '#app/server/data/laid-out.server.ts'
+import { listVariants } from '#app/server/data/variants.server.ts'
+import { isId } from '#app/server/missing.server.ts'
+import { viewerOf } from '#app/server/viewer.server.ts'
+import type { Route } from './+types/variant'
+
+export const meta: Route.MetaFunction = ({ loaderData }) => [
+  { title: `${loaderData?.variant.title ?? 'Variant'}, ${loaderData?.job.name ?? 'job'} · Inglefield` },
+]
+
+export async function loader({ request, params }: Route.LoaderArgs) {
+  const job = await requireJob(request, params.jobId, 'view')
+  const { variantId } = params
+  const [laidOut, variants] = await Promise.all([
+    isId(variantId) ? findLaidOut({ id: variantId, member: job.member }) : null,
+    listVariants(job),
+  ])
+  if (laidOut?.variant.jobId !== job.id) throw data('No such variant', 404)
+  const { variant, site, brief, models } = laidOut
+  return {
+    viewer: viewerOf(job.member),
+    job: { id: job.id, name: job.name },
+    variant: { id: variant.id, title: variant.title, revision: variant.revision, heaters: variant.heaters },
+    variants: variants.map(({ id, number, title }) => ({ id, number, title, href: `/jobs/${job.id}/variants/${id}` })),
+    site,
+    brief,
+    catalogue: [...models.values()],
+    readOnly: !can(job.member.role, 'edit-layout'),
+  }
+}
+
+/** The page saves by itself: only another variant is loaded anew. */
+export const shouldRevalidate = ({ currentParams, nextParams }: ShouldRevalidateFunctionArgs): boolean =>
+  currentParams['variantId'] !== nextParams['variantId']
+
+export default function VariantPage({ loaderData }: Route.ComponentProps) {
+  return <KeptVariant key={loaderData.variant.id} {...loaderData} />
+}
+
+const variantSchema = z.object({ id: z.string(), revision: z.int(), ...layoutSchema.shape })
+type KeptVariant = z.infer<typeof variantSchema>
+const refusalSchema = z.object({ error: z.string(), current: z.unknown().optional() })
+
+const keptLayout = ({ revision, title, heaters }: KeptVariant): KeptLayout => ({
+  revision,
+  layout: { title, heaters },
+})
+
+async function findKept(url: string): Promise<KeptVariant> {
+  const response = await fetch(url)
+  if (!response.ok) throw new Error(`${response.status}`)
+  return variantSchema.parse(await response.json())
+}
+
+function KeptVariant({ variant, variants, job, ...rest }: Route.ComponentProps['loaderData']) {
+  const navigate = useNavigate()
+  const toast = useToast()
+  const url = `/api/variants/${variant.id}`
+  const { data: kept = variant, mutate } = useSWR(url, findKept, {
+    fallbackData: variant,
+    revalidateOnMount: false,
+    revalidateIfStale: false,
+  })
+  const keeping = useMemo(() => keepingAt(url, mutate), [url, mutate])
+  const initial = useMemo(() => keptLayout(variant), [variant])
+  const newest = useMemo(() => keptLayout(kept), [kept])
+  const make = async (body: object) => {
+    const made = await send('POST', `/api/jobs/${job.id}/variants`, body)
+    if (!made) toast({ text: 'No variant made: no connection. Nothing was lost.' })
+    return made ? variantSchema.parse(made) : null
+  }
+  const open = (id: string) => navigate(`/jobs/${job.id}/variants/${id}`)
+  const makeAndOpen = async (body: object) => {
+    const made = await make(body)
+    if (made) await open(made.id)
+  }
+  const remove = async (revision: number) => {
+    const next = variants.find(({ id }) => id !== variant.id)
+    const gone = next && (await send('DELETE', url, null, { 'If-Match': `"${revision}"` }))
+    if (!next || !gone) return toast({ text: 'Not deleted: it was changed meanwhile, or there is no connection.' })
+    await open(next.id)
+    const undo = async () => {
+      if (await send('POST', `${url}/restore`, { deleted: true })) await open(variant.id)
+    }
+    toast({ text: `Variant “${kept.title}” deleted`, action: { label: 'Undo', run: () => void undo() } })
+  }
+  return (
+    <VariantEditor
+      {...rest}
+      {...{ job, variants, initial, newest, keeping }}
+      variantId={variant.id}
+      onCreate={() => void makeAndOpen({ title: 'New layout' })}
+      onDuplicate={() => void makeAndOpen({ copyOf: variant.id })}
+      onDelete={(revision) => void remove(revision)}
+      onMake={async (layout) => (await make(layout)) !== null}
+    />
+  )
+}
+
+/** The answer of the API as it came; null without one that is good. */
+async function send(method: string, url: string, body: object | null, headers: Record<string, string> = {}) {
+  try {
+    const response = await fetch(url, {
+      method,
+      headers: { 'Content-Type': 'application/json', 'Idempotency-Key': crypto.randomUUID(), ...headers },
+      ...(body ? { body: JSON.stringify(body) } : {}),
+    })
+    if (!response.ok) return null
+    const json: unknown = await response.json()
+    return json
+  } catch {
+    return null
+  }
+}
+
+/** Keeps a layout at a URL of the API and, until it is there, on this device. */
+function keepingAt(url: string, mutate: KeyedMutator<KeptVariant>): Keeping {
+  const device = `unsaved:${url}`
+  return {
+    newSaveId: () => crypto.randomUUID(),
+    keepOnDevice: (copy) => keepOnDevice(device, copy),
+    findOnDevice: () => findOnDevice(device),
+    async save({ layout, revision, saveId }) {
+      const headers = { 'Content-Type': 'application/json', 'If-Match': `"${revision}"`, 'Idempotency-Key': saveId }
+      try {
+        const response = await fetch(url, { method: 'PUT', headers, body: JSON.stringify(layout) })
+        if (response.status >= 500) return { kind: 'unreachable' }
+        const json: unknown = await response.json()
+        if (response.ok) {
+          const saved = variantSchema.parse(json)
+          await mutate(saved, { revalidate: false })
+          return { kind: 'saved', revision: saved.revision }
+        }
+        const refusal = refusalSchema.parse(json)
+        if (response.status !== 412) return { kind: 'refused', reason: refusal.error }
+        return { kind: 'conflict', current: keptLayout(variantSchema.parse(refusal.current)), by: null, at: null }
+      } catch {
+        return { kind: 'unreachable' }
+      }
+    },
+  }
+}
+
+const keptLayoutSchema = z.object({ layout: layoutSchema, revision: z.int() })
+const deviceCopySchema = z.object({ base: keptLayoutSchema, layout: layoutSchema, changes: z.int() })
+
+function findOnDevice(key: string): DeviceCopy | null {
+  try {
+    return deviceCopySchema.parse(JSON.parse(localStorage.getItem(key) ?? 'null'))
+  } catch {
+    return null
+  }
+}
+
+function keepOnDevice(key: string, copy: DeviceCopy | null): void {
+  try {
+    if (copy) localStorage.setItem(key, JSON.stringify(copy))
+    else localStorage.removeItem(key)
+  } catch {
+    // A device that keeps nothing still saves to the server.
+  }
+}
