@@ -50,9 +50,10 @@ const altitudeSteps = 512
 function gridFor(question: MapQuestion, cache: MapCache): Grid {
   const asked = { floor: question.floor, z: question.z, cell: question.cell }
   if (cache.grid && sameData(cache.asked, asked)) return cache.grid
+  const grid = gridOf(question.floor, question.z, question.cell)
   cache.asked = asked
-  cache.grid = gridOf(question.floor, question.z, question.cell)
-  return cache.grid
+  cache.grid = grid
+  return grid
 }
 
 /** Mean projected area of a body over all facings, by the sine of the altitude of the radiation. */
@@ -129,8 +130,8 @@ export function answerMap(question: MapQuestion, cache: MapCache): MapAnswer {
   const values = new Float32Array(grid.columns * grid.rows)
   let peak = -Infinity
   for (let at = 0; at < values.length; at++) {
-    const value = grid.inside[at] === 1 ? valueAt(at) : NaN
-    values[at] = value
+    values[at] = grid.inside[at] === 1 ? valueAt(at) : NaN
+    const value = values[at] ?? NaN
     if (value > peak) peak = value
   }
   const errorBound = question.quantity.kind === 'feels-like' ? 0 : (cache.map?.cutOff.errorBound ?? 0)
