@@ -101,6 +101,12 @@ describe('saving a variant', () => {
     ).rejects.toThrow(/kept for good/)
   })
 
+  it('keeps lengths in whole tenths of a millimetre', async () => {
+    const { id } = await fresh()
+    const saved = await put({ id, match: 1, body: layout('T', { ...heater('H1', 1.234_56), y: -0.000_04 }) })
+    expect((await variantOf(saved)).heaters[0]).toMatchObject({ x: 1.2346, y: 0, lowestPoint: 2.4 })
+  })
+
   it('401 signed out, 403 by role, 404 unknown, foreign, deleted and not an id: before anything else', async () => {
     const { id } = await fresh()
     const bad = { body: { nonsense: true }, key: null }

@@ -1,5 +1,6 @@
 import { eq } from 'drizzle-orm'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
+import { roundLength } from '#app/domain/units.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
@@ -19,28 +20,42 @@ function listIds(site: Site): { path: (string | number)[]; id: string }[] {
   return kinds.flatMap((kind) => site[kind].map(({ id }, index) => ({ path: [kind, index, 'id'], id })))
 }
 
-/** A site that can be kept: ids once, members under covers that exist, a floor within the stated maximum. */
-export const savedSiteSchema = siteSchema.superRefine((site, context) => {
-  const refuse = (path: (string | number)[], message: string) => context.addIssue({ code: 'custom', path, message })
-  const seen = new Set<string>()
-  for (const { path, id } of listIds(site)) {
-    if (seen.has(id)) refuse(path, `The id ${id} is there twice.`)
-    seen.add(id)
-  }
-  const sides = [extent(site.floor.map(([x]) => x)), extent(site.floor.map(([, y]) => y))].toSorted((a, b) => b - a)
-  const [long = 0, short = 0] = sides
-  if (long > largestFloor.long || short > largestFloor.short) {
-    refuse(['floor'], `A floor is at most ${largestFloor.long} × ${largestFloor.short} m.`)
-  }
-  const covers = new Set(site.covers.map(({ id }) => id))
-  site.members.forEach(({ underside }, index) => {
-    if (!('follows' in underside) || covers.has(underside.follows)) return
-    refuse(['members', index, 'underside', 'follows'], `There is no cover ${underside.follows}.`)
+/** Every figure to four digits: lengths are kept to 0.1 mm. How far a size moves things stays exact. */
+function rounded(value: unknown, key = ''): unknown {
+  if (typeof value === 'number') return key === 'by' ? value : roundLength(value)
+  if (Array.isArray(value)) return value.map((inner) => rounded(inner))
+  if (typeof value !== 'object' || value === null) return value
+  return Object.fromEntries(Object.entries(value).map(([name, inner]) => [name, rounded(inner, name)]))
+}
+
+/**
+ * A site that can be kept: ids once, members under covers that exist, a floor within the stated maximum, lengths in
+ * whole tenths of a millimetre.
+ */
+export const savedSiteSchema = siteSchema
+  .superRefine((site, context) => {
+    const refuse = (path: (string | number)[], message: string) => context.addIssue({ code: 'custom', path, message })
+    const seen = new Set<string>()
+    for (const { path, id } of listIds(site)) {
+      if (seen.has(id)) refuse(path, `The id ${id} is there twice.`)
+      seen.add(id)
+    }
+    const sides = [extent(site.floor.map(([x]) => x)), extent(site.floor.map(([, y]) => y))].toSorted((a, b) => b - a)
+    const [long = 0, short = 0] = sides
+    if (long > largestFloor.long || short > largestFloor.short) {
+      refuse(['floor'], `A floor is at most ${largestFloor.long} × ${largestFloor.short} m.`)
+    }
+    const covers = new Set(site.covers.map(({ id }) => id))
+    site.members.forEach(({ underside }, index) => {
+      if (!('follows' in underside) || covers.has(underside.follows)) return
+      refuse(['members', index, 'underside', 'follows'], `There is no cover ${underside.follows}.`)
+    })
+    site.beyond.forEach(({ edge }, index) => {
+      if (edge >= site.floor.length) refuse(['beyond', index, 'edge'], `The floor has ${site.floor.length} edges.`)
+    })
   })
-  site.beyond.forEach(({ edge }, index) => {
-    if (edge >= site.floor.length) refuse(['beyond', index, 'edge'], `The floor has ${site.floor.length} edges.`)
-  })
-})
+  .transform((site) => rounded(site))
+  .pipe(siteSchema)
 
 /** A job's site and the revision it has. */
 export interface KeptSite {

@@ -1,5 +1,6 @@
 import { and, desc, eq, sql } from 'drizzle-orm'
 import { layoutSchema, type Layout } from '#app/domain/layout/layout.ts'
+import { roundLength } from '#app/domain/units.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { touchJob } from '#app/server/data/jobs.server.ts'
 import { present, variantColumns, variantOf, type OpenVariant } from '#app/server/data/variants.server.ts'
@@ -58,17 +59,26 @@ export const insertRevision = (
     .insert(variantRevisions)
     .values({ organisationId, variantId, revision, layout, contentHash: hash, authorId: userId })
 
-/** A layout that can be kept: every heater's id once. */
+/** A layout that can be kept: every heater's id once, lengths in whole tenths of a millimetre. */
 export const savedLayoutSchema = layoutSchema.extend({
-  heaters: layoutSchema.shape.heaters.superRefine((heaters, context) => {
-    const seen = new Set<string>()
-    heaters.forEach(({ id }, index) => {
-      if (seen.has(id)) {
-        context.addIssue({ code: 'custom', path: [index, 'id'], message: `The id ${id} is there twice.` })
-      }
-      seen.add(id)
+  heaters: layoutSchema.shape.heaters
+    .superRefine((heaters, context) => {
+      const seen = new Set<string>()
+      heaters.forEach(({ id }, index) => {
+        if (seen.has(id)) {
+          context.addIssue({ code: 'custom', path: [index, 'id'], message: `The id ${id} is there twice.` })
+        }
+        seen.add(id)
+      })
     })
-  }),
+    .transform((heaters) =>
+      heaters.map((heater) => ({
+        ...heater,
+        x: roundLength(heater.x),
+        y: roundLength(heater.y),
+        lowestPoint: roundLength(heater.lowestPoint),
+      })),
+    ),
 })
 
 /** Saves a variant's title and heaters by the one rule for saving. */
