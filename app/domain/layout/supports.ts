@@ -5,7 +5,7 @@ import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
 import { coverHeightAt } from '#app/domain/site/cover.ts'
 import { nearestOnSegment } from '#app/domain/site/geometry.ts'
-import { memberDirectionDeg, undersideAt } from '#app/domain/site/member.ts'
+import { undersideAt } from '#app/domain/site/member.ts'
 import type { Member, Site } from '#app/domain/site/site.ts'
 import { add, scale, type Vec2, type Vec3 } from '#app/domain/vector.ts'
 
@@ -99,12 +99,16 @@ function placesOf(site: Site, kind: SupportPlace['kind'], x: number, y: number):
   })
 }
 
-/** The suspension eyes of a body: on the back face over the element's axis, first the one against u; null when not stated. */
+/**
+ * The suspension eyes of a body: over the element's axis, at the height of the middle of its back, first the one against
+ * u; null when not stated. A tilted body turns about its axis, so its eyes stay over it in plan.
+ */
 export function suspensionEyes(body: Body, model: HeaterModel): readonly [Vec3, Vec3] | null {
   if (model.suspensionEyePitch === null) return null
-  const back = add(body.centre, scale(body.w, -body.half.w))
+  const [x, y, z] = body.centre
+  const over: Vec3 = [x, y, z - body.half.w * body.w[2]]
   const toEye = scale(body.u, model.suspensionEyePitch / 2)
-  return [add(back, scale(toEye, -1)), add(back, toEye)]
+  return [add(over, scale(toEye, -1)), add(over, toEye)]
 }
 
 /** How far a mount of this model may hold it from its support, m; null when its manual does not say. */
@@ -169,7 +173,7 @@ function carriedByEyes(
   if (supports.some(({ place }) => place?.to === null)) {
     return { ...carriedBy, outcome: 'cannot tell', reason: 'height not known' }
   }
-  const low = supports.some(({ eye, place }) => (place?.to ?? Infinity) < eye[2])
+  const low = supports.some(({ eye, place }) => (place?.to ?? Infinity) < eye[2] - closeEnough)
   return low
     ? { ...carriedBy, outcome: 'not held', reason: 'support too low' }
     : { ...carriedBy, outcome: 'held', reason: 'held' }
@@ -205,62 +209,8 @@ function carriedRigidly(heater: MountedHeater, body: Body, places: readonly Supp
   if (place.distance > none.reach + closeEnough) return { ...found, outcome: 'not held', reason: 'out of reach' }
   const carriedBy = { ...found, ids: [place.id] }
   if (place.to === null) return { ...carriedBy, outcome: 'cannot tell', reason: 'height not known' }
-  const low = place.kind === 'member' ? place.to < heater.lowestPoint : place.to < body.centre[2]
+  const low = place.to < (place.kind === 'member' ? heater.lowestPoint : body.centre[2]) - closeEnough
   return low
     ? { ...carriedBy, outcome: 'not held', reason: 'support too low' }
     : { ...carriedBy, outcome: 'held', reason: 'held' }
-}
-
-/** Lengths are kept to 0.1 mm. */
-const rounded = (metres: number): number => Math.round(metres * 1e4) / 1e4
-
-/** A bracket or clamp is moved to this share of its reach. */
-const shareOfReach = 0.75
-
-/**
- * The heater moved to the nearest thing that its mount can be fixed to, and naming it: under a member with its element
- * along it (level, when the mount cannot hold a tilt), in the middle of a bay, or beside a wall or pole at three quarters
- * of the reach. Null when the site has no such thing. Height stays.
- */
-export function movedToSupport(site: Site, heater: MountedHeater, model: HeaterModel): MountedHeater | null {
-  const [place] = supportPlaces(site, heater.mount, [heater.x, heater.y])
-  if (!place) return null
-  const tiltDeg = model.mountsThatHoldTilt.includes(heater.mount) ? heater.tiltDeg : 0
-  const moved = { ...heater, memberId: place.id, tiltDeg }
-  if (heater.mount === 'recess box') return movedIntoBay(site, moved, model)
-  if (place.kind !== 'member') return movedBeside(site, moved, place, reachOf(model, heater.mount) ?? 0)
-  const member = site.members.find(({ id }) => id === place.id)
-  const turnDeg = member ? parallelTurn(memberDirectionDeg(member), heater.turnDeg) : heater.turnDeg
-  return { ...moved, x: rounded(place.point[0]), y: rounded(place.point[1]), turnDeg }
-}
-
-/** The direction along an axis, or against it, that is nearer to a turn, degrees within ±180. */
-function parallelTurn(axisDeg: number, turnDeg: number): number {
-  const away = ((((turnDeg - axisDeg) % 180) + 270) % 180) - 90
-  const turn = turnDeg - away
-  return Math.round((((((turn + 180) % 360) + 360) % 360) - 180) * 1e4) / 1e4
-}
-
-function movedBeside(site: Site, heater: MountedHeater, place: SupportPlace, reach: number): MountedHeater {
-  const pole = site.poles.find(({ id }) => id === place.id)
-  const wanted = Math.min(place.distance, shareOfReach * reach) + (pole ? pole.diameter / 2 : 0)
-  const [dx, dy] = [heater.x - place.point[0], heater.y - place.point[1]]
-  const away = Math.hypot(dx, dy)
-  const [ux, uy] = away > 0 ? [dx / away, dy / away] : [1, 0]
-  return { ...heater, x: rounded(place.point[0] + ux * wanted), y: rounded(place.point[1] + uy * wanted) }
-}
-
-/** Into the middle of the bay it is in, square to its members; unchanged where there is no bay. */
-function movedIntoBay(site: Site, heater: MountedHeater, model: HeaterModel): MountedHeater | null {
-  const bay = bayOf(site, bodyOf(heater, model))
-  if (!bay?.left || !bay.right) return null
-  const across = (bay.left.clear - bay.right.clear) / 2
-  const { from, to, id } = bay.left.member
-  const length = Math.hypot(to[0] - from[0], to[1] - from[1]) || 1
-  return {
-    ...heater,
-    memberId: id,
-    x: rounded(heater.x - ((to[1] - from[1]) / length) * across),
-    y: rounded(heater.y + ((to[0] - from[0]) / length) * across),
-  }
 }

@@ -57,7 +57,7 @@ export function checkLayout(check: LayoutCheck): Finding[] {
   const { site, brief, layout, models } = check
   const emitters = layout.heaters.flatMap((heater) => {
     const model = models.get(heater.model)
-    return (model && emitterOf(heater, model)) ?? []
+    return (model && model.supplyOptions.length > 0 && emitterOf(heater, model)) || []
   })
   return inOrder([
     ...siteGiven(check),

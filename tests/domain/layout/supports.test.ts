@@ -1,0 +1,119 @@
+import { describe, expect, it } from 'vitest'
+import type { Mount } from '#app/domain/heaters/heater-model.ts'
+import { movedToSupport, railBetween } from '#app/domain/layout/support-remedies.ts'
+import { supportOf } from '#app/domain/layout/supports.ts'
+import type { Member, Site } from '#app/domain/site/site.ts'
+import { demoModels, demoSites } from '#drizzle/seed/demo-sites.ts'
+import { plainHeater, plainModel, plainSite } from '#tests/support/plain-site.ts'
+
+const site = plainSite()
+const model = plainModel()
+const beam = site.members[0]!
+const reasonOf = (changes: Parameters<typeof plainHeater>[0], on: Site = site, of = model) =>
+  supportOf(on, plainHeater(changes), of).reason
+const second: Member = { ...beam, id: 'second', name: 'second', from: [0, 2.448], to: [6, 2.448] }
+
+describe('chain', () => {
+  it('hangs plumb: up to 20 mm sideways of its member, no farther', () => {
+    expect(reasonOf({ y: 2.0199 })).toBe('held')
+    expect(reasonOf({ y: 2.02 })).toBe('held')
+    expect(reasonOf({ y: 2.0201 })).toBe('out of reach')
+  })
+
+  it('wants something above each eye', () => {
+    expect(reasonOf({ turnDeg: 90 })).toBe('an eye has no member')
+    // The eyes are 448 mm apart: a second member that far away carries the other one.
+    const both = plainSite({ members: [beam, second] })
+    const support = supportOf(both, plainHeater({ turnDeg: 90, y: 2.224 }), model)
+    expect([support.reason, support.ids]).toEqual(['held', ['beam', 'second']])
+  })
+
+  it('cannot hold a tilt about its own axis; drop rods can', () => {
+    expect(reasonOf({ tiltDeg: 10 })).toBe('tilt not held')
+    expect(reasonOf({ tiltDeg: 10, mount: 'drop rods' })).toBe('held')
+  })
+
+  it('takes the nearest member when none is named, and says so when another is named', () => {
+    expect(reasonOf({ memberId: null })).toBe('held')
+    expect(reasonOf({ memberId: 'second' }, plainSite({ members: [beam, second] }))).toBe('out of reach')
+    expect(reasonOf({ memberId: 'gone' })).toBe('held')
+  })
+
+  it('cannot hang from what is lower, nor be told where a height is not known', () => {
+    expect(reasonOf({ lowestPoint: 2.895 })).toBe('held')
+    expect(reasonOf({ lowestPoint: 2.896 })).toBe('support too low')
+    expect(reasonOf({}, plainSite({ covers: [] }))).toBe('height not known')
+    expect(reasonOf({}, site, plainModel({ suspensionEyePitch: null }))).toBe('eyes not stated')
+  })
+})
+
+describe('rigid mounts', () => {
+  const wall = { id: 'wall', name: 'wall', from: [0, 0] as [number, number], to: [6, 0] as [number, number], top: 2.6, material: 'non-combustible' as const, loadStatus: 'sound' } // prettier-ignore
+  const pole = { id: 'pole', name: 'pole', at: [3, 3] as [number, number], top: 2.9, diameter: 0.06, material: 'non-combustible' as const, loadStatus: 'new' } // prettier-ignore
+  const around = plainSite({ walls: [wall], poles: [pole] })
+  const at = (mount: Mount, memberId: string, y: number, more = {}) => reasonOf({ mount, memberId, y, ...more }, around)
+
+  it('reach from a wall as far as the manual says, below its top', () => {
+    expect(at('wall bracket', 'wall', 0.25)).toBe('held')
+    expect(at('wall bracket', 'wall', 0.2501)).toBe('out of reach')
+    expect(at('wall bracket', 'wall', 0.2, { lowestPoint: 2.6 })).toBe('support too low')
+  })
+
+  it('reach from the surface of a pole', () => {
+    expect(at('pole clamp', 'pole', 3 - 0.03 - 0.2)).toBe('held')
+    expect(at('pole clamp', 'pole', 3 - 0.03 - 0.2001)).toBe('out of reach')
+  })
+
+  it('cannot be told without a stated reach, nor held without the thing', () => {
+    expect(at('ceiling bracket', 'beam', 2)).toBe('reach not stated')
+    expect(reasonOf({ mount: 'pole clamp' })).toBe('nothing to fix to')
+  })
+})
+
+describe('the two remedies', () => {
+  it('moves a heater under the nearest member, along it and level, and it is then held', () => {
+    const heater = plainHeater({ x: 2.5, y: 3.1, turnDeg: 100, tiltDeg: 15, memberId: null })
+    const moved = movedToSupport(site, heater, model)!
+    expect(moved).toMatchObject({ x: 2.5, y: 2, turnDeg: 180, tiltDeg: 0, memberId: 'beam', lowestPoint: 2.3 })
+    expect(supportOf(site, moved, model).outcome).toBe('held')
+  })
+
+  it('keeps the tilt that a mount can hold', () => {
+    const rods = plainHeater({ y: 3, tiltDeg: 15, turnDeg: 20, mount: 'drop rods' })
+    expect(movedToSupport(site, rods, model)).toMatchObject({ tiltDeg: 15, turnDeg: 0 })
+  })
+
+  it.each(['A', 'B', 'C'] as const)('gives every unsupported heater of site %s a place that holds it', (key) => {
+    const demo = demoSites().find((found) => found.key === key)!
+    const models = new Map(demoModels().map((found) => [found.code, found]))
+    for (const { layout } of demo.variants)
+      for (const heater of layout.heaters) {
+        const of = models.get(heater.model)!
+        if (supportOf(demo.site, heater, of).outcome !== 'not held') continue
+        const moved = movedToSupport(demo.site, heater, of)!
+        expect(supportOf(demo.site, moved, of)).toMatchObject({ outcome: 'held', reason: 'held' })
+      }
+  })
+
+  it('has nowhere to move to on a site without members', () => {
+    expect(movedToSupport(plainSite({ members: [] }), plainHeater(), model)).toBeNull()
+    expect(railBetween(site, plainHeater({ y: 3 }))).toBeNull()
+  })
+
+  it('proposes a rail between two members, its underside straight between theirs', () => {
+    const { site: terrace, variants } = demoSites().find(({ key }) => key === 'A')!
+    const rail = railBetween(terrace, variants[0]!.layout.heaters[0]!)!
+    // Roof at y = 2.70 of 5.40 m: half way from 3.30 to 2.75 m.
+    expect(rail).toMatchObject({ from: [0, 2.7], to: [2.64, 2.7], underside: { from: 3.025, to: 3.025 } })
+    expect(rail.allowedPointLoad).toBeNull()
+    const railed = { ...terrace, members: [...terrace.members, rail] }
+    const heater = { ...variants[0]!.layout.heaters[0]!, lowestPoint: 2.4 }
+    expect(
+      supportOf(
+        railed,
+        heater,
+        demoModels().find(({ code }) => code === heater.model)!,
+      ).outcome,
+    ).toBe('held')
+  })
+})
