@@ -47,3 +47,12 @@ export async function ensureDatabase(admin: Client, database: string): Promise<v
   await admin.query(`revoke all on database ${quoted} from public`)
   await admin.query(`grant connect on database ${quoted} to inglefield_owner, inglefield_auth, inglefield_app`)
 }
+
+/** One row: whether the connected role is one that row-level security does not bind. */
+export const roleDangerQuery = `select r.rolsuper or r.rolbypassrls
+    or exists (select 1 from pg_class c where c.relowner = r.oid and c.relkind = 'r') as dangerous
+  from pg_roles r where r.rolname = current_user`
+
+/** What is said of such a role. */
+export const roleDanger =
+  'DATABASE_URL names a role that is a superuser, bypasses row-level security or owns tables. Give the application its own role.'

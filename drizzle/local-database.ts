@@ -47,12 +47,13 @@ function portOf(kind: ClusterKind): number {
   return kind === 'data' ? base : base + 1
 }
 
-/** Where the cluster lives: in the checkout, unless the server's account cannot walk there. */
+/** Where the cluster lives: in the data folder, unless the server's account cannot walk there. */
 function folderOf(kind: ClusterKind): string {
   const name = kind === 'data' ? 'pg' : 'pg-test'
-  mkdirSync(path.join(checkout, '.data'), { recursive: true, mode: 0o755 })
-  if (!isRoot || runAsServer('test', ['-x', path.join(checkout, '.data')]).ok) return path.join(checkout, '.data', name)
-  const digest = createHash('sha1').update(checkout).digest('hex').slice(0, 12)
+  const data = path.resolve(checkout, (kind === 'data' && process.env.DATA_FOLDER) || '.data')
+  mkdirSync(data, { recursive: true, mode: 0o755 })
+  if (!isRoot || runAsServer('test', ['-x', data]).ok) return path.join(data, name)
+  const digest = createHash('sha1').update(data).digest('hex').slice(0, 12)
   return path.join('/var/lib/postgresql', `inglefield-${digest}-${name}`)
 }
 

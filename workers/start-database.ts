@@ -1,6 +1,7 @@
+import path from 'node:path'
 import { setTimeout as wait } from 'node:timers/promises'
 import { Client } from 'pg'
-import type { DatabaseUrls } from '#drizzle/database-roles.ts'
+import { type DatabaseUrls, roleDanger, roleDangerQuery } from '#drizzle/database-roles.ts'
 import { startLocalDatabase, stopLocalDatabase, withAdmin } from '#drizzle/local-database.ts'
 import { migrateDatabase } from '#drizzle/migrate.ts'
 import { StartProblem } from '#drizzle/postgres-binaries.ts'
@@ -93,6 +94,11 @@ async function localDatabase(): Promise<PreparedDatabase> {
   }
 }
 
+async function refuseDangerousRole(appUrl: string): Promise<void> {
+  const found = await withAdmin(appUrl, (application) => application.query(roleDangerQuery))
+  if (found.rows[0]?.dangerous !== false) throw new StartProblem(roleDanger)
+}
+
 /**
  * Makes sure that the database is there and up to date. The demonstration goes into an empty database, and only where
  * nobody else can reach it.
@@ -101,7 +107,8 @@ export async function prepareDatabase(options: { demo: boolean }): Promise<Prepa
   const urls = givenUrls()
   const database = urls ? { urls, secret: null, release: () => Promise.resolve() } : await localDatabase()
   try {
-    await withStartLock('.data/prepare.lock', async () => {
+    await refuseDangerousRole(database.urls.app)
+    await withStartLock(path.join(process.env.DATA_FOLDER || '.data', 'prepare.lock'), async () => {
       await migrateDatabase(database.urls.owner)
       if (options.demo && (await seedDemo(database.urls))) console.log('The demonstration was added.')
     })

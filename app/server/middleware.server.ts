@@ -30,7 +30,7 @@ const protect: MiddlewareFunction<Response> = async ({ context }, next) => {
   const nonce = randomBytes(18).toString('base64')
   context.set(nonceContext, env.NODE_ENV === 'development' ? undefined : nonce)
   const response = await next()
-  protectResponse(response.headers, nonce)
+  protectResponse(response, nonce)
   return response
 }
 

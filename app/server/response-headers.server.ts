@@ -31,9 +31,10 @@ const always = {
 }
 
 /** Adds what every answer carries; a route that set its own policy or its own caching keeps it. */
-export function protectResponse(headers: Headers, nonce: string): void {
+export function protectResponse({ status, headers }: Response, nonce: string): void {
   for (const [name, value] of Object.entries(always)) headers.set(name, value)
   if (env.PUBLIC_ORIGIN.startsWith('https:')) headers.set('Strict-Transport-Security', 'max-age=31536000')
   if (!headers.has('Content-Security-Policy')) headers.set('Content-Security-Policy', contentPolicy(nonce))
+  if (status === 503) headers.set('Retry-After', '5')
   if (!headers.has('Cache-Control')) headers.set('Cache-Control', 'private, no-store')
 }

@@ -97,9 +97,8 @@ function isApi(request: Request): boolean {
 }
 
 function refusal(request: Request, status: number, error: string): Response {
-  const headers: HeadersInit = status === 503 ? { 'Retry-After': '5' } : {}
-  if (isApi(request)) return Response.json({ error, path: '' }, { status, headers })
-  return new Response(error, { status, headers, statusText: error })
+  if (isApi(request)) return Response.json({ error, path: '' }, { status })
+  return new Response(error, { status, statusText: error })
 }
 
 /** Where the person wanted to go, as the address bar shows it. */
