@@ -119,7 +119,8 @@ function fluxMapFor(question: MapQuestion, grid: Grid, cache: MapCache): FluxMap
 }
 
 /**
- * Answers a question about the map: values on a grid over the floor, NaN outside it, and their fills and isolines. The
+ * Answers a question about the map: values on a grid over the floor, NaN outside it, and their fills and isolines (none
+ * are traced when neither levels nor edges are asked for). The
  * cache is kept by the asker's worker and changed in place. Throws a RangeError for a floor, height, cell size or
  * emitter without meaning, and on a page's main thread.
  */
@@ -135,6 +136,9 @@ export function answerMap(question: MapQuestion, cache: MapCache): MapAnswer {
     if (value > peak) peak = value
   }
   const errorBound = question.quantity.kind === 'feels-like' ? 0 : (cache.map?.cutOff.errorBound ?? 0)
-  const picture = contoursOf(values, grid, question.levels, question.edges)
+  const isPlain = question.levels.length === 0 && question.edges?.length === 0
+  const picture = isPlain
+    ? { bands: [], lines: [], peaks: [] }
+    : contoursOf(values, grid, question.levels, question.edges, question.written)
   return { grid, values, peak: peak === -Infinity ? null : peak, errorBound, picture }
 }

@@ -5,6 +5,7 @@ import { dimensionText, floorDimension, toleratedText } from '#app/drawing/plan/
 import { extentOf, type PlanView } from '#app/drawing/plan/plan-view.ts'
 import { wallCorners } from '#app/drawing/plan/wall.tsx'
 import type { Pen } from '#app/drawing/pen.ts'
+import { textWidth } from '#app/drawing/text/widths.ts'
 
 /** Across a row heaters within this distance count as one row, m. */
 const rowWidth = 0.15
@@ -38,7 +39,7 @@ export function PlanDimensions({
   view,
   pen,
   overall = true,
-  edges = true,
+  narrowEnds = 'beside',
   upright = true,
 }: {
   site: Site
@@ -48,8 +49,8 @@ export function PlanDimensions({
   pen: Pen
   /** Whether the floor's whole length and depth are drawn as well. */
   overall?: boolean
-  /** Whether the chain starts and ends at the floor's edges. */
-  edges?: boolean
+  /** What happens at the floor's edges where the figure has no room: it stands beside the chain, or both are left out. */
+  narrowEnds?: 'beside' | 'left out'
   /** Whether the chain along y is drawn. */
   upright?: boolean
 }) {
@@ -59,16 +60,23 @@ export function PlanDimensions({
   const text = (metres: number) => dimensionText(metres, site.displayUnits)
   const onX = (metres: number): ChainStop => ({ px: view.x0 + view.scale * metres, metres })
   const onY = (metres: number): ChainStop => ({ px: view.y0 - view.scale * metres, metres })
-  const stopsX = stopsOf(rowOf(heaters, 0, selected), x, edges).map(onX)
-  const stopsY = stopsOf(rowOf(heaters, 1, selected), y, edges)
-    .map(onY)
-    .reverse()
+  const chain = (axis: 0 | 1, ends: readonly [number, number]): number[] => {
+    const stops = stopsOf(rowOf(heaters, axis, selected), ends)
+    const hasRoom = (a = 0, b = 0) => textWidth(text(b - a), pen.text, 500) + 6 * pen.k <= (b - a) * view.scale
+    if (narrowEnds === 'beside') return stops
+    return stops.filter((_, i) => {
+      if (i === 0) return hasRoom(stops[0], stops[1])
+      return i < stops.length - 1 || hasRoom(stops[i - 1], stops[i])
+    })
+  }
+  const stopsX = chain(0, x).map(onX)
+  const stopsY = chain(1, y).map(onY).reverse()
   const whole = (axis: 0 | 1, metres: number): string => {
     const dimension = floorDimension(site, axis, metres)
     return dimension ? toleratedText(dimension, metres, site.displayUnits) : text(metres)
   }
-  const hasChainX = stopsX.length > 2 || (!edges && stopsX.length === 2)
-  const hasChainY = stopsY.length > 2
+  const hasChainX = heaters.length > 0 && stopsX.length > 1
+  const hasChainY = heaters.length > 0 && stopsY.length > 1
   const isCrowded = stopsX.some(
     (stop, i) => i > 1 && i < stopsX.length - 1 && stop.px - (stopsX[i - 1]?.px ?? 0) < 34 * pen.k,
   )
@@ -108,8 +116,7 @@ export function lowestPx(site: Site, view: PlanView): number {
   return Math.max(floor, ...site.walls.flatMap((wall) => wallCorners(wall, view).map((corner) => corner[1])))
 }
 
-function stopsOf(row: readonly number[], [low, high]: readonly [number, number], edges: boolean): number[] {
-  if (!edges) return [...row]
+function stopsOf(row: readonly number[], [low, high]: readonly [number, number]): number[] {
   const inner = row.filter((place) => place > low + 0.01 && place < high - 0.01)
   return [low, ...inner, high]
 }

@@ -4,7 +4,7 @@ import type { Pen } from '#app/drawing/pen.ts'
 import { textWidth } from '#app/drawing/text/widths.ts'
 import { Words } from '#app/drawing/text/words.tsx'
 
-/** A table to scale with its name where that fits inside. */
+/** A table to scale with its name where that fits inside; by day without a fill, so that the heat under it can be read. */
 export function TableMark({ table, view, pen }: { table: Table; view: PlanView; pen: Pen }) {
   const [x, y] = toScreen(view, table.centre)
   const width = table.size[0] * view.scale
@@ -20,8 +20,8 @@ export function TableMark({ table, view, pen }: { table: Table; view: PlanView; 
         height={height}
         rx={0.07 * view.scale}
         transform={table.turnDeg ? `rotate(${-table.turnDeg} ${x} ${y})` : undefined}
-        fill={pen.colours.ground}
-        fillOpacity={pen.theme === 'dusk' ? 0.22 : 0.35}
+        fill={pen.theme === 'dusk' ? pen.colours.ground : 'none'}
+        fillOpacity={pen.theme === 'dusk' ? 0.22 : undefined}
         stroke={pen.colours.line}
         strokeWidth={0.8 * pen.k}
         opacity={0.9}

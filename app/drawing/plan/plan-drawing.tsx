@@ -29,7 +29,8 @@ import { Words } from '#app/drawing/text/words.tsx'
 export interface PlanDetail {
   /** Names of members, walls, obstacles and of what lies beyond. */
   readonly names: boolean
-  readonly spacings: boolean
+  /** Spacings along a row; 'level' leaves out the chain along y and ends that have no room for their figure. */
+  readonly spacings: boolean | 'level'
   /** Whole length and depth of the floor. */
   readonly overall: boolean
   readonly scaleBar: boolean
@@ -104,7 +105,13 @@ export function Plan(props: PlanProps) {
         />
       ))}
       {detail.spacings ? (
-        <PlanDimensions {...{ site, selected, view, pen }} heaters={layout.heaters} overall={detail.overall} />
+        <PlanDimensions
+          {...{ site, selected, view, pen }}
+          heaters={layout.heaters}
+          overall={detail.overall}
+          upright={detail.spacings !== 'level'}
+          narrowEnds={detail.spacings === 'level' ? 'left out' : 'beside'}
+        />
       ) : null}
       {detail.names ? <PlanNames {...{ site, layout, models, view, pen, withFigure, cuts }} /> : null}
       {cuts.map((cut) => (

@@ -118,11 +118,22 @@ export function WarmthStrokes({ x, y, r, word, pen }: { x: number; y: number; r:
             y1={rounded(y - r * 0.42)}
             y2={rounded(y + r * 0.42)}
             stroke={pen.colours.figure}
-            strokeWidth={Math.max(1.2, r * 0.16)}
+            strokeWidth={Math.max(1, r * 0.16)}
             strokeLinecap="round"
           />
         )
       })}
+    </>
+  )
+}
+
+/** A small disc with the strokes of a word, for rows and keys; cold has a dashed ring, warm and hot a double one. */
+export function WarmthDisc({ x, y, r, word, pen }: { x: number; y: number; r: number; word: WarmthWord; pen: Pen }) {
+  const outcome = word === 'cold' ? 'below' : word === 'warm' || word === 'hot' ? 'above' : 'in target'
+  return (
+    <>
+      <SeatRing x={x} y={y} r={r} outcome={outcome} pen={{ ...pen, k: pen.k * 0.75 }} />
+      <WarmthStrokes x={x} y={y} r={r} word={word} pen={pen} />
     </>
   )
 }

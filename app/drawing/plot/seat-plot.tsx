@@ -4,6 +4,7 @@ import type { Target } from '#app/drawing/heat/scale.ts'
 import { VariantMark, type VariantMarkKind } from '#app/drawing/plot/variant-mark.tsx'
 import { groupsOf, type PlotSeat, type SeatGroup } from '#app/drawing/plot/seat-groups.ts'
 import type { Pen } from '#app/drawing/pen.ts'
+import { WarmthDisc, type WarmthWord } from '#app/drawing/plan/seat.tsx'
 import { fontFamily } from '#app/drawing/theme.ts'
 import { textWidth } from '#app/drawing/text/widths.ts'
 import { Words } from '#app/drawing/text/words.tsx'
@@ -31,6 +32,8 @@ export interface PlotSeries {
   readonly mark: VariantMarkKind
   readonly label: string
   readonly values: readonly (number | null)[]
+  /** Each seat's warmth in a word of the seven-point scale, drawn as strokes below the plot; absent: not shown. */
+  readonly words?: readonly (WarmthWord | null)[]
 }
 
 /** Each seat as a column with a mark per variant over the target band. */
@@ -61,7 +64,8 @@ export function SeatPlot(props: SeatPlotProps) {
   const format = props.format ?? whole
   const left = x + 30 * pen.k
   const right = x + width - 76 * pen.k
-  const bottom = y + height - 34 * pen.k
+  const worded = series.filter(({ words }) => words !== undefined)
+  const bottom = y + height - (34 + wordRow * worded.length) * pen.k
   const top = plotTop(series)
   const up = scaleLinear().domain([0, top]).range([bottom, y])
   const column = (right - left) / Math.max(1, seats.length)
@@ -73,10 +77,46 @@ export function SeatPlot(props: SeatPlotProps) {
         <ZonePatterns name={name} pen={pen} />
       </defs>
       <PlotGround {...frame} name={name} target={target} top={top} />
-      <PlotColumns {...frame} groups={groupsOf(seats)} seats={seats} />
+      {worded.map((one, row) => (
+        <WordRow key={one.mark} {...frame} series={one} y={bottom + (row + 0.72) * wordRow * pen.k} />
+      ))}
+      <PlotColumns {...frame} groups={groupsOf(seats)} seats={seats} below={worded.length * wordRow * pen.k} />
       {seats.map((seat, i) => (
         <SeatMarks key={seat.id} {...{ series, pen, ink, up, column }} i={i} x={along(i)} />
       ))}
+    </g>
+  )
+}
+
+/** Height of a row of strokes, px at weight 1. */
+const wordRow = 14
+
+/** One variant's words as strokes below the plot, its mark at the left. */
+function WordRow({ series, y, left, along, column, pen, ink }: Frame & { series: PlotSeries }) {
+  return (
+    <g>
+      <VariantMark
+        kind={series.mark}
+        x={left - 12 * pen.k}
+        y={y}
+        r={4 * pen.k}
+        pen={pen}
+        ink={ink.ink}
+        paper={ink.paper}
+        ember={ink.ember}
+      />
+      {(series.words ?? []).map((word, i) =>
+        word === null ? null : (
+          <WarmthDisc
+            key={i}
+            x={along(i)}
+            y={y}
+            r={Math.min(5.2 * pen.k, column * 0.42)}
+            word={word}
+            pen={{ ...pen, colours: { ...pen.colours, figure: ink.ink, line: ink.ink, seat: ink.paper } }}
+          />
+        ),
+      )}
     </g>
   )
 }
@@ -191,7 +231,8 @@ function PlotColumns({
   along,
   pen,
   ink,
-}: Frame & { groups: readonly SeatGroup[]; seats: readonly PlotSeat[] }) {
+  below,
+}: Frame & { groups: readonly SeatGroup[]; seats: readonly PlotSeat[]; below: number }) {
   const hasNumbers = seats.every((seat) => textWidth(seat.number, pen.text, 400) + 2 < column)
   return (
     <>
@@ -201,7 +242,7 @@ function PlotColumns({
           x1={left + group.from * column}
           x2={left + group.from * column}
           y1={y}
-          y2={bottom + 7 * pen.k}
+          y2={bottom + below + 7 * pen.k}
           stroke={group.isNewRow ? ink.quiet : ink.rule}
           strokeWidth={(group.isNewRow ? 1.5 : 0.8) * pen.k}
         />
@@ -212,7 +253,7 @@ function PlotColumns({
             <Words
               key={seat.id}
               x={along(i)}
-              y={bottom + 6 * pen.k + pen.text}
+              y={bottom + below + 6 * pen.k + pen.text}
               anchor="middle"
               size={pen.text}
               weight={400}
@@ -227,7 +268,7 @@ function PlotColumns({
           <Words
             key={group.name}
             x={left + (group.from + group.count / 2) * column}
-            y={bottom + (hasNumbers ? 12 : 7) * pen.k + (hasNumbers ? 2 : 1) * pen.text}
+            y={bottom + below + (hasNumbers ? 12 : 7) * pen.k + (hasNumbers ? 2 : 1) * pen.text}
             anchor="middle"
             size={pen.text}
             weight={600}

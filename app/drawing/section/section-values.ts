@@ -57,7 +57,7 @@ export interface SectionPicture extends HeatPicture {
 }
 
 /** Fills and isolines of a section's field. */
-export function sectionPicture(field: SectionField, quantity: QuantityScale): SectionPicture {
+export function sectionPicture(field: SectionField, quantity: Pick<QuantityScale, 'levels' | 'edges'>): SectionPicture {
   const picture = contoursOf(
     field.values.map(logarithm),
     field.grid,

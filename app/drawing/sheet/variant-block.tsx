@@ -1,0 +1,137 @@
+import type { Brief } from '#app/domain/brief/brief.ts'
+import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { Site } from '#app/domain/site/site.ts'
+import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
+import { printPen } from '#app/drawing/pen.ts'
+import { Plan, type PlanDetail } from '#app/drawing/plan/plan-drawing.tsx'
+import type { SeatSign } from '#app/drawing/plan/seat.tsx'
+import { sheetInk } from '#app/drawing/plot/seat-plot.tsx'
+import { VariantMark, type VariantMarkKind } from '#app/drawing/plot/variant-mark.tsx'
+import type { SheetVariant } from '#app/drawing/sheet/sheet-facts.ts'
+import type { Box, VariantBox } from '#app/drawing/sheet/sheet-layout.ts'
+import { sheetFigures, type SheetFigure } from '#app/drawing/sheet/sheet-words.ts'
+import { clippedText, textWidth } from '#app/drawing/text/widths.ts'
+import { Words } from '#app/drawing/text/words.tsx'
+
+const detail: PlanDetail = { names: false, spacings: 'level', overall: false, scaleBar: false, lineFigures: true }
+
+/** What each seat's disc says: its irradiance on the body plane and its ring; empty without a figure. */
+export function seatSigns(
+  warmth: readonly SeatWarmth[],
+  format: (irradiance: number) => string,
+): ReadonlyMap<string, SeatSign> {
+  return new Map(
+    warmth.map(({ seat, body, target }): [string, SeatSign] => [
+      seat.id,
+      { kind: 'figure', text: body === null ? '–' : format(body), outcome: target },
+    ]),
+  )
+}
+
+/** One variant on the sheet: its heading, its plan to scale, its figures. */
+export function VariantBlock({
+  variant,
+  box,
+  site,
+  brief,
+  models,
+  quantity,
+  mark,
+  tight,
+}: {
+  variant: SheetVariant
+  box: VariantBox
+  site: Site
+  brief: Brief
+  models: ReadonlyMap<string, HeaterModel>
+  quantity: QuantityScale
+  mark: VariantMarkKind
+  /** Figures in one row of small words. */
+  tight: boolean
+}) {
+  const figures = sheetFigures(variant.warmth, variant.totals, brief, site.displayUnits, variant.priceWithTax ?? null)
+  return (
+    <g>
+      <VariantHeading box={box.heading} variant={variant} mark={mark} />
+      <svg x={box.plan.x} y={box.plan.y} width={box.plan.width} height={box.plan.height}>
+        <Plan
+          name={`sheet-${variant.number}`}
+          {...{ site, models, quantity, detail }}
+          layout={variant.layout}
+          view={box.view}
+          pen={printPen}
+          picture={variant.picture}
+          signs={seatSigns(variant.warmth, quantity.format)}
+        />
+      </svg>
+      <FigureRow box={box.figures} figures={figures} tight={tight} />
+    </g>
+  )
+}
+
+function VariantHeading({ box, variant, mark }: { box: Box; variant: SheetVariant; mark: VariantMarkKind }) {
+  const base = box.y + 17
+  const name = `Variant ${variant.number}`
+  const left = box.x + 20
+  const titleAt = left + textWidth(name, 10.5, 600) + 8
+  return (
+    <>
+      <line x1={box.x} x2={box.x + box.width} y1={box.y} y2={box.y} stroke={sheetInk.ink} strokeWidth={1.1} />
+      <VariantMark kind={mark} x={box.x + 7} y={base - 3.8} r={5} pen={printPen} />
+      <Words x={left} y={base} size={10.5} weight={600} colour={sheetInk.ink}>
+        {name}
+      </Words>
+      <Words x={titleAt} y={base} size={10.5} weight={400} colour={sheetInk.ink}>
+        {clippedText(variant.title, box.x + box.width - titleAt, 10.5, 400)}
+      </Words>
+    </>
+  )
+}
+
+/** Widths of the columns of a row of figures: as each needs, the rest shared out. */
+function columnsOf(figures: readonly SheetFigure[], width: number, small: number, large: number): number[] {
+  const needed = figures.map(({ name, lines }) =>
+    Math.max(textWidth(name, small, 400), ...lines.map((line) => textWidth(line, large, 600))),
+  )
+  const spare = (width - needed.reduce((sum, one) => sum + one, 0)) / figures.length
+  return needed.map((one) => one + spare)
+}
+
+function FigureRow({ box, figures, tight }: { box: Box; figures: readonly SheetFigure[]; tight: boolean }) {
+  const large = tight ? 8 : 9.2
+  const small = tight ? 7.2 : 7.8
+  const widths = columnsOf(figures, box.width, small, large)
+  const bottom = box.y + box.height - 2
+  return (
+    <>
+      <line x1={box.x} x2={box.x + box.width} y1={box.y} y2={box.y} stroke={sheetInk.rule} strokeWidth={0.9} />
+      <line x1={box.x} x2={box.x + box.width} y1={bottom} y2={bottom} stroke={sheetInk.rule} strokeWidth={0.9} />
+      {figures.map(({ name, lines }, i) => {
+        const x = box.x + widths.slice(0, i).reduce((sum, one) => sum + one, 0) + (i === 0 ? 0 : 8)
+        return (
+          <g key={name}>
+            {i === 0 ? null : (
+              <line x1={x - 8} x2={x - 8} y1={box.y} y2={bottom} stroke={sheetInk.rule} strokeWidth={0.9} />
+            )}
+            <Words x={x} y={box.y + (tight ? 9 : 13)} size={small} weight={400} colour={sheetInk.quiet}>
+              {name}
+            </Words>
+            {lines.map((line, row) => (
+              <Words
+                key={line}
+                x={x}
+                y={box.y + (tight ? 19 : 26) + row * (tight ? 10 : 13)}
+                size={large}
+                weight={600}
+                colour={sheetInk.ink}
+              >
+                {line}
+              </Words>
+            ))}
+          </g>
+        )
+      })}
+    </>
+  )
+}
