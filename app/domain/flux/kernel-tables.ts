@@ -31,21 +31,43 @@ export interface CosineTables {
   readonly solidAngle: number
 }
 
-const cosineTables = new WeakMap<Beam, CosineTables>()
+/** A beam of cosines. */
+type CosineBeam = Extract<Beam, { kind: 'cosine' }>
 
-/** The tables of cos^a α · cos^b β, made once per beam. */
-export function cosineTablesOf(beam: Extract<Beam, { kind: 'cosine' }>): CosineTables {
-  const known = cosineTables.get(beam)
-  if (known) return known
-  const made = {
-    across: pairsOf(acrossEntries, (i) => (i / acrossEntries) ** beam.across),
-    along: pairsOf(lastEntry, (i) => {
-      const q = i / entriesPerUnit - farthest
+function makeCosineTables(beam: CosineBeam, perUnit: number, acrossCount: number): CosineTables {
+  return {
+    across: pairsOf(acrossCount, (i) => (i / acrossCount) ** beam.across),
+    along: pairsOf(2 * farthest * perUnit, (i) => {
+      const q = i / perUnit - farthest
       return q === 0 ? 0 : Math.sign(q) * cosineStretch(beam.along, 1, 0, Math.abs(q)).cosine
     }),
     solidAngle: solidAngleOf(beam),
   }
+}
+
+const cosineTables = new WeakMap<Beam, CosineTables>()
+
+/** The tables of cos^a α · cos^b β, made once per beam. */
+export function cosineTablesOf(beam: CosineBeam): CosineTables {
+  const known = cosineTables.get(beam)
+  if (known) return known
+  const made = makeCosineTables(beam, entriesPerUnit, acrossEntries)
   cosineTables.set(beam, made)
+  return made
+}
+
+/** Entries of the finer tables for single points, where 1e-4 of the value is asked for. */
+export const fineEntriesPerUnit = 512
+export const fineAcrossEntries = 8192
+
+const fineTables = new WeakMap<Beam, CosineTables>()
+
+/** The same, finer. */
+export function fineTablesOf(beam: CosineBeam): CosineTables {
+  const known = fineTables.get(beam)
+  if (known) return known
+  const made = makeCosineTables(beam, fineEntriesPerUnit, fineAcrossEntries)
+  fineTables.set(beam, made)
   return made
 }
 

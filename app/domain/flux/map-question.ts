@@ -32,6 +32,8 @@ export interface MapQuestion {
   readonly levels: readonly number[]
   /** Lower edges of the fill's bands; absent: those of the irradiance scale. */
   readonly edges?: readonly number[]
+  /** Levels whose figure may stand on the line; absent: all. */
+  readonly written?: readonly number[]
   /** Absent: nothing stands in the way. */
   readonly obstructions?: readonly Obstruction[]
 }

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { cutOffFor, farBound } from '#app/domain/flux/cut-off.ts'
+import { cutOffFor, farBound, farSourceOf } from '#app/domain/flux/cut-off.ts'
 import { emitterOf, type Emitter } from '#app/domain/flux/emitter.ts'
 import { gridOf } from '#app/domain/flux/grid.ts'
 import { irradianceAt } from '#app/domain/flux/irradiance.ts'
@@ -39,21 +39,23 @@ const heaters: Emitter[] = Array.from({ length: 100 }, (_, i) => {
 describe('the bound on what is left out', () => {
   it.each([0, 25, 60, -80])('is never passed by one heater tilted %d°, anywhere beyond the distance', (tiltDeg) => {
     const emitter = line(cosine(1.9, 1.3), { at: [0, 0, 2.5], tiltDeg, turnDeg: 20, length: 1.1, power: 2500 })
+    const source = farSourceOf(emitter, 0.6)!
+    const [left, right] = [-Math.sin(Math.PI / 9), Math.cos(Math.PI / 9)]
     for (const distance of [4, 8, 12]) {
-      const bound = farBound(emitter, 0.6, distance)
       for (let turn = 0; turn < 360; turn += 5) {
+        const angle = (turn * Math.PI) / 180
         for (const further of [0, 0.5, 3, 10]) {
-          const r = distance + further
-          const angle = (turn * Math.PI) / 180
-          const e = irradianceAt(emitter, [r * Math.cos(angle), r * Math.sin(angle), 0.6], [0, 0, 1])
-          expect(e).toBeLessThanOrEqual(bound)
+          const [x, y] = [(distance + further) * Math.cos(angle), (distance + further) * Math.sin(angle)]
+          const side = (x * left + y * right) * (tiltDeg < 0 ? -1 : 1)
+          expect(irradianceAt(emitter, [x, y, 0.6], [0, 0, 1])).toBeLessThanOrEqual(farBound(source, distance, side))
         }
       }
     }
   })
 
   it('falls with distance', () => {
-    const bounds = [2, 4, 8, 16].map((distance) => farBound(heaters[0]!, 0.6, distance))
+    const source = farSourceOf(heaters[1]!, 0.6)!
+    const bounds = [2, 4, 8, 16].map((distance) => farBound(source, distance, distance))
     expect(bounds).toEqual(bounds.toSorted((a, b) => b - a))
   })
 })
