@@ -66,15 +66,19 @@ function rememberedHeat(source: Source, seat: Seat): ElementHeat {
   return made
 }
 
-/** Heat of every source at one seat; unshaded unless obstructions are given. */
+/**
+ * Heat of every source at one seat; unshaded unless obstructions are given. With `remember`, what it reckons is kept for
+ * the next call with the same objects, about 0.7 kB per element and seat.
+ */
 export function heatAtSeat(
   seat: Seat,
   sources: readonly Source[],
   obstructions: readonly Obstruction[] = [],
+  remember = false,
 ): SeatHeat {
   const shaded = obstructions.length > 0
   const heats = sources.map((source) =>
-    shaded ? elementHeat(source, seat, obstructions) : rememberedHeat(source, seat),
+    remember && !shaded ? rememberedHeat(source, seat) : elementHeat(source, seat, obstructions),
   )
   const emitters = sources.map(({ emitter }) => emitter)
   const largest = (point: Vec3, fluxes: readonly (NetFlux | null)[]) =>

@@ -118,13 +118,16 @@ export function seatWarmth(input: WarmthInput): SeatWarmth[] {
   return input.site.seats.map((seat) => warmthOfSeat(seat, sources, input).warmth)
 }
 
+/** Elements × seats up to which a layout's heat is kept between calls: 70 MB. */
+const mostRemembered = 100_000
+
 /** The figures of one seat and, from the same call, what each element gives to them. */
 export function warmthOfSeat(
   seat: Seat,
   { sources, cannotTell }: Sources,
   { site, brief, obstructions }: WarmthInput,
 ): { readonly warmth: SeatWarmth; readonly heat: SeatHeat } {
-  const heat = heatAtSeat(seat, sources, obstructions)
+  const heat = heatAtSeat(seat, sources, obstructions, sources.length * site.seats.length <= mostRemembered)
   const told = (parts: readonly number[] | undefined) => (sources.length > 0 && parts ? sum(parts) : null)
   const [body, headHorizontal, field] = [told(heat.body), told(heat.headHorizontal), told(heat.field)]
   const surroundings = surroundingsAt(seat, site, brief)

@@ -1,5 +1,5 @@
 import { feelsLikePerField } from '#app/domain/comfort/feels-like.ts'
-import type { SeatHeat } from '#app/domain/comfort/seat-heat.ts'
+import { headPoint, heatAtSeat, type SeatHeat } from '#app/domain/comfort/seat-heat.ts'
 import {
   conditionsAt,
   warmthOfSeat,
@@ -8,6 +8,7 @@ import {
   type WindName,
 } from '#app/domain/comfort/seat-warmth.ts'
 import { sourcesOf, type Source } from '#app/domain/comfort/sources.ts'
+import { irradianceAt } from '#app/domain/flux/irradiance.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
@@ -56,6 +57,9 @@ export interface FigureTolerance {
 /** Step of the central differences, m: their error is of the order of (step / distance)². */
 const step = 1e-3
 
+/** A seat's figures and what each element gives to them. */
+type SeatFigures = ReturnType<typeof warmthOfSeat>
+
 /** The figure itself; null without heaters that can be told. */
 export function figureOf(warmth: SeatWarmth, figure: SeatFigure): number | null {
   if (figure.quantity === 'feels-like') return warmth.feelsLike[figure.wind].after
@@ -87,7 +91,7 @@ export function seatTolerance(
   if (figureOf(warmth, figure) === null) return null
   const parts = figureParts(warmth, heat, figure, input)
   const shares = [
-    ...input.layout.heaters.flatMap((heater) => placeShares(heater, input, seat, figure, tolerances)),
+    ...input.layout.heaters.flatMap((heater) => placeShares(heater, input, { warmth, heat }, figure, tolerances)),
     ...seatShares(input, seat, figure, tolerances),
     ...supplyShares(input, all.sources, parts, tolerances),
   ]
@@ -100,22 +104,34 @@ function slope(figureWith: (delta: number) => number | null): number {
   return ((figureWith(step) ?? 0) - (figureWith(-step) ?? 0)) / (2 * step)
 }
 
+/** What one heater gives to the figure. At the head in the direction that is largest for all: to first order it stays. */
+function heaterPart(
+  heater: MountedHeater,
+  input: WarmthInput,
+  { warmth, heat }: SeatFigures,
+  figure: SeatFigure,
+): number {
+  const { sources } = sourcesOf({ heaters: [heater] }, input.models)
+  const point = headPoint(warmth.seat)
+  const parts =
+    figure.quantity === 'head'
+      ? sources.map(({ emitter }) => irradianceAt(emitter, point, heat.head.direction, input.obstructions))
+      : figureParts(warmth, heatAtSeat(warmth.seat, sources, input.obstructions), figure, input)
+  return parts.reduce((sum, part) => sum + part, 0)
+}
+
 function placeShares(
   heater: MountedHeater,
   input: WarmthInput,
-  seat: Seat,
+  figures: SeatFigures,
   figure: SeatFigure,
   tolerances: FluxTolerances,
 ): ToleranceShare[] {
-  const figureWith = (moved: MountedHeater) => {
-    const heaters = input.layout.heaters.map((each) => (each === heater ? moved : each))
-    return figureOf(warmthOfSeat(seat, sourcesOf({ heaters }, input.models), input).warmth, figure)
-  }
   const share = (of: string, tolerance: number, moved: (delta: number) => MountedHeater): ToleranceShare => ({
     of: `${heater.id} ${of}`,
     tolerance,
     unit: 'm',
-    change: slope((delta) => figureWith(moved(delta))) * tolerance,
+    change: slope((delta) => heaterPart(moved(delta), input, figures, figure)) * tolerance,
   })
   return [
     share('x', tolerances.heaterPosition, (delta) => ({ ...heater, x: heater.x + delta })),

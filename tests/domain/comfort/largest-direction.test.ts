@@ -55,6 +55,22 @@ describe('largest irradiance at a head from kept fluxes', () => {
     )
   })
 
+  it('loses no more than 0.1 % where many far heaters are left to the last climb', () => {
+    const many = Array.from({ length: 90 }, (_, i) =>
+      heater(`H${i}`, {
+        x: ((i % 10) - 4.3) * 3,
+        y: (Math.floor(i / 10) - 4.2) * 3,
+        turnDeg: i * 37,
+        tiltDeg: (i % 7) * 12,
+      }),
+    )
+    for (let i = 0; i < 20; i++) {
+      const { kept, searched, onPlane } = bothWays(many, seat('S1', { x: i * 0.6 - 6, y: 5 - i * 0.45 }))
+      expect(kept / searched).toBeGreaterThan(0.999)
+      expect(Math.abs(kept / onPlane - 1)).toBeLessThan(1e-9)
+    }
+  })
+
   it('between two facing wall heaters is what one of them gives, not their sum', () => {
     const facing = [
       heater('H1', { x: -2, turnDeg: -90, tiltDeg: 90, lowestPoint: 1.0 }),
