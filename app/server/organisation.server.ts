@@ -1,4 +1,4 @@
-import { sql } from 'drizzle-orm'
+import { type AnyColumn, eq, sql, type SQL } from 'drizzle-orm'
 import { appDatabase } from '#app/server/db.server.ts'
 import { refuseDangerousRole } from '#app/server/database-role.server.ts'
 
@@ -15,4 +15,12 @@ export async function asOrganisation<T>(organisationId: string, work: (tx: Trans
     await tx.execute(sql`select set_config('app.org', ${organisationId}, true)`)
     return work(tx)
   })
+}
+
+/**
+ * The rows of the transaction's organisation. Every read and write names it, so the application alone already keeps
+ * organisations apart; row-level security does it again.
+ */
+export function own(table: { organisationId: AnyColumn }): SQL {
+  return eq(table.organisationId, sql`nullif(current_setting('app.org', true), '')::uuid`)
 }

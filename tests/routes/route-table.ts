@@ -38,6 +38,7 @@ export const reachOf: Record<string, Reach> = {
   '/api/variants/:variantId': { GET: 'view', PUT: 'edit-layout', DELETE: 'edit-layout' },
   '/api/variants/:variantId/restore': { POST: 'edit-layout' },
   '/api/variants/:variantId/revisions': { GET: 'view' },
+  '/api/variants/:variantId/thumbnail.svg': { GET: 'view' },
   '/api/variants/:variantId/seats.csv': { GET: 'export' },
   '/api/variants/:variantId/seats/:seatId/explain': { GET: 'view' },
   '/api/heaters': { GET: 'view' },

@@ -1,9 +1,9 @@
-import { eq } from 'drizzle-orm'
+import { and, eq } from 'drizzle-orm'
 import { briefSchema, type Brief } from '#app/domain/brief/brief.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
-import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
+import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import { saveRevision, type Revisioned, type Save } from '#app/server/saving.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { briefRevisions, briefs, jobs } from '#drizzle/schema.ts'
@@ -15,7 +15,10 @@ export interface KeptBrief {
 }
 
 async function readBrief(tx: Transaction, jobId: string, lock: boolean): Promise<KeptBrief | null> {
-  const asked = tx.select({ revision: briefs.revision, body: briefs.body }).from(briefs).where(eq(briefs.jobId, jobId))
+  const asked = tx
+    .select({ revision: briefs.revision, body: briefs.body })
+    .from(briefs)
+    .where(and(own(briefs), eq(briefs.jobId, jobId)))
   const [row] = lock ? await asked.for('update') : await asked
   return row ? { revision: row.revision, brief: briefSchema.parse(row.body) } : null
 }
@@ -45,11 +48,14 @@ const briefOf = ({ id: jobId, member }: OpenJob): Revisioned<Brief> => ({
     await tx
       .update(briefs)
       .set({ revision, body: brief, updatedAt: new Date(), updatedBy: userId })
-      .where(eq(briefs.jobId, jobId))
+      .where(and(own(briefs), eq(briefs.jobId, jobId)))
     await tx
       .insert(briefRevisions)
       .values({ organisationId, jobId, revision, body: brief, contentHash: hash, authorId: userId })
-    await tx.update(jobs).set({ place: brief.place }).where(eq(jobs.id, jobId))
+    await tx
+      .update(jobs)
+      .set({ place: brief.place })
+      .where(and(own(jobs), eq(jobs.id, jobId)))
     await touchJob(tx, jobId)
     return { revision, brief }
   },

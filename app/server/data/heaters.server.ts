@@ -1,11 +1,15 @@
 import { asc } from 'drizzle-orm'
 import { heaterModelSchema, type HeaterModel } from '#app/domain/heaters/heater-model.ts'
-import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
+import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { heaterModels } from '#drizzle/schema.ts'
 
 async function readModels(tx: Transaction): Promise<HeaterModel[]> {
-  const rows = await tx.select({ body: heaterModels.body }).from(heaterModels).orderBy(asc(heaterModels.code))
+  const rows = await tx
+    .select({ body: heaterModels.body })
+    .from(heaterModels)
+    .where(own(heaterModels))
+    .orderBy(asc(heaterModels.code))
   return rows.map(({ body }) => heaterModelSchema.parse(body))
 }
 

@@ -1,7 +1,7 @@
-import { desc, eq, isNull, sql } from 'drizzle-orm'
+import { and, desc, eq, isNull, sql } from 'drizzle-orm'
 import { z } from 'zod'
 import { stageSchema } from '#app/domain/job/stage.ts'
-import { asOrganisation } from '#app/server/organisation.server.ts'
+import { asOrganisation, own } from '#app/server/organisation.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { briefs, jobs, sites, variants } from '#drizzle/schema.ts'
 
@@ -33,7 +33,7 @@ export function listJobOverviews(member: Member): Promise<JobOverview[]> {
           ${variants.title}, 'revision', ${variants.revision}) order by ${variants.number})`.as('list'),
       })
       .from(variants)
-      .where(isNull(variants.deletedAt))
+      .where(and(own(variants), isNull(variants.deletedAt)))
       .groupBy(variants.jobId)
       .as('of_job')
     const rows = await tx
@@ -50,9 +50,10 @@ export function listJobOverviews(member: Member): Promise<JobOverview[]> {
         variants: sql`coalesce(${ofJob.list}, '[]')`,
       })
       .from(jobs)
-      .leftJoin(sites, eq(sites.jobId, jobs.id))
-      .leftJoin(briefs, eq(briefs.jobId, jobs.id))
+      .leftJoin(sites, and(own(sites), eq(sites.jobId, jobs.id)))
+      .leftJoin(briefs, and(own(briefs), eq(briefs.jobId, jobs.id)))
       .leftJoin(ofJob, eq(ofJob.jobId, jobs.id))
+      .where(own(jobs))
       .orderBy(desc(jobs.updatedAt), jobs.id)
     return overviewSchema.array().parse(rows)
   })

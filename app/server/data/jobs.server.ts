@@ -1,8 +1,8 @@
-import { desc, eq, isNull, sql } from 'drizzle-orm'
+import { and, desc, eq, isNull, sql } from 'drizzle-orm'
 import type { Action } from '#app/domain/access/roles.ts'
 import type { Stage } from '#app/domain/job/stage.ts'
 import { isId, missing } from '#app/server/missing.server.ts'
-import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
+import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import { requireMay, type Member } from '#app/server/session.server.ts'
 import { jobs, variants } from '#drizzle/schema.ts'
 
@@ -52,7 +52,7 @@ export function listJobs(member: Member): Promise<JobSummary[]> {
         revision: variants.revision,
       })
       .from(variants)
-      .where(isNull(variants.deletedAt))
+      .where(and(own(variants), isNull(variants.deletedAt)))
       .orderBy(variants.jobId, desc(variants.updatedAt))
       .as('newest')
     const rows = await tx
@@ -62,6 +62,7 @@ export function listJobs(member: Member): Promise<JobSummary[]> {
       })
       .from(jobs)
       .leftJoin(newest, eq(newest.jobId, jobs.id))
+      .where(own(jobs))
       .orderBy(desc(jobs.updatedAt), jobs.id)
     return rows.map((row) => ({ ...row, updatedAt: row.updatedAt.toISOString() }))
   })
@@ -75,7 +76,10 @@ export async function requireJob(request: Request, jobId: string | undefined, ac
   const member = await requireMay(request, action)
   if (!isId(jobId)) throw missing(request, 'job')
   const [row] = await asOrganisation(member.organisationId, (tx) =>
-    tx.select(jobColumns).from(jobs).where(eq(jobs.id, jobId)),
+    tx
+      .select(jobColumns)
+      .from(jobs)
+      .where(and(own(jobs), eq(jobs.id, jobId))),
   )
   if (!row) throw missing(request, 'job')
   return { ...row, updatedAt: row.updatedAt.toISOString(), member }
@@ -86,5 +90,5 @@ export async function touchJob(tx: Transaction, jobId: string): Promise<void> {
   await tx
     .update(jobs)
     .set({ updatedAt: sql`now()` })
-    .where(eq(jobs.id, jobId))
+    .where(and(own(jobs), eq(jobs.id, jobId)))
 }

@@ -4,7 +4,7 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
 import { modelsByCode } from '#app/server/data/heaters.server.ts'
 import { present, variantColumns, variantOf, type Variant } from '#app/server/data/variants.server.ts'
-import { asOrganisation } from '#app/server/organisation.server.ts'
+import { asOrganisation, own } from '#app/server/organisation.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { briefs, sites, variants } from '#drizzle/schema.ts'
 
@@ -28,9 +28,9 @@ export function findLaidOut(of: { readonly id: string; readonly member: Member }
         brief: { revision: briefs.revision, body: briefs.body },
       })
       .from(variants)
-      .innerJoin(sites, eq(sites.jobId, variants.jobId))
-      .innerJoin(briefs, eq(briefs.jobId, variants.jobId))
-      .where(and(eq(variants.id, of.id), present))
+      .innerJoin(sites, and(own(sites), eq(sites.jobId, variants.jobId)))
+      .innerJoin(briefs, and(own(briefs), eq(briefs.jobId, variants.jobId)))
+      .where(and(own(variants), eq(variants.id, of.id), present))
     if (!row) return null
     return {
       variant: variantOf(row.variant),

@@ -1,10 +1,10 @@
-import { eq } from 'drizzle-orm'
+import { and, eq } from 'drizzle-orm'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
 import { roundLength } from '#app/domain/units.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
-import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
+import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import { saveRevision, type Revisioned, type Save } from '#app/server/saving.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { siteRevisions, sites } from '#drizzle/schema.ts'
@@ -64,7 +64,10 @@ export interface KeptSite {
 }
 
 async function readSite(tx: Transaction, jobId: string, lock: boolean): Promise<KeptSite | null> {
-  const asked = tx.select({ revision: sites.revision, body: sites.body }).from(sites).where(eq(sites.jobId, jobId))
+  const asked = tx
+    .select({ revision: sites.revision, body: sites.body })
+    .from(sites)
+    .where(and(own(sites), eq(sites.jobId, jobId)))
   const [row] = lock ? await asked.for('update') : await asked
   return row ? { revision: row.revision, site: siteSchema.parse(row.body) } : null
 }
@@ -94,7 +97,7 @@ const siteOf = ({ id: jobId, member }: OpenJob): Revisioned<Site> => ({
     await tx
       .update(sites)
       .set({ revision, body: site, updatedAt: new Date(), updatedBy: userId })
-      .where(eq(sites.jobId, jobId))
+      .where(and(own(sites), eq(sites.jobId, jobId)))
     await tx
       .insert(siteRevisions)
       .values({ organisationId, jobId, revision, body: site, contentHash: hash, authorId: userId })

@@ -5,7 +5,7 @@ import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
 import { insertRevision, lockVariant, savedLayoutSchema } from '#app/server/data/variant-revisions.server.ts'
 import { present, variantColumns, variantOf, type OpenVariant, type Variant } from '#app/server/data/variants.server.ts'
-import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
+import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import { answerOnce, gone, staleness, type Save } from '#app/server/saving.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
@@ -16,7 +16,7 @@ export async function insertVariant(tx: Transaction, member: Member, jobId: stri
   const [last] = await tx
     .select({ number: max(variants.number) })
     .from(variants)
-    .where(eq(variants.jobId, jobId))
+    .where(and(own(variants), eq(variants.jobId, jobId)))
   const { organisationId, userId: updatedBy } = member
   const number = (last?.number ?? 0) + 1
   const [row] = await tx
@@ -43,7 +43,7 @@ async function startingLayout(tx: Transaction, jobId: string, asked: VariantRequ
   const [row] = await tx
     .select(variantColumns)
     .from(variants)
-    .where(and(eq(variants.id, asked.copyOf), eq(variants.jobId, jobId), present))
+    .where(and(own(variants), eq(variants.id, asked.copyOf), eq(variants.jobId, jobId), present))
   if (!row) return null
   const { title, heaters } = variantOf(row)
   return { title: asked.title ?? `${title.slice(0, 112)} (copy)`, heaters }
@@ -55,7 +55,11 @@ export function createVariant(job: OpenJob, save: Save<VariantRequest>): Promise
   const asked = { member, resource: `jobs/${jobId}/variants`, key: save.key, bodyHash: save.bodyHash }
   return asOrganisation(member.organisationId, (tx) =>
     answerOnce(tx, asked, async () => {
-      await tx.select({ id: jobs.id }).from(jobs).where(eq(jobs.id, jobId)).for('update')
+      await tx
+        .select({ id: jobs.id })
+        .from(jobs)
+        .where(and(own(jobs), eq(jobs.id, jobId)))
+        .for('update')
       const layout = await startingLayout(tx, jobId, save.body)
       if (!layout) return { ...gone('variant'), path: 'copyOf' }
       const variant = await insertVariant(tx, member, jobId, layout)
@@ -75,7 +79,7 @@ export function deleteVariant({ id, member }: OpenVariant, expected: number | nu
     await tx
       .update(variants)
       .set({ deletedAt: sql`now()` })
-      .where(eq(variants.id, id))
+      .where(and(own(variants), eq(variants.id, id)))
     await touchJob(tx, kept.shown.jobId)
     return { status: 200, body: { id, revision: kept.revision, deleted: true }, revision: kept.revision }
   })
@@ -88,7 +92,11 @@ export const restoreSchema = z.union([
 ])
 
 async function bringBack(tx: Transaction, { id }: OpenVariant): Promise<Answer | Refusal> {
-  const [row] = await tx.update(variants).set({ deletedAt: null }).where(eq(variants.id, id)).returning(variantColumns)
+  const [row] = await tx
+    .update(variants)
+    .set({ deletedAt: null })
+    .where(and(own(variants), eq(variants.id, id)))
+    .returning(variantColumns)
   if (!row) return gone('variant')
   await touchJob(tx, row.jobId)
   const variant = variantOf(row)

@@ -4,7 +4,7 @@ import { roundLength } from '#app/domain/units.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { touchJob } from '#app/server/data/jobs.server.ts'
 import { present, variantColumns, variantOf, type OpenVariant } from '#app/server/data/variants.server.ts'
-import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
+import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import { gone, saveRevision, type Revisioned, type Save } from '#app/server/saving.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { variantRevisions, variants } from '#drizzle/schema.ts'
@@ -24,7 +24,7 @@ export async function lockVariant(tx: Transaction, id: string) {
   const [row] = await tx
     .select(variantColumns)
     .from(variants)
-    .where(and(eq(variants.id, id), present))
+    .where(and(own(variants), eq(variants.id, id), present))
     .for('update')
   const shown = row && variantOf(row)
   return shown ? { revision: shown.revision, shown } : null
@@ -37,7 +37,7 @@ const revisionedVariant = ({ id, member }: OpenVariant): Revisioned<Layout> => (
     const [row] = await tx
       .update(variants)
       .set({ ...layout, revision, updatedAt: new Date(), updatedBy: member.userId })
-      .where(eq(variants.id, id))
+      .where(and(own(variants), eq(variants.id, id)))
       .returning(variantColumns)
     if (!row) throw new Error(`Variant ${id} went away while it was locked.`)
     await insertRevision(tx, member, id, revision, layout, hash)
@@ -89,7 +89,9 @@ async function layoutAt(tx: Transaction, variantId: string, revision: number): P
   const [row] = await tx
     .select({ layout: variantRevisions.layout })
     .from(variantRevisions)
-    .where(and(eq(variantRevisions.variantId, variantId), eq(variantRevisions.revision, revision)))
+    .where(
+      and(own(variantRevisions), eq(variantRevisions.variantId, variantId), eq(variantRevisions.revision, revision)),
+    )
   return row ? layoutSchema.parse(row.layout) : gone('revision')
 }
 
@@ -114,7 +116,7 @@ export function listRevisions({ id, member }: OpenVariant): Promise<VariantRevis
         heaterCount: sql<number>`jsonb_array_length(${variantRevisions.layout} -> 'heaters')`,
       })
       .from(variantRevisions)
-      .where(eq(variantRevisions.variantId, id))
+      .where(and(own(variantRevisions), eq(variantRevisions.variantId, id)))
       .orderBy(desc(variantRevisions.revision))
     return rows.map(({ authorId, savedAt, ...row }) => ({
       ...row,

@@ -4,7 +4,7 @@ import type { Action } from '#app/domain/access/roles.ts'
 import { mountedHeaterSchema, type MountedHeater } from '#app/domain/layout/layout.ts'
 import type { OpenJob } from '#app/server/data/jobs.server.ts'
 import { isId, missing } from '#app/server/missing.server.ts'
-import { asOrganisation } from '#app/server/organisation.server.ts'
+import { asOrganisation, own } from '#app/server/organisation.server.ts'
 import { requireMay, type Member } from '#app/server/session.server.ts'
 import { variants } from '#drizzle/schema.ts'
 
@@ -60,7 +60,7 @@ export function listVariants(job: OpenJob): Promise<VariantSummary[]> {
     const rows = await tx
       .select(columns)
       .from(variants)
-      .where(and(eq(variants.jobId, job.id), present))
+      .where(and(own(variants), eq(variants.jobId, job.id), present))
       .orderBy(asc(variants.number))
     return rows.map((row) => ({ ...row, updatedAt: row.updatedAt.toISOString() }))
   })
@@ -73,7 +73,7 @@ export async function findVariant(job: OpenJob, variantId: string | undefined): 
     tx
       .select(variantColumns)
       .from(variants)
-      .where(and(eq(variants.id, variantId), eq(variants.jobId, job.id), present)),
+      .where(and(own(variants), eq(variants.id, variantId), eq(variants.jobId, job.id), present)),
   )
   return row ? variantOf(row) : null
 }
@@ -94,7 +94,12 @@ export async function requireVariant(
     tx
       .select({ id: variants.id, jobId: variants.jobId })
       .from(variants)
-      .where(deleted === 'refused' ? and(eq(variants.id, variantId), present) : eq(variants.id, variantId)),
+      .where(
+        and(
+          own(variants),
+          deleted === 'refused' ? and(eq(variants.id, variantId), present) : eq(variants.id, variantId),
+        ),
+      ),
   )
   if (!row) throw missing(request, 'variant')
   return { ...row, member }
@@ -106,7 +111,7 @@ export async function findOpenVariant({ id, member }: OpenVariant): Promise<Vari
     tx
       .select(variantColumns)
       .from(variants)
-      .where(and(eq(variants.id, id), present)),
+      .where(and(own(variants), eq(variants.id, id), present)),
   )
   return row ? variantOf(row) : null
 }
