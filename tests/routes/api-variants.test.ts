@@ -269,6 +269,22 @@ describe('saving a variant', () => {
     expect(response.headers.get('Allow')).toBe('GET, PUT, DELETE')
     expect(await refusalOf(response)).toMatchObject({ status: 405 })
     expect((await refusalOf(await designer('GET', '/api/nothing'))).status).toBe(404)
+    const read = [
+      'jobs',
+      `jobs/${jobId}`,
+      'heaters',
+      ...['revisions', 'seats.csv', 'thumbnail.svg', 'seats/x/explain'].map((end) => `variants/${id}/${end}`),
+    ]
+    for (const path of read) {
+      const refused = await refusalOf(await designer('POST', `/api/${path}`, { body: {} }))
+      expect(refused, path).toMatchObject({ status: 405, path: 'method' })
+    }
+    for (const path of ['flux', `variants/${id}/restore`]) {
+      expect(await refusalOf(await designer('GET', `/api/${path}`)), path).toMatchObject({
+        status: 405,
+        path: 'method',
+      })
+    }
   })
 })
 

@@ -7,6 +7,8 @@ import { readJson } from '#app/server/json-body.server.ts'
 import { requireMember } from '#app/server/session.server.ts'
 import type { Route } from './+types/flux'
 
+export { postOnly as loader } from '#app/server/other-methods.server.ts'
+
 /** POST /api/flux: irradiance at points from groups of elements and catalogue models, by any signed-in member. */
 export async function action({ request }: Route.ActionArgs) {
   const member = await requireMember(request)

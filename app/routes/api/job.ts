@@ -4,6 +4,8 @@ import { findSite } from '#app/server/data/sites.server.ts'
 import { listVariants } from '#app/server/data/variants.server.ts'
 import type { Route } from './+types/job'
 
+export { readOnly as action } from '#app/server/other-methods.server.ts'
+
 /** GET /api/jobs/:jobId: the job with its site, its seats by id, its brief, the revisions of both, its variants. */
 export async function loader({ request, params }: Route.LoaderArgs) {
   const job = await requireJob(request, params.jobId, 'view')

@@ -8,6 +8,8 @@ import { checked } from '#app/server/json-body.server.ts'
 import { missing } from '#app/server/missing.server.ts'
 import type { Route } from './+types/seat-explanation'
 
+export { readOnly as action } from '#app/server/other-methods.server.ts'
+
 const figureSchema = z.discriminatedUnion('quantity', [
   z.strictObject({ quantity: z.literal('body') }),
   z.strictObject({ quantity: z.literal('head') }),

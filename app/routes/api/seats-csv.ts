@@ -7,6 +7,8 @@ import { missing } from '#app/server/missing.server.ts'
 import { seatsCsv } from '#app/server/seats-csv.server.ts'
 import type { Route } from './+types/seats-csv'
 
+export { readOnly as action } from '#app/server/other-methods.server.ts'
+
 /** GET /api/variants/:variantId/seats.csv: every seat's figures, by the engine that the page uses. */
 export async function loader({ request, params }: Route.LoaderArgs) {
   const open = await requireVariant(request, params.variantId, 'export')

@@ -5,6 +5,8 @@ import { missing } from '#app/server/missing.server.ts'
 import { thumbnailOf } from '#app/server/render/thumbnail.server.tsx'
 import type { Route } from './+types/thumbnail'
 
+export { readOnly as action } from '#app/server/other-methods.server.ts'
+
 /** An SVG that is opened by itself runs nothing and loads nothing. */
 const policy = "default-src 'none'; style-src 'unsafe-inline'; sandbox"
 

@@ -5,6 +5,8 @@ import { requireVariant } from '#app/server/data/variants.server.ts'
 import { readSave } from '#app/server/saving.server.ts'
 import type { Route } from './+types/variant-restore'
 
+export { postOnly as loader } from '#app/server/other-methods.server.ts'
+
 /**
  * POST /api/variants/:variantId/restore with a key. `{ revision }` with If-Match brings that revision's layout back as
  * a new revision; `{ deleted: true }` undoes the variant's deletion.
