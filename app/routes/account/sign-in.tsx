@@ -22,7 +22,7 @@ const formSchema = z.object({
   password: z.string().max(1000).default(''),
 })
 const tooMany = 'Too many wrong tries for this address. Wait a quarter of an hour, or ask for a new password.'
-const wrong = 'E-mail and password do not belong together. Both are as they were typed.'
+const wrong = 'E-mail and password do not belong together.'
 
 function refused(email: string, errors: { email?: string; password?: string }, status: number) {
   return data({ email, errors }, status)
