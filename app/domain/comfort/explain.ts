@@ -26,7 +26,7 @@ export interface ExplainedInput {
 }
 
 /** What one element gives to the figure. */
-export interface ExplainedPart {
+interface ExplainedPart {
   readonly heaterId: string
   readonly element: number
   /** In the figure's unit. */

@@ -45,7 +45,7 @@ export function operativeTemperature(field: number, conditions: Conditions): num
 }
 
 /** Share of the loss at this wind that still air would take for the same clothes: at least 1, growing with wind. */
-export function windFactor(conditions: Conditions): number {
+function windFactor(conditions: Conditions): number {
   const clothing = clo * conditions.clothing
   const enlarged = 1.05 + 0.645 * clothing
   const radiant = radiantCoefficientOf(conditions.posture)

@@ -6,7 +6,7 @@ import { conditionsAt, type SeatWarmth, type WindName } from '#app/domain/comfor
 import { houseRules } from '#app/domain/rules/house-rules.ts'
 
 /** What "like indoors" means here, °C of feels-like (house rule, no published source). */
-export const indoorsTemperature = 20
+const indoorsTemperature = 20
 
 /** What it would take at one seat and wind to feel like indoors. */
 export interface Indoors {

@@ -8,7 +8,7 @@ import type { Seat } from '#app/domain/site/site.ts'
 import { dot, radians, type Vec3 } from '#app/domain/vector.ts'
 
 /** The largest irradiance over all directions at a point: where it comes from and what each source gives of it, W/m². */
-export interface LargestParts {
+interface LargestParts {
   readonly direction: Vec3
   readonly parts: readonly number[]
 }

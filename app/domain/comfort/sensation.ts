@@ -1,5 +1,5 @@
 /** The seven-point scale of thermal sensation of ISO 7730, from −3 to +3. */
-export const sensationWords = ['cold', 'cool', 'slightly cool', 'neutral', 'slightly warm', 'warm', 'hot'] as const
+const sensationWords = ['cold', 'cool', 'slightly cool', 'neutral', 'slightly warm', 'warm', 'hot'] as const
 export type SensationWord = (typeof sensationWords)[number]
 
 /** How a guest would rate it: always a word; the predicted mean vote only inside the standard's range. */

@@ -41,7 +41,7 @@ export const defaultFluxTolerances: FluxTolerances = {
 }
 
 /** What one uncertain thing does to the figure: change per unit × its tolerance, in the figure's unit. */
-export interface ToleranceShare {
+interface ToleranceShare {
   readonly of: string
   readonly tolerance: number
   readonly unit: 'm' | 'share'
