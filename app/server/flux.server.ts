@@ -4,6 +4,7 @@ import { availableParallelism } from 'node:os'
 import { dirname, join } from 'node:path'
 import { fileURLToPath, pathToFileURL } from 'node:url'
 import { Worker } from 'node:worker_threads'
+import type { FiguresQuestion, LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
 import type { SeatWarmth, WarmthInput } from '#app/domain/comfort/seat-warmth.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { MapQuestion } from '#app/domain/flux/map-question.ts'
@@ -131,6 +132,13 @@ export async function seatWarmthOffThread(input: WarmthInput): Promise<SeatWarmt
   const outcome = await outcomeOf({ kind: 'warmth', input })
   if (outcome.kind !== 'warmth') throw unexpected(outcome)
   return outcome.warmth
+}
+
+/** Seats, totals and findings of a layout off the event loop. */
+export async function layoutFiguresOffThread(input: FiguresQuestion): Promise<LayoutFigures> {
+  const outcome = await outcomeOf({ kind: 'figures', input })
+  if (outcome.kind !== 'figures') throw unexpected(outcome)
+  return outcome.figures
 }
 
 /** Ends the threads; what is under way fails. For the server's shutdown and for tests. */

@@ -6,11 +6,14 @@ import { houseRules } from '#app/domain/rules/house-rules.ts'
 import type { JobRequest } from '#app/domain/job/job-request.ts'
 import { parseLength, type DisplayUnits } from '#app/domain/units.ts'
 
-/** The answers of the enquiry form by field name, and the fields answered with "don't know". */
-export interface EnquiryAnswers {
-  readonly values: Readonly<Record<string, string>>
-  readonly unknown: ReadonlySet<string>
-}
+/** The answers of the enquiry form by field name; a field answered with "don't know" has a second name beside it. */
+export type EnquiryAnswers = Readonly<Record<string, string>>
+
+/** Name under which "don't know" is ticked for a field. */
+export const unknownName = (field: string): string => `unknown-${field}`
+
+/** Whether a field is answered with "don't know". */
+export const isUnknown = (answers: EnquiryAnswers, field: string): boolean => Boolean(answers[unknownName(field)])
 
 /** What is assumed where nobody knows. House rules, no published source. */
 export const assumedBrief: Omit<Brief, 'place'> = {
@@ -51,12 +54,11 @@ export const enquiryFields: readonly BriefField[] = [
 ]
 
 /** The enquiry that the answers make, or what is wrong with them, by field name. */
-export function readEnquiry({
-  values,
-  unknown,
-}: EnquiryAnswers): { readonly asked: JobRequest } | { readonly errors: Record<string, string> } {
+export function readEnquiry(
+  answers: EnquiryAnswers,
+): { readonly asked: JobRequest } | { readonly errors: Record<string, string> } {
   const errors: Record<string, string> = {}
-  const answer = (name: string) => (values[name] ?? '').trim()
+  const answer = (name: string) => (answers[name] ?? '').trim()
   const units: DisplayUnits = answer('units') === 'imperial' ? 'imperial' : 'metric'
   const named = (name: string, what: string, most: number, least = 1) => {
     const text = answer(name)
@@ -72,8 +74,8 @@ export function readEnquiry({
   const name = named('name', 'the job a name', 120)
   const customer = named('customer', 'the customer', 120, 0)
   const place = named('place', 'the place', 120)
-  const floor = unknown.has('floor') ? null : { length: length('along', 100), depth: length('deep', 60) }
-  const brief = withAnswers({ ...assumedBrief, place }, { values, unknown }, units, errors)
+  const floor = isUnknown(answers, 'floor') ? null : { length: length('along', 100), depth: length('deep', 60) }
+  const brief = withAnswers({ ...assumedBrief, place }, answers, units, errors)
   if (brief.target.low >= brief.target.high) errors['targetHigh'] ??= 'The target ends above where it starts.'
   if (Object.keys(errors).length > 0) return { errors }
   return { asked: { name, customer, displayUnits: units, floor, brief } }
@@ -81,17 +83,17 @@ export function readEnquiry({
 
 function withAnswers(
   start: Brief,
-  { values, unknown }: EnquiryAnswers,
+  answers: EnquiryAnswers,
   units: DisplayUnits,
   errors: Record<string, string>,
 ): Brief {
   let brief = start
   for (const field of enquiryFields) {
-    if (unknown.has(field.name)) {
+    if (isUnknown(answers, field.name)) {
       brief = { ...brief, assumed: [...brief.assumed, field.name] }
       continue
     }
-    const written = field.write(brief, values[field.name] ?? '', units)
+    const written = field.write(brief, answers[field.name] ?? '', units)
     if ('error' in written) errors[field.name] = written.error
     else brief = written.brief
   }

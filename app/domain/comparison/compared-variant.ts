@@ -41,10 +41,13 @@ export function countUnsupported(findings: readonly Finding[]): number {
   return new Set(subjects.map(({ subject }) => subject.id)).size
 }
 
-/** The finding with the least clear distance to its limit, m; null when no finding has a margin that is a length. */
+/** The clearance or height with the least distance to its limit, m; null when none has a margin. How far a heater hangs
+ * from its support is no clearance and does not count. */
 export function tightestMargin(findings: readonly Finding[]): { finding: Finding; margin: number } | null {
   const lengths = findings.flatMap((finding) =>
-    finding.unit === 'm' && finding.margin !== null ? [{ finding, margin: finding.margin }] : [],
+    finding.rule !== 'supported' && finding.unit === 'm' && finding.margin !== null
+      ? [{ finding, margin: finding.margin }]
+      : [],
   )
   return lengths.reduce<(typeof lengths)[number] | null>(
     (least, each) => (least === null || each.margin < least.margin ? each : least),

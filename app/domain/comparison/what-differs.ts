@@ -44,7 +44,8 @@ type Row = readonly [name: string, valueOf: (variant: ComparedVariant, terms: Co
 
 const missing: Value = { text: '–', cost: null }
 const said = (text: string): Value => ({ text, cost: null })
-const irradiance = (value: number, { units }: ComparisonTerms): string => formatQuantity(value, 'irradiance', units)
+/** The one scale of the maps is in W/m², whatever units lengths are in. */
+const irradiance = (value: number): string => formatQuantity(value, 'irradiance', 'metric')
 
 function heaters(variant: ComparedVariant): Value {
   const counts = countByModel(variant)
@@ -96,24 +97,24 @@ function coldest({ totals }: ComparedVariant, terms: ComparisonTerms): Value {
   if (!totals.coldest) return missing
   const { irradiance: value, seatId } = totals.coldest
   const outcome = value < terms.target.low ? { outcome: 'fails' as const } : {}
-  return { text: `${irradiance(value, terms)}, ${seatId}`, cost: -Math.min(value, terms.target.high), ...outcome }
+  return { text: `${irradiance(value)}, ${seatId}`, cost: -Math.min(value, terms.target.high), ...outcome }
 }
 
 function hottest({ totals }: ComparedVariant, terms: ComparisonTerms): Value {
   if (!totals.hottest) return missing
   const { irradiance: value, seatId } = totals.hottest
   const outcome = value > terms.target.high ? { outcome: 'fails' as const } : {}
-  return { text: `${irradiance(value, terms)}, ${seatId}`, cost: Math.max(value, terms.target.high), ...outcome }
+  return { text: `${irradiance(value)}, ${seatId}`, cost: Math.max(value, terms.target.high), ...outcome }
 }
 
 function evenness({ totals }: ComparedVariant): Value {
   return totals.evenness === null ? missing : { text: totals.evenness.toFixed(2), cost: -totals.evenness }
 }
 
-function headMaximum({ totals }: ComparedVariant, terms: ComparisonTerms): Value {
+function headMaximum({ totals }: ComparedVariant): Value {
   if (!totals.headMaximum) return missing
   const { irradiance: value, seatId } = totals.headMaximum
-  return { text: `${irradiance(value, terms)}, ${seatId}`, cost: value }
+  return { text: `${irradiance(value)}, ${seatId}`, cost: value }
 }
 
 function overlap({ overlap: area }: ComparedVariant, { units }: ComparisonTerms): Value {
@@ -161,7 +162,17 @@ function tightest({ findings }: ComparedVariant, { units }: ComparisonTerms): Va
   const found = tightestMargin(findings)
   if (!found) return missing
   const { finding, margin } = found
-  return { text: `${formatLength(margin, units)}, ${finding.title}`, cost: -margin, outcome: finding.outcome }
+  return {
+    text: `${marginWords(margin, units)}, ${finding.subject.id}: ${finding.title}`,
+    cost: -margin,
+    outcome: finding.outcome,
+  }
+}
+
+/** A margin as it is measured on the spot: millimetres, or inches. */
+function marginWords(margin: number, units: DisplayUnits): string {
+  const text = units === 'metric' ? `${Math.round(1000 * margin)} mm` : formatLength(margin, units)
+  return text.replace('-', '−')
 }
 
 function price({ price: list }: ComparedVariant): Value {
@@ -186,7 +197,7 @@ const rows = (terms: ComparisonTerms): readonly Row[] => [
   ['Evenness, min ÷ mean', evenness],
   ['Hottest head', headMaximum],
   ['Feels like, design wind', feelsLike],
-  [`Overlap, each alone ≥ ${irradiance(terms.overlapThreshold, terms)}`, overlap],
+  [`Overlap, each alone ≥ ${irradiance(terms.overlapThreshold)}`, overlap],
   ['Findings', outcomes],
   ['Unsupported', unsupported],
   ['Tightest margin', tightest],

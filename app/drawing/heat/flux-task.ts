@@ -1,3 +1,4 @@
+import { layoutFigures, type FiguresQuestion, type LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
 import { seatWarmth, type SeatWarmth, type WarmthInput } from '#app/domain/comfort/seat-warmth.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import { irradianceByEmitter } from '#app/domain/flux/irradiance.ts'
@@ -22,12 +23,14 @@ export type FluxTask =
   | { readonly kind: 'map'; readonly question: MapQuestion }
   | { readonly kind: 'points'; readonly emitters: readonly Emitter[]; readonly points: readonly FluxPoint[] }
   | { readonly kind: 'warmth'; readonly input: WarmthInput }
+  | { readonly kind: 'figures'; readonly input: FiguresQuestion }
 
 /** What a flux thread answers; `refused` says which figure has no meaning or which limit is passed. */
 export type FluxOutcome =
   | { readonly kind: 'map'; readonly answer: MapAnswer }
   | { readonly kind: 'points'; readonly fluxes: PointFluxes }
   | { readonly kind: 'warmth'; readonly warmth: SeatWarmth[] }
+  | { readonly kind: 'figures'; readonly figures: LayoutFigures }
   | { readonly kind: 'refused'; readonly message: string }
 
 function pointFluxesOf(emitters: readonly Emitter[], points: readonly FluxPoint[]): PointFluxes {
@@ -38,6 +41,7 @@ function pointFluxesOf(emitters: readonly Emitter[], points: readonly FluxPoint[
 function outcomeOf(task: FluxTask, cache: MapCache): FluxOutcome {
   if (task.kind === 'map') return { kind: 'map', answer: answerMap(task.question, cache) }
   if (task.kind === 'warmth') return { kind: 'warmth', warmth: seatWarmth(task.input) }
+  if (task.kind === 'figures') return { kind: 'figures', figures: layoutFigures(task.input) }
   return { kind: 'points', fluxes: pointFluxesOf(task.emitters, task.points) }
 }
 

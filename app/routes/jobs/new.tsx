@@ -3,7 +3,7 @@ import { useState, type ReactNode } from 'react'
 import { data, Form, redirect, useNavigation } from 'react-router'
 import { z } from 'zod'
 import type { BriefField } from '#app/domain/brief/brief-field.ts'
-import { assumedBrief, enquiryFields, readEnquiry } from '#app/domain/brief/enquiry.ts'
+import { assumedBrief, enquiryFields, isUnknown, readEnquiry, unknownName } from '#app/domain/brief/enquiry.ts'
 import type { DisplayUnits } from '#app/domain/units.ts'
 import { Button, ButtonLink } from '#app/components/button.tsx'
 import { ErrorSummary } from '#app/components/error-summary.tsx'
@@ -11,7 +11,7 @@ import { CheckField, SelectField, TextField } from '#app/components/field.tsx'
 import { PageFrame } from '#app/components/page-frame.tsx'
 import { isRefusal } from '#app/server/answers.server.ts'
 import { createJob } from '#app/server/data/job-creation.server.ts'
-import { readForm } from '#app/server/form.server.ts'
+import { readFields } from '#app/server/form-fields.server.ts'
 import { requireMay } from '#app/server/session.server.ts'
 import { viewerOf } from '#app/server/viewer.server.ts'
 import type { Route } from './+types/new'
@@ -30,12 +30,12 @@ const longest = 2000
 
 export async function action({ request }: Route.ActionArgs) {
   const member = await requireMay(request, 'create-job')
-  const form = await readForm(request)
-  const texts = [...form].flatMap(([name, value]) => (typeof value === 'string' ? [[name, value] as const] : []))
-  const values = Object.fromEntries(texts.map(([name, value]) => [name, value.replaceAll('\0', '').slice(0, longest)]))
-  const unknown = texts.flatMap(([name, value]) => (name === 'unknown' ? [value] : []))
-  const refused = (errors: Record<string, string>) => data({ errors, values, unknown }, 400)
-  const read = readEnquiry({ values, unknown: new Set(unknown) })
+  const fields = Object.entries(await readFields(request)).map(
+    ([name, value]) => [name, value.replaceAll('\0', '')] as const,
+  )
+  const values = Object.fromEntries(fields.map(([name, value]) => [name, value.slice(0, longest)]))
+  const refused = (errors: Record<string, string>) => data({ errors, values }, 400)
+  const read = readEnquiry(values)
   if ('errors' in read) return refused(read.errors)
   const key = values['key'] ?? ''
   if (!/^[\w-]{8,100}$/.test(key)) return refused({ name: 'The form is not complete. Open it again.' })
@@ -60,7 +60,6 @@ export default function NewEnquiryPage({ loaderData, actionData }: Route.Compone
   const sending = useNavigation().state === 'submitting'
   const errors: Record<string, string> = actionData?.errors ?? {}
   const values: Record<string, string> = actionData?.values ?? {}
-  const unknown = new Set(actionData?.unknown ?? [])
   const [units, setUnits] = useState<DisplayUnits>(values['units'] === 'imperial' ? 'imperial' : 'metric')
   const problems = Object.entries(errors).map(([id, error]) => ({ id, error, label: labels[id] ?? id }))
   const text = (name: string) => ({
@@ -76,7 +75,7 @@ export default function NewEnquiryPage({ loaderData, actionData }: Route.Compone
       field={field}
       units={units}
       typed={values[field.name]}
-      unknown={unknown.has(field.name)}
+      unknown={isUnknown(values, field.name)}
       error={errors[field.name]}
     />
   )
@@ -111,9 +110,8 @@ export default function NewEnquiryPage({ loaderData, actionData }: Route.Compone
           <TextField {...text('deep')} hint="Such as 5.4 m or 17' 9&quot;" />
           <CheckField
             className="self-start tablet:pt-4.5"
-            name="unknown"
-            value="floor"
-            defaultChecked={unknown.has('floor')}
+            name={unknownName('floor')}
+            defaultChecked={isUnknown(values, 'floor')}
             label="Don’t know: 6 × 4 m is assumed"
           />
         </Group>
@@ -183,8 +181,7 @@ function Question({ field, units, typed, unknown, error }: QuestionProps) {
       )}
       <CheckField
         className="mt-1 text-xs text-ink-2"
-        name="unknown"
-        value={field.name}
+        name={unknownName(field.name)}
         defaultChecked={unknown}
         label={
           <>

@@ -1,0 +1,97 @@
+import type { Brief } from '#app/domain/brief/brief.ts'
+import { assumptionOf } from '#app/domain/brief/brief-fields.ts'
+import type { LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
+import { headCaution } from '#app/domain/comfort/cautions.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { Layout } from '#app/domain/layout/layout.ts'
+import { isStopped } from '#app/domain/rules/check-layout.ts'
+import { formatLength, formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
+
+/** A variant as far as the cautions of a sheet need it. */
+export interface CautionedVariant extends LayoutFigures {
+  readonly number: number
+  readonly layout: Layout
+}
+
+interface Told {
+  readonly brief: Brief
+  readonly models: ReadonlyMap<string, HeaterModel>
+  readonly units: DisplayUnits
+  readonly variants: readonly CautionedVariant[]
+}
+
+/** What a customer must know beside the picture, the weightiest first; sentences without figures that nobody gave. */
+export function sheetCautions(told: Told): string[] {
+  return [
+    ...stopped(told),
+    ...heads(told),
+    ...clearances(told),
+    ...loads(told),
+    ...measureFirst(told),
+    ...assumptions(told),
+    withoutHeat(told),
+    'A figure never approves. It does not stand for the heater’s manual, a licensed electrician, the structure’s engineer or the fire authority.',
+  ]
+}
+
+function stopped({ variants }: Told): string[] {
+  return variants.flatMap(({ number, findings }) => {
+    const stops = findings.filter((finding) => isStopped(finding) && finding.outcome === 'fails')
+    if (stops.length === 0) return []
+    const titles = [...new Set(stops.map(({ title }) => title))].slice(0, 2).join('; ')
+    return [`Variant ${number} may not be installed as it stands: ${titles}${stops.length > 2 ? ' and more' : ''}.`]
+  })
+}
+
+function heads({ variants, brief }: Told): string[] {
+  const caution = headCaution(brief.stayMinutes)
+  return variants.flatMap(({ number, totals: { headMaximum } }) => {
+    if (!headMaximum || headMaximum.irradiance <= caution) return []
+    const figure = formatQuantity(headMaximum.irradiance, 'irradiance', 'metric')
+    return [`Variant ${number}: ${figure} at the head of seat ${headMaximum.seatId}, over the caution of ${caution}.`]
+  })
+}
+
+function clearances({ variants, models, units }: Told): string[] {
+  const parts = variants.flatMap(({ number, layout }) => {
+    const used = [...new Set(layout.heaters.map(({ model }) => model))].flatMap(
+      (code) => models.get(code)?.clearanceToCombustible ?? [],
+    )
+    if (used.length === 0) return []
+    const most = (values: readonly (number | null)[]) => formatLength(Math.max(...values.map((v) => v ?? 0)), units)
+    const [above, end, front] = [used.map((c) => c.above), used.map((c) => c.end), used.map((c) => c.frontOfBeam)]
+    return [`variant ${number}, ${most(end)} from a heater’s end, ${most(above)} above, ${most(front)} in front`]
+  })
+  return parts.length === 0 ? [] : [`Nothing that burns nearer than: ${parts.join('; ')}.`]
+}
+
+function loads({ variants }: Told): string[] {
+  const open = variants.some(({ findings }) =>
+    findings.some(({ rule, outcome }) => rule === 'support-load' && outcome === 'cannot tell'),
+  )
+  return open ? ['Load on the members that carry the heaters: to be confirmed by the maker of the structure.'] : []
+}
+
+function measureFirst({ variants }: Told): string[] {
+  return variants.flatMap(({ number, findings }) => {
+    const rules = findings.filter(({ outcome }) => outcome === 'measure first')
+    if (rules.length === 0) return []
+    const titles = [...new Set(rules.map(({ title }) => title))].slice(0, 2).join('; ')
+    return [`Variant ${number}, measure first: ${titles}. The margin is smaller than the tolerance of the sizes.`]
+  })
+}
+
+function assumptions({ brief, units }: Told): string[] {
+  if (brief.assumed.length === 0) return []
+  return [`Assumed until confirmed: ${brief.assumed.map((name) => assumptionOf(brief, name, units)).join('; ')}.`]
+}
+
+function withoutHeat({ variants, units }: Told): string {
+  const seat = variants[0]?.warmth[0]
+  const base = 'Heaters warm people, not the air. It will not feel like indoors.'
+  if (!seat) return base
+  const [calm, windy] = [seat.feelsLike.calm.before, seat.feelsLike.design.before].map((celsius) =>
+    formatQuantity(celsius, 'temperature', units, 0),
+  )
+  return `${base} Without heat it feels like ${calm} out of the wind, ${windy} in it.`
+}

@@ -1,0 +1,69 @@
+import type { ReactNode } from 'react'
+import { Mark } from '#app/editor/compare/differences.tsx'
+
+interface MapHeadProps {
+  i: number
+  number: number
+  /** Its title, as the link that leads to it. */
+  title: ReactNode
+  less: number | null
+  warmth: readonly { readonly target: string }[] | null
+  overlapArea: number | null
+  threshold: number
+}
+
+/** Above a map: which variant, how many seats stand where, or how large the overlap is. */
+export function MapHead({ i, number, title, less, warmth, overlapArea, threshold }: MapHeadProps) {
+  const count = (target: string) => warmth?.filter((seat) => seat.target === target).length ?? '–'
+  return (
+    <header className="flex flex-wrap items-center gap-x-2.5 gap-y-1 border-t border-ink py-2">
+      <Mark i={i} />
+      <h2 className="min-w-0 flex-1 truncate">
+        <span className="mr-1.5 font-strong">{number}</span> {title}
+        {less !== null && <span className="text-ink-2">, less variant {less}</span>}
+      </h2>
+      {overlapArea !== null ? (
+        <p className="text-ink-2">
+          <span className="font-strong text-ink">{overlapArea.toFixed(1)} m²</span> where two or more each give ≥{' '}
+          {threshold} W/m²
+        </p>
+      ) : (
+        <p className="flex gap-4 text-ink-2">
+          <Ring kind="below" /> {count('below')} below
+          <Ring kind="in target" /> {count('in target')} in target
+          <Ring kind="above" /> {count('above')} above
+        </p>
+      )}
+    </header>
+  )
+}
+
+/** A seat's ring as on the map. */
+function Ring({ kind }: { kind: 'below' | 'in target' | 'above' }) {
+  return (
+    <svg
+      width="14"
+      height="14"
+      viewBox="0 0 14 14"
+      fill="none"
+      stroke="currentColor"
+      strokeWidth="1.4"
+      aria-hidden="true"
+      className="-mr-2 self-center"
+    >
+      <circle cx="7" cy="7" r="5.6" strokeDasharray={kind === 'below' ? '2.4 2' : undefined} />
+      {kind === 'above' && <circle cx="7" cy="7" r="3.2" strokeWidth="1.1" />}
+    </svg>
+  )
+}
+
+/** What the rings of the seats say. */
+export function RingLegend() {
+  return (
+    <p className="flex flex-wrap gap-x-4 pb-3 text-ink-2">
+      <Ring kind="below" /> below target, dashed ring
+      <Ring kind="in target" /> in target, plain ring
+      <Ring kind="above" /> above target, double ring
+    </p>
+  )
+}

@@ -1,0 +1,114 @@
+import { wrap, type Remote } from 'comlink'
+import { useEffect, useState } from 'react'
+import { areaAtLeast, differenceOf } from '#app/domain/comparison/area.ts'
+import type { LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
+import type { Brief } from '#app/domain/brief/brief.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { Layout } from '#app/domain/layout/layout.ts'
+import type { Site } from '#app/domain/site/site.ts'
+import type { HeatPicture } from '#app/drawing/heat/contours.ts'
+import type { MapAnswer } from '#app/drawing/heat/map-picture.ts'
+import { differenceScale, irradianceScale, overlapScale } from '#app/drawing/heat/quantity.ts'
+import { cellOf, emittersOf } from '#app/editor/map-questions.ts'
+import type { FluxWorker } from '#workers/flux.worker.ts'
+
+/** What is compared; the same object for the same comparison. */
+export interface ComparisonSubject {
+  readonly site: Site
+  readonly brief: Brief
+  readonly models: ReadonlyMap<string, HeaterModel>
+  readonly layouts: readonly Layout[]
+  /** Height of the plane, m, and the threshold of overlap, W/m². */
+  readonly plane: number
+  readonly threshold: number
+}
+
+/** What is known of one variant so far; null: still being worked out. `flux` stays null without heat to map. */
+export interface ComparedMaps {
+  readonly figures: LayoutFigures | null
+  readonly flux: MapAnswer | null
+  readonly overlap: MapAnswer | null
+  /** Where two heaters or more each alone give the threshold, m². */
+  readonly overlapArea: number | null
+  /** This variant less the first one; null for the first. */
+  readonly difference: HeatPicture | null
+}
+
+/** The comparison as far as it is known. */
+export interface ComparisonState {
+  readonly variants: readonly ComparedMaps[]
+  readonly state: 'working' | 'ready' | 'broken'
+}
+
+const nothing: ComparedMaps = { figures: null, flux: null, overlap: null, overlapArea: null, difference: null }
+
+/** Works out figures and maps of every variant in a worker each; `attempt` starts anew after a break. */
+export function useComparison(subject: ComparisonSubject, attempt: number): ComparisonState {
+  const [known, setKnown] = useState<{ subject: ComparisonSubject; state: ComparisonState } | null>(null)
+  useEffect(() => {
+    let current = true
+    const variants = subject.layouts.map(() => nothing)
+    const tell = (state: ComparisonState['state']) =>
+      current && setKnown({ subject, state: { variants: [...variants], state } })
+    const workers = subject.layouts.map(() => startWorker())
+    const remotes = workers.map((worker) => wrap<FluxWorker>(worker))
+    const broken = () => tell('broken')
+    for (const worker of workers) worker.addEventListener('error', broken)
+    const update = (i: number, more: Partial<ComparedMaps>) => {
+      variants[i] = { ...(variants[i] ?? nothing), ...more }
+      tell('working')
+    }
+    const work = async () => {
+      await Promise.all(remotes.map((remote, i) => answerVariant(remote, subject, i, (more) => update(i, more))))
+      await answerDifferences(remotes, variants, update)
+      tell('ready')
+    }
+    work().catch(broken)
+    return () => {
+      current = false
+      for (const worker of workers) worker.terminate()
+    }
+  }, [subject, attempt])
+  const fits = known && known.subject.layouts === subject.layouts
+  return fits ? known.state : { variants: subject.layouts.map(() => nothing), state: 'working' }
+}
+
+function startWorker(): Worker {
+  return new Worker(new URL('../../../workers/flux.worker.ts', import.meta.url), { type: 'module' })
+}
+
+async function answerVariant(
+  remote: Remote<FluxWorker>,
+  { site, brief, models, layouts, plane, threshold }: ComparisonSubject,
+  i: number,
+  update: (more: Partial<ComparedMaps>) => void,
+): Promise<void> {
+  const layout = layouts[i]
+  if (!layout) return
+  const emitters = emittersOf(layout, models)
+  const shared = { emitters, floor: site.floor, z: plane, cell: cellOf(site, 'sharp') }
+  if (emitters.length > 0) {
+    const { levels, edges } = irradianceScale('dusk', brief.target)
+    update({ flux: await remote.answerMap({ ...shared, quantity: { kind: 'flux' }, levels, edges }) })
+  }
+  update({ figures: await remote.answerFigures({ site, brief, layout, models }) })
+  if (emitters.length === 0) return update({ overlapArea: 0 })
+  const { levels, edges } = overlapScale('dusk', threshold)
+  const overlap = await remote.answerMap({ ...shared, quantity: { kind: 'overlap', threshold }, levels, edges })
+  update({ overlap, overlapArea: areaAtLeast(overlap.values, overlap.grid, 2) })
+}
+
+async function answerDifferences(
+  remotes: readonly Remote<FluxWorker>[],
+  variants: readonly ComparedMaps[],
+  update: (i: number, more: Partial<ComparedMaps>) => void,
+): Promise<void> {
+  const first = variants[0]?.flux
+  const { levels, edges } = differenceScale('dusk')
+  for (const [i, remote] of remotes.entries()) {
+    const own = variants[i]?.flux
+    if (i === 0 || !first || !own) continue
+    const difference = await remote.answerPicture(differenceOf(own.values, first.values), own.grid, levels, edges)
+    update(i, { difference })
+  }
+}
