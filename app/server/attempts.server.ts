@@ -4,7 +4,7 @@ import { authDatabase } from '#app/server/db.server.ts'
 import { signInAttempts } from '#drizzle/schema.ts'
 
 /** How often an account may be tried in a quarter of an hour: wrong passwords, and letters asked for. */
-export const mostAttempts = { password: 10, letter: 5 }
+const mostAttempts = { password: 10, letter: 5 }
 type Kind = keyof typeof mostAttempts
 
 /** Known and unknown addresses are counted alike, and none is kept in clear. */

@@ -30,7 +30,7 @@ const envSchema = z
 export const env = envSchema.parse(process.env)
 
 /** Whether only this computer reaches the application: the condition for accounts whose password is known. */
-export function isLoopback(host: string): boolean {
+function isLoopback(host: string): boolean {
   return loopback.includes(host)
 }
 

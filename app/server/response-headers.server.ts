@@ -1,7 +1,7 @@
 import { env } from '#app/server/env.server.ts'
 
 /** The policy of a page: nothing from elsewhere, no inline script without the nonce of this very answer. */
-export function contentPolicy(nonce: string): string {
+function contentPolicy(nonce: string): string {
   const development = env.NODE_ENV === 'development'
   // The development server injects its own inline scripts and styles and talks over a socket.
   const inline = development ? "'unsafe-inline'" : `'nonce-${nonce}'`
