@@ -157,9 +157,11 @@ function reachOf({ elements }: Emitter): number {
 function findTouching(emitters: readonly Emitter[], points: readonly FluxPoint[]): Refusal | null {
   for (const emitter of emitters) {
     const [x = 0, y = 0, z = 0] = emitter.elements[0]?.centre ?? []
-    const reach = reachOf(emitter)
+    const near = reachOf(emitter) ** 2
     const index = points.findIndex(
-      ({ at }) => Math.hypot(at[0] - x, at[1] - y, at[2] - z) < reach && touchesElement(emitter, at),
+      ({ at }) =>
+        (at[0] - x) * (at[0] - x) + (at[1] - y) * (at[1] - y) + (at[2] - z) * (at[2] - z) < near &&
+        touchesElement(emitter, at),
     )
     if (index >= 0) return unusable(`points.${index}`, `The point lies on an element of ${emitter.id}.`)
   }

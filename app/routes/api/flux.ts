@@ -2,6 +2,7 @@ import { isRefusal, refuseMethod, respond } from '#app/server/answers.server.ts'
 import { refuseComputation } from '#app/server/computation-refusal.server.ts'
 import { findModels } from '#app/server/data/heaters.server.ts'
 import { readFluxRequest } from '#app/server/flux-request.server.ts'
+import { fluxResponse } from '#app/server/flux-response.server.ts'
 import { pointFluxes } from '#app/server/flux.server.ts'
 import { readJson } from '#app/server/json-body.server.ts'
 import { requireMember } from '#app/server/session.server.ts'
@@ -18,8 +19,7 @@ export async function action({ request }: Route.ActionArgs) {
   const asked = readFluxRequest(read.json, await findModels(member))
   if (isRefusal(asked)) return respond(asked)
   try {
-    const fluxes = await pointFluxes(asked.emitters, asked.points)
-    return Response.json({ ...fluxes, warnings: asked.warnings })
+    return fluxResponse(await pointFluxes(asked.emitters, asked.points), asked.warnings)
   } catch (problem) {
     return refuseComputation(problem)
   }
