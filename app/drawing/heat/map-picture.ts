@@ -135,7 +135,7 @@ export function answerMap(question: MapQuestion, cache: MapCache): MapAnswer {
     const value = values[at] ?? NaN
     if (value > peak) peak = value
   }
-  const errorBound = question.quantity.kind === 'feels-like' ? 0 : (cache.map?.cutOff.errorBound ?? 0)
+  const errorBound = question.quantity.kind === 'feels-like' ? 0 : (cache.map?.errorBound ?? 0)
   const isPlain = question.levels.length === 0 && question.edges?.length === 0
   const picture = isPlain
     ? { bands: [], lines: [], peaks: [] }

@@ -168,6 +168,7 @@ export function HeaterMark({
   pen,
   selected = false,
   named = true,
+  nameAt = null,
 }: {
   heater: MountedHeater
   model: HeaterModel | null
@@ -176,10 +177,12 @@ export function HeaterMark({
   pen: Pen
   selected?: boolean
   named?: boolean
+  /** Middle of the name, px; null: beyond the upper end, or the left end of a level heater. */
+  nameAt?: Vec2 | null
 }) {
   const place = heaterPlace(heater, model, view, pen)
   const chevron = chevronOf(heater, place, pen)
-  const [nameX, nameY] = heaterNameAt(place, textWidth(heater.id, pen.text, 600), pen)
+  const [nameX, nameY] = nameAt ?? heaterNameAt(place, textWidth(heater.id, pen.text, 600), pen)
   const reach = Math.max(place.length, 28)
   const depth = Math.max(place.width, 24)
   return (

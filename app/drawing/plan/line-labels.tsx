@@ -105,10 +105,11 @@ export function LineLabels({
   )
 }
 
-/** Figures of the highest points above the scale's end, beside the point where there is room. */
+/** Figures of the highest points above the scale's end: on the floor, beside the point where there is room. */
 export function placePeaks(
   picture: HeatPicture,
   quantity: QuantityScale,
+  outline: readonly Vec2[],
   view: PlanView,
   pen: Pen,
   occupied: readonly Patch[],
@@ -124,7 +125,7 @@ export function placePeaks(
         const x = cx + reach * 1.5 * pen.k * Math.cos((turn * Math.PI) / 180)
         const y = cy + reach * pen.k * Math.sin((turn * Math.PI) / 180)
         const box = patch(x, y, width, pen.text)
-        if (taken.some((other) => meets(box, other, 3 * pen.k))) continue
+        if (!isWithin(box, outline, view) || taken.some((other) => meets(box, other, 3 * pen.k))) continue
         taken.push(box)
         return [{ text, x, y }]
       }

@@ -9,6 +9,7 @@ import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
 import { Beyond } from '#app/drawing/plan/beyond.tsx'
 import { PlanDimensions } from '#app/drawing/plan/dimensions.tsx'
 import { PoleMark, TableMark } from '#app/drawing/plan/furniture.tsx'
+import { placeHeaterNames } from '#app/drawing/plan/heater-names.ts'
 import { HeaterMark } from '#app/drawing/plan/heater.tsx'
 import { LineLabels, placeLineLabels, placePeaks } from '#app/drawing/plan/line-labels.tsx'
 import { MemberLines, MemberNames } from '#app/drawing/plan/members.tsx'
@@ -80,6 +81,7 @@ export function Plan(props: PlanProps) {
   const { detail = workingDetail, selected = nothing, cuts = noCuts } = props
   const withFigure = seatsCarryFigures(site.seats, view, pen)
   const modelOf = (code: string) => models.get(code) ?? null
+  const names = placeHeaterNames(layout, models, view, pen, takenBySmallThings(site, view, pen, withFigure))
   return (
     <g fontFamily={fontFamily}>
       <PlanGround {...{ name, site, view, pen, cuts }} named={detail.names} />
@@ -102,6 +104,7 @@ export function Plan(props: PlanProps) {
           {...{ heater, site, view, pen }}
           model={modelOf(heater.model)}
           selected={selected.has(heater.id)}
+          nameAt={names.get(heater.id) ?? null}
         />
       ))}
       {detail.spacings ? (
@@ -148,7 +151,17 @@ const SeatMarkMemo = memo(
     before.pointed === now.pointed &&
     saysTheSame(before.sign, now.sign),
 )
-const HeaterMarkMemo = memo(HeaterMark)
+const HeaterMarkMemo = memo(
+  HeaterMark,
+  (before, now) =>
+    before.heater === now.heater &&
+    before.model === now.model &&
+    before.site === now.site &&
+    before.view === now.view &&
+    before.pen === now.pen &&
+    before.selected === now.selected &&
+    before.nameAt?.join() === now.nameAt?.join(),
+)
 
 interface PartProps {
   readonly name: string
@@ -222,7 +235,7 @@ export const PlanHeatFigures = memo(function PlanHeatFigures({
   const notes = named ? placeNotes(site, view, pen, things).map((note) => notePatch(note, pen)) : []
   const taken = [...things, ...notes]
   const small = [...takenBySmallThings(site, view, pen, withFigure), ...takenByHeaters(layout, models, view, pen)]
-  const peaks = placePeaks(picture, quantity, view, pen, small)
+  const peaks = placePeaks(picture, quantity, site.floor, view, pen, small)
   return (
     <>
       <LineLabels

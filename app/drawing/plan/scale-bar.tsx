@@ -4,11 +4,10 @@ import { Words } from '#app/drawing/text/words.tsx'
 
 const foot = 0.3048
 
-/** Length of one part of a scale bar, in the drawing's unit, so that `parts` of them come near to `wanted` px. */
-export function scaleBarStep(pxPerUnit: number, wanted: number, parts: number): number {
+/** Length of one part of a scale bar, in the drawing's unit: the largest round one of which `parts` fit in `most` px. */
+export function scaleBarStep(pxPerUnit: number, most: number, parts: number): number {
   const steps = [0.25, 0.5, 1, 2, 5, 10, 20, 50]
-  const off = (step: number) => Math.abs(Math.log((step * parts * pxPerUnit) / wanted))
-  return steps.reduce((best, step) => (off(step) < off(best) ? step : best))
+  return steps.findLast((step) => step * parts * pxPerUnit <= most) ?? 0.1
 }
 
 /** A scale bar of equal parts with figures below; (x, y) is its lower right or left corner, `scale` px per m. */
@@ -18,7 +17,7 @@ export function ScaleBar({
   scale,
   displayUnits,
   pen,
-  wanted = 200,
+  most = 224,
   parts = 3,
   anchor = 'right',
 }: {
@@ -27,12 +26,12 @@ export function ScaleBar({
   scale: number
   displayUnits: Site['displayUnits']
   pen: Pen
-  wanted?: number
+  most?: number
   parts?: number
   anchor?: 'left' | 'right'
 }) {
   const pxPerUnit = displayUnits === 'metric' ? scale : scale * foot
-  const step = scaleBarStep(pxPerUnit, wanted, parts)
+  const step = scaleBarStep(pxPerUnit, most, parts)
   const part = step * pxPerUnit
   const left = anchor === 'right' ? x - parts * part : x
   const unit = displayUnits === 'metric' ? ' m' : ' ft'

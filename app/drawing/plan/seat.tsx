@@ -11,6 +11,17 @@ export type SeatOutcome = TargetOutcome
 /** Words of the seven-point scale that a customer's plan shows as strokes. */
 export type WarmthWord = SensationWord
 
+/** The words from the coldest to the hottest. */
+export const warmthWords = [
+  'cold',
+  'cool',
+  'slightly cool',
+  'neutral',
+  'slightly warm',
+  'warm',
+  'hot',
+] as const satisfies readonly WarmthWord[]
+
 /** What a seat's disc says: a figure inside and a ring by outcome, or strokes for a customer. */
 export type SeatSign =
   | { readonly kind: 'figure'; readonly text: string; readonly outcome: SeatOutcome }

@@ -1,10 +1,10 @@
 import { coverHeightAt, coverOutline } from '#app/domain/site/cover.ts'
-import { toleranceOf } from '#app/domain/site/dimension.ts'
 import { undersideAt } from '#app/domain/site/member.ts'
 import type { Cover, Member, Obstacle, Pole, Site, Table } from '#app/domain/site/site.ts'
 import { degrees, type Vec2 } from '#app/domain/vector.ts'
 import { alongCut, behindCut, onSection, pointOfCut, type SectionView } from '#app/drawing/section/section-view.ts'
 import type { Pen } from '#app/drawing/pen.ts'
+import { toleranceOf } from '#app/domain/site/tolerance.ts'
 
 const rounded = (value: number): number => Math.round(value * 10) / 10
 const path = (points: readonly Vec2[]): string => `M${points.map((p) => p.map(rounded).join(' ')).join('L')}`

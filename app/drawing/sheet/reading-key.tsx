@@ -1,10 +1,9 @@
 import type { ReactElement } from 'react'
 import type { Site } from '#app/domain/site/site.ts'
-import { sensationWords } from '#app/domain/comfort/sensation.ts'
 import { printPen } from '#app/drawing/pen.ts'
 import { TiltChevron } from '#app/drawing/plan/heater.tsx'
 import { sawTooth } from '#app/drawing/plan/obstacle.tsx'
-import { SeatRing, WarmthDisc, type SeatOutcome } from '#app/drawing/plan/seat.tsx'
+import { SeatRing, WarmthDisc, warmthWords, type SeatOutcome } from '#app/drawing/plan/seat.tsx'
 import { sheetInk } from '#app/drawing/plot/seat-plot.tsx'
 import type { SheetVariant } from '#app/drawing/sheet/sheet-facts.ts'
 import type { Box } from '#app/drawing/sheet/sheet-layout.ts'
@@ -79,7 +78,7 @@ function entriesOf(site: Site, variants: readonly SheetVariant[]): Entry[] {
           },
         ]
       : []),
-    ...sensationWords
+    ...warmthWords
       .filter((word) => words.has(word))
       .map((word) => ({
         word: `Feels ${word}`,

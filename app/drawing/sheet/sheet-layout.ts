@@ -1,4 +1,4 @@
-import { extentOf, planViewOf, type PlanMargins, type PlanView } from '#app/drawing/plan/plan-view.ts'
+import { extentOf, type PlanMargins, type PlanView } from '#app/drawing/plan/plan-view.ts'
 import { wallBand } from '#app/drawing/plan/wall.tsx'
 import type { Site } from '#app/domain/site/site.ts'
 
@@ -48,14 +48,30 @@ export interface SheetLayout {
 }
 
 const headingHeight = 25
-const figuresHeight = { roomy: 54, tight: 34 }
+/** Figures stand below a plan on a sheet of two, beside it on a sheet of three or four. */
+const figuresBelow = 54
+const figuresBeside = 160
 
 /** Room around the floor on a sheet's plan: what lies beyond above it, the wall and the spacings below. */
-function marginsAt(site: Site, scale: number): PlanMargins {
-  const hasBeyond = site.beyond.length > 0
-  const hasWall = site.walls.length > 0
-  return { top: hasBeyond ? 24 : 12, right: 6.5, bottom: (hasWall ? wallBand * scale : 0) + 29, left: 6.5 }
+function marginsAt(site: Site, scale: number, isTight: boolean): PlanMargins {
+  const above = site.beyond.length > 0 ? (isTight ? 20 : 24) : 12
+  const wall = site.walls.length > 0 ? wallBand * scale : 0
+  return { top: above, right: 6.5, bottom: wall + (isTight ? 24 : 29), left: 6.5 }
 }
+
+/** The largest of the scales at which a plan and its margins have no more than the room, 1 : n. */
+function denominatorFor(site: Site, width: number, height: number, isTight: boolean): number {
+  const { x, y } = extentOf(site.floor)
+  const fits = (n: number): boolean => {
+    const scale = pxPerMetre(n)
+    const around = marginsAt(site, scale, isTight)
+    const isNarrow = (x[1] - x[0]) * scale + around.left + around.right <= width + 0.5
+    return isNarrow && (y[1] - y[0]) * scale + around.top + around.bottom <= height
+  }
+  return scales.find(fits) ?? 1000
+}
+
+const pxPerMetre = (denominator: number): number => (1000 * perMillimetre) / denominator
 
 /** Layout of the sheet: plans at one scale, 1 : 100 when they fit, two beside each other. */
 export function sheetLayoutOf(site: Site, count: number): SheetLayout {
@@ -63,51 +79,56 @@ export function sheetLayoutOf(site: Site, count: number): SheetLayout {
   const top = margin.top + header
   const stripTop = sheetSize.height - margin.bottom - strip
   const column = (inner - gutter) / 2
-  const rows = Math.max(1, Math.ceil(count / 2))
-  const figures = rows === 1 ? figuresHeight.roomy : figuresHeight.tight
-  const least = rows === 1 ? 226 : 168
-  const room = (stripTop - top - least) / rows - headingHeight - figures - 8
-  const { x, y } = extentOf(site.floor)
-  const pxPerMetre = (n: number) => (1000 * perMillimetre) / n
-  const fits = (n: number): boolean => {
-    const scale = pxPerMetre(n)
-    const around = marginsAt(site, scale)
-    const isWide = (x[1] - x[0]) * scale + around.left + around.right <= column + 0.5
-    return isWide && (y[1] - y[0]) * scale + around.top + around.bottom <= room
-  }
-  const denominator = scales.find(fits) ?? 1000
-  const scale = pxPerMetre(denominator)
-  const around = marginsAt(site, scale)
-  const planHeight = (y[1] - y[0]) * scale + around.top + around.bottom
-  const blockHeight = headingHeight + planHeight + figures + 8
-  const fitted = planViewOf(site, column, planHeight, around)
-  const view: PlanView = {
-    ...fitted,
-    scale,
-    x0: (column - scale * (x[1] - x[0])) / 2 - scale * x[0],
-    y0: around.top + scale * y[1],
-  }
+  const isTight = count > 2
+  const rows = isTight ? 2 : 1
+  const least = isTight ? 182 : 218
+  const fixed = headingHeight + (isTight ? 4 : figuresBelow + 8)
+  const room = (stripTop - top - least) / rows - fixed
+  const denominator = denominatorFor(site, isTight ? column - figuresBeside : column, room, isTight)
+  const view = sheetView(site, denominator, column, isTight)
+  const block = fixed + view.height
   const variants = Array.from({ length: count }, (_, i) => {
     const left = margin.side + (i % 2) * (column + gutter)
-    const blockTop = top + Math.floor(i / 2) * blockHeight
-    return {
-      heading: { x: left, y: blockTop, width: column, height: headingHeight },
-      plan: { x: left, y: blockTop + headingHeight, width: column, height: planHeight },
-      view,
-      figures: { x: left, y: blockTop + headingHeight + planHeight, width: column, height: figures },
-    }
+    return variantBox(left, top + Math.floor(i / 2) * block, column, view, isTight)
   })
-  const lower = top + rows * blockHeight + 10
+  const lower = top + rows * block + 10
   const lowerHeight = stripTop - 16 - lower
-  const plotWidth = 620
+  const isThree = count === 3
+  const plotWidth = isThree ? inner : 614
+  const notes = isThree
+    ? { x: margin.side + column + gutter, y: top + block, width: column, height: block - 6 }
+    : { x: margin.side + plotWidth + 22, y: lower, width: inner - plotWidth - 22, height: lowerHeight }
+  const keyWidth = 139
   return {
     denominator,
     header: { x: margin.side, y: margin.top, width: inner, height: header },
     legend: { x: margin.side + inner - 366, y: margin.top + 17, width: 354, height: 8.1 },
     variants,
     plot: { x: margin.side, y: lower, width: plotWidth, height: Math.min(lowerHeight, 330) },
-    cautions: { x: margin.side + plotWidth + 22, y: lower, width: 254, height: lowerHeight },
-    key: { x: margin.side + inner - 126, y: lower, width: 126, height: lowerHeight },
+    cautions: { ...notes, width: notes.width - keyWidth - 20 },
+    key: { ...notes, x: notes.x + notes.width - keyWidth, width: keyWidth },
     strip: { x: margin.side, y: stripTop, width: inner, height: strip },
   }
+}
+
+/** The view of every plan on the sheet: in the middle of its column, or at its left where figures stand beside it. */
+function sheetView(site: Site, denominator: number, column: number, isTight: boolean): PlanView {
+  const { x, y } = extentOf(site.floor)
+  const scale = pxPerMetre(denominator)
+  const around = marginsAt(site, scale, isTight)
+  const width = isTight ? column - figuresBeside : column
+  return {
+    scale,
+    width,
+    height: (y[1] - y[0]) * scale + around.top + around.bottom,
+    x0: (width - scale * (x[1] - x[0])) / 2 - scale * x[0],
+    y0: around.top + scale * y[1],
+  }
+}
+
+function variantBox(x: number, y: number, column: number, view: PlanView, isTight: boolean): VariantBox {
+  const plan = { x, y: y + headingHeight, width: view.width, height: view.height }
+  const below = { x, y: plan.y + plan.height, width: column, height: figuresBelow }
+  const beside = { x: x + view.width + 12, y: plan.y + 6, width: figuresBeside - 12, height: view.height - 6 }
+  return { heading: { x, y, width: column, height: headingHeight }, plan, view, figures: isTight ? beside : below }
 }

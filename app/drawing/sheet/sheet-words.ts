@@ -1,6 +1,6 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { LayoutTotals, SeatWarmth, WindName } from '#app/domain/comfort/seat-warmth.ts'
-import { sensationWords } from '#app/domain/comfort/sensation.ts'
+import { warmthWords } from '#app/drawing/plan/seat.tsx'
 import { fromSi, type DisplayUnits } from '#app/domain/units.ts'
 
 const counted = (warmth: readonly SeatWarmth[]): SeatWarmth[] =>
@@ -10,7 +10,7 @@ const counted = (warmth: readonly SeatWarmth[]): SeatWarmth[] =>
 export function seatsInWords(warmth: readonly SeatWarmth[]): string {
   const words = counted(warmth).flatMap(({ sensation }) => sensation.calm.after?.word ?? [])
   if (words.length === 0) return '–'
-  return sensationWords
+  return warmthWords
     .map((word) => ({ word, count: words.filter((one) => one === word).length }))
     .filter(({ count }) => count > 0)
     .map(({ word, count }) => `${count} ${word}`)

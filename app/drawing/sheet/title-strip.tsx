@@ -37,8 +37,8 @@ export function TitleStrip({
   const versions = listText(variants.map(({ number, revision }) => `${number}.${revision}`))
   const barAt = box.x + 322
   const cells: { x: number; cell: Cell }[] = [
-    { x: box.x + 118, cell: cell('Job', site.name.split(',')[0] ?? site.name, 96) },
-    { x: box.x + 222, cell: cell('Sheet', `Variants ${numbers}`, 84) },
+    { x: box.x + 118, cell: cell('Job', site.name.split(',')[0] ?? site.name, 88) },
+    { x: box.x + 222, cell: cell('Sheet', `Variants ${numbers}`, 80) },
     { x: box.x + 556, cell: cell('Picture', 'Calculated, not a thermal photograph', 104) },
     { x: box.x + 676, cell: cell('Drawn', organisation, 138) },
     { x: box.x + 826, cell: cell('Checked', checked ?? 'Not yet checked', 92) },
@@ -104,7 +104,7 @@ function ScaleCell({
         x={x + textWidth('0', printPen.text, 500)}
         y={box.y + 29}
         anchor="left"
-        wanted={186}
+        most={206}
         parts={5}
         {...{ scale, displayUnits }}
         pen={printPen}

@@ -47,7 +47,7 @@ export function VariantBlock({
   models: ReadonlyMap<string, HeaterModel>
   quantity: QuantityScale
   mark: VariantMarkKind
-  /** Figures in one row of small words. */
+  /** Figures stand in a column beside the plan. */
   tight: boolean
 }) {
   const figures = sheetFigures(variant.warmth, variant.totals, brief, site.displayUnits, variant.priceWithTax ?? null)
@@ -65,7 +65,7 @@ export function VariantBlock({
           signs={seatSigns(variant.warmth, quantity.format)}
         />
       </svg>
-      <FigureRow box={box.figures} figures={figures} tight={tight} />
+      {tight ? <FigureColumn box={box.figures} figures={figures} /> : <FigureRow box={box.figures} figures={figures} />}
     </g>
   )
 }
@@ -98,40 +98,81 @@ function columnsOf(figures: readonly SheetFigure[], width: number, small: number
   return needed.map((one) => one + spare)
 }
 
-function FigureRow({ box, figures, tight }: { box: Box; figures: readonly SheetFigure[]; tight: boolean }) {
-  const large = tight ? 8 : 9.2
-  const small = tight ? 7.2 : 7.8
-  const widths = columnsOf(figures, box.width, small, large)
+function FigureRow({ box, figures }: { box: Box; figures: readonly SheetFigure[] }) {
+  const widths = columnsOf(figures, box.width, 7.8, 9.2)
   const bottom = box.y + box.height - 2
   return (
     <>
       <line x1={box.x} x2={box.x + box.width} y1={box.y} y2={box.y} stroke={sheetInk.rule} strokeWidth={0.9} />
       <line x1={box.x} x2={box.x + box.width} y1={bottom} y2={bottom} stroke={sheetInk.rule} strokeWidth={0.9} />
-      {figures.map(({ name, lines }, i) => {
+      {figures.map((figure, i) => {
         const x = box.x + widths.slice(0, i).reduce((sum, one) => sum + one, 0) + (i === 0 ? 0 : 8)
         return (
-          <g key={name}>
+          <g key={figure.name}>
             {i === 0 ? null : (
               <line x1={x - 8} x2={x - 8} y1={box.y} y2={bottom} stroke={sheetInk.rule} strokeWidth={0.9} />
             )}
-            <Words x={x} y={box.y + (tight ? 9 : 13)} size={small} weight={400} colour={sheetInk.quiet}>
-              {name}
-            </Words>
-            {lines.map((line, row) => (
-              <Words
-                key={line}
-                x={x}
-                y={box.y + (tight ? 19 : 26) + row * (tight ? 10 : 13)}
-                size={large}
-                weight={600}
-                colour={sheetInk.ink}
-              >
-                {line}
-              </Words>
-            ))}
+            <Figure x={x} y={box.y + 13} figure={figure} small={7.8} large={9.2} />
           </g>
         )
       })}
+    </>
+  )
+}
+
+/** The figures one below the other; those that have no more room are left out from the end. */
+function FigureColumn({ box, figures }: { box: Box; figures: readonly SheetFigure[] }) {
+  const heights = figures.map(({ lines }) => 15 + lines.length * 10.5)
+  const tops = heights.map((_, i) => heights.slice(0, i).reduce((sum, one) => sum + one, box.y))
+  return (
+    <>
+      <line
+        x1={box.x - 8}
+        x2={box.x - 8}
+        y1={box.y}
+        y2={box.y + box.height - 8}
+        stroke={sheetInk.rule}
+        strokeWidth={0.9}
+      />
+      {figures.map((figure, i) => {
+        const y = tops[i] ?? box.y
+        const fits = y + (heights[i] ?? 0) <= box.y + box.height + 4
+        return fits ? <Figure key={figure.name} x={box.x} y={y + 8} figure={figure} small={7.2} large={8.2} /> : null
+      })}
+    </>
+  )
+}
+
+function Figure({
+  x,
+  y,
+  figure,
+  small,
+  large,
+}: {
+  x: number
+  y: number
+  figure: SheetFigure
+  small: number
+  large: number
+}) {
+  return (
+    <>
+      <Words x={x} y={y} size={small} weight={400} colour={sheetInk.quiet}>
+        {figure.name}
+      </Words>
+      {figure.lines.map((line, row) => (
+        <Words
+          key={line}
+          x={x}
+          y={y + large * 1.35 + row * large * 1.35}
+          size={large}
+          weight={600}
+          colour={sheetInk.ink}
+        >
+          {line}
+        </Words>
+      ))}
     </>
   )
 }
