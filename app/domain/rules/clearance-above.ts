@@ -4,10 +4,10 @@ import { coversOver } from '#app/domain/rules/about-heater.ts'
 import { clearanceAround, clearanceFor } from '#app/domain/rules/clearance-around.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { coverPlane, type Plane } from '#app/domain/site/cover.ts'
-import { toleranceOf } from '#app/domain/site/dimension.ts'
 import { isCombustible } from '#app/domain/site/solids.ts'
 import type { Cover, Site } from '#app/domain/site/site.ts'
 import { add, scale } from '#app/domain/vector.ts'
+import { toleranceOf } from '#app/domain/site/tolerance.ts'
 
 const titles = (name: string) => ({
   fails: `Too near above: ${name}`,

@@ -4,7 +4,7 @@ import { irradianceAt } from '#app/domain/flux/irradiance.ts'
 import { findingOf, judgedBy, type LayoutCheck, type Rule } from '#app/domain/rules/check.ts'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
-import { headOf, seatTolerance } from '#app/domain/rules/seat-tolerance.ts'
+import { seatTolerance } from '#app/domain/rules/seat-tolerance.ts'
 import type { Vec3 } from '#app/domain/vector.ts'
 
 /** Below this share of a limit no tolerance of a seat's place (25 mm) can bring a figure to it. */
@@ -56,7 +56,7 @@ function againstLimit(
     if (value === null) continue
     if (!hottest || value > hottest.value) hottest = { seat, value }
     if (value < farBelow * limit.value) continue
-    const tolerance = seatTolerance(site, seat.seat, headOf, value, figureNear(emitters, seat, value))
+    const tolerance = seatTolerance(site, seat.seat, 'headHeight', value, figureNear(emitters, seat, value))
     const figures = { value, limit: limit.value, margin: limit.value - value, tolerance, remedy: 'Raise, move or tilt the nearest heater, or use a lower stage.' } // prettier-ignore
     const finding = judgedBy(rule({ kind: 'seat', id: seat.seat.id }), titles(weight), figures)
     if (finding.outcome !== 'pass') findings.push(finding)
@@ -84,6 +84,6 @@ function figureNear(
 ): (point: Vec3) => number {
   const direction = headDirection ?? [0, 0, 1]
   const at = (point: Vec3) => emitters.reduce((sum, emitter) => sum + irradianceAt(emitter, point, direction), 0)
-  const nominal = at(headOf(seat))
+  const nominal = at([seat.x, seat.y, seat.headHeight])
   return (point) => (nominal > 0 ? (value * at(point)) / nominal : value)
 }

@@ -1,8 +1,8 @@
 import { findingOf, judgedBy, type Found, type Rule } from '#app/domain/rules/check.ts'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
-import { largestTolerance, toleranceOf } from '#app/domain/site/dimension.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { solidOf, type Solid } from '#app/domain/site/solids.ts'
+import { largestTolerance, toleranceOf } from '#app/domain/site/tolerance.ts'
 
 /** What one thing leaves of a clearance. */
 export interface Left {

@@ -1,9 +1,9 @@
 import { bayOf, type Bay } from '#app/domain/layout/bay.ts'
 import { findingOf, heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
-import { toleranceOf } from '#app/domain/site/dimension.ts'
 import type { Member, Site } from '#app/domain/site/site.ts'
 import { isCombustible } from '#app/domain/site/solids.ts'
+import { toleranceOf } from '#app/domain/site/tolerance.ts'
 
 /**
  * A recess box lies in a bay, its body clear of every member by the side clearance. It is set out from the members

@@ -1,7 +1,7 @@
 import { coversOver } from '#app/domain/rules/about-heater.ts'
 import { heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
-import { toleranceOf } from '#app/domain/site/dimension.ts'
+import { toleranceOf } from '#app/domain/site/tolerance.ts'
 
 /** The void above the ceiling is as deep as the model's recess box needs. Null for other mounts. */
 export function recessVoid(check: HeaterCheck): Finding | null {

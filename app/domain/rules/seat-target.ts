@@ -3,7 +3,7 @@ import type { Emitter } from '#app/domain/flux/emitter.ts'
 import { irradianceAt } from '#app/domain/flux/irradiance.ts'
 import { findingOf, judgedBy, type LayoutCheck, type Rule } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
-import { bodyPointOf, seatTolerance } from '#app/domain/rules/seat-tolerance.ts'
+import { seatTolerance } from '#app/domain/rules/seat-tolerance.ts'
 import type { Vec3 } from '#app/domain/vector.ts'
 
 /** Farther from both ends of the band than this share of the nearer one, no tolerance of a seat's place matters. */
@@ -26,7 +26,7 @@ export function seatTarget({ site, brief, layout, warmth }: LayoutCheck, emitter
     if (warm.body === null || warm.cannotTell.length > 0) {
       return [findingOf(rule(subject), 'cannot tell', { title: 'Heat at this seat cannot be told' })]
     }
-    const finding = againstBand(rule(subject), warm, { low, high }, (value) => seatTolerance(site, warm.seat, bodyPointOf, value, figureAt)) // prettier-ignore
+    const finding = againstBand(rule(subject), warm, { low, high }, (value) => seatTolerance(site, warm.seat, 'bodyHeight', value, figureAt)) // prettier-ignore
     return finding.outcome === 'pass' ? [] : [finding]
   })
   const passing = heated.length - findings.length
@@ -39,7 +39,7 @@ function againstBand(
   rule: Rule,
   { body }: SeatWarmth,
   { low, high }: { low: number; high: number },
-  toleranceOfValue: (value: number) => number | null,
+  toleranceOfValue: (value: number) => number,
 ): Finding {
   const value = body ?? 0
   const cold = value - low < high - value

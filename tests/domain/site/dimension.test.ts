@@ -1,9 +1,10 @@
 import { describe, expect, it } from 'vitest'
 import { coverHeightAt } from '#app/domain/site/cover.ts'
-import { largestTolerance, moveDimension, toleranceOf } from '#app/domain/site/dimension.ts'
+import { moveDimension } from '#app/domain/site/dimension.ts'
 import type { Dimension, Site } from '#app/domain/site/site.ts'
 import { demoSites } from '#drizzle/seed/demo-sites.ts'
 import { plainSite } from '#tests/support/plain-site.ts'
+import { largestTolerance, toleranceOf } from '#app/domain/site/tolerance.ts'
 
 const roofHeights = (site: Site) => coverHeightAt(site.covers[0]!, 6.6, 4.05)
 
@@ -79,6 +80,12 @@ describe('the combined tolerance', () => {
     const things = [{ of: 'cover' as const, id: 'cover' }, { of: 'obstacle' as const, id: 'fan' }] // prettier-ignore
     // Ceiling and fan go up together, so their distance has no tolerance at all.
     expect(toleranceOf(fan, site, things)).toBeCloseTo(0, 12)
+    // Their sum moves twice as far, once: 2 · 8 mm.
+    const sum = (of: Site) => {
+      const shape = of.obstacles.find(({ id }) => id === 'fan')!.shape
+      return shape.z[1] + (of.covers[0]?.corners[0]?.[2] ?? 0)
+    }
+    expect(toleranceOf(sum, site, things)).toBeCloseTo(0.016, 9)
   })
 
   it('is null when the figure is, and at most the largest tolerance of the thing', () => {
