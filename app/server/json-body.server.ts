@@ -42,8 +42,8 @@ function faultOf(value: unknown, path: string, depth: number): Refusal | null {
   return null
 }
 
-/** The first thing in parsed JSON that no schema should have to meet; walks without recursion. */
-function findFault(root: unknown): Refusal | null {
+/** The first thing in a value that can never be kept, whatever its schema says; walks without recursion. */
+export function findFault(root: unknown): Refusal | null {
   const open: { value: unknown; path: string; depth: number }[] = [{ value: root, path: '', depth: 0 }]
   for (let next = open.pop(); next; next = open.pop()) {
     const fault = faultOf(next.value, next.path || 'body', next.depth)

@@ -56,12 +56,12 @@ function findAuthors(authUrl: string): Promise<{ own: Author; other: Author } | 
 }
 
 /** Adds the invented catalogue to an organisation. */
-export async function seedCatalogue(tx: Transaction, { organisationId }: Author): Promise<void> {
+async function seedCatalogue(tx: Transaction, { organisationId }: Author): Promise<void> {
   await tx.insert(heaterModels).values(demoModels().map((body) => ({ organisationId, code: body.code, body })))
 }
 
 /** Adds a job with its site, brief and numbered variants, all at revision 1; gives the job's id. */
-export async function seedJob(tx: Transaction, author: Author, demo: DemoSite): Promise<string> {
+async function seedJob(tx: Transaction, author: Author, demo: DemoSite): Promise<string> {
   const { organisationId, authorId } = author
   const { name, customer } = demo.job
   const [job] = await tx

@@ -182,6 +182,9 @@ describe('creating a job', () => {
       ]),
     ).toEqual([[made[0]!.variantId, 1, 1]])
     expect(await createJob(member, once, { ...asked, name: 'Other' })).toMatchObject({ status: 409 })
+    for (const name of ['', 'a\u0000b', 'a\ud800']) {
+      expect(await createJob(member, key(), { ...asked, name })).toMatchObject({ status: 400, path: 'name' })
+    }
   })
 
   const floorCorners = (x: number, y: number) => [

@@ -1,8 +1,9 @@
-import { startingSite, type JobRequest } from '#app/domain/job/job-request.ts'
-import type { Answer, Refusal } from '#app/server/answers.server.ts'
+import { jobRequestSchema, startingSite, type JobRequest } from '#app/domain/job/job-request.ts'
+import { isRefusal, type Answer, type Refusal } from '#app/server/answers.server.ts'
 import { insertBrief } from '#app/server/data/briefs.server.ts'
 import { insertSite } from '#app/server/data/sites.server.ts'
 import { insertVariant } from '#app/server/data/variant-creation.server.ts'
+import { checked, findFault } from '#app/server/json-body.server.ts'
 import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
 import { answerOnce } from '#app/server/saving.server.ts'
 import type { Member } from '#app/server/session.server.ts'
@@ -28,13 +29,15 @@ async function insertJob(
 
 /**
  * Creates a job once per key: a bare floor, the brief, and a first variant without heaters. The answer's body is
- * `{ id, variantId }`, for the same key always the same.
+ * `{ id, variantId }`, for the same key always the same. Refused with 400 and the field when something cannot be kept.
  */
-export function createJob(member: Member, key: string, asked: JobRequest): Promise<Answer | Refusal> {
+export async function createJob(member: Member, key: string, asked: JobRequest): Promise<Answer | Refusal> {
+  const request = findFault(asked) ?? checked(jobRequestSchema, asked)
+  if (isRefusal(request)) return request
   return asOrganisation(member.organisationId, (tx) =>
-    answerOnce(tx, { member, resource: 'jobs', key, bodyHash: contentHash(asked) }, async () => ({
+    answerOnce(tx, { member, resource: 'jobs', key, bodyHash: contentHash(request.value) }, async () => ({
       status: 201,
-      body: await insertJob(tx, member, asked),
+      body: await insertJob(tx, member, request.value),
       revision: null,
     })),
   )

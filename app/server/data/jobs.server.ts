@@ -7,7 +7,7 @@ import { requireMay, type Member } from '#app/server/session.server.ts'
 import { jobs, variants } from '#drizzle/schema.ts'
 
 /** A job as lists and titles show it; `updatedAt` is ISO 8601. */
-export interface Job {
+interface Job {
   readonly id: string
   readonly name: string
   readonly customer: string

@@ -66,18 +66,6 @@ export function listVariants(job: OpenJob): Promise<VariantSummary[]> {
   })
 }
 
-/** A variant of a job; null when the job has none by that id or it was deleted. */
-export async function findVariant(job: OpenJob, variantId: string | undefined): Promise<Variant | null> {
-  if (!isId(variantId)) return null
-  const [row] = await asOrganisation(job.member.organisationId, (tx) =>
-    tx
-      .select(variantColumns)
-      .from(variants)
-      .where(and(own(variants), eq(variants.id, variantId), eq(variants.jobId, job.id), present)),
-  )
-  return row ? variantOf(row) : null
-}
-
 /**
  * The variant that a URL names, for a person who may do that to it. Throws 401, 403, or 404 when it is not a variant
  * of the person's organisation or was deleted; `deleted` lets deleted ones through.
