@@ -1,7 +1,7 @@
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { shortName } from '#app/domain/heaters/short-name.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
-import { formatQuantity, fromSi, type DisplayUnits } from '#app/domain/units.ts'
+import { formatLength, formatQuantity, fromSi, type DisplayUnits } from '#app/domain/units.ts'
 import type { FluxUnit } from '#app/editor/view-choice.ts'
 
 /** A figure that is not there. */
@@ -27,8 +27,12 @@ export function warmthFigure(celsius: number | null, units: DisplayUnits): strin
     .replace('-', '−')
 }
 
-/** A length in plan as the fields show it: "2.35", "7 ft 8 1/2 in" come from formatLength; this is its number alone. */
+/** An angle's number: "22", "−7.5". */
 export const degreesFigure = (angle: number): string => `${Math.round(angle * 10) / 10}`.replace('-', '−')
+
+/** A length that nobody typed: whole centimetres or eighths of an inch. */
+export const roughLength = (metres: number, units: DisplayUnits): string =>
+  formatLength(Math.round(metres * 100) / 100, units)
 
 /** A signed figure with a real minus. */
 export const signedFigure = (value: number, digits: number): string => value.toFixed(digits).replace('-', '−')

@@ -56,14 +56,14 @@ export function PlanMarks(props: PlanMarksProps) {
         )}
         <PlanStructure {...{ name, site, view, pen }} named={words} />
       </g>
-      {warmth.map((each) => (
+      {site.seats.map((seat, i) => (
         <PlanSeat
-          key={each.seat.id}
-          seat={each.seat}
-          figure={each.body === null ? null : fluxFigure(each.body, props.fluxUnit)}
-          outcome={each.target}
+          key={seat.id}
+          seat={seat}
+          figure={figureOf(warmth[i], props.fluxUnit)}
+          outcome={warmth[i]?.target ?? 'no heater'}
           unit={props.fluxUnit}
-          pointed={props.seatId === each.seat.id}
+          pointed={props.seatId === seat.id}
           {...{ view, pen, withFigure }}
         />
       ))}
@@ -85,6 +85,10 @@ export function PlanMarks(props: PlanMarksProps) {
     </>
   )
 }
+
+/** The figure in a seat's disc; null with no heater and before figures are reckoned. */
+const figureOf = (warmth: SeatWarmth | undefined, unit: FluxUnit): string | null =>
+  warmth && warmth.body !== null ? fluxFigure(warmth.body, unit) : null
 
 /** The scale bar at the lower right; it stays there whatever the plan's size. */
 export const PlanScaleBar = memo(function PlanScaleBar({

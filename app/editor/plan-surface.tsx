@@ -1,6 +1,5 @@
 import {
   useEffect,
-  useImperativeHandle,
   useMemo,
   useRef,
   useState,
@@ -9,6 +8,7 @@ import {
   type PointerEvent as ReactPointerEvent,
   type RefObject,
 } from 'react'
+import { Button, IconButton } from '#app/components/button.tsx'
 import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Site } from '#app/domain/site/site.ts'
@@ -50,8 +50,6 @@ interface PlanSurfaceProps {
   readonly coverTolerance: number | null
   readonly onPlace: (at: Vec2, free: boolean) => void
   readonly onSeat: (id: string) => void
-  /** Where the row of tools finds the verbs of the view. */
-  readonly viewingRef: RefObject<PlanViewing | null>
 }
 
 const pen = screenPen('dusk')
@@ -86,6 +84,7 @@ export function PlanSurface(props: PlanSurfaceProps) {
     onMarquee: setMarquee,
     onPoint: (event, at, screen) =>
       pointed.set(event.pointerType === 'touch' ? null : { at, screen, seatId: null, by: 'pointer' }),
+    onHide: () => pointed.set(null),
   })
   const keys = usePlanKeys({
     layout: kept,
@@ -99,7 +98,6 @@ export function PlanSurface(props: PlanSurfaceProps) {
     onWholePlan: viewing.showAll,
     onSeat: props.onSeat,
   })
-  useImperativeHandle(props.viewingRef, () => viewing)
   useWheel(box, viewing)
 
   const lead = layout.heaters.find((heater) => heater.id === state.selected[0])
@@ -172,6 +170,25 @@ export function PlanSurface(props: PlanSurfaceProps) {
         coverTolerance={props.coverTolerance}
       />
       <PlanNotes {...{ state, site, flux, touch }} />
+      <SizeButtons viewing={viewing} />
+    </div>
+  )
+}
+
+/** Ways to change the size without a wheel, over the plan's lower left corner. */
+function SizeButtons({ viewing }: { viewing: PlanViewing }) {
+  return (
+    <div
+      role="group"
+      aria-label="Size of the plan"
+      className="absolute bottom-2 left-2 flex items-center rounded-md border border-rule bg-paper-raised/90 print:hidden"
+    >
+      <IconButton icon="fit" label="Whole plan" onClick={viewing.showAll} />
+      <IconButton icon="minus" label="Smaller" onClick={() => viewing.enlargeAt(0.8)} />
+      <IconButton icon="plus" label="Larger" onClick={() => viewing.enlargeAt(1.25)} />
+      <Button kind="text" size="small" title="1 : 50 on the screen" onClick={viewing.showTrueSize}>
+        100 %
+      </Button>
     </div>
   )
 }

@@ -3,11 +3,10 @@ import { irradianceByEmitter } from '#app/domain/flux/irradiance.ts'
 import { coverHeightAt } from '#app/domain/site/cover.ts'
 import { isInside } from '#app/domain/site/geometry.ts'
 import type { Site } from '#app/domain/site/site.ts'
-import { formatLength } from '#app/domain/units.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 import type { MapAnswer } from '#app/drawing/heat/map-picture.ts'
 import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
-import { fluxText } from '#app/editor/figures.ts'
+import { fluxText, roughLength } from '#app/editor/figures.ts'
 import { usePointed, type Pointed, type PointedStore } from '#app/editor/pointed.ts'
 import type { FluxUnit } from '#app/editor/view-choice.ts'
 
@@ -79,9 +78,9 @@ function Tag(props: ReadOutProps & { pointed: Pointed; reading: Reading }) {
   const toLeft = x > width - 190
   const above = y > height - 96
   const own = answer && mapKind !== 'flux' ? mapValueAt(answer, pointed.at) : null
-  const place = pointed.seatId ?? `${formatLength(pointed.at[0], units)}, ${formatLength(pointed.at[1], units)}`
+  const place = pointed.seatId ?? `${roughLength(pointed.at[0], units)}, ${roughLength(pointed.at[1], units)}`
   const shares = reading.shares.slice(0, 3).map(({ heaterId, share }) => `${heaterId} ${Math.round(share * 100)} %`)
-  const tolerance = props.coverTolerance === null ? '' : ` ± ${formatLength(props.coverTolerance, units)}`
+  const tolerance = props.coverTolerance === null ? '' : ` ± ${roughLength(props.coverTolerance, units)}`
   return (
     <div
       aria-hidden="true"
@@ -100,7 +99,7 @@ function Tag(props: ReadOutProps & { pointed: Pointed; reading: Reading }) {
       {reading.cover !== null && (
         <>
           <br />
-          Cover {formatLength(reading.cover, units)}
+          Cover {roughLength(reading.cover, units)}
           {tolerance}
         </>
       )}

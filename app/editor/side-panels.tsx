@@ -15,7 +15,7 @@ import { HeatersTable } from '#app/editor/panels/heaters-table.tsx'
 import { PlacePanel } from '#app/editor/panels/place-panel.tsx'
 import { SeatsTable } from '#app/editor/panels/seats-table.tsx'
 import type { Editor } from '#app/editor/use-editor.ts'
-import type { LayoutFigures } from '#app/editor/use-figures.ts'
+import type { LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
 import type { Room } from '#app/editor/use-media.ts'
 import type { ViewChoice } from '#app/editor/view-choice.ts'
 

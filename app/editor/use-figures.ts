@@ -1,19 +1,12 @@
 import { useMemo } from 'react'
 import type { Brief } from '#app/domain/brief/brief.ts'
-import { layoutTotals, seatWarmth, type LayoutTotals, type SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
+import { layoutTotals, seatWarmth } from '#app/domain/comfort/seat-warmth.ts'
+import { layoutFigures, type LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
 import { obstructionsOf } from '#app/domain/flux/shading.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
-import { checkLayout } from '#app/domain/rules/check-layout.ts'
-import type { Finding } from '#app/domain/rules/finding.ts'
 import type { Site } from '#app/domain/site/site.ts'
-
-/** Everything that is reckoned from a layout: exact at every step of a gesture. */
-export interface LayoutFigures {
-  readonly warmth: readonly SeatWarmth[]
-  readonly totals: LayoutTotals
-  readonly findings: readonly Finding[]
-}
+import { useAlive } from '#app/editor/use-media.ts'
 
 /** What figures rest on. */
 export interface FiguresInput {
@@ -25,19 +18,39 @@ export interface FiguresInput {
 }
 
 /** The seats' figures, the totals and the findings of a layout. Findings are of the plain figures, without shade. */
-export function figuresOf({ site, brief, layout, models, shade }: FiguresInput): LayoutFigures {
-  const plain = seatWarmth({ site, brief, layout, models })
-  const warmth = shade
-    ? seatWarmth({ site, brief, layout, models, obstructions: obstructionsOf(site, layout, models) })
-    : plain
-  return {
-    warmth,
-    totals: layoutTotals(warmth, layout, models, brief),
-    findings: checkLayout({ site, brief, layout, models, warmth: plain }),
-  }
+export function figuresOf({ shade, ...plain }: FiguresInput): LayoutFigures {
+  const figures = layoutFigures(plain)
+  if (!shade) return figures
+  const { site, brief, layout, models } = plain
+  const warmth = seatWarmth({ ...plain, obstructions: obstructionsOf(site, layout, models) })
+  return { ...figures, warmth, totals: layoutTotals(warmth, layout, models, brief) }
+}
+
+/** Before the page is alive: the last digits of a figure may differ between two machines, so the server shows none. */
+const notYet: LayoutFigures = {
+  warmth: [],
+  totals: {
+    heaters: 0,
+    seatsCounted: 0,
+    seatsInTarget: 0,
+    coldest: null,
+    hottest: null,
+    mean: null,
+    evenness: null,
+    headMaximum: null,
+    power: 0,
+    energyPerEvening: null,
+    costPerEvening: null,
+    cannotTell: [],
+  },
+  findings: [],
 }
 
 /** The figures of the layout shown, reckoned anew only when something they rest on changed. */
 export function useFigures({ site, brief, layout, models, shade }: FiguresInput): LayoutFigures {
-  return useMemo(() => figuresOf({ site, brief, layout, models, shade }), [site, brief, layout, models, shade])
+  const alive = useAlive()
+  return useMemo(
+    () => (alive ? figuresOf({ site, brief, layout, models, shade }) : notYet),
+    [alive, site, brief, layout, models, shade],
+  )
 }

@@ -22,3 +22,13 @@ export function useRoom(): Room {
   const tablet = useMedia('(min-width: 48rem)', true)
   return desk ? 'desk' : tablet ? 'tablet' : 'phone'
 }
+
+const never = () => () => undefined
+
+/** Whether the page is alive in a browser; false on the server and in the first moment, so that both draw the same. */
+export const useAlive = (): boolean =>
+  useSyncExternalStore(
+    never,
+    () => true,
+    () => false,
+  )

@@ -24,6 +24,8 @@ export interface PlanHand {
   readonly onSeat: (id: string) => void
   readonly onMarquee: (corners: readonly [Vec2, Vec2] | null) => void
   readonly onPoint: (event: PointerEvent, at: Vec2, screen: Vec2) => void
+  /** Something is being dragged: nothing is read meanwhile. */
+  readonly onHide: () => void
 }
 
 type Active =
@@ -86,7 +88,7 @@ export function usePlanGestures(svg: RefObject<SVGSVGElement | null>, hand: Plan
   function onPointerMove(event: ReactPointerEvent<SVGSVGElement>) {
     const screen = placeOf(event)
     const before = fingers.current.get(event.pointerId)
-    const { viewing, onPoint } = latest.current
+    const { viewing, onPoint, onHide } = latest.current
     if (!before) return onPoint(event.nativeEvent, siteOf(event), screen)
     const now = active.current
     if (now?.kind === 'pinch') {
@@ -103,7 +105,7 @@ export function usePlanGestures(svg: RefObject<SVGSVGElement | null>, hand: Plan
           if (waiting.current) step(waiting.current)
         })
       }
-      if (now.kind === 'gesture') onPoint(event.nativeEvent, siteOf(event), screen)
+      if (now.moved) onHide()
     }
     fingers.current.set(event.pointerId, screen)
   }

@@ -1,8 +1,10 @@
-import { useCallback, useEffect, useMemo, useRef, useState } from 'react'
+import { useCallback, useDeferredValue, useEffect, useMemo, useState } from 'react'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
+import { irradianceScale } from '#app/drawing/heat/quantity.ts'
+import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
 import { IconButton } from '#app/components/button.tsx'
 import { JobFrame, type Viewer } from '#app/components/page-frame.tsx'
 import { SaveState } from '#app/components/status.tsx'
@@ -16,12 +18,12 @@ import { VariantTabs, type VariantTab } from '#app/editor/panels/variant-tabs.ts
 import { PlanSurface } from '#app/editor/plan-surface.tsx'
 import { pointedStore } from '#app/editor/pointed.ts'
 import { SidePanels, type SideSubject } from '#app/editor/side-panels.tsx'
+import { cutsOf, Sections } from '#app/editor/sections.tsx'
 import { statusOf, useAutosave } from '#app/editor/use-autosave.ts'
 import { useEditor } from '#app/editor/use-editor.ts'
 import { useFigures } from '#app/editor/use-figures.ts'
 import { useFlux } from '#app/editor/use-flux.ts'
 import { useMedia, useRoom } from '#app/editor/use-media.ts'
-import type { PlanViewing } from '#app/editor/use-plan-view.ts'
 import { plainView, planeHeight } from '#app/editor/view-choice.ts'
 
 /** Everything the variant page brings to its editor. */
@@ -45,6 +47,8 @@ export interface VariantEditorProps {
   readonly onMake: (layout: Layout) => Promise<boolean>
 }
 
+const noCuts: readonly SectionCut[] = []
+
 /** The variant page: figures, plan, findings and seats of one layout, and the hand that changes it. */
 export function VariantEditor(props: VariantEditorProps) {
   const { site, brief, catalogue, initial, newest, keeping } = props
@@ -60,7 +64,6 @@ export function VariantEditor(props: VariantEditorProps) {
   const [explained, setExplained] = useState<string | null>(null)
   const [placing, setPlacing] = useState(false)
   const [pointed] = useState(pointedStore)
-  const viewing = useRef<PlanViewing>(null)
 
   const onTaken = useCallback(
     (taken: Layout, said: string) => dispatch({ type: 'edit', layout: taken, said }),
@@ -82,7 +85,15 @@ export function VariantEditor(props: VariantEditorProps) {
     () => mapQuestion({ site, brief, layout, models, choice }, scale, moving ? 'coarse' : 'sharp'),
     [site, brief, layout, models, choice, scale, moving],
   )
-  const flux = useFlux(question, state.dropped)
+  const cuts = useMemo(() => cutsOf(kept, state.selected), [kept, state.selected])
+  const heat = useMemo(() => irradianceScale('dusk', brief.target), [brief])
+  const about = useMemo(
+    () => ({ emitters: emittersOf(kept, models), site, cuts, levels: heat.levels, edges: heat.edges }),
+    [kept, models, site, cuts, heat],
+  )
+  const withSections = room === 'desk' && cuts.length > 0
+  const flux = useFlux(question, withSections ? about : null, state.dropped)
+  const shown = useDeferredValue(layout)
   const emitters = useMemo(() => emittersOf(layout, models), [layout, models])
   const onSeat = useCallback((id: string | null) => dispatch({ type: 'seat', id }), [dispatch])
   const explain = useCallback(
@@ -193,7 +204,7 @@ export function VariantEditor(props: VariantEditorProps) {
             onExplain={explain}
           />
           <ToolRow
-            {...{ site, layout, choice, viewing, readOnly, legend }}
+            {...{ site, layout, choice, readOnly, legend }}
             selected={state.selected}
             onChoice={setChoice}
             placing={placing}
@@ -205,13 +216,23 @@ export function VariantEditor(props: VariantEditorProps) {
           <PlanSurface
             {...{ state, dispatch, site, models, choice, scale, flux, readOnly, hold, touch, pointed }}
             warmth={figures.warmth}
-            cuts={[]}
+            cuts={withSections ? cuts : noCuts}
             words={room === 'desk'}
             coverTolerance={null}
             onPlace={editor.placeAt}
             onSeat={explain}
-            viewingRef={viewing}
           />
+          {withSections && (
+            <div className="h-55 flex-none border-t border-[#26324c]">
+              <Sections
+                {...{ site, models, cuts }}
+                layout={shown}
+                scale={heat}
+                sections={flux.sections}
+                selected={state.selected}
+              />
+            </div>
+          )}
         </div>
         <SidePanels subject={subject} room={room} />
       </div>

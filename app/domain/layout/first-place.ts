@@ -8,14 +8,18 @@ import type { Site } from '#app/domain/site/site.ts'
 import { degrees, type Vec2 } from '#app/domain/vector.ts'
 
 /**
- * How a model that can be placed first hangs at a place: as the last heater of that model in the layout does, else from
+ * How a model that can be placed first hangs at a place: as the last heater of that model in the layout does (straight
+ * down unless on a wall), else from
  * its first fitting mount, in the middle of the manual's heights but under the cover, along the member it hangs from.
  * A model that cannot be placed: null.
  */
 export function firstPlace(choice: ModelChoice, site: Site, layout: Layout, [x, y]: Vec2): HeaterPlace | null {
   const { model, supplyVoltage, mounts } = choice
   const alike = layout.heaters.findLast((heater) => heater.model === model.code)
-  if (alike) return withSupport({ ...alike, x, y, memberId: null }, choice, site)
+  if (alike) {
+    const tiltDeg = alike.mount === 'wall bracket' ? alike.tiltDeg : 0
+    return withSupport({ ...alike, x, y, tiltDeg, memberId: null }, choice, site)
+  }
   const mount = preferredMount(mounts, site, [x, y])
   if (choice.whyNot.length > 0 || supplyVoltage === null || !mount) return null
   const place: HeaterPlace = {

@@ -39,20 +39,25 @@ export function ArrangePanel({ layout, selected, site, onEdit, onDuplicate }: Ar
         <Button kind="text" size="small" onClick={onDuplicate}>
           Duplicate
         </Button>
-        <Button kind="text" size="small" disabled={!several} onClick={() => align('x')} title="The same place along">
-          Align {alongLabel(site).toLowerCase()}
-        </Button>
-        <Button kind="text" size="small" disabled={!several} onClick={() => align('y')} title="The same distance">
-          Align {fromLabel(site).toLowerCase()}
-        </Button>
-        <Button
-          kind="text"
-          size="small"
-          disabled={selected.length < 3}
-          onClick={() => onEdit(spaceEqually(layout, selected), selected, 'Equally spaced')}
-        >
-          Space equally
-        </Button>
+        {several && (
+          <>
+            <Button kind="text" size="small" onClick={() => align('x')} title="The same place along">
+              Align {alongLabel(site).toLowerCase()}
+            </Button>
+            <Button kind="text" size="small" onClick={() => align('y')} title="The same distance">
+              Align {fromLabel(site).toLowerCase()}
+            </Button>
+          </>
+        )}
+        {selected.length > 2 && (
+          <Button
+            kind="text"
+            size="small"
+            onClick={() => onEdit(spaceEqually(layout, selected), selected, 'Equally spaced')}
+          >
+            Space equally
+          </Button>
+        )}
       </div>
       {open && <RepeatForm {...{ layout, selected, site, onEdit }} />}
     </section>

@@ -2,10 +2,10 @@ import { useState } from 'react'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
 import { formatLength, type DisplayUnits } from '#app/domain/units.ts'
 import { OutcomeMark } from '#app/components/outcome-mark.tsx'
+import { groupFindings, summaryOf, tightestPasses } from '#app/editor/finding-groups.ts'
 import { fluxFigure, noFigure, signedFigure } from '#app/editor/figures.ts'
 import type { FluxUnit } from '#app/editor/view-choice.ts'
 
-const order: readonly Outcome[] = ['fails', 'cannot tell', 'measure first', 'pass']
 const words: Record<Outcome, string> = {
   fails: 'Fails',
   'cannot tell': 'Cannot tell',
@@ -19,10 +19,8 @@ const colours: Record<Outcome, string> = {
   pass: 'text-moss',
 }
 
-/** Passing findings shown before the rest is folded. */
+/** Checks that pass shown before the rest is folded. */
 const passesShown = 2
-/** Findings that do not pass shown before the rest is folded. */
-const othersShown = 8
 
 interface FindingsListProps {
   readonly findings: readonly Finding[]
@@ -32,27 +30,27 @@ interface FindingsListProps {
   readonly onPoint: (subject: Finding['subject']) => void
 }
 
-/** What was checked: failing first, each with its margin, tolerance, limit and source. */
+/** What was checked: failing first, each rule once with its tightest margin, tolerance, limit and source. */
 export function FindingsList({ findings, units, fluxUnit, onPoint }: FindingsListProps) {
   const [unfolded, setUnfolded] = useState(false)
-  const sorted = [...findings].sort((a, b) => rank(a) - rank(b))
-  const others = sorted.filter((finding) => finding.outcome !== 'pass')
-  const passes = sorted.filter((finding) => finding.outcome === 'pass')
-  const shown = unfolded ? sorted : [...others.slice(0, othersShown), ...passes.slice(0, passesShown)]
-  const folded = sorted.length - shown.length
-  const foldedPasses = passes.length - Math.min(passesShown, passes.length)
+  const groups = groupFindings(findings)
+  const others = groups.filter(({ worst }) => worst.outcome !== 'pass')
+  const passes = tightestPasses(groups)
+  const shown = [...others, ...(unfolded ? passes : passes.slice(0, passesShown))]
+  const folded = groups.length - shown.length
   return (
     <section aria-labelledby="findings-title" className="border-t border-rule px-4.5 py-3.5">
       <header className="mb-2 flex items-baseline gap-2.5">
         <h2 id="findings-title" className="text-sm font-strong">
           Findings
         </h2>
-        <p className="text-ink-2">{summaryOf(findings)}</p>
+        <p className="text-ink-2">{summaryOf(groups)}</p>
       </header>
       <ul>
-        {shown.map((finding) => (
-          <li key={keyOf(finding)} className="border-t border-rule">
-            <FindingRow finding={finding} units={units} fluxUnit={fluxUnit} onPoint={onPoint} />
+        {shown.map(({ key, worst, others: elsewhere }) => (
+          <li key={key} className="border-t border-rule">
+            <FindingRow finding={worst} {...{ units, fluxUnit, onPoint }} />
+            {elsewhere.length > 0 && <Others others={elsewhere} {...{ worst, units, fluxUnit, onPoint }} />}
           </li>
         ))}
       </ul>
@@ -63,30 +61,42 @@ export function FindingsList({ findings, units, fluxUnit, onPoint }: FindingsLis
           aria-expanded={unfolded}
           className="min-h-8 w-full border-t border-rule pl-6 text-left text-ink-2 hover:text-ink pointer-coarse:min-h-11"
         >
-          {unfolded ? 'Fewer' : folded === foldedPasses ? `${folded} more pass` : `${folded} more`}
+          {unfolded ? 'Fewer' : `${folded} more pass`}
         </button>
       )}
     </section>
   )
 }
 
-const rank = (finding: Finding) =>
-  order.indexOf(finding.outcome) * 10 + (finding.weight === 'hard stop' ? 0 : finding.weight === 'soft' ? 1 : 2)
+interface OthersProps extends FindingsListProps {
+  readonly worst: Finding
+  readonly others: readonly Finding[]
+}
 
-const keyOf = ({ rule, subject, title, condition }: Finding) =>
-  `${rule} ${subject.kind} ${subject.id} ${title} ${condition ?? ''}`
-
-/** "1 fails, 1 cannot tell, 1 to measure first, 9 pass". */
-export function summaryOf(findings: readonly Finding[]): string {
-  const count = (outcome: Outcome) => findings.filter((finding) => finding.outcome === outcome).length
-  const parts: [number, string][] = [
-    [count('fails'), count('fails') === 1 ? 'fails' : 'fail'],
-    [count('cannot tell'), 'cannot tell'],
-    [count('measure first'), 'to measure first'],
-    [count('pass'), count('pass') === 1 ? 'passes' : 'pass'],
-  ]
-  const said = parts.filter(([n]) => n > 0).map(([n, word]) => `${n} ${word}`)
-  return said.length > 0 ? said.join(', ') : 'Nothing to check yet'
+/** The same finding elsewhere, folded. */
+function Others({ worst, others, units, fluxUnit, onPoint }: Omit<OthersProps, 'findings'>) {
+  const kind = worst.subject.kind === 'seat' ? 'seat' : 'heater'
+  return (
+    <details className="pb-1 pl-6">
+      <summary className="min-h-6 cursor-pointer text-2xs text-ink-2 hover:text-ink pointer-coarse:min-h-11">
+        {others.length} more {others.length === 1 ? kind : `${kind}s`}
+      </summary>
+      <ul className="flex flex-wrap gap-x-3">
+        {others.map((finding, i) => (
+          <li key={`${finding.subject.id} ${i}`}>
+            <button
+              type="button"
+              onClick={() => onPoint(finding.subject)}
+              title={finding.title}
+              className="min-h-6 cursor-pointer text-2xs text-ink-2 hover:underline pointer-coarse:min-h-11"
+            >
+              {finding.subject.id} {finding.margin === null ? '' : marginText(finding, units, fluxUnit)}
+            </button>
+          </li>
+        ))}
+      </ul>
+    </details>
+  )
 }
 
 interface FindingRowProps extends Omit<FindingsListProps, 'findings'> {
@@ -115,7 +125,7 @@ function FindingRow({ finding, units, fluxUnit, onPoint }: FindingRowProps) {
       </span>
       <span className="text-right font-medium whitespace-nowrap">{marginText(finding, units, fluxUnit)}</span>
       <span className="col-span-2 col-start-2 flex justify-between gap-2.5 text-2xs text-ink-3">
-        <span>
+        <span className="line-clamp-2">
           {finding.source}
           {finding.condition ? `. When ${finding.condition}` : ''}
         </span>

@@ -10,14 +10,7 @@ import { Button } from '#app/components/button.tsx'
 import { CheckField, SelectField } from '#app/components/field.tsx'
 import { LengthField } from '#app/components/length-field.tsx'
 import { AngleField } from '#app/editor/panels/angle-field.tsx'
-import {
-  beamSide,
-  heightAside,
-  limitsNote,
-  supportsFor,
-  wrongHeight,
-  wrongTilt,
-} from '#app/editor/panels/heater-limits.ts'
+import { beamSide, limitsNote, supportsFor, wrongHeight, wrongTilt } from '#app/editor/panels/heater-limits.ts'
 
 interface HeaterFieldsProps {
   /** The heaters chosen; never none. */
@@ -68,7 +61,6 @@ export function HeaterFields(props: HeaterFieldsProps) {
           <PlaceField label={fromLabel(site)} of="y" {...{ heaters, site, set }} />
           <LengthField
             label="Lowest point"
-            aside={heightAside(model, units)}
             unit={units === 'metric' ? 'm' : ''}
             value={shared(heaters, (heater) => heater.lowestPoint)}
             show={(metres) => fieldLength(metres, units)}

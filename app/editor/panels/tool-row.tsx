@@ -1,4 +1,4 @@
-import { useState, type RefObject } from 'react'
+import { useState } from 'react'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
 import type { Site } from '#app/domain/site/site.ts'
@@ -6,13 +6,12 @@ import { parseLength } from '#app/domain/units.ts'
 import { LegendDrawing } from '#app/drawing/heat/legend.tsx'
 import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
 import { screenPen } from '#app/drawing/pen.ts'
-import { Button, IconButton } from '#app/components/button.tsx'
+import { Button } from '#app/components/button.tsx'
 import { Choice } from '#app/components/choice.tsx'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { MapAnswer } from '#app/drawing/heat/map-picture.ts'
 import { usePointed, type PointedStore } from '#app/editor/pointed.ts'
 import { mapValueAt, readingAt } from '#app/editor/read-out.tsx'
-import type { PlanViewing } from '#app/editor/use-plan-view.ts'
 import { planeHeight, planesOf, type FluxUnit, type MapChoice, type ViewChoice } from '#app/editor/view-choice.ts'
 
 interface ToolRowProps {
@@ -21,7 +20,6 @@ interface ToolRowProps {
   readonly selected: readonly string[]
   readonly choice: ViewChoice
   readonly onChoice: (choice: ViewChoice) => void
-  readonly viewing: RefObject<PlanViewing | null>
   readonly placing: boolean
   readonly onPlacing: () => void
   readonly readOnly: boolean
@@ -30,26 +28,18 @@ interface ToolRowProps {
 
 /** What the row above the plan holds: placing, what the map shows, the plane, the scale. */
 export function ToolRow(props: ToolRowProps) {
-  const { site, choice, onChoice, viewing, placing, onPlacing, readOnly, legend } = props
+  const { site, choice, onChoice, placing, onPlacing, readOnly, legend } = props
   return (
-    <div className="flex min-h-10.5 flex-none flex-wrap items-center gap-x-3 gap-y-1 border-b border-rule px-3.5 py-1">
+    <div className="flex min-h-10.5 flex-none flex-wrap items-center gap-x-2.5 gap-y-1 border-b border-rule px-3.5">
       {!readOnly && (
         <Button size="small" icon="plus" aria-pressed={placing} onClick={onPlacing}>
           Heater
         </Button>
       )}
-      <span className="flex items-center">
-        <IconButton icon="fit" label="Whole plan" onClick={() => viewing.current?.showAll()} />
-        <IconButton icon="minus" label="Smaller" onClick={() => viewing.current?.enlargeAt(0.8)} />
-        <IconButton icon="plus" label="Larger" onClick={() => viewing.current?.enlargeAt(1.25)} />
-        <Button kind="text" size="small" title="1 : 50 on the screen" onClick={() => viewing.current?.showTrueSize()}>
-          100 %
-        </Button>
-      </span>
       <MapSelect {...props} />
       <PlaneChooser {...{ site, choice, onChoice }} />
-      <span className="hidden flex-1 wide:block" />
-      <span className="flex min-w-0 items-center gap-1 max-wide:w-full">
+      <span className="flex-1" />
+      <span className="flex min-w-0 items-center gap-1">
         <MapLegend {...legend} />
         <UnitChooser choice={choice} onChoice={onChoice} scale={legend.scale} />
       </span>
@@ -58,7 +48,7 @@ export function ToolRow(props: ToolRowProps) {
 }
 
 const selectClass =
-  'h-7 rounded-md border border-rule-strong bg-paper-raised px-1.5 text-ink focus-visible:outline-2 focus-visible:outline-offset-1 focus-visible:outline-focus pointer-coarse:h-11'
+  'h-7 max-w-40 rounded-md border border-rule-strong bg-paper-raised px-1.5 text-ink focus-visible:outline-2 focus-visible:outline-offset-1 focus-visible:outline-focus pointer-coarse:h-11'
 
 const mapChoices = {
   flux: 'Irradiance',

