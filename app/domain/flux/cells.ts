@@ -1,6 +1,14 @@
 import type { Grid } from '#app/domain/flux/grid.ts'
 
-/** A rectangle of cells at one height, as a grid without its floor; and how far from a heater they are worth filling. */
+/** A rectangle in plan, m. */
+export interface Extent {
+  readonly left: number
+  readonly right: number
+  readonly low: number
+  readonly high: number
+}
+
+/** A rectangle of cells at one height: a grid without its floor. */
 export interface Cells {
   readonly x0: number
   readonly y0: number
@@ -16,15 +24,15 @@ export interface Window extends Cells {
   readonly firstRow: number
 }
 
-/** The cells of a grid whose centres lie within a radius of a place, as the rectangle round them; null when none do. */
-export function windowAround(grid: Grid, x: number, y: number, radius: number): Window | null {
-  const span = (centre: number, start: number, count: number) => {
-    const first = Math.max(0, Math.ceil((centre - radius - start) / grid.cell - 0.5))
-    const last = Math.min(count - 1, Math.floor((centre + radius - start) / grid.cell - 0.5))
+/** The cells of a grid whose centres lie in a rectangle; null when none do. */
+export function windowOf(grid: Grid, extent: Extent): Window | null {
+  const span = (from: number, to: number, start: number, count: number) => {
+    const first = Math.max(0, Math.ceil((from - start) / grid.cell - 0.5))
+    const last = Math.min(count - 1, Math.floor((to - start) / grid.cell - 0.5))
     return { first, count: last - first + 1 }
   }
-  const across = span(x, grid.x0, grid.columns)
-  const up = span(y, grid.y0, grid.rows)
+  const across = span(extent.left, extent.right, grid.x0, grid.columns)
+  const up = span(extent.low, extent.high, grid.y0, grid.rows)
   if (across.count <= 0 || up.count <= 0) return null
   return {
     x0: grid.x0 + across.first * grid.cell,

@@ -1,126 +1,135 @@
-import { solidAngleOf } from '#app/domain/flux/beam.ts'
+import type { Extent } from '#app/domain/flux/cells.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { Grid } from '#app/domain/flux/grid.ts'
+import { irradianceAt } from '#app/domain/flux/irradiance.ts'
+import type { Vec3 } from '#app/domain/vector.ts'
 
-/** How far from a heater its irradiance is reckoned, m, and the most that is left out at any cell, W/m². */
+/** Where each emitter is reckoned on a map, in their order, and the most that is left out at any cell, W/m². */
 export interface CutOff {
-  readonly radius: number
+  readonly extents: readonly Extent[]
   readonly errorBound: number
 }
 
 /** Cells times elements above which a map is cut; below it every cell knows every heater. */
 const uncutWork = 4_000_000
-const radii = [8, 10, 12, 16, 24]
-/** The bound to stay under where a radius allows it, W/m²: about 1 % of the usual peak. */
-const aim = 5
+/** What one heater gives outside its extent at most, W/m². */
+export const leastKept = 0.5
 /** Side of the blocks of floor over which the bound is taken, m. */
 const block = 4
 
-/** What bounds an emitter's irradiance from afar; lengths m. */
-export interface FarSource {
+/** No cut. */
+export const everywhere: Extent = { left: -Infinity, right: Infinity, low: -Infinity, high: Infinity }
+const up: Vec3 = [0, 0, 1]
+const directions = 32
+const farthest = 80
+const ratio = 0.92
+/** Allowance for what lies between the directions and distances looked along. */
+const allowance = 1.1
+
+/** How far an emitter of one kind and height reaches, in its own directions. */
+interface Reach {
+  /** Places along u and to the left of u beyond which it gives less than is kept, m. */
+  readonly outline: readonly (readonly [along: number, left: number])[]
+  /** The most it gives in any direction at so many whole metres or more, W/m². */
+  readonly beyond: Float64Array
+}
+
+function reachOf({ beam, frame, elements }: Emitter, z: number): Reach {
+  const [ux, uy] = frame.u
+  const [x, y] = elements[0]?.centre ?? [0, 0]
+  const emitter = { id: 'kind', beam, frame, elements }
+  const beyond = new Float64Array(farthest + 1)
+  const outline = Array.from({ length: directions }, (_, i) => {
+    const angle = (2 * Math.PI * i) / directions
+    const [along, left] = [Math.cos(angle), Math.sin(angle)]
+    const at = (r: number): Vec3 => [x + r * (along * ux - left * uy), y + r * (along * uy + left * ux), z]
+    let kept = 0
+    for (let r = farthest; r > 0.5; r *= ratio) {
+      const given = irradianceAt(emitter, at(r), up) * allowance
+      // A distance looked at stands for those up to the one before: for every whole metre below that.
+      const last = Math.min(farthest, Math.floor(r / ratio))
+      for (let d = 0; d <= last; d++) beyond[d] = Math.max(beyond[d] ?? 0, given)
+      if (given < leastKept) continue
+      kept = (r / ratio) * allowance
+      break
+    }
+    return [kept * along, kept * left] as const
+  })
+  return { outline, beyond }
+}
+
+const reaches = new Map<string, Reach>()
+
+/** The reach of every emitter of this kind and height, wherever it hangs and however it is turned. */
+function knownReach(emitter: Emitter, z: number): Reach {
+  const { beam, elements, frame } = emitter
+  const [x, y] = elements[0]?.centre ?? [0, 0]
+  const places = elements.map((e) => {
+    const aside = (e.centre[1] - y) * frame.u[0] - (e.centre[0] - x) * frame.u[1]
+    return [aside, e.centre[2] - z, e.length, e.radiantPower].map((value) => value.toFixed(4))
+  })
+  const key = JSON.stringify([beam, frame.w[2].toFixed(6), frame.v[2].toFixed(6), places])
+  const known = reaches.get(key) ?? reachOf(emitter, z)
+  if (reaches.size > 500) reaches.clear()
+  reaches.set(key, known)
+  return known
+}
+
+/** The rectangle outside of which an emitter gives a plane at z less than `leastKept`. */
+export function extentOf(emitter: Emitter, z: number): Extent {
+  const [x, y] = emitter.elements[0]?.centre ?? [0, 0]
+  const [ux, uy] = emitter.frame.u
+  const places = knownReach(emitter, z).outline.map(
+    ([along, left]) => [x + along * ux - left * uy, y + along * uy + left * ux] as const,
+  )
+  const xs = places.map((place) => place[0])
+  const ys = places.map((place) => place[1])
+  return { left: Math.min(...xs), right: Math.max(...xs), low: Math.min(...ys), high: Math.max(...ys) }
+}
+
+/** An emitter's extent, its place and what it gives from afar. */
+interface FarSource extends Extent {
   readonly x: number
   readonly y: number
-  /** Farthest that any point of its elements lies from (x, y) in plan. */
-  readonly spread: number
-  /** Least and greatest height of its elements over the plane. */
-  readonly low: number
-  readonly high: number
-  readonly ux: number
-  readonly uy: number
-  /** The beam's axis: its part to the left of u and its part downwards. */
-  readonly lean: number
-  readonly down: number
-  /** Greatest intensity, W/sr. */
-  readonly intensity: number
-  /** Twice the power of the cosine from the axis that bounds the beam, rounded down to a whole number. */
-  readonly halves: number
-}
-
-/** The bounding figures of an emitter over a plane; null when none of it is above the plane. */
-export function farSourceOf({ beam, elements, frame }: Emitter, z: number): FarSource | null {
-  const heights = elements.map(({ centre }) => centre[2] - z)
-  const [x, y] = elements[0]?.centre ?? [0, 0]
-  const high = Math.max(0, ...heights)
-  if (high === 0) return null
-  const power = elements.reduce((sum, { radiantPower }) => sum + radiantPower, 0)
-  const peak = beam.kind === 'table' ? Math.max(...beam.intensity.flat()) : 1
-  return {
-    x,
-    y,
-    spread: Math.max(...elements.map((e) => Math.hypot(e.centre[0] - x, e.centre[1] - y) + e.length / 2)),
-    low: Math.max(0, Math.min(...heights)),
-    high,
-    ux: frame.u[0],
-    uy: frame.u[1],
-    lean: frame.w[1] * frame.u[0] - frame.w[0] * frame.u[1],
-    down: -frame.w[2],
-    intensity: (power * peak) / solidAngleOf(beam),
-    halves: beam.kind === 'table' ? 0 : Math.min(40, Math.floor(2 * Math.min(beam.across, beam.along))),
-  }
-}
-
-/** x to the power halves/2, 0 ≤ x ≤ 1, by multiplication. */
-function halfPower(x: number, halves: number): number {
-  let result = halves % 2 === 1 ? Math.sqrt(x) : 1
-  for (let i = 1; i < halves; i += 2) result *= x
-  return result
+  readonly beyond: Float64Array
 }
 
 /**
- * Upper bound of the irradiance, W/m², that a source gives a horizontal plane anywhere at least `distance` away in plan
- * and at most `side` to the left of its axis (to the right when the beam leans there). With r the least distance to an
- * element and c the greatest cosine of the angle from the beam's axis, E ≤ I c^m H / r³, for cos^a α cos^b β ≤
- * (cosα cosβ)^min(a,b), and cosα cosβ is that cosine.
+ * The most that all sources together leave out at a cell of the block from (x, y): of each whose extent does not hold
+ * the whole block, the least kept or what it gives at most from so far away, whichever is less.
  */
-export function farBound(source: FarSource, distance: number, side: number): number {
-  const near = Math.max(0, distance - source.spread)
-  const square = near * near + source.low * source.low
-  const r = Math.sqrt(square)
-  const ahead = side * Math.abs(source.lean) + source.high * source.down
-  if (ahead <= 0) return 0
-  return (source.intensity * source.high * halfPower(Math.min(1, ahead / r), source.halves)) / (square * r)
-}
-
-/** The most that all sources together leave out at a cell of the block from (x, y). */
-function leftOut(sources: readonly FarSource[], x: number, y: number, radius: number): number {
-  const half = block / 2
+function leftOut(sources: readonly FarSource[], x: number, y: number): number {
   let sum = 0
-  for (const source of sources) {
-    const dx = x + half - source.x
-    const dy = y + half - source.y
-    const [fx, fy] = [Math.abs(dx) + half, Math.abs(dy) + half]
-    // An element's centre lies within its spread of (x, y): only a cell farther than this can lack it.
-    const cut = radius - source.spread
-    if (fx * fx + fy * fy <= cut * cut) continue
-    const [gx, gy] = [Math.max(0, Math.abs(dx) - half), Math.max(0, Math.abs(dy) - half)]
-    const centreSide = (dy * source.ux - dx * source.uy) * (source.lean < 0 ? -1 : 1)
-    const side = centreSide + half * (Math.abs(source.ux) + Math.abs(source.uy)) + source.spread
-    sum += farBound(source, Math.max(cut, Math.sqrt(gx * gx + gy * gy)), side)
+  for (const s of sources) {
+    if (s.left <= x && s.right >= x + block && s.low <= y && s.high >= y + block) continue
+    const gapX = Math.max(0, s.x - x - block, x - s.x)
+    const gapY = Math.max(0, s.y - y - block, y - s.y)
+    const metres = Math.min(farthest, Math.sqrt(gapX * gapX + gapY * gapY) | 0)
+    sum += Math.min(leastKept, s.beyond[metres] ?? 0)
   }
   return sum
 }
 
-function boundOver(sources: readonly FarSource[], grid: Grid, radius: number): number {
+function boundOver(sources: readonly FarSource[], grid: Grid): number {
   let worst = 0
   for (let y = 0; y < grid.rows * grid.cell; y += block) {
     for (let x = 0; x < grid.columns * grid.cell; x += block) {
-      worst = Math.max(worst, leftOut(sources, grid.x0 + x, grid.y0 + y, radius))
+      worst = Math.max(worst, leftOut(sources, grid.x0 + x, grid.y0 + y))
     }
   }
   return worst
 }
 
-/**
- * The cut-off for a map: none while the work is small, else the least of 8 … 24 m whose bound is under 5 W/m², or 24 m
- * with the bound that it has.
- */
+/** The cut-off for a map: none while the work is small, else each emitter where it gives at least 0.5 W/m². */
 export function cutOffFor(emitters: readonly Emitter[], grid: Grid): CutOff {
   const elements = emitters.reduce((sum, emitter) => sum + emitter.elements.length, 0)
-  if (grid.columns * grid.rows * elements <= uncutWork) return { radius: Infinity, errorBound: 0 }
-  const sources = emitters.map((emitter) => farSourceOf(emitter, grid.z)).filter((source) => source !== null)
-  for (const radius of radii) {
-    const errorBound = boundOver(sources, grid, radius)
-    if (errorBound <= aim || radius === radii.at(-1)) return { radius, errorBound }
+  if (grid.columns * grid.rows * elements <= uncutWork) {
+    return { extents: emitters.map(() => everywhere), errorBound: 0 }
   }
-  return { radius: Infinity, errorBound: 0 }
+  const extents = emitters.map((emitter) => extentOf(emitter, grid.z))
+  const sources = emitters.map((emitter, i) => {
+    const [x, y] = emitter.elements[0]?.centre ?? [0, 0]
+    return { ...(extents[i] ?? everywhere), x, y, beyond: knownReach(emitter, grid.z).beyond }
+  })
+  return { extents, errorBound: boundOver(sources, grid) }
 }

@@ -71,10 +71,9 @@ interface Setting {
   readonly halfLength: number
   /** S·H, W/sr. */
   readonly strength: number
-  readonly radius: number
 }
 
-function settingOf(cells: Cells, emitter: Emitter, solidAngle: number, element: Element, radius: number): Setting {
+function settingOf(cells: Cells, emitter: Emitter, solidAngle: number, element: Element): Setting {
   const { frame } = emitter
   const [ux, uy] = frame.u
   const height = element.centre[2] - cells.z
@@ -89,15 +88,7 @@ function settingOf(cells: Cells, emitter: Emitter, solidAngle: number, element: 
     height,
     halfLength: element.length / 2,
     strength: (element.radiantPower * height) / (solidAngle * element.length),
-    radius,
   }
-}
-
-/** Cells of a row or column whose centres lie within ± reach of a place. */
-function spanOf(origin: number, cell: number, count: number, place: number, reach: number) {
-  const first = Math.max(0, Math.ceil((place - reach - origin) / cell - 0.5))
-  const last = Math.min(count - 1, Math.floor((place + reach - origin) / cell - 0.5))
-  return { first, count: Math.max(0, last - first + 1) }
 }
 
 /** Lines parallel to the element: rows of cells when it lies along x, columns when along y. */
@@ -114,14 +105,13 @@ function addAligned(values: Float32Array, s: Setting, across: Float64Array, alon
     const side = rows ? off * s.ux : -off * s.uy
     const h = Math.sqrt(side * side + s.height * s.height)
     const c = ((side * s.lean + s.height * s.down) / h) * acrossEntries
-    if (!(c > 0) || Math.abs(off) > s.radius) continue
+    if (!(c > 0)) continue
     const ci = Math.min(c | 0, acrossEntries)
     const f = (across[2 * ci] ?? 0) + (c - ci) * (across[2 * ci + 1] ?? 0)
-    const span = spanOf(origin, cells.cell, count, centre, Math.sqrt(s.radius * s.radius - off * off))
     const stride = rows ? 1 : cells.columns
-    const first = (rows ? line * cells.columns : line) + span.first * stride
-    const start = (origin + (span.first + 0.5) * cells.cell - centre) * forward
-    const run = { first, stride, count: span.count, start, step: cells.cell * forward }
+    const first = rows ? line * cells.columns : line
+    const start = (origin + 0.5 * cells.cell - centre) * forward
+    const run = { first, stride, count, start, step: cells.cell * forward }
     addLine(values, run, s.halfLength, h, (s.strength * f) / (h * h), along, b)
   }
 }
@@ -135,11 +125,9 @@ function addTurned(values: Float32Array, s: Setting, across: Float64Array, along
   const below = s.height * s.down * acrossEntries
   for (let row = 0; row < cells.rows; row++) {
     const dy = cells.y0 + (row + 0.5) * cells.cell - s.y
-    if (Math.abs(dy) > s.radius) continue
-    const span = spanOf(cells.x0, cells.cell, cells.columns, s.x, Math.sqrt(s.radius * s.radius - dy * dy))
-    let at = row * cells.columns + span.first
-    for (let i = 0; i < span.count; i++, at++) {
-      const dx = cells.x0 + (span.first + i + 0.5) * cells.cell - s.x
+    let at = row * cells.columns
+    for (let i = 0; i < cells.columns; i++, at++) {
+      const dx = cells.x0 + (i + 0.5) * cells.cell - s.x
       const side = dy * ux - dx * uy
       const inverse = 1 / Math.sqrt(side * side + square)
       const c = (side * lean + below) * inverse
@@ -165,40 +153,29 @@ function addTurned(values: Float32Array, s: Setting, across: Float64Array, along
 }
 
 /** Cell by cell in closed form: elements out of level or very short for their height. */
-function addExactly(values: Float32Array, cells: Cells, emitter: Emitter, element: Element, radius: number): void {
+function addExactly(values: Float32Array, cells: Cells, emitter: Emitter, element: Element): void {
   const alone = { ...emitter, elements: [element] }
   for (let row = 0, at = 0; row < cells.rows; row++) {
     const y = cells.y0 + (row + 0.5) * cells.cell
     for (let column = 0; column < cells.columns; column++, at++) {
       const x = cells.x0 + (column + 0.5) * cells.cell
-      if (Math.hypot(x - element.centre[0], y - element.centre[1]) > radius) continue
       values[at] = (values[at] ?? 0) + irradianceAt(alone, [x, y, cells.z], up)
     }
   }
 }
 
-/**
- * Adds to each cell the irradiance, W/m², of its horizontal plane (facing up) from one element; cells farther than
- * `radius` from the element's centre in plan are left as they are.
- */
-export function addElement(
-  values: Float32Array,
-  cells: Cells,
-  emitter: Emitter,
-  element: Element,
-  radius = Infinity,
-): void {
+/** Adds to each cell the irradiance, W/m², of its horizontal plane (facing up) from one element. */
+export function addElement(values: Float32Array, cells: Cells, emitter: Emitter, element: Element): void {
   const height = element.centre[2] - cells.z
   if (!(height > 0)) return
-  const reach = Math.min(radius, 1e6)
   const { beam, frame } = emitter
   if (Math.abs(frame.u[2]) > level || element.length < height / 10) {
-    addExactly(values, cells, emitter, element, reach)
+    addExactly(values, cells, emitter, element)
   } else if (beam.kind === 'table') {
-    addTabulated(values, cells, emitter, beam, element, reach)
+    addTabulated(values, cells, emitter, beam, element)
   } else {
     const { across, along, solidAngle } = cosineTablesOf(beam)
-    const setting = settingOf(cells, emitter, solidAngle, element, reach)
+    const setting = settingOf(cells, emitter, solidAngle, element)
     const aligned = Math.abs(setting.ux) < level || Math.abs(setting.uy) < level
     const add = aligned ? addAligned : addTurned
     add(values, setting, across, along, beam.along)

@@ -1,5 +1,5 @@
-import { windowAround, type Window } from '#app/domain/flux/cells.ts'
-import { cutOffFor, type CutOff } from '#app/domain/flux/cut-off.ts'
+import { windowOf, type Extent, type Window } from '#app/domain/flux/cells.ts'
+import { cutOffFor, everywhere } from '#app/domain/flux/cut-off.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { Grid } from '#app/domain/flux/grid.ts'
 import { addElement } from '#app/domain/flux/kernel.ts'
@@ -18,7 +18,8 @@ export interface Layer {
 /** Irradiance of a horizontal plane over a floor: a layer per emitter and their sum, row by row as the grid. */
 export interface FluxMap {
   readonly grid: Grid
-  readonly cutOff: CutOff
+  /** The most that a cell lacks because far heaters are left out, W/m²; 0 when none are. */
+  readonly errorBound: number
   readonly obstructions: readonly Obstruction[]
   readonly layers: readonly Layer[]
   readonly total: Float64Array
@@ -37,18 +38,13 @@ export function sameData(a: unknown, b: unknown): boolean {
   )
 }
 
-function layerOf(grid: Grid, emitter: Emitter, radius: number, obstructions: readonly Obstruction[]): Layer {
-  const [x, y] = emitter.elements[0]?.centre ?? [0, 0]
-  const spread = emitter.elements.reduce(
-    (most, { centre }) => Math.max(most, Math.hypot(centre[0] - x, centre[1] - y)),
-    0,
-  )
-  const window = emitter.elements.length === 0 ? null : windowAround(grid, x, y, Math.min(1e6, radius + spread))
+function layerOf(grid: Grid, emitter: Emitter, extent: Extent, obstructions: readonly Obstruction[]): Layer {
+  const window = emitter.elements.length === 0 ? null : windowOf(grid, extent)
   const values = new Float32Array(window ? window.columns * window.rows : 0)
   if (!window) return { emitter, window, values }
   for (const element of emitter.elements) {
-    addElement(values, window, emitter, element, radius)
-    if (obstructions.length > 0) shadeElement(values, window, emitter, element, obstructions, radius)
+    addElement(values, window, emitter, element)
+    if (obstructions.length > 0) shadeElement(values, window, emitter, element, obstructions)
   }
   return { emitter, window, values }
 }
@@ -93,23 +89,23 @@ export function irradianceMap(
 ): FluxMap {
   requireAnswerable(emitters)
   if ('document' in globalThis) throw new Error('the map is computed in a worker')
-  const cutOff = cutOffFor(emitters, grid)
+  const { extents, errorBound } = cutOffFor(emitters, grid)
   const kept =
     before &&
     isSameGrid(before.grid, grid) &&
-    before.cutOff.radius === cutOff.radius &&
+    before.errorBound > 0 === errorBound > 0 &&
     sameData(before.obstructions, obstructions)
       ? before
       : null
   const unused = new Set(kept?.layers)
   const fresh: Layer[] = []
-  const layers = emitters.map((emitter) => {
+  const layers = emitters.map((emitter, i) => {
     const known = [...unused].find((layer) => layer.emitter.id === emitter.id && sameData(layer.emitter, emitter))
     if (known) {
       unused.delete(known)
       return known
     }
-    const layer = layerOf(grid, emitter, cutOff.radius, obstructions)
+    const layer = layerOf(grid, emitter, extents[i] ?? everywhere, obstructions)
     fresh.push(layer)
     return layer
   })
@@ -117,5 +113,5 @@ export function irradianceMap(
   const total = patched ? kept.total : new Float64Array(grid.columns * grid.rows)
   if (patched) for (const layer of unused) addLayer(total, grid.columns, layer, -1)
   for (const layer of patched ? fresh : layers) addLayer(total, grid.columns, layer, 1)
-  return { grid: kept?.grid ?? grid, cutOff, obstructions, layers, total, computed: fresh.length }
+  return { grid: kept?.grid ?? grid, errorBound, obstructions, layers, total, computed: fresh.length }
 }

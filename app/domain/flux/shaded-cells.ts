@@ -13,60 +13,65 @@ import { add, scale, type Vec3 } from '#app/domain/vector.ts'
 const pieces = 6
 const up: Vec3 = [0, 0, 1]
 
-/** Room to work in, kept between calls: the hidden share of each piece per cell, and which cells have one. */
+/** Room to work in, kept between calls. All arrays are clear between elements. */
 interface Marks {
+  /** Hidden share of each piece, 0 … 1, a plane of cells per piece. */
   readonly hidden: Float32Array
-  /** The obstruction that last marked a piece of a cell, so that its solids count once. */
-  readonly by: Uint32Array
   readonly isMarked: Uint8Array
-  readonly marked: Int32Array
+  /** The cells under one thing that lets radiation through, so that its solids count once. */
+  readonly under: Uint8Array
   readonly silhouette: Silhouette
-  count: number
-  stamp: number
 }
 
 function emptyMarks(cells: number, rows: number): Marks {
   return {
     hidden: new Float32Array(cells * pieces),
-    by: new Uint32Array(cells * pieces),
     isMarked: new Uint8Array(cells),
-    marked: new Int32Array(cells),
+    under: new Uint8Array(cells),
     silhouette: { least: new Float64Array(rows), greatest: new Float64Array(rows) },
-    count: 0,
-    stamp: 0,
   }
 }
 
 let room = emptyMarks(0, 0)
 
 function roomFor({ columns, rows }: Cells): Marks {
-  if (room.isMarked.length < columns * rows || room.silhouette.least.length < rows) {
+  if (room.isMarked.length !== columns * rows || room.silhouette.least.length < rows) {
     room = emptyMarks(columns * rows, rows)
   }
   return room
 }
 
-/** Marks pieces from … to of every cell under the silhouette. */
-function markCells(marks: Marks, cells: Cells, from: number, to: number, transmittance: number): void {
-  const { hidden, by, isMarked, marked, silhouette, stamp } = marks
+/** Sets a value in a plane of cells under the silhouette, row by row. */
+function fillUnder(plane: Float32Array | Uint8Array, offset: number, cells: Cells, silhouette: Silhouette): void {
   for (let row = 0; row < cells.rows; row++) {
     const least = silhouette.least[row] ?? Infinity
     const greatest = silhouette.greatest[row] ?? -Infinity
     if (least > greatest) continue
     const first = Math.max(0, Math.ceil((least - cells.x0) / cells.cell - 0.5))
     const last = Math.min(cells.columns - 1, Math.floor((greatest - cells.x0) / cells.cell - 0.5))
-    for (let at = row * cells.columns + first; at <= row * cells.columns + last; at++) {
-      if (isMarked[at] === 0) {
-        isMarked[at] = 1
-        marked[marks.count++] = at
-      }
-      for (let k = at * pieces + from; k < at * pieces + to; k++) {
-        if (by[k] === stamp) continue
-        by[k] = stamp
-        hidden[k] = 1 - (1 - (hidden[k] ?? 0)) * transmittance
-      }
+    const start = offset + row * cells.columns
+    if (last >= first) plane.fill(1, start + first, start + last + 1)
+  }
+}
+
+/** Hides the cells under the silhouette from pieces from … to. */
+function hideWholly(marks: Marks, cells: Cells, from: number, to: number): void {
+  const count = cells.columns * cells.rows
+  fillUnder(marks.isMarked, 0, cells, marks.silhouette)
+  for (let piece = from; piece < to; piece++) fillUnder(marks.hidden, piece * count, cells, marks.silhouette)
+}
+
+/** Hides what a thing keeps of pieces from … to from the cells under it, and clears them for the next. */
+function hidePartly({ under, hidden, isMarked }: Marks, from: number, to: number, transmittance: number): void {
+  for (let at = 0; at < under.length; at++) {
+    if (under[at] === 0) continue
+    isMarked[at] = 1
+    for (let piece = from; piece < to; piece++) {
+      const k = piece * under.length + at
+      hidden[k] = 1 - (1 - (hidden[k] ?? 0)) * transmittance
     }
   }
+  under.fill(0)
 }
 
 /** How far a caster's shadow moves on the plane while its source moves along the whole element, m. */
@@ -75,22 +80,36 @@ function travelOf(caster: Caster, z: number, height: number, length: number): nu
   return (length * (top - z)) / (height - top)
 }
 
+/** Hides the pieces from … to, their middle at `share` of the element, behind all casters of one thing. */
+function hidePieces(
+  marks: Marks,
+  cells: Cells,
+  casters: readonly Caster[],
+  source: Vec3,
+  [from, to]: readonly [number, number],
+  transmittance: number,
+): void {
+  for (const caster of casters) {
+    drawSilhouette(marks.silhouette, cells, caster, source)
+    if (transmittance === 0) hideWholly(marks, cells, from, to)
+    else fillUnder(marks.under, 0, cells, marks.silhouette)
+  }
+  if (transmittance > 0) hidePartly(marks, from, to, transmittance)
+}
+
 function markShadows(marks: Marks, cells: Cells, emitter: Emitter, element: Element, obstruction: Obstruction): void {
   const height = element.centre[2]
-  const sourceAt = (share: number) => add(element.centre, scale(emitter.frame.u, (share - 0.5) * element.length))
-  marks.stamp++
-  for (const solid of obstruction.solids) {
-    const caster = casterOf(solid, cells.z, height)
-    if (!caster) continue
-    if (travelOf(caster, cells.z, height, element.length) <= cells.cell) {
-      drawSilhouette(marks.silhouette, cells, caster, element.centre)
-      markCells(marks, cells, 0, pieces, obstruction.transmittance)
-      continue
-    }
-    for (let piece = 0; piece < pieces; piece++) {
-      drawSilhouette(marks.silhouette, cells, caster, sourceAt((piece + 0.5) / pieces))
-      markCells(marks, cells, piece, piece + 1, obstruction.transmittance)
-    }
+  const casters = obstruction.solids.map((solid) => casterOf(solid, cells.z, height)).filter((each) => each !== null)
+  if (casters.length === 0) return
+  const travel = Math.max(...casters.map((caster) => travelOf(caster, cells.z, height, element.length)))
+  if (travel <= cells.cell) {
+    hidePieces(marks, cells, casters, element.centre, [0, pieces], obstruction.transmittance)
+    return
+  }
+  for (let piece = 0; piece < pieces; piece++) {
+    const place = ((piece + 0.5) / pieces - 0.5) * element.length
+    const source = add(element.centre, scale(emitter.frame.u, place))
+    hidePieces(marks, cells, casters, source, [piece, piece + 1], obstruction.transmittance)
   }
 }
 
@@ -108,34 +127,40 @@ function hiddenExactly(emitter: Emitter, element: Element, point: Vec3, shareOf:
   return sum
 }
 
+function takeExactlyAway(values: Float32Array, marks: Marks, cells: Cells, emitter: Emitter, element: Element): void {
+  const count = marks.isMarked.length
+  for (let at = 0; at < count; at++) {
+    if (marks.isMarked[at] === 0) continue
+    const row = Math.floor(at / cells.columns)
+    const x = cells.x0 + (at - row * cells.columns + 0.5) * cells.cell
+    const point: Vec3 = [x, cells.y0 + (row + 0.5) * cells.cell, cells.z]
+    const loss = hiddenExactly(emitter, element, point, (piece) => marks.hidden[piece * count + at] ?? 0)
+    values[at] = Math.max(0, (values[at] ?? 0) - loss)
+  }
+}
+
 /** The same from the kernel's tables, for level elements with a beam of cosines. */
-function takeHiddenAway(
-  values: Float32Array,
-  marks: Marks,
-  cells: Cells,
-  emitter: Emitter,
-  element: Element,
-  radius: number,
-): void {
+function takeHiddenAway(values: Float32Array, marks: Marks, cells: Cells, emitter: Emitter, element: Element): void {
   const { beam, frame } = emitter
   if (beam.kind !== 'cosine') return
   const { across, along, solidAngle } = cosineTablesOf(beam)
-  const { hidden, marked, count } = marks
+  const { hidden, isMarked } = marks
+  const count = isMarked.length
   const [ux, uy] = frame.u
   const lean = frame.w[1] * ux - frame.w[0] * uy
   const height = element.centre[2] - cells.z
   const strength = (element.radiantPower * height) / (solidAngle * element.length)
   const middle = farthest * entriesPerUnit
   const { columns, cell } = cells
-  for (let m = 0; m < count; m++) {
-    const at = marked[m] ?? 0
+  for (let at = 0; at < count; at++) {
+    if (isMarked[at] === 0) continue
     const row = (at / columns) | 0
     const dx = cells.x0 + (at - row * columns + 0.5) * cell - element.centre[0]
     const dy = cells.y0 + (row + 0.5) * cell - element.centre[1]
     const side = dy * ux - dx * uy
     const inverse = 1 / Math.sqrt(side * side + height * height)
     const c = (side * lean - height * frame.w[2]) * inverse * acrossEntries
-    if (!(c > 0) || dx * dx + dy * dy > radius * radius) continue
+    if (!(c > 0)) continue
     const ci = Math.min(c | 0, acrossEntries)
     const f = (across[2 * ci] ?? 0) + (c - ci) * (across[2 * ci + 1] ?? 0)
     const scaled = inverse * entriesPerUnit
@@ -147,7 +172,7 @@ function takeHiddenAway(
     for (let piece = 0; piece < pieces; piece++) {
       place -= step
       const lower = readAt(along, place)
-      sum += (hidden[at * pieces + piece] ?? 0) * (upper - lower)
+      sum += (hidden[piece * count + at] ?? 0) * (upper - lower)
       upper = lower
     }
     values[at] = Math.max(0, (values[at] ?? 0) - strength * f * inverse * inverse * sum)
@@ -161,8 +186,7 @@ function readAt(along: Float64Array, place: number): number {
 }
 
 /**
- * Takes from the cells what the obstructions keep of one element. `values` must hold that element unshaded within the
- * same radius.
+ * Takes from the cells what the obstructions keep of one element; `values` must hold that element unshaded.
  */
 export function shadeElement(
   values: Float32Array,
@@ -170,7 +194,6 @@ export function shadeElement(
   emitter: Emitter,
   element: Element,
   obstructions: readonly Obstruction[],
-  radius = Infinity,
 ): void {
   if (!(element.centre[2] > cells.z)) return
   const marks = roomFor(cells)
@@ -180,21 +203,8 @@ export function shadeElement(
     }
   }
   const isQuick = emitter.beam.kind === 'cosine' && Math.abs(emitter.frame.u[2]) < 1e-9
-  if (isQuick) takeHiddenAway(values, marks, cells, emitter, element, radius)
-  for (let m = 0; m < marks.count; m++) {
-    const at = marks.marked[m] ?? 0
-    if (!isQuick) {
-      const row = Math.floor(at / cells.columns)
-      const x = cells.x0 + (at - row * cells.columns + 0.5) * cells.cell
-      const point: Vec3 = [x, cells.y0 + (row + 0.5) * cells.cell, cells.z]
-      const isNear = Math.hypot(x - element.centre[0], point[1] - element.centre[1]) <= radius
-      const loss = !isNear
-        ? 0
-        : hiddenExactly(emitter, element, point, (piece) => marks.hidden[at * pieces + piece] ?? 0)
-      values[at] = Math.max(0, (values[at] ?? 0) - loss)
-    }
-    marks.isMarked[at] = 0
-    marks.hidden.fill(0, at * pieces, (at + 1) * pieces)
-  }
-  marks.count = 0
+  if (isQuick) takeHiddenAway(values, marks, cells, emitter, element)
+  else takeExactlyAway(values, marks, cells, emitter, element)
+  marks.isMarked.fill(0)
+  marks.hidden.fill(0)
 }

@@ -23,7 +23,6 @@ export function addTabulated(
   emitter: Emitter,
   beam: TableBeam,
   element: Element,
-  radius: number,
 ): void {
   const rows = rowTablesOf(beam)
   const { u, w } = emitter.frame
@@ -37,7 +36,6 @@ export function addTabulated(
     const dy = cells.y0 + (row + 0.5) * cells.cell - element.centre[1]
     for (let column = 0; column < cells.columns; column++, at++) {
       const dx = cells.x0 + (column + 0.5) * cells.cell - element.centre[0]
-      if (dx * dx + dy * dy > radius * radius) continue
       const side = dy * u[0] - dx * u[1]
       const alongBeam = side * lean - outward
       if (!(alongBeam > 0)) continue

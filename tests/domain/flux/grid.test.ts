@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { windowAround } from '#app/domain/flux/cells.ts'
+import { windowOf } from '#app/domain/flux/cells.ts'
 import { gridOf, mostCells } from '#app/domain/flux/grid.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 
@@ -70,17 +70,13 @@ describe('the grid of a floor', () => {
     expect(() => gridOf(square, 0.6, 0.001)).toThrow(String(mostCells))
   })
 
-  it('gives the window of cells within a radius, none when out of reach', () => {
+  it('gives the window of cells in a rectangle, none when out of reach', () => {
     const grid = gridOf(square, 0.6, 0.5)
-    expect(windowAround(grid, 1, 1, 0.8)).toMatchObject({
-      firstColumn: 0,
-      firstRow: 0,
-      columns: 4,
-      rows: 4,
-      x0: 0,
-      y0: 0,
-    })
-    expect(windowAround(grid, 3.9, 2.9, 0.5)).toMatchObject({ firstColumn: 7, firstRow: 5, columns: 1, rows: 1 })
-    expect(windowAround(grid, 20, 1, 2)).toBeNull()
+    const around = (x: number, y: number, r: number) =>
+      windowOf(grid, { left: x - r, right: x + r, low: y - r, high: y + r })
+    expect(around(1, 1, 0.8)).toMatchObject({ firstColumn: 0, firstRow: 0, columns: 4, rows: 4, x0: 0, y0: 0 })
+    expect(around(3.9, 2.9, 0.5)).toMatchObject({ firstColumn: 7, firstRow: 5, columns: 1, rows: 1 })
+    expect(around(2, 1, Infinity)).toMatchObject({ columns: 8, rows: 6 })
+    expect(around(20, 1, 2)).toBeNull()
   })
 })
