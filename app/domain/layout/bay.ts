@@ -5,7 +5,7 @@ import { nearestOnSegment } from '#app/domain/site/geometry.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 
 /** A member beside a body: the clear way between them in plan, square to the member, m; negative when they overlap. */
-export interface BesideMember {
+interface BesideMember {
   readonly member: Member
   readonly clear: number
   /** +1 when the member lies to the left of its own direction as seen from the body, else −1. */

@@ -14,7 +14,7 @@ export interface Growth {
 const none: Growth = { above: 0, side: 0, end: 0 }
 
 /** The tilted body as a solid, grown outward from its faces. */
-export function bodySolid(body: Body, growth: Growth = none): Extent {
+function bodySolid(body: Body, growth: Growth = none): Extent {
   const { centre, u, v, w, half } = body
   const ends = half.u + growth.end
   const sides = half.v + growth.side

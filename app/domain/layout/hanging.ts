@@ -14,10 +14,10 @@ export interface HangingData {
 }
 
 /** Chain of 28 mm pitch with the usual fittings (hanging data of the demo catalogue). */
-export const plainHanging: HangingData = { linkPitch: 0.028, hardwareAllowance: 0.095, takeUp: [-0.04, 0.04] }
+const plainHanging: HangingData = { linkPitch: 0.028, hardwareAllowance: 0.095, takeUp: [-0.04, 0.04] }
 
 /** One hanger: from a suspension eye plumb up to its member. Lengths m. */
-export interface Hanger {
+interface Hanger {
   readonly eye: Vec3
   readonly memberId: string
   /** Underside of the member over the eye. */

@@ -24,7 +24,7 @@ export interface SupportPlace {
 }
 
 /** What carries one suspension eye. */
-export interface EyeSupport {
+interface EyeSupport {
   readonly eye: Vec3
   readonly place: SupportPlace | null
 }
@@ -103,7 +103,7 @@ function placesOf(site: Site, kind: SupportPlace['kind'], x: number, y: number):
  * The suspension eyes of a body: over the element's axis, at the height of the middle of its back, first the one against
  * u; null when not stated. A tilted body turns about its axis, so its eyes stay over it in plan.
  */
-export function suspensionEyes(body: Body, model: HeaterModel): readonly [Vec3, Vec3] | null {
+function suspensionEyes(body: Body, model: HeaterModel): readonly [Vec3, Vec3] | null {
   if (model.suspensionEyePitch === null) return null
   const [x, y, z] = body.centre
   const over: Vec3 = [x, y, z - body.half.w * body.w[2]]

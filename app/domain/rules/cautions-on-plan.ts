@@ -5,7 +5,7 @@ import type { Finding } from '#app/domain/rules/finding.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 
 /** What a caution is about. */
-export type CautionKind = 'burn' | 'fire' | 'shock' | 'falling heater' | 'eyes' | 'structure' | 'work at height'
+type CautionKind = 'burn' | 'fire' | 'shock' | 'falling heater' | 'eyes' | 'structure' | 'work at height'
 
 /** A caution where it changes placement: a mark on the plan with one sentence. */
 export interface PlanCaution {
@@ -67,7 +67,7 @@ function placeOf(
 }
 
 /** What every picture of a layout says beside it, whatever was found. */
-export const pictureCautions: readonly string[] = [
+const pictureCautions: readonly string[] = [
   'Calculated, not a thermal photograph.',
   "Not a substitute for the heater's manual, a licensed electrician, the structure's engineer, or the fire authority.",
 ]

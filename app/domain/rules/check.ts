@@ -82,7 +82,7 @@ export function judgedBy(rule: Rule, titles: Readonly<Record<Outcome, string>>, 
 }
 
 /** The manual as the source of a figure. */
-export const manualOf = (model: HeaterModel): string => `Manual of ${model.name}`
+const manualOf = (model: HeaterModel): string => `Manual of ${model.name}`
 
 /** A rule about one heater. */
 export function heaterRule(

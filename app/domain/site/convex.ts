@@ -10,7 +10,7 @@ export interface Extent {
  * Where a ray is inside a solid, in multiples of its direction, 0 or more. It misses when `enter` is greater than
  * `leave`; by how much tells how wide it misses, without a jump where it begins to hit.
  */
-export interface Stretch {
+interface Stretch {
   enter: number
   leave: number
 }

@@ -1,6 +1,6 @@
 import { isInside } from '#app/domain/site/geometry.ts'
 import type { Cover } from '#app/domain/site/site.ts'
-import { cross, dot, lengthOf, normalise, scale, subtract, type Vec2, type Vec3 } from '#app/domain/vector.ts'
+import { cross, normalise, scale, subtract, type Vec2, type Vec3 } from '#app/domain/vector.ts'
 
 /** A plane of a cover's underside: a point on it and its unit normal, which points up. */
 export interface Plane {
@@ -71,14 +71,4 @@ export function coverSlope(cover: Cover): Slope | null {
   const sideways = Math.hypot(nx, ny)
   const downhill: Vec2 = sideways === 0 ? [0, 0] : [nx / sideways, ny / sideways]
   return { angle: Math.atan2(sideways, nz), fall: sideways / nz, downhill }
-}
-
-/** Signed distance of a point above the plane, square to it, m; negative below. */
-export const distanceAbovePlane = (plane: Plane, point: Vec3): number => dot(plane.normal, subtract(point, plane.point))
-
-/** Distance between the cover's plan corners a and b, measured along the slope, m. */
-export const edgeLength = (cover: Cover, a: number, b: number): number | null => {
-  const from = cover.corners[a]
-  const to = cover.corners[b]
-  return from && to ? lengthOf(subtract(to, from)) : null
 }

@@ -7,7 +7,7 @@ const rounded = (metres: number): number => Math.round(metres * 1e4) / 1e4
 const shifted = ([x, y]: Vec2, dx: number, dy: number): [number, number] => [rounded(x + dx), rounded(y + dy)]
 
 /** Every id of the site, whatever it names. */
-export function idsOf(site: Site): Set<string> {
+function idsOf(site: Site): Set<string> {
   const named = [site.covers, site.members, site.walls, site.poles, site.obstacles, site.tables, site.seats]
   return new Set([...named.flatMap((things) => things.map(({ id }) => id)), ...site.dimensions.map(({ id }) => id)])
 }

@@ -34,12 +34,6 @@ export function nearestMember(site: Site, x: number, y: number): NearestMember |
   return nearest
 }
 
-/** Where (x, y) comes to when it is held to members: the nearest point within `reach`, m; null when none is that near. */
-export function heldToMember(site: Site, x: number, y: number, reach: number): NearestMember | null {
-  const nearest = nearestMember(site, x, y)
-  return nearest && nearest.distance <= reach ? nearest : null
-}
-
 /** Direction of the member's axis in plan, degrees counter-clockwise from +x. */
 export const memberDirectionDeg = (member: Member): number =>
   (Math.atan2(member.to[1] - member.from[1], member.to[0] - member.from[0]) * 180) / Math.PI

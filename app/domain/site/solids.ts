@@ -169,7 +169,7 @@ function obstacleSolid(obstacle: Obstacle, name: string): Solid {
 }
 
 /** Convex solids that make up a shape, m. */
-export function shapeParts(shape: Shape): Convex[] {
+function shapeParts(shape: Shape): Convex[] {
   switch (shape.kind) {
     case 'box':
       return [axisBox(shape.x, shape.y, shape.z)]

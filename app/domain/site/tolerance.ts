@@ -144,7 +144,7 @@ function keptFor<K, V>(kept: WeakMap<Site, Map<K, V>>, site: Site): Map<K, V> {
 }
 
 /** Every thing of a site that has sizes. */
-export function thingsOf(site: Site): ThingOf[] {
+function thingsOf(site: Site): ThingOf[] {
   const named = (of: ThingOf['of'], things: readonly { id: string }[]) => things.map(({ id }): ThingOf => ({ of, id }))
   return [
     { of: 'floor', id: '' },
