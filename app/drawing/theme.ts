@@ -18,6 +18,8 @@ export interface DrawingColours {
   readonly heaterEdge: string
   readonly element: string
   readonly isoline: string
+  /** Behind an isoline's figure; by day off the heat scale, so that nobody reads a heat in it. */
+  readonly isolineHalo: string
   readonly dots: string
   readonly hatch: string
 }
@@ -38,6 +40,7 @@ const dusk: DrawingColours = {
   heaterEdge: '#0c1322',
   element: '#d2581f',
   isoline: '#fff0da',
+  isolineHalo: '#0c1322',
   dots: '#fff1d8',
   hatch: '#160b18',
 }
@@ -58,6 +61,7 @@ const day: DrawingColours = {
   heaterEdge: '#1d2233',
   element: '#b4471a',
   isoline: '#5c3317',
+  isolineHalo: '#edf1f8',
   dots: '#7a4a22',
   hatch: '#7c2d12',
 }

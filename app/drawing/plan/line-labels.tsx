@@ -94,9 +94,9 @@ export function LineLabels({
           size={pen.lineText}
           weight={quantity.heavy.includes(label.level) ? 600 : 500}
           colour={pen.colours.isoline}
-          halo={pen.colours.halo}
+          halo={pen.colours.isolineHalo}
           haloWidth={pen.lineText * 0.34}
-          haloOpacity={pen.theme === 'dusk' ? 0.72 : 0.9}
+          haloOpacity={pen.theme === 'dusk' ? 0.72 : 1}
         >
           {label.text}
         </Words>

@@ -253,7 +253,7 @@ export const PlanHeatFigures = memo(function PlanHeatFigures({
           size={pen.text}
           weight={600}
           colour={pen.colours.isoline}
-          halo={pen.colours.halo}
+          halo={pen.colours.isolineHalo}
           haloWidth={pen.text * 0.34}
         >
           {peak.text}
