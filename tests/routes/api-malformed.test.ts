@@ -18,6 +18,8 @@ beforeAll(async () => {
   )
   jobId = rows[0]!.job_id
   variantId = rows[0]!.id
+  // The first question starts the thread, which takes its time once.
+  await designer('POST', '/api/flux', { body: { heaters: [], points: [] } })
 })
 afterAll(async () => {
   const { stopFluxThreads } = await import('#app/server/flux.server.ts')
