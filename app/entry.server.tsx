@@ -2,7 +2,7 @@ import { PassThrough } from 'node:stream'
 import { createReadableStreamFromReadable } from '@react-router/node'
 import { isbot } from 'isbot'
 import { renderToPipeableStream } from 'react-dom/server'
-import { ServerRouter, type EntryContext, type RouterContextProvider } from 'react-router'
+import { isRouteErrorResponse, ServerRouter, type EntryContext, type RouterContextProvider } from 'react-router'
 import { nonceContext } from '#app/server/middleware.server.ts'
 
 /** How long a page may wait for its slowest part, ms. */
@@ -47,4 +47,10 @@ export default function handleRequest(
     )
     const timer = setTimeout(abort, streamTimeout + 1000)
   })
+}
+
+/** Faults of ours go to the log; a request that asks for what is not there does not fill it. */
+export function handleError(problem: unknown, { request }: { request: Request }): void {
+  if (request.signal.aborted || (isRouteErrorResponse(problem) && problem.status < 500)) return
+  console.error(problem)
 }

@@ -4,7 +4,7 @@ import path from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { z } from 'zod'
 import { isRoot, run } from '#drizzle/postgres-binaries.ts'
-import { stopLocalDatabase } from '#drizzle/local-database.ts'
+import { startLocalDatabase, stopLocalDatabase, withAdmin } from '#drizzle/local-database.ts'
 import { buildWhenChanged } from '#workers/start-build.ts'
 
 process.chdir(path.resolve(path.dirname(fileURLToPath(import.meta.url)), '..'))
@@ -106,6 +106,19 @@ async function part(name: string, work: () => Count | Promise<Count>): Promise<C
   return count
 }
 
+/** Stops the test cluster and leaves no test's database behind, unless another run of this checkout uses it. */
+async function endTestCluster(): Promise<void> {
+  const cluster = await startLocalDatabase('test')
+  const used = await withAdmin(cluster.adminUrl(), async (admin) => {
+    const others = await admin.query(`select 1 from pg_stat_activity where datname ~ '^(test|template)_'`)
+    if (others.rowCount) return true
+    const kept = await admin.query(`select datname from pg_database where datname ~ '^test_'`)
+    for (const { datname } of kept.rows) await admin.query(`drop database ${admin.escapeIdentifier(datname)}`)
+    return false
+  })
+  if (!used) await stopLocalDatabase('test')
+}
+
 rmSync(results, { recursive: true, force: true })
 mkdirSync(results, { recursive: true })
 const counts: Count[] = []
@@ -115,7 +128,7 @@ for (const { name, check } of wholeChecks) {
 counts.push(await part('unit, database and route tests', unitTests))
 counts.push(await part('build', async () => ({ passed: 0, failed: (await buildWhenChanged(), 0) })))
 counts.push(await part('end-to-end tests', endToEndTests))
-await stopLocalDatabase('test')
+await endTestCluster()
 const passed = counts.reduce((sum, count) => sum + count.passed, 0)
 const failed = counts.reduce((sum, count) => sum + count.failed, 0)
 process.exitCode = failed === 0 ? 0 : 1

@@ -23,6 +23,8 @@ const openPatterns = new Set([
   '*',
 ])
 
+const isOpen = (pattern: string) => openPatterns.has(pattern.replace(/^\//, ''))
+
 const refused = (status: number, error: string) => Response.json({ error, path: '' }, { status })
 
 /** Security headers on every answer, errors and downloads included. */
@@ -35,11 +37,11 @@ const protect: MiddlewareFunction<Response> = async ({ context }, next) => {
 }
 
 /** A body must say how long it is, and no longer than it may be. */
-const limitBody: MiddlewareFunction<Response> = ({ request }) => {
+const limitBody: MiddlewareFunction<Response> = ({ request, pattern }) => {
   if (!request.body) return
   const said = request.headers.get('Content-Length')
   if (said === null) throw refused(411, 'Say how long the body is (Content-Length).')
-  const upload = request.headers.get('Content-Type')?.startsWith('multipart/form-data') ?? false
+  const upload = !isOpen(pattern) && request.headers.get('Content-Type')?.startsWith('multipart/form-data')
   const most = upload ? mostBytes.upload : mostBytes.other
   if (!(Number(said) <= most)) throw refused(413, `The body is larger than ${most / 1_000_000} MB.`)
 }
@@ -50,7 +52,7 @@ const checkOrigin: MiddlewareFunction<Response> = ({ request }) => {
 }
 
 const checkMember: MiddlewareFunction<Response> = async ({ request, pattern }) => {
-  if (!openPatterns.has(pattern.replace(/^\//, ''))) await requireMember(request)
+  if (!isOpen(pattern)) await requireMember(request)
 }
 
 /** What the root route puts before every loader and action, outermost first. */

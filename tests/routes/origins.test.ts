@@ -104,9 +104,10 @@ describe('a body', () => {
     expect(await post(path, 1_000_000, 'application/json')).not.toBe(413)
   })
 
-  it('of an upload may have 20 MB', async () => {
-    expect(await post('/no-such-page', 20_000_001, 'multipart/form-data; boundary=x')).toBe(413)
-    expect(await post('/no-such-page', 20_000_000, 'multipart/form-data; boundary=x')).not.toBe(413)
+  it('of an upload may have 20 MB, from members', async () => {
+    expect(await post('/jobs/new', 20_000_001, 'multipart/form-data; boundary=x')).toBe(413)
+    expect(await post('/jobs/new', 20_000_000, 'multipart/form-data; boundary=x')).not.toBe(413)
+    expect(await post('/sign-in', 1_000_001, 'multipart/form-data; boundary=x')).toBe(413)
   })
 
   it('says how long it is', async () => {
