@@ -14,7 +14,7 @@ export function areaAtLeast(values: Float32Array, { cell, inside }: Cells, least
 }
 
 /** Value of one variant less that of another, cell by cell; both must be of one grid. */
-export function differenceOf(values: Float32Array, less: Float32Array): Float32Array {
+export function differenceOf(values: Float32Array, less: Float32Array): Float32Array<ArrayBuffer> {
   if (values.length !== less.length) throw new Error('A difference needs two maps of one grid')
-  return values.map((value, i) => value - (less[i] ?? NaN))
+  return Float32Array.from(values, (value, i) => value - (less[i] ?? NaN))
 }

@@ -1,5 +1,6 @@
 import type { ListPrice } from '#app/domain/comparison/list-price.ts'
 import type { LayoutTotals, SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
+import { shortName } from '#app/domain/heaters/short-name.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
@@ -25,7 +26,8 @@ export function countByModel({ layout, models }: Pick<ComparedVariant, 'layout' 
 }[] {
   const counts = new Map<string, number>()
   for (const { model } of layout.heaters) {
-    const name = models.get(model)?.name ?? model
+    const known = models.get(model)
+    const name = known ? shortName(known) : model
     counts.set(name, (counts.get(name) ?? 0) + 1)
   }
   return [...counts].map(([name, count]) => ({ name, count })).sort((a, b) => b.count - a.count)

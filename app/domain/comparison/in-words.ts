@@ -63,7 +63,7 @@ function tilts(from: ComparedVariant, other: ComparedVariant): string | null {
 function seats({ totals: before }: ComparedVariant, { totals: after }: ComparedVariant): string | null {
   const more = after.seatsInTarget - before.seatsInTarget
   if (more === 0) return null
-  return `${Math.abs(more)} ${Math.abs(more) === 1 ? 'seat' : 'seats'} ${more > 0 ? 'more' : 'fewer'} in target.`
+  return `${Math.abs(more)} ${more > 0 ? 'more' : 'fewer'} ${Math.abs(more) === 1 ? 'seat' : 'seats'} in target.`
 }
 
 function overlap(from: ComparedVariant, other: ComparedVariant, terms: ComparisonTerms): string | null {

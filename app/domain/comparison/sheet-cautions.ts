@@ -26,11 +26,11 @@ export function sheetCautions(told: Told): string[] {
     ...stopped(told),
     ...heads(told),
     ...clearances(told),
-    ...loads(told),
     ...measureFirst(told),
+    ...loads(told),
     ...assumptions(told),
     withoutHeat(told),
-    'A figure never approves. It does not stand for the heater’s manual, a licensed electrician, the structure’s engineer or the fire authority.',
+    'No figure approves: the manual, a licensed electrician, the structure’s engineer and the fire authority do.',
   ]
 }
 
@@ -60,7 +60,7 @@ function clearances({ variants, models, units }: Told): string[] {
     if (used.length === 0) return []
     const most = (values: readonly (number | null)[]) => formatLength(Math.max(...values.map((v) => v ?? 0)), units)
     const [above, end, front] = [used.map((c) => c.above), used.map((c) => c.end), used.map((c) => c.frontOfBeam)]
-    return [`variant ${number}, ${most(end)} from a heater’s end, ${most(above)} above, ${most(front)} in front`]
+    return [`variant ${number}, ${most(end)} at the ends, ${most(above)} above, ${most(front)} in front`]
   })
   return parts.length === 0 ? [] : [`Nothing that burns nearer than: ${parts.join('; ')}.`]
 }
@@ -69,26 +69,27 @@ function loads({ variants }: Told): string[] {
   const open = variants.some(({ findings }) =>
     findings.some(({ rule, outcome }) => rule === 'support-load' && outcome === 'cannot tell'),
   )
-  return open ? ['Load on the members that carry the heaters: to be confirmed by the maker of the structure.'] : []
+  return open ? ['Load on the members: the maker of the structure must confirm it.'] : []
 }
 
 function measureFirst({ variants }: Told): string[] {
   return variants.flatMap(({ number, findings }) => {
     const rules = findings.filter(({ outcome }) => outcome === 'measure first')
     if (rules.length === 0) return []
-    const titles = [...new Set(rules.map(({ title }) => title))].slice(0, 2).join('; ')
-    return [`Variant ${number}, measure first: ${titles}. The margin is smaller than the tolerance of the sizes.`]
+    const [first = '', ...more] = [...new Set(rules.map(({ title }) => title))]
+    const others = more.length === 0 ? '' : ` and ${more.length} more`
+    return [`Measure first, variant ${number}: ${first.charAt(0).toLowerCase()}${first.slice(1)}${others}.`]
   })
 }
 
 function assumptions({ brief, units }: Told): string[] {
   if (brief.assumed.length === 0) return []
-  return [`Assumed until confirmed: ${brief.assumed.map((name) => assumptionOf(brief, name, units)).join('; ')}.`]
+  return [`Assumed: ${brief.assumed.map((name) => assumptionOf(brief, name, units)).join('; ')}.`]
 }
 
 function withoutHeat({ variants, units }: Told): string {
   const seat = variants[0]?.warmth[0]
-  const base = 'Heaters warm people, not the air. It will not feel like indoors.'
+  const base = 'Heaters warm people, not the air.'
   if (!seat) return base
   const [calm, windy] = [seat.feelsLike.calm.before, seat.feelsLike.design.before].map((celsius) =>
     formatQuantity(celsius, 'temperature', units, 0),

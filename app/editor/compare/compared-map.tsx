@@ -1,5 +1,4 @@
 import { memo, useEffect, useMemo, useRef, type KeyboardEvent, type PointerEvent } from 'react'
-import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
@@ -25,13 +24,13 @@ interface ComparedMapProps {
   readonly site: Site
   readonly layout: Layout
   readonly models: ReadonlyMap<string, HeaterModel>
-  readonly warmth: readonly SeatWarmth[] | null
-  readonly head: boolean
+  /** What each seat's disc says. */
+  readonly signs: ReadonlyMap<string, SeatSign>
   readonly plane: number
   readonly answer: MapAnswer | null
-  readonly picture: HeatPicture | null
   readonly quantity: QuantityScale
-  readonly mapKind: 'flux' | 'overlap'
+  /** Whether the tag says the map's own value beside the irradiance. */
+  readonly ownValue: boolean
   readonly views: LinkedViews
   readonly pointed: PointedStore
 }
@@ -41,11 +40,10 @@ const detail: PlanDetail = { names: false, spacings: true, overall: false, scale
 
 /** One of the maps beside each other: the same view, the same pointer, the same scale as the others. */
 export function ComparedMap(props: ComparedMapProps) {
-  const { name, label, site, layout, models, answer, picture, quantity, views, pointed, plane } = props
+  const { name, label, site, layout, models, answer, signs, quantity, views, pointed, plane } = props
   const { view, join } = views
   const svg = useRef<SVGSVGElement>(null)
   const emitters = useMemo(() => emittersOf(layout, models), [layout, models])
-  const signs = useMemo(() => signsOf(props.warmth, props.head), [props.warmth, props.head])
   const hand = useMapHand(svg, views, pointed)
   const { width, height } = view
   return (
@@ -62,7 +60,11 @@ export function ComparedMap(props: ComparedMapProps) {
         {...hand}
       >
         <g ref={join}>
-          <StillPlan {...{ name, site, layout, models, quantity, picture, signs }} view={view} />
+          <StillPlan
+            {...{ name, site, layout, models, quantity, signs }}
+            picture={answer?.picture ?? null}
+            view={view}
+          />
         </g>
       </svg>
       <ReadOut
@@ -72,7 +74,7 @@ export function ComparedMap(props: ComparedMapProps) {
         plane={plane}
         answer={answer}
         scale={quantity}
-        mapKind={props.mapKind}
+        mapKind={props.ownValue ? 'overlap' : 'flux'}
         fluxUnit="W/m²"
         width={width}
         height={height}
@@ -98,15 +100,6 @@ interface StillPlanProps {
 const StillPlan = memo(function StillPlan(props: StillPlanProps) {
   return <Plan {...props} pen={pen} detail={detail} />
 })
-
-function signsOf(warmth: readonly SeatWarmth[] | null, head: boolean): ReadonlyMap<string, SeatSign> {
-  return new Map(
-    (warmth ?? []).map(({ seat, body, head: atHead, target }) => {
-      const value = head ? atHead : body
-      return [seat.id, { kind: 'figure', text: value === null ? '–' : String(Math.round(value)), outcome: target }]
-    }),
-  )
-}
 
 function PointedSeat({ site, view, pointed }: { site: Site; view: PlanView; pointed: PointedStore }) {
   const now = usePointed(pointed)

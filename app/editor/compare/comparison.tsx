@@ -20,6 +20,7 @@ import { ComparedMap } from '#app/editor/compare/compared-map.tsx'
 import { Differences, InWords } from '#app/editor/compare/differences.tsx'
 import { MapHead, RingLegend } from '#app/editor/compare/map-head.tsx'
 import { SeatBySeat } from '#app/editor/compare/seat-by-seat.tsx'
+import { seatSigns } from '#app/editor/compare/seat-signs.ts'
 import { useComparison, type ComparedMaps } from '#app/editor/compare/use-comparison.ts'
 import { useLinkedViews } from '#app/editor/compare/use-linked-views.ts'
 import { pointedStore } from '#app/editor/pointed.ts'
@@ -45,7 +46,15 @@ interface ComparisonProps {
 }
 
 const pen = screenPen('dusk')
-const margins = { top: 28, right: 40, bottom: 40, left: 28 }
+const margins = { top: 28, right: 44, bottom: 40, left: 40 }
+const gap = 18
+/** Below this many px to a metre seats' figures have no room; the maps then stand one below the other. */
+const leastScale = 32
+
+/** Whether two maps fit beside each other. */
+const sideBySide = (site: Site, width: number): boolean =>
+  width >= 700 && planViewOf(site, (width - gap) / 2, undefined, margins).scale >= leastScale
+
 type Show = 'irradiance' | 'overlap' | 'difference'
 
 /** Variants side by side on one scale: maps under one view and pointer, seat by seat, and what differs. */
@@ -56,8 +65,8 @@ export function Comparison({ site, brief, models: list, chosen, picker }: Compar
   const [pointed] = useState(pointedStore)
   const frame = useRef<HTMLDivElement>(null)
   const size = useSize(frame, { width: 1400, height: 400 })
-  const wide = size.width >= 700
-  const columnWidth = Math.max(280, Math.floor(wide ? (size.width - 18) / 2 : size.width))
+  const wide = useMemo(() => sideBySide(site, size.width), [site, size.width])
+  const columnWidth = Math.max(280, Math.floor(wide ? (size.width - gap) / 2 : size.width))
   const whole = useMemo(() => planViewOf(site, columnWidth, undefined, margins), [site, columnWidth])
   const views = useLinkedViews(whole)
 
@@ -77,8 +86,12 @@ export function Comparison({ site, brief, models: list, chosen, picker }: Compar
   const [first] = compared
   const words = first && complete ? compared.slice(1).map((other) => differencesInWords(first, other, terms)) : []
   const height = (metres: number) => formatLength(metres, site.displayUnits)
-  const warmths = maps.map(({ figures }) => figures?.warmth ?? null)
   const difference = show === 'difference'
+  const warmths = maps.map(({ figures }) => figures?.warmth ?? null)
+  const signs = useMemo(() => {
+    const all = maps.map(({ figures }) => figures?.warmth ?? null)
+    return all.map((warmth) => seatSigns(warmth, head, show === 'difference' ? (all[0] ?? null) : null))
+  }, [maps, head, show])
   const quantity = {
     irradiance: irradianceScale('dusk', brief.target),
     overlap: overlapScale('dusk', threshold),
@@ -137,11 +150,10 @@ export function Comparison({ site, brief, models: list, chosen, picker }: Compar
                 <ComparedMap
                   name={`map-${variant.number}`}
                   label={`Variant ${variant.number}, ${variant.title}: ${quantity.name}`}
-                  {...{ site, layout, models, head, plane, quantity, views, pointed }}
-                  warmth={figures?.warmth ?? null}
-                  answer={show === 'overlap' ? overlap : flux}
-                  picture={(difference ? lesser : show === 'overlap' ? overlap?.picture : flux?.picture) ?? null}
-                  mapKind={show === 'overlap' ? 'overlap' : 'flux'}
+                  {...{ site, layout, models, plane, quantity, views, pointed }}
+                  signs={signs[i] ?? noSigns}
+                  answer={{ irradiance: flux, overlap, difference: lesser }[show]}
+                  ownValue={show !== 'irradiance'}
                 />
               </article>
             )
@@ -149,10 +161,9 @@ export function Comparison({ site, brief, models: list, chosen, picker }: Compar
           {difference && wide && <DifferenceNote first={chosen[0]} />}
         </div>
       </div>
-      <MapState state={state} maps={maps} onRetry={() => setAttempt((before) => before + 1)} />
-      <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2 py-3">
-        <div className="flex max-w-full flex-wrap items-end gap-x-4">
-          <span className="pb-3 text-ink-2">
+      <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-1 pt-2.5 pb-3">
+        <div className="flex max-w-full flex-wrap items-center gap-x-4">
+          <span className="text-ink-2">
             {quantity.name}
             {show !== 'overlap' && `, ${quantity.unit}`} at {height(plane)}
           </span>
@@ -161,16 +172,17 @@ export function Comparison({ site, brief, models: list, chosen, picker }: Compar
             quantity={quantity}
             pen={pen}
             ink="var(--color-ink)"
-            width={Math.min(580, size.width)}
+            width={Math.min(560, size.width)}
           />
         </div>
-        {show === 'irradiance' ? <RingLegend /> : null}
+        {show === 'irradiance' && <RingLegend />}
         <p className="flex items-center print:hidden">
           <IconButton icon="minus" label="Smaller" onClick={() => views.enlargeAt(0.8)} />
           <IconButton icon="plus" label="Larger" onClick={() => views.enlargeAt(1.25)} />
           <IconButton icon="fit" label="Whole plan" onClick={views.showAll} />
         </p>
       </div>
+      <MapState state={state} maps={maps} onRetry={() => setAttempt((before) => before + 1)} />
       <p className="pb-4 text-xs text-ink-3">
         Calculated, not a thermal photograph. Overlap: the area where two or more heaters each alone give{' '}
         {formatQuantity(threshold, 'irradiance', 'metric')} or more, {houseRules.overlapThreshold.source}.
@@ -199,6 +211,7 @@ export function Comparison({ site, brief, models: list, chosen, picker }: Compar
   )
 }
 
+const noSigns = new Map<string, never>()
 const nothing: ComparedMaps = { figures: null, flux: null, overlap: null, overlapArea: null, difference: null }
 
 interface Known extends Pick<ComparisonProps, 'chosen' | 'brief'> {
@@ -221,7 +234,7 @@ function DifferenceNote({ first }: { first: ChosenVariant | undefined }) {
   return (
     <p className="max-w-sm self-center text-base text-ink-2">
       Orange: more irradiance than in variant {first?.number}, {first?.title}. Purple: less. The middle of the scale is
-      no difference. Seats show their own figures.
+      no difference. Seats show how much more or less they get; their rings, how they stand in this variant.
     </p>
   )
 }
@@ -229,7 +242,7 @@ function DifferenceNote({ first }: { first: ChosenVariant | undefined }) {
 function MapState({ state, maps, onRetry }: { state: string; maps: readonly ComparedMaps[]; onRetry: () => void }) {
   const done = maps.filter(({ overlapArea }) => overlapArea !== null).length
   return (
-    <div role="status" className="min-h-5 pt-1 text-xs text-ink-2 print:hidden">
+    <div role="status" className="text-xs text-ink-2 print:hidden">
       {state === 'working' && done < maps.length && `Maps, ${done} of ${maps.length}`}
       {state === 'broken' && (
         <span className="flex items-center gap-2 text-clay">

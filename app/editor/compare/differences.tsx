@@ -68,7 +68,7 @@ export function Differences({ variants, rows }: { variants: readonly Named[]; ro
           <caption className="sr-only">Figures of the variants side by side</caption>
           <thead>
             <tr>
-              <th scope="col" className="w-36 pb-1.5 text-left text-2xs font-medium text-ink-3">
+              <th scope="col" className="w-24 pb-1.5 text-left text-2xs font-medium text-ink-3 tablet:w-36">
                 Figure
               </th>
               {variants.map(({ number, title }, i) => (

@@ -18,7 +18,7 @@ export function MapHead({ i, number, title, less, warmth, overlapArea, threshold
   return (
     <header className="flex flex-wrap items-center gap-x-2.5 gap-y-1 border-t border-ink py-2">
       <Mark i={i} />
-      <h2 className="min-w-0 flex-1 truncate">
+      <h2 className="min-w-44 flex-1 truncate">
         <span className="mr-1.5 font-strong">{number}</span> {title}
         {less !== null && <span className="text-ink-2">, less variant {less}</span>}
       </h2>
@@ -29,17 +29,28 @@ export function MapHead({ i, number, title, less, warmth, overlapArea, threshold
         </p>
       ) : (
         <p className="flex gap-4 text-ink-2">
-          <Ring kind="below" /> {count('below')} below
-          <Ring kind="in target" /> {count('in target')} in target
-          <Ring kind="above" /> {count('above')} above
+          <Ringed kind="below">{count('below')} below</Ringed>
+          <Ringed kind="in target">{count('in target')} in target</Ringed>
+          <Ringed kind="above">{count('above')} above</Ringed>
         </p>
       )}
     </header>
   )
 }
 
+type RingKind = 'below' | 'in target' | 'above'
+
+function Ringed({ kind, children }: { kind: RingKind; children: ReactNode }) {
+  return (
+    <span className="inline-flex items-center gap-1.5 whitespace-nowrap">
+      <Ring kind={kind} />
+      <span>{children}</span>
+    </span>
+  )
+}
+
 /** A seat's ring as on the map. */
-function Ring({ kind }: { kind: 'below' | 'in target' | 'above' }) {
+function Ring({ kind }: { kind: RingKind }) {
   return (
     <svg
       width="14"
@@ -49,7 +60,7 @@ function Ring({ kind }: { kind: 'below' | 'in target' | 'above' }) {
       stroke="currentColor"
       strokeWidth="1.4"
       aria-hidden="true"
-      className="-mr-2 self-center"
+      className="flex-none"
     >
       <circle cx="7" cy="7" r="5.6" strokeDasharray={kind === 'below' ? '2.4 2' : undefined} />
       {kind === 'above' && <circle cx="7" cy="7" r="3.2" strokeWidth="1.1" />}
@@ -60,10 +71,10 @@ function Ring({ kind }: { kind: 'below' | 'in target' | 'above' }) {
 /** What the rings of the seats say. */
 export function RingLegend() {
   return (
-    <p className="flex flex-wrap gap-x-4 pb-3 text-ink-2">
-      <Ring kind="below" /> below target, dashed ring
-      <Ring kind="in target" /> in target, plain ring
-      <Ring kind="above" /> above target, double ring
+    <p className="flex flex-wrap gap-x-3.5 text-ink-2">
+      <Ringed kind="below">below, dashed</Ringed>
+      <Ringed kind="in target">in target, plain</Ringed>
+      <Ringed kind="above">above, double ring</Ringed>
     </p>
   )
 }

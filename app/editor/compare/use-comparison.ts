@@ -6,7 +6,6 @@ import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
-import type { HeatPicture } from '#app/drawing/heat/contours.ts'
 import type { MapAnswer } from '#app/drawing/heat/map-picture.ts'
 import { differenceScale, irradianceScale, overlapScale } from '#app/drawing/heat/quantity.ts'
 import { cellOf, emittersOf } from '#app/editor/map-questions.ts'
@@ -30,8 +29,8 @@ export interface ComparedMaps {
   readonly overlap: MapAnswer | null
   /** Where two heaters or more each alone give the threshold, m². */
   readonly overlapArea: number | null
-  /** This variant less the first one; null for the first. */
-  readonly difference: HeatPicture | null
+  /** This variant less the first one, W/m²; null for the first. */
+  readonly difference: MapAnswer | null
 }
 
 /** The comparison as far as it is known. */
@@ -108,7 +107,8 @@ async function answerDifferences(
   for (const [i, remote] of remotes.entries()) {
     const own = variants[i]?.flux
     if (i === 0 || !first || !own) continue
-    const difference = await remote.answerPicture(differenceOf(own.values, first.values), own.grid, levels, edges)
-    update(i, { difference })
+    const values = differenceOf(own.values, first.values)
+    const picture = await remote.answerPicture(values, own.grid, levels, edges)
+    update(i, { difference: { ...own, values, picture } })
   }
 }
