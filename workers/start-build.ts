@@ -49,7 +49,7 @@ export async function buildWhenChanged(): Promise<boolean> {
     console.log('Building …')
     const built = spawnSync(process.execPath, ['node_modules/@react-router/dev/bin.js', 'build'], {
       encoding: 'utf8',
-      env: { ...process.env, NODE_ENV: 'production' },
+      env: { ...process.env, NODE_ENV: 'production', NO_COLOR: '1', FORCE_COLOR: '0' },
     })
     if (built.status !== 0) throw new StartProblem(`The build failed:\n${built.stderr.slice(-3000)}`)
     writeFileSync(stamp, hash)
