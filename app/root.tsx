@@ -1,3 +1,4 @@
+import './parse-without-eval.ts'
 import type { ReactNode } from 'react'
 import {
   isRouteErrorResponse,

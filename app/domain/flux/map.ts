@@ -4,7 +4,7 @@ import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { Grid } from '#app/domain/flux/grid.ts'
 import { addElement } from '#app/domain/flux/kernel.ts'
 import { shadeElement } from '#app/domain/flux/shaded-cells.ts'
-import { maxHeaters } from '#app/domain/layout/layout.ts'
+import { maxHeaters } from '#app/domain/layout/limits.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
 
 /** What one emitter gives the cells of a window of the grid, W/m². */

@@ -1,8 +1,6 @@
 import { z } from 'zod'
 import { mountSchema } from '#app/domain/heaters/heater-model.ts'
-
-/** Stated maxima of one job. */
-export const maxHeaters = 200
+import { maxHeaters } from '#app/domain/layout/limits.ts'
 
 /**
  * A heater as it hangs. x, y: plan position of the centre of the body box, m. lowestPoint: lowest point of the tilted

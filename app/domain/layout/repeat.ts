@@ -1,5 +1,6 @@
 import { type HeaterPlace, placeHeaters, type Placed } from '#app/domain/layout/edits.ts'
-import { type Layout, maxHeaters } from '#app/domain/layout/layout.ts'
+import type { Layout } from '#app/domain/layout/layout.ts'
+import { maxHeaters } from '#app/domain/layout/limits.ts'
 import { roundLength } from '#app/domain/units.ts'
 import { radians, type Vec2 } from '#app/domain/vector.ts'
 

@@ -1,0 +1,2 @@
+/** The most heaters of one variant. */
+export const maxHeaters = 200
