@@ -158,7 +158,7 @@ describe('the picture of the sheet', () => {
         if (read === null) continue
         const truth = emitters.reduce((sum, emitter) => sum + irradianceAt(emitter, [x, y, 0.6], [0, 0, 1]), 0)
         compared.push(Math.abs(read - truth))
-        expect(Math.abs(read - truth), `${x.toFixed(2)}, ${y.toFixed(2)}: ${truth.toFixed(0)}`).toBeLessThan(13)
+        expect(Math.abs(read - truth), `${x.toFixed(2)}, ${y.toFixed(2)}: ${truth.toFixed(0)}`).toBeLessThan(9)
       }
     }
     expect(compared.length).toBeGreaterThan(60)

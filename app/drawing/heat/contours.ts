@@ -4,7 +4,7 @@ import { placesOnRing, type LinePlace } from '#app/drawing/heat/line-places.ts'
 import { pathOfRings, thinRing, type Ring } from '#app/drawing/heat/rings.ts'
 
 /** The part of the floor where the value is at least `from`; painted in order, the next band lies over it. */
-export interface HeatBand {
+interface HeatBand {
   readonly from: number
   /** Lower edge of the next band; the last band is open and repeats its own step. */
   readonly to: number
@@ -13,7 +13,7 @@ export interface HeatBand {
 }
 
 /** Where the value is exactly `level`, with the places where its figure may stand, the straightest first. */
-export interface HeatLine {
+interface HeatLine {
   readonly level: number
   readonly path: string
   readonly labels: readonly LinePlace[]
@@ -31,7 +31,7 @@ export interface HeatPicture {
 }
 
 /** A point of the floor, m, and the value there. */
-export interface HeatPeak {
+interface HeatPeak {
   readonly x: number
   readonly y: number
   readonly value: number

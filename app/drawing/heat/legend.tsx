@@ -26,7 +26,7 @@ export interface LegendProps {
 const rounded = (value: number): number => Math.round(value * 100) / 100
 
 /** Height of the bar, px at weight 1. */
-export const legendBar = 9
+const legendBar = 9
 
 /** The fill's bands as they lie on the bar: lower and upper value inside the scale's ends. */
 export function legendBands(quantity: QuantityScale): { from: number; to: number; fill: string }[] {

@@ -3,7 +3,7 @@ import { hexOf, rgbOf, type Rgb } from '#app/drawing/heat/colour.ts'
 import type { Theme } from '#app/drawing/theme.ts'
 
 /** Where the one scale of irradiance ends and the fill saturates, W/m². Figures above it are written out. */
-export const saturation = 600
+const saturation = 600
 
 /** Colours of the scale every 50 W/m² from 0 to 600, the page's tokens `heat-…` and `day-…`. */
 export const heatColours = {

@@ -73,14 +73,14 @@ function strokesOf(kind: Place['kind'], edge: ScreenEdge, past: number, k: numbe
   }))
 }
 
-/** Where along an edge its name stands: the place nearest the middle that keeps clear of what else stands there, px. */
-function nameAlong(edge: ScreenEdge, width: number, avoid: readonly (readonly [number, number])[]): number {
+/** Where along an edge its name stands, px: nearest the middle and clear of what else stands there; null without room. */
+function nameAlong(edge: ScreenEdge, width: number, avoid: readonly (readonly [number, number])[]): number | null {
   const middles = [0.5, 0.42, 0.58, 0.34, 0.26, 0.66, 0.18, 0.1].map((t) => t * edge.length)
   const clear = middles.find((along) => {
     const [x] = onEdge(edge, along, 0)
     return avoid.every(([from, to]) => x + width / 2 < from - 10 || x - width / 2 > to + 10)
   })
-  return clear ?? edge.length / 2
+  return clear ?? null
 }
 
 /**
@@ -109,7 +109,7 @@ export function Beyond({
         const past = level ? view.width : view.height
         const name = sentence(place.name)
         const along = level ? nameAlong(edge, textWidth(name, pen.text, 500), avoid) : edge.length / 2
-        const [x, y] = onEdge(edge, along, (level ? 29 : 22) * (pen.k < 1 ? 0.72 : 1))
+        const [x, y] = onEdge(edge, along ?? 0, (level ? 29 : 22) * (pen.k < 1 ? 0.72 : 1))
         return (
           <g key={place.edge}>
             {strokesOf(place.kind, edge, past, pen.k).map((stroke, i) => (
@@ -122,7 +122,7 @@ export function Beyond({
                 opacity={stroke.opacity}
               />
             ))}
-            {named ? (
+            {named && along !== null ? (
               <Words
                 x={x}
                 y={y}

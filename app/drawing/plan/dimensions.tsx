@@ -111,7 +111,7 @@ export function PlanDimensions({
 }
 
 /** Bottom of the floor and of the walls below it, px. */
-export function lowestPx(site: Site, view: PlanView): number {
+function lowestPx(site: Site, view: PlanView): number {
   const floor = view.y0 - view.scale * extentOf(site.floor).y[0]
   return Math.max(floor, ...site.walls.flatMap((wall) => wallCorners(wall, view).map((corner) => corner[1])))
 }

@@ -215,7 +215,7 @@ export function HeaterMark({
 }
 
 /** The ring around something selected, 7 px outside a bar of this size about the origin. */
-export function SelectionRing({ length, width, pen }: { length: number; width: number; pen: Pen }) {
+function SelectionRing({ length, width, pen }: { length: number; width: number; pen: Pen }) {
   const ring = {
     x: rounded(-length / 2 - 7),
     y: rounded(-width / 2 - 7),

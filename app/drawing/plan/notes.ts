@@ -19,7 +19,7 @@ export interface Note {
 const sentence = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1)
 
 /** What a thing is called on the plan, with the height of its underside and whether it may burn. */
-export function noteText(obstacle: Obstacle, displayUnits: Site['displayUnits']): string {
+function noteText(obstacle: Obstacle, displayUnits: Site['displayUnits']): string {
   const name = sentence(obstacle.name.split(',')[0] ?? obstacle.name)
   const [low, high] = obstacle.shape.z
   const height = (metres: number) => dimensionText(metres, displayUnits)

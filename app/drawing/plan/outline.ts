@@ -8,7 +8,7 @@ export const outlinePath = (outline: readonly Vec2[], view: PlanView): string =>
   `M${outline.map((corner) => toScreen(view, corner).map(figure).join(' ')).join('L')}Z`
 
 /** Twice the signed area of a polygon: positive when it runs counter-clockwise, m². */
-export const doubleArea = (outline: readonly Vec2[]): number =>
+const doubleArea = (outline: readonly Vec2[]): number =>
   outline.reduce((sum, [x, y], i) => {
     const [nextX, nextY] = outline[(i + 1) % outline.length] ?? [x, y]
     return sum + x * nextY - nextX * y

@@ -5,7 +5,7 @@ import { Words } from '#app/drawing/text/words.tsx'
 const foot = 0.3048
 
 /** Length of one part of a scale bar, in the drawing's unit: the largest round one of which `parts` fit in `most` px. */
-export function scaleBarStep(pxPerUnit: number, most: number, parts: number): number {
+function scaleBarStep(pxPerUnit: number, most: number, parts: number): number {
   const steps = [0.25, 0.5, 1, 2, 5, 10, 20, 50]
   return steps.findLast((step) => step * parts * pxPerUnit <= most) ?? 0.1
 }

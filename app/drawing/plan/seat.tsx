@@ -114,7 +114,7 @@ export function SeatRing({
 }
 
 /** Strokes of a customer's seat: none cool, one slightly cool, two neutral, three slightly warm. */
-export function WarmthStrokes({ x, y, r, word, pen }: { x: number; y: number; r: number; word: WarmthWord; pen: Pen }) {
+function WarmthStrokes({ x, y, r, word, pen }: { x: number; y: number; r: number; word: WarmthWord; pen: Pen }) {
   const count = strokesOf[word]
   const gap = r * 0.36
   return (

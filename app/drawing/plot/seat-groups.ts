@@ -16,7 +16,7 @@ export interface SeatGroup {
 }
 
 /** The part of a seat's id that tells it from others of its group: "R1-3" of group "R1" is "3". */
-export function seatNumber(id: string, group: string): string {
+function seatNumber(id: string, group: string): string {
   const rest = id.startsWith(group) ? id.slice(group.length).replace(/^[-\s.]+/, '') : id
   return rest === '' ? id : rest
 }

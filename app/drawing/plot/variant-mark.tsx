@@ -1,7 +1,7 @@
 import type { Pen } from '#app/drawing/pen.ts'
 
 /** Marks by which two to four variants are told apart in one plot, in their order. */
-export const variantMarks = ['triangle', 'disc', 'bar', 'cross'] as const
+const variantMarks = ['triangle', 'disc', 'bar', 'cross'] as const
 export type VariantMarkKind = (typeof variantMarks)[number]
 
 /** The mark of the i-th variant that is compared. */

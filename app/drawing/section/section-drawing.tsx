@@ -67,7 +67,7 @@ export function sectionTitle(layout: Layout, cut: SectionCut): string {
 }
 
 /** The section as a group, fill first, figures last. */
-export function Section(props: SectionProps) {
+function Section(props: SectionProps) {
   const { name, site, layout, models, view, pen, selected = new Set<string>() } = props
   const covers = cutCovers(site, view)
   const heaters = heatersInCut(layout, view.cut).flatMap((heater) => {

@@ -1,4 +1,4 @@
-import { sheetInk } from '#app/drawing/plot/seat-plot.tsx'
+import { sheetInk } from '#app/drawing/plot/plot-ink.ts'
 import type { Box } from '#app/drawing/sheet/sheet-layout.ts'
 import { wrapText } from '#app/drawing/text/widths.ts'
 import { Words } from '#app/drawing/text/words.tsx'

@@ -7,7 +7,7 @@ const counted = (warmth: readonly SeatWarmth[]): SeatWarmth[] =>
   warmth.filter(({ seat, onFloor }) => onFloor && seat.priority !== 'not heated')
 
 /** How many seats feel how, out of the wind: "8 cool, 32 slightly cool". */
-export function seatsInWords(warmth: readonly SeatWarmth[]): string {
+function seatsInWords(warmth: readonly SeatWarmth[]): string {
   const words = counted(warmth).flatMap(({ sensation }) => sensation.calm.after?.word ?? [])
   if (words.length === 0) return '–'
   return warmthWords
@@ -22,14 +22,14 @@ const degreesText = (celsius: number, units: DisplayUnits): string =>
   String(Math.round(fromSi(celsius, 'temperature', units))).replace('-', '−')
 
 /** The unit of temperatures on a sheet. */
-export const temperatureUnit = (units: DisplayUnits): string => (units === 'imperial' ? '°F' : '°C')
+const temperatureUnit = (units: DisplayUnits): string => (units === 'imperial' ? '°F' : '°C')
 
 /** A temperature with its unit. */
-export const temperatureText = (celsius: number, units: DisplayUnits): string =>
+const temperatureText = (celsius: number, units: DisplayUnits): string =>
   `${degreesText(celsius, units)} ${temperatureUnit(units)}`
 
 /** What the seats feel like at one wind, heaters off and on: "7 → 12 to 14 °C". */
-export function feelsLikeText(warmth: readonly SeatWarmth[], wind: WindName, units: DisplayUnits): string {
+function feelsLikeText(warmth: readonly SeatWarmth[], wind: WindName, units: DisplayUnits): string {
   const pairs = counted(warmth).map(({ feelsLike }) => feelsLike[wind])
   const after = pairs.flatMap((pair) => pair.after ?? [])
   if (after.length === 0) return '–'
@@ -41,7 +41,7 @@ export function feelsLikeText(warmth: readonly SeatWarmth[], wind: WindName, uni
 }
 
 /** How a guest is dressed, from the clothing's insulation in clo (common practice, no source). */
-export function dressedText(clo: number): string {
+function dressedText(clo: number): string {
   if (clo >= 1.2) return 'in a coat'
   return clo >= 0.9 ? 'in a jacket' : 'in light clothes'
 }

@@ -1,6 +1,6 @@
 import { printPen } from '#app/drawing/pen.ts'
 import { ScaleBar } from '#app/drawing/plan/scale-bar.tsx'
-import { sheetInk } from '#app/drawing/plot/seat-plot.tsx'
+import { sheetInk } from '#app/drawing/plot/plot-ink.ts'
 import type { ComparisonSheetProps } from '#app/drawing/sheet/sheet-facts.ts'
 import { PrintedMark } from '#app/drawing/sheet/mark.tsx'
 import type { Box } from '#app/drawing/sheet/sheet-layout.ts'

@@ -6,7 +6,7 @@ import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
 import { printPen } from '#app/drawing/pen.ts'
 import { Plan, type PlanDetail } from '#app/drawing/plan/plan-drawing.tsx'
 import type { SeatSign } from '#app/drawing/plan/seat.tsx'
-import { sheetInk } from '#app/drawing/plot/seat-plot.tsx'
+import { sheetInk } from '#app/drawing/plot/plot-ink.ts'
 import { VariantMark, type VariantMarkKind } from '#app/drawing/plot/variant-mark.tsx'
 import type { SheetVariant } from '#app/drawing/sheet/sheet-facts.ts'
 import type { Box, VariantBox } from '#app/drawing/sheet/sheet-layout.ts'
@@ -17,7 +17,7 @@ import { Words } from '#app/drawing/text/words.tsx'
 const detail: PlanDetail = { names: false, spacings: 'level', overall: false, scaleBar: false, lineFigures: true }
 
 /** What each seat's disc says: its irradiance on the body plane and its ring; empty without a figure. */
-export function seatSigns(
+function seatSigns(
   warmth: readonly SeatWarmth[],
   format: (irradiance: number) => string,
 ): ReadonlyMap<string, SeatSign> {
