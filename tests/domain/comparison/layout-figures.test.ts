@@ -26,6 +26,9 @@ describe('spacings', () => {
   it('do not join heaters of two rows', () => {
     expect(spacingsOf({ heaters: [heater('a', 0, 0), heater('b', 2, 0.5)] })).toEqual({ x: [], y: [] })
   })
+  it('leave out heaters that hang at one place', () => {
+    expect(spacingsOf({ heaters: [heater('a', 0, 1), heater('b', 0.1, 1.1), heater('c', 2, 1)] }).x).toEqual([1.9])
+  })
   it('are none for one heater or none at all', () => {
     expect(spacingsOf({ heaters: [] })).toEqual({ x: [], y: [] })
     expect(spacingsOf({ heaters: [heater('a', 1, 1)] })).toEqual({ x: [], y: [] })
