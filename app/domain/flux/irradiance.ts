@@ -7,6 +7,7 @@ import {
   type ElementView,
 } from '#app/domain/flux/element-view.ts'
 import type { Element, Emitter } from '#app/domain/flux/emitter.ts'
+import { planeStarts } from '#app/domain/flux/plane-starts.ts'
 import { clearStretches, type Obstruction } from '#app/domain/flux/shading.ts'
 import { add, dot, lengthOf, normalise, subtract, type Vec3 } from '#app/domain/vector.ts'
 
@@ -168,14 +169,21 @@ function vectorInFront(sources: readonly Source[], normal: Vec3): Vec3 {
   )
 }
 
-/** How many of the strongest emitters the search for the largest irradiance starts from. */
-const starts = 24
+/** Irradiance of a one-sided plane at a point from all emitters, by its unit normal: for many planes at one point, W/m². */
+export function irradianceByNormalAt(
+  emitters: readonly Emitter[],
+  point: Vec3,
+  obstructions: readonly Obstruction[] = [],
+): (normal: Vec3) => number {
+  const sources = emitters.flatMap((emitter) => sourcesAt(emitter, point, obstructions))
+  return (normal) => dot(vectorInFront(sources, normal), normal)
+}
 
 /**
  * The largest irradiance over all directions of a one-sided plane at a point, W/m², and the direction it then looks.
  * Irradiance is a convex function of the normal whose gradient is the net flux vector in front of the plane; turning
- * the plane to that vector therefore never lowers it. Repeated from the whole vector and from each of the 24 strongest
- * emitters. Without radiation: 0, looking up.
+ * the plane to that vector therefore never lowers it. Repeated from the longest sums of net flux that a plane can see
+ * (`planeStarts`). Without radiation: 0, looking up.
  */
 export function largestIrradianceAt(
   emitters: readonly Emitter[],
@@ -185,11 +193,10 @@ export function largestIrradianceAt(
   const groups = emitters.map((emitter) => sourcesAt(emitter, point, obstructions))
   const sources = groups.flat()
   const vectors = groups.map((group) => group.reduce<Vec3>((sum, { vector }) => add(sum, vector), [0, 0, 0]))
-  const strongest = vectors.toSorted((a, b) => lengthOf(b) - lengthOf(a)).slice(0, starts)
   const whole = vectors.reduce<Vec3>(add, [0, 0, 0])
   if (!Number.isFinite(lengthOf(whole))) throw new RangeError('figures of a heater or of the point are not finite')
   let best: { irradiance: number; direction: Vec3 } = { irradiance: 0, direction: [0, 0, 1] }
-  for (const start of [whole, ...strongest]) {
+  for (const start of planeStarts(vectors)) {
     let direction = normalise(start)
     for (let turn = 0, before = 0; turn < 100; turn++) {
       const vector = vectorInFront(sources, direction)

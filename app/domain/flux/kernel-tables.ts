@@ -57,8 +57,8 @@ export function cosineTablesOf(beam: CosineBeam): CosineTables {
 }
 
 /** Entries of the finer tables for single points, where 1e-4 of the value is asked for. */
-export const fineEntriesPerUnit = 512
-export const fineAcrossEntries = 8192
+export const fineEntriesPerUnit = 256
+export const fineAcrossEntries = 4096
 
 const fineTables = new WeakMap<Beam, CosineTables>()
 

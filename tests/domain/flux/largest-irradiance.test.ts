@@ -28,6 +28,41 @@ describe('the largest irradiance over all directions', () => {
     )
   })
 
+  it('is that of the best of all sets of sources, however they stand: in rows, opposite, square to one another', () => {
+    // Of small lamps that face the point the answer is the longest sum of any set of their flux vectors.
+    const lamp = fc.record({
+      turn: fc.integer({ min: 0, max: 35 }).map((i) => (i * Math.PI) / 18),
+      rise: fc.constantFrom(0, 0, 0.3, 0.8),
+      power: fc.integer({ min: 100, max: 1000 }),
+    })
+    fc.assert(
+      fc.property(fc.array(lamp, { minLength: 2, maxLength: 7 }), (lamps) => {
+        const heaters = lamps.map(({ turn, rise, power }) => {
+          const towards: Vec3 = [Math.cos(turn) * Math.cos(rise), Math.sin(turn) * Math.cos(rise), Math.sin(rise)]
+          const at: Vec3 = [3 * towards[0], 3 * towards[1], 3 * towards[2]]
+          const w: Vec3 = [-towards[0], -towards[1], -towards[2]]
+          const u: Vec3 = [-Math.sin(turn), Math.cos(turn), 0]
+          const v: Vec3 = [w[1] * u[2] - w[2] * u[1], w[2] * u[0] - w[0] * u[2], w[0] * u[1] - w[1] * u[0]]
+          return { ...line(cosine(1, 1), { at, power, length: 1e-3 }), frame: { u, v, w } }
+        })
+        // Lambert on the axis: Φ / (π r²).
+        const fluxes = lamps.map(({ turn, rise, power }) => {
+          const e = power / (Math.PI * 9)
+          return [e * Math.cos(turn) * Math.cos(rise), e * Math.sin(turn) * Math.cos(rise), e * Math.sin(rise)]
+        })
+        let best = 0
+        for (let set = 1; set < 1 << fluxes.length; set++) {
+          const sum = [0, 1, 2].map((k) =>
+            fluxes.reduce((total, flux, i) => total + (set & (1 << i) ? flux[k]! : 0), 0),
+          )
+          best = Math.max(best, Math.hypot(...sum))
+        }
+        expect(largestIrradianceAt(heaters, [0, 0, 0]).irradiance / best).toBeCloseTo(1, 5)
+      }),
+      { numRuns: 300, seed: 21 },
+    )
+  })
+
   it('of two opposite heaters of which a plane sees one at a time is that of the stronger', () => {
     const facing = (x: number, turnDeg: number, power: number) =>
       line(cosine(2, 1), { at: [x, 0, 0], turnDeg, tiltDeg: 90, length: 0.01, power })
