@@ -240,10 +240,10 @@ function DifferenceNote({ first }: { first: ChosenVariant | undefined }) {
 }
 
 function MapState({ state, maps, onRetry }: { state: string; maps: readonly ComparedMaps[]; onRetry: () => void }) {
-  const done = maps.filter(({ overlapArea }) => overlapArea !== null).length
+  const done = maps.filter(({ figures }) => figures !== null).length
   return (
     <div role="status" className="text-xs text-ink-2 print:hidden">
-      {state === 'working' && done < maps.length && `Maps, ${done} of ${maps.length}`}
+      {state === 'working' && done < maps.length && `Variants, ${done} of ${maps.length}`}
       {state === 'broken' && (
         <span className="flex items-center gap-2 text-clay">
           <OutcomeMark outcome="fails" />

@@ -41,7 +41,7 @@ export interface ComparisonState {
 
 const nothing: ComparedMaps = { figures: null, flux: null, overlap: null, overlapArea: null, difference: null }
 
-/** Works out figures and maps of every variant in a worker each; `attempt` starts anew after a break. */
+/** Works out maps and figures of every variant in one worker, one after the other; `attempt` starts anew after a break. */
 export function useComparison(subject: ComparisonSubject, attempt: number): ComparisonState {
   const [known, setKnown] = useState<{ subject: ComparisonSubject; state: ComparisonState } | null>(null)
   useEffect(() => {
@@ -49,23 +49,24 @@ export function useComparison(subject: ComparisonSubject, attempt: number): Comp
     const variants = subject.layouts.map(() => nothing)
     const tell = (state: ComparisonState['state']) =>
       current && setKnown({ subject, state: { variants: [...variants], state } })
-    const workers = subject.layouts.map(() => startWorker())
-    const remotes = workers.map((worker) => wrap<FluxWorker>(worker))
+    const worker = startWorker()
+    const remote = wrap<FluxWorker>(worker)
     const broken = () => tell('broken')
-    for (const worker of workers) worker.addEventListener('error', broken)
+    worker.addEventListener('error', broken)
     const update = (i: number, more: Partial<ComparedMaps>) => {
       variants[i] = { ...(variants[i] ?? nothing), ...more }
       tell('working')
     }
     const work = async () => {
-      await Promise.all(remotes.map((remote, i) => answerVariant(remote, subject, i, (more) => update(i, more))))
-      await answerDifferences(remotes, variants, update)
+      for (const i of subject.layouts.keys()) await answerMaps(remote, subject, i, (more) => update(i, more))
+      for (const i of subject.layouts.keys()) await answerFigures(remote, subject, i, (more) => update(i, more))
+      await answerDifferences(remote, variants, update)
       tell('ready')
     }
     work().catch(broken)
     return () => {
       current = false
-      for (const worker of workers) worker.terminate()
+      worker.terminate()
     }
   }, [subject, attempt])
   const fits = known && known.subject.layouts === subject.layouts
@@ -76,35 +77,45 @@ function startWorker(): Worker {
   return new Worker(new URL('../../../workers/flux.worker.ts', import.meta.url), { type: 'module' })
 }
 
-async function answerVariant(
+type Update = (more: Partial<ComparedMaps>) => void
+
+/** Irradiance and overlap of one variant; the second is made of the first's kept parts. */
+async function answerMaps(
   remote: Remote<FluxWorker>,
   { site, brief, models, layouts, plane, threshold }: ComparisonSubject,
   i: number,
-  update: (more: Partial<ComparedMaps>) => void,
+  update: Update,
 ): Promise<void> {
   const layout = layouts[i]
-  if (!layout) return
-  const emitters = emittersOf(layout, models)
-  const shared = { emitters, floor: site.floor, z: plane, cell: cellOf(site, 'sharp') }
-  if (emitters.length > 0) {
-    const { levels, edges } = irradianceScale('dusk', brief.target)
-    update({ flux: await remote.answerMap({ ...shared, quantity: { kind: 'flux' }, levels, edges }) })
-  }
-  update({ figures: await remote.answerFigures({ site, brief, layout, models }) })
+  const emitters = layout ? emittersOf(layout, models) : []
   if (emitters.length === 0) return update({ overlapArea: 0 })
-  const { levels, edges } = overlapScale('dusk', threshold)
-  const overlap = await remote.answerMap({ ...shared, quantity: { kind: 'overlap', threshold }, levels, edges })
+  const shared = { emitters, floor: site.floor, z: plane, cell: cellOf(site, 'sharp') }
+  const { levels, edges } = irradianceScale('dusk', brief.target)
+  update({ flux: await remote.answerMap({ ...shared, quantity: { kind: 'flux' }, levels, edges }) })
+  const steps = overlapScale('dusk', threshold)
+  const quantity = { kind: 'overlap' as const, threshold }
+  const overlap = await remote.answerMap({ ...shared, quantity, levels: steps.levels, edges: steps.edges })
   update({ overlap, overlapArea: areaAtLeast(overlap.values, overlap.grid, 2) })
 }
 
+async function answerFigures(
+  remote: Remote<FluxWorker>,
+  { site, brief, models, layouts }: ComparisonSubject,
+  i: number,
+  update: Update,
+): Promise<void> {
+  const layout = layouts[i]
+  if (layout) update({ figures: await remote.answerFigures({ site, brief, layout, models }) })
+}
+
 async function answerDifferences(
-  remotes: readonly Remote<FluxWorker>[],
+  remote: Remote<FluxWorker>,
   variants: readonly ComparedMaps[],
   update: (i: number, more: Partial<ComparedMaps>) => void,
 ): Promise<void> {
   const first = variants[0]?.flux
   const { levels, edges } = differenceScale('dusk')
-  for (const [i, remote] of remotes.entries()) {
+  for (const i of variants.keys()) {
     const own = variants[i]?.flux
     if (i === 0 || !first || !own) continue
     const values = differenceOf(own.values, first.values)

@@ -1,4 +1,4 @@
-import { useState } from 'react'
+import { useState, type ReactNode } from 'react'
 import type { Site } from '#app/domain/site/site.ts'
 import { Button } from '#app/components/button.tsx'
 import { Tabs } from '#app/components/tabs.tsx'
@@ -91,7 +91,16 @@ export function SiteTables({ site, chosen, readOnly, onChange, onChoose, onAdd }
       label="Tables of the site"
       value={open}
       onChange={setOpen}
-      tabs={tabs.map((tab) => ({ ...tab, panel: <div className="overflow-x-auto pt-3">{tab.panel}</div> }))}
+      tabs={tabs.map((tab) => ({ ...tab, panel: <Scrolling>{tab.panel}</Scrolling> }))}
     />
+  )
+}
+
+/** Tables wider than the page are moved sideways, by the keyboard too. */
+function Scrolling({ children }: { children: ReactNode }) {
+  return (
+    <div className="overflow-x-auto pt-3" tabIndex={0} role="group" aria-label="Table">
+      {children}
+    </div>
   )
 }

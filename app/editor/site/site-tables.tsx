@@ -48,7 +48,12 @@ export function SeatsTable({ site, chosen, onChoose }: ChoosingProps) {
     { key: 'priority', heading: 'Counts as', sortBy: ({ priority }) => priority, cell: ({ priority }) => priority },
     { key: 'x', heading: 'Along', numeric: true, sortBy: ({ x }) => x, cell: ({ x }) => length(x) },
     { key: 'y', heading: 'Away', numeric: true, sortBy: ({ y }) => y, cell: ({ y }) => length(y) },
-    { key: 'facing', heading: 'Looks', numeric: true, cell: ({ facingDeg }) => `${String(facingDeg).replace('-', '−')}°` },
+    {
+      key: 'facing',
+      heading: 'Looks',
+      numeric: true,
+      cell: ({ facingDeg }) => `${String(facingDeg).replace('-', '−')}°`,
+    },
     { key: 'body', heading: 'Body', numeric: true, cell: ({ bodyHeight }) => length(bodyHeight) },
     { key: 'head', heading: 'Head', numeric: true, cell: ({ headHeight }) => length(headHeight) },
   ]

@@ -134,8 +134,8 @@ function SiteEditor({ viewer, job, kept, readOnly }: Loaded) {
           onSettle={(taken) => document.settle(mergedSite(site, theirs.body, taken))}
         />
       )}
-      <div className="grid items-start gap-x-6 gap-y-5 wide:grid-cols-[minmax(0,1fr)_36rem]">
-        <div className="wide:sticky wide:top-4">
+      <div className="grid items-start gap-x-6 gap-y-5 *:min-w-0 wide:grid-cols-[minmax(0,1fr)_36rem]">
+        <div className="min-w-0 wide:sticky wide:top-4">
           <SitePlan
             site={site}
             theme={dark ? 'dusk' : 'day'}

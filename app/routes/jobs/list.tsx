@@ -141,7 +141,7 @@ type Job = Loaded['jobs'][number]
 function JobRow({ job }: { job: Job }) {
   const seats = job.seats ? `${job.seats} ${job.seats === 1 ? 'seat' : 'seats'}` : 'no seats yet'
   return (
-    <li className="grid gap-x-6 gap-y-3 border-b border-rule py-3.5 desk:grid-cols-[14rem_minmax(0,1fr)_18rem_7rem]">
+    <li className="grid gap-x-6 gap-y-3 border-b border-rule py-3.5 tablet:grid-cols-[14rem_minmax(0,1fr)] desk:grid-cols-[14rem_minmax(0,1fr)_18rem_7rem]">
       <div className="min-w-0 self-center">
         <h2 className="text-base font-strong">
           <Link to={`/jobs/${job.id}`} className="hover:underline pointer-coarse:inline-block pointer-coarse:py-2">

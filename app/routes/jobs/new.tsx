@@ -3,13 +3,13 @@ import { useState, type ReactNode } from 'react'
 import { data, Form, redirect, useNavigation } from 'react-router'
 import { z } from 'zod'
 import type { BriefField } from '#app/domain/brief/brief-field.ts'
-import { assumedBrief, enquiryFields, isUnknown, readEnquiry, unknownName } from '#app/domain/brief/enquiry.ts'
+import { assumedBrief, enquiryFields, fieldAt, isUnknown, readEnquiry, unknownName } from '#app/domain/brief/enquiry.ts'
 import type { DisplayUnits } from '#app/domain/units.ts'
 import { Button, ButtonLink } from '#app/components/button.tsx'
 import { ErrorSummary } from '#app/components/error-summary.tsx'
 import { CheckField, SelectField, TextField } from '#app/components/field.tsx'
 import { PageFrame } from '#app/components/page-frame.tsx'
-import { isRefusal } from '#app/server/answers.server.ts'
+import { isRefusal, type Refusal } from '#app/server/answers.server.ts'
 import { createJob } from '#app/server/data/job-creation.server.ts'
 import { readFields } from '#app/server/form-fields.server.ts'
 import { requireMay } from '#app/server/session.server.ts'
@@ -40,9 +40,15 @@ export async function action({ request }: Route.ActionArgs) {
   const key = values['key'] ?? ''
   if (!/^[\w-]{8,100}$/.test(key)) return refused({ name: 'The form is not complete. Open it again.' })
   const job = await createJob(member, key, read.asked)
-  if (isRefusal(job)) return refused({ name: 'This form was already sent with other answers. Open it again.' })
+  if (isRefusal(job)) return refused(errorsOf(job))
   return redirect(`/jobs/${createdSchema.parse(job.body).id}/site`)
 }
+
+/** A refusal beside the field it is about; a key that was used already is no field's fault. */
+const errorsOf = ({ status, error, path }: Refusal): Record<string, string> =>
+  status === 409
+    ? { name: 'This form was already sent with other answers. Open it again.' }
+    : { [fieldAt(path)]: error }
 
 const labels: Record<string, string> = {
   name: 'Job',

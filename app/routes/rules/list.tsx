@@ -98,7 +98,7 @@ const columns: readonly Column<RuleRow>[] = [
 
 export default function RulesPage({ loaderData: { viewer } }: Route.ComponentProps) {
   const table = (caption: string, rows: readonly RuleRow[]) => (
-    <section className="mt-6 overflow-x-auto">
+    <section className="mt-6 overflow-x-auto" tabIndex={0} aria-label={caption}>
       <DataTable
         caption={caption}
         showCaption

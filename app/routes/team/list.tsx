@@ -66,11 +66,13 @@ export default function TeamPage({ loaderData: { viewer, you, people } }: Route.
             rowProps={() => ({ className: 'border-t border-rule h-9' })}
           />
         </section>
-        <section aria-labelledby="roles" className="overflow-x-auto">
+        <section aria-labelledby="roles" className="min-w-0">
           <h2 id="roles" className="mb-2 text-sm font-strong">
             What each role may do
           </h2>
-          <RolesTable />
+          <div className="overflow-x-auto" tabIndex={0} role="region" aria-label="Roles and what they may do">
+            <RolesTable />
+          </div>
         </section>
       </div>
     </PageFrame>
