@@ -51,7 +51,7 @@ export const fullTables: fc.Arbitrary<Beam> = fc
   .array(fc.array(real(0.05, 2), { minLength: 13, maxLength: 13 }), { minLength: 13, maxLength: 13 })
   .map((intensity) => ({ kind: 'table', across: everyFifteen, along: everyFifteen, intensity }))
 
-export const beams = fc.oneof(cosineBeams, tableBeams)
+const beams = fc.oneof(cosineBeams, tableBeams)
 
 /** Heaters of one to three elements anywhere in a 6 m room, turned and tilted at will. */
 export const emitters = (of: fc.Arbitrary<Beam> = beams): fc.Arbitrary<Emitter> =>
