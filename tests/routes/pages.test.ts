@@ -150,7 +150,9 @@ describe('a new enquiry', () => {
 
   it('refuses other answers under a used key, a body that is no form, and a role that opens no jobs', async () => {
     const before = await countJobs()
-    expect((await post('sales', '/jobs/new', { ...enquiry, name: 'Something else' })).status).toBe(400)
+    const used = await post('sales', '/jobs/new', { ...enquiry, name: 'Something else' })
+    expect(used.status).toBe(400)
+    expect(await used.text()).toContain('This form was already sent with other answers.')
     const request = requestOf('POST', '/jobs/new', {
       cookie: cookies.get('designer'),
       body: '{"name":1}',

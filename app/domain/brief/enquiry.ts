@@ -53,6 +53,23 @@ export const enquiryFields: readonly BriefField[] = [
   ...pick(guestFields, 'targetLow', 'targetHigh'),
 ]
 
+/** Fields that are called otherwise than the part of the enquiry they give. */
+const askedAs: Readonly<Record<string, string>> = {
+  'floor.length': 'along',
+  'floor.depth': 'deep',
+  'brief.supply.sparePerPhase': 'sparePerPhase',
+  'brief.target.low': 'targetLow',
+  'brief.target.high': 'targetHigh',
+}
+
+/** Name of the field that gives a part of the enquiry, by its dotted path; the job's name where none gives it. */
+export function fieldAt(path: string): string {
+  const renamed = Object.entries(askedAs).find(([part]) => path === part || path.startsWith(`${part}.`))
+  const own = path.replace(/^brief\./, '').split('.')[0] ?? ''
+  const asked = ['name', 'customer', 'place', ...enquiryFields.map(({ name }) => name)]
+  return renamed?.[1] ?? (asked.includes(own) ? own : 'name')
+}
+
 /** The enquiry that the answers make, or what is wrong with them, by field name. */
 export function readEnquiry(
   answers: EnquiryAnswers,

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { briefSchema } from '#app/domain/brief/brief.ts'
 import { assumptionOf, briefFields } from '#app/domain/brief/brief-fields.ts'
-import { assumedBrief, enquiryFields, readEnquiry, unknownName } from '#app/domain/brief/enquiry.ts'
+import { assumedBrief, enquiryFields, fieldAt, readEnquiry, unknownName } from '#app/domain/brief/enquiry.ts'
 import { jobRequestSchema } from '#app/domain/job/job-request.ts'
 import { demoSites } from '#drizzle/seed/demo-sites.ts'
 
@@ -86,6 +86,30 @@ describe('an enquiry', () => {
 
   it('names every wrong answer at once', () => {
     expect(Object.keys(errorsOf({ name: '', place: '', along: '' })).sort()).toEqual(['along', 'name', 'place'])
+  })
+})
+
+describe('what is refused where the job is kept', () => {
+  const good = asked({})
+  const { brief } = good
+  it.each([
+    ['name', { ...good, name: '' }],
+    ['customer', { ...good, customer: 'x'.repeat(121) }],
+    ['place', { ...good, brief: { ...brief, place: '' } }],
+    ['along', { ...good, floor: { length: 101, depth: 4 } }],
+    ['deep', { ...good, floor: { length: 6, depth: 61 } }],
+    ['airTemperature', { ...good, brief: { ...brief, airTemperature: 36 } }],
+    ['windDesign', { ...good, brief: { ...brief, windDesign: -1 } }],
+    ['clothing', { ...good, brief: { ...brief, clothing: 5 } }],
+    ['supply', { ...good, brief: { ...brief, supply: { ...brief.supply, phaseVoltage: 1 } } }],
+    ['sparePerPhase', { ...good, brief: { ...brief, supply: { ...brief.supply, sparePerPhase: [32, -1, 32] } } }],
+    ['targetLow', { ...good, brief: { ...brief, target: { ...brief.target, low: -1 } } }],
+    ['targetHigh', { ...good, brief: { ...brief, target: { ...brief.target, high: 0 } } }],
+    // Not asked for on the form.
+    ['name', { ...good, brief: { ...brief, windGust: 21 } }],
+  ])('is told beside the field %s', (field, request) => {
+    const { error } = jobRequestSchema.safeParse(request)
+    expect(error?.issues.map(({ path }) => fieldAt(path.join('.')))).toEqual([field])
   })
 })
 
