@@ -12,9 +12,8 @@ import { CheckField, SelectField, TextAreaField, TextField } from '#app/componen
 import { JobFrame } from '#app/components/page-frame.tsx'
 import { SaveState } from '#app/components/status.tsx'
 import { useDocument } from '#app/editor/use-document.ts'
-import { findBrief } from '#app/server/data/briefs.server.ts'
+import { findBriefWithUnits } from '#app/server/data/briefs.server.ts'
 import { requireJob } from '#app/server/data/jobs.server.ts'
-import { findSite } from '#app/server/data/sites.server.ts'
 import { viewerOf } from '#app/server/viewer.server.ts'
 import type { Route } from './+types/brief'
 
@@ -24,12 +23,12 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 
 export async function loader({ request, params }: Route.LoaderArgs) {
   const job = await requireJob(request, params.jobId, 'view')
-  const [{ revision, brief }, { site }] = await Promise.all([findBrief(job), findSite(job)])
+  const { revision, brief, units } = await findBriefWithUnits(job)
   return {
     viewer: viewerOf(job.member),
     job: { id: job.id, name: job.name, customer: job.customer },
     kept: { revision, body: brief },
-    units: site.displayUnits,
+    units,
     readOnly: !can(job.member.role, 'edit-brief'),
   }
 }
@@ -52,7 +51,7 @@ export default function BriefPage({ loaderData }: Route.ComponentProps) {
 type Loaded = Route.ComponentProps['loaderData']
 
 function BriefForm({ viewer, job, kept, units, readOnly }: Loaded) {
-  const [{ history, status, theirs }, document] = useDocument<Brief>(kept, {
+  const [{ history, status, theirs, base }, document] = useDocument<Brief>(kept, {
     url: `/api/jobs/${job.id}/brief`,
     name: 'brief',
     schema: briefSchema,
@@ -95,7 +94,7 @@ function BriefForm({ viewer, job, kept, units, readOnly }: Loaded) {
           <p className="mt-0.5 mb-4 text-ink-2">{job.customer || 'No customer named'}</p>
           {theirs && (
             <ConflictPanel
-              rows={differing(brief, theirs.body, units)}
+              rows={differing(brief, theirs.body, units, base)}
               onSettle={(taken) => document.settle(merged(brief, theirs.body, taken, units))}
             />
           )}
@@ -220,12 +219,14 @@ function Assumptions({ brief, units, readOnly, onConfirm }: AssumptionsProps) {
   )
 }
 
-const differing = (mine: Brief, theirs: Brief, units: DisplayUnits) =>
+const differing = (mine: Brief, theirs: Brief, units: DisplayUnits, base: Brief | null = null) =>
   briefFields.flatMap((field) => {
     const [left, right] = [field.show(mine, units), field.show(theirs, units)]
     if (left === right) return []
     const unit = field.unit(units)
-    return [{ key: field.name, label: field.label, mine: `${left} ${unit}`.trim(), theirs: `${right} ${unit}`.trim() }]
+    const told = (text: string) => `${text} ${unit}`.trim()
+    const theirsAlone = base !== null && field.show(base, units) === left
+    return [{ key: field.name, label: field.label, mine: told(left), theirs: told(right), theirsAlone }]
   })
 
 /** The server's brief with the answers of this page, but for the fields where the server's is taken. */

@@ -9,7 +9,6 @@ import type { DeviceCopy, KeptLayout, Keeping } from '#app/editor/keeping.ts'
 import { VariantEditor } from '#app/editor/variant-editor.tsx'
 import { requireJob } from '#app/server/data/jobs.server.ts'
 import { findLaidOut } from '#app/server/data/laid-out.server.ts'
-import { listVariants } from '#app/server/data/variants.server.ts'
 import { isId } from '#app/server/missing.server.ts'
 import { viewerOf } from '#app/server/viewer.server.ts'
 import type { Route } from './+types/variant'
@@ -21,17 +20,14 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 export async function loader({ request, params }: Route.LoaderArgs) {
   const job = await requireJob(request, params.jobId, 'view')
   const { variantId } = params
-  const [laidOut, variants] = await Promise.all([
-    isId(variantId) ? findLaidOut({ id: variantId, member: job.member }) : null,
-    listVariants(job),
-  ])
+  const laidOut = isId(variantId) ? await findLaidOut({ id: variantId, member: job.member }) : null
   if (laidOut?.variant.jobId !== job.id) throw data('No such variant', 404)
-  const { variant, site, brief, models } = laidOut
+  const { variant, site, brief, models, ofJob } = laidOut
   return {
     viewer: viewerOf(job.member),
     job: { id: job.id, name: job.name },
     variant: { id: variant.id, title: variant.title, revision: variant.revision, heaters: variant.heaters },
-    variants: variants.map(({ id, number, title }) => ({ id, number, title, href: `/jobs/${job.id}/variants/${id}` })),
+    variants: ofJob.map(({ id, number, title }) => ({ id, number, title, href: `/jobs/${job.id}/variants/${id}` })),
     site,
     brief,
     catalogue: [...models.values()],

@@ -1,12 +1,14 @@
-import { and, eq } from 'drizzle-orm'
+import { and, eq, sql } from 'drizzle-orm'
 import { briefSchema, type Brief } from '#app/domain/brief/brief.ts'
+import { siteSchema } from '#app/domain/site/site.ts'
+import type { DisplayUnits } from '#app/domain/units.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
 import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import { saveRevision, type Revisioned, type Save } from '#app/server/saving.server.ts'
 import type { Member } from '#app/server/session.server.ts'
-import { briefRevisions, briefs, jobs } from '#drizzle/schema.ts'
+import { briefRevisions, briefs, jobs, sites } from '#drizzle/schema.ts'
 
 /** A job's brief and the revision it has. */
 export interface KeptBrief {
@@ -21,6 +23,20 @@ async function readBrief(tx: Transaction, jobId: string, lock: boolean): Promise
     .where(and(own(briefs), eq(briefs.jobId, jobId)))
   const [row] = lock ? await asked.for('update') : await asked
   return row ? { revision: row.revision, brief: briefSchema.parse(row.body) } : null
+}
+
+/** The brief of a job and the units its site is written in. Throws when a job has none: every job starts with both. */
+export async function findBriefWithUnits(job: OpenJob): Promise<KeptBrief & { readonly units: DisplayUnits }> {
+  const [row] = await asOrganisation(job.member.organisationId, (tx) =>
+    tx
+      .select({ revision: briefs.revision, body: briefs.body, units: sql`${sites.body} ->> 'displayUnits'` })
+      .from(briefs)
+      .innerJoin(sites, and(own(sites), eq(sites.jobId, briefs.jobId)))
+      .where(and(own(briefs), eq(briefs.jobId, job.id))),
+  )
+  if (!row) throw new Error(`Job ${job.id} has no brief or no site.`)
+  const units = siteSchema.shape.displayUnits.parse(row.units)
+  return { revision: row.revision, brief: briefSchema.parse(row.body), units }
 }
 
 /** The brief of a job as it is now. Throws when a job has none: every job starts with one. */

@@ -1,4 +1,4 @@
-import { and, asc, eq, isNull } from 'drizzle-orm'
+import { and, eq } from 'drizzle-orm'
 import { z } from 'zod'
 import { briefSchema, type Brief } from '#app/domain/brief/brief.ts'
 import { chosenVariants } from '#app/domain/comparison/chosen-variants.ts'
@@ -7,8 +7,9 @@ import { mountedHeaterSchema, type MountedHeater } from '#app/domain/layout/layo
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
 import { modelsByCode } from '#app/server/data/heaters.server.ts'
 import type { OpenJob } from '#app/server/data/jobs.server.ts'
+import { variantList } from '#app/server/data/variants.server.ts'
 import { asOrganisation, own } from '#app/server/organisation.server.ts'
-import { briefs, sites, variants } from '#drizzle/schema.ts'
+import { briefs, sites } from '#drizzle/schema.ts'
 
 /** A variant as it is compared. */
 export interface ComparedLayout {
@@ -32,27 +33,24 @@ export interface Compared {
 }
 
 const heatersSchema = z.array(mountedHeaterSchema)
+const listSchema = z.array(
+  z.object({ id: z.string(), number: z.number(), title: z.string(), revision: z.number(), heaters: z.unknown() }),
+)
 
 /** The variants that an address asks to compare, `1,3`, with site, brief and catalogue. */
 export function findCompared(job: OpenJob, asked: string | null): Promise<Compared> {
   return asOrganisation(job.member.organisationId, async (tx) => {
     const [place] = await tx
-      .select({ site: sites.body, brief: briefs.body })
+      .select({
+        site: sites.body,
+        brief: briefs.body,
+        variants: variantList(tx, sites.jobId, ['id', 'number', 'title', 'revision', 'heaters']),
+      })
       .from(sites)
       .innerJoin(briefs, and(own(briefs), eq(briefs.jobId, sites.jobId)))
       .where(and(own(sites), eq(sites.jobId, job.id)))
     if (!place) throw new Error(`Job ${job.id} has no site or no brief.`)
-    const all = await tx
-      .select({
-        id: variants.id,
-        number: variants.number,
-        title: variants.title,
-        revision: variants.revision,
-        heaters: variants.heaters,
-      })
-      .from(variants)
-      .where(and(own(variants), eq(variants.jobId, job.id), isNull(variants.deletedAt)))
-      .orderBy(asc(variants.number))
+    const all = listSchema.parse(place.variants)
     const numbers = chosenVariants(
       asked,
       all.map(({ number }) => number),

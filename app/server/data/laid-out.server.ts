@@ -1,12 +1,15 @@
 import { and, eq } from 'drizzle-orm'
+import { z } from 'zod'
 import { briefSchema, type Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
 import { modelsByCode } from '#app/server/data/heaters.server.ts'
-import { present, variantColumns, variantOf, type Variant } from '#app/server/data/variants.server.ts'
+import { present, variantColumns, variantList, variantOf, type Variant } from '#app/server/data/variants.server.ts'
 import { asOrganisation, own } from '#app/server/organisation.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { briefs, sites, variants } from '#drizzle/schema.ts'
+
+const neighbourSchema = z.object({ id: z.string(), number: z.number(), title: z.string() })
 
 /** A variant with everything its figures rest on, all of one moment. */
 export interface LaidOut {
@@ -16,6 +19,8 @@ export interface LaidOut {
   readonly brief: Brief
   readonly briefRevision: number
   readonly models: ReadonlyMap<string, HeaterModel>
+  /** Every variant of the job by number, this one too. */
+  readonly ofJob: readonly z.infer<typeof neighbourSchema>[]
 }
 
 /** A variant of the organisation with its site, brief and catalogue; null when it was deleted. */
@@ -26,6 +31,7 @@ export function findLaidOut(of: { readonly id: string; readonly member: Member }
         variant: variantColumns,
         site: { revision: sites.revision, body: sites.body },
         brief: { revision: briefs.revision, body: briefs.body },
+        ofJob: variantList(tx, variants.jobId, ['id', 'number', 'title']),
       })
       .from(variants)
       .innerJoin(sites, and(own(sites), eq(sites.jobId, variants.jobId)))
@@ -39,6 +45,7 @@ export function findLaidOut(of: { readonly id: string; readonly member: Member }
       brief: briefSchema.parse(row.brief.body),
       briefRevision: row.brief.revision,
       models: await modelsByCode(tx),
+      ofJob: neighbourSchema.array().parse(row.ofJob),
     }
   })
 }

@@ -1,10 +1,11 @@
-import { and, asc, eq, isNull } from 'drizzle-orm'
+import { and, asc, eq, isNull, sql, type AnyColumn } from 'drizzle-orm'
+import { alias } from 'drizzle-orm/pg-core'
 import { z } from 'zod'
 import type { Action } from '#app/domain/access/roles.ts'
 import { mountedHeaterSchema, type MountedHeater } from '#app/domain/layout/layout.ts'
 import type { OpenJob } from '#app/server/data/jobs.server.ts'
 import { isId, missing } from '#app/server/missing.server.ts'
-import { asOrganisation, own } from '#app/server/organisation.server.ts'
+import { asOrganisation, own, type Transaction } from '#app/server/organisation.server.ts'
 import { requireMay, type Member } from '#app/server/session.server.ts'
 import { variants } from '#drizzle/schema.ts'
 
@@ -53,6 +54,28 @@ export const variantOf = (
   updatedAt: row.updatedAt.toISOString(),
   heaters: heatersSchema.parse(row.heaters),
 })
+
+const listed = alias(variants, 'listed')
+
+/**
+ * A column with every variant of a job by number as a JSON list, for a statement that asks for other things of the job
+ * too: `jobId` is the job's column there.
+ */
+export function variantList(
+  tx: Transaction,
+  jobId: AnyColumn,
+  keys: readonly ('id' | 'number' | 'title' | 'revision' | 'heaters')[],
+) {
+  const entries = sql.join(
+    keys.map((key) => sql`${key}::text, ${listed[key]}`),
+    sql`, `,
+  )
+  const list = tx
+    .select({ list: sql`json_agg(json_build_object(${entries}) order by ${listed.number})` })
+    .from(listed)
+    .where(and(own(listed), eq(listed.jobId, jobId), isNull(listed.deletedAt)))
+  return sql`coalesce(${list}, '[]')`
+}
 
 /** The variants of a job by number, without their heaters. */
 export function listVariants(job: OpenJob): Promise<VariantSummary[]> {
