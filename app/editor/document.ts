@@ -33,6 +33,8 @@ export interface DocumentState<T> {
   readonly status: DocumentStatus
   /** The server's copy that differs from the one the work stands on. */
   readonly theirs: Kept<T> | null
+  /** What both copies were made from; null when it is not known any more. */
+  readonly base: T | null
 }
 
 /** An open document: every change is a step that can be undone and is saved by itself. */
@@ -63,7 +65,12 @@ export function openDocument<T>(
   delays: Delays = { rest: 600, again: 4000 },
 ): OpenDocument<T> {
   let kept = initial
-  let state: DocumentState<T> = { history: historyOf(initial.body), status: { kind: 'saved' }, theirs: null }
+  let state: DocumentState<T> = {
+    history: historyOf(initial.body),
+    status: { kind: 'saved' },
+    theirs: null,
+    base: null,
+  }
   let pending: { readonly id: string; readonly body: T; readonly revision: number } | null = null
   let sending = false
   let changes = 0
@@ -102,7 +109,8 @@ export function openDocument<T>(
       return later(delays.again)
     }
     pending = null
-    if (answer.kind === 'conflict') return become({ status: { kind: 'conflict' }, theirs: answer.current })
+    if (answer.kind === 'conflict')
+      return become({ status: { kind: 'conflict' }, theirs: answer.current, base: kept.body })
     if (answer.kind === 'refused') return become({ status: { kind: 'not saved', reason: answer.reason } })
     kept = { revision: answer.revision, body: asked.body }
     if (state.history.present !== kept.body) {
@@ -132,7 +140,7 @@ export function openDocument<T>(
     settle(body) {
       if (!state.theirs) return
       kept = state.theirs
-      state = { ...state, theirs: null, status: { kind: 'unsaved' } }
+      state = { ...state, theirs: null, base: null, status: { kind: 'unsaved' } }
       step(record(record(state.history, kept.body), body))
       if (body === kept.body) {
         keeping.keepOnDevice(null)

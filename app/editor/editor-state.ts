@@ -25,6 +25,8 @@ export type EditorAction =
   | { type: 'keep shown' }
   | { type: 'drop shown' }
   | { type: 'edit'; layout: Layout; selected?: readonly string[]; said?: string }
+  /** Worked out from the layout as it then is. */
+  | { type: 'change'; change: (layout: Layout) => Layout; said: string }
   | { type: 'undo' | 'redo' | 'copy' | 'paste' | 'duplicate' | 'remove' | 'select all' | 'let go' }
   | { type: 'select'; ids: readonly string[] }
   | { type: 'seat'; id: string | null }
@@ -61,6 +63,8 @@ export function editorReducer(state: EditorState, action: EditorAction): EditorS
       return state.draft ? edited({ ...state, draft: null }, state.draft.layout, state.selected, '') : state
     case 'edit':
       return edited(state, action.layout, action.selected ?? state.selected, action.said ?? '')
+    case 'change':
+      return edited(state, action.change(layout), state.selected, action.said)
     case 'undo':
       return travelled(state, undo(state.history), 'Undone')
     case 'redo':

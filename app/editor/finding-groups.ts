@@ -10,9 +10,11 @@ export interface FindingGroup {
 /** Least margin less its tolerance first; without a margin as they come. */
 const tightness = ({ margin, tolerance }: Finding): number => (margin === null ? Infinity : margin - (tolerance ?? 0))
 
-/** How tight a check that passes is: its margin against its limit; without figures last. */
-const room = ({ margin, limit }: Finding): number =>
-  margin === null ? Infinity : margin / Math.max(1e-9, Math.abs(limit ?? 1))
+/** How tight a check that passes is: what it measures first, by its margin against its limit; without figures last. */
+const room = ({ margin, limit, unit }: Finding): number => {
+  if (margin === null) return Infinity
+  return (unit === 'm' || unit === 'W/m²' ? 0 : 1e6) + margin / Math.max(1e-9, Math.abs(limit ?? 1))
+}
 
 /** Checks that pass, the tightest first. */
 export const tightestPasses = (groups: readonly FindingGroup[]): FindingGroup[] =>

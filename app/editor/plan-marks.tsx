@@ -3,11 +3,11 @@ import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
-import type { MapAnswer } from '#app/drawing/heat/map-picture.ts'
+import type { HeatPicture } from '#app/drawing/heat/contours.ts'
 import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
 import type { Pen } from '#app/drawing/pen.ts'
 import { PlanDimensions } from '#app/drawing/plan/dimensions.tsx'
-import { PlanGround, PlanHeat, PlanHeatFigures, PlanNames, PlanStructure } from '#app/drawing/plan/plan-drawing.tsx'
+import { PlanGround, PlanHeat, PlanHeatFigures, PlanNames, PlanStructure } from '#app/drawing/plan/plan-parts.tsx'
 import type { PlanView } from '#app/drawing/plan/plan-view.ts'
 import { ScaleBar } from '#app/drawing/plan/scale-bar.tsx'
 import { seatsCarryFigures } from '#app/drawing/plan/seat.tsx'
@@ -16,46 +16,58 @@ import { fluxFigure } from '#app/editor/figures.ts'
 import { PlanHeater, PlanSeat } from '#app/editor/plan-objects.tsx'
 import type { FluxUnit } from '#app/editor/view-choice.ts'
 
-interface PlanMarksProps {
+interface PlanUnderProps {
   readonly site: Site
-  /** As shown: the gesture's while one is under way. */
+  /** What words on the map keep clear of. */
   readonly layout: Layout
-  /** As kept: what words on the map keep clear of, so that they stand still during a gesture. */
-  readonly kept: Layout
   readonly models: ReadonlyMap<string, HeaterModel>
-  readonly warmth: readonly SeatWarmth[]
   readonly view: PlanView
   readonly pen: Pen
   readonly scale: QuantityScale
-  readonly answer: MapAnswer | null
+  readonly picture: HeatPicture | null
+  /** Figures on the isolines; left out while something moves. */
+  readonly figures: boolean
+  /** Names, left out where the plan is small. */
+  readonly words: boolean
+  readonly label: string
+}
+
+interface PlanMarksProps extends Pick<PlanUnderProps, 'site' | 'layout' | 'models' | 'view' | 'pen' | 'words'> {
+  /** As kept: what names keep clear of, so that they stand still during a gesture. */
+  readonly kept: Layout
+  readonly warmth: readonly SeatWarmth[]
   readonly selected: ReadonlySet<string>
   readonly seatId: string | null
   readonly cuts: readonly SectionCut[]
   readonly fluxUnit: FluxUnit
   readonly readOnly: boolean
-  /** Left out where the plan is small. */
-  readonly words: boolean
-  readonly label: string
 }
 
 /** Name of the plan's patterns and clip in this page. */
 const name = 'plan'
 
-/** Everything drawn on the plan, in the order of the drawing; heaters and seats are Tab stops. */
-export function PlanMarks(props: PlanMarksProps) {
-  const { site, layout, kept, models, warmth, view, pen, scale, answer, selected, cuts, words } = props
+/** What lies under the hand: ground, map and structure; a picture of its own, so that it rests while heaters move. */
+export const PlanUnder = memo(function PlanUnder(props: PlanUnderProps) {
+  const { site, layout, models, view, pen, scale, picture, words } = props
   const withFigure = seatsCarryFigures(site.seats, view, pen)
-  const picture = answer?.picture ?? null
+  return (
+    <g role="img" aria-label={props.label}>
+      <PlanGround {...{ name, site, view, pen }} named={words} />
+      {picture && <PlanHeat {...{ name, site, view, pen, picture }} quantity={scale} />}
+      {picture && props.figures && (
+        <PlanHeatFigures {...{ site, layout, models, view, pen, picture, withFigure }} quantity={scale} />
+      )}
+      <PlanStructure {...{ name, site, view, pen }} named={words} />
+    </g>
+  )
+})
+
+/** What the hand works on: seats with their figures, heaters, dimensions and names; heaters and seats are Tab stops. */
+export function PlanMarks(props: PlanMarksProps) {
+  const { site, layout, kept, models, warmth, view, pen, selected, cuts, words } = props
+  const withFigure = seatsCarryFigures(site.seats, view, pen)
   return (
     <>
-      <g role="img" aria-label={props.label}>
-        <PlanGround {...{ name, site, view, pen }} named={words} />
-        {picture && <PlanHeat {...{ name, site, view, pen, picture }} quantity={scale} />}
-        {picture && (
-          <PlanHeatFigures {...{ site, models, view, pen, picture, withFigure }} layout={kept} quantity={scale} />
-        )}
-        <PlanStructure {...{ name, site, view, pen }} named={words} />
-      </g>
       {site.seats.map((seat, i) => (
         <PlanSeat
           key={seat.id}

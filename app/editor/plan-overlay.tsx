@@ -25,7 +25,12 @@ export function PlanHandles({ heater, model, view, plane, touch }: HandlesProps)
   const hit = touch ? 22 : 16
   return (
     <g aria-hidden="true" stroke="var(--color-dusk-select)" strokeWidth={1.2} fill="none">
-      <path d={`M${x} ${y}L${turn[0]} ${turn[1]}M${x} ${y}L${aim[0]} ${aim[1]}`} strokeDasharray="2 3" opacity={0.7} />
+      <path
+        d={`M${x} ${y}L${turn[0]} ${turn[1]}M${x} ${y}L${aim[0]} ${aim[1]}`}
+        strokeDasharray="2 3"
+        opacity={0.7}
+        pointerEvents="none"
+      />
       <Handle at={turn} hit={hit} name="turn" />
       <Handle at={aim} hit={hit} name="tilt" />
     </g>
@@ -54,7 +59,16 @@ interface HoldLinesProps {
 /** The lines that hold what is being moved. */
 export function HoldLines({ lines, view }: HoldLinesProps) {
   const d = lines.map(({ from, to }) => `M${toScreen(view, from).join(' ')}L${toScreen(view, to).join(' ')}`).join('')
-  return d ? <path d={d} stroke="var(--color-dusk-select)" strokeWidth={1} strokeDasharray="5 3" fill="none" /> : null
+  return d ? (
+    <path
+      d={d}
+      stroke="var(--color-dusk-select)"
+      strokeWidth={1}
+      strokeDasharray="5 3"
+      fill="none"
+      pointerEvents="none"
+    />
+  ) : null
 }
 
 /** The rectangle that chooses what lies inside. */

@@ -1,13 +1,4 @@
-import {
-  useEffect,
-  useMemo,
-  useRef,
-  useState,
-  type Dispatch,
-  type FocusEvent,
-  type PointerEvent as ReactPointerEvent,
-  type RefObject,
-} from 'react'
+import { useEffect, useMemo, useRef, useState, type Dispatch, type FocusEvent, type RefObject } from 'react'
 import { Button, IconButton } from '#app/components/button.tsx'
 import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
@@ -20,7 +11,7 @@ import { toScreen, workingMargins, type PlanMargins } from '#app/drawing/plan/pl
 import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
 import { shownLayout, type EditorAction, type EditorState } from '#app/editor/editor-state.ts'
 import { emittersOf } from '#app/editor/map-questions.ts'
-import { PlanMarks, PlanScaleBar } from '#app/editor/plan-marks.tsx'
+import { PlanMarks, PlanScaleBar, PlanUnder } from '#app/editor/plan-marks.tsx'
 import { HoldLines, Marquee, PlanHandles } from '#app/editor/plan-overlay.tsx'
 import type { PointedStore } from '#app/editor/pointed.ts'
 import { ReadOut } from '#app/editor/read-out.tsx'
@@ -53,6 +44,8 @@ interface PlanSurfaceProps {
 }
 
 const pen = screenPen('dusk')
+/** A pointer anywhere in the frame is on the plan, wherever the drawing is shifted to. */
+const far = { x: -20_000, y: -20_000, width: 40_000, height: 40_000 }
 const narrowMargins: PlanMargins = { top: 26, right: 28, bottom: 46, left: 28 }
 
 /** The plan to work on: pointer, wheel, fingers and keys; the map below, handles and the tag above. */
@@ -60,7 +53,7 @@ export function PlanSurface(props: PlanSurfaceProps) {
   const { state, dispatch, site, models, choice, scale, flux, readOnly, hold, touch, pointed } = props
   const box = useRef<HTMLDivElement>(null)
   const svg = useRef<SVGSVGElement>(null)
-  const moving = useRef<SVGGElement>(null)
+  const moving = useRef<HTMLDivElement>(null)
   const [marquee, setMarquee] = useState<readonly [Vec2, Vec2] | null>(null)
   const size = useSize(box, { width: 1000, height: 528 })
   const viewing = usePlanView(site, size, props.words ? workingMargins : narrowMargins, moving)
@@ -71,7 +64,7 @@ export function PlanSurface(props: PlanSurfaceProps) {
   const emitters = useMemo(() => emittersOf(layout, models), [layout, models])
   const selected = useMemo(() => new Set(state.selected), [state.selected])
   const say = (metres: number) => formatLength(metres, site.displayUnits)
-  const gestures = usePlanGestures(svg, {
+  const gestures = usePlanGestures(box, svg, {
     start: { site, models, layout: kept, plane, say },
     selected: state.selected,
     readOnly,
@@ -110,55 +103,64 @@ export function PlanSurface(props: PlanSurfaceProps) {
     const at: Vec2 = [place.x, place.y]
     pointed.set({ at, screen: toScreen(viewing.wanted(), at), seatId: seat?.id ?? null, by: 'focus' })
   }
-  const onPointerDown = (event: ReactPointerEvent<SVGSVGElement>) => {
-    gestures.onPointerDown(event)
-    const object = event.target instanceof Element ? event.target.closest<SVGGElement>('[data-object]') : null
-    const focusable = object ?? svg.current
-    focusable?.focus({ preventScroll: true })
-  }
+  const sheet = { width: view.width, height: view.height, viewBox: `0 0 ${view.width} ${view.height}` }
   return (
-    <div ref={box} className="relative min-h-0 flex-1 overflow-hidden bg-dusk-ground select-none">
-      <svg
-        ref={svg}
-        width={view.width}
-        height={view.height}
-        viewBox={`0 0 ${view.width} ${view.height}`}
-        tabIndex={-1}
-        role="group"
-        aria-label={`Plan of ${site.name}`}
-        className={`absolute inset-0 touch-none outline-none ${state.placing ? 'cursor-copy' : ''}`}
-        onPointerDown={onPointerDown}
-        onPointerMove={gestures.onPointerMove}
-        onPointerUp={gestures.onPointerUp}
-        onPointerCancel={gestures.onPointerCancel}
-        onPointerLeave={() => pointed.set(null)}
-        onKeyDown={keys.onKeyDown}
-        onKeyUp={keys.onKeyUp}
-        onFocus={onFocus}
-        onBlur={() => {
-          keys.onBlur()
-          pointed.set(null)
-        }}
-      >
-        <g ref={moving}>
+    <div
+      ref={box}
+      className="relative min-h-64 flex-1 overflow-hidden bg-dusk-ground select-none max-tablet:h-[62vw] max-tablet:flex-none"
+    >
+      <div ref={moving} className="absolute inset-0 origin-top-left">
+        <svg {...sheet} className="absolute inset-0 overflow-visible [will-change:transform]">
+          <PlanUnder
+            {...{ site, models, view, pen, scale }}
+            layout={kept}
+            picture={flux.answer?.picture ?? null}
+            figures={state.draft === null}
+            words={props.words}
+            label={`${scale.name} at ${say(plane)} above the floor`}
+          />
+        </svg>
+        <svg
+          ref={svg}
+          {...sheet}
+          tabIndex={-1}
+          role="group"
+          aria-label={`Plan of ${site.name}`}
+          className={`absolute inset-0 touch-none overflow-visible [will-change:transform] outline-none ${state.placing ? 'cursor-copy' : ''}`}
+          onPointerDown={gestures.onPointerDown}
+          onPointerMove={gestures.onPointerMove}
+          onPointerUp={gestures.onPointerUp}
+          onPointerCancel={gestures.onPointerCancel}
+          onPointerLeave={() => pointed.set(null)}
+          onKeyDown={keys.onKeyDown}
+          onKeyUp={keys.onKeyUp}
+          onFocus={onFocus}
+          onBlur={() => {
+            keys.onBlur()
+            pointed.set(null)
+          }}
+        >
+          <rect {...far} fill="transparent" />
           <PlanMarks
-            {...{ site, layout, kept, models, view, pen, scale, selected, readOnly }}
+            {...{ site, layout, kept, models, view, pen, selected, readOnly }}
             warmth={props.warmth}
-            answer={flux.answer}
             seatId={state.seatId}
             cuts={props.cuts}
             fluxUnit={choice.fluxUnit}
             words={props.words}
-            label={`${scale.name} at ${say(plane)} above the floor`}
           />
           {state.draft && <HoldLines lines={state.draft.lines} view={view} />}
           {marquee && <Marquee corners={marquee} view={view} />}
           {lead && !readOnly && state.selected.length === 1 && (
             <PlanHandles heater={lead} model={models.get(lead.model)} view={view} plane={plane} touch={touch} />
           )}
-        </g>
-        {props.words && <PlanScaleBar view={view} pen={pen} units={site.displayUnits} />}
-      </svg>
+        </svg>
+      </div>
+      {props.words && (
+        <svg {...sheet} className="pointer-events-none absolute inset-0">
+          <PlanScaleBar view={view} pen={pen} units={site.displayUnits} />
+        </svg>
+      )}
       <ReadOut
         store={pointed}
         {...{ site, emitters, plane, scale }}
@@ -181,7 +183,7 @@ function SizeButtons({ viewing }: { viewing: PlanViewing }) {
     <div
       role="group"
       aria-label="Size of the plan"
-      className="absolute bottom-2 left-2 flex items-center rounded-md border border-rule bg-paper-raised/90 print:hidden"
+      className="absolute top-2 right-2 flex items-center rounded-md border border-rule bg-paper-raised/90 print:hidden"
     >
       <IconButton icon="fit" label="Whole plan" onClick={viewing.showAll} />
       <IconButton icon="minus" label="Smaller" onClick={() => viewing.enlargeAt(0.8)} />

@@ -1,6 +1,7 @@
-import { useMemo, useState, type ReactNode } from 'react'
+import { memo, useCallback, useMemo, useState, type ReactNode } from 'react'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { HeaterChange } from '#app/domain/layout/edits.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { obstructionsOf } from '#app/domain/flux/shading.ts'
@@ -40,9 +41,19 @@ export interface SideSubject {
   readonly onSeat: (seatId: string | null) => void
 }
 
-/** Beside the plan on a desk, a sheet with tabs below it on a tablet, one list on a phone. */
-export function SidePanels({ subject, room }: { subject: SideSubject; room: Room }) {
-  if (room === 'tablet') return <TouchSheet subject={subject} />
+interface SidePanelsProps {
+  readonly subject: SideSubject
+  readonly room: Room
+  /** What the map shows, for the sheet of a tablet. */
+  readonly tools: ReactNode
+}
+
+/**
+ * Beside the plan on a desk, a sheet with tabs below it on a tablet, one list on a phone. Drawn after the plan: a frame
+ * of a drag does not wait for it.
+ */
+export const SidePanels = memo(function SidePanels({ subject, room, tools }: SidePanelsProps) {
+  if (room === 'tablet') return <TouchSheet subject={subject} tools={tools} />
   if (room === 'phone')
     return (
       <div className="bg-paper-raised">
@@ -65,7 +76,7 @@ export function SidePanels({ subject, room }: { subject: SideSubject; room: Room
       <Heaters subject={subject} />
     </aside>
   )
-}
+})
 
 interface PartProps {
   readonly subject: SideSubject
@@ -204,29 +215,30 @@ function Seats({ subject }: PartProps) {
 
 function Heaters({ subject }: PartProps) {
   const { editor, layout, site, readOnly } = subject
+  const { dispatch, set, remove } = editor
+  const onSelect = useCallback((ids: readonly string[]) => dispatch({ type: 'select', ids }), [dispatch])
+  const onSet = useCallback((id: string, change: HeaterChange) => set([id], change), [set])
+  const onRemove = useCallback((id: string) => remove([id]), [remove])
   return (
     <HeatersTable
       heaters={layout.heaters}
       models={editor.models}
       site={site}
       selected={editor.state.selected}
-      readOnly={readOnly}
-      onSelect={(ids) => editor.dispatch({ type: 'select', ids })}
-      onSet={(id, change) => editor.set([id], change)}
-      onRemove={(id) => editor.remove([id])}
+      {...{ readOnly, onSelect, onSet, onRemove }}
     />
   )
 }
 
-type SheetTab = 'heater' | 'findings' | 'seats' | 'heaters' | 'add'
+type SheetTab = 'heater' | 'findings' | 'seats' | 'heaters' | 'map' | 'add'
 
 /** The sheet below the plan on a tablet: words as tabs, steppers for fingers. */
-function TouchSheet({ subject }: PartProps) {
+function TouchSheet({ subject, tools }: PartProps & { tools: ReactNode }) {
   const { editor, figures, layout, site, readOnly } = subject
   const [tab, setTab] = useState<SheetTab>('heater')
   const open = figures.findings.filter(({ outcome }) => outcome !== 'pass').length
   const lead = layout.heaters.find(({ id }) => id === editor.state.selected[0])
-  const pad = (panel: ReactNode) => <div className="h-72 overflow-y-auto">{panel}</div>
+  const pad = (panel: ReactNode) => <div className="h-47 overflow-y-auto">{panel}</div>
   const tabs: { value: SheetTab; label: ReactNode; panel: ReactNode }[] = [
     {
       value: 'heater',
@@ -259,6 +271,7 @@ function TouchSheet({ subject }: PartProps) {
     },
     { value: 'seats', label: 'Seats', panel: pad(<Seats subject={subject} />) },
     { value: 'heaters', label: 'List', panel: pad(<Heaters subject={subject} />) },
+    { value: 'map', label: 'Map', panel: pad(tools) },
     ...(readOnly ? [] : [{ value: 'add' as const, label: 'Add', panel: pad(<Placing subject={subject} />) }]),
   ]
   const shown: SheetTab = subject.placing ? 'add' : tab

@@ -1,4 +1,4 @@
-import { useMemo, useReducer, type Dispatch } from 'react'
+import { useCallback, useMemo, useReducer, type Dispatch } from 'react'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { placeHeater, removeHeaters, setHeaters, type HeaterChange } from '#app/domain/layout/edits.ts'
@@ -48,6 +48,22 @@ export function useEditor({ site, brief, catalogue, initial }: EditorSubject): E
   const edit = (next: Layout, selected: readonly string[], said: string) =>
     dispatch({ type: 'edit', layout: next, selected, said })
 
+  const set = useCallback(
+    (ids: readonly string[], values: HeaterChange) => {
+      const moves = values.x !== undefined || values.y !== undefined || values.mount !== undefined
+      const keeps = values.memberId !== undefined || !moves
+      const change = (before: Layout) => {
+        const next = setHeaters(before, ids, values)
+        return keeps ? next : findSupports(next, ids, site, models)
+      }
+      dispatch({ type: 'change', change, said: `${named(ids)} changed` })
+    },
+    [site, models],
+  )
+  const remove = useCallback((ids: readonly string[]) => {
+    dispatch({ type: 'change', change: (before) => removeHeaters(before, ids), said: `${named(ids)} removed` })
+  }, [])
+
   const place = (choice: ModelChoice, at: Vec2, free: boolean) => {
     const first = firstPlace(choice, site, layout, at)
     if (!first) return dispatch({ type: 'say', said: choice.whyNot[0] ?? 'It cannot be placed here.' })
@@ -66,19 +82,12 @@ export function useEditor({ site, brief, catalogue, initial }: EditorSubject): E
     dispatch,
     models,
     edit,
-    set(ids, change) {
-      const next = setHeaters(layout, ids, change)
-      const moves = change.x !== undefined || change.y !== undefined || change.mount !== undefined
-      const keeps = change.memberId !== undefined || !moves
-      edit(keeps ? next : findSupports(next, ids, site, models), state.selected, `${named(ids)} changed`)
+    set,
+    remove,
+    nudge: (nudge) => {
+      const change = (before: Layout) => nudged(before, state.selected, nudge, site, models)
+      dispatch({ type: 'change', change, said: '' })
     },
-    remove: (ids) =>
-      edit(
-        removeHeaters(layout, ids),
-        state.selected.filter((id) => !ids.includes(id)),
-        `${named(ids)} removed`,
-      ),
-    nudge: (nudge) => edit(nudged(layout, state.selected, nudge, site, models), state.selected, ''),
     placeAt(at, free) {
       const choice = listModelChoices(catalogue, site, brief).find(({ model }) => model.code === state.placing)
       if (choice) place(choice, at, free)

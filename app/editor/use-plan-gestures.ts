@@ -42,20 +42,24 @@ const pullPx = 10
 const handles: Record<string, Gesture> = { turn: turnGesture, tilt: tiltGesture }
 
 /** Pointer gestures on the plan; each step is worked out from the state at pointer-down, once a frame. */
-export function usePlanGestures(svg: RefObject<SVGSVGElement | null>, hand: PlanHand) {
+export function usePlanGestures(
+  frame: RefObject<HTMLElement | null>,
+  svg: RefObject<SVGSVGElement | null>,
+  hand: PlanHand,
+) {
   const latest = useRef(hand)
   const active = useRef<Active | null>(null)
   const fingers = useRef(new Map<number, Vec2>())
   const downAt = useRef<Vec2>([0, 0])
-  const frame = useRef(0)
+  const next = useRef(0)
   const waiting = useRef<PointerEvent | null>(null)
   useEffect(() => {
     latest.current = hand
   })
-  useEffect(() => () => cancelAnimationFrame(frame.current), [])
+  useEffect(() => () => cancelAnimationFrame(next.current), [])
 
   const placeOf = (event: { clientX: number; clientY: number }): Vec2 => {
-    const box = svg.current?.getBoundingClientRect()
+    const box = frame.current?.getBoundingClientRect()
     return [event.clientX - (box?.left ?? 0), event.clientY - (box?.top ?? 0)]
   }
   const siteOf = (event: { clientX: number; clientY: number }) =>
@@ -100,8 +104,8 @@ export function usePlanGestures(svg: RefObject<SVGSVGElement | null>, hand: Plan
       if (now.moved && now.kind === 'pan') viewing.shiftBy(screen[0] - before[0], screen[1] - before[1])
       if (now.moved && now.kind !== 'pan') {
         waiting.current = event.nativeEvent
-        frame.current ||= requestAnimationFrame(() => {
-          frame.current = 0
+        next.current ||= requestAnimationFrame(() => {
+          next.current = 0
           if (waiting.current) step(waiting.current)
         })
       }
@@ -115,8 +119,8 @@ export function usePlanGestures(svg: RefObject<SVGSVGElement | null>, hand: Plan
     const now = active.current
     if (fingers.current.size > 0) return
     active.current = null
-    cancelAnimationFrame(frame.current)
-    frame.current = 0
+    cancelAnimationFrame(next.current)
+    next.current = 0
     waiting.current = null
     if (!now || now.kind === 'pinch') return
     const { dispatch, hold, onMarquee, start, selected } = latest.current
@@ -132,10 +136,12 @@ export function usePlanGestures(svg: RefObject<SVGSVGElement | null>, hand: Plan
     if (!now.moved) now.clicked()
   }
 
-  /** Escape: back to pointer-down; the pointer's further way means nothing. */
-  function dropGesture() {
+  /** Escape: back to pointer-down; the pointer's further way means nothing. Whether there was a gesture. */
+  function dropGesture(): boolean {
+    const was = active.current !== null
     active.current = null
     latest.current.onMarquee(null)
+    return was
   }
 
   function onPointerCancel(event: ReactPointerEvent<SVGSVGElement>) {

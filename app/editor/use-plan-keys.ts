@@ -14,7 +14,8 @@ interface PlanKeys {
   readonly models: ReadonlyMap<string, HeaterModel>
   readonly readOnly: boolean
   readonly dispatch: Dispatch<EditorAction>
-  readonly onLetGo: () => void
+  /** Drops what the pointer does; whether it did something. */
+  readonly onLetGo: () => boolean
   readonly onEnlarge: (factor: number) => void
   readonly onWholePlan: () => void
   /** Enter on a seat. */
@@ -63,8 +64,7 @@ export function usePlanKeys(keys: PlanKeys) {
       case 'let go':
         held.current = null
         draft.current = null
-        onLetGo()
-        dispatch({ type: 'let go' })
+        dispatch({ type: onLetGo() ? 'drop shown' : 'let go' })
         return true
       case 'select all':
         dispatch({ type: 'select all' })

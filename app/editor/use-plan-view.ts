@@ -1,4 +1,4 @@
-import { useEffect, useMemo, useRef, useState, type RefObject } from 'react'
+import { useEffect, useLayoutEffect, useMemo, useRef, useState, type RefObject } from 'react'
 import { planViewOf, type PlanMargins, type PlanView } from '#app/drawing/plan/plan-view.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
@@ -37,7 +37,7 @@ export function usePlanView(
   site: Site,
   size: { readonly width: number; readonly height: number },
   margins: PlanMargins,
-  moving: RefObject<SVGGElement | null>,
+  moving: RefObject<HTMLElement | SVGElement | null>,
 ): PlanViewing {
   const whole = useMemo(() => planViewOf(site, size.width, size.height, margins), [site, size, margins])
   const [drawn, setDrawn] = useState(wholePlan)
@@ -45,9 +45,9 @@ export function usePlanView(
   const timer = useRef<ReturnType<typeof setTimeout>>(undefined)
   const drawnNow = useRef(wholePlan)
 
-  useEffect(() => {
+  useLayoutEffect(() => {
     drawnNow.current = drawn
-    moving.current?.removeAttribute('transform')
+    moving.current?.style.removeProperty('transform')
   }, [drawn, moving])
   useEffect(() => () => clearTimeout(timer.current), [])
 
@@ -55,7 +55,7 @@ export function usePlanView(
     wanted.current = next
     clearTimeout(timer.current)
     if (atOnce) return setDrawn(next)
-    moving.current?.setAttribute('transform', interimTransform(drawnNow.current, next))
+    moving.current?.style.setProperty('transform', interimTransform(drawnNow.current, next))
     timer.current = setTimeout(() => setDrawn(next), rest)
   }
   const view = useMemo(() => transformedView(whole, drawn), [whole, drawn])

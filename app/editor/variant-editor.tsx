@@ -13,7 +13,7 @@ import type { KeptLayout, Keeping } from '#app/editor/keeping.ts'
 import { emittersOf, mapQuestion, scaleOf } from '#app/editor/map-questions.ts'
 import { FiguresRow } from '#app/editor/panels/figures-row.tsx'
 import { ConflictPanel } from '#app/editor/panels/conflict-panel.tsx'
-import { ToolRow } from '#app/editor/panels/tool-row.tsx'
+import { MapLegend, ToolRow } from '#app/editor/panels/tool-row.tsx'
 import { VariantTabs, type VariantTab } from '#app/editor/panels/variant-tabs.tsx'
 import { PlanSurface } from '#app/editor/plan-surface.tsx'
 import { pointedStore } from '#app/editor/pointed.ts'
@@ -93,7 +93,6 @@ export function VariantEditor(props: VariantEditorProps) {
   )
   const withSections = room === 'desk' && cuts.length > 0
   const flux = useFlux(question, withSections ? about : null, state.dropped)
-  const shown = useDeferredValue(layout)
   const emitters = useMemo(() => emittersOf(layout, models), [layout, models])
   const onSeat = useCallback((id: string | null) => dispatch({ type: 'seat', id }), [dispatch])
   const explain = useCallback(
@@ -130,6 +129,15 @@ export function VariantEditor(props: VariantEditorProps) {
     plane: planeHeight(choice.plane, site),
     answer: flux.answer,
     isFlux: choice.map.kind === 'flux',
+  }
+  const tools = {
+    ...{ site, layout, choice, readOnly, legend, placing },
+    selected: state.selected,
+    onChoice: setChoice,
+    onPlacing: () => {
+      setPlacing(!placing)
+      if (placing) dispatch({ type: 'placing', model: null })
+    },
   }
   return (
     <JobFrame
@@ -202,17 +210,10 @@ export function VariantEditor(props: VariantEditorProps) {
             units={site.displayUnits}
             fluxUnit={choice.fluxUnit}
             onExplain={explain}
-          />
-          <ToolRow
-            {...{ site, layout, choice, readOnly, legend }}
-            selected={state.selected}
-            onChoice={setChoice}
-            placing={placing}
-            onPlacing={() => {
-              setPlacing(!placing)
-              if (placing) dispatch({ type: 'placing', model: null })
-            }}
-          />
+          >
+            {room === 'tablet' && <MapLegend {...legend} />}
+          </FiguresRow>
+          {room !== 'tablet' && <ToolRow {...tools} />}
           <PlanSurface
             {...{ state, dispatch, site, models, choice, scale, flux, readOnly, hold, touch, pointed }}
             warmth={figures.warmth}
@@ -226,7 +227,7 @@ export function VariantEditor(props: VariantEditorProps) {
             <div className="h-55 flex-none border-t border-[#26324c]">
               <Sections
                 {...{ site, models, cuts }}
-                layout={shown}
+                layout={kept}
                 scale={heat}
                 sections={flux.sections}
                 selected={state.selected}
@@ -234,7 +235,7 @@ export function VariantEditor(props: VariantEditorProps) {
             </div>
           )}
         </div>
-        <SidePanels subject={subject} room={room} />
+        <SidePanels subject={useDeferredValue(subject)} room={room} tools={<ToolRow {...tools} bare />} />
       </div>
     </JobFrame>
   )

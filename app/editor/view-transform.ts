@@ -54,8 +54,8 @@ export const transformedView = (whole: PlanView, transform: ViewTransform): Plan
   y0: whole.y0 * transform.size + transform.y,
 })
 
-/** SVG transform that shows `wanted` while the drawing is still drawn at `drawn`. */
+/** CSS transform that shows `wanted` while the drawing is still drawn at `drawn`. */
 export function interimTransform(drawn: ViewTransform, wanted: ViewTransform): string {
   const by = wanted.size / drawn.size
-  return `matrix(${by} 0 0 ${by} ${wanted.x - drawn.x * by} ${wanted.y - drawn.y * by})`
+  return `matrix(${by}, 0, 0, ${by}, ${wanted.x - drawn.x * by}, ${wanted.y - drawn.y * by})`
 }

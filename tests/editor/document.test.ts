@@ -106,7 +106,11 @@ describe('an open document', () => {
     server.elsewhere({ seats: 7 })
     document.change(() => ({ seats: 2 }))
     await vi.advanceTimersByTimeAsync(700)
-    expect(document.state()).toMatchObject({ status: { kind: 'conflict' }, theirs: { body: { seats: 7 } } })
+    expect(document.state()).toMatchObject({
+      status: { kind: 'conflict' },
+      theirs: { body: { seats: 7 } },
+      base: { seats: 1 },
+    })
     expect(document.state().history.present).toEqual({ seats: 2 })
     document.change(() => ({ seats: 3 }))
     await vi.advanceTimersByTimeAsync(9000)

@@ -14,52 +14,58 @@ interface FiguresRowProps {
   readonly fluxUnit: FluxUnit
   /** Opens the inputs, formula and source of a seat's figure. */
   readonly onExplain: (seatId: string) => void
+  /** At the right end where there is no row of tools: the scale. */
+  readonly children?: ReactNode
 }
 
 /** The figures a layout is judged by, in one row; a seat's figure opens how it was made. */
-export function FiguresRow({ totals, warmth, brief, units, fluxUnit, onExplain }: FiguresRowProps) {
+export function FiguresRow(props: FiguresRowProps) {
+  const { totals, warmth, brief, units, fluxUnit, onExplain, children } = props
   const { coldest, headMaximum, costPerEvening } = totals
   const seat = (figure: { seatId: string } | null) => (figure ? () => onExplain(figure.seatId) : undefined)
   return (
-    <dl className="flex flex-none overflow-x-auto border-b border-rule">
-      <Figure label="Seats in target" value={totals.heaters === 0 ? noFigure : totals.seatsInTarget}>
-        of {totals.seatsCounted}
-      </Figure>
-      <Figure
-        label={coldest ? `Coolest seat, ${coldest.seatId}` : 'Coolest seat'}
-        value={fluxFigure(coldest?.irradiance ?? null, fluxUnit)}
-        onExplain={seat(coldest)}
-      >
-        {fluxUnit}
-      </Figure>
-      <Figure label="Evenness, min / mean" value={totals.evenness === null ? noFigure : totals.evenness.toFixed(2)} />
-      <Figure
-        label={headMaximum ? `Hottest head, ${headMaximum.seatId}` : 'Hottest head'}
-        value={fluxFigure(headMaximum?.irradiance ?? null, fluxUnit)}
-        onExplain={seat(headMaximum)}
-      >
-        {fluxUnit}
-      </Figure>
-      <Figure
-        label={`Feels like, at ${formatQuantity(brief.windDesign, 'speed', units)}`}
-        value={feelsLikeRange(warmth, units)}
-        wide
-      >
-        {unitSymbol('temperature', units)}
-      </Figure>
-      <Figure
-        label={`Power, ${totals.heaters} ${totals.heaters === 1 ? 'heater' : 'heaters'}`}
-        value={(totals.power / 1000).toFixed(1)}
-        wide
-      >
-        kW
-      </Figure>
-      <Figure
-        label="Per evening"
-        value={costPerEvening ? formatMoney(costPerEvening.amount, costPerEvening.currency, true) : noFigure}
-        wide
-      />
-    </dl>
+    <div className="flex flex-none items-center overflow-x-auto border-b border-rule">
+      <dl className="flex flex-1">
+        <Figure label="Seats in target" value={totals.heaters === 0 ? noFigure : totals.seatsInTarget}>
+          of {totals.seatsCounted}
+        </Figure>
+        <Figure
+          label={coldest ? `Coolest seat, ${coldest.seatId}` : 'Coolest seat'}
+          value={fluxFigure(coldest?.irradiance ?? null, fluxUnit)}
+          onExplain={seat(coldest)}
+        >
+          {fluxUnit}
+        </Figure>
+        <Figure label="Evenness, min / mean" value={totals.evenness === null ? noFigure : totals.evenness.toFixed(2)} />
+        <Figure
+          label={headMaximum ? `Hottest head, ${headMaximum.seatId}` : 'Hottest head'}
+          value={fluxFigure(headMaximum?.irradiance ?? null, fluxUnit)}
+          onExplain={seat(headMaximum)}
+        >
+          {fluxUnit}
+        </Figure>
+        <Figure
+          label={`Feels like, at ${formatQuantity(brief.windDesign, 'speed', units)}`}
+          value={feelsLikeRange(warmth, units)}
+          wide
+        >
+          {unitSymbol('temperature', units)}
+        </Figure>
+        <Figure
+          label={`Power, ${totals.heaters} ${totals.heaters === 1 ? 'heater' : 'heaters'}`}
+          value={(totals.power / 1000).toFixed(1)}
+          wide
+        >
+          kW
+        </Figure>
+        <Figure
+          label="Per evening"
+          value={costPerEvening ? formatMoney(costPerEvening.amount, costPerEvening.currency, true) : noFigure}
+          wide
+        />
+      </dl>
+      {children}
+    </div>
   )
 }
 
@@ -93,16 +99,16 @@ function Figure({ label, value, wide = false, onExplain, children }: FigureProps
   )
   return (
     <div
-      className={`flex-auto border-l border-rule px-3.5 pt-2 pb-1.5 whitespace-nowrap first:border-l-0 first:pl-4.5 ${wide ? 'hidden desk:block' : ''}`}
+      className={`flex-auto border-l border-rule px-2.5 pt-2 pb-1.5 whitespace-nowrap first:border-l-0 first:pl-4.5 wide:px-3.5 ${wide ? 'hidden desk:block' : ''}`}
     >
       <dt className="text-2xs text-ink-3">{label}</dt>
-      <dd className="text-[1.1875rem] leading-6 font-medium tracking-[-0.01em]">
+      <dd className="text-lg leading-6 font-medium tracking-[-0.01em] wide:text-[1.1875rem]">
         {onExplain ? (
           <button
             type="button"
             onClick={onExplain}
             aria-label={`How this figure is made: ${label}`}
-            className="-mx-1 cursor-pointer rounded-sm px-1 decoration-1 underline-offset-4 hover:underline pointer-coarse:min-h-11"
+            className="-mx-1 cursor-pointer rounded-sm px-1 decoration-1 underline-offset-4 hover:underline pointer-coarse:-mt-5 pointer-coarse:-mb-1.5 pointer-coarse:pt-5 pointer-coarse:pb-1.5"
           >
             {figure}
           </button>

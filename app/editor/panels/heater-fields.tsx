@@ -68,15 +68,9 @@ export function HeaterFields(props: HeaterFieldsProps) {
             onCommit={(lowestPoint) => set({ lowestPoint })}
             placeholder="differ"
           />
-          <AngleField
-            label="Turn"
-            value={shared(heaters, (heater) => heater.turnDeg)}
-            check={(degrees) => (Math.abs(degrees) > 360 ? 'Between −360 and 360°.' : null)}
-            onCommit={(turnDeg) => set({ turnDeg })}
-          />
-        </div>
-        <div className="mt-2 grid grid-cols-2 gap-2 tablet:grid-cols-4 desk:grid-cols-2 wide:grid-cols-4">
           <TiltField {...{ heaters, model, set }} />
+        </div>
+        <div className="mt-2 grid grid-cols-2 gap-2 tablet:grid-cols-3">
           <SelectField
             label="Model"
             value={shared(heaters, (heater) => heater.model) ?? ''}
@@ -179,15 +173,16 @@ function TiltField({ heaters, model, set }: PartProps & { model: HeaterModel | u
         <button
           type="button"
           onClick={() => set({ tiltDeg: -(tilt ?? 0) })}
-          className="min-h-6 text-2xs text-ink-2 underline hover:text-ink pointer-coarse:min-h-11"
+          className="min-h-6 cursor-pointer text-left text-2xs text-ink-2 underline hover:text-ink pointer-coarse:min-h-11"
         >
-          Beam to the {side}: turn round
+          To the {side}: other side
         </button>
       )}
     </div>
   )
 }
 
+/** Turn, and what the heater is fed with. */
 function SupplyFields({ heaters, model, brief, set }: PartProps & { model: HeaterModel | undefined; brief: Brief }) {
   const [first] = heaters
   if (!first) return null
@@ -195,7 +190,13 @@ function SupplyFields({ heaters, model, brief, set }: PartProps & { model: Heate
   const voltages = [...new Set([...suppliesOf(brief), first.supplyVoltage])].sort((a, b) => a - b)
   const stages = model?.stages ?? []
   return (
-    <div className="mt-2 grid grid-cols-2 gap-2 tablet:grid-cols-4 desk:grid-cols-2 wide:grid-cols-4">
+    <div className="mt-2 grid grid-cols-2 gap-2 tablet:grid-cols-4">
+      <AngleField
+        label="Turn"
+        value={shared(heaters, (heater) => heater.turnDeg)}
+        check={(degrees) => (Math.abs(degrees) > 360 ? 'Between −360 and 360°.' : null)}
+        onCommit={(turnDeg) => set({ turnDeg })}
+      />
       <SelectField
         label="Supply"
         value={`${shared(heaters, (heater) => heater.supplyVoltage) ?? ''}`}

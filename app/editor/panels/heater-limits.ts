@@ -62,7 +62,7 @@ function supportNote(heater: MountedHeater, model: HeaterModel, site: Site, unit
   const holds = heater.tiltDeg === 0 || model.mountsThatHoldTilt.includes(heater.mount)
   const tilt = holds ? 'hold' : 'do not hold'
   const last = heater.tiltDeg === 0 ? '' : ` and ${tilt} the tilt of ${degreesFigure(Math.abs(heater.tiltDeg))}°`
-  return `${support.name} is ${formatLength(away, units)} away${reaches}${last}.`
+  return `${capital(support.name)} is ${formatLength(away, units)} away${reaches}${last}.`
 }
 
 function nearestNote(heater: MountedHeater, site: Site, units: DisplayUnits): string {
@@ -73,6 +73,8 @@ function nearestNote(heater: MountedHeater, site: Site, units: DisplayUnits): st
     ? `No support. Nearest is ${nearest.name}, ${formatLength(nearest.away, units)} away.`
     : 'No support, and nothing to fix to on this site.'
 }
+
+const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1)
 
 type Support = Site['members'][number] | Site['walls'][number] | Site['poles'][number]
 

@@ -54,7 +54,11 @@ export function HeatersTable(props: HeatersTableProps) {
                 heater={heater}
                 model={props.models.get(heater.model)}
                 chosen={selected.includes(heater.id)}
-                {...props}
+                site={site}
+                readOnly={props.readOnly}
+                onSelect={props.onSelect}
+                onSet={props.onSet}
+                onRemove={props.onRemove}
               />
             ))}
           </tbody>

@@ -24,14 +24,18 @@ interface ToolRowProps {
   readonly onPlacing: () => void
   readonly readOnly: boolean
   readonly legend: LegendReading
+  /** In a sheet: without its own scale and without placing. */
+  readonly bare?: boolean
 }
 
 /** What the row above the plan holds: placing, what the map shows, the plane, the scale. */
 export function ToolRow(props: ToolRowProps) {
-  const { site, choice, onChoice, placing, onPlacing, readOnly, legend } = props
+  const { site, choice, onChoice, placing, onPlacing, readOnly, legend, bare = false } = props
   return (
-    <div className="flex min-h-10.5 flex-none flex-wrap items-center gap-x-2.5 gap-y-1 border-b border-rule px-3.5">
-      {!readOnly && (
+    <div
+      className={`flex min-h-10.5 flex-none flex-wrap items-center gap-x-2.5 gap-y-1 ${bare ? 'py-3' : 'border-b border-rule'} px-3.5`}
+    >
+      {!readOnly && !bare && (
         <Button size="small" icon="plus" aria-pressed={placing} onClick={onPlacing}>
           Heater
         </Button>
@@ -39,8 +43,8 @@ export function ToolRow(props: ToolRowProps) {
       <MapSelect {...props} />
       <PlaneChooser {...{ site, choice, onChoice }} />
       <span className="flex-1" />
-      <span className="flex min-w-0 items-center gap-1">
-        <MapLegend {...legend} />
+      <span className="flex min-w-0 flex-wrap items-center gap-1">
+        {!bare && <MapLegend {...legend} />}
         <UnitChooser choice={choice} onChoice={onChoice} scale={legend.scale} />
       </span>
     </div>

@@ -65,6 +65,15 @@ describe('a site that two people changed', () => {
     expect(siteDifferences(mine, theirs)[1]).toMatchObject({ label: 'Seat W5-1', theirs: 'no such thing' })
     expect(siteDifferences(site, site)).toEqual([])
   })
+  it('tells what was changed there alone from what was changed here', () => {
+    const alone = siteDifferences(mine, theirs, site).map(({ key, theirsAlone }) => [key, theirsAlone])
+    expect(alone).toEqual([
+      ['seat R1-1', false],
+      ['seat W5-1', true],
+      ['member beam-3', true],
+    ])
+    expect(siteDifferences(mine, theirs).every(({ theirsAlone }) => !theirsAlone)).toBe(true)
+  })
   it('becomes one site by the choice for each thing', () => {
     const merged = mergedSite(mine, theirs, new Set(['member beam-3', 'seat W5-1']))
     expect(siteDifferences(merged, mine).map(({ key }) => key)).toEqual(['seat W5-1', 'member beam-3'])
