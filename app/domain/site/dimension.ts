@@ -1,15 +1,4 @@
-import { z } from 'zod'
-import {
-  coverSchema,
-  memberSchema,
-  obstacleSchema,
-  poleSchema,
-  seatSchema,
-  tableSchema,
-  wallSchema,
-  type Dimension,
-  type Site,
-} from '#app/domain/site/site.ts'
+import type { Dimension, Site } from '#app/domain/site/site.ts'
 
 /** A thing of the site by kind and id; the floor's id is of no account. */
 export interface ThingOf {
@@ -27,44 +16,40 @@ export function moveDimension(site: Site, dimension: Dimension, delta: number): 
   return moved
 }
 
-/** The site with one coordinate changed by `delta`, m; unchanged when the coordinate is not there or leaves its range. */
+/** The site with one coordinate changed by `delta`, m; unchanged when the coordinate is not there. */
 export function moveCoordinate(site: Site, { of, id, coordinate }: Coordinate, delta: number): Site {
   const path = coordinate.split('.')
-  const edit = <T extends { id: string }>(things: readonly T[], schema: z.ZodType<T>): T[] =>
-    things.map((thing) => (thing.id === id ? reparsed(thing, schema, path, delta) : thing))
+  const edit = <T extends { id: string }>(things: readonly T[]): T[] =>
+    things.map((thing) => (thing.id === id ? withNumberMoved(thing, path, delta) : thing))
   switch (of) {
     case 'floor':
-      return { ...site, floor: reparsed(site.floor, floorSchema, path, delta) }
+      return { ...site, floor: withNumberMoved(site.floor, path, delta) }
     case 'cover':
-      return { ...site, covers: edit(site.covers, coverSchema) }
+      return { ...site, covers: edit(site.covers) }
     case 'member':
-      return { ...site, members: edit(site.members, memberSchema) }
+      return { ...site, members: edit(site.members) }
     case 'wall':
-      return { ...site, walls: edit(site.walls, wallSchema) }
+      return { ...site, walls: edit(site.walls) }
     case 'pole':
-      return { ...site, poles: edit(site.poles, poleSchema) }
+      return { ...site, poles: edit(site.poles) }
     case 'obstacle':
-      return { ...site, obstacles: edit(site.obstacles, obstacleSchema) }
+      return { ...site, obstacles: edit(site.obstacles) }
     case 'table':
-      return { ...site, tables: edit(site.tables, tableSchema) }
+      return { ...site, tables: edit(site.tables) }
     case 'seat':
-      return { ...site, seats: edit(site.seats, seatSchema) }
+      return { ...site, seats: edit(site.seats) }
   }
 }
 
-const floorSchema = z.array(z.tuple([z.number(), z.number()]))
-
-function reparsed<T>(thing: T, schema: z.ZodType<T>, path: readonly string[], delta: number): T {
-  const result = schema.safeParse(withNumberMoved(thing, path, delta))
-  return result.success ? result.data : thing
+function withNumberMoved<T>(thing: T, path: readonly string[], delta: number): T {
+  const copy = structuredClone(thing)
+  moveNumber(copy, path, delta)
+  return copy
 }
 
-function withNumberMoved(value: unknown, [key, ...rest]: readonly string[], delta: number): unknown {
-  if (key === undefined) return typeof value === 'number' ? value + delta : value
-  if (Array.isArray(value))
-    return value.map((item, i) => (String(i) === key ? withNumberMoved(item, rest, delta) : item))
-  if (typeof value !== 'object' || value === null) return value
-  return Object.fromEntries(
-    Object.entries(value).map(([name, item]) => [name, name === key ? withNumberMoved(item, rest, delta) : item]),
-  )
+function moveNumber(inside: unknown, [key, ...rest]: readonly string[], delta: number): void {
+  if (typeof inside !== 'object' || inside === null || key === undefined || !Object.hasOwn(inside, key)) return
+  const value: unknown = Reflect.get(inside, key)
+  if (rest.length > 0) moveNumber(value, rest, delta)
+  else if (typeof value === 'number') Reflect.set(inside, key, value + delta)
 }

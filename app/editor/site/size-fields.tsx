@@ -1,6 +1,6 @@
 import { useState } from 'react'
 import { moveDimension } from '#app/domain/site/dimension.ts'
-import { sizeSourceSchema, type Dimension, type Site } from '#app/domain/site/site.ts'
+import { siteSchema, sizeSourceSchema, type Dimension, type Site } from '#app/domain/site/site.ts'
 import { Button } from '#app/components/button.tsx'
 import { SelectField, TextField } from '#app/components/field.tsx'
 import { LengthInput } from '#app/editor/site/length-input.tsx'
@@ -32,10 +32,9 @@ export function SizeFields({ site, size, readOnly, onChange, onClose }: SizeFiel
   const measure = (value: number) =>
     onChange((old) => {
       const moved = moveDimension(old, size, value - size.value)
-      return {
-        ...moved,
-        dimensions: moved.dimensions.map((each) => (each.id === size.id ? { ...each, value } : each)),
-      }
+      const dimensions = moved.dimensions.map((each) => (each.id === size.id ? { ...each, value } : each))
+      const measured = siteSchema.safeParse({ ...moved, dimensions })
+      return measured.success ? measured.data : old
     })
   return (
     <section aria-labelledby="size-title" className="border-b border-rule pb-4">
@@ -52,6 +51,8 @@ export function SizeFields({ site, size, readOnly, onChange, onClose }: SizeFiel
           label="Value"
           units={units}
           value={size.value}
+          min={0}
+          max={100}
           disabled={readOnly}
           hint={
             size.moves.length > 0 ? `Decides ${size.moves.length} places of the site` : 'Decides nothing that is drawn'

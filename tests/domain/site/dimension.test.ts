@@ -27,13 +27,13 @@ describe('moving a dimension', () => {
     expect(trim(back)).toMatchObject({ z: [expect.closeTo(2.9, 12), expect.closeTo(3.05, 12)] })
   })
 
-  it('leaves a thing as it is when it would leave its range or has no such coordinate', () => {
-    const odd = {
-      ...dimension('beam spacing'),
-      moves: [{ of: 'member' as const, id: 'beam-1', coordinate: 'width', by: 1 }],
-    }
-    expect(moveDimension(site, odd, -5).members).toEqual(site.members)
-    const none = { ...odd, moves: [{ of: 'pole' as const, id: 'nowhere', coordinate: 'top', by: 1 }] }
+  it.each([
+    { of: 'pole' as const, id: 'nowhere', coordinate: 'top' },
+    { of: 'member' as const, id: 'beam-1', coordinate: 'nowhere.0' },
+    { of: 'member' as const, id: 'beam-1', coordinate: 'name' },
+    { of: 'member' as const, id: 'beam-1', coordinate: 'constructor.length' },
+  ])('leaves a thing as it is that has no such number: $of $id $coordinate', (move) => {
+    const none = { ...dimension('beam spacing'), moves: [{ ...move, by: 1 }] }
     expect(moveDimension(site, none, 1)).toEqual(site)
   })
 })
