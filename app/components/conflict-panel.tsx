@@ -7,6 +7,8 @@ export interface ConflictRow {
   readonly label: string
   readonly mine: string
   readonly theirs: string
+  /** Nothing was changed here: the other copy is taken unless somebody chooses otherwise. */
+  readonly theirsAlone?: boolean
 }
 
 interface ConflictPanelProps {
@@ -17,7 +19,9 @@ interface ConflictPanelProps {
 
 /** Both values of everything that was changed twice; the buttons are the values, and nothing is lost until one is taken. */
 export function ConflictPanel({ rows, onSettle }: ConflictPanelProps) {
-  const [taken, setTaken] = useState<ReadonlySet<string>>(new Set())
+  const [taken, setTaken] = useState<ReadonlySet<string>>(
+    () => new Set(rows.filter(({ theirsAlone }) => theirsAlone).map(({ key }) => key)),
+  )
   const choose = (key: string, theirs: boolean) =>
     setTaken((old) => new Set(theirs ? [...old, key] : [...old].filter((each) => each !== key)))
   return (

@@ -94,7 +94,7 @@ export function DataTable<Row>(props: DataTableProps<Row>) {
                 <Cell
                   key={column.key}
                   scope={column.names ? 'row' : undefined}
-                  className={`px-2 py-1 align-middle font-regular first:pl-0 last:pr-0 ${column.numeric ? 'text-right' : 'text-left'} ${column.names ? 'font-medium' : ''} ${column.className ?? ''}`}
+                  className={`px-2 py-1 align-middle font-regular first:pl-0 last:pr-0 ${column.numeric ? 'text-right whitespace-nowrap' : 'text-left'} ${column.names ? 'font-medium' : ''} ${column.className ?? ''}`}
                 >
                   {column.cell(row)}
                 </Cell>

@@ -7,12 +7,22 @@ export interface SiteDifference {
   readonly label: string
   readonly mine: string
   readonly theirs: string
+  /** Changed there and not here. */
+  readonly theirsAlone: boolean
 }
 
-const same = (a: unknown, b: unknown): boolean => JSON.stringify(a) === JSON.stringify(b)
+/** The database gives keys back in an order of its own, so order says nothing. */
+const canonical = (value: unknown): string =>
+  JSON.stringify(value, (_, part: unknown) =>
+    typeof part === 'object' && part !== null && !Array.isArray(part)
+      ? Object.fromEntries(Object.entries(part).toSorted(([a], [b]) => (a < b ? -1 : 1)))
+      : part,
+  ) ?? ''
 
-/** Everything that differs between two copies of a site, thing by thing. */
-export function siteDifferences(mine: Site, theirs: Site): SiteDifference[] {
+const same = (a: unknown, b: unknown): boolean => canonical(a) === canonical(b)
+
+/** Everything that differs between two copies of a site, thing by thing; `base` is what both were made from, if known. */
+export function siteDifferences(mine: Site, theirs: Site, base: Site | null = null): SiteDifference[] {
   const length = (metres: number) => formatLength(metres, mine.displayUnits)
   const seatWords = (seat: Seat) => `${length(seat.x)}, ${length(seat.y)}, facing ${seat.facingDeg}°, ${seat.priority}`
   const memberWords = ({ from, to }: Member) =>
@@ -20,11 +30,19 @@ export function siteDifferences(mine: Site, theirs: Site): SiteDifference[] {
   const sizeWords = ({ value, tolerance, source }: Dimension) => `${length(value)} ± ${length(tolerance)}, ${source}`
   const rest = same(withoutThings(mine), withoutThings(theirs))
     ? []
-    : [{ key: 'rest', label: 'The rest of the site', mine: 'what stands here', theirs: 'what was saved there' }]
+    : [
+        {
+          key: 'rest',
+          label: 'The rest of the site',
+          mine: 'what stands here',
+          theirs: 'what was saved there',
+          theirsAlone: base !== null && same(withoutThings(mine), withoutThings(base)),
+        },
+      ]
   return [
-    ...differing('seat', (seat) => `Seat ${seat.id}`, mine.seats, theirs.seats, seatWords),
-    ...differing('member', (member) => member.name, mine.members, theirs.members, memberWords),
-    ...differing('size', (size) => size.label, mine.dimensions, theirs.dimensions, sizeWords),
+    ...differing('seat', (seat) => `Seat ${seat.id}`, [mine.seats, theirs.seats, base?.seats], seatWords),
+    ...differing('member', (member) => member.name, [mine.members, theirs.members, base?.members], memberWords),
+    ...differing('size', (size) => size.label, [mine.dimensions, theirs.dimensions, base?.dimensions], sizeWords),
     ...rest,
   ]
 }
@@ -36,8 +54,7 @@ function withoutThings(site: Site): Site {
 function differing<T extends { readonly id: string }>(
   kind: string,
   label: (thing: T) => string,
-  mine: readonly T[],
-  theirs: readonly T[],
+  [mine, theirs, base]: readonly [readonly T[], readonly T[], readonly T[] | undefined],
   words: (thing: T) => string,
 ): SiteDifference[] {
   const ids = new Set([...mine, ...theirs].map(({ id }) => id))
@@ -46,8 +63,14 @@ function differing<T extends { readonly id: string }>(
     const right = theirs.find((thing) => thing.id === id)
     const named = left ?? right
     if (!named || same(left, right)) return []
-    const told = (thing: T | undefined) => (thing ? words(thing) : 'no such thing')
-    return [{ key: `${kind} ${id}`, label: label(named), mine: told(left), theirs: told(right) }]
+    const told = (thing: T | undefined) => (thing ? words(thing) : 'none')
+    const theirsAlone =
+      base !== undefined &&
+      same(
+        left,
+        base.find((thing) => thing.id === id),
+      )
+    return [{ key: `${kind} ${id}`, label: label(named), mine: told(left), theirs: told(right), theirsAlone }]
   })
 }
 

@@ -97,7 +97,6 @@ export function MembersTable({ site, chosen, onChoose }: ChoosingProps) {
     {
       key: 'load',
       heading: 'Load per point',
-      numeric: true,
       cell: ({ allowedPointLoad, loadStatus }) =>
         allowedPointLoad === null ? loadStatus : formatQuantity(allowedPointLoad, 'force', site.displayUnits),
     },

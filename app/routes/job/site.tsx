@@ -56,7 +56,7 @@ type Loaded = Route.ComponentProps['loaderData']
 type Adding = 'seat' | 'member' | null
 
 function SiteEditor({ viewer, job, kept, readOnly }: Loaded) {
-  const [{ history, status, theirs }, document] = useDocument<Site>(kept, {
+  const [{ history, status, theirs, base }, document] = useDocument<Site>(kept, {
     url: `/api/jobs/${job.id}/site`,
     name: 'site',
     schema: siteSchema,
@@ -130,7 +130,7 @@ function SiteEditor({ viewer, job, kept, readOnly }: Loaded) {
       </header>
       {theirs && (
         <ConflictPanel
-          rows={siteDifferences(site, theirs.body)}
+          rows={siteDifferences(site, theirs.body, base)}
           onSettle={(taken) => document.settle(mergedSite(site, theirs.body, taken))}
         />
       )}

@@ -62,8 +62,10 @@ describe('a site that two people changed', () => {
 
   it('is told thing by thing with both values', () => {
     expect(siteDifferences(mine, theirs).map(({ key }) => key)).toEqual(['seat R1-1', 'seat W5-1', 'member beam-3'])
-    expect(siteDifferences(mine, theirs)[1]).toMatchObject({ label: 'Seat W5-1', theirs: 'no such thing' })
-    expect(siteDifferences(site, site)).toEqual([])
+    expect(siteDifferences(mine, theirs)[1]).toMatchObject({ label: 'Seat W5-1', theirs: 'none' })
+    const reordered = { ...site, seats: site.seats.map((seat) => Object.fromEntries(Object.entries(seat).reverse())) }
+    expect(siteDifferences(site, siteSchema.parse(reordered))).toEqual([])
+    expect(siteDifferences(site, reordered as typeof site)).toEqual([])
   })
   it('tells what was changed there alone from what was changed here', () => {
     const alone = siteDifferences(mine, theirs, site).map(({ key, theirsAlone }) => [key, theirsAlone])
