@@ -38,5 +38,5 @@ export interface Keeping {
   newSaveId: () => string
   /** null: nothing is kept there any more. */
   keepOnDevice: (copy: DeviceCopy | null) => void
-  findOnDevice: () => DeviceCopy | null
+  findOnDevice: () => Promise<DeviceCopy | null>
 }

@@ -25,15 +25,17 @@ export function useAutosave(input: AutosaveInput): { autosave: Autosave; state: 
 
   useEffect(() => {
     if (readOnly) return
-    const copy = keeping.findOnDevice()
-    if (copy && sameLayout(copy.layout, initial.layout)) keeping.keepOnDevice(null)
-    else if (copy) {
+    let open = true
+    void keeping.findOnDevice().then((copy) => {
+      if (!open || !copy) return
+      if (sameLayout(copy.layout, initial.layout)) return keeping.keepOnDevice(null)
       onTaken(copy.layout, 'Changes kept on this device are back')
       autosave.resume(copy)
-    }
+    })
     const again = () => autosave.retry()
     window.addEventListener('online', again)
     return () => {
+      open = false
       window.removeEventListener('online', again)
       autosave.stop()
     }

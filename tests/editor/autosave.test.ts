@@ -20,7 +20,7 @@ function server(initial: KeptLayout) {
     keepOnDevice: (copy) => {
       device = copy
     },
-    findOnDevice: () => device,
+    findOnDevice: () => Promise.resolve(device),
     save: async (request) => {
       requests.push(request)
       await Promise.resolve()

@@ -1,11 +1,10 @@
 import { useMemo } from 'react'
 import { data, useNavigate, type ShouldRevalidateFunctionArgs } from 'react-router'
 import useSWR, { type KeyedMutator } from 'swr'
-import { z } from 'zod'
 import { can } from '#app/domain/access/roles.ts'
-import { layoutSchema } from '#app/domain/layout/layout.ts'
 import { useToast } from '#app/components/toast.tsx'
 import type { DeviceCopy, KeptLayout, Keeping } from '#app/editor/keeping.ts'
+import type { KeptVariant as Kept } from '#app/editor/parse-kept.ts'
 import { VariantEditor } from '#app/editor/variant-editor.tsx'
 import { requireJob } from '#app/server/data/jobs.server.ts'
 import { findLaidOut } from '#app/server/data/laid-out.server.ts'
@@ -43,19 +42,17 @@ export default function VariantPage({ loaderData }: Route.ComponentProps) {
   return <KeptVariant key={loaderData.variant.id} {...loaderData} />
 }
 
-const variantSchema = z.object({ id: z.string(), revision: z.int(), ...layoutSchema.shape })
-type KeptVariant = z.infer<typeof variantSchema>
-const refusalSchema = z.object({ error: z.string(), current: z.unknown().optional() })
+const parsing = () => import('#app/editor/parse-kept.ts')
 
-const keptLayout = ({ revision, title, heaters }: KeptVariant): KeptLayout => ({
+const keptLayout = ({ revision, title, heaters }: Kept): KeptLayout => ({
   revision,
   layout: { title, heaters },
 })
 
-async function findKept(url: string): Promise<KeptVariant> {
+async function findKept(url: string): Promise<Kept> {
   const response = await fetch(url)
   if (!response.ok) throw new Error(`${response.status}`)
-  return variantSchema.parse(await response.json())
+  return (await parsing()).parseVariant(await response.json())
 }
 
 function KeptVariant({ variant, variants, job, ...rest }: Route.ComponentProps['loaderData']) {
@@ -73,7 +70,7 @@ function KeptVariant({ variant, variants, job, ...rest }: Route.ComponentProps['
   const make = async (body: object) => {
     const made = await send('POST', `/api/jobs/${job.id}/variants`, body)
     if (!made) toast({ text: 'No variant made: no connection. Nothing was lost.' })
-    return made ? variantSchema.parse(made) : null
+    return made ? (await parsing()).parseVariant(made) : null
   }
   const open = (id: string) => navigate(`/jobs/${job.id}/variants/${id}`)
   const makeAndOpen = async (body: object) => {
@@ -120,7 +117,7 @@ async function send(method: string, url: string, body: object | null, headers: R
 }
 
 /** Keeps a layout at a URL of the API and, until it is there, on this device. */
-function keepingAt(url: string, mutate: KeyedMutator<KeptVariant>): Keeping {
+function keepingAt(url: string, mutate: KeyedMutator<Kept>): Keeping {
   const device = `unsaved:${url}`
   return {
     newSaveId: () => crypto.randomUUID(),
@@ -132,14 +129,15 @@ function keepingAt(url: string, mutate: KeyedMutator<KeptVariant>): Keeping {
         const response = await fetch(url, { method: 'PUT', headers, body: JSON.stringify(layout) })
         if (response.status >= 500) return { kind: 'unreachable' }
         const json: unknown = await response.json()
+        const { parseRefusal, parseVariant } = await parsing()
         if (response.ok) {
-          const saved = variantSchema.parse(json)
+          const saved = parseVariant(json)
           await mutate(saved, { revalidate: false })
           return { kind: 'saved', revision: saved.revision }
         }
-        const refusal = refusalSchema.parse(json)
+        const refusal = parseRefusal(json)
         if (response.status !== 412) return { kind: 'refused', reason: refusal.error }
-        return { kind: 'conflict', current: keptLayout(variantSchema.parse(refusal.current)), by: null, at: null }
+        return { kind: 'conflict', current: keptLayout(parseVariant(refusal.current)), by: null, at: null }
       } catch {
         return { kind: 'unreachable' }
       }
@@ -147,12 +145,10 @@ function keepingAt(url: string, mutate: KeyedMutator<KeptVariant>): Keeping {
   }
 }
 
-const keptLayoutSchema = z.object({ layout: layoutSchema, revision: z.int() })
-const deviceCopySchema = z.object({ base: keptLayoutSchema, layout: layoutSchema, changes: z.int() })
-
-function findOnDevice(key: string): DeviceCopy | null {
+async function findOnDevice(key: string): Promise<DeviceCopy | null> {
   try {
-    return deviceCopySchema.parse(JSON.parse(localStorage.getItem(key) ?? 'null'))
+    const kept = localStorage.getItem(key)
+    return kept === null ? null : (await parsing()).parseDeviceCopy(kept)
   } catch {
     return null
   }
