@@ -45,6 +45,13 @@ export function vectorInFront(flux: NetFlux, normal: Vec3): Vec3 {
     : stretchVector(flux.view, horizon, alongElement + halfLength)
 }
 
+/** Irradiance of a plane by its unit normal, from what the elements send, W/m². */
+export function irradianceByNormal(fluxes: readonly (NetFlux | null)[]): (normal: Vec3) => number {
+  const lit = fluxes.filter((flux) => flux !== null)
+  const rows = rowsOf(lit)
+  return (normal) => dot(fluxInFront(lit, rows, normal), normal)
+}
+
 /** How many of the strongest elements the search starts from, besides the whole. */
 const starts = 24
 

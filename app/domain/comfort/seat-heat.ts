@@ -1,13 +1,25 @@
-import { largestDirection, netFluxOf, vectorInFront, type NetFlux } from '#app/domain/comfort/net-flux.ts'
+import { largestLevelDirection } from '#app/domain/comfort/level-sight.ts'
+import {
+  irradianceByNormal,
+  largestDirection,
+  netFluxOf,
+  vectorInFront,
+  type NetFlux,
+} from '#app/domain/comfort/net-flux.ts'
 import { fieldBeforeAbsorption } from '#app/domain/comfort/radiant-field.ts'
 import type { Source } from '#app/domain/comfort/sources.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
-import { irradianceAt, largestIrradianceAt } from '#app/domain/flux/irradiance.ts'
+import {
+  irradianceAt,
+  irradianceByEmitter,
+  irradianceByNormalAt,
+  largestIrradianceAt,
+} from '#app/domain/flux/irradiance.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
 import type { Seat } from '#app/domain/site/site.ts'
 import { dot, radians, type Vec3 } from '#app/domain/vector.ts'
 
-/** The largest irradiance over all directions at a point: where it comes from and what each source gives of it, W/m². */
+/** The largest irradiance over some directions at a point: where it comes from and what each source gives of it, W/m². */
 interface LargestParts {
   readonly direction: Vec3
   readonly parts: readonly number[]
@@ -19,11 +31,12 @@ export interface SeatHeat {
   readonly body: readonly number[]
   /** Horizontal irradiance at the head, W/m². */
   readonly headHorizontal: readonly number[]
+  /** Over all directions. */
   readonly head: LargestParts
   readonly bodyLargest: LargestParts
   /** Absorbed effective radiant field, W/m² of body surface. */
   readonly field: readonly number[]
-  /** Largest near-infrared irradiance at the eye; null when a source's share of it is not known. */
+  /** Near infrared at the eye over all level directions; null when a source's share of it is not known. */
   readonly nearInfrared: LargestParts | null
 }
 
@@ -34,6 +47,8 @@ interface ElementHeat {
   readonly field: number
   readonly atBody: NetFlux | null
   readonly atHead: NetFlux | null
+  /** As at the head, of its near-infrared share; null without that share too. */
+  readonly atEye: NetFlux | null
 }
 
 const up: Vec3 = [0, 0, 1]
@@ -42,15 +57,26 @@ const up: Vec3 = [0, 0, 1]
 export const bodyPoint = (seat: Seat): Vec3 => [seat.x, seat.y, seat.bodyHeight]
 export const headPoint = (seat: Seat): Vec3 => [seat.x, seat.y, seat.headHeight]
 
-function elementHeat({ emitter, absorptance }: Source, seat: Seat, obstructions: readonly Obstruction[]): ElementHeat {
+/** Effective radiant field that one element gives a seat, absorbed, W/m² of body surface. */
+export function fieldAtSeat(
+  { emitter, absorptance }: Source,
+  seat: Seat,
+  obstructions: readonly Obstruction[] = [],
+): number {
+  const receiver = { point: bodyPoint(seat), posture: seat.posture, facing: radians(seat.facingDeg) }
+  return absorptance * fieldBeforeAbsorption(emitter, receiver, obstructions)
+}
+
+function elementHeat(source: Source, seat: Seat, obstructions: readonly Obstruction[]): ElementHeat {
+  const { emitter, nearInfraredEmitter } = source
   const [body, head] = [bodyPoint(seat), headPoint(seat)]
-  const receiver = { point: body, posture: seat.posture, facing: radians(seat.facingDeg) }
   return {
     body: irradianceAt(emitter, body, up, obstructions),
     headHorizontal: irradianceAt(emitter, head, up, obstructions),
-    field: absorptance * fieldBeforeAbsorption(emitter, receiver, obstructions),
+    field: fieldAtSeat(source, seat, obstructions),
     atBody: netFluxOf(emitter, body),
     atHead: netFluxOf(emitter, head),
+    atEye: nearInfraredEmitter && netFluxOf(nearInfraredEmitter, head),
   }
 }
 
@@ -68,7 +94,7 @@ function rememberedHeat(source: Source, seat: Seat): ElementHeat {
 
 /**
  * Heat of every source at one seat; unshaded unless obstructions are given. With `remember`, what it reckons is kept for
- * the next call with the same objects, about 0.7 kB per element and seat.
+ * the next call with the same objects, about 1 kB per element and seat.
  */
 export function heatAtSeat(
   seat: Seat,
@@ -97,33 +123,37 @@ export function heatAtSeat(
     field: heats.map(({ field }) => field),
     head,
     bodyLargest: body,
-    nearInfrared: nearInfraredAt(headPoint(seat), sources, head, obstructions),
+    nearInfrared: nearInfraredAt(headPoint(seat), sources, heats, obstructions),
   }
 }
 
 function largestParts(fluxes: readonly (NetFlux | null)[]): LargestParts {
-  const direction = largestDirection(fluxes)
+  return partsOn(fluxes, largestDirection(fluxes))
+}
+
+/** What each flux gives a plane. */
+function partsOn(fluxes: readonly (NetFlux | null)[], direction: Vec3): LargestParts {
   return { direction, parts: fluxes.map((flux) => (flux ? dot(vectorInFront(flux, direction), direction) : 0)) }
 }
 
 function shadedLargest(point: Vec3, emitters: readonly Emitter[], obstructions: readonly Obstruction[]): LargestParts {
   const { direction } = largestIrradianceAt(emitters, point, obstructions)
-  return { direction, parts: emitters.map((emitter) => irradianceAt(emitter, point, direction, obstructions)) }
+  return { direction, parts: irradianceByEmitter(emitters, point, direction, obstructions) }
 }
 
-/** As at the head, of the near-infrared share of each source; in the same direction where all have the same share. */
+/** A guest looks level: the near-infrared shares of all sources on the vertical plane that receives most of them. */
 function nearInfraredAt(
   point: Vec3,
   sources: readonly Source[],
-  head: LargestParts,
+  heats: readonly ElementHeat[],
   obstructions: readonly Obstruction[],
 ): LargestParts | null {
-  const share = sources[0]?.nearInfrared ?? null
-  if (share !== null && sources.every(({ nearInfrared }) => nearInfrared === share)) {
-    return { direction: head.direction, parts: head.parts.map((part) => part * share) }
+  const emitters = sources.flatMap(({ nearInfraredEmitter }) => nearInfraredEmitter ?? [])
+  if (emitters.length < sources.length) return null
+  if (obstructions.length === 0) {
+    const fluxes = heats.map(({ atEye }) => atEye)
+    return partsOn(fluxes, largestLevelDirection(irradianceByNormal(fluxes)))
   }
-  const dimmed = sources.flatMap(({ nearInfraredEmitter }) => nearInfraredEmitter ?? [])
-  if (dimmed.length < sources.length) return null
-  if (obstructions.length > 0) return shadedLargest(point, dimmed, obstructions)
-  return largestParts(dimmed.map((emitter) => netFluxOf(emitter, point)))
+  const direction = largestLevelDirection(irradianceByNormalAt(emitters, point, obstructions))
+  return { direction, parts: irradianceByEmitter(emitters, point, direction, obstructions) }
 }

@@ -45,9 +45,12 @@ export interface SeatWarmth {
   readonly headHorizontal: number | null
   /** Largest irradiance over all directions at the body's height. */
   readonly bodyLargest: number | null
-  /** Horizontal irradiance at the head ÷ on the body: hot head, cold feet. */
+  /** Horizontal irradiance at the head ÷ on the body: hot head, cold feet. Null without heat on the body. */
   readonly headToBody: number | null
-  /** Largest near-infrared irradiance (0.78–3 µm) over all directions at the eye; null when it cannot be told. */
+  /**
+   * Near-infrared irradiance (0.78–3 µm) at the eye, at the head's height: the largest over all level directions, on
+   * vertical planes, as a guest looks level and not up into a heater. Null when it cannot be told.
+   */
   readonly nearInfraredAtEye: number | null
   readonly target: TargetOutcome
   /** Effective radiant field on the body, W/m² of body surface. */
@@ -118,7 +121,10 @@ export function seatWarmth(input: WarmthInput): SeatWarmth[] {
   return input.site.seats.map((seat) => warmthOfSeat(seat, sources, input).warmth)
 }
 
-/** Elements × seats up to which a layout's heat is kept between calls: 70 MB. */
+/** Less than this on the body is no heat to compare with, W/m². */
+const noHeat = 1e-6
+
+/** Elements × seats up to which a layout's heat is kept between calls: 100 MB. */
 const mostRemembered = 100_000
 
 /** The figures of one seat and, from the same call, what each element gives to them. */
@@ -150,7 +156,7 @@ export function warmthOfSeat(
     headDirection: sources.length > 0 ? heat.head.direction : null,
     headHorizontal,
     bodyLargest: told(heat.bodyLargest.parts),
-    headToBody: body === null || headHorizontal === null || body <= 0 ? null : headHorizontal / body,
+    headToBody: body === null || headHorizontal === null || body < noHeat ? null : headHorizontal / body,
     nearInfraredAtEye: told(heat.nearInfrared?.parts),
     target: targetOutcome(seat, body, brief),
     field,

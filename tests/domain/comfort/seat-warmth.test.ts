@@ -1,5 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
+import type { Brief } from '#app/domain/brief/brief.ts'
 import { layoutTotals, seatWarmth, windNames, type SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import { emitterOf } from '#app/domain/flux/emitter.ts'
 import { irradianceAt, irradianceByEmitter, scalarIrradianceAt } from '#app/domain/flux/irradiance.ts'
@@ -83,10 +84,15 @@ describe('a seat’s figures', () => {
     expect(fieldOf('medium-wave')).toBe(fieldOf('long-wave'))
   })
 
-  it('give the near infrared at the eye as the share of the largest irradiance, null without a temperature', () => {
+  it('give the near infrared at the eye as the share of what falls on a vertical plane, null without a temperature', () => {
+    const share = modelsOf(model({ elementTemperature: 1150 - 273.15 }))
+    const each = one([seat('S1')], twoHeaters, { models: share })
+    const planes = Array.from({ length: 720 }, (_, i) => {
+      const normal = [Math.cos((i * Math.PI) / 360), Math.sin((i * Math.PI) / 360), 0] as const
+      return twoHeaters.reduce((sum, at) => sum + irradianceAt(emitterOf(at, model())!, [0, 0, 1.1], normal), 0)
+    })
     // 0.372 at 1150 K: Planck's law by independent code, ± 0.001
-    const each = one([seat('S1')], twoHeaters, { models: modelsOf(model({ elementTemperature: 1150 - 273.15 })) })
-    expect(Math.abs(each.nearInfraredAtEye! / each.head! - 0.372)).toBeLessThanOrEqual(0.001)
+    expect(Math.abs(each.nearInfraredAtEye! / Math.max(...planes) - 0.372)).toBeLessThanOrEqual(0.001)
     const untold = one([seat('S1')], twoHeaters, { models: modelsOf(model({ elementTemperature: null })) })
     expect(untold.nearInfraredAtEye).toBeNull()
     const mixed = one([seat('S1')], [twoHeaters[0]!, { ...twoHeaters[1]!, model: 'lamp' }], {
@@ -242,6 +248,57 @@ describe('invariances', () => {
       ),
       { numRuns: 300, seed: 3 },
     )
+  })
+})
+
+describe('odd input', () => {
+  const axis = elementCentres(bodyOf(heater('H1'), model()), model())[0]!
+  /** Every number of a seat's warmth and of the totals, wherever it stands. */
+  const numbersIn = (value: unknown): number[] => {
+    if (typeof value === 'number') return [value]
+    return typeof value === 'object' && value !== null ? Object.values(value).flatMap(numbersIn) : []
+  }
+  const atAxis = (dx: number, dz: number) => seat('S1', { x: axis[0] + dx, y: axis[1], headHeight: axis[2] + dz, bodyHeight: axis[2] + dz }) // prettier-ignore
+  it.each<[string, Seat, MountedHeater[], Partial<Brief>]>([
+    ['head and body on the element', atAxis(0, 0), [heater('H1')], {}],
+    ['on the end of the element', atAxis(0.3, 0), [heater('H1')], {}],
+    ['a hundredth of a millimetre under the element', atAxis(0, -1e-5), [heater('H1')], {}],
+    ['inside the housing', atAxis(0.1, -0.02), [heater('H1')], {}],
+    ['in line with the element', atAxis(0.8, 0), [heater('H1')], {}],
+    ['level with the open face', atAxis(0, -0.05), [heater('H1')], {}],
+    ['a heater below the head and above the body', seat('S1'), [heater('H1', { lowestPoint: 0.8 })], {}],
+    ['a heater below the body', seat('S1'), [heater('H1', { lowestPoint: 0.1 })], {}],
+    ['a heater on the floor that looks up', seat('S1'), [heater('H1', { lowestPoint: 0, tiltDeg: 90, y: -1 })], {}],
+    ['no wind at all', seat('S1'), [heater('H1')], { windDesign: 0, windGust: 0 }],
+    ['the hardest wind, no clothes', seat('S1'), [heater('H1')], { windDesign: 15, windGust: 20, clothing: 0 }],
+    ['a beam that hardly reaches the body', seat('S1', { x: 4.9, y: 4.9 }), [heater('H1', { model: 'narrow', x: -5, y: -5, lowestPoint: 0.7 })], {}], // prettier-ignore
+    ['the farthest corner', seat('S1', { x: 1000, y: 1000 }), [heater('H1', { x: -1000, y: -1000 })], {}],
+    ['heaters in one place', seat('S1'), [heater('H1'), heater('H2'), heater('H3')], {}],
+    ['a trickle of voltage', seat('S1'), [heater('H1', { supplyVoltage: 1e-9 })], {}],
+  ])('gives finite figures: %s', (_, at, placed, change) => {
+    const narrow = model({ code: 'narrow', beam: { kind: 'angles', acrossFullAngleDeg: 20, alongFullAngleDeg: 20, source: '' } }) // prettier-ignore
+    const input = {
+      site: site([at]),
+      brief: brief(change),
+      layout: { heaters: placed },
+      models: modelsOf(model(), narrow),
+    }
+    const warmth = seatWarmth(input)
+    const numbers = numbersIn([warmth, layoutTotals(warmth, input.layout, input.models, input.brief)])
+    expect(numbers.length).toBeGreaterThan(30)
+    for (const number of numbers) expect(Number.isFinite(number), String(number)).toBe(true)
+    expect(warmth[0]!.nearInfraredAtEye).toBeGreaterThanOrEqual(0)
+  })
+
+  it('compares the head with the body only where the body gets heat', () => {
+    // 20° of beam, the body 72° off its axis: cos^45 leaves 1e-20 or so
+    const at = seat('S1', { y: 1.5, bodyHeight: 1.5, headHeight: 0.6 })
+    const sliver = heater('H1', { lowestPoint: 1.95, model: 'narrow' })
+    const narrow = model({ code: 'narrow', beam: { kind: 'angles', acrossFullAngleDeg: 20, alongFullAngleDeg: 20, source: '' } }) // prettier-ignore
+    const each = one([at], [sliver], { models: modelsOf(narrow) })
+    expect(each.body).toBeGreaterThan(0)
+    expect(each.body).toBeLessThan(1e-6)
+    expect(each.headToBody).toBeNull()
   })
 })
 
