@@ -12,9 +12,11 @@ const limits = 'tests/published/comfort-limits.test.ts'
 const warmth = 'tests/domain/comfort/seat-warmth.test.ts'
 const field = 'tests/domain/comfort/radiant-field.test.ts'
 const largest = 'tests/domain/comfort/largest-direction.test.ts'
+const level = 'tests/domain/comfort/level-sight.test.ts'
 const explain = 'tests/domain/comfort/explain.test.ts'
 const uncertainty = 'tests/domain/comfort/uncertainty.test.ts'
 const cautions = 'tests/domain/comfort/cautions.test.ts'
+const seatRules = 'tests/domain/rules/seat-rules.test.ts'
 const indoors = 'tests/domain/comfort/indoors.test.ts'
 const units = 'tests/domain/units.test.ts'
 
@@ -80,8 +82,25 @@ export const comfortMutations: readonly Mutation[] = [
     ['strong.slice(0, starts)', 'strong.slice(0, 0)'],
   ),
   ...within(
+    'comfort/level-sight.ts',
+    level,
+    ['cosine * Math.cos(width)', 'cosine * Math.sin(width)'],
+    ['Math.hypot(cosine, sine)', 'Math.max(cosine, sine)'],
+    ['[Math.cos(azimuth), Math.sin(azimuth), 0]', '[Math.cos(azimuth), Math.sin(azimuth), 0.2]'],
+    ['arcs.push(arcOf(cut, arc.to))', ''],
+    ['const mostPlanes = 100', 'const mostPlanes = 8'],
+  ),
+  ...within(
+    'comfort/seat-heat.ts',
+    level,
+    ['atEye: nearInfraredEmitter && netFluxOf(nearInfraredEmitter, head)', 'atEye: netFluxOf(emitter, head)'],
+    ['netFluxOf(nearInfraredEmitter, head)', 'netFluxOf(nearInfraredEmitter, body)'],
+    ['irradianceByNormalAt(emitters, point, obstructions)', 'irradianceByNormalAt(emitters, point)'],
+  ),
+  ...within(
     'comfort/seat-warmth.ts',
     warmth,
+    ['body < noHeat', 'body <= 0'],
     ['if (body < target.low)', 'if (body <= target.low)'],
     ['body > target.high', 'body >= target.high'],
     ['* energy.dutyFraction', ''],
@@ -96,7 +115,15 @@ export const comfortMutations: readonly Mutation[] = [
     ['/ (2 * step)', '/ step'],
     ['sum + part * model.powerVoltageExponent', 'sum + part'],
     ['radiantEfficiency - range.low', 'range.low'],
-    ['move.by * dimension.tolerance', 'dimension.tolerance'],
+    ['tolerances.seat).map', 'tolerances.heaterPosition).map'],
+    ['bodyLargest.direction', 'head.direction'],
+    ['everything ? placeShares', '!everything ? placeShares'],
+  ),
+  ...within(
+    'site/tolerance.ts',
+    uncertainty,
+    ['lever * dimension.tolerance', 'dimension.tolerance'],
+    ['(sum, move) => sum + move.by, 0', '(sum) => sum + 1, 0'],
   ),
   ...within('comfort/uncertainty.ts', explain, ['heat.field.map((field) => field * perField)', '[...heat.field]']),
   ...within(
@@ -105,14 +132,38 @@ export const comfortMutations: readonly Mutation[] = [
     ['whole === 0 ? 0 : value / whole', 'whole === 0 ? 0 : value'],
     ['warmth.feelsLike[figure.wind].before : 0', 'input.brief.airTemperature : 0'],
   ),
-  ...within('comfort/cautions.ts', limits, ['seconds ** -0.75', 'seconds ** -0.5'], ['? 100 :', '? 300 :']),
+  ...within(
+    'comfort/cautions.ts',
+    limits,
+    ['seconds ** -0.75', 'seconds ** -0.5'],
+    ['const continuousLimit = 100', 'const continuousLimit = 300'],
+  ),
   ...within(
     'comfort/cautions.ts',
     cautions,
     ['stayMinutes >= houseRules', 'stayMinutes > houseRules'],
-    ['400 - 10 * Math.max', '400 + 10 * Math.max'],
-    ["...one(stop, 'body', warmth.bodyLargest)", "...one(stop, 'body', warmth.body)"],
+    ['air: 0, limit: 400', 'air: 0, limit: 200'],
+    ['(to.limit - from.limit) * share', '(from.limit - to.limit) * share'],
+    ['airTemperature <= cool.air ?', 'airTemperature <= 25 ?'],
+    ['relaxed ? inAir : published', 'inAir'],
   ),
+  ...within('comfort/cautions.ts', seatRules, [
+    'houseRules.headCautionLongStay : houseRules',
+    'houseRules.headCautionShortStay : houseRules',
+  ]),
+  ...within(
+    'rules/near-infrared.ts',
+    seatRules,
+    ['each > limit', 'each >= limit'],
+    ['cannotTell.length > 0 ? [] :', 'cannotTell.length < 0 ? [] :'],
+  ),
+  ...within(
+    'rules/head-flux.ts',
+    seatRules,
+    ['value: seat.bodyLargest', 'value: seat.body ?? 0'],
+    ["'hard stop', stop, atHeadOrBody", "'hard stop', head, atHeadOrBody"],
+  ),
+  ...within('rules/seat-tolerance.ts', seatRules, ['...shifts.flatMap(({ by }) => by)', '0.04']),
   ...within('comfort/indoors.ts', indoors, ['times * head', 'head'], ['needed / fromAbove', 'needed * fromAbove']),
   ...within(
     'units.ts',

@@ -1,13 +1,12 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
-import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
 
-/** A limit on what falls on a guest, with where it comes from. Irradiances W/m², always by the largest direction. */
+/** A limit on what falls on a guest, with where it comes from. */
 export interface CautionLimit {
-  readonly caution: 'stop line' | 'head' | 'near infrared at the eye'
-  readonly limit: number
-  /** The same limit as it is relaxed in the cold; null where it is not. */
-  readonly relaxed: number | null
+  /** What is judged by, W/m². */
+  readonly value: number
+  /** The published figure where this one is relaxed in the cold; null where it is not. */
+  readonly relaxedFrom: number | null
   readonly source: string
   /** The source's text was not open when the figure was written down: check it before quoting a clause. */
   readonly fromMemory: boolean
@@ -15,82 +14,83 @@ export interface CautionLimit {
   readonly note: string
 }
 
-/** What one limit comes to at one seat. */
-export interface SeatCaution extends CautionLimit {
-  readonly seatId: string
-  readonly at: 'body' | 'head'
-  /** Null when no heater is placed or the figure cannot be told. */
-  readonly irradiance: number | null
-  /** Limit (relaxed where it is) less irradiance; null without the figure. */
-  readonly margin: number | null
+/** The limits that hold for a brief. */
+export interface CautionLimits {
+  /** For the largest irradiance over all directions, at body and head. */
+  readonly stop: CautionLimit
+  /** For the largest irradiance over all directions at the head. */
+  readonly head: CautionLimit
+  /** For the near infrared at the eye of a guest who looks level. */
+  readonly eye: CautionLimit
 }
 
 /** Exposures longer than this count as continuous for the eye, s (ICNIRP). */
 const continuous = 1000
 
-/**
- * Limit of infrared at the eye, 0.78–3 µm, W/m²: 18 t^−0.75 kW/m² for t seconds, 100 W/m² beyond 1,000 s (ICNIRP; the
- * first from memory).
- */
-export const eyeLimit = (seconds: number): number => (seconds > continuous ? 100 : 18_000 * seconds ** -0.75)
+/** The eye's limit for a continuous exposure, W/m² (ICNIRP). */
+const continuousLimit = 100
+
+/** What it is relaxed to in the cold, W/m² at °C (from memory). */
+const cold = { air: 0, limit: 400 }
+const cool = { air: 10, limit: 300 }
 
 /**
- * The continuous limit as relaxed in the cold: 400 W/m² at 0 °C, 300 at 10 °C (from memory), linear between; colder as at
- * 0 °C. Above 10 °C no figure is at hand: null.
+ * Limit of infrared at the eye as published, 0.78–3 µm, W/m²: 18 t^−0.75 kW/m² for t seconds, 100 W/m² beyond 1,000 s
+ * (ICNIRP; the first from memory).
  */
-export const relaxedEyeLimit = (airTemperature: number): number | null =>
-  airTemperature > 10 ? null : 400 - 10 * Math.max(0, airTemperature)
+export const eyeLimit = (seconds: number): number =>
+  seconds > continuous ? continuousLimit : 18_000 * seconds ** -0.75
+
+/**
+ * The continuous limit at an air temperature, °C: 400 W/m² at 0 °C and colder, 300 at 10 °C (from memory), from there
+ * straight down to the published 100 at 25 °C (house rule), so that no degree more or less makes a step.
+ */
+export function eyeLimitInAir(airTemperature: number): number {
+  const warm = { air: houseRules.eyeRelaxedBelow.value, limit: continuousLimit }
+  const [from, to] = airTemperature <= cool.air ? [cold, cool] : [cool, warm]
+  const share = Math.min(1, Math.max(0, (airTemperature - from.air) / (to.air - from.air)))
+  return from.limit + (to.limit - from.limit) * share
+}
 
 /** The house caution at the head by length of stay, W/m². */
-export const headCaution = (stayMinutes: number): number =>
-  stayMinutes >= houseRules.longStayMinutes.value
-    ? houseRules.headCautionLongStay.value
-    : houseRules.headCautionShortStay.value
+export const headCaution = (stayMinutes: number): number => headRule(stayMinutes).value
 
-/** The limits that hold for a brief: the stop line, the house caution and the eye's. */
-export function cautionLimits({ stayMinutes, airTemperature }: Brief): CautionLimit[] {
-  const seconds = stayMinutes * 60
-  const relaxed = seconds > continuous ? relaxedEyeLimit(airTemperature) : null
-  return [
-    {
-      caution: 'stop line',
-      limit: houseRules.irradianceStop.value,
-      relaxed: null,
-      source: houseRules.irradianceStop.source,
+const headRule = (stayMinutes: number) =>
+  stayMinutes >= houseRules.longStayMinutes.value ? houseRules.headCautionLongStay : houseRules.headCautionShortStay
+
+/** The limits that hold for a brief: the one source of every caution on what falls on a guest. */
+export function cautionLimits({ stayMinutes, airTemperature }: Brief): CautionLimits {
+  return {
+    stop: {
+      ...houseRules.irradianceStop,
+      relaxedFrom: null,
       fromMemory: true,
       note: 'Workers, suitably clothed, continuous. It is not a comfort limit and not one for the public.',
     },
-    {
-      caution: 'head',
-      limit: headCaution(stayMinutes),
-      relaxed: null,
-      source: houseRules.headCautionLongStay.source,
+    head: {
+      ...headRule(stayMinutes),
+      relaxedFrom: null,
       fromMemory: false,
       note: 'Covers children and bare skin. An engineer may set another figure.',
     },
-    {
-      caution: 'near infrared at the eye',
-      limit: eyeLimit(seconds),
-      relaxed,
-      source: 'ICNIRP guidelines on incoherent infrared radiation: 100 W/m² beyond 1,000 s; 18 t^−0.75 kW/m² below',
-      fromMemory: true,
-      note: 'Share of 0.78–3 µm by Planck’s law at the element’s temperature, for an eye that looks at the heaters.',
-    },
-  ]
+    eye: eyeCaution(stayMinutes * 60, airTemperature),
+  }
 }
 
-/** Every limit at every height where it holds: the stop line at body and head, the others at the head. */
-export function cautionsAt(warmth: SeatWarmth, brief: Brief): SeatCaution[] {
-  const [stop, head, eye] = cautionLimits(brief)
-  const one = (limit: CautionLimit | undefined, at: SeatCaution['at'], irradiance: number | null): SeatCaution[] => {
-    if (!limit) return []
-    const margin = irradiance === null ? null : (limit.relaxed ?? limit.limit) - irradiance
-    return [{ ...limit, seatId: warmth.seat.id, at, irradiance, margin }]
+/** What a continuous exposure may have, a shorter one may have too: the cold relaxes short stays as far. */
+function eyeCaution(seconds: number, airTemperature: number): CautionLimit {
+  const published = eyeLimit(seconds)
+  const inAir = eyeLimitInAir(airTemperature)
+  const relaxed = inAir > published
+  return {
+    value: relaxed ? inAir : published,
+    relaxedFrom: relaxed ? published : null,
+    source: [
+      'ICNIRP guidelines on incoherent infrared radiation: 100 W/m² beyond 1,000 s; 18 t^−0.75 kW/m² below (from memory)',
+      ...(relaxed ? ['relaxed in the cold to about 400 W/m² at 0 °C and 300 at 10 °C (from memory)'] : []),
+      ...(relaxed && airTemperature > cool.air ? [houseRules.eyeRelaxedBelow.source] : []),
+    ].join('; '),
+    fromMemory: true,
+    note: 'Share of 0.78–3 µm by Planck’s law at the element’s temperature, on a vertical plane: a guest looks level.',
   }
-  return [
-    ...one(stop, 'body', warmth.bodyLargest),
-    ...one(stop, 'head', warmth.head),
-    ...one(head, 'head', warmth.head),
-    ...one(eye, 'head', warmth.nearInfraredAtEye),
-  ]
 }

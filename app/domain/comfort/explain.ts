@@ -108,7 +108,7 @@ export function explainSeat(input: WarmthInput, seatId: string, figure: SeatFigu
     ],
     parts,
     byHeater: heaterShares(parts),
-    tolerance: seatTolerance(input, seat, figure),
+    tolerance: seatTolerance(input, seat, figure, 'everything'),
     cannotTell: all.cannotTell,
   }
 }

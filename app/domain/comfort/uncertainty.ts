@@ -1,24 +1,32 @@
 import { feelsLikePerField } from '#app/domain/comfort/feels-like.ts'
-import { headPoint, heatAtSeat, type SeatHeat } from '#app/domain/comfort/seat-heat.ts'
-import {
-  conditionsAt,
-  warmthOfSeat,
-  type SeatWarmth,
-  type WarmthInput,
-  type WindName,
-} from '#app/domain/comfort/seat-warmth.ts'
+import { bodyPoint, fieldAtSeat, headPoint, heatAtSeat, type SeatHeat } from '#app/domain/comfort/seat-heat.ts'
+import { conditionsAt, type SeatWarmth, type WarmthInput, type WindName } from '#app/domain/comfort/seat-warmth.ts'
 import { sourcesOf, type Source } from '#app/domain/comfort/sources.ts'
+import { surroundingsAt } from '#app/domain/comfort/surroundings.ts'
 import { irradianceAt } from '#app/domain/flux/irradiance.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
 import type { Seat, Site } from '#app/domain/site/site.ts'
+import { shiftsOf } from '#app/domain/site/tolerance.ts'
+import type { Vec3 } from '#app/domain/vector.ts'
 
 /** A figure of a seat whose tolerance is asked for. */
 export type SeatFigure =
   | { readonly quantity: 'body' }
   | { readonly quantity: 'head' }
   | { readonly quantity: 'feels-like'; readonly wind: WindName }
+
+/** Figures that have a tolerance: those, and the largest irradiance at the body's height, which the stop line is about. */
+export type TolerancedFigure = SeatFigure | { readonly quantity: 'body-largest' }
+
+/**
+ * What counts as uncertain. `everything` is for the figure as it will be on an evening: the seat's place, the heaters'
+ * places, their efficiency and the voltage. `seat` is for a rule's margin: the measured sizes that place the seat alone,
+ * as a layout is judged with its heaters where they are drawn and powered by the data sheet, and measuring the site can
+ * settle no more than the site's own sizes.
+ */
+export type Uncertain = 'everything' | 'seat'
 
 /** How exact the things are that a flux rests on: lengths m, efficiency and voltage as shares. */
 export interface FluxTolerances {
@@ -57,13 +65,18 @@ export interface FigureTolerance {
 /** Step of the central differences, m: their error is of the order of (step / distance)². */
 const step = 1e-3
 
-/** A seat's figures and what each element gives to them. */
-type SeatFigures = ReturnType<typeof warmthOfSeat>
-
 /** The figure itself; null without heaters that can be told. */
-export function figureOf(warmth: SeatWarmth, figure: SeatFigure): number | null {
-  if (figure.quantity === 'feels-like') return warmth.feelsLike[figure.wind].after
-  return figure.quantity === 'body' ? warmth.body : warmth.head
+export function figureOf(warmth: SeatWarmth, figure: TolerancedFigure): number | null {
+  switch (figure.quantity) {
+    case 'body':
+      return warmth.body
+    case 'body-largest':
+      return warmth.bodyLargest
+    case 'head':
+      return warmth.head
+    case 'feels-like':
+      return warmth.feelsLike[figure.wind].after
+  }
 }
 
 /** What each source gives to the figure, in the figure's unit: W/m², or K of feels-like. */
@@ -76,91 +89,104 @@ export function figureParts(warmth: SeatWarmth, heat: SeatHeat, figure: SeatFigu
 }
 
 /**
- * Tolerance of a seat's figure to first order: positions and heights of the heaters and of the seat by central
- * differences, radiant efficiency (one error for all heaters of a model) and voltage (one for all) by their parts. Taken
- * as independent. Null without heaters that can be told.
+ * Tolerance of a seat's figure to first order, the things it rests on taken as independent: lengths by central
+ * differences; radiant efficiency (one error for all heaters of a model) and voltage (one for all) by their parts. Null
+ * without heaters that can be told.
  */
 export function seatTolerance(
   input: WarmthInput,
   seat: Seat,
-  figure: SeatFigure,
+  figure: TolerancedFigure,
+  uncertain: Uncertain,
   tolerances: FluxTolerances = defaultFluxTolerances,
 ): FigureTolerance | null {
-  const all = sourcesOf(input.layout, input.models)
-  const { warmth, heat } = warmthOfSeat(seat, all, input)
-  if (figureOf(warmth, figure) === null) return null
-  const parts = figureParts(warmth, heat, figure, input)
+  const { sources } = sourcesOf(input.layout, input.models)
+  if (sources.length === 0) return null
+  const partsOf = partsNear(input, seat, figure, sources)
+  const everything = uncertain === 'everything'
   const shares = [
-    ...input.layout.heaters.flatMap((heater) => placeShares(heater, input, { warmth, heat }, figure, tolerances)),
-    ...seatShares(input, seat, figure, tolerances),
-    ...supplyShares(input, all.sources, parts, tolerances),
+    ...seatShares(input.site, seat, figure, tolerances, (moved) => sum(partsOf(sources, moved))),
+    ...(everything ? placeShares(input, tolerances, (moved) => sum(partsOf(moved, seat))) : []),
+    ...(everything ? supplyShares(input, sources, partsOf(sources, seat), tolerances) : []),
   ]
   const total = Math.hypot(...shares.map(({ change }) => change))
   return { total, shares: shares.toSorted((a, b) => Math.abs(b.change) - Math.abs(a.change)) }
 }
 
-/** Change of a figure per metre of a length, by the central difference. */
-function slope(figureWith: (delta: number) => number | null): number {
-  return ((figureWith(step) ?? 0) - (figureWith(-step) ?? 0)) / (2 * step)
+const sum = (values: readonly number[]): number => values.reduce((total, value) => total + value, 0)
+
+/** What each source gives to a figure, in its unit. */
+type PartsOf = (sources: readonly Source[], seat: Seat) => number[]
+
+/**
+ * The parts of a figure with sources or the seat moved a little. The plane of a largest irradiance stays as it was: to
+ * first order turning it changes nothing.
+ */
+function partsNear(input: WarmthInput, seat: Seat, figure: TolerancedFigure, placed: readonly Source[]): PartsOf {
+  const { brief, obstructions } = input
+  const onPlane =
+    (pointOf: (seat: Seat) => Vec3, normal: Vec3): PartsOf =>
+    (sources, at) =>
+      sources.map(({ emitter }) => irradianceAt(emitter, pointOf(at), normal, obstructions))
+  switch (figure.quantity) {
+    case 'body':
+      return onPlane(bodyPoint, [0, 0, 1])
+    case 'body-largest':
+      return onPlane(bodyPoint, heatAtSeat(seat, placed, obstructions, true).bodyLargest.direction)
+    case 'head':
+      return onPlane(headPoint, heatAtSeat(seat, placed, obstructions, true).head.direction)
+    case 'feels-like': {
+      const perField = feelsLikePerField(
+        conditionsAt(seat, brief, surroundingsAt(seat, input.site, brief), figure.wind),
+      )
+      return (sources, at) => sources.map((source) => perField * fieldAtSeat(source, at, obstructions))
+    }
+  }
 }
 
-/** What one heater gives to the figure. At the head in the direction that is largest for all: to first order it stays. */
-function heaterPart(
-  heater: MountedHeater,
-  input: WarmthInput,
-  { warmth, heat }: SeatFigures,
-  figure: SeatFigure,
-): number {
-  const { sources } = sourcesOf({ heaters: [heater] }, input.models)
-  const point = headPoint(warmth.seat)
-  const parts =
-    figure.quantity === 'head'
-      ? sources.map(({ emitter }) => irradianceAt(emitter, point, heat.head.direction, input.obstructions))
-      : figureParts(warmth, heatAtSeat(warmth.seat, sources, input.obstructions), figure, input)
-  return parts.reduce((sum, part) => sum + part, 0)
-}
+/** Change of a figure per metre of a length, by the central difference. */
+const slope = (figureWith: (delta: number) => number): number => (figureWith(step) - figureWith(-step)) / (2 * step)
 
 function placeShares(
-  heater: MountedHeater,
-  input: WarmthInput,
-  figures: SeatFigures,
-  figure: SeatFigure,
+  { layout, models }: WarmthInput,
   tolerances: FluxTolerances,
+  partOf: (sources: readonly Source[]) => number,
 ): ToleranceShare[] {
-  const share = (of: string, tolerance: number, moved: (delta: number) => MountedHeater): ToleranceShare => ({
-    of: `${heater.id} ${of}`,
-    tolerance,
-    unit: 'm',
-    change: slope((delta) => heaterPart(moved(delta), input, figures, figure)) * tolerance,
+  return layout.heaters.flatMap((heater) => {
+    const share = (of: string, tolerance: number, moved: (delta: number) => MountedHeater): ToleranceShare => ({
+      of: `${heater.id} ${of}`,
+      tolerance,
+      unit: 'm',
+      change: slope((delta) => partOf(sourcesOf({ heaters: [moved(delta)] }, models).sources)) * tolerance,
+    })
+    return [
+      share('x', tolerances.heaterPosition, (delta) => ({ ...heater, x: heater.x + delta })),
+      share('y', tolerances.heaterPosition, (delta) => ({ ...heater, y: heater.y + delta })),
+      share('height', tolerances.heaterHeight, (delta) => ({ ...heater, lowestPoint: heater.lowestPoint + delta })),
+    ]
   })
-  return [
-    share('x', tolerances.heaterPosition, (delta) => ({ ...heater, x: heater.x + delta })),
-    share('y', tolerances.heaterPosition, (delta) => ({ ...heater, y: heater.y + delta })),
-    share('height', tolerances.heaterHeight, (delta) => ({ ...heater, lowestPoint: heater.lowestPoint + delta })),
-  ]
 }
 
-function seatShares(input: WarmthInput, seat: Seat, figure: SeatFigure, tolerances: FluxTolerances): ToleranceShare[] {
-  const sources = sourcesOf(input.layout, input.models)
-  const figureWith = (moved: Seat) => figureOf(warmthOfSeat(moved, sources, input).warmth, figure)
+/** The sizes that place the seat: what one dimension moves, it moves together. */
+function seatShares(
+  site: Site,
+  seat: Seat,
+  figure: TolerancedFigure,
+  tolerances: FluxTolerances,
+  figureAt: (moved: Seat) => number,
+): ToleranceShare[] {
   const height = figure.quantity === 'head' ? 'headHeight' : 'bodyHeight'
-  const share = (coordinate: 'x' | 'y' | typeof height): ToleranceShare => {
-    const tolerance = seatCoordinateTolerance(input.site, seat, coordinate) ?? tolerances.seat
-    const change = slope((delta) => figureWith({ ...seat, [coordinate]: seat[coordinate] + delta })) * tolerance
-    const name = coordinate === height ? 'height' : coordinate
-    return { of: `seat ${seat.id} ${name}`, tolerance, unit: 'm', change }
-  }
-  return [share('x'), share('y'), share(height)]
-}
-
-/** Tolerance of a seat's coordinate from the dimensions that move it; null when none does. */
-function seatCoordinateTolerance(site: Site, seat: Seat, coordinate: string): number | null {
-  const moved = site.dimensions.flatMap((dimension) =>
-    dimension.moves
-      .filter((move) => move.of === 'seat' && move.id === seat.id && move.coordinate === coordinate)
-      .map((move) => move.by * dimension.tolerance),
-  )
-  return moved.length > 0 ? Math.hypot(...moved) : null
+  const coordinates = ['x', 'y', height] as const
+  return shiftsOf(site, { of: 'seat', id: seat.id }, coordinates, tolerances.seat).map(({ label, by }) => {
+    const tolerance = Math.hypot(...by)
+    const moved = (delta: number): Seat => {
+      const [x, y, z] = by.map((shift) => (shift / tolerance) * delta)
+      return { ...seat, x: seat.x + (x ?? 0), y: seat.y + (y ?? 0), [height]: seat[height] + (z ?? 0) }
+    }
+    const names = ['x', 'y', 'height'].filter((_, i) => by[i] !== 0).join(' and ')
+    const of = `seat ${seat.id} ${names}${label === null ? '' : `, ${label}`}`
+    return { of, tolerance, unit: 'm', change: slope((delta) => figureAt(moved(delta))) * tolerance }
+  })
 }
 
 /** Radiant efficiency by model and the voltage of all: the figure is linear in the radiant power of its parts. */

@@ -1,5 +1,4 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
-import { emitterOf } from '#app/domain/flux/emitter.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { bodyOf } from '#app/domain/layout/body.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
@@ -55,16 +54,12 @@ const heaterRules: readonly ((check: HeaterCheck) => Finding | null | readonly F
  */
 export function checkLayout(check: LayoutCheck): Finding[] {
   const { site, brief, layout, models } = check
-  const emitters = layout.heaters.flatMap((heater) => {
-    const model = models.get(heater.model)
-    return (model && model.supplyOptions.length > 0 && emitterOf(heater, model)) || []
-  })
   return inOrder([
     ...siteGiven(check),
     ...layout.heaters.flatMap((heater) => heaterFindings(site, brief, heater, models.get(heater.model))),
-    ...headFlux(check, emitters),
+    ...headFlux(check),
     ...nearInfrared(check),
-    ...seatTarget(check, emitters),
+    ...seatTarget(check),
     ...circuits(check),
   ])
 }

@@ -1,32 +1,33 @@
+import { cautionLimits, type CautionLimit } from '#app/domain/comfort/cautions.ts'
 import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
-import type { Emitter } from '#app/domain/flux/emitter.ts'
-import { irradianceAt } from '#app/domain/flux/irradiance.ts'
+import type { TolerancedFigure } from '#app/domain/comfort/uncertainty.ts'
 import { findingOf, judgedBy, type LayoutCheck, type Rule } from '#app/domain/rules/check.ts'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
-import { seatTolerance } from '#app/domain/rules/seat-tolerance.ts'
-import type { Vec3 } from '#app/domain/vector.ts'
+import { mayReach, toleranceOfSeat } from '#app/domain/rules/seat-tolerance.ts'
 
-/** Below this share of a limit no tolerance of a seat's place (25 mm) can bring a figure to it. */
-const farBelow = 0.85
+/** One figure of a seat that is judged. */
+interface Judged {
+  readonly value: number
+  readonly figure: TolerancedFigure
+}
 
 /**
  * The largest irradiance over all directions at each head against the house caution for the stay (soft), and at head and
  * body against the stop line (hard stop). One finding for each seat that does not pass, and one pass for the hottest.
  */
-export function headFlux(check: LayoutCheck, emitters: readonly Emitter[]): Finding[] {
-  const { brief, warmth } = check
-  const longStay = brief.stayMinutes >= houseRules.longStayMinutes.value
-  const caution = longStay ? houseRules.headCautionLongStay : houseRules.headCautionShortStay
-  const stop = houseRules.irradianceStop
-  return [
-    ...againstLimit(check, emitters, warmth, 'soft', caution, ({ head }) => head),
-    ...againstLimit(check, emitters, warmth, 'hard stop', stop, (seat) => largest(seat.head, seat.bodyLargest)),
-  ]
+export function headFlux(check: LayoutCheck): Finding[] {
+  const { stop, head } = cautionLimits(check.brief)
+  return [...againstLimit(check, 'soft', head, atHead), ...againstLimit(check, 'hard stop', stop, atHeadOrBody)]
 }
 
-const largest = (a: number | null, b: number | null): number | null =>
-  a === null || b === null ? (a ?? b) : Math.max(a, b)
+const atHead = ({ head }: SeatWarmth): Judged | null =>
+  head === null ? null : { value: head, figure: { quantity: 'head' } }
+
+function atHeadOrBody(seat: SeatWarmth): Judged | null {
+  const head = atHead(seat)
+  if (seat.bodyLargest === null || (head && head.value >= seat.bodyLargest)) return head
+  return { value: seat.bodyLargest, figure: { quantity: 'body-largest' } }
+}
 
 const titles = (weight: Finding['weight']): Readonly<Record<Outcome, string>> => {
   const line = weight === 'soft' ? 'the caution' : 'the stop line'
@@ -39,51 +40,36 @@ const titles = (weight: Finding['weight']): Readonly<Record<Outcome, string>> =>
 }
 
 function againstLimit(
-  { site, layout }: LayoutCheck,
-  emitters: readonly Emitter[],
-  warmth: readonly SeatWarmth[],
+  check: LayoutCheck,
   weight: 'soft' | 'hard stop',
-  limit: { readonly value: number; readonly source: string },
-  figureOf: (seat: SeatWarmth) => number | null,
+  limit: CautionLimit,
+  judgedOf: (seat: SeatWarmth) => Judged | null,
 ): Finding[] {
+  const { layout, warmth } = check
   if (layout.heaters.length === 0) return []
   const rule = (subject: Finding['subject']): Rule => ({ rule: 'head-flux', weight, subject, source: limit.source, unit: 'W/m²' }) // prettier-ignore
   const whole = { kind: 'layout', id: 'layout' } as const
+  const remedy = 'Raise, move or tilt the nearest heater, or use a lower stage.'
   const findings: Finding[] = []
-  let hottest: { seat: SeatWarmth; value: number } | null = null
-  for (const seat of warmth) {
-    const value = figureOf(seat)
-    if (value === null) continue
-    if (!hottest || value > hottest.value) hottest = { seat, value }
-    if (value < farBelow * limit.value) continue
-    const tolerance = seatTolerance(site, seat.seat, 'headHeight', value, figureNear(emitters, seat, value))
-    const figures = { value, limit: limit.value, margin: limit.value - value, tolerance, remedy: 'Raise, move or tilt the nearest heater, or use a lower stage.' } // prettier-ignore
-    const finding = judgedBy(rule({ kind: 'seat', id: seat.seat.id }), titles(weight), figures)
+  let hottest: number | null = null
+  for (const warm of warmth) {
+    const judged = judgedOf(warm)
+    if (!judged) continue
+    const { value, figure } = judged
+    hottest = Math.max(hottest ?? value, value)
+    if (value < limit.value && !mayReach(check, warm.seat, figure, value, limit.value)) continue
+    const tolerance = toleranceOfSeat(check, warm.seat, figure)
+    const found = { value, limit: limit.value, margin: limit.value - value, tolerance, remedy }
+    const finding = judgedBy(rule({ kind: 'seat', id: warm.seat.id }), titles(weight), found)
     if (finding.outcome !== 'pass') findings.push(finding)
   }
   const missing = warmth.length === 0 || hottest === null || warmth.some(({ cannotTell }) => cannotTell.length > 0)
   if (missing) {
-    const remedy = warmth.length === 0 ? 'Add the seats.' : 'Give every heater a model with beam data.'
-    return [...findings, findingOf(rule(whole), 'cannot tell', { title: titles(weight)['cannot tell'], remedy })]
+    const missingData = warmth.length === 0 ? 'Add the seats.' : 'Give every heater a model with beam data.'
+    const found = { title: titles(weight)['cannot tell'], remedy: missingData }
+    return [...findings, findingOf(rule(whole), 'cannot tell', found)]
   }
-  if (findings.length > 0 || !hottest) return findings
-  const margin = limit.value - hottest.value
-  return [
-    findingOf(rule(whole), 'pass', { title: titles(weight).pass, value: hottest.value, limit: limit.value, margin }),
-  ]
-}
-
-/**
- * The figure at points near the head, in the direction that was the largest there: to first order the largest in any
- * direction, because turning away from that direction changes nothing to first order. Scaled to the figure at the head.
- */
-function figureNear(
-  emitters: readonly Emitter[],
-  { seat, headDirection }: SeatWarmth,
-  value: number,
-): (point: Vec3) => number {
-  const direction = headDirection ?? [0, 0, 1]
-  const at = (point: Vec3) => emitters.reduce((sum, emitter) => sum + irradianceAt(emitter, point, direction), 0)
-  const nominal = at([seat.x, seat.y, seat.headHeight])
-  return (point) => (nominal > 0 ? (value * at(point)) / nominal : value)
+  if (findings.length > 0 || hottest === null) return findings
+  const figures = { value: hottest, limit: limit.value, margin: limit.value - hottest }
+  return [findingOf(rule(whole), 'pass', { title: titles(weight).pass, ...figures })]
 }

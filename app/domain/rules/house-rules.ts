@@ -21,6 +21,8 @@ export const houseRules = {
     1580,
     'API Standard 521 (workers, suitably clothed, continuous; from memory); not a comfort or public limit',
   ),
+  /** Air temperature from which the eye's limit for near infrared is not relaxed, °C. */
+  eyeRelaxedBelow: rule(25, 'house rule: from 300 W/m² at 10 °C straight down to 100 at 25 °C'),
   /** Threshold of spread and overlap, W/m². */
   overlapThreshold: rule(80),
   /** Tolerance of a coordinate that no dimension moves, m. */

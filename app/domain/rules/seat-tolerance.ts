@@ -1,26 +1,29 @@
-import type { Seat, Site } from '#app/domain/site/site.ts'
-import type { Vec3 } from '#app/domain/vector.ts'
+import { seatTolerance, type TolerancedFigure } from '#app/domain/comfort/uncertainty.ts'
+import type { LayoutCheck } from '#app/domain/rules/check.ts'
+import { houseRules } from '#app/domain/rules/house-rules.ts'
+import type { Seat } from '#app/domain/site/site.ts'
 import { shiftsOf } from '#app/domain/site/tolerance.ts'
 
 /**
- * Combined tolerance of a figure at one height of a seat, from the sizes that place the seat; the heaters stay where they
- * are. `nominal` is the figure at the point as it is. The larger change of the two ways counts, as in `toleranceOf`.
+ * Share by which an irradiance changes at the most per metre of its place; more only within about half a metre of an
+ * element, where E ∝ 1/h².
  */
-export function seatTolerance(
-  site: Site,
+const steepest = 4
+
+/** Tolerance of a seat's figure from the sizes that place the seat, W/m²; null when it cannot be told. */
+export const toleranceOfSeat = (check: LayoutCheck, seat: Seat, figure: TolerancedFigure): number | null =>
+  seatTolerance(check, seat, figure, 'seat')?.total ?? null
+
+/** Whether the sizes that place the seat could bring a figure to the limit: else its tolerance need not be found. */
+export function mayReach(
+  { site }: LayoutCheck,
   seat: Seat,
-  height: 'bodyHeight' | 'headHeight',
-  nominal: number,
-  figureAt: (point: Vec3) => number,
-): number {
-  let squares = 0
-  for (const [dx = 0, dy = 0, dz = 0] of shiftsOf(site, { of: 'seat', id: seat.id }, ['x', 'y', height])) {
-    if (dx === 0 && dy === 0 && dz === 0) continue
-    const changes = [1, -1].map((sign) => {
-      const point: Vec3 = [seat.x + sign * dx, seat.y + sign * dy, seat[height] + sign * dz]
-      return Math.abs(figureAt(point) - nominal)
-    })
-    squares += Math.max(...changes) ** 2
-  }
-  return Math.sqrt(squares)
+  { quantity }: TolerancedFigure,
+  value: number,
+  limit: number,
+): boolean {
+  const height = quantity === 'head' ? 'headHeight' : 'bodyHeight'
+  const shifts = shiftsOf(site, { of: 'seat', id: seat.id }, ['x', 'y', height], houseRules.tolerance.value)
+  const most = steepest * Math.hypot(...shifts.flatMap(({ by }) => by))
+  return Math.abs(limit - value) <= most * Math.max(limit, value)
 }

@@ -5,6 +5,19 @@ import type { Dimension, Site } from '#app/domain/site/site.ts'
 /** Facts of a thing that are numbers but no sizes. */
 const noSizes = new Set(['allowedPointLoad', 'transmittance', 'turnDeg', 'facingDeg'])
 
+/** Where a site keeps the things of each kind. */
+const listOf = {
+  cover: 'covers',
+  member: 'members',
+  wall: 'walls',
+  pole: 'poles',
+  obstacle: 'obstacles',
+  table: 'tables',
+  seat: 'seats',
+} as const
+
+const kinds = ['cover', 'member', 'wall', 'pole', 'obstacle', 'table', 'seat'] as const
+
 /** Dotted paths of every size inside a thing. A swing of nothing is no size: nothing moves there. */
 function sizesWithin(value: unknown, path: readonly string[]): string[] {
   const last = path.at(-1) ?? ''
@@ -14,25 +27,7 @@ function sizesWithin(value: unknown, path: readonly string[]): string[] {
 }
 
 function thing(site: Site, { of, id }: ThingOf): unknown {
-  const named = (things: readonly { id: string }[]) => things.find((candidate) => candidate.id === id)
-  switch (of) {
-    case 'floor':
-      return site.floor
-    case 'cover':
-      return named(site.covers)
-    case 'member':
-      return named(site.members)
-    case 'wall':
-      return named(site.walls)
-    case 'pole':
-      return named(site.poles)
-    case 'obstacle':
-      return named(site.obstacles)
-    case 'table':
-      return named(site.tables)
-    case 'seat':
-      return named(site.seats)
-  }
+  return of === 'floor' ? site.floor : site[listOf[of]].find((candidate) => candidate.id === id)
 }
 
 /** One uncertain size and both sites that it may make of a site, its value lower and higher by its tolerance. */
@@ -72,24 +67,37 @@ function dimensionsOf(site: Site, about: ThingOf): readonly MovesThing[] {
   return index.get(keyOf(about)) ?? []
 }
 
+/** One uncertain size as it shifts some coordinates of a thing, all together, m. */
+interface Shift {
+  /** The dimension's label; null for a coordinate that no dimension moves. */
+  readonly label: string | null
+  /** By how much each coordinate moves when the size is longer by its tolerance, in the order asked for. */
+  readonly by: readonly number[]
+}
+
 /**
- * How uncertain sizes shift some coordinates of a thing: for each dimension, and each of the coordinates that none
- * moves, the shifts of all of them together when it is longer by its tolerance, m.
+ * How uncertain sizes shift some coordinates of a thing: each dimension that moves it by its own tolerance, and each of
+ * the coordinates that none moves by `bareTolerance`. Sizes that shift nothing are left out.
  */
-export function shiftsOf(site: Site, about: ThingOf, coordinates: readonly string[]): number[][] {
+export function shiftsOf(
+  site: Site,
+  about: ThingOf,
+  coordinates: readonly string[],
+  bareTolerance: number,
+): readonly Shift[] {
   const dimensions = dimensionsOf(site, about)
-  const shifts = dimensions.map(({ dimension, moves }) =>
-    coordinates.map((coordinate) => {
-      const by = moves.filter((move) => move.coordinate === coordinate).reduce((sum, move) => sum + move.by, 0)
-      return by * dimension.tolerance
-    }),
-  )
-  const moved = new Set(dimensions.flatMap(({ moves }) => moves.map(({ coordinate }) => coordinate)))
-  const bare = coordinates.flatMap((coordinate, i) => {
-    if (moved.has(coordinate)) return []
-    return [coordinates.map((_, k) => (k === i ? houseRules.tolerance.value : 0))]
+  const shifts = dimensions.map(({ dimension, moves }): Shift => {
+    const by = coordinates.map((coordinate) =>
+      moves.filter((move) => move.coordinate === coordinate).reduce((sum, move) => sum + move.by, 0),
+    )
+    return { label: dimension.label, by: by.map((lever) => lever * dimension.tolerance) }
   })
-  return [...shifts, ...bare]
+  const moved = new Set(dimensions.flatMap(({ moves }) => moves.map(({ coordinate }) => coordinate)))
+  const bare = coordinates.flatMap((coordinate, i): Shift[] => {
+    if (moved.has(coordinate)) return []
+    return [{ label: null, by: coordinates.map((_, k) => (k === i ? bareTolerance : 0)) }]
+  })
+  return [...shifts, ...bare].filter(({ by }) => by.some((shift) => shift !== 0))
 }
 
 const doubtsOfThing = new WeakMap<Site, Map<string, readonly Doubt[]>>()
@@ -145,17 +153,7 @@ function keptFor<K, V>(kept: WeakMap<Site, Map<K, V>>, site: Site): Map<K, V> {
 
 /** Every thing of a site that has sizes. */
 function thingsOf(site: Site): ThingOf[] {
-  const named = (of: ThingOf['of'], things: readonly { id: string }[]) => things.map(({ id }): ThingOf => ({ of, id }))
-  return [
-    { of: 'floor', id: '' },
-    ...named('cover', site.covers),
-    ...named('member', site.members),
-    ...named('wall', site.walls),
-    ...named('pole', site.poles),
-    ...named('obstacle', site.obstacles),
-    ...named('table', site.tables),
-    ...named('seat', site.seats),
-  ]
+  return [{ of: 'floor', id: '' }, ...kinds.flatMap((of) => site[listOf[of]].map(({ id }): ThingOf => ({ of, id })))]
 }
 
 /**

@@ -1,21 +1,17 @@
 import { describe, expect, it } from 'vitest'
-import { cautionLimits, cautionsAt, eyeLimit, headCaution, relaxedEyeLimit } from '#app/domain/comfort/cautions.ts'
-import { seatWarmth } from '#app/domain/comfort/seat-warmth.ts'
-import { brief, heater, model, modelsOf, seat, site } from '#tests/domain/comfort/terrace.ts'
-
-const warmth = (heaters = [heater('H1', { x: 1, tiltDeg: 20 })], change = {}) =>
-  seatWarmth({ site: site([seat('S1')]), brief: brief(), layout: { heaters }, models: modelsOf(model(change)) })[0]!
+import { cautionLimits, eyeLimit, eyeLimitInAir, headCaution } from '#app/domain/comfort/cautions.ts'
+import { brief } from '#tests/domain/comfort/terrace.ts'
 
 describe('limits on what falls on a guest', () => {
   it('are data with a source, and say what is from memory', () => {
-    const limits = cautionLimits(brief({ stayMinutes: 90, airTemperature: 8 }))
-    expect(limits.map(({ caution, limit, relaxed }) => [caution, limit, relaxed])).toEqual([
-      ['stop line', 1580, null],
-      ['head', 600, null],
-      ['near infrared at the eye', 100, 320],
+    const { stop, head, eye } = cautionLimits(brief({ stayMinutes: 90, airTemperature: 8 }))
+    expect([stop, head, eye].map(({ value, relaxedFrom }) => [value, relaxedFrom])).toEqual([
+      [1580, null],
+      [600, null],
+      [320, 100],
     ])
-    for (const { source, note } of limits) expect(source.length * note.length).toBeGreaterThan(100)
-    expect(limits.map(({ fromMemory }) => fromMemory)).toEqual([true, false, true])
+    for (const { source, note } of [stop, head, eye]) expect(source.length * note.length).toBeGreaterThan(100)
+    expect([stop, head, eye].map(({ fromMemory }) => fromMemory)).toEqual([true, false, true])
   })
 
   // house caution: 600 W/m² for a long stay, 1,000 for a short one; a stay is long from 30 minutes
@@ -23,50 +19,54 @@ describe('limits on what falls on a guest', () => {
     [29, 1000],
     [30, 600],
     [31, 600],
-  ])('a stay of %d minutes has %d W/m² at the head', (minutes, limit) => {
-    expect(headCaution(minutes)).toBe(limit)
+  ])('a stay of %d minutes has %d W/m² at the head', (stayMinutes, limit) => {
+    expect(headCaution(stayMinutes)).toBe(limit)
+    expect(cautionLimits(brief({ stayMinutes })).head.value).toBe(limit)
   })
+})
 
-  // from memory: about 300 W/m² at 10 °C, 400 at 0 °C; nothing above
+describe('the eye’s limit in the cold', () => {
+  // from memory: about 300 W/m² at 10 °C, 400 at 0 °C; house rule: from 10 °C straight down to 100 at 25 °C
   it.each([
     [-10, 400],
     [0, 400],
     [5, 350],
     [10, 300],
-    [10.1, null],
-    [20, null],
-  ])('the eye’s limit at %d °C is relaxed to %s', (airTemperature, limit) => {
-    expect(relaxedEyeLimit(airTemperature)).toBe(limit)
+    [17.5, 200],
+    [25, 100],
+    [35, 100],
+  ])('at %d °C is %d W/m² for a continuous exposure', (airTemperature, limit) => {
+    expect(eyeLimitInAir(airTemperature)).toBeCloseTo(limit, 9)
+    expect(cautionLimits(brief({ airTemperature })).eye.value).toBeCloseTo(limit, 9)
   })
 
-  it('the eye’s limit is relaxed only for a stay beyond 1,000 s', () => {
-    const [, , eye] = cautionLimits(brief({ stayMinutes: 10, airTemperature: 0 }))
-    expect(eye).toMatchObject({ relaxed: null })
-    expect(eye!.limit).toBeCloseTo(eyeLimit(600), 10)
-  })
-})
-
-describe('cautions at a seat', () => {
-  it('judge body, head and eye by the largest direction', () => {
-    const given = brief({ airTemperature: 20 })
-    const each = warmth()
-    const cautions = cautionsAt(each, given)
-    expect(cautions.map(({ caution, at, irradiance }) => [caution, at, irradiance])).toEqual([
-      ['stop line', 'body', each.bodyLargest],
-      ['stop line', 'head', each.head],
-      ['head', 'head', each.head],
-      ['near infrared at the eye', 'head', each.nearInfraredAtEye],
-    ])
-    for (const { margin, limit, irradiance } of cautions) expect(margin).toBeCloseTo(limit - irradiance!, 9)
-    const relaxed = cautionsAt(each, brief({ airTemperature: 0 })).at(-1)!
-    expect(relaxed.margin).toBeCloseTo(400 - each.nearInfraredAtEye!, 9)
+  it('never steps: a tenth of a degree is at most 1.4 W/m², and warmer air never allows more', () => {
+    for (let tenths = -300; tenths < 350; tenths++) {
+      const fall = eyeLimitInAir(tenths / 10) - eyeLimitInAir((tenths + 1) / 10)
+      expect(fall).toBeGreaterThanOrEqual(-1e-9)
+      expect(fall).toBeLessThan(1.4)
+    }
   })
 
-  it('cannot tell without a heater or without the element’s temperature', () => {
-    expect(
-      cautionsAt(warmth([]), brief()).every(({ irradiance, margin }) => irradiance === null && margin === null),
-    ).toBe(true)
-    const untold = cautionsAt(warmth([heater('H1')], { elementTemperature: null }), brief())
-    expect(untold.map(({ margin }) => margin === null)).toEqual([false, false, false, true])
+  it('names memory and house rule only where they hold', () => {
+    const sourceAt = (airTemperature: number) => cautionLimits(brief({ airTemperature })).eye.source
+    expect(sourceAt(30)).not.toMatch(/relaxed|house rule/)
+    expect(sourceAt(5)).toMatch(/relaxed in the cold.*from memory/)
+    expect(sourceAt(5)).not.toMatch(/house rule/)
+    expect(sourceAt(15)).toMatch(/relaxed in the cold.*house rule/)
+  })
+
+  it('holds for shorter stays too: staying longer never allows more', () => {
+    for (const airTemperature of [-5, 8, 16, 30]) {
+      const limits = Array.from(
+        { length: 60 },
+        (_, i) => cautionLimits(brief({ airTemperature, stayMinutes: i + 1 })).eye,
+      )
+      limits.slice(1).forEach(({ value }, i) => expect(value).toBeLessThanOrEqual(limits[i]!.value))
+    }
+    const short = cautionLimits(brief({ stayMinutes: 2, airTemperature: 0 })).eye
+    expect(short).toMatchObject({ value: eyeLimit(120), relaxedFrom: null })
+    const longer = cautionLimits(brief({ stayMinutes: 10, airTemperature: 0 })).eye
+    expect(longer).toMatchObject({ value: 400, relaxedFrom: eyeLimit(600) })
   })
 })

@@ -7,6 +7,7 @@ import {
   seatTolerance,
   type FluxTolerances,
   type SeatFigure,
+  type TolerancedFigure,
 } from '#app/domain/comfort/uncertainty.ts'
 import type { Seat } from '#app/domain/site/site.ts'
 import { demoModels, demoSites } from '#drizzle/seed/demo-sites.ts'
@@ -28,7 +29,7 @@ function normalFrom(seed: number): () => number {
 function bySampling(
   input: WarmthInput,
   at: Seat,
-  figures: readonly SeatFigure[],
+  figures: readonly TolerancedFigure[],
   tolerances: FluxTolerances,
   runs: number,
 ): number[] {
@@ -88,8 +89,21 @@ describe('first-order tolerance against a seeded Monte Carlo', () => {
     const at = input.site.seats[index]!
     const sampled = bySampling(input, at, figures, defaultFluxTolerances, 3000)
     figures.forEach((figure, i) => {
-      const first = seatTolerance(input, at, figure)!
+      const first = seatTolerance(input, at, figure, 'everything')!
       expect(Math.abs(first.total / sampled[i]! - 1), figure.quantity).toBeLessThan(0.05)
+    })
+  })
+
+  const seatAlone: FluxTolerances = { heaterPosition: 0, heaterHeight: 0, seat: 0.025, efficiency: 0, voltage: 0 }
+  const atPlace: TolerancedFigure[] = [{ quantity: 'body' }, { quantity: 'head' }, { quantity: 'body-largest' }]
+  it.each(cases)('site $key variant $number, seat $index: from the seat’s place alone', ({ key, number, index }) => {
+    const input = demo(key, number)
+    const at = input.site.seats[index]!
+    const sampled = bySampling(input, at, atPlace, seatAlone, 2000)
+    atPlace.forEach((figure, i) => {
+      const first = seatTolerance(input, at, figure, 'seat')!
+      expect(Math.abs(first.total / sampled[i]! - 1), figure.quantity).toBeLessThan(0.06)
+      expect(first.total).toBeCloseTo(seatTolerance(input, at, figure, 'everything', seatAlone)!.total, 9)
     })
   })
 
@@ -99,7 +113,7 @@ describe('first-order tolerance against a seeded Monte Carlo', () => {
     const none = { heaterPosition: 0, heaterHeight: 0, seat: 0, efficiency: 0, voltage: 0 }
     for (const only of Object.keys(none)) {
       const tolerances = { ...none, [only]: 0.02 }
-      const first = seatTolerance(input, at, { quantity: 'body' }, tolerances)!
+      const first = seatTolerance(input, at, { quantity: 'body' }, 'everything', tolerances)!
       const [sampled = 0] = bySampling(input, at, [{ quantity: 'body' }], tolerances, 2000)
       expect(Math.abs(first.total / sampled - 1), only).toBeLessThan(0.06)
     }
@@ -115,7 +129,7 @@ describe('tolerance of a seat’s figure', () => {
     ...change,
   })
   const of = (given: WarmthInput, tolerances?: FluxTolerances) =>
-    seatTolerance(given, given.site.seats[0]!, { quantity: 'body' }, tolerances)!
+    seatTolerance(given, given.site.seats[0]!, { quantity: 'body' }, 'everything', tolerances)!
   const share = (given: WarmthInput, name: RegExp) => of(given).shares.find((each) => name.test(each.of))!
 
   it('is the root of the sum of the squares of its shares, the largest first', () => {
@@ -163,8 +177,29 @@ describe('tolerance of a seat’s figure', () => {
     expect(share(given, /S1 y/).tolerance).toBe(0.025)
   })
 
+  it('moves together what one dimension moves: along a diagonal by both slopes at once', () => {
+    const by = { of: 'seat' as const, id: 'S1', by: 1 }
+    const diagonal = {
+      id: 'D1',
+      label: 'diagonal',
+      value: 4,
+      tolerance: 0.025,
+      source: 'guessed' as const,
+      note: null,
+      moves: [
+        { ...by, coordinate: 'x' },
+        { ...by, coordinate: 'y' },
+      ],
+    }
+    const given = input({ site: site([seat('S1', { x: 0.4, y: 0.3 })], { dimensions: [diagonal] }) })
+    const apart = share(input(), /S1 x/).change + share(input(), /S1 y/).change
+    expect(share(given, /S1 x and y, diagonal/).change).toBeCloseTo(apart, 4)
+    expect(of(given).shares.filter((each) => /S1/.test(each.of))).toHaveLength(2)
+  })
+
   it('is null without heaters that can be told', () => {
     const bare = input({ layout: { heaters: [] } })
-    expect(seatTolerance(bare, bare.site.seats[0]!, { quantity: 'body' })).toBeNull()
+    expect(seatTolerance(bare, bare.site.seats[0]!, { quantity: 'body' }, 'everything')).toBeNull()
+    expect(seatTolerance(bare, bare.site.seats[0]!, { quantity: 'head' }, 'seat')).toBeNull()
   })
 })
