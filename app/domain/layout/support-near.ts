@@ -1,27 +1,17 @@
-import type { HeaterModel, Mount } from '#app/domain/heaters/heater-model.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
-import { reachOf, supportPlaces } from '#app/domain/layout/supports.ts'
+import { closeEnough, reachOf, supportPlaces } from '#app/domain/layout/supports.ts'
 import type { Site } from '#app/domain/site/site.ts'
-
-/** Plan distance within which a mount without a stated reach takes a support, m (house rule). */
-const plainReach: Record<Mount, number> = {
-  chain: 0.1,
-  'drop rods': 0.1,
-  'ceiling bracket': 0.1,
-  'beam clamp': 0.1,
-  'wall bracket': 0.25,
-  'pole clamp': 0.25,
-  'recess box': 0.5,
-}
 
 /**
  * The support a heater would be fixed to where it is: its own while that is in reach, else the nearest in reach, else
- * null. Whether it may hang there is for the rules.
+ * null. Where no reach is stated, or no model is known, the nearest. Whether it may hang there is for the rules.
  */
 export function supportNear(site: Site, heater: MountedHeater, model: HeaterModel | undefined): string | null {
-  const reach = (model && reachOf(model, heater.mount)) ?? plainReach[heater.mount]
+  const reach = (model && reachOf(model, heater.mount)) ?? null
   const places = supportPlaces(site, heater.mount, [heater.x, heater.y])
-  const within = places.filter((support) => support.distance <= reach + 1e-9)
+  if (reach === null) return places[0]?.id ?? null
+  const within = places.filter((support) => support.distance <= reach + closeEnough)
   const own = within.find((support) => support.id === heater.memberId)
   return own?.id ?? within[0]?.id ?? null
 }

@@ -69,7 +69,7 @@ const kindOf: Record<Mount, SupportPlace['kind']> = {
 }
 
 /** Distances within this of a reach count as within it, m. */
-const closeEnough = 1e-9
+export const closeEnough = 1e-9
 
 /** Angles smaller than this are level, degrees. */
 const levelDeg = 1e-6
