@@ -40,6 +40,8 @@ const protect: MiddlewareFunction<Response> = async ({ context }, next) => {
 const limitBody: MiddlewareFunction<Response> = ({ request, pattern }) => {
   if (!request.body) return
   const said = request.headers.get('Content-Length')
+  // HTTP/1.1: a request without either header has no body, whatever stream the server hands over (RFC 9112, 6.3).
+  if (said === null && request.headers.get('Transfer-Encoding') === null) return
   if (said === null) throw refused(411, 'Say how long the body is (Content-Length).')
   const upload = !isOpen(pattern) && request.headers.get('Content-Type')?.startsWith('multipart/form-data')
   const most = upload ? mostBytes.upload : mostBytes.other
