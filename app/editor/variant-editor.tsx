@@ -3,6 +3,7 @@ import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
+import { largestTolerance } from '#app/domain/site/tolerance.ts'
 import { irradianceScale } from '#app/drawing/heat/quantity.ts'
 import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
 import { IconButton } from '#app/components/button.tsx'
@@ -81,6 +82,7 @@ export function VariantEditor(props: VariantEditorProps) {
   const figures = useFigures({ site, brief, layout, models, shade: choice.shade })
   const scale = useMemo(() => scaleOf(choice, brief, site.displayUnits), [choice, brief, site])
   const moving = state.draft !== null
+  const coverTolerance = useMemo(() => toleranceOfCovers(site), [site])
   const question = useMemo(
     () => mapQuestion({ site, brief, layout, models, choice }, scale, moving ? 'coarse' : 'sharp'),
     [site, brief, layout, models, choice, scale, moving],
@@ -219,12 +221,12 @@ export function VariantEditor(props: VariantEditorProps) {
             warmth={figures.warmth}
             cuts={withSections ? cuts : noCuts}
             words={room === 'desk'}
-            coverTolerance={null}
+            coverTolerance={coverTolerance}
             onPlace={editor.placeAt}
             onSeat={explain}
           />
           {withSections && (
-            <div className="h-55 flex-none border-t border-[#26324c]">
+            <div className="h-[clamp(9rem,24dvh,13.75rem)] flex-none border-t border-[#26324c]">
               <Sections
                 {...{ site, models, cuts }}
                 layout={kept}
@@ -239,6 +241,12 @@ export function VariantEditor(props: VariantEditorProps) {
       </div>
     </JobFrame>
   )
+}
+
+/** The largest ± of the heights of a site's covers, m; null without a cover. */
+function toleranceOfCovers(site: Site): number | null {
+  const each = site.covers.map(({ id }) => largestTolerance(site, { of: 'cover', id }))
+  return each.length > 0 ? Math.max(...each) : null
 }
 
 /** Ctrl or Cmd with Z and Y anywhere on the page that is not a field. */

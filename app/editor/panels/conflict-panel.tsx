@@ -37,10 +37,12 @@ export function ConflictPanel({ conflict, units, onSettle, onTwoVariants }: Conf
       aria-labelledby="conflict-title"
       className="m-3 rounded-md border border-rule-strong bg-paper-raised px-4 py-3.5"
     >
-      <h2 id="conflict-title" className="text-sm font-strong" role="alert">
-        This variant was changed {who}
-        {when}
-      </h2>
+      <div role="alert">
+        <h2 id="conflict-title" className="text-sm font-strong">
+          This variant was changed {who}
+          {when}
+        </h2>
+      </div>
       <p className="mt-0.5 text-ink-2">
         {merge.conflicts.length === 0 && !merge.title
           ? 'You changed other things. Both go together.'

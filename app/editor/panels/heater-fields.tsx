@@ -175,7 +175,7 @@ function TiltField({ heaters, model, set }: PartProps & { model: HeaterModel | u
           onClick={() => set({ tiltDeg: -(tilt ?? 0) })}
           className="min-h-6 cursor-pointer text-left text-2xs text-ink-2 underline hover:text-ink pointer-coarse:min-h-11"
         >
-          To the {side}: other side
+          {side}: other side
         </button>
       )}
     </div>

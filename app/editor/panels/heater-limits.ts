@@ -25,14 +25,14 @@ export function wrongTilt(degrees: number, model: HeaterModel): string | null {
     : `Tilt ${limits.min} to ${limits.max}° by the manual of ${shortName(model)}.`
 }
 
-/** Where a tilted beam goes on the plan, in a word; null when it goes straight down. */
+/** Where a tilted beam goes on the plan, in words; null when it goes straight down. */
 export function beamSide(heater: MountedHeater): string | null {
   if (heater.tiltDeg === 0) return null
   const turn = radians(heater.turnDeg)
   const sign = Math.sign(heater.tiltDeg)
   const [x, y] = [-Math.sin(turn) * sign, Math.cos(turn) * sign]
-  if (Math.abs(x) >= Math.abs(y)) return x > 0 ? 'right' : 'left'
-  return y > 0 ? 'up' : 'down'
+  if (Math.abs(x) >= Math.abs(y)) return x > 0 ? 'To the right' : 'To the left'
+  return y > 0 ? 'Up the plan' : 'Down the plan'
 }
 
 /** "1.90–2.70": the manual's range of the lowest point, for the right end of a label. */

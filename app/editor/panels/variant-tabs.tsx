@@ -29,6 +29,10 @@ interface VariantTabsProps {
 export function VariantTabs(props: VariantTabsProps) {
   const { variants, currentId, title, readOnly, children } = props
   const [renaming, setRenaming] = useState(false)
+  const list = useRef<HTMLDivElement>(null)
+  useEffect(() => {
+    list.current?.querySelector('[aria-current=page]')?.scrollIntoView({ block: 'nearest', inline: 'nearest' })
+  }, [currentId])
   const tabs = variants.map((variant) => ({
     to: variant.href,
     label: (
@@ -41,7 +45,7 @@ export function VariantTabs(props: VariantTabsProps) {
   }))
   return (
     <div className="flex min-h-10 flex-wrap items-center gap-x-2 border-b border-rule bg-paper-raised px-2 wide-tablet:h-10 wide-tablet:flex-nowrap print:hidden">
-      <div className="h-10 min-w-0 overflow-x-auto pointer-coarse:h-11">
+      <div ref={list} className="h-10 min-w-0 overflow-x-auto pointer-coarse:h-11">
         <TabNav label="Variants" tabs={tabs} />
       </div>
       {!readOnly && (
