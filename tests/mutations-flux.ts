@@ -126,10 +126,13 @@ export const fluxMutations: readonly Mutation[] = [
     ['caster.radius * k]', 'caster.radius]'],
     ['gap / (source[2] - a[2])', 'gap / (source[2] + a[2])'],
   ),
-  ...within('domain/flux/shaded-cells.ts', shading, ['* (upper - lower)', '* (upper + lower)']),
+  ...within('domain/flux/shaded-cells.ts', shading, ['top - piece * step', 'top + piece * step']),
   ...within('domain/flux/nodes.ts', nodes, ['const eta = 2 * heightByLength', 'const eta = 4 * heightByLength']),
   ...within('domain/flux/cut-off.ts', cutOff, ['y + r * (along * uy + left * ux)', 'y + r * (along * uy - left * ux)']),
-  ...within('domain/flux/many-points.ts', points, ['(side * lean + height * down)', '(side * lean - height * down)']),
+  ...within('domain/flux/many-points.ts', points, [
+    '(side * lean + height * down) * inverse',
+    '(side * lean - height * down) * inverse',
+  ]),
   ...within('domain/flux/directed-map.ts', picture, ['read(weights, -dz / r, last)', 'read(weights, dz / r, last)']),
   ...within('drawing/heat/map-picture.ts', picture, [
     '>= quantity.threshold ? 1 : 0',

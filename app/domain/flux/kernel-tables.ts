@@ -58,7 +58,7 @@ export function cosineTablesOf(beam: CosineBeam): CosineTables {
 
 /** Entries of the finer tables for single points, where 1e-4 of the value is asked for. */
 export const fineEntriesPerUnit = 256
-export const fineAcrossEntries = 4096
+export const fineAcrossEntries = 1024
 
 const fineTables = new WeakMap<Beam, CosineTables>()
 

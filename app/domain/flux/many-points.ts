@@ -1,6 +1,12 @@
 import type { Element, Emitter } from '#app/domain/flux/emitter.ts'
 import { irradianceAt } from '#app/domain/flux/irradiance.ts'
-import { farthest, fineAcrossEntries, fineEntriesPerUnit, fineTablesOf } from '#app/domain/flux/kernel-tables.ts'
+import {
+  farthest,
+  fineAcrossEntries,
+  fineEntriesPerUnit,
+  fineTablesOf,
+  type CosineTables,
+} from '#app/domain/flux/kernel-tables.ts'
 import type { Vec3 } from '#app/domain/vector.ts'
 
 /** Places in plan and height, m, as x, y, z after one another: quick to run through many times. */
@@ -10,45 +16,40 @@ const up: Vec3 = [0, 0, 1]
 const middle = farthest * fineEntriesPerUnit
 const last = 2 * middle
 
-function addExactly(sums: Float64Array, points: Float64Array, emitter: Emitter, element: Element): void {
-  const alone = { ...emitter, elements: [element] }
-  for (let i = 0, k = 0; i < sums.length; i++, k += 3) {
-    sums[i] = (sums[i] ?? 0) + irradianceAt(alone, [points[k] ?? 0, points[k + 1] ?? 0, points[k + 2] ?? 0], up)
-  }
+function exactly(emitter: Emitter, element: Element, points: Float64Array, k: number): number {
+  const point: Vec3 = [points[k] ?? 0, points[k + 1] ?? 0, points[k + 2] ?? 0]
+  return irradianceAt({ ...emitter, elements: [element] }, point, up)
 }
 
-/** Tables of the beam, to half an entry; a point beyond their reach is left to `exactly`. */
-function addElement(sums: Float64Array, points: Float64Array, emitter: Emitter, element: Element): void {
-  const { beam, frame } = emitter
-  if (beam.kind === 'table' || Math.abs(frame.u[2]) > 1e-9) {
-    addExactly(sums, points, emitter, element)
-    return
-  }
-  const { across, along, solidAngle } = fineTablesOf(beam)
-  const [ux, uy] = frame.u
-  const lean = frame.w[1] * ux - frame.w[0] * uy
-  const down = -frame.w[2]
+/** One level element with a beam of cosines, from its fine tables; what lies beyond them in closed form. */
+function addFromTables(
+  sums: Float64Array,
+  points: Float64Array,
+  emitter: Emitter,
+  element: Element,
+  { across, along, solidAngle }: CosineTables,
+): void {
+  const { u, w } = emitter.frame
+  const [ux, uy] = u
+  const lean = (w[1] * ux - w[0] * uy) * fineAcrossEntries
+  const down = -w[2] * fineAcrossEntries
   const [x, y, z] = element.centre
-  const half = element.length / 2
+  const half = (element.length / 2) * fineEntriesPerUnit
   const strength = element.radiantPower / (solidAngle * element.length)
   for (let i = 0, k = 0; i < sums.length; i++, k += 3) {
     const dx = (points[k] ?? 0) - x
     const dy = (points[k + 1] ?? 0) - y
     const height = z - (points[k + 2] ?? 0)
-    if (!(height > 0)) continue
     const side = dy * ux - dx * uy
     const inverse = 1 / Math.sqrt(side * side + height * height)
-    const c = (side * lean + height * down) * inverse * fineAcrossEntries
-    if (!(c > 0)) continue
-    const scaled = inverse * fineEntriesPerUnit
-    const place = (dx * ux + dy * uy) * scaled + middle
-    const reach = half * scaled
+    const c = (side * lean + height * down) * inverse
+    if (!(c > 0) || height <= 0) continue
+    const place = (dx * ux + dy * uy) * fineEntriesPerUnit * inverse + middle
+    const reach = half * inverse
     const a = place - reach
     const b = place + reach
-    if (a < 0 || b >= last || reach < 16) {
-      const alone = { ...emitter, elements: [element] }
-      const point: Vec3 = [points[k] ?? 0, points[k + 1] ?? 0, points[k + 2] ?? 0]
-      sums[i] = (sums[i] ?? 0) + irradianceAt(alone, point, up)
+    if (a < 0 || b >= last || reach < 4) {
+      sums[i] = (sums[i] ?? 0) + exactly(emitter, element, points, k)
       continue
     }
     const ci = c | 0
@@ -69,7 +70,12 @@ function addElement(sums: Float64Array, points: Float64Array, emitter: Emitter, 
 export function horizontalAtPoints(emitters: readonly Emitter[], points: Float64Array): Float64Array {
   const sums = new Float64Array(points.length / 3)
   for (const emitter of emitters) {
-    for (const element of emitter.elements) addElement(sums, points, emitter, element)
+    const { beam, frame, elements } = emitter
+    const tables = beam.kind === 'cosine' && Math.abs(frame.u[2]) < 1e-9 ? fineTablesOf(beam) : null
+    for (const element of elements) {
+      if (tables) addFromTables(sums, points, emitter, element, tables)
+      else for (let i = 0; i < sums.length; i++) sums[i] = (sums[i] ?? 0) + exactly(emitter, element, points, 3 * i)
+    }
   }
   return sums
 }

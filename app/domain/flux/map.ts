@@ -42,9 +42,16 @@ function layerOf(grid: Grid, emitter: Emitter, extent: Extent, obstructions: rea
   const window = emitter.elements.length === 0 ? null : windowOf(grid, extent)
   const values = new Float32Array(window ? window.columns * window.rows : 0)
   if (!window) return { emitter, window, values }
+  if (obstructions.length === 0) {
+    for (const element of emitter.elements) addElement(values, window, emitter, element)
+    return { emitter, window, values }
+  }
+  const own = new Float32Array(values.length)
   for (const element of emitter.elements) {
-    addElement(values, window, emitter, element)
-    if (obstructions.length > 0) shadeElement(values, window, emitter, element, obstructions)
+    own.fill(0)
+    addElement(own, window, emitter, element)
+    shadeElement(own, window, emitter, element, obstructions)
+    for (let at = 0; at < own.length; at++) values[at] = (values[at] ?? 0) + (own[at] ?? 0)
   }
   return { emitter, window, values }
 }

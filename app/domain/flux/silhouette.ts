@@ -7,7 +7,18 @@ export interface Silhouette {
   /** For each row the least and the greatest x of the shadow, m; least > greatest where there is none. */
   readonly least: Float64Array
   readonly greatest: Float64Array
+  /** Rows that it may reach: the first and the last; the extents of others are not to be read. */
+  firstRow: number
+  lastRow: number
 }
+
+/** Room for silhouettes over so many rows. */
+export const emptySilhouette = (rows: number): Silhouette => ({
+  least: new Float64Array(rows),
+  greatest: new Float64Array(rows),
+  firstRow: 0,
+  lastRow: -1,
+})
 
 /** The part of a solid between the plane and the source: straight edges, or an upright cylinder's height. */
 export type Caster =
@@ -56,6 +67,7 @@ export function casterOf(solid: Solid, z: number, height: number): Caster | null
   if (solid.kind === 'cylinder') {
     return { kind: 'cylinder', x: solid.centre[0], y: solid.centre[1], radius: solid.radius, bottom, top }
   }
+  if (solid.low[2] >= bottom && solid.high[2] <= top) return { kind: 'edges', edges: solid.edges }
   const cut = solid.edges.map((edge) => cutEdge(edge, bottom, top)).filter((each) => each !== null)
   const cuts = cut.flatMap((each) => each.cuts)
   const caps = [true, false].flatMap((isTop) => pairs(cuts.filter((c) => c.top === isTop).map((c) => c.at)))
@@ -75,6 +87,17 @@ interface Rows {
   readonly count: number
   readonly least: Float64Array
   readonly greatest: Float64Array
+}
+
+/** Opens the rows from y1 to y2 for the extents. */
+function openRows(into: Silhouette, cells: Cells, y1: number, y2: number): Rows {
+  into.firstRow = Math.max(0, Math.ceil((y1 - cells.y0) / cells.cell - 0.5))
+  into.lastRow = Math.min(cells.rows - 1, Math.floor((y2 - cells.y0) / cells.cell - 0.5))
+  for (let row = into.firstRow; row <= into.lastRow; row++) {
+    into.least[row] = Infinity
+    into.greatest[row] = -Infinity
+  }
+  return { y0: cells.y0, cell: cells.cell, count: cells.rows, least: into.least, greatest: into.greatest }
 }
 
 function extend(rows: Rows, row: number, x: number): void {
@@ -118,26 +141,46 @@ function extendByDiscs(rows: Rows, a: readonly [number, number, number], b: read
 
 /** Writes the silhouette of a caster from a source into the extents of the rows of cells. */
 export function drawSilhouette(into: Silhouette, cells: Cells, caster: Caster, source: Vec3): void {
-  const { least, greatest } = into
-  least.fill(Infinity, 0, cells.rows)
-  greatest.fill(-Infinity, 0, cells.rows)
-  const rows: Rows = { y0: cells.y0, cell: cells.cell, count: cells.rows, least, greatest }
+  if (caster.kind === 'cylinder') drawCylinder(into, cells, caster, source)
+  else drawEdges(into, cells, caster.edges, source)
+}
+
+function drawCylinder(
+  into: Silhouette,
+  cells: Cells,
+  caster: Extract<Caster, { kind: 'cylinder' }>,
+  source: Vec3,
+): void {
   const gap = source[2] - cells.z
-  if (caster.kind === 'cylinder') {
-    const [low, high] = [gap / (source[2] - caster.bottom), gap / (source[2] - caster.top)]
-    const disc = (k: number) =>
-      [source[0] + (caster.x - source[0]) * k, source[1] + (caster.y - source[1]) * k, caster.radius * k] as const
-    extendByDiscs(rows, disc(low), disc(high))
-    return
+  const disc = (z: number) => {
+    const k = gap / (source[2] - z)
+    const [x, y] = [source[0] + (caster.x - source[0]) * k, source[1] + (caster.y - source[1]) * k]
+    return [x, y, caster.radius * k] as const
   }
-  for (const [a, b] of caster.edges) {
-    const [ka, kb] = [gap / (source[2] - a[2]), gap / (source[2] - b[2])]
-    extendBySegment(
-      rows,
-      source[0] + (a[0] - source[0]) * ka,
-      source[1] + (a[1] - source[1]) * ka,
-      source[0] + (b[0] - source[0]) * kb,
-      source[1] + (b[1] - source[1]) * kb,
-    )
+  const [low, high] = [disc(caster.bottom), disc(caster.top)]
+  const rows = openRows(
+    into,
+    cells,
+    Math.min(low[1] - low[2], high[1] - high[2]),
+    Math.max(low[1] + low[2], high[1] + high[2]),
+  )
+  if (into.lastRow >= into.firstRow) extendByDiscs(rows, low, high)
+}
+
+function drawEdges(into: Silhouette, cells: Cells, edges: readonly Edge[], source: Vec3): void {
+  const [sx, sy, sz] = source
+  const gap = sz - cells.z
+  let [lowest, highest] = [Infinity, -Infinity]
+  for (const [a, b] of edges) {
+    const [ya, yb] = [sy + ((a[1] - sy) * gap) / (sz - a[2]), sy + ((b[1] - sy) * gap) / (sz - b[2])]
+    lowest = Math.min(lowest, ya, yb)
+    highest = Math.max(highest, ya, yb)
+  }
+  const rows = openRows(into, cells, lowest, highest)
+  if (into.lastRow < into.firstRow) return
+  for (const [a, b] of edges) {
+    const ka = gap / (sz - a[2])
+    const kb = gap / (sz - b[2])
+    extendBySegment(rows, sx + (a[0] - sx) * ka, sy + (a[1] - sy) * ka, sx + (b[0] - sx) * kb, sy + (b[1] - sy) * kb)
   }
 }
