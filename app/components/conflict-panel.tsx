@@ -2,7 +2,7 @@ import { useState } from 'react'
 import { Button } from '#app/components/button.tsx'
 
 /** One thing that was changed in two places, as each says it. */
-export interface ConflictRow {
+interface ConflictRow {
   readonly key: string
   readonly label: string
   readonly mine: string

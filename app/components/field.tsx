@@ -51,7 +51,7 @@ export function Field({ label, aside, hint, error, id, className = '', children 
 }
 
 /** The line below a control: the error when there is one, else the hint. */
-export function FieldNote({ id, error, hint }: { id: string; error?: string | null | undefined; hint?: ReactNode }) {
+function FieldNote({ id, error, hint }: { id: string; error?: string | null | undefined; hint?: ReactNode }) {
   if (error)
     return (
       <p id={id} className="mt-0.5 text-2xs font-medium text-clay">

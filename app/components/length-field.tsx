@@ -2,7 +2,7 @@ import { useState, type InputHTMLAttributes } from 'react'
 import { Field, FieldBox, inputClass } from '#app/components/field.tsx'
 
 /** How a typed length was understood: the value, the words to echo, and another reading that may have been meant. */
-export type LengthReading = { metres: number; reading: string; suggestion: string | null } | { error: string }
+type LengthReading = { metres: number; reading: string; suggestion: string | null } | { error: string }
 
 interface LengthFieldProps extends Omit<InputHTMLAttributes<HTMLInputElement>, 'value' | 'onChange' | 'onBlur'> {
   label: string

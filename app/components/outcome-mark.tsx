@@ -3,14 +3,12 @@ import type { ReactNode } from 'react'
 /** The four outcomes of a check; each has its own shape and word, so that colour never speaks alone. */
 export type OutcomeWord = 'pass' | 'measure first' | 'fails' | 'cannot tell'
 
-const looks: Record<OutcomeWord, { word: string; colour: string; shape: ReactNode }> = {
+const looks: Record<OutcomeWord, { colour: string; shape: ReactNode }> = {
   pass: {
-    word: 'Pass',
     colour: 'text-moss',
     shape: <path d="M2.6 7.6l3 3 5.8-6.8" strokeWidth="1.9" fill="none" strokeLinejoin="round" />,
   },
   'measure first': {
-    word: 'Measure first',
     colour: 'text-amber',
     shape: (
       <>
@@ -20,12 +18,10 @@ const looks: Record<OutcomeWord, { word: string; colour: string; shape: ReactNod
     ),
   },
   fails: {
-    word: 'Fails',
     colour: 'text-clay',
     shape: <path d="M7 .8L13.2 7 7 13.2.8 7z" fill="currentColor" stroke="none" />,
   },
   'cannot tell': {
-    word: 'Cannot tell',
     colour: 'text-slate',
     shape: <rect x="2" y="2" width="10" height="10" fill="none" strokeWidth="1.4" strokeLinecap="butt" />,
   },
@@ -46,16 +42,5 @@ export function OutcomeMark({ outcome, size = 14 }: { outcome: OutcomeWord; size
     >
       {look.shape}
     </svg>
-  )
-}
-
-/** Shape and word of an outcome. */
-export function Outcome({ outcome }: { outcome: OutcomeWord }) {
-  const look = looks[outcome]
-  return (
-    <span className={`inline-flex items-center gap-1.5 font-strong whitespace-nowrap ${look.colour}`}>
-      <OutcomeMark outcome={outcome} />
-      {look.word}
-    </span>
   )
 }

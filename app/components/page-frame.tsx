@@ -158,7 +158,7 @@ const initials = (name: string) =>
 const yearInSeconds = 31_536_000
 
 /** Light or dark paper around the drawing; kept in a cookie so that the server draws the right one. */
-export function ChromeSwitch() {
+function ChromeSwitch() {
   const [chrome, setChrome] = useState<'light' | 'dark' | null>(null)
   const swap = () => {
     const root = document.documentElement

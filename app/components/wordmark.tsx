@@ -19,7 +19,7 @@ const marks = {
 }
 
 /** The mark: a section through a heater bar and two isolines falling to the ground. */
-export function Mark({ size = 28 }: { size?: number }) {
+function Mark({ size = 28 }: { size?: number }) {
   const mark = size < 20 ? marks.small : marks.large
   return (
     <svg width={size} height={size} viewBox="0 0 32 32" fill="none" aria-hidden="true" className="flex-none">

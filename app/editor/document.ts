@@ -22,7 +22,7 @@ export interface DocumentKeeping<T> {
 }
 
 /** How it stands with the work. */
-export type DocumentStatus =
+type DocumentStatus =
   | { readonly kind: 'saved' | 'unsaved' | 'saving' | 'conflict' }
   | { readonly kind: 'offline'; readonly kept: number }
   | { readonly kind: 'not saved'; readonly reason: string }

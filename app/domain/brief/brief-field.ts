@@ -2,7 +2,7 @@ import type { Brief } from '#app/domain/brief/brief.ts'
 import { fromSi, parseQuantity, unitSymbol, type DisplayUnits, type Quantity } from '#app/domain/units.ts'
 
 /** A brief with an answer written into it, or why the answer was not taken, with the accepted range. */
-export type Written = { readonly brief: Brief } | { readonly error: string }
+type Written = { readonly brief: Brief } | { readonly error: string }
 
 /** One question of the brief, asked on paper or on a page. Its name is the one that `assumed` keeps. */
 export interface BriefField {

@@ -4,14 +4,6 @@ import { energyFields } from '#app/domain/brief/energy-fields.ts'
 import { supplyFields } from '#app/domain/brief/supply-fields.ts'
 import { formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
 
-/** A typical outfit's insulation; from ISO 9920, from memory, rounded. */
-export const outfits = [
-  { value: '0.7', label: 'Shirt and trousers, 0.7 clo' },
-  { value: '1', label: 'Jumper or jacket, 1.0 clo' },
-  { value: '1.3', label: 'Coat, 1.3 clo' },
-  { value: '1.8', label: 'Winter coat, 1.8 clo' },
-] as const
-
 const targetOf = (brief: Brief, change: Partial<Brief['target']>): Brief => ({
   ...brief,
   target: { ...brief.target, ...change, source: 'this brief' },

@@ -7,7 +7,7 @@ const supplyOf = (brief: Brief, change: Partial<Brief['supply']>): Brief => ({
   supply: { ...brief.supply, ...change },
 })
 /** Supply systems as boards are labelled; the voltages are phase to neutral and line to line. */
-export const supplySystems = [
+const supplySystems = [
   { value: '230', label: 'Single-phase 230 V', phases: 1, phaseVoltage: 230, lineVoltage: null },
   { value: '400', label: 'Three-phase 400/230 V', phases: 3, phaseVoltage: 230, lineVoltage: 400 },
   { value: '240', label: 'Single-phase 240/120 V', phases: 1, phaseVoltage: 120, lineVoltage: 240 },

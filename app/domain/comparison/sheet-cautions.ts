@@ -8,7 +8,7 @@ import { isStopped } from '#app/domain/rules/check-layout.ts'
 import { formatLength, formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
 
 /** A variant as far as the cautions of a sheet need it. */
-export interface CautionedVariant extends LayoutFigures {
+interface CautionedVariant extends LayoutFigures {
   readonly number: number
   readonly layout: Layout
 }

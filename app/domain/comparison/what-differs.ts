@@ -18,7 +18,7 @@ export interface ComparisonTerms {
 }
 
 /** One variant's figure in one row, with the outcome it stands for. */
-export interface ComparisonCell {
+interface ComparisonCell {
   readonly text: string
   readonly outcome: Outcome | null
   /** The better of the row; several may share it, and where all are equal none has it. */

@@ -27,7 +27,7 @@ import { pointedStore } from '#app/editor/pointed.ts'
 import { useSize } from '#app/editor/use-size.ts'
 
 /** A variant that is compared, with its title as a link to it. */
-export interface ChosenVariant {
+interface ChosenVariant {
   readonly number: number
   readonly title: string
   readonly link: ReactNode
