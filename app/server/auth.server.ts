@@ -4,6 +4,7 @@ import { organization } from 'better-auth/plugins'
 import { createAccessControl } from 'better-auth/plugins/access'
 import { defaultStatements, ownerAc } from 'better-auth/plugins/organization/access'
 import { forgetAttempts } from '#app/server/attempts.server.ts'
+import { recordForAccount } from '#app/server/audit.server.ts'
 import { authDatabase } from '#app/server/db.server.ts'
 import { env } from '#app/server/env.server.ts'
 import { queueMail } from '#app/server/jobs/queue.server.ts'
@@ -51,7 +52,10 @@ export const auth = betterAuth({
     maxPasswordLength: passwordLimits.most,
     revokeSessionsOnPasswordReset: true,
     resetPasswordTokenExpiresIn: resetSeconds,
-    onPasswordReset: ({ user }) => forgetAttempts(user.email),
+    onPasswordReset: async ({ user }) => {
+      await forgetAttempts(user.email)
+      await recordForAccount(user.email, 'password changed')
+    },
     sendResetPassword: ({ user, token }) => queueMail(passwordLetter(user.email, token)),
   },
   plugins: [

@@ -1,6 +1,7 @@
 import { and, eq } from 'drizzle-orm'
 import type { z } from 'zod'
 import { isRefusal, type Answer, type Refusal } from '#app/server/answers.server.ts'
+import { recordEvent, type AuditedAction } from '#app/server/audit.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
 import { readBody } from '#app/server/json-body.server.ts'
 import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
@@ -28,6 +29,8 @@ export interface Save<Body> {
 /** Something kept in revisions: how it is locked and shown, and how a new revision of it is written. */
 export interface Revisioned<Body> {
   readonly resource: string
+  /** What the audit calls a new revision. */
+  readonly saved: AuditedAction
   /** Locks it until the transaction ends; null when it is gone. `shown` is what a reader gets. */
   readonly lock: (tx: Transaction) => Promise<{ readonly revision: number; readonly shown: object } | null>
   /** Writes the new state and its immutable revision row; gives what a reader gets from now on. */
@@ -138,7 +141,9 @@ export function saveRevision<Body>(
       const body = await bodyOf(tx)
       if (typeof body === 'object' && body !== null && isRefusal(body)) return body
       const revision = kept.revision + 1
-      return { status: 200, body: await thing.write(tx, revision, body, contentHash(body)), revision }
+      const shown = await thing.write(tx, revision, body, contentHash(body))
+      await recordEvent(tx, member, { action: thing.saved, subject: thing.resource, detail: { revision } })
+      return { status: 200, body: shown, revision }
     }),
   )
 }

@@ -4,3 +4,6 @@ import { z } from 'zod'
 export const stages = ['enquiry', 'site', 'variants', 'review', 'offer', 'installed'] as const
 export const stageSchema = z.enum(stages)
 export type Stage = z.infer<typeof stageSchema>
+
+/** The stages before one: a job in one of them moves forward to it, any other stays where it is. */
+export const stagesBefore = (stage: Stage): Stage[] => stages.slice(0, stages.indexOf(stage))

@@ -1,5 +1,5 @@
 import { refuseComputation } from '#app/server/computation-refusal.server.ts'
-import { findCompared } from '#app/server/data/compared.server.ts'
+import { findCompared, recordExport } from '#app/server/data/compared.server.ts'
 import { requireJob } from '#app/server/data/jobs.server.ts'
 import { attachment } from '#app/server/file-name.server.ts'
 import { missing } from '#app/server/missing.server.ts'
@@ -15,6 +15,7 @@ export async function loader({ request, params, url }: Route.LoaderArgs) {
   try {
     const sheet = await comparisonSheet(compared, job.member.organisationName, new Date())
     const png = await pngOf(svgOf(sheet), 2)
+    await recordExport(job, 'png', compared.chosen)
     const numbers = compared.chosen.map(({ number }) => String(number))
     return new Response(new Uint8Array(png), {
       headers: {

@@ -1,5 +1,5 @@
 import { refuseComputation } from '#app/server/computation-refusal.server.ts'
-import { findCompared } from '#app/server/data/compared.server.ts'
+import { findCompared, recordExport } from '#app/server/data/compared.server.ts'
 import { requireJob } from '#app/server/data/jobs.server.ts'
 import { attachment } from '#app/server/file-name.server.ts'
 import { missing } from '#app/server/missing.server.ts'
@@ -17,6 +17,7 @@ export async function loader({ request, params, url }: Route.LoaderArgs) {
   if (compared.chosen.length === 0) throw missing(request, 'variant')
   try {
     const svg = await svgDocument(await comparisonSheet(compared, job.member.organisationName, new Date()))
+    await recordExport(job, 'svg', compared.chosen)
     const numbers = compared.chosen.map(({ number }) => String(number))
     return new Response(svg, {
       headers: {

@@ -55,6 +55,7 @@ export async function insertBrief(tx: Transaction, member: Member, jobId: string
 
 const briefOf = ({ id: jobId, member }: OpenJob): Revisioned<Brief> => ({
   resource: `jobs/${jobId}/brief`,
+  saved: 'brief saved',
   lock: async (tx) => {
     const kept = await readBrief(tx, jobId, true)
     return kept && { revision: kept.revision, shown: kept }

@@ -1,5 +1,6 @@
 import { jobRequestSchema, startingSite, type JobRequest } from '#app/domain/job/job-request.ts'
 import { isRefusal, type Answer, type Refusal } from '#app/server/answers.server.ts'
+import { recordEvent } from '#app/server/audit.server.ts'
 import { insertBrief } from '#app/server/data/briefs.server.ts'
 import { insertSite } from '#app/server/data/sites.server.ts'
 import { insertVariant } from '#app/server/data/variant-creation.server.ts'
@@ -24,6 +25,8 @@ async function insertJob(
   await insertSite(tx, member, job.id, startingSite(asked))
   await insertBrief(tx, member, job.id, brief)
   const variant = await insertVariant(tx, member, job.id, { title: 'First layout', heaters: [] })
+  const detail = { variantId: variant.id }
+  await recordEvent(tx, member, { action: 'job created', subject: `jobs/${job.id}`, detail })
   return { id: job.id, variantId: variant.id }
 }
 

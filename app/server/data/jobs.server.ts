@@ -1,6 +1,6 @@
-import { and, desc, eq, isNull, sql } from 'drizzle-orm'
+import { and, desc, eq, inArray, isNull, sql } from 'drizzle-orm'
 import type { Action } from '#app/domain/access/roles.ts'
-import type { Stage } from '#app/domain/job/stage.ts'
+import { stagesBefore, type Stage } from '#app/domain/job/stage.ts'
 import { isId, missing } from '#app/server/missing.server.ts'
 import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import { requireMay, type Member } from '#app/server/session.server.ts'
@@ -85,10 +85,11 @@ export async function requireJob(request: Request, jobId: string | undefined, ac
   return { ...row, updatedAt: row.updatedAt.toISOString(), member }
 }
 
-/** Says that something of the job changed now. */
-export async function touchJob(tx: Transaction, jobId: string): Promise<void> {
+/** Says that something of the job changed now, and that it has come to a stage at least; it never goes back. */
+export async function touchJob(tx: Transaction, jobId: string, reached: Stage = 'enquiry'): Promise<void> {
+  const earlier = inArray(jobs.stage, stagesBefore(reached))
   await tx
     .update(jobs)
-    .set({ updatedAt: sql`now()` })
+    .set({ updatedAt: sql`now()`, stage: sql`case when ${earlier} then ${reached} else ${jobs.stage} end` })
     .where(and(own(jobs), eq(jobs.id, jobId)))
 }

@@ -88,6 +88,7 @@ export async function insertSite(tx: Transaction, member: Member, jobId: string,
 
 const siteOf = ({ id: jobId, member }: OpenJob): Revisioned<Site> => ({
   resource: `jobs/${jobId}/site`,
+  saved: 'site saved',
   lock: async (tx) => {
     const kept = await readSite(tx, jobId, true)
     return kept && { revision: kept.revision, shown: kept }
@@ -101,7 +102,7 @@ const siteOf = ({ id: jobId, member }: OpenJob): Revisioned<Site> => ({
     await tx
       .insert(siteRevisions)
       .values({ organisationId, jobId, revision, body: site, contentHash: hash, authorId: userId })
-    await touchJob(tx, jobId)
+    await touchJob(tx, jobId, 'site')
     return { revision, site }
   },
 })

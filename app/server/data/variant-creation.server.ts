@@ -2,8 +2,9 @@ import { and, eq, max, sql } from 'drizzle-orm'
 import { z } from 'zod'
 import { layoutSchema, type Layout } from '#app/domain/layout/layout.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
+import { recordEvent } from '#app/server/audit.server.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
-import { insertRevision, lockVariant, savedLayoutSchema } from '#app/server/data/variant-revisions.server.ts'
+import { insertRevision, lockVariant, savedLayoutSchema, stageOf } from '#app/server/data/variant-revisions.server.ts'
 import { present, variantColumns, variantOf, type OpenVariant, type Variant } from '#app/server/data/variants.server.ts'
 import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import { answerOnce, gone, staleness, type Save } from '#app/server/saving.server.ts'
@@ -63,7 +64,9 @@ export function createVariant(job: OpenJob, save: Save<VariantRequest>): Promise
       const layout = await startingLayout(tx, jobId, save.body)
       if (!layout) return { ...gone('variant'), path: 'copyOf' }
       const variant = await insertVariant(tx, member, jobId, layout)
-      await touchJob(tx, jobId)
+      await touchJob(tx, jobId, stageOf(layout))
+      const detail = { number: variant.number, copyOf: save.body.copyOf }
+      await recordEvent(tx, member, { action: 'variant created', subject: `variants/${variant.id}`, detail })
       return { status: 201, body: variant, revision: 1 }
     }),
   )
@@ -81,6 +84,8 @@ export function deleteVariant({ id, member }: OpenVariant, expected: number | nu
       .set({ deletedAt: sql`now()` })
       .where(and(own(variants), eq(variants.id, id)))
     await touchJob(tx, kept.shown.jobId)
+    const detail = { revision: kept.revision }
+    await recordEvent(tx, member, { action: 'variant deleted', subject: `variants/${id}`, detail })
     return { status: 200, body: { id, revision: kept.revision, deleted: true }, revision: kept.revision }
   })
 }
@@ -91,7 +96,9 @@ export const restoreSchema = z.union([
   z.strictObject({ deleted: z.literal(true) }),
 ])
 
-async function bringBack(tx: Transaction, { id }: OpenVariant): Promise<Answer | Refusal> {
+async function bringBack(tx: Transaction, { id, member }: OpenVariant): Promise<Answer | Refusal> {
+  const kept = await lockVariant(tx, id)
+  if (kept) return { status: 200, body: kept.shown, revision: kept.revision }
   const [row] = await tx
     .update(variants)
     .set({ deletedAt: null })
@@ -100,6 +107,8 @@ async function bringBack(tx: Transaction, { id }: OpenVariant): Promise<Answer |
   if (!row) return gone('variant')
   await touchJob(tx, row.jobId)
   const variant = variantOf(row)
+  const detail = { revision: variant.revision }
+  await recordEvent(tx, member, { action: 'variant brought back', subject: `variants/${id}`, detail })
   return { status: 200, body: variant, revision: variant.revision }
 }
 

@@ -1,4 +1,5 @@
 import { and, desc, eq, sql } from 'drizzle-orm'
+import type { Stage } from '#app/domain/job/stage.ts'
 import { layoutSchema, type Layout } from '#app/domain/layout/layout.ts'
 import { roundLength } from '#app/domain/units.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
@@ -30,8 +31,15 @@ export async function lockVariant(tx: Transaction, id: string) {
   return shown ? { revision: shown.revision, shown } : null
 }
 
-const revisionedVariant = ({ id, member }: OpenVariant): Revisioned<Layout> => ({
+/** How far a job has come that has such a layout. */
+export const stageOf = ({ heaters }: Layout): Stage => (heaters.length > 0 ? 'variants' : 'enquiry')
+
+const revisionedVariant = (
+  { id, member }: OpenVariant,
+  saved: 'variant saved' | 'variant restored',
+): Revisioned<Layout> => ({
   resource: `variants/${id}`,
+  saved,
   lock: (tx) => lockVariant(tx, id),
   write: async (tx, revision, layout, hash) => {
     const [row] = await tx
@@ -41,7 +49,7 @@ const revisionedVariant = ({ id, member }: OpenVariant): Revisioned<Layout> => (
       .returning(variantColumns)
     if (!row) throw new Error(`Variant ${id} went away while it was locked.`)
     await insertRevision(tx, member, id, revision, layout, hash)
-    await touchJob(tx, row.jobId)
+    await touchJob(tx, row.jobId, stageOf(layout))
     return variantOf(row)
   },
 })
@@ -83,7 +91,7 @@ export const savedLayoutSchema = layoutSchema.extend({
 
 /** Saves a variant's title and heaters by the one rule for saving. */
 export const saveVariant = (variant: OpenVariant, save: Save<Layout>): Promise<Answer | Refusal> =>
-  saveRevision(variant.member, revisionedVariant(variant), save, () => Promise.resolve(save.body))
+  saveRevision(variant.member, revisionedVariant(variant, 'variant saved'), save, () => Promise.resolve(save.body))
 
 async function layoutAt(tx: Transaction, variantId: string, revision: number): Promise<Layout | Refusal> {
   const [row] = await tx
@@ -101,7 +109,9 @@ export const restoreRevision = (
   save: Save<unknown>,
   revision: number,
 ): Promise<Answer | Refusal> =>
-  saveRevision(variant.member, revisionedVariant(variant), save, (tx) => layoutAt(tx, variant.id, revision))
+  saveRevision(variant.member, revisionedVariant(variant, 'variant restored'), save, (tx) =>
+    layoutAt(tx, variant.id, revision),
+  )
 
 /** The revisions of a variant, newest first. */
 export function listRevisions({ id, member }: OpenVariant): Promise<VariantRevision[]> {
