@@ -18,7 +18,7 @@ export interface FiguresInput {
 }
 
 /** The seats' figures, the totals and the findings of a layout. Findings are of the plain figures, without shade. */
-export function figuresOf({ shade, ...plain }: FiguresInput): LayoutFigures {
+function figuresOf({ shade, ...plain }: FiguresInput): LayoutFigures {
   const figures = layoutFigures(plain)
   if (!shade) return figures
   const { site, brief, layout, models } = plain

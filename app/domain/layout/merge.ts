@@ -51,7 +51,7 @@ export function takeTheirs(layout: Layout, conflict: HeaterConflict): Layout {
 }
 
 /** The same heater in every value; two absent ones are the same. */
-export function sameHeater(a: MountedHeater | null, b: MountedHeater | null): boolean {
+function sameHeater(a: MountedHeater | null, b: MountedHeater | null): boolean {
   if (a === b) return true
   if (!a || !b) return false
   return (

@@ -7,7 +7,7 @@ import { parseLength } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
 import { SelectField, TextField } from '#app/components/field.tsx'
 import { LengthField } from '#app/components/length-field.tsx'
-import { alongLabel, fieldLength, fromLabel } from '#app/editor/panels/heater-fields.tsx'
+import { alongLabel, fieldLength, fromLabel } from '#app/editor/panels/axis-words.ts'
 
 interface ArrangePanelProps {
   readonly layout: Layout

@@ -127,7 +127,7 @@ function Rows({ caption, rows }: { caption: string; rows: readonly (readonly [st
               {name}
             </th>
             <td className="py-0.5 pr-2 text-right whitespace-nowrap">{middle}</td>
-            <td className="py-0.5 text-right text-ink-2">{last}</td>
+            <td className={`py-0.5 text-right text-ink-2 ${last.length < 16 ? 'whitespace-nowrap' : ''}`}>{last}</td>
           </tr>
         ))}
       </tbody>

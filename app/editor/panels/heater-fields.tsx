@@ -1,15 +1,16 @@
-import type { HeaterModel, Mount } from '#app/domain/heaters/heater-model.ts'
-import { shortName } from '#app/domain/heaters/short-name.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { HeaterChange } from '#app/domain/layout/edits.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { suppliesOf } from '#app/domain/layout/model-choice.ts'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { Site } from '#app/domain/site/site.ts'
-import { formatLength, parseLength } from '#app/domain/units.ts'
+import { parseLength } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
 import { CheckField, SelectField } from '#app/components/field.tsx'
 import { LengthField } from '#app/components/length-field.tsx'
 import { AngleField } from '#app/editor/panels/angle-field.tsx'
+import { alongLabel, fieldLength, fromLabel } from '#app/editor/panels/axis-words.ts'
+import { modelChange, modelOptions, mountChange, mountOptions } from '#app/editor/panels/heater-choices.ts'
 import { beamSide, limitsNote, supportsFor, wrongHeight, wrongTilt } from '#app/editor/panels/heater-limits.ts'
 
 interface HeaterFieldsProps {
@@ -110,10 +111,6 @@ export function HeaterFields(props: HeaterFieldsProps) {
 }
 
 type Units = Site['displayUnits']
-
-/** A length as a field shows it: a bare number of metres, or feet and inches. */
-export const fieldLength = (metres: number, units: Units): string =>
-  units === 'metric' ? formatLength(metres, units, 'fine').replace(' m', '') : formatLength(metres, units, 'fine')
 
 function checkedLength(
   text: string,
@@ -229,56 +226,3 @@ function SupplyFields({ heaters, model, brief, set }: PartProps & { model: Heate
     </div>
   )
 }
-
-/** Models to change to: those that can be placed, and the present one whatever it is. */
-function modelOptions(heater: MountedHeater, models: ReadonlyMap<string, HeaterModel>) {
-  const offered = [...models.values()].filter(
-    (model) => model.code === heater.model || (model.status === 'current' && model.beam !== null),
-  )
-  const known = offered.map((model) => ({ value: model.code, label: shortName(model) }))
-  return models.has(heater.model) ? known : [{ value: heater.model, label: heater.model }, ...known]
-}
-
-/** A new model keeps its place; a mount it does not offer becomes its first, a stage and a rating go to their defaults. */
-export function modelChange(
-  code: string,
-  heater: MountedHeater,
-  models: ReadonlyMap<string, HeaterModel>,
-  brief: Brief,
-): HeaterChange {
-  const model = models.get(code)
-  if (!model) return {}
-  const voltages = model.supplyOptions.map((option) => option.voltage)
-  const keeps = voltages.includes(heater.supplyVoltage)
-  const supplyVoltage = keeps ? heater.supplyVoltage : suppliesOf(brief).find((volts) => voltages.includes(volts))
-  return {
-    model: code,
-    ratedVoltage: null,
-    stage: null,
-    ...(supplyVoltage === undefined ? {} : { supplyVoltage }),
-    ...(model.mounts.includes(heater.mount) ? {} : { mount: model.mounts[0] ?? heater.mount, memberId: null }),
-  }
-}
-
-function mountOptions(heater: MountedHeater, model: HeaterModel | undefined) {
-  const offered: readonly Mount[] = model?.mounts ?? []
-  const all = offered.includes(heater.mount) ? offered : [heater.mount, ...offered]
-  return all.map((mount) => ({
-    value: mount,
-    label: capital(offered.includes(mount) ? mount : `${mount}, not offered`),
-  }))
-}
-
-function mountChange(chosen: string, model: HeaterModel | undefined): HeaterChange {
-  const mount = model?.mounts.find((each) => each === chosen)
-  return mount ? { mount } : {}
-}
-
-const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1)
-
-/** "Along river", "From wall": the two axes in the words of the site. */
-export const alongLabel = (site: Site): string => {
-  const name = site.beyond[0]?.name ?? site.walls[0]?.name
-  return name && name.length <= 8 ? `Along ${name.toLowerCase()}` : 'Along'
-}
-export const fromLabel = (site: Site): string => (site.walls.length > 0 ? 'From wall' : 'Across')

@@ -8,7 +8,7 @@ import { parseLength } from '#app/domain/units.ts'
 import { degreesFigure } from '#app/editor/figures.ts'
 import { readAngle } from '#app/editor/panels/angle-field.tsx'
 import { CellField, type CellReading } from '#app/editor/panels/cell-field.tsx'
-import { alongLabel, fieldLength, fromLabel } from '#app/editor/panels/heater-fields.tsx'
+import { alongLabel, fieldLength, fromLabel } from '#app/editor/panels/axis-words.ts'
 import { supportsFor, wrongHeight, wrongTilt } from '#app/editor/panels/heater-limits.ts'
 
 interface HeatersTableProps {

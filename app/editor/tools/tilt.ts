@@ -44,5 +44,5 @@ function withinManual(tilt: number, model: HeaterModel | undefined): number {
 }
 
 /** The manual's limits in words; null when it gives none. */
-export const tiltLimits = (model: HeaterModel | undefined): string | null =>
+const tiltLimits = (model: HeaterModel | undefined): string | null =>
   model?.tiltDeg ? `Tilt ${model.tiltDeg.min} to ${model.tiltDeg.max}° by the manual of ${shortName(model)}.` : null

@@ -1,0 +1,198 @@
+import { useCallback, useMemo } from 'react'
+import type { Brief } from '#app/domain/brief/brief.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { HeaterChange } from '#app/domain/layout/edits.ts'
+import type { Layout } from '#app/domain/layout/layout.ts'
+import type { Site } from '#app/domain/site/site.ts'
+import { obstructionsOf } from '#app/domain/flux/shading.ts'
+import type { Finding } from '#app/domain/rules/finding.ts'
+import { ArrangePanel } from '#app/editor/panels/arrange-panel.tsx'
+import { ExplainPanel } from '#app/editor/panels/explain-panel.tsx'
+import { FindingsList } from '#app/editor/panels/findings-list.tsx'
+import { HeaterFields } from '#app/editor/panels/heater-fields.tsx'
+import { HeatersTable } from '#app/editor/panels/heaters-table.tsx'
+import { PlacePanel } from '#app/editor/panels/place-panel.tsx'
+import { SeatsTable } from '#app/editor/panels/seats-table.tsx'
+import type { Editor } from '#app/editor/use-editor.ts'
+import type { LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
+import type { ViewChoice } from '#app/editor/view-choice.ts'
+
+/** What the panels beside and below the plan show and change. */
+export interface SideSubject {
+  readonly editor: Editor
+  readonly figures: LayoutFigures
+  /** As shown: the gesture's while one is under way. */
+  readonly layout: Layout
+  readonly site: Site
+  readonly brief: Brief
+  readonly catalogue: readonly HeaterModel[]
+  readonly choice: ViewChoice
+  readonly readOnly: boolean
+  readonly hold: boolean
+  readonly onHold: (hold: boolean) => void
+  /** Seat whose figures are taken apart. */
+  readonly explained: string | null
+  readonly onExplain: (seatId: string | null) => void
+  readonly placing: boolean
+  readonly onPlacing: (placing: boolean) => void
+  readonly onSeat: (seatId: string | null) => void
+}
+
+/** What each part is given. */
+export interface PartProps {
+  readonly subject: SideSubject
+}
+
+/** The catalogue while placing, a seat's figures taken apart, else the chosen heater. */
+export function Top({ subject }: PartProps) {
+  if (subject.placing) return <Placing subject={subject} />
+  if (subject.explained) return <Explained subject={subject} />
+  return <Chosen subject={subject} />
+}
+
+/** The catalogue. */
+export function Placing({ subject }: PartProps) {
+  const { editor, catalogue, site, brief, onPlacing } = subject
+  return (
+    <PlacePanel
+      models={catalogue}
+      site={site}
+      brief={brief}
+      placing={editor.state.placing}
+      onPlacing={(model) => editor.dispatch({ type: 'placing', model })}
+      onPlaceAt={editor.placeUnder}
+      onClose={() => {
+        editor.dispatch({ type: 'placing', model: null })
+        onPlacing(false)
+      }}
+    />
+  )
+}
+
+/** A seat’s figures taken apart; nothing until one is asked for. */
+export function Explained({ subject }: PartProps) {
+  const { editor, layout, site, brief, choice, explained, onExplain } = subject
+  const { models } = editor
+  const input = useMemo(
+    () => ({
+      site,
+      brief,
+      layout,
+      models,
+      ...(choice.shade ? { obstructions: obstructionsOf(site, layout, models) } : {}),
+    }),
+    [site, brief, layout, models, choice.shade],
+  )
+  if (!explained) return null
+  return (
+    <ExplainPanel
+      input={input}
+      seatId={explained}
+      units={site.displayUnits}
+      fluxUnit={choice.fluxUnit}
+      onClose={() => onExplain(null)}
+    />
+  )
+}
+
+/** The chosen heaters’ fields, or what to do when none is chosen. */
+export function Chosen({ subject }: PartProps) {
+  const { editor, layout, site, brief, readOnly, hold, onHold } = subject
+  const { state, models } = editor
+  const heaters = layout.heaters.filter(({ id }) => state.selected.includes(id))
+  if (heaters.length === 0) return <NothingChosen subject={subject} />
+  return (
+    <>
+      <HeaterFields
+        {...{ heaters, models, site, brief, readOnly, hold, onHold }}
+        onChange={(change) => editor.set(state.selected, change)}
+        onRemove={() => editor.dispatch({ type: 'remove' })}
+      />
+      {!readOnly && (
+        <ArrangePanel
+          layout={state.history.present}
+          selected={state.selected}
+          site={site}
+          onEdit={editor.edit}
+          onDuplicate={() => editor.dispatch({ type: 'duplicate' })}
+        />
+      )}
+    </>
+  )
+}
+
+function NothingChosen({ subject }: PartProps) {
+  const { layout, readOnly } = subject
+  return (
+    <section aria-labelledby="chosen-title" className="px-4.5 py-3.5">
+      <h2 id="chosen-title" className="text-sm font-strong">
+        {layout.heaters.length === 0 ? 'No heaters yet' : 'No heater chosen'}
+      </h2>
+      <p className="mt-1 text-ink-2">
+        {layout.heaters.length === 0
+          ? 'Place one on a beam to see the map.'
+          : 'Choose one on the plan or in the list below; Shift adds another, a rectangle takes several.'}
+      </p>
+      {!readOnly && (
+        <details className="mt-1">
+          <summary className="min-h-8 cursor-pointer py-1.5 text-ink-2 pointer-coarse:min-h-11">Keys</summary>
+          <p className="text-2xs text-ink-2">
+            Tab goes from heater to heater, then to the seats. Arrows move 10 mm, with Shift 100 mm. Page Up and Page
+            Down raise and lower. [ and ] turn, comma and full stop tilt. Delete removes, Ctrl D duplicates, Ctrl C and
+            Ctrl V copy and paste, Ctrl Z undoes. Alt lets go of members and spacing, Escape goes back. + and − change
+            the size, 0 shows the whole plan.
+          </p>
+        </details>
+      )}
+    </section>
+  )
+}
+
+/** What was checked; a finding shows its subject on the plan. */
+export function Findings({ subject }: PartProps) {
+  const { editor, figures, site, choice, onExplain } = subject
+  const onPoint = (about: Finding['subject']) => {
+    if (about.kind === 'heater') editor.dispatch({ type: 'select', ids: [about.id] })
+    if (about.kind === 'seat') {
+      editor.dispatch({ type: 'seat', id: about.id })
+      onExplain(about.id)
+    }
+  }
+  return (
+    <FindingsList findings={figures.findings} units={site.displayUnits} fluxUnit={choice.fluxUnit} onPoint={onPoint} />
+  )
+}
+
+/** The seats, linked with the plan both ways. */
+export function Seats({ subject }: PartProps) {
+  const { editor, figures, site, brief, choice, onSeat, onExplain } = subject
+  return (
+    <SeatsTable
+      warmth={figures.warmth}
+      brief={brief}
+      units={site.displayUnits}
+      fluxUnit={choice.fluxUnit}
+      seatId={editor.state.seatId}
+      onSeat={onSeat}
+      onExplain={onExplain}
+    />
+  )
+}
+
+/** The heaters as a list. */
+export function Heaters({ subject }: PartProps) {
+  const { editor, layout, site, readOnly } = subject
+  const { dispatch, set, remove } = editor
+  const onSelect = useCallback((ids: readonly string[]) => dispatch({ type: 'select', ids }), [dispatch])
+  const onSet = useCallback((id: string, change: HeaterChange) => set([id], change), [set])
+  const onRemove = useCallback((id: string) => remove([id]), [remove])
+  return (
+    <HeatersTable
+      heaters={layout.heaters}
+      models={editor.models}
+      site={site}
+      selected={editor.state.selected}
+      {...{ readOnly, onSelect, onSet, onRemove }}
+    />
+  )
+}

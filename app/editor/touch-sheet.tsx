@@ -1,0 +1,64 @@
+import { useState, type ReactNode } from 'react'
+import { Tabs } from '#app/components/tabs.tsx'
+import { HeaterSteppers } from '#app/editor/panels/heater-steppers.tsx'
+import { Chosen, Explained, Findings, Heaters, Placing, Seats, type PartProps } from '#app/editor/side-parts.tsx'
+
+type SheetTab = 'heater' | 'findings' | 'seats' | 'heaters' | 'map' | 'add'
+
+/** The sheet below the plan on a tablet: words as tabs, steppers for fingers. */
+export function TouchSheet({ subject, tools }: PartProps & { tools: ReactNode }) {
+  const { editor, figures, layout, site, readOnly } = subject
+  const [tab, setTab] = useState<SheetTab>('heater')
+  const open = figures.findings.filter(({ outcome }) => outcome !== 'pass').length
+  const lead = layout.heaters.find(({ id }) => id === editor.state.selected[0])
+  const pad = (panel: ReactNode) => <div className="h-47 overflow-y-auto">{panel}</div>
+  const tabs: { value: SheetTab; label: ReactNode; panel: ReactNode }[] = [
+    {
+      value: 'heater',
+      label: lead ? `Heater ${lead.id}` : 'Heater',
+      panel: pad(
+        <>
+          {lead && editor.state.selected.length === 1 && (
+            <div className="px-4.5 pt-3.5">
+              <HeaterSteppers
+                heater={lead}
+                model={editor.models.get(lead.model)}
+                site={site}
+                readOnly={readOnly}
+                onNudge={editor.nudge}
+              />
+            </div>
+          )}
+          {subject.explained ? <Explained subject={subject} /> : <Chosen subject={subject} />}
+        </>,
+      ),
+    },
+    {
+      value: 'findings',
+      label: (
+        <>
+          Findings <b className="font-strong">{open}</b>
+        </>
+      ),
+      panel: pad(<Findings subject={subject} />),
+    },
+    { value: 'seats', label: 'Seats', panel: pad(<Seats subject={subject} />) },
+    { value: 'heaters', label: 'List', panel: pad(<Heaters subject={subject} />) },
+    { value: 'map', label: 'Map', panel: pad(tools) },
+    ...(readOnly ? [] : [{ value: 'add' as const, label: 'Add', panel: pad(<Placing subject={subject} />) }]),
+  ]
+  const shown: SheetTab = subject.placing ? 'add' : tab
+  return (
+    <div className="flex-none border-t border-rule bg-paper-raised">
+      <Tabs
+        label="Heater, findings and seats"
+        tabs={tabs}
+        value={shown}
+        onChange={(next) => {
+          subject.onPlacing(next === 'add')
+          setTab(next)
+        }}
+      />
+    </div>
+  )
+}
