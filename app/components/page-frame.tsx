@@ -34,11 +34,11 @@ export function PageFrame({ viewer, tools, children }: PageFrameProps) {
         <Link to="/jobs" className="flex h-13 flex-none items-center">
           <Wordmark />
         </Link>
-        <div className="order-last -ml-3 h-11 w-full overflow-x-auto tablet:order-none tablet:ml-3 tablet:h-13 tablet:w-auto">
+        <div className="order-last -ml-3 h-11 w-full overflow-x-auto tablet:order-none tablet:ml-3 tablet:h-13 tablet:w-auto print:hidden">
           <TabNav label="Inglefield" tabs={sections} />
         </div>
         <span className="flex-1" />
-        {tools}
+        <span className="contents print:hidden">{tools}</span>
         <ViewerMenu viewer={viewer} />
       </header>
       <main id="main" className="flex-1 px-4 pt-4 pb-12 tablet:px-8">
@@ -97,11 +97,11 @@ export function JobFrame({ viewer, job, current, tools, below, bare = false, chi
             {job.name}
           </Link>
         </nav>
-        <div className="order-last -ml-3 h-11 w-full overflow-x-auto wide-tablet:order-none wide-tablet:ml-0 wide-tablet:h-13 wide-tablet:w-auto">
+        <div className="order-last -ml-3 h-11 w-full overflow-x-auto wide-tablet:order-none wide-tablet:ml-0 wide-tablet:h-13 wide-tablet:w-auto print:hidden">
           <TabNav label={`Pages of ${job.name}`} tabs={tabs} />
         </div>
         <span className="flex-1" />
-        {tools}
+        <span className="contents print:hidden">{tools}</span>
         <ViewerMenu viewer={viewer} />
       </header>
       {below}

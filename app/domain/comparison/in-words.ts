@@ -83,6 +83,7 @@ function power({ totals: before }: ComparedVariant, { totals: after }: ComparedV
 function failing(from: ComparedVariant, other: ComparedVariant): string | null {
   const [before, after] = [countOutcome(from.findings, 'fails'), countOutcome(other.findings, 'fails')]
   if (before === after) return null
-  const told = (count: number) => (count === 0 ? 'none' : String(count))
-  return `${capital(told(after))} ${after === 1 ? 'finding fails' : 'findings fail'} instead of ${told(before)}.`
+  const instead = before === 0 ? 'none' : String(before)
+  if (after === 0) return `No finding fails instead of ${instead}.`
+  return `${after} ${after === 1 ? 'finding fails' : 'findings fail'} instead of ${instead}.`
 }
