@@ -6,7 +6,7 @@ export type BeamTable =
   | { readonly error: string; readonly row: number; readonly column: number }
 
 /** Most rows and columns of angles: every degree of ±90°. */
-export const mostAngles = 181
+const mostAngles = 181
 
 class CellError extends Error {
   constructor(

@@ -18,9 +18,6 @@ export type Beam =
 /** A beam given as a table. */
 export type TableBeam = Extract<Beam, { kind: 'table' }>
 
-/** Largest exponent of the cosine the engine is proved for; the full angle of half intensity is then 19°. */
-export const largestExponent = 50
-
 const rightAngle = Math.PI / 2
 
 /** Exponent n with cos^n(half of the angle) = 1/2, from the full angle between half-intensity directions, degrees. */

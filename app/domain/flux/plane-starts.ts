@@ -4,6 +4,9 @@ import { add, cross, dot, lengthOf, normalise, scale, type Vec3 } from '#app/dom
 const mostSources = 24
 const mostStarts = 12
 
+/** Squares of lengths that differ by less than this share are of one sum, found by several pairs. */
+const same = 1e-9
+
 /** A hair's breadth that differs from source to source, so that no three directions lie in one plane. */
 const hair = (i: number): Vec3 => [Math.sin(12.9898 * i + 1), Math.sin(78.233 * i + 2), Math.sin(37.719 * i + 3)]
 
@@ -23,36 +26,81 @@ export function planeStarts(vectors: readonly Vec3[]): Vec3[] {
   const isNarrow = strong.every((a, i) => strong.every((b, j) => j <= i || dot(a, b) >= 0))
   // Within a right angle of one another every source adds to every sum: none is longer than that of all.
   if (isNarrow) return [whole, ...strong.slice(0, 1)]
-  const sums = [whole, ...strong, ...sumsByPairs(strong)]
-  return sums.toSorted((a, b) => lengthOf(b) - lengthOf(a)).slice(0, mostStarts)
+  const longest = new Longest(mostStarts)
+  for (const [x, y, z] of [whole, ...strong]) longest.offer(x, y, z)
+  offerSumsByPairs(strong, longest)
+  return longest.found.map(({ sum }) => sum)
 }
 
-function sumsByPairs(vectors: readonly Vec3[]): Vec3[] {
-  const directions = vectors.map((vector, i) => add(normalise(vector), scale(hair(i), 1e-6)))
-  const found: Vec3[] = []
-  vectors.forEach((a, i) => {
-    vectors.slice(i + 1).forEach((b, k) => {
-      const j = i + 1 + k
-      const edge = cross(directions[i] ?? a, directions[j] ?? b)
-      for (const normal of [edge, scale(edge, -1)]) {
-        const others = sumInFront(vectors, directions, normal, i, j)
-        found.push(others, add(others, a), add(others, b), add(add(others, a), b))
-      }
-    })
-  })
-  return found
-}
+/** The longest of the sums offered, the longest first; sums as long as one already there are taken for the same. */
+class Longest {
+  readonly found: { readonly square: number; readonly sum: Vec3 }[] = []
 
-/** Sum of the vectors whose directions lie in front of a plane, but for two. */
-function sumInFront(vectors: readonly Vec3[], directions: readonly Vec3[], normal: Vec3, i: number, j: number): Vec3 {
-  let [x, y, z] = [0, 0, 0]
-  for (let k = 0; k < vectors.length; k++) {
-    const direction = directions[k]
-    const vector = vectors[k]
-    if (k === i || k === j || !direction || !vector || dot(direction, normal) <= 0) continue
-    x += vector[0]
-    y += vector[1]
-    z += vector[2]
+  constructor(private readonly most: number) {}
+
+  offer(x: number, y: number, z: number): void {
+    const square = x * x + y * y + z * z
+    const last = this.found.length < this.most ? 0 : (this.found[this.most - 1]?.square ?? 0)
+    if (square <= last * (1 + same)) return
+    let place = this.found.length
+    while (place > 0 && (this.found[place - 1]?.square ?? 0) < square * (1 - same)) place--
+    if (place > 0 && (this.found[place - 1]?.square ?? 0) <= square * (1 + same)) return
+    this.found.splice(place, 0, { square, sum: [x, y, z] })
+    if (this.found.length > this.most) this.found.pop()
   }
-  return [x, y, z]
+}
+
+/** For each pair of sources the sums of those on either side of the plane through both, with and without the two. */
+function offerSumsByPairs(vectors: readonly Vec3[], longest: Longest): void {
+  const directions = vectors.map((vector, i) => add(normalise(vector), scale(hair(i), 1e-6)))
+  const flat = Float64Array.from(directions.flat())
+  const fluxes = Float64Array.from(vectors.flat())
+  const sums = new Float64Array(6)
+  for (let i = 0; i < vectors.length; i++) {
+    for (let j = i + 1; j < vectors.length; j++) {
+      const [a, b] = [vectors[i] ?? none, vectors[j] ?? none]
+      sumBeside(flat, fluxes, cross(directions[i] ?? none, directions[j] ?? none), [i, j], sums)
+      offerWithEither(longest, sums[0] ?? 0, sums[1] ?? 0, sums[2] ?? 0, a, b)
+      offerWithEither(longest, sums[3] ?? 0, sums[4] ?? 0, sums[5] ?? 0, a, b)
+    }
+  }
+}
+
+const none: Vec3 = [0, 0, 0]
+
+function offerWithEither(longest: Longest, x: number, y: number, z: number, a: Vec3, b: Vec3): void {
+  longest.offer(x, y, z)
+  longest.offer(x + a[0], y + a[1], z + a[2])
+  longest.offer(x + b[0], y + b[1], z + b[2])
+  longest.offer(x + a[0] + b[0], y + a[1] + b[1], z + a[2] + b[2])
+}
+
+/** Sums of the fluxes in front of a plane and behind it into `sums`, without those of two sources that lie in it. */
+function sumBeside(
+  directions: Float64Array,
+  fluxes: Float64Array,
+  [nx, ny, nz]: Vec3,
+  [i, j]: readonly [number, number],
+  sums: Float64Array,
+): void {
+  let [x, y, z, bx, by, bz] = [0, 0, 0, 0, 0, 0]
+  for (let k = 0, at = 0; at < fluxes.length; k++, at += 3) {
+    if (k === i || k === j) continue
+    const side = (directions[at] ?? 0) * nx + (directions[at + 1] ?? 0) * ny + (directions[at + 2] ?? 0) * nz
+    if (side > 0) {
+      x += fluxes[at] ?? 0
+      y += fluxes[at + 1] ?? 0
+      z += fluxes[at + 2] ?? 0
+    } else {
+      bx += fluxes[at] ?? 0
+      by += fluxes[at + 1] ?? 0
+      bz += fluxes[at + 2] ?? 0
+    }
+  }
+  sums[0] = x
+  sums[1] = y
+  sums[2] = z
+  sums[3] = bx
+  sums[4] = by
+  sums[5] = bz
 }

@@ -3,7 +3,7 @@ import type { Shape } from '#app/domain/site/site.ts'
 import { add, dot, radians, scale, type Vec2, type Vec3 } from '#app/domain/vector.ts'
 
 /** A half-space n·x ≤ offset. */
-export interface Face {
+interface Face {
   readonly normal: Vec3
   readonly offset: number
 }
