@@ -119,7 +119,7 @@ export function SitePlan(props: SitePlanProps) {
   return (
     <div
       ref={box}
-      className={`relative h-72 tablet:h-[min(60dvh,32rem)] overflow-hidden rounded-md border border-rule ${theme === 'day' ? 'bg-white' : 'bg-dusk-ground'}`}
+      className={`relative h-72 overflow-hidden rounded-md border border-rule tablet:h-[min(60dvh,32rem)] ${theme === 'day' ? 'bg-white' : 'bg-dusk-ground'}`}
     >
       {/* The drawing is moved in with the keyboard as a whole; its things are rows of the tables beside it. */}
       <svg
