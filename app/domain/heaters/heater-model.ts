@@ -1,7 +1,7 @@
 import { z } from 'zod'
 
 /** Ways of fixing a heater that the trade offers. */
-export const mounts = [
+const mounts = [
   'chain',
   'drop rods',
   'wall bracket',
@@ -21,13 +21,12 @@ const clearanceSchema = z.object({
   frontOfBeam: positive.nullable(),
   below: positive.nullable(),
 })
-export type Clearance = z.infer<typeof clearanceSchema>
 
 /**
  * Relative radiant intensity as a data sheet gives it. `angles`: full angles between the directions of half the peak
  * intensity, fitted by a power of the cosine. `table`: relative intensity over across × along angles in degrees.
  */
-export const beamDataSchema = z.discriminatedUnion('kind', [
+const beamDataSchema = z.discriminatedUnion('kind', [
   z.object({
     kind: z.literal('angles'),
     acrossFullAngleDeg: z.number().positive().lt(180),

@@ -15,7 +15,7 @@ export const sizeSourceSchema = z.enum(['laser', 'tape', 'drawing', 'photo', 'to
 export type SizeSource = z.infer<typeof sizeSourceSchema>
 
 /** A plane over the floor, from the heights of its underside at three or four corners. */
-export const coverSchema = z.strictObject({
+const coverSchema = z.strictObject({
   id,
   name: label,
   corners: z
@@ -34,7 +34,7 @@ export const coverSchema = z.strictObject({
 export type Cover = z.infer<typeof coverSchema>
 
 /** A beam, rafter, joist or purlin. Its underside follows a cover or runs straight between two heights. */
-export const memberSchema = z.strictObject({
+const memberSchema = z.strictObject({
   id,
   name: label,
   kind: label,
@@ -52,7 +52,7 @@ export const memberSchema = z.strictObject({
 export type Member = z.infer<typeof memberSchema>
 
 /** A wall along the line from–to; the floor lies to the left of that direction. */
-export const wallSchema = z.strictObject({
+const wallSchema = z.strictObject({
   id,
   name: label,
   from: point,
@@ -64,7 +64,7 @@ export const wallSchema = z.strictObject({
 })
 export type Wall = z.infer<typeof wallSchema>
 
-export const poleSchema = z.strictObject({
+const poleSchema = z.strictObject({
   id,
   name: label,
   at: point,
@@ -75,7 +75,7 @@ export const poleSchema = z.strictObject({
 })
 export type Pole = z.infer<typeof poleSchema>
 
-export const shapeSchema = z.discriminatedUnion('kind', [
+const shapeSchema = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('box'), x: range, y: range, z: range }),
   z.strictObject({
     kind: z.literal('cylinder'),
@@ -87,7 +87,7 @@ export const shapeSchema = z.discriminatedUnion('kind', [
 ])
 export type Shape = z.infer<typeof shapeSchema>
 
-export const obstacleSchema = z.strictObject({
+const obstacleSchema = z.strictObject({
   id,
   name: label,
   kind: z.enum([
@@ -113,7 +113,7 @@ export const obstacleSchema = z.strictObject({
 })
 export type Obstacle = z.infer<typeof obstacleSchema>
 
-export const tableSchema = z.strictObject({
+const tableSchema = z.strictObject({
   id,
   centre: point,
   size: z.tuple([z.number().positive(), z.number().positive()]),
@@ -151,7 +151,7 @@ const moveSchema = z.strictObject({
  * coordinate it decides, so margins and fluxes take their uncertainty from it. A coordinate that no dimension moves
  * has ± 25 mm (house rule).
  */
-export const dimensionSchema = z.strictObject({
+const dimensionSchema = z.strictObject({
   id,
   label,
   value: z.number(),
