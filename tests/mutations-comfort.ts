@@ -79,7 +79,7 @@ export const comfortMutations: readonly Mutation[] = [
     ['scale(view.emitter.frame.u, -sine)', 'scale(view.emitter.frame.u, sine)'],
     ['if (first <= 0 && last <= 0) return [0, 0, 0]', 'if (first <= 0 && last <= 0) return flux.vector'],
     ['return first > 0\n', 'return first < 0\n'],
-    ['strong.slice(0, starts)', 'strong.slice(0, 0)'],
+    ['planeStarts(vectorsByHeater(lit))', 'vectorsByHeater(lit)'],
   ),
   ...within(
     'comfort/level-sight.ts',

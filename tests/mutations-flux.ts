@@ -85,7 +85,7 @@ export const fluxMutations: readonly Mutation[] = [
     ['const along = -transmittance * sine', 'const along = transmittance * sine'],
     ['of planeStarts(vectors)', 'of [whole]'],
   ),
-  ...within('domain/flux/plane-starts.ts', largest, ['...sumsByPairs(strong)', '']),
+  ...within('domain/flux/plane-starts.ts', largest, ['offerSumsByPairs(strong, longest)', '']),
   ...within('domain/flux/emitter.ts', seats, ['radiantPower: radiantPower / centres.length', 'radiantPower']),
   ...within('domain/layout/body.ts', seats, [
     'body.half.w - model.elementAboveLowest',

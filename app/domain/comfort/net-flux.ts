@@ -1,5 +1,6 @@
 import { elementView, normalIn, stretchOf, type ElementView } from '#app/domain/flux/element-view.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
+import { planeStarts } from '#app/domain/flux/plane-starts.ts'
 import { add, dot, lengthOf, normalise, scale, type Vec3 } from '#app/domain/vector.ts'
 
 /** What one element alone sends to a point, kept so that planes of any direction can be tried on it cheaply. */
@@ -52,30 +53,39 @@ export function irradianceByNormal(fluxes: readonly (NetFlux | null)[]): (normal
   return (normal) => dot(fluxInFront(lit, rows, normal), normal)
 }
 
-/** How many of the strongest elements the search starts from, besides the whole. */
-const starts = 24
+/** With more elements than this the weakest join only for the last climb. */
+const mostStrong = 24
 
-/** Share of all flux that the search may leave to its last climb, when there are more elements than starts. */
+/** Share of all flux that they may give together. */
 const leftOut = 1e-3
 
 /**
  * Direction of the plane that receives most, from what the elements send; up without any. Irradiance is a convex
  * function of the normal and its gradient is the net flux in front, so turning the plane to that vector never lowers it;
- * repeated from the whole flux and from the strongest elements. As `largestIrradianceAt`, from fluxes already reckoned.
- * With more than 24 elements the weakest, 0.1 % of the flux together, join only for the last climb: where two directions
- * are equal to that share, the result may be the lesser.
+ * repeated from the starts of `largestIrradianceAt`, heater by heater, from fluxes already reckoned. With more than 24 elements the
+ * weakest, 0.1 % of the flux together, join only for the last climb: where two directions are equal to that share, the
+ * result may be the lesser.
  */
 export function largestDirection(fluxes: readonly (NetFlux | null)[]): Vec3 {
   const lit = fluxes.filter((flux) => flux !== null)
-  const strong = lit.length > starts ? strongestOf(lit) : lit
-  const whole = lit.reduce<Vec3>((sum, { vector }) => add(sum, vector), [0, 0, 0])
+  const strong = lit.length > mostStrong ? strongestOf(lit) : lit
   const rows = rowsOf(strong)
   let best: Found = { size: 0, direction: [0, 0, 1] }
-  for (const start of [whole, ...strong.slice(0, starts).map(({ vector }) => vector)]) {
+  for (const start of planeStarts(vectorsByHeater(lit))) {
     const found = climb(strong, rows, normalise(start))
     if (found.size > best.size) best = found
   }
   return strong === lit ? best.direction : climb(lit, rowsOf(lit), best.direction).direction
+}
+
+/** Net flux of the elements of each heater together: elements side by side share a frame, and planes see them alike. */
+function vectorsByHeater(fluxes: readonly NetFlux[]): Vec3[] {
+  const sums = new Map<unknown, Vec3>()
+  for (const { vector, view } of fluxes) {
+    const { frame } = view.emitter
+    sums.set(frame, add(sums.get(frame) ?? [0, 0, 0], vector))
+  }
+  return [...sums.values()]
 }
 
 /** The strongest elements first, without the weakest that together give less than `leftOut`. */

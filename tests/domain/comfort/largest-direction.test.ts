@@ -55,6 +55,22 @@ describe('largest irradiance at a head from kept fluxes', () => {
     )
   })
 
+  it('is that of the flux engine between wall heaters that look at the head from all sides', () => {
+    const wall = fc.record({ turn: fc.integer({ min: 0, max: 35 }), power: fc.integer({ min: 100, max: 2000 }) })
+    fc.assert(
+      fc.property(fc.array(wall, { minLength: 3, maxLength: 7 }), (walls) => {
+        const models = new Map(walls.map(({ power }, i) => [`m${i}`, model({ code: `m${i}`, elementLength: 1e-3, radiantEfficiency: power / 2000 })])) // prettier-ignore
+        const placed = walls.map(({ turn }, i) => {
+          const place = { x: 3 * Math.cos((turn * Math.PI) / 18), y: 3 * Math.sin((turn * Math.PI) / 18) }
+          return heater(`H${i}`, { ...place, model: `m${i}`, turnDeg: turn * 10 + 90, tiltDeg: 90, lowestPoint: 1 })
+        })
+        const { kept, searched } = bothWays(placed, seat('S1'), models)
+        expect(kept).toBeGreaterThanOrEqual(searched * (1 - 1e-6))
+      }),
+      { numRuns: 300, seed: 21 },
+    )
+  })
+
   it('loses no more than 0.1 % where many far heaters are left to the last climb', () => {
     const many = Array.from({ length: 90 }, (_, i) =>
       heater(`H${i}`, {
