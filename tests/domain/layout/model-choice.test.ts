@@ -71,6 +71,11 @@ describe('the support near a heater', () => {
     expect(supportNear(beamedSite, near, wide)).toBe('beam-0')
     expect(supportNear(beamedSite, { ...near, memberId: null, x: 1.6 }, wide)).toBe('beam-1')
   })
+  it('is the nearest where the manual states no reach, or no model is known', () => {
+    const far = heaterAt('H1', 1.6, 2, { mount: 'drop rods', memberId: 'beam-0' })
+    expect(supportNear(beamedSite, far, model && { ...model, mountReach: {} })).toBe('beam-1')
+    expect(supportNear(beamedSite, far, undefined)).toBe('beam-1')
+  })
   it('is a pole for a clamp and a wall for a bracket', () => {
     expect(supportNear(beamedSite, heaterAt('H1', 4.2, 5, { mount: 'pole clamp', memberId: null }), model)).toBe(
       'pole-1',
