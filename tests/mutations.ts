@@ -40,7 +40,7 @@ function outcomeOf(folder: string, test: string): Outcome {
   const { status, stderr } = spawnSync(process.execPath, [vitest, ...run], {
     cwd: folder,
     encoding: 'utf8',
-    timeout: 300_000,
+    timeout: 600_000,
   })
   try {
     const { numPassedTests, testResults } = report.parse(JSON.parse(readFileSync(output, 'utf8')))
