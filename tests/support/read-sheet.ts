@@ -1,5 +1,5 @@
 import type { Page } from '@playwright/test'
-import { PNG } from 'pngjs'
+import type { PNG } from 'pngjs'
 
 /** A place on the sheet in the SVG's own units. */
 export interface Place {
