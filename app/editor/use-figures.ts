@@ -1,10 +1,11 @@
-import { useMemo } from 'react'
+import { useDeferredValue, useMemo } from 'react'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import { layoutTotals, seatWarmth } from '#app/domain/comfort/seat-warmth.ts'
-import { layoutFigures, type LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
+import type { LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
 import { obstructionsOf } from '#app/domain/flux/shading.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
+import { checkLayout } from '#app/domain/rules/check-layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { useAlive } from '#app/editor/use-media.ts'
 
@@ -15,15 +16,6 @@ export interface FiguresInput {
   readonly layout: Layout
   readonly models: ReadonlyMap<string, HeaterModel>
   readonly shade: boolean
-}
-
-/** The seats' figures, the totals and the findings of a layout. Findings are of the plain figures, without shade. */
-function figuresOf({ shade, ...plain }: FiguresInput): LayoutFigures {
-  const figures = layoutFigures(plain)
-  if (!shade) return figures
-  const { site, brief, layout, models } = plain
-  const warmth = seatWarmth({ ...plain, obstructions: obstructionsOf(site, layout, models) })
-  return { ...figures, warmth, totals: layoutTotals(warmth, layout, models, brief) }
 }
 
 /** Before the page is alive: the last digits of a figure may differ between two machines, so the server shows none. */
@@ -46,11 +38,26 @@ const notYet: LayoutFigures = {
   findings: [],
 }
 
-/** The figures of the layout shown, reckoned anew only when something they rest on changed. */
+/**
+ * The figures of the layout shown. Seats and totals are of this very frame; the findings are reckoned right after it, in
+ * a turn of their own, so that a frame of a drag does not wait for them. Findings are of the plain figures, without shade.
+ */
 export function useFigures({ site, brief, layout, models, shade }: FiguresInput): LayoutFigures {
   const alive = useAlive()
-  return useMemo(
-    () => (alive ? figuresOf({ site, brief, layout, models, shade }) : notYet),
-    [alive, site, brief, layout, models, shade],
+  const plain = useMemo(
+    () => ({ layout, warmth: alive ? seatWarmth({ site, brief, layout, models }) : notYet.warmth }),
+    [alive, site, brief, layout, models],
   )
+  const shown = useMemo(() => {
+    if (!alive) return notYet
+    const obstructions = shade ? obstructionsOf(site, layout, models) : null
+    const warmth = obstructions ? seatWarmth({ site, brief, layout, models, obstructions }) : plain.warmth
+    return { warmth, totals: layoutTotals(warmth, layout, models, brief) }
+  }, [alive, site, brief, layout, models, shade, plain])
+  const late = useDeferredValue(plain)
+  const findings = useMemo(
+    () => (alive ? checkLayout({ site, brief, models, ...late }) : notYet.findings),
+    [alive, site, brief, models, late],
+  )
+  return useMemo(() => ({ ...shown, findings }), [shown, findings])
 }

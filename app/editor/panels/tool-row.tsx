@@ -1,4 +1,4 @@
-import { useState } from 'react'
+import { memo, useState } from 'react'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
 import type { Site } from '#app/domain/site/site.ts'
@@ -214,6 +214,9 @@ export interface LegendReading {
 
 const pen = screenPen('dusk')
 
+/** Drawn again only when the scale or the figure changes. */
+const StillLegend = memo(LegendDrawing)
+
 /** The one scale with a tick at the figure that is pointed at. */
 export function MapLegend({ scale, store, site, emitters, plane, answer, isFlux }: LegendReading) {
   const pointed = usePointed(store)
@@ -221,7 +224,7 @@ export function MapLegend({ scale, store, site, emitters, plane, answer, isFlux 
   const reading = pointed && !isFlux && answer ? mapValueAt(answer, pointed.at) : flux
   return (
     <span className="inline-block h-10 w-78 flex-none overflow-hidden">
-      <LegendDrawing
+      <StillLegend
         name="scale"
         quantity={scale}
         pen={pen}
