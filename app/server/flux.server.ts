@@ -4,6 +4,7 @@ import { availableParallelism } from 'node:os'
 import { dirname, join } from 'node:path'
 import { fileURLToPath, pathToFileURL } from 'node:url'
 import { Worker } from 'node:worker_threads'
+import type { explainSeat, Explanation } from '#app/domain/comfort/explain.ts'
 import type { FiguresQuestion, LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
 import type { SeatWarmth, WarmthInput } from '#app/domain/comfort/seat-warmth.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
@@ -139,6 +140,13 @@ export async function layoutFiguresOffThread(input: FiguresQuestion): Promise<La
   const outcome = await outcomeOf({ kind: 'figures', input })
   if (outcome.kind !== 'figures') throw unexpected(outcome)
   return outcome.figures
+}
+
+/** `explainSeat` off the event loop: its tolerance asks for the figure again and again. */
+export async function explainSeatOffThread(...asked: Parameters<typeof explainSeat>): Promise<Explanation | null> {
+  const outcome = await outcomeOf({ kind: 'explanation', asked })
+  if (outcome.kind !== 'explanation') throw unexpected(outcome)
+  return outcome.explanation
 }
 
 /** Ends the threads; what is under way fails. For the server's shutdown and for tests. */

@@ -1,3 +1,4 @@
+import { explainSeat, type Explanation } from '#app/domain/comfort/explain.ts'
 import { layoutFigures, type FiguresQuestion, type LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
 import { seatWarmth, type SeatWarmth, type WarmthInput } from '#app/domain/comfort/seat-warmth.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
@@ -24,6 +25,7 @@ export type FluxTask =
   | { readonly kind: 'points'; readonly emitters: readonly Emitter[]; readonly points: readonly FluxPoint[] }
   | { readonly kind: 'warmth'; readonly input: WarmthInput }
   | { readonly kind: 'figures'; readonly input: FiguresQuestion }
+  | { readonly kind: 'explanation'; readonly asked: Parameters<typeof explainSeat> }
 
 /** What a flux thread answers; `refused` says which figure has no meaning or which limit is passed. */
 export type FluxOutcome =
@@ -31,6 +33,7 @@ export type FluxOutcome =
   | { readonly kind: 'points'; readonly fluxes: PointFluxes }
   | { readonly kind: 'warmth'; readonly warmth: SeatWarmth[] }
   | { readonly kind: 'figures'; readonly figures: LayoutFigures }
+  | { readonly kind: 'explanation'; readonly explanation: Explanation | null }
   | { readonly kind: 'refused'; readonly message: string }
 
 function pointFluxesOf(emitters: readonly Emitter[], points: readonly FluxPoint[]): PointFluxes {
@@ -42,6 +45,7 @@ function outcomeOf(task: FluxTask, cache: MapCache): FluxOutcome {
   if (task.kind === 'map') return { kind: 'map', answer: answerMap(task.question, cache) }
   if (task.kind === 'warmth') return { kind: 'warmth', warmth: seatWarmth(task.input) }
   if (task.kind === 'figures') return { kind: 'figures', figures: layoutFigures(task.input) }
+  if (task.kind === 'explanation') return { kind: 'explanation', explanation: explainSeat(...task.asked) }
   return { kind: 'points', fluxes: pointFluxesOf(task.emitters, task.points) }
 }
 

@@ -1,9 +1,10 @@
 import { z } from 'zod'
-import { explainSeat } from '#app/domain/comfort/explain.ts'
 import { windNames } from '#app/domain/comfort/seat-warmth.ts'
 import { isRefusal, respond } from '#app/server/answers.server.ts'
+import { refuseComputation } from '#app/server/computation-refusal.server.ts'
 import { findLaidOut } from '#app/server/data/laid-out.server.ts'
 import { requireVariant } from '#app/server/data/variants.server.ts'
+import { explainSeatOffThread } from '#app/server/flux.server.ts'
 import { checked } from '#app/server/json-body.server.ts'
 import { missing } from '#app/server/missing.server.ts'
 import type { Route } from './+types/seat-explanation'
@@ -27,7 +28,13 @@ export async function loader({ request, params }: Route.LoaderArgs) {
   if (isRefusal(figure)) return respond(figure)
   const laid = await findLaidOut(open)
   if (!laid) throw missing(request, 'variant')
-  const explanation = explainSeat({ ...laid, layout: laid.variant }, params.seatId, figure.value)
+  const { site, brief, models, variant } = laid
+  const explanation = await explainSeatOffThread(
+    { site, brief, models, layout: variant },
+    params.seatId,
+    figure.value,
+  ).catch(refuseComputation)
+  if (explanation instanceof Response) return explanation
   if (!explanation) throw missing(request, 'seat')
   return Response.json(explanation)
 }
