@@ -2,7 +2,7 @@ import { randomBytes } from 'node:crypto'
 import { type MiddlewareFunction, createContext } from 'react-router'
 import { env } from '#app/server/env.server.ts'
 import { comesFromOurselves } from '#app/server/origin.server.ts'
-import { protectResponse } from '#app/server/response-headers.server.ts'
+import { protectEveryAnswer, protectResponse } from '#app/server/response-headers.server.ts'
 import { requireMember } from '#app/server/session.server.ts'
 
 /** The nonce of this answer's inline scripts and styles; undefined in development, where none is checked. */
@@ -56,6 +56,9 @@ const checkOrigin: MiddlewareFunction<Response> = ({ request }) => {
 const checkMember: MiddlewareFunction<Response> = async ({ request, pattern }) => {
   if (!isOpen(pattern)) await requireMember(request)
 }
+
+// The development server is the framework's own and loads this file again and again.
+if (env.NODE_ENV !== 'development') protectEveryAnswer()
 
 /** What the root route puts before every loader and action, outermost first. */
 export const middleware = [protect, checkOrigin, limitBody, checkMember]

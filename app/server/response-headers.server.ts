@@ -1,3 +1,5 @@
+import { subscribe } from 'node:diagnostics_channel'
+import { ServerResponse } from 'node:http'
 import { env } from '#app/server/env.server.ts'
 
 /** The policy of a page: nothing from elsewhere, no inline script without the nonce of this very answer. */
@@ -28,6 +30,31 @@ const always = {
   'Permissions-Policy': 'camera=(), geolocation=(), microphone=(), payment=(), usb=()',
   'Cross-Origin-Opener-Policy': 'same-origin',
   'Cross-Origin-Resource-Policy': 'same-origin',
+}
+
+/** What an answer carries that none of our routes gave: a file, an address that cannot be read. */
+const unlessGiven = {
+  ...always,
+  'Content-Security-Policy': "default-src 'self'; style-src 'self' 'unsafe-inline'; frame-ancestors 'none'",
+}
+
+/**
+ * Gives every answer of this process its headers, also those that the server sends before or beside our routes. A
+ * header that is set already stays as it is.
+ */
+export function protectEveryAnswer(): void {
+  subscribe('http.server.request.start', (message) => {
+    if (typeof message !== 'object' || message === null || !('response' in message)) return
+    const { response } = message
+    if (!(response instanceof ServerResponse)) return
+    const { writeHead } = response
+    response.writeHead = (...given: unknown[]) => {
+      for (const [name, value] of Object.entries(unlessGiven)) {
+        if (!response.hasHeader(name)) response.setHeader(name, value)
+      }
+      return Reflect.apply(writeHead, response, given)
+    }
+  })
 }
 
 /** Adds what every answer carries; a route that set its own policy or its own caching keeps it. */
