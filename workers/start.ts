@@ -1,10 +1,11 @@
+import '#workers/start-configuration.ts'
 import { createHmac } from 'node:crypto'
 import { createServer } from 'node:net'
 import path from 'node:path'
 import { setTimeout as wait } from 'node:timers/promises'
 import { fileURLToPath } from 'node:url'
 import { StartProblem } from '#drizzle/postgres-binaries.ts'
-import { demoAddress, demoPassword, hasDemoAccounts } from '#drizzle/seed/accounts.ts'
+import { demoAddress, demoPassword, hasDemoAccounts, hasNoAccounts } from '#drizzle/seed/accounts.ts'
 import { buildWhenChanged } from '#workers/start-build.ts'
 import { type PreparedDatabase, prepareDatabase } from '#workers/start-database.ts'
 import { type Companion, keepRunning } from '#workers/start-processes.ts'
@@ -94,6 +95,8 @@ async function waitUntilAlive(): Promise<void> {
 
 async function greet(database: PreparedDatabase): Promise<void> {
   console.log(`\n  Inglefield  ${origin}\n`)
+  if (await hasNoAccounts(database.urls.auth))
+    console.log('  Nobody has an account yet. Make the first: npm run owner\n')
   if (!isLoopbackOnly())
     return console.log('  Demonstration accounts (…@inglefield.test) are refused at this address.\n')
   if (await hasDemoAccounts(database.urls.auth)) {

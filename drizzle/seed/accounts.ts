@@ -34,10 +34,18 @@ async function addOrganisation(database: NodePgDatabase, name: string, slug: str
   return row.id
 }
 
-async function addPerson(database: NodePgDatabase, organisationId: string, role: Role, name: string, email: string) {
+/** Somebody who gets an account. */
+interface NewPerson {
+  readonly name: string
+  readonly email: string
+  readonly password: string
+}
+
+async function addPerson(database: NodePgDatabase, organisationId: string, role: Role, person: NewPerson) {
+  const { name, email } = person
   const [row] = await database.insert(user).values({ name, email, emailVerified: true }).returning({ id: user.id })
   if (!row) throw new Error('The account was not made.')
-  const password = await hashPassword(demoPassword)
+  const password = await hashPassword(person.password)
   await database.insert(account).values({ accountId: row.id, providerId: 'credential', userId: row.id, password })
   await database.insert(member).values({ organizationId: organisationId, userId: row.id, role })
   return row.id
@@ -77,7 +85,8 @@ export function seedAccounts(authUrl: string): Promise<DemoAccounts> {
   return withAuthRole(authUrl, (database) =>
     database.transaction(async (tx) => {
       const organisationId = await addOrganisation(tx, 'Osierfold Terrace Heating', 'osierfold')
-      const add = (role: Role) => addPerson(tx, organisationId, role, names[role], demoAddress(role))
+      const add = (role: Role) =>
+        addPerson(tx, organisationId, role, { name: names[role], email: demoAddress(role), password: demoPassword })
       const people = {
         owner: await add('owner'),
         designer: await add('designer'),
@@ -86,8 +95,33 @@ export function seedAccounts(authUrl: string): Promise<DemoAccounts> {
         installer: await add('installer'),
       } satisfies Record<(typeof roles)[number], string>
       const otherOrganisationId = await addOrganisation(tx, 'Quillet Verandas', 'quillet')
-      const otherPersonId = await addPerson(tx, otherOrganisationId, 'owner', 'Odo Quillet', 'owner@quillet.test')
+      const other = { name: 'Odo Quillet', email: 'owner@quillet.test', password: demoPassword }
+      const otherPersonId = await addPerson(tx, otherOrganisationId, 'owner', other)
       return { organisationId, people, otherOrganisationId, otherPersonId }
+    }),
+  )
+}
+
+/** Words as an organisation's unique short name. */
+const slugOf = (name: string) => name.toLowerCase().replace(/[^\p{L}\p{N}]+/gu, '-')
+
+/**
+ * Makes an organisation and the account of its owner, all or nothing; null when an organisation is called so, or the
+ * address (in small letters) has an account, already.
+ */
+export function addOwner(
+  authUrl: string,
+  organisation: string,
+  owner: NewPerson,
+): Promise<{ readonly organisationId: string; readonly authorId: string } | null> {
+  const slug = slugOf(organisation)
+  return withAuthRole(authUrl, (database) =>
+    database.transaction(async (tx) => {
+      const named = await tx.select({ id: organization.id }).from(organization).where(eq(organization.slug, slug))
+      const known = await tx.select({ id: user.id }).from(user).where(eq(user.email, owner.email))
+      if (named.length > 0 || known.length > 0) return null
+      const organisationId = await addOrganisation(tx, organisation, slug)
+      return { organisationId, authorId: await addPerson(tx, organisationId, 'owner', owner) }
     }),
   )
 }

@@ -110,6 +110,9 @@ async function fillOrganisation(appUrl: string, author: Author, demos: readonly 
   )
 }
 
+/** Gives an organisation without jobs and catalogue the invented catalogue. */
+export const addCatalogue = (appUrl: string, author: Author): Promise<boolean> => fillOrganisation(appUrl, author, [])
+
 /**
  * Puts the demonstration into an empty database: accounts, catalogue, three jobs, and a second organisation with one
  * job of its own. A database with other accounts is left alone; a half-made demonstration is completed. Tells whether

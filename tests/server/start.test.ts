@@ -33,11 +33,14 @@ interface Start {
 }
 
 /** `npm start` as a person types it, with folders and ports of its own. */
-function start(env: Record<string, string>): Start {
-  const child = spawn(process.execPath, ['--import', 'tsx', 'workers/start.ts'], {
+const start = (env: Record<string, string>): Start => run(env, ['workers/start.ts'], '')
+
+function run(env: Record<string, string>, script: string[], typed: string): Start {
+  const child = spawn(process.execPath, ['--import', 'tsx', ...script], {
     env: { ...process.env, NODE_ENV: '', DATABASE_URL: '', DATABASE_AUTH_URL: '', DATABASE_OWNER_URL: '', ...env },
-    stdio: ['ignore', 'pipe', 'pipe'],
+    stdio: ['pipe', 'pipe', 'pipe'],
   })
+  child.stdin.end(typed)
   let text = ''
   child.stdout.on('data', (part) => (text += part))
   child.stderr.on('data', (part) => (text += part))
@@ -65,6 +68,21 @@ const statusOf = async (url: string) => (await fetch(url, { redirect: 'manual' }
 const ports = { web: await freePort(), database: await freePort() }
 const origin = `http://127.0.0.1:${ports.web}`
 const env = { DATA_FOLDER: folder, PORT: String(ports.web), DATABASE_PORT: String(ports.database) }
+/** What the framework answers by itself, before any of our routes: files, addresses it cannot read. */
+async function expectHeaders(paths: readonly string[]): Promise<void> {
+  for (const path of paths) {
+    const { headers } = await fetch(origin + path)
+    expect(headers.get('X-Content-Type-Options'), path).toBe('nosniff')
+    expect(headers.get('X-Frame-Options'), path).toBe('DENY')
+    // The framework's own error page brings the stricter of the two.
+    expect(headers.get('Content-Security-Policy'), path).toMatch(/frame-ancestors 'none'|^default-src 'none'$/)
+    expect(headers.get('Referrer-Policy'), path).toBe('same-origin')
+  }
+  const malformed = await fetch(`${origin}/sign-in`, { method: 'POST', headers: { Origin: 'no origin' }, body: '' })
+  expect(malformed.status).toBeGreaterThanOrEqual(400)
+  expect(malformed.headers.get('X-Content-Type-Options')).toBe('nosniff')
+}
+
 const isUp = (begun: Start) => async () => {
   if (begun.child.exitCode !== null) throw new Error(begun.said())
   return begun.said().includes('Sign in as')
@@ -84,6 +102,8 @@ describe('npm start', () => {
     expect(first.said()).toContain('designer@inglefield.test')
     expect(await statusOf(`${origin}/readyz`)).toBe(200)
     expect(await statusOf(`${origin}/jobs`)).toBe(302)
+    expect(first.said()).not.toContain('.env')
+    await expectHeaders(['/icon.svg', '/%ff', '/assets/none.js'])
     first.child.kill('SIGTERM')
     expect(await first.ended).toBe(0)
     expect(await statusOf(`${origin}/healthz`)).toBe(0)
@@ -121,6 +141,31 @@ describe('npm start', () => {
     expect(answer.status).toBe(401)
     expect(answer.headers.get('Strict-Transport-Security')).toContain('max-age')
   }, 120_000)
+
+  it('serves elsewhere whom npm run owner made, once', async () => {
+    const make = (password: string) =>
+      run(env, ['workers/start-owner.ts', 'Hazel & Rime', 'Ada Hazel', 'Ada@rime.example'], `${password}\n`)
+    const short = make('too short')
+    expect([await short.ended, short.said()]).toEqual([1, expect.stringContaining('12 to 128 characters')])
+    const made = make('nine warm evenings')
+    expect([await made.ended, made.said()]).toEqual([0, expect.stringContaining('ada@rime.example is the owner of')])
+    const again = make('nine warm evenings')
+    expect([await again.ended, again.said()]).toEqual([1, expect.stringContaining('is there already')])
+
+    const open = start({ ...env, PUBLIC_ORIGIN: 'https://terraces.example' })
+    await until(() => open.said().includes('refused at this address'), 60_000)
+    const answer = await fetch(`${origin}/sign-in`, {
+      method: 'POST',
+      redirect: 'manual',
+      headers: { Origin: 'https://terraces.example' },
+      body: new URLSearchParams({ email: 'ada@rime.example', password: 'nine warm evenings' }),
+    })
+    expect([answer.status, answer.headers.get('Location')]).toEqual([302, '/jobs'])
+    const cookie = answer.headers.getSetCookie()[0]?.split(';')[0] ?? ''
+    const heaters = await fetch(`${origin}/api/heaters`, { headers: { Cookie: cookie } })
+    expect(await heaters.text()).toContain('betony-2-0')
+    expect(await (await fetch(`${origin}/api/jobs`, { headers: { Cookie: cookie } })).json()).toEqual({ jobs: [] })
+  }, 180_000)
 
   it.each([
     ['a folder that was left half made', { 'pg/PG_VERSION': '15\n' }, /is not whole .*pg_control.*mv /s],
