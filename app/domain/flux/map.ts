@@ -46,14 +46,22 @@ function layerOf(grid: Grid, emitter: Emitter, extent: Extent, obstructions: rea
     for (const element of emitter.elements) addElement(values, window, emitter, element)
     return { emitter, window, values }
   }
-  const own = new Float32Array(values.length)
-  for (const element of emitter.elements) {
-    own.fill(0)
+  emitter.elements.forEach((element, i) => {
+    const own = i === 0 ? values : emptyRoom(values.length)
     addElement(own, window, emitter, element)
     shadeElement(own, window, emitter, element, obstructions)
-    for (let at = 0; at < own.length; at++) values[at] = (values[at] ?? 0) + (own[at] ?? 0)
-  }
+    if (i > 0) for (let at = 0; at < own.length; at++) values[at] = (values[at] ?? 0) + (own[at] ?? 0)
+  })
   return { emitter, window, values }
+}
+
+let room = new Float32Array(0)
+
+/** Zeros for one element at a time, in the same room each time. */
+function emptyRoom(length: number): Float32Array {
+  if (room.length === length) room.fill(0)
+  else room = new Float32Array(length)
+  return room
 }
 
 /** Adds a layer to the sum, or takes it out again with sign −1: exact but for the last digit of the sum. */
