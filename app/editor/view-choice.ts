@@ -1,3 +1,4 @@
+import { planesOf } from '#app/domain/site/planes.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { WindName } from '#app/domain/comfort/seat-warmth.ts'
 
@@ -25,20 +26,6 @@ export interface ViewChoice {
 
 /** Opens on irradiance at the body plane, unshaded. */
 export const plainView: ViewChoice = { map: { kind: 'flux' }, plane: { kind: 'body' }, fluxUnit: 'W/m²', shade: false }
-
-/** The height most seats have; the lower of two that are equally common; ISO 7726's seated heights without seats. */
-function commonHeight(site: Site, of: 'bodyHeight' | 'headHeight'): number {
-  const counts = new Map<number, number>()
-  for (const seat of site.seats) counts.set(seat[of], (counts.get(seat[of]) ?? 0) + 1)
-  const [best] = [...counts].sort((a, b) => b[1] - a[1] || a[0] - b[0])
-  return best?.[0] ?? (of === 'bodyHeight' ? 0.6 : 1.1)
-}
-
-/** Heights of the body and head planes of a site, m. */
-export const planesOf = (site: Site): { readonly body: number; readonly head: number } => ({
-  body: commonHeight(site, 'bodyHeight'),
-  head: commonHeight(site, 'headHeight'),
-})
 
 /** Height of the chosen plane, m. */
 export const planeHeight = (plane: PlaneChoice, site: Site): number =>

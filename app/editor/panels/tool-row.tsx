@@ -1,6 +1,7 @@
 import { memo, useState } from 'react'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { planesOf } from '#app/domain/site/planes.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { parseLength } from '#app/domain/units.ts'
 import { LegendDrawing } from '#app/drawing/heat/legend.tsx'
@@ -12,7 +13,7 @@ import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { MapAnswer } from '#app/drawing/heat/map-picture.ts'
 import { usePointed, type PointedStore } from '#app/editor/pointed.ts'
 import { mapValueAt, readingAt } from '#app/editor/read-out.tsx'
-import { planeHeight, planesOf, type FluxUnit, type MapChoice, type ViewChoice } from '#app/editor/view-choice.ts'
+import { planeHeight, type FluxUnit, type MapChoice, type ViewChoice } from '#app/editor/view-choice.ts'
 
 interface ToolRowProps {
   readonly site: Site
