@@ -14,7 +14,7 @@ export function poolOf(connectionString: string, name: string, max = 10): Pool {
     application_name: name,
     connectionTimeoutMillis: 2500,
     statement_timeout: 10_000,
-    idle_in_transaction_session_timeout: 15_000,
+    idle_in_transaction_session_timeout: 60_000,
   })
   const report = (problem: Error) => console.error(`Database connection (${name}) lost: ${problem.message}`)
   pool.on('error', report)
