@@ -209,7 +209,8 @@ describe.each(closed)('$pattern', ({ line, reach }) => {
         expect(status).toBeLessThan(500)
       }
     }
-  })
+    // Pictures are drawn for every role that may have them.
+  }, 90_000)
 })
 
 describe('with row-level security switched off, the application alone', () => {
