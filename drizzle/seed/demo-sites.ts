@@ -163,6 +163,7 @@ function siteOf(place: DemoPlace): Site {
     displayUnits: place.displayUnits,
     floor,
     beyond: [{ edge: 2, ...beyondFarEdge[place.id] }],
+    levels: [],
     covers: coversOf(place, length, depth),
     members: place.supports.flatMap(memberOf),
     walls: place.supports.flatMap((support) => wallOf(support, length)),
@@ -185,6 +186,7 @@ function siteOf(place: DemoPlace): Site {
       headHeight: metres(seat.headHeight),
     })),
     dimensions: [],
+    trace: null,
   })
   return siteSchema.parse({ ...site, dimensions: place.dims.map((given, i) => dimensionOf(given, i, site)) })
 }

@@ -27,6 +27,7 @@ export const smallTerrace: Site = siteSchema.parse({
     [0, 3],
   ],
   beyond: [{ edge: 2, kind: 'water', name: 'pond' }],
+  levels: [],
   covers: [
     {
       id: 'cover',
@@ -86,6 +87,7 @@ export const smallTerrace: Site = siteSchema.parse({
   tables: [{ id: 'T1', centre: [2, 1.5], size: [0.8, 0.8], turnDeg: 0, height: 0.74, material: 'combustible' }],
   seats: [seat('T1-1', 1.35, 1.5, 0), seat('T1-2', 2.65, 1.5, 180)],
   dimensions: [],
+  trace: null,
 })
 
 /** A short-wave heater of round figures. */

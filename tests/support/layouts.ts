@@ -32,6 +32,7 @@ export const beamedSite: Site = {
     [0, 6],
   ],
   beyond: [],
+  levels: [],
   covers: [],
   members: [0, 3, 6, 9, 12].map((x, i) => ({
     id: `beam-${i}`,
@@ -64,4 +65,5 @@ export const beamedSite: Site = {
   tables: [],
   seats: [],
   dimensions: [],
+  trace: null,
 }

@@ -13,6 +13,7 @@ export function plainSite(changes: Partial<Site> = {}): Site {
     displayUnits: 'metric',
     floor: [[0, 0], [6, 0], [6, 4], [0, 4]], // prettier-ignore
     beyond: [],
+    levels: [],
     covers: [
       {
         id: 'roof',
@@ -58,6 +59,7 @@ export function plainSite(changes: Partial<Site> = {}): Site {
       },
     ],
     dimensions: [],
+    trace: null,
     ...changes,
   }
 }

@@ -51,6 +51,7 @@ export function startingSite({ name, displayUnits, floor }: JobRequest): Site {
       [0, depth],
     ],
     beyond: [],
+    levels: [],
     covers: [],
     members: [],
     walls: [],
@@ -62,5 +63,6 @@ export function startingSite({ name, displayUnits, floor }: JobRequest): Site {
       floorSize('floor length, x', length, 0, floor !== null),
       floorSize('floor depth, y', depth, 1, floor !== null),
     ],
+    trace: null,
   }
 }

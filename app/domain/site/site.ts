@@ -104,9 +104,15 @@ const obstacleSchema = z.strictObject({
     'other',
   ]),
   material: materialSchema,
-  /** A movable thing is judged both where it stands and away. */
+  /** A movable thing is judged in every state. */
   movable: z.boolean(),
+  /** Where it is, or of a movable thing all that it sweeps at its widest. */
   shape: shapeSchema,
+  /** The states of a movable thing by name, each with what it fills; none listed: `shape`, and away. */
+  states: z
+    .array(z.strictObject({ name: label.min(1), shape: shapeSchema.nullable() }))
+    .max(8)
+    .optional(),
   /** Share of the radiation that passes: 0 opaque, 1 clear. */
   transmittance: z.number().min(0).max(1),
   note: label.nullable(),
@@ -115,6 +121,8 @@ export type Obstacle = z.infer<typeof obstacleSchema>
 
 const tableSchema = z.strictObject({
   id,
+  /** Absent: rectangular. A round one has its diameter as both sizes. */
+  form: z.enum(['rectangular', 'round']).optional(),
   centre: point,
   size: z.tuple([z.number().positive(), z.number().positive()]),
   turnDeg: z.number(),
@@ -158,9 +166,24 @@ const dimensionSchema = z.strictObject({
   tolerance: z.number().nonnegative(),
   source: sizeSourceSchema,
   note: label.nullable(),
+  /** The photo it was measured in, and the marks there. */
+  photo: z.strictObject({ photoId: z.uuid(), measurementId: id }).optional(),
   moves: z.array(moveSchema),
 })
 export type Dimension = z.infer<typeof dimensionSchema>
+
+/** A part of the floor that lies higher or lower than the finished floor that heights are measured from, m. */
+const levelSchema = z.strictObject({ id, name: label, outline: z.array(point).min(3).max(200), height: height })
+export type Level = z.infer<typeof levelSchema>
+
+/** A picture laid under the plan to trace from: its lower left corner in plan, its scale by one known length. */
+const traceSchema = z.strictObject({
+  photoId: z.uuid(),
+  at: point,
+  metresPerPixel: z.number().positive().max(10),
+  turnDeg: z.number().min(-360).max(360),
+})
+export type Trace = z.infer<typeof traceSchema>
 
 /** The place as it is: lengths in m, x and y as `axes` says, z up from the finished floor. Ids are unique in a site. */
 export const siteSchema = z.strictObject({
@@ -173,6 +196,7 @@ export const siteSchema = z.strictObject({
   beyond: z.array(
     z.strictObject({ edge: z.int().nonnegative(), kind: z.enum(['water', 'garden', 'street', 'drop']), name: label }),
   ),
+  levels: z.array(levelSchema).max(20).default([]),
   covers: z.array(coverSchema).max(50),
   members: z.array(memberSchema).max(200),
   walls: z.array(wallSchema).max(100),
@@ -181,5 +205,6 @@ export const siteSchema = z.strictObject({
   tables: z.array(tableSchema).max(500),
   seats: z.array(seatSchema).max(2000),
   dimensions: z.array(dimensionSchema).max(500),
+  trace: traceSchema.nullable().default(null),
 })
 export type Site = z.infer<typeof siteSchema>

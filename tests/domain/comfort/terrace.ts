@@ -90,6 +90,7 @@ export const site = (seats: Seat[], change: Partial<Site> = {}): Site => ({
     [-5, 5],
   ],
   beyond: [],
+  levels: [],
   covers: [],
   members: [],
   walls: [],
@@ -98,6 +99,7 @@ export const site = (seats: Seat[], change: Partial<Site> = {}): Site => ({
   tables: [],
   seats,
   dimensions: [],
+  trace: null,
   ...change,
 })
 
