@@ -4,7 +4,7 @@ import { boxSolid, cylinderSolid, slabSolid, solidsOf, type Solid } from '#app/d
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { bodyOf } from '#app/domain/layout/body.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
-import type { Site } from '#app/domain/site/site.ts'
+import type { Obstacle, Shape, Site } from '#app/domain/site/site.ts'
 import { subtract, type Vec3 } from '#app/domain/vector.ts'
 
 /** A thing between heater and guest. Its solids count as one: transmittance is 0 opaque … 1 clear. Plain data. */
@@ -16,16 +16,28 @@ export interface Obstruction {
   readonly solids: readonly Solid[]
 }
 
-/** Where the movable things of a site are for this computation. */
+/**
+ * Where the movable things of a site are for this computation. 'in place': each fills all that it sweeps at its widest,
+ * the darkest that it can be. `states` names the state that some of them are in instead, by their ids.
+ */
 export interface ShadeState {
   readonly movable: 'in place' | 'away'
+  readonly states?: ReadonlyMap<string, string>
+}
+
+/** What an obstacle fills in the state stated for it; null when it is away. A state that it has not counts as unstated. */
+function shapeIn(obstacle: Obstacle, { movable, states }: ShadeState): Shape | null {
+  if (!obstacle.movable) return obstacle.shape
+  const stated = obstacle.states?.find(({ name }) => name === states?.get(obstacle.id))
+  if (stated) return stated.shape
+  return movable === 'in place' ? obstacle.shape : null
 }
 
 /** Thickness taken for a table top, m (house rule, no source). */
 const tableThickness = 0.04
 
 /**
- * Everything that can shade: obstacles (movable ones only when in place), table tops, poles and heaters' bodies. Walls
+ * Everything that can shade: obstacles (movable ones in the state stated; at their widest unless one is), table tops, poles and heaters' bodies. Walls
  * and covers bound the site and are left out.
  */
 export function obstructionsOf(
@@ -35,9 +47,11 @@ export function obstructionsOf(
   state: ShadeState = { movable: 'in place' },
 ): Obstruction[] {
   const opaque = { heaterId: null, transmittance: 0 }
-  const obstacles = site.obstacles
-    .filter((obstacle) => !obstacle.movable || state.movable === 'in place')
-    .map(({ id, shape, transmittance }) => ({ id, heaterId: null, transmittance, solids: solidsOf(shape) }))
+  const obstacles = site.obstacles.flatMap((obstacle) => {
+    const shape = shapeIn(obstacle, state)
+    const { id, transmittance } = obstacle
+    return shape ? [{ id, heaterId: null, transmittance, solids: solidsOf(shape) }] : []
+  })
   const tables = site.tables.map(({ id, centre, size, turnDeg, height }) => ({
     ...opaque,
     id,

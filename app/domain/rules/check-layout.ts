@@ -14,6 +14,7 @@ import type { Finding } from '#app/domain/rules/finding.ts'
 import { headFlux } from '#app/domain/rules/head-flux.ts'
 import { ingressProtection } from '#app/domain/rules/ingress-protection.ts'
 import { levelAxis } from '#app/domain/rules/level-axis.ts'
+import { plainWhereNoStatePasses } from '#app/domain/rules/movable-states.ts'
 import { mountOffered } from '#app/domain/rules/mount-offered.ts'
 import { mountingHeight } from '#app/domain/rules/mounting-height.ts'
 import { nearInfrared } from '#app/domain/rules/near-infrared.ts'
@@ -95,7 +96,8 @@ function heaterFindings(
   const known = ofSite.get(heater)
   if (known && known.brief === brief && known.model === model) return known.findings
   const check = { site, brief, heater, model, body: bodyOf(heater, model), support: supportOf(site, heater, model) }
-  const findings = [withdrawnModel(heater, model), ...heaterRules.flatMap((rule) => rule(check) ?? [])]
+  const found = heaterRules.flatMap((rule) => rule(check) ?? [])
+  const findings = [withdrawnModel(heater, model), ...plainWhereNoStatePasses(site, found)]
   ofSite.set(heater, { brief, model, findings })
   return findings
 }

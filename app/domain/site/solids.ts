@@ -13,6 +13,8 @@ export interface Solid extends ThingOf {
   readonly combustible: boolean
   /** The state in which a movable thing is there, as words: "door leaf: open"; null for a fixed thing. */
   readonly state: string | null
+  /** Index of that state in the thing's list; null for a fixed thing and one without a list. */
+  readonly stateIndex: number | null
   /** Furniture is judged by the front of the beam alone. */
   readonly furniture: boolean
   /** What its place rests on: itself, and the cover that a member follows. */
@@ -43,21 +45,21 @@ export function solidsOf(site: Site): Solid[] {
       const parts = keptParts(pole, () => [uprightCylinder(pole.at, pole.diameter / 2, [0, pole.top])])
       return fixed({ of: 'pole', id: pole.id }, pole.name, pole.material, parts)
     }),
-    ...site.obstacles.map((obstacle) => obstacleSolid(obstacle, nameOf(site, obstacle))),
+    ...site.obstacles.flatMap((obstacle) => obstacleSolids(obstacle, nameOf(site, obstacle))),
     ...site.tables.map(tableSolid),
   ]
 }
 
 const found = new WeakMap<Site, Map<string, Solid | null>>()
 
-/** The solid of one thing; null when the site has it not. Kept per site. */
-export function solidOf(site: Site, thing: ThingOf): Solid | null {
+/** The solid of one thing in one of its states; null when the site has it not. Kept per site. */
+export function solidOf(site: Site, thing: ThingOf & Pick<Solid, 'stateIndex'>): Solid | null {
   const known = found.get(site) ?? new Map<string, Solid | null>()
   found.set(site, known)
-  const key = `${thing.of} ${thing.id}`
+  const key = `${thing.of} ${thing.id} ${thing.stateIndex ?? ''}`
   const before = known.get(key)
   if (before !== undefined) return before
-  const solid = solidsOf(onlyWith(site, thing))[0] ?? null
+  const solid = solidsOf(onlyWith(site, thing)).find(({ stateIndex }) => stateIndex === thing.stateIndex) ?? null
   known.set(key, solid)
   return solid
 }
@@ -78,7 +80,8 @@ function onlyWith(site: Site, { of, id }: ThingOf): Site {
 }
 
 function fixed(thing: ThingOf, name: string, material: Material, parts: readonly Convex[]): Solid {
-  return { ...thing, name, parts, combustible: isCombustible(material), state: null, furniture: false, rests: [thing] }
+  const fixedThere = { state: null, stateIndex: null, furniture: false, rests: [thing] }
+  return { ...thing, name, parts, combustible: isCombustible(material), ...fixedThere }
 }
 
 /** A cover counts upward from its underside by this much, m; its real thickness is above, where no heater is. */
@@ -157,16 +160,39 @@ function nameOf({ obstacles }: Site, { id, name }: Obstacle): string {
   return obstacles.some((other) => other.name === name && other.id !== id) ? `${name} (${id})` : name
 }
 
-function obstacleSolid(obstacle: Obstacle, name: string): Solid {
-  const solid = fixed(
-    { of: 'obstacle', id: obstacle.id },
-    name,
-    obstacle.material,
-    keptParts(obstacle, () => shapeParts(obstacle.shape)),
-  )
-  const state = obstacle.movable ? `${name}: ${there[obstacle.kind] ?? 'in its place'}` : null
-  return { ...solid, state, furniture: obstacle.kind === 'furniture' }
+/**
+ * A fixed obstacle is one solid; a movable one a solid for each state in which it is there. One without a list of states
+ * is either there, filling all that it sweeps, or away.
+ */
+function obstacleSolids(obstacle: Obstacle, name: string): Solid[] {
+  return statesOf(obstacle, name).flatMap(({ words, shape }, i): Solid[] => {
+    if (!shape) return []
+    const parts = keptParts(shape, () => shapeParts(shape))
+    const solid = fixed({ of: 'obstacle', id: obstacle.id }, name, obstacle.material, parts)
+    const stateIndex = obstacle.movable && obstacle.states?.length ? i : null
+    return [{ ...solid, state: words, stateIndex, furniture: obstacle.kind === 'furniture' }]
+  })
 }
+
+/** A state of a thing: what a condition of use calls it, null for a fixed thing; and what it fills, null when away. */
+interface StateOf {
+  readonly words: string | null
+  readonly shape: Shape | null
+}
+
+function statesOf(obstacle: Obstacle, name: string): readonly StateOf[] {
+  const { movable, states, shape, kind } = obstacle
+  if (!movable) return [{ words: null, shape }]
+  if (states?.length) return states.map((state) => ({ words: `${name}: ${state.name}`, shape: state.shape }))
+  return [
+    { words: `${name}: ${there[kind] ?? 'in its place'}`, shape },
+    { words: `${name}: away`, shape: null },
+  ]
+}
+
+/** The states of a movable thing in the words of conditions of use; a fixed thing has none. */
+export const stateWords = (site: Site, obstacle: Obstacle): readonly string[] =>
+  statesOf(obstacle, nameOf(site, obstacle)).flatMap(({ words }) => words ?? [])
 
 /** Convex solids that make up a shape, m. */
 function shapeParts(shape: Shape): Convex[] {
