@@ -90,6 +90,7 @@ export function mapQuestion(
     quantity: quantityOf(subject, emitters),
     levels: scale.levels,
     edges: scale.edges,
+    written: scale.labelled,
     ...(choice.shade ? { obstructions: obstructionsOf(site, layout, models) } : {}),
   }
 }

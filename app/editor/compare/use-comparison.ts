@@ -3,11 +3,12 @@ import { useEffect, useState } from 'react'
 import { areaAtLeast, differenceOf } from '#app/domain/comparison/area.ts'
 import type { LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
 import type { Brief } from '#app/domain/brief/brief.ts'
+import type { MapQuantity } from '#app/domain/flux/map-question.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { MapAnswer } from '#app/drawing/heat/map-picture.ts'
-import { differenceScale, irradianceScale, overlapScale } from '#app/drawing/heat/quantity.ts'
+import { differenceScale, irradianceScale, overlapScale, type QuantityScale } from '#app/drawing/heat/quantity.ts'
 import { cellOf, emittersOf } from '#app/editor/map-questions.ts'
 import type { FluxWorker } from '#workers/flux.worker.ts'
 
@@ -90,11 +91,10 @@ async function answerMaps(
   const emitters = layout ? emittersOf(layout, models) : []
   if (emitters.length === 0) return update({ overlapArea: 0 })
   const shared = { emitters, floor: site.floor, z: plane, cell: cellOf(site, 'sharp') }
-  const { levels, edges } = irradianceScale('dusk', brief.target)
-  update({ flux: await remote.answerMap({ ...shared, quantity: { kind: 'flux' }, levels, edges }) })
-  const steps = overlapScale('dusk', threshold)
-  const quantity = { kind: 'overlap' as const, threshold }
-  const overlap = await remote.answerMap({ ...shared, quantity, levels: steps.levels, edges: steps.edges })
+  const asked = (quantity: MapQuantity, { levels, edges, labelled }: QuantityScale) =>
+    remote.answerMap({ ...shared, quantity, levels, edges, written: labelled })
+  update({ flux: await asked({ kind: 'flux' }, irradianceScale('dusk', brief.target)) })
+  const overlap = await asked({ kind: 'overlap', threshold }, overlapScale('dusk', threshold))
   update({ overlap, overlapArea: areaAtLeast(overlap.values, overlap.grid, 2) })
 }
 
