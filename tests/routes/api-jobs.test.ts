@@ -3,6 +3,7 @@ import { z } from 'zod'
 import type { JobRequest } from '#app/domain/job/job-request.ts'
 import { demoSites } from '#drizzle/seed/demo-sites.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
+import { badSites } from '#tests/support/bad-sites.ts'
 import { openApi, type ApiDesk } from '#tests/support/api.ts'
 
 const refusalSchema = z.looseObject({ error: z.string().min(1), path: z.string() })
@@ -114,6 +115,16 @@ describe('a site is kept only when it makes sense', () => {
       headers: { 'Idempotency-Key': key(), 'If-Match': '"3"' },
     })
     expect({ status: response.status, ...(await response.json()) }).toMatchObject({ status: 400, path })
+  })
+
+  it.each(badSites)('400 for %s, with the page’s words', async (_, site, path, words) => {
+    const response = await desk.as('designer')('PUT', `/api/jobs/${jobId}/site`, {
+      body: site,
+      headers: { 'Idempotency-Key': key(), 'If-Match': '"3"' },
+    })
+    const refusal = refusalSchema.parse(await response.json())
+    expect({ status: response.status, path: refusal.path }).toEqual({ status: 400, path })
+    expect(refusal.error).toMatch(words)
   })
 
   it.each([

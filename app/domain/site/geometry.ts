@@ -63,11 +63,18 @@ function segmentsCross(a: Vec2, b: Vec2, c: Vec2, d: Vec2): boolean {
   return turnOf(a, b, c) * turnOf(a, b, d) < 0 && turnOf(c, d, a) * turnOf(c, d, b) < 0
 }
 
-/** True when two edges of the outline cross each other, so that it has no inside to speak of. */
-export function crossesItself(outline: readonly Vec2[]): boolean {
+/** The first two edges of the outline that cross each other, by the index of their first corner; null when none do. */
+export function crossingEdges(outline: readonly Vec2[]): readonly [number, number] | null {
   const edges = outline.map((a, i): readonly [Vec2, Vec2] => [a, outline[(i + 1) % outline.length] ?? a])
-  return edges.some(([a, b], i) => edges.slice(i + 1).some(([c, d]) => segmentsCross(a, b, c, d)))
+  for (const [i, [a, b]] of edges.entries()) {
+    const k = edges.findIndex(([c, d], at) => at > i && segmentsCross(a, b, c, d))
+    if (k >= 0) return [i, k]
+  }
+  return null
 }
+
+/** True when two edges of the outline cross each other, so that it has no inside to speak of. */
+export const crossesItself = (outline: readonly Vec2[]): boolean => crossingEdges(outline) !== null
 
 /** True when two convex outlines share a point: no edge of either separates them. */
 export function convexOutlinesMeet(a: readonly Vec2[], b: readonly Vec2[]): boolean {

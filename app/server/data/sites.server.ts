@@ -1,4 +1,5 @@
 import { and, eq } from 'drizzle-orm'
+import { siteFaults } from '#app/domain/site/site-faults.ts'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
 import { roundLength } from '#app/domain/units.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
@@ -9,17 +10,6 @@ import { saveRevision, type Revisioned, type Save } from '#app/server/saving.ser
 import type { Member } from '#app/server/session.server.ts'
 import { siteRevisions, sites } from '#drizzle/schema.ts'
 
-/** The largest floor of a job, m, whichever way it lies. */
-const largestFloor = { long: 100, short: 60 } as const
-
-const extent = (values: readonly number[]): number => Math.max(...values) - Math.min(...values)
-
-/** Everything of a site that has an id, with the path of that id. */
-function listIds(site: Site): { path: (string | number)[]; id: string }[] {
-  const kinds = ['covers', 'members', 'walls', 'poles', 'obstacles', 'tables', 'seats', 'dimensions'] as const
-  return kinds.flatMap((kind) => site[kind].map(({ id }, index) => ({ path: [kind, index, 'id'], id })))
-}
-
 /** Every figure to four digits: lengths are kept to 0.1 mm. How far a size moves things stays exact. */
 function rounded(value: unknown, key = ''): unknown {
   if (typeof value === 'number') return key === 'by' ? value : roundLength(value)
@@ -28,31 +18,12 @@ function rounded(value: unknown, key = ''): unknown {
   return Object.fromEntries(Object.entries(value).map(([name, inner]) => [name, rounded(inner, name)]))
 }
 
-/**
- * A site that can be kept: ids once, members under covers that exist, a floor within the stated maximum, lengths in
- * whole tenths of a millimetre.
- */
+/** A site that can be kept: without faults, lengths in whole tenths of a millimetre. */
 export const savedSiteSchema = siteSchema
   .superRefine((site, context) => {
-    const refuse = (path: (string | number)[], message: string) => context.addIssue({ code: 'custom', path, message })
-    const seen = new Set<string>()
-    for (const { path, id } of listIds(site)) {
-      if (seen.has(id)) refuse(path, `The id ${id} is there twice.`)
-      seen.add(id)
+    for (const { path, message } of siteFaults(site)) {
+      context.addIssue({ code: 'custom', path: [...path], message })
     }
-    const sides = [extent(site.floor.map(([x]) => x)), extent(site.floor.map(([, y]) => y))].toSorted((a, b) => b - a)
-    const [long = 0, short = 0] = sides
-    if (long > largestFloor.long || short > largestFloor.short) {
-      refuse(['floor'], `A floor is at most ${largestFloor.long} × ${largestFloor.short} m.`)
-    }
-    const covers = new Set(site.covers.map(({ id }) => id))
-    site.members.forEach(({ underside }, index) => {
-      if (!('follows' in underside) || covers.has(underside.follows)) return
-      refuse(['members', index, 'underside', 'follows'], `There is no cover ${underside.follows}.`)
-    })
-    site.beyond.forEach(({ edge }, index) => {
-      if (edge >= site.floor.length) refuse(['beyond', index, 'edge'], `The floor has ${site.floor.length} edges.`)
-    })
   })
   .transform((site) => rounded(site))
   .pipe(siteSchema)
