@@ -217,7 +217,7 @@ function supplyShares(
 }
 
 /** The farther end of the data sheet's range from its nominal figure, as a share of it; null without a range. */
-function efficiencyTolerance({ radiantEfficiency, radiantEfficiencyRange: range }: HeaterModel): number | null {
+export function efficiencyTolerance({ radiantEfficiency, radiantEfficiencyRange: range }: HeaterModel): number | null {
   if (!range) return null
   return Math.max(range.high - radiantEfficiency, radiantEfficiency - range.low) / radiantEfficiency
 }

@@ -100,6 +100,12 @@ export function shiftsOf(
   return [...shifts, ...bare].filter(({ by }) => by.some((shift) => shift !== 0))
 }
 
+/** Dotted paths of the sizes of a thing that no dimension moves. */
+export function bareSizesOf(site: Site, about: ThingOf): string[] {
+  const moved = new Set(dimensionsOf(site, about).flatMap(({ moves }) => moves.map(({ coordinate }) => coordinate)))
+  return sizesWithin(thing(site, about), []).filter((coordinate) => !moved.has(coordinate))
+}
+
 const doubtsOfThing = new WeakMap<Site, Map<string, readonly Doubt[]>>()
 
 /** The doubts that touch one thing: its dimensions, and each of its sizes that no dimension moves. Kept per site. */
@@ -108,15 +114,12 @@ function doubtsAbout(site: Site, about: ThingOf): readonly Doubt[] {
   const key = keyOf(about)
   const found = known.get(key)
   if (found) return found
-  const dimensions = dimensionsOf(site, about)
-  const moved = new Set(dimensions.flatMap(({ moves }) => moves.map(({ coordinate }) => coordinate)))
-  const bare = sizesWithin(thing(site, about), []).filter((coordinate) => !moved.has(coordinate))
   const doubts = [
-    ...dimensions.map(({ dimension, moves }) => {
+    ...dimensionsOf(site, about).map(({ dimension, moves }) => {
       const lever = Math.hypot(...moves.map(({ by }) => by))
       return { ...dimensionDoubt(site, dimension), most: lever * dimension.tolerance }
     }),
-    ...bare.map((coordinate) => coordinateDoubt(site, { ...about, coordinate })),
+    ...bareSizesOf(site, about).map((coordinate) => coordinateDoubt(site, { ...about, coordinate })),
   ]
   known.set(key, doubts)
   return doubts
@@ -152,7 +155,7 @@ function keptFor<K, V>(kept: WeakMap<Site, Map<K, V>>, site: Site): Map<K, V> {
 }
 
 /** Every thing of a site that has sizes. */
-function thingsOf(site: Site): ThingOf[] {
+export function thingsOf(site: Site): ThingOf[] {
   return [{ of: 'floor', id: '' }, ...kinds.flatMap((of) => site[listOf[of]].map(({ id }): ThingOf => ({ of, id })))]
 }
 
