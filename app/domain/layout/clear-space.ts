@@ -1,5 +1,5 @@
 import type { Body } from '#app/domain/layout/body.ts'
-import { leastAlong, type Extent } from '#app/domain/site/convex.ts'
+import { boundsApart, boundsOf, leastAlong, type Extent } from '#app/domain/site/convex.ts'
 import type { Plane } from '#app/domain/site/cover.ts'
 import { gapBetween, type Gap } from '#app/domain/site/gap.ts'
 import { add, dot, scale, subtract, type Vec3 } from '#app/domain/vector.ts'
@@ -118,8 +118,20 @@ export function apartAtLeast(body: Body, obstacle: Extent): number {
   return Math.max(0, ...Object.values(beyondFaces(body, obstacle)))
 }
 
+const bareSolids = new WeakMap<Body, Extent>()
+
+function bareSolid(body: Body): Extent {
+  const known = bareSolids.get(body) ?? bodySolid(body)
+  bareSolids.set(body, known)
+  return known
+}
+
+/** A bound of the distance between the body and an obstacle from their bounds alone, m: quick, and never too great. */
+export const boundsFromBody = (body: Body, obstacle: Extent): number =>
+  boundsApart(boundsOf(bareSolid(body)), boundsOf(obstacle))
+
 /** Least distance from the body to an obstacle with its pair of points; 0 when they share a point. */
-export const gapToBody = (body: Body, obstacle: Extent): Gap => gapBetween(bodySolid(body), obstacle)
+export const gapToBody = (body: Body, obstacle: Extent): Gap => gapBetween(bareSolid(body), obstacle)
 
 /** Distance of a point from the body, m; 0 inside. */
 export function distanceFromBody({ centre, u, v, w, half }: Body, point: Vec3): number {

@@ -1,9 +1,10 @@
-import { bodyCorners } from '#app/domain/layout/clear-space.ts'
+import { bodyCorners, boundsFromBody } from '#app/domain/layout/clear-space.ts'
 import type { HeaterCheck } from '#app/domain/rules/check.ts'
 import { coverOutline } from '#app/domain/site/cover.ts'
 import { convexOutlinesMeet } from '#app/domain/site/geometry.ts'
 import type { Cover, Site } from '#app/domain/site/site.ts'
 import { isCombustible, solidsOf, type Solid } from '#app/domain/site/solids.ts'
+import { largestTolerance } from '#app/domain/site/tolerance.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 
 const kept = new WeakMap<Site, readonly Solid[]>()
@@ -24,20 +25,46 @@ export function coversOver({ site, body }: HeaterCheck): Cover[] {
   return site.covers.filter((cover) => convexOutlinesMeet(coverOutline(cover), around))
 }
 
+/** Beyond the greatest clearance that the manual asks by this much, and by its own tolerance, a thing is not near, m. */
+const near = 1
+
+const thingsOf = new WeakMap<HeaterCheck, readonly Solid[]>()
+
 /**
  * Everything that a heater may come too near to: not what holds it, nor a member that follows a cover over the heater
  * and so lies behind it, unless it burns and the cover does not. A recess box sits in its ceiling, between members that
- * have a rule of their own.
+ * have a rule of their own. Things that are not near are left out.
  */
-export function thingsAbout(check: HeaterCheck): Solid[] {
-  const { site, heater, support } = check
+export function thingsAbout(check: HeaterCheck): readonly Solid[] {
+  const known = thingsOf.get(check)
+  if (known) return known
+  const { site, heater, support, body } = check
   const recess = heater.mount === 'recess box'
   const over = coversOver(check)
   const behind = ({ rests, combustible }: Solid) =>
     over.some((cover) => rests.some(({ of, id }) => of === 'cover' && id === cover.id) && (isCombustible(cover.material) || !combustible)) // prettier-ignore
-  return siteSolids(site).filter((solid) => {
+  const reach = greatestClearance(check) + near
+  const things = siteSolids(site).filter((solid) => {
     if (support.ids.includes(solid.id)) return false
+    const apart = Math.min(...solid.parts.map((part) => boundsFromBody(body, part)))
+    if (apart > reach && apart > reach + mostTolerance(site, solid)) return false
     if (solid.of === 'member') return !recess && !behind(solid)
     return !recess || !over.some(({ id }) => id === solid.id)
   })
+  thingsOf.set(check, things)
+  return things
+}
+
+function greatestClearance({ model }: HeaterCheck): number {
+  const given = [model.clearanceToCombustible, model.clearanceToNoncombustible]
+  return Math.max(0, ...given.flatMap((clearances) => Object.values(clearances ?? {}).map((length) => length ?? 0)))
+}
+
+const tolerances = new WeakMap<Solid, number>()
+
+/** The most by which the sizes that a thing rests on may bring it nearer, m. */
+export function mostTolerance(site: Site, solid: Solid): number {
+  const known = tolerances.get(solid) ?? Math.hypot(...solid.rests.map((thing) => largestTolerance(site, thing)))
+  tolerances.set(solid, known)
+  return known
 }

@@ -30,7 +30,7 @@ export function clearanceAbove(check: HeaterCheck): Finding[] {
   const ids = new Set(over.map(({ id }) => id))
   const things = clearanceAround(
     check,
-    { rule: 'clearance-above', faces: ['above'], titles, clear: 'Nothing above', remedy },
+    { rule: 'clearance-above', faces: ['above'], titles, clear: 'Nothing near above', remedy },
     ({ of, id }) => of === 'cover' && ids.has(id),
   )
   return covers.length === 0 ? things : [...covers, ...things.filter(({ outcome, value }) => outcome !== 'pass' || value !== null)] // prettier-ignore

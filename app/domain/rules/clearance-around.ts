@@ -1,4 +1,12 @@
-import { apartAtLeast, gapToBody, lieAbout, type Face, type Growth, type Lie } from '#app/domain/layout/clear-space.ts'
+import {
+  apartAtLeast,
+  boundsFromBody,
+  gapToBody,
+  lieAbout,
+  type Face,
+  type Growth,
+  type Lie,
+} from '#app/domain/layout/clear-space.ts'
 import { thingsAbout } from '#app/domain/rules/about-heater.ts'
 import { findingOf, heaterRule, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
@@ -35,7 +43,8 @@ export function clearanceAround(check: HeaterCheck, around: Around, without: (so
   const found = findingsNear(check.site, known, {
     rule,
     left: (solid) => leftAround(check, solid, around.faces),
-    atLeast: (solid) => atLeastAround(check, solid),
+    quickly: (part, solid) => boundsFromBody(check.body, part) - mostAround(check, solid),
+    closely: (part, solid) => apartAtLeast(check.body, part) - mostAround(check, solid),
     titles: around.titles,
     clear: around.clear,
     remedy: around.remedy,
@@ -43,11 +52,10 @@ export function clearanceAround(check: HeaterCheck, around: Around, without: (so
   return unknown.length > 0 ? [...unknown, ...found.filter(({ outcome }) => outcome !== 'pass')] : found
 }
 
-/** Its distance from the body less the greatest of its clearances. */
-function atLeastAround(check: HeaterCheck, solid: Solid): number {
-  const { above, side, end } = clearanceFor(check, solid.combustible) ?? { above: 0, side: 0, end: 0 }
-  const apart = Math.min(...solid.parts.map((part) => apartAtLeast(check.body, part)))
-  return apart - Math.max(above, side, end)
+/** The greatest of the clearances that a thing may have to keep, m. */
+function mostAround(check: HeaterCheck, { combustible }: Solid): number {
+  const { above, side, end } = clearanceFor(check, combustible) ?? { above: 0, side: 0, end: 0 }
+  return Math.max(above, side, end)
 }
 
 /** What a thing leaves of the clearance of the face that lets it pass most easily; null when that is another rule's face. */

@@ -3,7 +3,7 @@ import { thingsAbout } from '#app/domain/rules/about-heater.ts'
 import { findingOf, heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { findingsNear, type Left } from '#app/domain/rules/nearest-things.ts'
-import { uprightPrism } from '#app/domain/site/convex.ts'
+import { boundsApart, boundsOf, uprightPrism, type Convex } from '#app/domain/site/convex.ts'
 import { gapBetween } from '#app/domain/site/gap.ts'
 import type { Solid } from '#app/domain/site/solids.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
@@ -34,13 +34,14 @@ export function clearanceBelow(check: HeaterCheck): Finding[] {
   const floor = judgedBy(rule, titles('floor'), { value: lowestPoint, limit, margin, tolerance: 0, remedy })
   const under = underBody(check)
   const things = thingsAbout(check).filter((thing) => thing.combustible && !thing.furniture && thing.state === null)
+  const marginOf = (part: Convex) => (boundsApart(boundsOf(under), boundsOf(part)) > 0 ? Infinity : -Infinity)
   const left = (solid: Solid): Left | null => leftBelow(solid, under, lowestPoint, limit)
   const found = findingsNear(check.site, things, {
     rule,
     left,
-    atLeast: () => -Infinity,
+    ...{ quickly: marginOf, closely: marginOf },
     titles,
-    clear: 'Nothing below',
+    clear: 'Nothing near below',
     remedy,
   })
   return [floor, ...found.filter(({ outcome }) => outcome !== 'pass')]

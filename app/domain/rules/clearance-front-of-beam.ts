@@ -1,5 +1,5 @@
 import { nearestInBeam, type InBeam } from '#app/domain/layout/beam-reach.ts'
-import { apartAtLeast } from '#app/domain/layout/clear-space.ts'
+import { apartAtLeast, boundsFromBody } from '#app/domain/layout/clear-space.ts'
 import { thingsAbout } from '#app/domain/rules/about-heater.ts'
 import { findingOf, heaterRule, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
@@ -24,14 +24,15 @@ export function clearanceFrontOfBeam(check: HeaterCheck): Finding[] {
   return findingsNear(check.site, things, {
     rule,
     left: (solid) => leftInBeam(check, solid, limit),
-    atLeast: (solid) => Math.min(...solid.parts.map((part) => apartAtLeast(check.body, part))) - limit,
+    quickly: (part) => boundsFromBody(check.body, part) - limit,
+    closely: (part) => apartAtLeast(check.body, part) - limit,
     titles: (name) => ({
       fails: `Too near in the beam: ${name}`,
       'measure first': `Tight in the beam: ${name}`,
       pass: `Clear in front of the beam, nearest ${name}`,
       'cannot tell': `In the beam, distance not known: ${name}`,
     }),
-    clear: 'Nothing combustible in front of the beam',
+    clear: 'Nothing combustible near in front of the beam',
     remedy: 'Move it, aim it elsewhere, or remove what stands in the beam.',
   })
 }
@@ -39,7 +40,7 @@ export function clearanceFrontOfBeam(check: HeaterCheck): Finding[] {
 function leftInBeam({ body, model }: HeaterCheck, solid: Solid, limit: number): Left | null {
   let nearest: InBeam | null = null
   for (const part of solid.parts) {
-    if (apartAtLeast(body, part) > limit + farther) continue
+    if (boundsFromBody(body, part) > limit + farther || apartAtLeast(body, part) > limit + farther) continue
     const found = nearestInBeam(body, model, part)
     if (found && (!nearest || found.distance < nearest.distance)) nearest = found
   }

@@ -17,7 +17,7 @@ export function clearanceSideEnd(check: HeaterCheck): Finding[] {
         pass: `Clear at sides and ends, nearest ${name}`,
         'cannot tell': `Clearance at the side or end not known: ${name}`,
       }),
-      clear: 'Nothing at sides and ends',
+      clear: 'Nothing near at sides and ends',
       remedy: 'Move it away, turn it, or choose a model that needs less.',
     },
     ({ of, id }) => of === 'cover' && over.has(id),

@@ -1,8 +1,10 @@
+import { mostTolerance } from '#app/domain/rules/about-heater.ts'
 import { findingOf, judgedBy, type Found, type Rule } from '#app/domain/rules/check.ts'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
+import type { Convex } from '#app/domain/site/convex.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { solidOf, type Solid } from '#app/domain/site/solids.ts'
-import { largestTolerance, toleranceOf } from '#app/domain/site/tolerance.ts'
+import { toleranceOf } from '#app/domain/site/tolerance.ts'
 
 /** What one thing leaves of a clearance. */
 export interface Left {
@@ -17,8 +19,9 @@ export interface NearRule {
   readonly rule: Rule
   /** What a thing leaves; null when the rule does not concern it. */
   readonly left: (solid: Solid) => Left | null
-  /** The least margin that a thing may leave, quickly. */
-  readonly atLeast: (solid: Solid) => number
+  /** The least margin that one part of a thing may leave: from its bounds, and closer. */
+  readonly quickly: (part: Convex, solid: Solid) => number
+  readonly closely: (part: Convex, solid: Solid) => number
   readonly titles: (name: string) => Readonly<Record<Outcome, string>>
   /** Title of the pass when nothing is near. */
   readonly clear: string
@@ -44,11 +47,13 @@ export function findingsNear(site: Site, solids: readonly Solid[], near: NearRul
 
 /** What each thing leaves, tightest first; a thing that can neither be in doubt nor the tightest is passed over. */
 function leftBy(site: Site, solids: readonly Solid[], near: NearRule): { solid: Solid; found: Left }[] {
-  const quick = solids.map((solid) => ({ solid, atLeast: near.atLeast(solid) })).sort((a, b) => a.atLeast - b.atLeast)
+  const quick = solids.map((solid) => ({ solid, atLeast: leastOver(solid, near.quickly) }))
+  quick.sort((a, b) => a.atLeast - b.atLeast)
   const left: { solid: Solid; found: Left }[] = []
   let tightest = Infinity
   for (const { solid, atLeast } of quick) {
-    if (atLeast > tightest && atLeast > mostTolerance(site, solid)) continue
+    const ofNoAccount = (margin: number) => margin > tightest && margin > mostTolerance(site, solid)
+    if (ofNoAccount(atLeast) || ofNoAccount(leastOver(solid, near.closely))) continue
     const found = near.left(solid)
     if (!found) continue
     left.push({ solid, found })
@@ -57,8 +62,11 @@ function leftBy(site: Site, solids: readonly Solid[], near: NearRule): { solid: 
   return left.sort((a, b) => a.found.margin - b.found.margin)
 }
 
-const mostTolerance = (site: Site, solid: Solid): number =>
-  Math.hypot(...solid.rests.map((thing) => largestTolerance(site, thing)))
+function leastOver(solid: Solid, marginOf: NearRule['quickly']): number {
+  let least = Infinity
+  for (const part of solid.parts) least = Math.min(least, marginOf(part, solid))
+  return least
+}
 
 function findingAbout(site: Site, solid: Solid, found: Left, near: NearRule): Finding {
   const margin = (moved: Site) => {

@@ -99,7 +99,7 @@ export function uprightPrism(corners: readonly Upright[]): Convex {
   const points = [...low, ...high]
   const [first] = points
   if (!first || corners.length < 3) throw new RangeError('A prism needs three corners')
-  const bounds = [
+  const faces = [
     ...low.map((from, i) => sideBound(from, low[(i + 1) % low.length] ?? from)),
     capBound(high, 1),
     capBound(low, -1),
@@ -109,7 +109,7 @@ export function uprightPrism(corners: readonly Upright[]): Convex {
     farthest: (d) => farthestOf(points, first, d),
     alongRay: (from, direction) => {
       const stretch = { enter: 0, leave: Infinity }
-      for (const { normal, reach } of bounds) keepBelow(stretch, dot(normal, from) - reach, dot(normal, direction))
+      for (const { normal, reach } of faces) keepBelow(stretch, dot(normal, from) - reach, dot(normal, direction))
       return stretch
     },
   }
@@ -143,6 +143,36 @@ function farthestOf(points: readonly Vec3[], first: Vec3, d: Vec3): Vec3 {
     }
   }
   return best
+}
+
+/** The box along the site's axes that just holds a solid. */
+export interface Bounds {
+  readonly low: Vec3
+  readonly high: Vec3
+}
+
+const bounds = new WeakMap<Extent, Bounds>()
+
+/** The bounds of a solid; kept for as long as the solid is. */
+export function boundsOf(solid: Extent): Bounds {
+  const known = bounds.get(solid)
+  if (known) return known
+  const reach = (axis: 0 | 1 | 2, sign: 1 | -1) =>
+    solid.farthest([axis === 0 ? sign : 0, axis === 1 ? sign : 0, axis === 2 ? sign : 0])[axis]
+  const found: Bounds = {
+    low: [reach(0, -1), reach(1, -1), reach(2, -1)],
+    high: [reach(0, 1), reach(1, 1), reach(2, 1)],
+  }
+  bounds.set(solid, found)
+  return found
+}
+
+/** Distance between two boxes along the site's axes, m: what they hold is at least as far apart; 0 when they meet. */
+export function boundsApart(a: Bounds, b: Bounds): number {
+  const x = Math.max(0, a.low[0] - b.high[0], b.low[0] - a.high[0])
+  const y = Math.max(0, a.low[1] - b.high[1], b.low[1] - a.high[1])
+  const z = Math.max(0, a.low[2] - b.high[2], b.low[2] - a.high[2])
+  return Math.sqrt(x * x + y * y + z * z)
 }
 
 /** Least value of n·p over the solid. */

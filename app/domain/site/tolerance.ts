@@ -35,8 +35,13 @@ interface Doubt {
   readonly key: string
   /** The most that it moves a point of the thing it is about, m. */
   readonly most: number
-  readonly lower: Site
-  readonly higher: Site
+  /** Made when first asked for: most doubts are never tried. */
+  readonly sites: () => { readonly lower: Site; readonly higher: Site }
+}
+
+function once<T>(make: () => T): () => T {
+  let made: { readonly value: T } | null = null
+  return () => (made ??= { value: make() }).value
 }
 
 /** A dimension and those of its moves that move one thing. */
@@ -131,8 +136,10 @@ function dimensionDoubt(site: Site, dimension: Dimension): Omit<Doubt, 'most'> {
   const known = keptFor(sitesOfDimension, site)
   const doubt = known.get(dimension) ?? {
     key: `dimension ${dimension.id}`,
-    lower: moveDimension(site, dimension, -dimension.tolerance),
-    higher: moveDimension(site, dimension, dimension.tolerance),
+    sites: once(() => ({
+      lower: moveDimension(site, dimension, -dimension.tolerance),
+      higher: moveDimension(site, dimension, dimension.tolerance),
+    })),
   }
   known.set(dimension, doubt)
   return doubt
@@ -143,8 +150,10 @@ function coordinateDoubt(site: Site, coordinate: Coordinate): Doubt {
   return {
     key: `${coordinate.of} ${coordinate.id} ${coordinate.coordinate}`,
     most: tolerance,
-    lower: moveCoordinate(site, coordinate, -tolerance),
-    higher: moveCoordinate(site, coordinate, tolerance),
+    sites: once(() => ({
+      lower: moveCoordinate(site, coordinate, -tolerance),
+      higher: moveCoordinate(site, coordinate, tolerance),
+    })),
   }
 }
 
@@ -179,8 +188,9 @@ export function toleranceOf(
     for (const doubt of doubtsAbout(site, about)) {
       if (counted.has(doubt.key)) continue
       counted.add(doubt.key)
-      const lower = figure(doubt.lower) ?? nominal
-      const higher = figure(doubt.higher) ?? nominal
+      const sites = doubt.sites()
+      const lower = figure(sites.lower) ?? nominal
+      const higher = figure(sites.higher) ?? nominal
       squares += Math.max(Math.abs(lower - nominal), Math.abs(higher - nominal)) ** 2
     }
   }
