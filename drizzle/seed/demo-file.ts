@@ -187,7 +187,12 @@ export type DemoPlace = z.infer<typeof placeSchema>
 export const demoFile = z
   .object({
     catalogue: z.array(catalogueEntrySchema),
-    hanging: z.object({ chainSidewaysLimitMm: z.number() }),
+    hanging: z.object({
+      chainLinkPitchMm: z.number(),
+      hardwareAllowanceMm: z.number(),
+      turnbuckleTakeUpMm: range,
+      chainSidewaysLimitMm: z.number(),
+    }),
     sites: z.array(placeSchema),
   })
   .parse(demo)

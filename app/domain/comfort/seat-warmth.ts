@@ -212,12 +212,21 @@ export function layoutTotals(
   }
 }
 
-/** The figure of each seat that has one, from the least to the most. */
+/**
+ * Figures nearer together than this are equal, W/m²: two machines differ in the last digits, and seats that lie alike
+ * must not change places for it.
+ */
+const alike = 1e-6
+
+/** The figure of each seat that has one, from the least to the most; equal ones by the seat's id. */
 const figuresOf = (warmth: readonly SeatWarmth[], figure: (each: SeatWarmth) => number | null) =>
   warmth
     .map((each) => ({ seatId: each.seat.id, irradiance: figure(each) }))
     .filter((each): each is { seatId: string; irradiance: number } => each.irradiance !== null)
-    .sort((a, b) => a.irradiance - b.irradiance)
+    .sort((a, b) => {
+      const [left, right] = [Math.round(a.irradiance / alike), Math.round(b.irradiance / alike)]
+      return left - right || (a.seatId < b.seatId ? -1 : 1)
+    })
 
 function powerOf(heater: Layout['heaters'][number], models: ReadonlyMap<string, HeaterModel>): number {
   const model = models.get(heater.model)

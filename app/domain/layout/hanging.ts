@@ -1,53 +1,68 @@
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import { plainHanging, type HangingData } from '#app/domain/layout/hanging-data.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
-import { supportOf } from '#app/domain/layout/supports.ts'
+import { splayedPair } from '#app/domain/layout/splayed-pair.ts'
+import { supportOf, type Support } from '#app/domain/layout/supports.ts'
+import { houseRules } from '#app/domain/rules/house-rules.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { degrees, type Vec3 } from '#app/domain/vector.ts'
 
-/** How chain is made and taken up; lengths m. */
-export interface HangingData {
-  readonly linkPitch: number
-  /** Clamp, screw links and turnbuckle at rest, of each hanger. */
-  readonly hardwareAllowance: number
-  /** How much a turnbuckle shortens (negative) and lengthens. */
-  readonly takeUp: readonly [shorter: number, longer: number]
-}
+/** What becomes of a hanger: it can be made; its fittings alone are too long; a turnbuckle cannot take up the rest. */
+export type HangerOutcome = 'can be made' | 'too short' | 'beyond the turnbuckle'
 
-/** Chain of 28 mm pitch with the usual fittings (hanging data of the demo catalogue). */
-const plainHanging: HangingData = { linkPitch: 0.028, hardwareAllowance: 0.095, takeUp: [-0.04, 0.04] }
-
-/** One hanger: from a suspension eye plumb up to its member. Lengths m. */
-interface Hanger {
+/** One hanger: from a suspension eye up to its member, plumb or splayed. Lengths m. */
+export interface Hanger {
+  /** 0: the end against the element's direction; 1: the end along it. */
+  readonly end: 0 | 1
   readonly eye: Vec3
+  /** Where it meets its member's underside. */
+  readonly anchor: Vec3
   readonly memberId: string
-  /** Underside of the member over the eye. */
   readonly underside: number
+  /** From the eye up to the underside, plumb. */
   readonly drop: number
+  /** How far aside of the eye its member is; 0 when it hangs plumb. */
+  readonly sideways: number
+  /** From eye to underside along the hanger: √(δ² + Δz²). */
+  readonly length: number
+  /** What pulls in it, N. */
+  readonly tension: number
   /** Length left for chain or rod when the fittings are taken off. */
   readonly net: number
   /** Whole links, the number nearest to the net length; null for rods. */
   readonly links: number | null
   /** Chain or rod as cut. */
   readonly cutLength: number
-  /** What the whole links leave over (positive) or lack. */
+  /** What chain or rod leaves over (positive) or lacks. */
   readonly residual: number
-  /** What the turnbuckle cannot take up of it. */
+  /** How the turnbuckle is set from rest: longer (positive) or shorter. */
+  readonly takeUp: number
+  /** What the turnbuckle cannot take up. */
   readonly left: number
-  /** The fittings alone are longer than the drop: a short bracket is wanted. */
-  readonly tooShort: boolean
+  readonly outcome: HangerOutcome
+  /** A secondary safety line at this eye: slack beside its hanger. */
+  readonly safetyLine: number
 }
 
-/** The hangers of one heater. Angles in degrees, positive when the first end (against the element's direction) is higher. */
+/**
+ * The hangers of one heater, those of its first end first. Tilts of the element's axis in degrees, positive when the
+ * first end is higher. Across its axis a heater on two eyes over its middle hangs level by its own weight, and rods hold
+ * the tilt set at their heads: hangers of other lengths change nothing there.
+ */
 export interface HangSchedule {
   readonly heaterId: string
-  readonly hangers: readonly [Hanger, Hanger]
-  /** Tilt of the element's axis that whole links alone would leave. */
+  readonly hangers: readonly Hanger[]
+  /** What whole links or rods as cut would leave without turnbuckles. */
   readonly residualTiltDeg: number
-  /** Tilt that is left after the turnbuckles. */
+  /** What is left after them: along the element, and across it. */
   readonly tiltLeftDeg: number
+  readonly tiltAcrossDeg: 0
 }
 
-/** The hang schedule of a heater on chain or drop rods; null for other mounts and while an eye has no member above it. */
+/** Without what binary fractions add: to a nanometre. */
+const settled = (metres: number): number => Math.round(metres * 1e9) / 1e9
+
+/** The hang schedule of a heater on chain or drop rods; null for other mounts and while an eye has nothing to hang from. */
 export function hangScheduleOf(
   site: Site,
   heater: MountedHeater,
@@ -55,36 +70,112 @@ export function hangScheduleOf(
   data: HangingData = plainHanging,
 ): HangSchedule | null {
   if (heater.mount !== 'chain' && heater.mount !== 'drop rods') return null
-  const [first, second] = supportOf(site, heater, model).eyes.map(({ eye, place }) => {
-    if (!place || place.to === null) return null
-    return hangerOf(eye, place.id, place.to, heater.mount === 'chain', data)
-  })
   const pitch = model.suspensionEyePitch
-  if (!first || !second || pitch === null) return null
-  const tilt = (a: number, b: number) => degrees(Math.atan2(a - b, pitch))
+  const hung = hungFrom(supportOf(site, heater, model), (model.body.mass * houseRules.gravity.value) / 2)
+  if (!hung || pitch === null) return null
+  const hangers = hung.map((place) => hangerOf(place, heater.mount === 'chain', data))
+  const tilt = (of: (hanger: Hanger) => number) =>
+    degrees(Math.atan2(eyeRise(hangers, 0, of) - eyeRise(hangers, 1, of), pitch))
   return {
     heaterId: heater.id,
-    hangers: [first, second],
-    residualTiltDeg: tilt(first.residual, second.residual),
-    tiltLeftDeg: tilt(first.left, second.left),
+    hangers,
+    residualTiltDeg: tilt(({ residual }) => residual),
+    tiltLeftDeg: tilt(({ left }) => left),
+    tiltAcrossDeg: 0,
   }
 }
 
-function hangerOf(eye: Vec3, memberId: string, underside: number, chain: boolean, data: HangingData): Hanger {
-  const drop = underside - eye[2]
-  const net = drop - data.hardwareAllowance
-  const links = chain ? Math.max(0, Math.round(net / data.linkPitch)) : null
-  const cutLength = links === null ? Math.max(0, net) : links * data.linkPitch
-  const residual = net - cutLength
-  const left = residual - Math.min(data.takeUp[1], Math.max(data.takeUp[0], residual))
-  return { eye, memberId, underside, drop, net, links, cutLength, residual, left, tooShort: net < data.takeUp[0] }
+/** How much higher than drawn an eye hangs when each of its hangers is shorter by `lack`, m. */
+function eyeRise(hangers: readonly Hanger[], end: 0 | 1, lack: (hanger: Hanger) => number): number {
+  const [a, b] = hangers.filter((hanger) => hanger.end === end)
+  if (!a) return 0
+  if (!b) return lack(a)
+  return lowestBelow(
+    { y: -a.sideways, z: a.drop, length: a.length - lack(a) },
+    { y: b.sideways, z: b.drop, length: b.length - lack(b) },
+  )
+}
+
+interface Strand {
+  readonly y: number
+  readonly z: number
+  readonly length: number
 }
 
 /**
- * A splayed pair: two hangers from one eye up to points `sideways` to either side of it and `drop` above it, m. Length of
- * each, √(δ² + Δz²), m, and its tension W/(2 cos φ), N, for a weight in N.
+ * Height at which a weight on two strands comes to rest: the lowest point within both their lengths. That is plumb under
+ * one end where the other strand is slack there, else where both circles cross.
  */
-export function splayedPair(sideways: number, drop: number, weight: number): { length: number; tension: number } {
-  const length = Math.hypot(sideways, drop)
-  return { length, tension: (weight * length) / (2 * drop) }
+function lowestBelow(a: Strand, b: Strand): number {
+  for (const [one, other] of [
+    [a, b],
+    [b, a],
+  ] as const) {
+    const z = one.z - one.length
+    if (Math.hypot(one.y - other.y, z - other.z) <= other.length) return z
+  }
+  const [dy, dz] = [b.y - a.y, b.z - a.z]
+  const apart = Math.hypot(dy, dz)
+  const along = (a.length ** 2 - b.length ** 2 + apart ** 2) / (2 * apart)
+  const aside = Math.sqrt(Math.max(0, a.length ** 2 - along ** 2))
+  return a.z + (along * dz - aside * Math.abs(dy)) / apart
+}
+
+type HungFrom = Pick<Hanger, 'end' | 'eye' | 'anchor' | 'memberId' | 'underside' | 'sideways' | 'length' | 'tension'>
+
+/** Every hanger's two ends and its tension under `weight` N at each eye; null without something above or beside an eye. */
+function hungFrom({ eyes }: Support, weight: number): HungFrom[] | null {
+  if (eyes.length === 0) return null
+  const hung = eyes.flatMap(({ eye, place, legs }, i): (HungFrom | null)[] => {
+    const end = i === 0 ? 0 : 1
+    if (legs) {
+      const [a, b] = legs
+      if (a.underside === null || b.underside === null) return [null]
+      const rises = [a, b].map(({ sideways, underside }) => ({ sideways, rise: (underside ?? 0) - eye[2] }))
+      const [first, second] = rises
+      if (!first || !second || Math.min(first.rise, second.rise) <= 0) return [null]
+      const pair = splayedPair([first, second], weight)
+      return legs.map((leg, k) => {
+        const { length, tension } = pair[k === 0 ? 0 : 1]
+        const underside = leg.underside ?? 0
+        const anchor: Vec3 = [leg.point[0], leg.point[1], underside]
+        return { end, eye, anchor, memberId: leg.memberId, underside, sideways: leg.sideways, length, tension }
+      })
+    }
+    if (!place || place.to === null) return [null]
+    const length = place.to - eye[2]
+    const anchor: Vec3 = [eye[0], eye[1], place.to]
+    return [{ end, eye, anchor, memberId: place.id, underside: place.to, sideways: 0, length, tension: weight }]
+  })
+  const known = hung.flatMap((hanger) => hanger ?? [])
+  return known.length === hung.length ? known : null
+}
+
+function hangerOf(place: HungFrom, chain: boolean, data: HangingData): Hanger {
+  const net = settled(place.length - data.hardwareAllowance)
+  const step = chain ? data.linkPitch : data.rodStep
+  const count = Math.max(0, Math.round(net / step))
+  const cutLength = settled(count * step)
+  const residual = settled(net - cutLength)
+  const takeUp = Math.min(data.lengthens, Math.max(-data.shortens, residual))
+  const left = settled(residual - takeUp)
+  return {
+    ...place,
+    drop: place.underside - place.eye[2],
+    net,
+    links: chain ? count : null,
+    cutLength,
+    residual,
+    takeUp,
+    left,
+    outcome: left === 0 ? 'can be made' : net < -data.shortens ? 'too short' : 'beyond the turnbuckle',
+    safetyLine: place.length + data.safetySlack,
+  }
+}
+
+/** Chain to order for some hang schedules, m: all that is cut, rounded up to whole order lengths. */
+export function chainToOrder(schedules: readonly HangSchedule[], data: HangingData = plainHanging): number {
+  const cut = schedules.flatMap(({ hangers }) => hangers.filter(({ links }) => links !== null))
+  const length = cut.reduce((sum, { cutLength }) => sum + cutLength, 0)
+  return Math.ceil(settled(length / data.orderStep)) * data.orderStep
 }

@@ -23,6 +23,8 @@ export const mountedHeaterSchema = z.strictObject({
   mount: mountSchema,
   /** The member, wall or pole it is fixed to. */
   memberId: z.string().max(40).nullable(),
+  /** Each suspension eye hangs from two members, one on either side; only of chain and drop rods. */
+  splayed: z.boolean().optional(),
 })
 export type MountedHeater = z.infer<typeof mountedHeaterSchema>
 

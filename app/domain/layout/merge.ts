@@ -66,7 +66,8 @@ function sameHeater(a: MountedHeater | null, b: MountedHeater | null): boolean {
     a.turnDeg === b.turnDeg &&
     a.tiltDeg === b.tiltDeg &&
     a.mount === b.mount &&
-    a.memberId === b.memberId
+    a.memberId === b.memberId &&
+    (a.splayed ?? false) === (b.splayed ?? false)
   )
 }
 

@@ -2,10 +2,11 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { bayOf } from '#app/domain/layout/bay.ts'
 import { bodyOf } from '#app/domain/layout/body.ts'
 import { roundTurn } from '#app/domain/layout/edits.ts'
+import { facingMembers, firstMet, type FacingMember } from '#app/domain/layout/facing-members.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
+import { railKind } from '#app/domain/layout/support-loads.ts'
 import { reachOf, supportPlaces, type SupportPlace } from '#app/domain/layout/supports.ts'
 import { unusedId } from '#app/domain/site/edits.ts'
-import { nearestOnSegment } from '#app/domain/site/geometry.ts'
 import { memberDirectionDeg, undersideAt } from '#app/domain/site/member.ts'
 import type { Member, Site } from '#app/domain/site/site.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
@@ -25,7 +26,7 @@ export function movedToSupport(site: Site, heater: MountedHeater, model: HeaterM
   const [place] = supportPlaces(site, heater.mount, [heater.x, heater.y])
   if (!place) return null
   const tiltDeg = model.mountsThatHoldTilt.includes(heater.mount) ? heater.tiltDeg : 0
-  const moved = { ...heater, memberId: place.id, tiltDeg }
+  const moved = { ...heater, memberId: place.id, tiltDeg, ...(heater.splayed ? { splayed: false } : {}) }
   if (heater.mount === 'recess box') return movedIntoBay(site, moved, model)
   if (place.kind !== 'member') return movedBeside(site, moved, place, reachOf(model, heater.mount) ?? 0)
   const member = site.members.find(({ id }) => id === place.id)
@@ -67,34 +68,60 @@ function movedIntoBay(site: Site, heater: MountedHeater, model: HeaterModel): Mo
 const railSection = { width: 0.04, depth: 0.04 }
 
 /**
- * A rail through a heater's place from the nearest member on one side to the nearest on the other, square to the nearer
- * one, its underside straight between theirs. Span and load are for the structure's engineer to confirm. Null without a
- * member on both sides or with a height that is not known.
+ * Rails that would carry a heater where it is, each from a member on one side to a member on the other, its underside
+ * straight between theirs: one along the element, under both of its eyes; where the element runs along the members, one
+ * square to them through each eye; one through the middle for what hangs at one point. Span and load are for the
+ * structure's engineer to confirm. Null for walls, poles and bays, without a member on both sides, with a height that is
+ * not known, and where the rail would be lower than the heater.
  */
-export function railBetween(site: Site, { x, y }: MountedHeater): Member | null {
-  const places = site.members
-    .map((member) => ({ member, ...nearestOnSegment(member.from, member.to, x, y) }))
-    .filter(({ distance }) => distance > 1e-6)
-    .sort((a, b) => a.distance - b.distance)
-  const near = places[0]
-  if (!near) return null
-  const away: Vec2 = [near.point[0] - x, near.point[1] - y]
-  const opposite = places.find(({ point }) => {
-    const [dx, dy] = [point[0] - x, point[1] - y]
-    const against = -(dx * away[0] + dy * away[1])
-    return against > 0 && Math.abs(dx * away[1] - dy * away[0]) < 1e-6 * against
-  })
-  if (!opposite) return null
-  const from = undersideAt(site, near.member, x, y)
-  const to = undersideAt(site, opposite.member, x, y)
+export function railsFor(site: Site, heater: MountedHeater, model: HeaterModel): readonly Member[] | null {
+  const hung = heater.mount === 'chain' || heater.mount === 'drop rods'
+  if (!hung && heater.mount !== 'ceiling bracket' && heater.mount !== 'beam clamp') return null
+  const members = site.members.filter(({ kind }) => kind !== railKind)
+  const body = bodyOf(heater, model)
+  const half = hung ? (model.suspensionEyePitch ?? 0) / 2 : 0
+  const [x, y, along] = [heater.x, heater.y, [body.u[0], body.u[1]] as const]
+  const least = body.centre[2] + body.half.w
+  const through = spanThrough(members, [x, y], along, half)
+  if (through) return railsOf(site, [through], least)
+  const eyes: Vec2[] = half === 0 ? [[x, y]] : [-half, half].map((d): Vec2 => [x + along[0] * d, y + along[1] * d])
+  const spans = eyes.map((eye) => facingMembers(members, eye))
+  return spans.every((span) => span !== null) ? railsOf(site, spans, least) : null
+}
+
+type Span = readonly [FacingMember, FacingMember]
+
+/** From member to member along the element, reaching beyond both eyes. */
+function spanThrough(members: readonly Member[], at: Vec2, [ux, uy]: Vec2, half: number): Span | null {
+  const [back, ahead] = [firstMet(members, at, [-ux, -uy]), firstMet(members, at, [ux, uy])]
+  if (!back || !ahead) return null
+  return Math.min(back.distance, ahead.distance) > half ? [back, ahead] : null
+}
+
+function railsOf(site: Site, spans: readonly Span[], least: number): readonly Member[] | null {
+  let taken = site
+  const rails: Member[] = []
+  for (const [near, far] of spans) {
+    const rail = railOf(taken, near, far)
+    if (!rail || !('from' in rail.underside)) return null
+    if (Math.min(rail.underside.from, rail.underside.to) < least) return null
+    rails.push(rail)
+    taken = { ...taken, members: [...taken.members, rail] }
+  }
+  return rails
+}
+
+function railOf(site: Site, near: FacingMember, far: FacingMember): Member | null {
+  const from = undersideAt(site, near.member, near.point[0], near.point[1])
+  const to = undersideAt(site, far.member, far.point[0], far.point[1])
   if (from === null || to === null) return null
   const id = unusedId(site, 'rail')
   return {
     id,
     name: id.replace('-', ' '),
-    kind: 'rail between members',
+    kind: railKind,
     from: [rounded(near.point[0]), rounded(near.point[1])],
-    to: [rounded(opposite.point[0]), rounded(opposite.point[1])],
+    to: [rounded(far.point[0]), rounded(far.point[1])],
     underside: { from: rounded(from), to: rounded(to) },
     ...railSection,
     material: 'non-combustible',

@@ -2,6 +2,7 @@ import type { HeaterModel, Mount } from '#app/domain/heaters/heater-model.ts'
 import { bayOf } from '#app/domain/layout/bay.ts'
 import { bodyOf, type Body } from '#app/domain/layout/body.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
+import { splayAngleDeg, splayedLegs, type SplayedLeg } from '#app/domain/layout/splayed-pair.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
 import { coverHeightAt } from '#app/domain/site/cover.ts'
 import { nearestOnSegment } from '#app/domain/site/geometry.ts'
@@ -27,6 +28,8 @@ export interface SupportPlace {
 interface EyeSupport {
   readonly eye: Vec3
   readonly place: SupportPlace | null
+  /** Its two hangers where it hangs from a splayed pair; null where it hangs plumb from `place`. */
+  readonly legs: readonly [SplayedLeg, SplayedLeg] | null
 }
 
 /** Why a heater is held or not. */
@@ -35,6 +38,8 @@ export type SupportReason =
   | 'nothing to fix to'
   | 'out of reach'
   | 'an eye has no member'
+  | 'not between members'
+  | 'splayed too flat'
   | 'support too low'
   | 'tilt not held'
   | 'not in a bay'
@@ -137,7 +142,9 @@ function carried(site: Site, heater: MountedHeater, model: HeaterModel, body: Bo
   switch (heater.mount) {
     case 'chain':
     case 'drop rods':
-      return carriedByEyes(site, heater, suspensionEyes(body, model), none)
+      return heater.splayed
+        ? carriedBySplayedPairs(site, suspensionEyes(body, model), none)
+        : carriedByEyes(site, heater, suspensionEyes(body, model), none)
     case 'recess box':
       return carriedInBay(site, body, none)
     default:
@@ -158,7 +165,7 @@ function carriedByEyes(
   if (reach === null) return { ...none, outcome: 'cannot tell', reason: 'reach not stated' }
   const supports = eyes.map((eye) => eyeSupport(site, heater, eye, reach))
   const worst = Math.max(...supports.map(({ distance }) => distance))
-  const found = { ...none, eyes: supports.map(({ eye, place }): EyeSupport => ({ eye, place })) }
+  const found = { ...none, eyes: supports.map(({ eye, place }): EyeSupport => ({ eye, place, legs: null })) }
   if (supports.some(({ place }) => !place)) {
     const aside = (none.distance ?? 0) > reach + closeEnough
     return aside
@@ -183,12 +190,46 @@ const distanceTo = (member: Member, { x, y }: MountedHeater): number =>
   nearestOnSegment(member.from, member.to, x, y).distance
 
 /** The member that carries an eye: the one the heater names when in reach, else the nearest in reach. */
-function eyeSupport(site: Site, heater: MountedHeater, eye: Vec3, reach: number): EyeSupport & { distance: number } {
+function eyeSupport(site: Site, heater: MountedHeater, eye: Vec3, reach: number): PlumbEye {
   const places = supportPlaces(site, heater.mount, [eye[0], eye[1]])
   const within = places.filter(({ distance }) => distance <= reach + closeEnough)
   const place = within.find(({ id }) => id === heater.memberId) ?? within[0] ?? null
   return { eye, place, distance: place?.distance ?? places[0]?.distance ?? Infinity }
 }
+
+interface PlumbEye {
+  readonly eye: Vec3
+  readonly place: SupportPlace | null
+  readonly distance: number
+}
+
+/** Each eye between two members, both within reach and steep enough. */
+function carriedBySplayedPairs(site: Site, eyes: readonly [Vec3, Vec3] | null, none: Uncarried): Support {
+  if (!eyes) return { ...none, outcome: 'cannot tell', reason: 'eyes not stated' }
+  const reach = houseRules.splayReach.value
+  const pairs = eyes.map((eye): EyeSupport => ({ eye, place: null, legs: splayedLegs(site, eye) }))
+  const legs = pairs.flatMap((pair) => (pair.legs ?? []).map((leg) => ({ ...leg, rise: riseOf(leg, pair.eye) })))
+  const distance = legs.length > 0 ? Math.max(...legs.map(({ sideways }) => sideways)) : none.distance
+  const found = { ...none, reach, distance, eyes: pairs }
+  if (pairs.some((pair) => !pair.legs)) return { ...found, outcome: 'not held', reason: 'not between members' }
+  const carriedBy = { ...found, ids: [...new Set(legs.map(({ memberId }) => memberId))] }
+  if (legs.some(({ sideways }) => sideways > reach + closeEnough)) {
+    return { ...found, outcome: 'not held', reason: 'out of reach' }
+  }
+  if (legs.some(({ rise }) => rise === null))
+    return { ...carriedBy, outcome: 'cannot tell', reason: 'height not known' }
+  if (legs.some(({ rise }) => (rise ?? 0) < closeEnough)) {
+    return { ...carriedBy, outcome: 'not held', reason: 'support too low' }
+  }
+  const flat = legs.some(
+    ({ sideways, rise }) => splayAngleDeg(sideways, rise ?? 0) > houseRules.splayAngleDeg.value + levelDeg,
+  )
+  return flat
+    ? { ...carriedBy, outcome: 'not held', reason: 'splayed too flat' }
+    : { ...carriedBy, outcome: 'held', reason: 'held' }
+}
+
+const riseOf = ({ underside }: SplayedLeg, eye: Vec3): number | null => (underside === null ? null : underside - eye[2])
 
 function carriedInBay(site: Site, body: Body, none: Uncarried): Support {
   const bay = bayOf(site, body)

@@ -1,6 +1,7 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { bodyOf } from '#app/domain/layout/body.ts'
+import { plainHanging, type HangingData } from '#app/domain/layout/hanging-data.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { supportOf } from '#app/domain/layout/supports.ts'
 import { beamData } from '#app/domain/rules/beam-data.ts'
@@ -11,6 +12,7 @@ import { clearanceBelow } from '#app/domain/rules/clearance-below.ts'
 import { clearanceFrontOfBeam } from '#app/domain/rules/clearance-front-of-beam.ts'
 import { clearanceSideEnd } from '#app/domain/rules/clearance-side-end.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
+import { hangerLength } from '#app/domain/rules/hanger-length.ts'
 import { headFlux } from '#app/domain/rules/head-flux.ts'
 import { ingressProtection } from '#app/domain/rules/ingress-protection.ts'
 import { levelAxis } from '#app/domain/rules/level-axis.ts'
@@ -39,6 +41,7 @@ const heaterRules: readonly ((check: HeaterCheck) => Finding | null | readonly F
   voltageOffered,
   ingressProtection,
   supported,
+  hangerLength,
   supportLoad,
   clearanceAbove,
   clearanceSideEnd,
@@ -54,10 +57,10 @@ const heaterRules: readonly ((check: HeaterCheck) => Finding | null | readonly F
  * is not checked again.
  */
 export function checkLayout(check: LayoutCheck): Finding[] {
-  const { site, brief, layout, models } = check
+  const { layout, models } = check
   return inOrder([
     ...siteGiven(check),
-    ...layout.heaters.flatMap((heater) => heaterFindings(site, brief, heater, models.get(heater.model))),
+    ...layout.heaters.flatMap((heater) => heaterFindings(check, heater, models.get(heater.model))),
     ...headFlux(check),
     ...nearInfrared(check),
     ...seatTarget(check),
@@ -79,14 +82,14 @@ const inOrder = (findings: readonly Finding[]): Finding[] => findings.toSorted((
 interface Checked {
   readonly brief: Brief
   readonly model: HeaterModel
+  readonly hanging: HangingData
   readonly findings: readonly Finding[]
 }
 
 const checked = new WeakMap<Site, WeakMap<MountedHeater, Checked>>()
 
 function heaterFindings(
-  site: Site,
-  brief: Brief,
+  { site, brief, hanging = plainHanging }: LayoutCheck,
   heater: MountedHeater,
   model: HeaterModel | undefined,
 ): readonly Finding[] {
@@ -94,10 +97,11 @@ function heaterFindings(
   const ofSite = checked.get(site) ?? new WeakMap<MountedHeater, Checked>()
   checked.set(site, ofSite)
   const known = ofSite.get(heater)
-  if (known && known.brief === brief && known.model === model) return known.findings
-  const check = { site, brief, heater, model, body: bodyOf(heater, model), support: supportOf(site, heater, model) }
+  if (known && known.brief === brief && known.model === model && known.hanging === hanging) return known.findings
+  const [body, support] = [bodyOf(heater, model), supportOf(site, heater, model)]
+  const check = { site, brief, heater, model, body, support, hanging }
   const found = heaterRules.flatMap((rule) => rule(check) ?? [])
   const findings = [withdrawnModel(heater, model), ...plainWhereNoStatePasses(site, found)]
-  ofSite.set(heater, { brief, model, findings })
+  ofSite.set(heater, { brief, model, hanging, findings })
   return findings
 }

@@ -2,6 +2,7 @@ import type { Brief } from '#app/domain/brief/brief.ts'
 import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Body } from '#app/domain/layout/body.ts'
+import type { HangingData } from '#app/domain/layout/hanging-data.ts'
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
 import type { Support } from '#app/domain/layout/supports.ts'
 import { outcomeOf, type Finding, type Outcome } from '#app/domain/rules/finding.ts'
@@ -14,6 +15,8 @@ export interface LayoutCheck {
   readonly layout: Pick<Layout, 'heaters'>
   readonly models: ReadonlyMap<string, HeaterModel>
   readonly warmth: readonly SeatWarmth[]
+  /** Absent: the defaults. */
+  readonly hanging?: HangingData | undefined
 }
 
 /** What a rule about one heater looks at. */
@@ -24,6 +27,7 @@ export interface HeaterCheck {
   readonly model: HeaterModel
   readonly body: Body
   readonly support: Support
+  readonly hanging: HangingData
 }
 
 /** What a rule is about, so that its findings share it. */

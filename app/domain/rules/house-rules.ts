@@ -29,6 +29,12 @@ export const houseRules = {
   tolerance: rule(0.025),
   /** How far sideways of its member an eye may be for a chain to hang plumb, m. */
   chainSidewaysLimit: rule(0.02),
+  /** How far in plan each member of a splayed pair may be from its eye, m. */
+  splayReach: rule(1, 'house rule; common practice, no source'),
+  /** Largest angle of a splayed hanger from plumb, degrees. */
+  splayAngleDeg: rule(45, 'house rule; common practice, no source'),
+  /** Suspension points that must hold a whole heater should the other let go. */
+  safetyLine: rule(1, 'house rule; common practice, no source'),
   /** Supply over rated voltage beyond which an option may not be used. */
   supplyOverRated: rule(1.1),
   /** Least second numeral of the ingress protection under open sky or an opening roof, and under a closed cover. */

@@ -3,15 +3,15 @@ import { heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.
 import type { Finding } from '#app/domain/rules/finding.ts'
 
 /**
- * The element's axis is level within the manual's angle. Rigid mounts are set level; of chain, what the turnbuckles
- * cannot take up of the whole links is left.
+ * The element's axis is level within the manual's angle. Rigid mounts are set level; of chain and rods, what the
+ * turnbuckles cannot take up is left.
  */
 export function levelAxis(check: HeaterCheck): Finding {
-  const { site, heater, model } = check
+  const { site, heater, model, hanging } = check
   const limit = model.elementAxisLevelWithinDeg
-  const schedule = hangScheduleOf(site, heater, model)
+  const schedule = hangScheduleOf(site, heater, model, hanging)
   const value = Math.abs(schedule?.tiltLeftDeg ?? 0)
-  const short = schedule?.hangers.some(({ tooShort }) => tooShort) ?? false
+  const short = schedule?.hangers.some(({ outcome }) => outcome === 'too short') ?? false
   return judgedBy(
     heaterRule(check, 'level-axis', 'hard stop', '°'),
     {
@@ -25,7 +25,7 @@ export function levelAxis(check: HeaterCheck): Finding {
       limit,
       margin: limit === null ? null : limit - value,
       tolerance: 0,
-      remedy: short ? 'Too short for chain: use a short bracket.' : 'Hang it by hangers of other lengths.',
+      remedy: short ? `Too short for ${heater.mount}: use a short bracket.` : 'Hang it by hangers of other lengths.',
     },
   )
 }

@@ -1,39 +1,67 @@
+import { splayAngleDeg } from '#app/domain/layout/splayed-pair.ts'
 import type { Support, SupportReason } from '#app/domain/layout/supports.ts'
 import { findingOf, heaterRule, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
 import { formatLength } from '#app/domain/units.ts'
 
+/** A splayed hanger for one that is unsupported because of its angle; reasons whose figure is a distance. */
+const byDistance: readonly SupportReason[] = ['out of reach', 'an eye has no member', 'held']
+
 /**
- * The heater hangs from structure that is there: within its mount's reach, with something above every suspension eye,
- * and by a mount that holds its tilt. A heater goes where its support is, so the support's place has no tolerance here.
+ * The heater hangs from structure that is there: within its mount's reach, with something above every suspension eye
+ * (or, splayed, on either side of it, steep enough), and by a mount that holds its tilt. A heater goes where its support
+ * is, so the support's place has no tolerance here.
  */
 export function supported(check: HeaterCheck): Finding {
   const { support, site, heater } = check
   const { outcome, reason, nearest, distance, reach } = support
-  const source = check.model.mountReach[heater.mount] === undefined ? houseRules.chainSidewaysLimit.source : undefined
-  const rule = heaterRule(check, 'supported', 'hard stop', 'm', source)
+  const flat = reason === 'splayed too flat'
+  const rule = heaterRule(check, 'supported', 'hard stop', flat ? '°' : 'm', sourceOf(check))
   const outcomes = { held: 'pass', 'not held': 'fails', 'cannot tell': 'cannot tell' } as const
-  const beyond = reason === 'out of reach' || reason === 'an eye has no member' || reason === 'held'
+  const beyond = byDistance.includes(reason)
   const far = nearest && reason !== 'held' ? [[heater.x, heater.y, heater.lowestPoint], [...nearest.point, heater.lowestPoint]] as const : null // prettier-ignore
+  const [value, limit] = flat ? [flattestOf(support), houseRules.splayAngleDeg.value] : [distance, reach]
+  const margin = (flat || beyond) && limit !== null && value !== null ? limit - value : null
   return findingOf(rule, outcomes[outcome], {
     title: titleOf(support, heater.mount),
-    value: distance,
-    limit: reach,
-    margin: beyond && reach !== null && distance !== null ? reach - distance : null,
-    tolerance: beyond ? 0 : null,
+    value,
+    limit,
+    margin,
+    tolerance: flat || beyond ? 0 : null,
     remedy: reason === 'held' ? null : remedyOf(support, site.displayUnits),
     nearest: far && { from: far[0], to: far[1] },
   })
 }
 
-function titleOf({ reason, nearest, ids }: Support, mount: string): string {
+function sourceOf({ support, heater, model }: HeaterCheck): string | undefined {
+  if (heater.splayed && support.eyes.length > 0) return houseRules.splayReach.source
+  return model.mountReach[heater.mount] === undefined ? houseRules.chainSidewaysLimit.source : undefined
+}
+
+/** The largest angle of its splayed hangers from plumb, degrees. */
+function flattestOf({ eyes }: Support): number {
+  return Math.max(
+    ...eyes.flatMap(({ eye, legs }) =>
+      (legs ?? []).map(({ sideways, underside }) => splayAngleDeg(sideways, (underside ?? eye[2]) - eye[2])),
+    ),
+  )
+}
+
+function titleOf({ reason, nearest, ids, eyes }: Support, mount: string): string {
   const thing = nearest?.kind ?? { 'wall bracket': 'wall', 'pole clamp': 'pole' }[mount] ?? 'member'
+  const splayed = eyes.some(({ legs }) => legs)
   const titles: Record<SupportReason, string> = {
-    held: `Held by ${ids.join(' and ')}`,
+    held: `${splayed ? 'Splayed between' : 'Held by'} ${ids.join(' and ')}`,
     'nothing to fix to': `No ${thing} to fix it to`,
-    'out of reach': thing === 'member' ? 'No member above it' : `No ${thing} within reach`,
+    'out of reach': splayed
+      ? 'A member of its splayed pair is out of reach'
+      : thing === 'member'
+        ? 'No member above it'
+        : `No ${thing} within reach`,
     'an eye has no member': 'A suspension eye has no member above it',
+    'not between members': 'No member on either side for a splayed pair',
+    'splayed too flat': 'Its splayed hangers lie too flat',
     'support too low': `The ${thing} is lower than the heater`,
     'tilt not held': `The tilt is not held by ${mount}`,
     'not in a bay': 'Not in a bay between members',
@@ -45,12 +73,17 @@ function titleOf({ reason, nearest, ids }: Support, mount: string): string {
   return titles[reason]
 }
 
-function remedyOf({ reason, nearest }: Support, units: 'metric' | 'imperial'): string {
+function remedyOf({ reason, nearest, eyes }: Support, units: 'metric' | 'imperial'): string {
   if (reason === 'tilt not held') return 'Set the tilt to 0°, or choose a mount that holds it.'
   if (reason === 'reach not stated' || reason === 'eyes not stated') return 'Enter it from the manual.'
   if (reason === 'height not known') return 'Enter the height of its underside.'
+  if (reason === 'splayed too flat') return 'Lower the heater, or bring its members nearer by a rail.'
   if (!nearest) return 'Add a support to the site, or choose another mount.'
   const away = formatLength(nearest.distance, units)
+  const splayed = eyes.some(({ legs }) => legs) || reason === 'not between members'
+  if (splayed && nearest.distance <= houseRules.chainSidewaysLimit.value) {
+    return `It is under ${nearest.name}: hang it plumb, not splayed.`
+  }
   if (reason === 'support too low') return `Lower the heater. Nearest is ${nearest.name}, ${away} away.`
   const rail = nearest.kind === 'member' ? ', or add a rail between members' : ''
   return `Nearest is ${nearest.name}, ${away} away. Move it there${rail}.`

@@ -64,7 +64,11 @@ interface HangerLine {
 function hangersOf({ heater, model, site }: HeaterProps): HangerLine[] {
   const schedule = hangScheduleOf(site, heater, model)
   if (schedule)
-    return schedule.hangers.map(({ eye, underside, drop }) => ({ from: eye, to: [eye[0], eye[1], underside], drop }))
+    return schedule.hangers.map(({ eye, anchor, drop, sideways }) => ({
+      from: eye,
+      to: anchor,
+      drop: sideways > 0 ? null : drop,
+    }))
   if (heater.mount === 'recess box') return []
   const body = bodyOf(heater, model)
   const top = add(body.centre, scale(body.w, -body.half.w))

@@ -419,6 +419,23 @@ describe('what a layout comes to', () => {
     expect(totalsOf([], layout.heaters)).toMatchObject({ evenness: null, coldest: null, seatsCounted: 0, power: 3000 })
   })
 
+  it('names the same seat where two differ by what two machines differ in', () => {
+    const [first] = warm([seat('R3-4')], layout.heaters)
+    const pair = (one: number, other: number) => [
+      { ...first!, seat: seat('W3-3'), body: 150 + other },
+      { ...first!, seat: seat('R3-4'), body: 150 + one },
+    ]
+    for (const [one, other] of [
+      [0, 1e-12],
+      [1e-12, 0],
+      [0, 0],
+    ]) {
+      const totals = layoutTotals(pair(one!, other!), layout, models, brief())
+      expect([totals.coldest!.seatId, totals.hottest!.seatId]).toEqual(['R3-4', 'W3-3'])
+    }
+    expect(layoutTotals(pair(0.01, 0), layout, models, brief()).coldest!.seatId).toBe('W3-3')
+  })
+
   it('names heaters that cannot be told even on a terrace without seats', () => {
     const dark = { heaters: [heater('H1', { model: 'unheard-of' })] }
     expect(layoutTotals(warm([], dark.heaters), dark, models, brief()).cannotTell).toEqual(['H1'])

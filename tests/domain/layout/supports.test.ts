@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import type { Mount } from '#app/domain/heaters/heater-model.ts'
-import { movedToSupport, railBetween } from '#app/domain/layout/support-remedies.ts'
+import { movedToSupport, railsFor } from '#app/domain/layout/support-remedies.ts'
 import { supportOf } from '#app/domain/layout/supports.ts'
 import type { Member, Site } from '#app/domain/site/site.ts'
 import { demoModels, demoSites } from '#drizzle/seed/demo-sites.ts'
@@ -97,23 +97,48 @@ describe('the two remedies', () => {
 
   it('has nowhere to move to on a site without members', () => {
     expect(movedToSupport(plainSite({ members: [] }), plainHeater(), model)).toBeNull()
-    expect(railBetween(site, plainHeater({ y: 3 }))).toBeNull()
+    expect(railsFor(site, plainHeater({ y: 3 }), model)).toBeNull()
   })
 
   it('proposes a rail between two members, its underside straight between theirs', () => {
     const { site: terrace, variants } = demoSites().find(({ key }) => key === 'A')!
-    const rail = railBetween(terrace, variants[0]!.layout.heaters[0]!)!
+    const drawn = variants[0]!.layout.heaters[0]!
+    const of = demoModels().find(({ code }) => code === drawn.model)!
+    const [rail, ...more] = railsFor(terrace, drawn, of)!
+    expect(more).toEqual([])
     // Roof at y = 2.70 of 5.40 m: half way from 3.30 to 2.75 m.
-    expect(rail).toMatchObject({ from: [0, 2.7], to: [2.64, 2.7], underside: { from: 3.025, to: 3.025 } })
-    expect(rail.allowedPointLoad).toBeNull()
-    const railed = { ...terrace, members: [...terrace.members, rail] }
-    const heater = { ...variants[0]!.layout.heaters[0]!, lowestPoint: 2.4 }
-    expect(
-      supportOf(
-        railed,
-        heater,
-        demoModels().find(({ code }) => code === heater.model)!,
-      ).outcome,
-    ).toBe('held')
+    const ends = [rail!.from, rail!.to].toSorted((a, b) => a[0] - b[0])
+    expect(ends).toEqual([[0, 2.7], [2.64, 2.7]]) // prettier-ignore
+    expect(rail).toMatchObject({ kind: 'rail', underside: { from: 3.025, to: 3.025 }, allowedPointLoad: null })
+    expect(rail!.loadStatus).toContain('to be confirmed')
+    const railed = { ...terrace, members: [...terrace.members, rail!] }
+    expect(supportOf(railed, { ...drawn, lowestPoint: 2.4 }, of).outcome).toBe('held')
+  })
+
+  it('proposes two rails, one over each eye, where the element runs along the members', () => {
+    const { site: terrace, variants } = demoSites().find(({ key }) => key === 'A')!
+    const drawn = { ...variants[0]!.layout.heaters[1]!, turnDeg: 90, lowestPoint: 2.4 }
+    const of = demoModels().find(({ code }) => code === drawn.model)!
+    const rails = railsFor(terrace, drawn, of)!
+    // Eyes 0.640 m apart along y about 2.70: rails across x at 2.38 and 3.02, under a roof that falls 0.55 m in 5.40.
+    expect(rails.map(({ from, to }) => [from[1], to[1]])).toEqual([[2.38, 2.38], [3.02, 3.02]]) // prettier-ignore
+    expect(rails.map(({ id }) => id)).toEqual(['rail-1', 'rail-2'])
+    for (const [i, y] of [2.38, 3.02].entries()) {
+      const underside = 3.3 - (0.55 / 5.4) * y
+      expect(rails[i]!.underside).toEqual({ from: expect.closeTo(underside, 3), to: expect.closeTo(underside, 3) })
+    }
+    const railed = { ...terrace, members: [...terrace.members, ...rails] }
+    expect(supportOf(railed, drawn, of)).toMatchObject({ outcome: 'held', ids: ['rail-1', 'rail-2'] })
+  })
+
+  it('proposes none for walls, poles and bays, nor where it would lie below the eyes', () => {
+    const { site: terrace, variants } = demoSites().find(({ key }) => key === 'A')!
+    const drawn = variants[0]!.layout.heaters[0]!
+    const of = demoModels().find(({ code }) => code === drawn.model)!
+    for (const mount of ['wall bracket', 'pole clamp', 'recess box'] as const)
+      expect(railsFor(terrace, { ...drawn, mount }, of)).toBeNull()
+    // Body 130 mm deep: its eyes lie at the underside from a lowest point of 2.895 m.
+    expect(railsFor(terrace, { ...drawn, lowestPoint: 2.894 }, of)).not.toBeNull()
+    expect(railsFor(terrace, { ...drawn, lowestPoint: 2.896 }, of)).toBeNull()
   })
 })

@@ -3,6 +3,7 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { checkLayout, isStopped } from '#app/domain/rules/check-layout.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import type { Brief } from '#app/domain/brief/brief.ts'
+import { plainHanging, type HangingData } from '#app/domain/layout/hanging-data.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import type { Obstacle, Site } from '#app/domain/site/site.ts'
 import { plainBrief, plainHeater, plainModel, plainSite } from '#tests/support/plain-site.ts'
@@ -16,11 +17,12 @@ interface Case {
   readonly brief?: Partial<Brief>
 }
 
-function found(rule: string, { site, heater, model, brief }: Case = {}): Finding[] {
+function found(rule: string, { site, heater, model, brief }: Case = {}, hanging?: HangingData): Finding[] {
   const made = plainModel(model)
   const layout = { heaters: [plainHeater(heater)] }
   const models = new Map([[made.code, made]])
-  const findings = checkLayout({ site: plainSite(site), brief: plainBrief(brief), layout, models, warmth: [] })
+  const rests = { site: plainSite(site), brief: plainBrief(brief), layout, models, warmth: [] }
+  const findings = checkLayout({ ...rests, hanging })
   return findings.filter((finding) => finding.rule === rule && finding.subject.kind === 'heater')
 }
 
@@ -449,5 +451,67 @@ describe('models', () => {
     expect(outcome('beam-data')).toBe('pass')
     const [finding] = found('beam-data', { model: { beam: null } })
     expect([finding?.outcome, finding?.weight]).toEqual(['cannot tell', 'hard stop'])
+  })
+})
+
+describe('hanger-length', () => {
+  const surely = { site: { dimensions: [0, 1, 2].map((i) => sure('cover', 'roof', `corners.${i}.2`)) } }
+  // Body 105 mm under 3.000 m; fittings of 95 mm that a turnbuckle makes 40 mm shorter: 55 mm at the least.
+  it.each([
+    [2.84 + epsilon, 'fails'],
+    [2.84, 'pass'],
+    [2.84 - epsilon, 'pass'],
+  ])('lowest point at %s m: %s', (lowestPoint, expected) => {
+    expect(outcome('hanger-length', { ...surely, heater: { lowestPoint } })).toBe(expected)
+  })
+
+  it('is to be measured first within the tolerance of the cover', () => {
+    const rough = { site: { dimensions: [{ ...sure('cover', 'roof', 'corners.0.2', 0.03), moves: [0, 1, 2].map((i) => ({ of: 'cover' as const, id: 'roof', coordinate: `corners.${i}.2`, by: 1 })) }] } } // prettier-ignore
+    expect(outcome('hanger-length', { ...rough, heater: { lowestPoint: 2.84 - 0.0299 } })).toBe('measure first')
+  })
+
+  it('names the short bracket, and asks for another hanger beyond the turnbuckle', () => {
+    const [short] = found('hanger-length', { heater: { lowestPoint: 2.86 } })
+    expect([short?.outcome, short?.title]).toEqual(['fails', 'Too short for chain: use a short bracket'])
+    // 3.000 − 2.860 − 0.105.
+    expect(short?.remedy).toContain('0.035 m')
+    const wide = { ...plainHanging, linkPitch: 0.2, shortens: 0.02, lengthens: 0.02 }
+    // Net 0.500: two links of 0.200 leave 0.100, three lack as much.
+    const [beyond] = found('hanger-length', {}, wide)
+    expect([beyond?.outcome, beyond?.title]).toEqual(['fails', "More than the turnbuckle's range: another hanger"])
+    expect(beyond?.margin).toBeCloseTo(-0.08, 9)
+  })
+
+  it('is not asked of brackets, nor where nothing is above', () => {
+    expect(found('hanger-length', { heater: { mount: 'wall bracket' } })).toEqual([])
+    expect(found('hanger-length', { heater: { y: 3 } })).toEqual([])
+  })
+})
+
+describe('support-load by statics', () => {
+  const beam = plainSite().members[0]!
+  const weight = 3.1 * 9.80665
+
+  it('says when a point would not hold the whole heater should the other let go', () => {
+    const allowing = (allowedPointLoad: number): Case => ({ site: { members: [{ ...beam, allowedPointLoad }] } })
+    expect(outcome('support-load-alone', allowing(weight - epsilon))).toBe('fails')
+    expect(found('support-load-alone', allowing(weight))).toEqual([])
+    expect(found('support-load-alone', allowing(weight / 2 - epsilon))).toEqual([])
+  })
+
+  it('takes the tension of each splayed hanger', () => {
+    // 0.3 m aside to 2.0 and 0.3 m to 2.6, 0.4 m up: φ = 36.87°, W/4 / cos φ each.
+    const members = [2, 2.6].map((y, i) => ({ ...beam, id: `b${i}`, name: `b${i}`, from: [0, y] as [number, number], to: [6, y] as [number, number], underside: { from: 2.805, to: 2.805 }, allowedPointLoad: 60 })) // prettier-ignore
+    const [load] = found('support-load', { site: { members }, heater: { y: 2.3, splayed: true, memberId: null } })
+    expect(load?.value).toBeCloseTo(weight / 4 / 0.8, 9)
+    expect(load?.title).toBe('Load allowed on b0 and b1')
+  })
+
+  it('is not known on a rail that was only proposed, nor on walls and poles', () => {
+    const rail = { ...beam, kind: 'rail', allowedPointLoad: null, loadStatus: 'span and load to be confirmed' }
+    const [load] = found('support-load', { site: { members: [rail] } })
+    expect([load?.outcome, load?.remedy]).toEqual(['cannot tell', 'Confirm the allowed load: span and load to be confirmed.']) // prettier-ignore
+    const wall = { id: 'wall', name: 'wall', from: [0, 0] as [number, number], to: [6, 0] as [number, number], top: 3, material: 'non-combustible' as const, loadStatus: 'sound' } // prettier-ignore
+    expect(outcome('support-load', { site: { walls: [wall] }, heater: { mount: 'wall bracket', y: 0.2, memberId: 'wall' } })).toBe('cannot tell') // prettier-ignore
   })
 })
