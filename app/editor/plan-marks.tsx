@@ -1,5 +1,5 @@
 import { memo } from 'react'
-import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
+import type { SeatFigures } from '#app/domain/comfort/seat-warmth.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
@@ -35,7 +35,7 @@ interface PlanUnderProps {
 interface PlanMarksProps extends Pick<PlanUnderProps, 'site' | 'layout' | 'models' | 'view' | 'pen' | 'words'> {
   /** As kept: what names keep clear of, so that they stand still during a gesture. */
   readonly kept: Layout
-  readonly warmth: readonly SeatWarmth[]
+  readonly warmth: readonly SeatFigures[]
   readonly selected: ReadonlySet<string>
   readonly seatId: string | null
   readonly cuts: readonly SectionCut[]
@@ -99,7 +99,7 @@ export function PlanMarks(props: PlanMarksProps) {
 }
 
 /** The figure in a seat's disc; null with no heater and before figures are reckoned. */
-const figureOf = (warmth: SeatWarmth | undefined, unit: FluxUnit): string | null =>
+const figureOf = (warmth: SeatFigures | undefined, unit: FluxUnit): string | null =>
   warmth && warmth.body !== null ? fluxFigure(warmth.body, unit) : null
 
 /** The scale bar at the lower right; it stays there whatever the plan's size. */

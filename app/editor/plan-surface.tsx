@@ -1,6 +1,6 @@
 import { useEffect, useMemo, useRef, useState, type Dispatch, type FocusEvent, type RefObject } from 'react'
 import { Button, IconButton } from '#app/components/button.tsx'
-import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
+import type { SeatFigures } from '#app/domain/comfort/seat-warmth.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength } from '#app/domain/units.ts'
@@ -27,7 +27,7 @@ interface PlanSurfaceProps {
   readonly dispatch: Dispatch<EditorAction>
   readonly site: Site
   readonly models: ReadonlyMap<string, HeaterModel>
-  readonly warmth: readonly SeatWarmth[]
+  readonly warmth: readonly SeatFigures[]
   readonly choice: ViewChoice
   readonly scale: QuantityScale
   readonly flux: FluxView

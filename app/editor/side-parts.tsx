@@ -14,13 +14,13 @@ import { HeatersTable } from '#app/editor/panels/heaters-table.tsx'
 import { PlacePanel } from '#app/editor/panels/place-panel.tsx'
 import { SeatsTable } from '#app/editor/panels/seats-table.tsx'
 import type { Editor } from '#app/editor/use-editor.ts'
-import type { LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
+import type { ShownFigures } from '#app/editor/use-figures.ts'
 import type { ViewChoice } from '#app/editor/view-choice.ts'
 
 /** What the panels beside and below the plan show and change. */
 export interface SideSubject {
   readonly editor: Editor
-  readonly figures: LayoutFigures
+  readonly figures: ShownFigures
   /** As shown: the gesture's while one is under way. */
   readonly layout: Layout
   readonly site: Site

@@ -1,4 +1,4 @@
-import { useCallback, useDeferredValue, useEffect, useMemo, useState } from 'react'
+import { useCallback, useEffect, useMemo, useState } from 'react'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
@@ -26,6 +26,7 @@ import { useEditor } from '#app/editor/use-editor.ts'
 import { useFigures } from '#app/editor/use-figures.ts'
 import { useFlux } from '#app/editor/use-flux.ts'
 import { useMedia, useRoom } from '#app/editor/use-media.ts'
+import { useBeat, usePaced } from '#app/editor/use-paced.ts'
 import { plainView, planeHeight } from '#app/editor/view-choice.ts'
 
 /** Everything the variant page brings to its editor. */
@@ -80,9 +81,10 @@ export function VariantEditor(props: VariantEditorProps) {
     onTaken,
   })
 
-  const figures = useFigures({ site, brief, layout, models, shade: choice.shade })
-  const scale = useMemo(() => scaleOf(choice, brief, site.displayUnits), [choice, brief, site])
   const moving = state.draft !== null
+  const beat = useBeat(moving)
+  const figures = useFigures({ site, brief, layout, models, shade: choice.shade, moving, beat })
+  const scale = useMemo(() => scaleOf(choice, brief, site.displayUnits), [choice, brief, site])
   const coverTolerance = useMemo(() => toleranceOfCovers(site), [site])
   const question = useMemo(
     () => mapQuestion({ site, brief, layout, models, choice }, scale, moving ? 'coarse' : 'sharp'),
@@ -238,7 +240,11 @@ export function VariantEditor(props: VariantEditorProps) {
             </div>
           )}
         </div>
-        <SidePanels subject={useDeferredValue(subject)} room={room} tools={<ToolRow {...tools} bare />} />
+        <SidePanels
+          subject={usePaced(subject, moving, beat)}
+          room={room}
+          tools={room === 'tablet' ? <ToolRow {...tools} bare /> : null}
+        />
       </div>
     </JobFrame>
   )

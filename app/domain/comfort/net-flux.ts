@@ -104,11 +104,14 @@ function strongestOf(fluxes: readonly NetFlux[]): NetFlux[] {
 /** Both ends and the net flux vector of each element, nine numbers in a row: the search runs over them many times. */
 function rowsOf(fluxes: readonly NetFlux[]): Float64Array {
   const rows = new Float64Array(fluxes.length * 9)
-  fluxes.forEach(({ ends, vector }, i) => {
-    rows.set(ends[0], i * 9)
-    rows.set(ends[1], i * 9 + 3)
-    rows.set(vector, i * 9 + 6)
-  })
+  let to = 0
+  for (const { ends, vector } of fluxes) {
+    for (const [x, y, z] of [ends[0], ends[1], vector]) {
+      rows[to++] = x
+      rows[to++] = y
+      rows[to++] = z
+    }
+  }
   return rows
 }
 

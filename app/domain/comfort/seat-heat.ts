@@ -25,17 +25,22 @@ interface LargestParts {
   readonly parts: readonly number[]
 }
 
-/** What each source gives a seat, in the order of the sources. Every figure of a seat is a sum of these. */
-export interface SeatHeat {
+/** What each source gives a seat, in the order of the sources: what the figures that follow a drag are sums of. */
+export interface PlainHeat {
   /** Horizontal irradiance on the body plane, W/m². */
   readonly body: readonly number[]
   /** Horizontal irradiance at the head, W/m². */
   readonly headHorizontal: readonly number[]
   /** Over all directions. */
   readonly head: LargestParts
-  readonly bodyLargest: LargestParts
   /** Absorbed effective radiant field, W/m² of body surface. */
   readonly field: readonly number[]
+}
+
+/** All that each source gives a seat. Every figure of a seat is a sum of these. */
+export interface SeatHeat extends PlainHeat {
+  /** Over all directions, at the body's height. */
+  readonly bodyLargest: LargestParts
   /** Near infrared at the eye over all level directions; null when a source's share of it is not known. */
   readonly nearInfrared: LargestParts | null
 }
@@ -92,6 +97,27 @@ function rememberedHeat(source: Source, seat: Seat): ElementHeat {
   return made
 }
 
+/** A seat with the heat of each element that reaches it. */
+interface HeatedSeat {
+  readonly seat: Seat
+  readonly sources: readonly Source[]
+  readonly heats: readonly ElementHeat[]
+  readonly obstructions: readonly Obstruction[]
+}
+
+function heatedSeat(
+  seat: Seat,
+  sources: readonly Source[],
+  obstructions: readonly Obstruction[],
+  remember: boolean,
+): HeatedSeat {
+  const shaded = obstructions.length > 0
+  const heats = sources.map((source) =>
+    remember && !shaded ? rememberedHeat(source, seat) : elementHeat(source, seat, obstructions),
+  )
+  return { seat, sources, heats, obstructions }
+}
+
 /**
  * Heat of every source at one seat; unshaded unless obstructions are given. With `remember`, what it reckons is kept for
  * the next call with the same objects, about 1 kB per element and seat.
@@ -102,29 +128,53 @@ export function heatAtSeat(
   obstructions: readonly Obstruction[] = [],
   remember = false,
 ): SeatHeat {
-  const shaded = obstructions.length > 0
-  const heats = sources.map((source) =>
-    remember && !shaded ? rememberedHeat(source, seat) : elementHeat(source, seat, obstructions),
-  )
-  const emitters = sources.map(({ emitter }) => emitter)
-  const largest = (point: Vec3, fluxes: readonly (NetFlux | null)[]) =>
-    shaded ? shadedLargest(point, emitters, obstructions) : largestParts(fluxes)
-  const head = largest(
-    headPoint(seat),
-    heats.map(({ atHead }) => atHead),
-  )
-  const body = largest(
-    bodyPoint(seat),
-    heats.map(({ atBody }) => atBody),
-  )
+  const heated = heatedSeat(seat, sources, obstructions, remember)
+  return {
+    ...plainHeatOf(heated),
+    bodyLargest: largestAt(
+      heated,
+      bodyPoint(seat),
+      heated.heats.map(({ atBody }) => atBody),
+    ),
+    nearInfrared: nearInfraredAt(headPoint(seat), sources, heated.heats, obstructions),
+  }
+}
+
+/** As `heatAtSeat`, without what only cautions ask for: half the work. */
+export function plainHeatAtSeat(
+  seat: Seat,
+  sources: readonly Source[],
+  obstructions: readonly Obstruction[] = [],
+  remember = false,
+): PlainHeat {
+  return plainHeatOf(heatedSeat(seat, sources, obstructions, remember))
+}
+
+function plainHeatOf(heated: HeatedSeat): PlainHeat {
+  const { heats } = heated
   return {
     body: heats.map(({ body }) => body),
     headHorizontal: heats.map(({ headHorizontal }) => headHorizontal),
     field: heats.map(({ field }) => field),
-    head,
-    bodyLargest: body,
-    nearInfrared: nearInfraredAt(headPoint(seat), sources, heats, obstructions),
+    head: largestAt(
+      heated,
+      headPoint(heated.seat),
+      heats.map(({ atHead }) => atHead),
+    ),
   }
+}
+
+function largestAt(
+  { sources, obstructions }: HeatedSeat,
+  point: Vec3,
+  fluxes: readonly (NetFlux | null)[],
+): LargestParts {
+  if (obstructions.length === 0) return largestParts(fluxes)
+  return shadedLargest(
+    point,
+    sources.map(({ emitter }) => emitter),
+    obstructions,
+  )
 }
 
 function largestParts(fluxes: readonly (NetFlux | null)[]): LargestParts {

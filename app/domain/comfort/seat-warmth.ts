@@ -1,6 +1,6 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
 import { feelsLike, type Conditions } from '#app/domain/comfort/feels-like.ts'
-import { heatAtSeat, type SeatHeat } from '#app/domain/comfort/seat-heat.ts'
+import { heatAtSeat, plainHeatAtSeat, type PlainHeat, type SeatHeat } from '#app/domain/comfort/seat-heat.ts'
 import { sensationOf, type Sensation } from '#app/domain/comfort/sensation.ts'
 import { sourcesOf, type Sources } from '#app/domain/comfort/sources.ts'
 import { surroundingsAt, type Surroundings } from '#app/domain/comfort/surroundings.ts'
@@ -27,10 +27,10 @@ export interface FeelsLikePair {
 export type TargetOutcome = 'below' | 'in target' | 'above' | 'not heated' | 'no heater'
 
 /**
- * What the heaters of one layout do at one seat. Irradiances in W/m², null when no heater (with beam data) is placed:
- * the page then shows "–".
+ * What the heaters of one layout do at one seat, as far as it follows a drag. Irradiances in W/m², null when no heater
+ * (with beam data) is placed: the page then shows "–".
  */
-export interface SeatWarmth {
+export interface SeatFigures {
   readonly seat: Seat
   /** A seat outside the floor is not counted in any total until it is moved. */
   readonly onFloor: boolean
@@ -43,15 +43,8 @@ export interface SeatWarmth {
   readonly headDirection: readonly [x: number, y: number, z: number] | null
   /** Horizontal irradiance at the head. */
   readonly headHorizontal: number | null
-  /** Largest irradiance over all directions at the body's height. */
-  readonly bodyLargest: number | null
   /** Horizontal irradiance at the head ÷ on the body: hot head, cold feet. Null without heat on the body. */
   readonly headToBody: number | null
-  /**
-   * Near-infrared irradiance (0.78–3 µm) at the eye, at the head's height: the largest over all level directions, on
-   * vertical planes, as a guest looks level and not up into a heater. Null when it cannot be told.
-   */
-  readonly nearInfraredAtEye: number | null
   readonly target: TargetOutcome
   /** Effective radiant field on the body, W/m² of body surface. */
   readonly field: number | null
@@ -60,6 +53,17 @@ export interface SeatWarmth {
   readonly sensation: Readonly<Record<WindName, { readonly before: Sensation; readonly after: Sensation | null }>>
   /** Heaters whose model is unknown or has no beam data: the figures are without them. */
   readonly cannotTell: readonly string[]
+}
+
+/** All that the heaters of one layout do at one seat: with what cautions go by. */
+export interface SeatWarmth extends SeatFigures {
+  /** Largest irradiance over all directions at the body's height. */
+  readonly bodyLargest: number | null
+  /**
+   * Near-infrared irradiance (0.78–3 µm) at the eye, at the head's height: the largest over all level directions, on
+   * vertical planes, as a guest looks level and not up into a heater. Null when it cannot be told.
+   */
+  readonly nearInfraredAtEye: number | null
 }
 
 /** What a layout comes to. Powers W; irradiances W/m². */
@@ -127,15 +131,41 @@ const noHeat = 1e-6
 /** Elements × seats up to which a layout's heat is kept between calls: 100 MB. */
 const mostRemembered = 100_000
 
+/** The figures of every seat that follow a drag: `seatWarmth` without what only cautions ask for, in half the time. */
+export function seatFigures(input: WarmthInput): SeatFigures[] {
+  const sources = sourcesOf(input.layout, input.models)
+  return input.site.seats.map((seat) => {
+    const heat = plainHeatAtSeat(seat, sources.sources, input.obstructions, isRemembered(sources, input))
+    return figuresOfSeat(seat, sources, input, heat)
+  })
+}
+
+const isRemembered = ({ sources }: Sources, { site }: WarmthInput): boolean =>
+  sources.length * site.seats.length <= mostRemembered
+
 /** The figures of one seat and, from the same call, what each element gives to them. */
 export function warmthOfSeat(
   seat: Seat,
-  { sources, cannotTell }: Sources,
-  { site, brief, obstructions }: WarmthInput,
+  sources: Sources,
+  input: WarmthInput,
 ): { readonly warmth: SeatWarmth; readonly heat: SeatHeat } {
-  const heat = heatAtSeat(seat, sources, obstructions, sources.length * site.seats.length <= mostRemembered)
-  const told = (parts: readonly number[] | undefined) => (sources.length > 0 && parts ? sum(parts) : null)
-  const [body, headHorizontal, field] = [told(heat.body), told(heat.headHorizontal), told(heat.field)]
+  const heat = heatAtSeat(seat, sources.sources, input.obstructions, isRemembered(sources, input))
+  const warmth: SeatWarmth = {
+    ...figuresOfSeat(seat, sources, input, heat),
+    bodyLargest: told(sources, heat.bodyLargest.parts),
+    nearInfraredAtEye: told(sources, heat.nearInfrared?.parts),
+  }
+  return { warmth, heat }
+}
+
+/** The sum of what the sources give; null without a source or with one that cannot be told. */
+const told = ({ sources }: Sources, parts: readonly number[] | undefined): number | null =>
+  sources.length > 0 && parts ? sum(parts) : null
+
+function figuresOfSeat(seat: Seat, all: Sources, { site, brief }: WarmthInput, heat: PlainHeat): SeatFigures {
+  const { sources, cannotTell } = all
+  const [body, headHorizontal] = [told(all, heat.body), told(all, heat.headHorizontal)]
+  const field = told(all, heat.field)
   const surroundings = surroundingsAt(seat, site, brief)
   const pairAt = (name: WindName): FeelsLikePair => {
     const conditions = conditionsAt(seat, brief, surroundings, name)
@@ -147,17 +177,15 @@ export function warmthOfSeat(
     before: sensationOf(before, wind, brief),
     after: after === null ? null : sensationOf(after, wind, brief),
   })
-  const warmth: SeatWarmth = {
+  return {
     seat,
     onFloor: isInside(site.floor, seat.x, seat.y),
     body,
     byHeater: sharesByHeater(sources, heat.body),
-    head: told(heat.head.parts),
+    head: told(all, heat.head.parts),
     headDirection: sources.length > 0 ? heat.head.direction : null,
     headHorizontal,
-    bodyLargest: told(heat.bodyLargest.parts),
     headToBody: body === null || headHorizontal === null || body < noHeat ? null : headHorizontal / body,
-    nearInfraredAtEye: told(heat.nearInfrared?.parts),
     target: targetOutcome(seat, body, brief),
     field,
     surroundings,
@@ -165,7 +193,6 @@ export function warmthOfSeat(
     sensation: { calm: sensed(pairs.calm), design: sensed(pairs.design), gust: sensed(pairs.gust) },
     cannotTell,
   }
-  return { warmth, heat }
 }
 
 function sharesByHeater(sources: Sources['sources'], parts: readonly number[]): SeatWarmth['byHeater'] {
@@ -184,7 +211,7 @@ function targetOutcome(seat: Seat, body: number | null, { target }: Brief): Targ
 
 /** What a layout comes to over the seats on the floor: statistics over the primary seats, the head over every seat. */
 export function layoutTotals(
-  warmth: readonly SeatWarmth[],
+  warmth: readonly SeatFigures[],
   layout: Pick<Layout, 'heaters'>,
   models: ReadonlyMap<string, HeaterModel>,
   brief: Brief,
@@ -219,7 +246,7 @@ export function layoutTotals(
 const alike = 1e-6
 
 /** The figure of each seat that has one, from the least to the most; equal ones by the seat's id. */
-const figuresOf = (warmth: readonly SeatWarmth[], figure: (each: SeatWarmth) => number | null) =>
+const figuresOf = (warmth: readonly SeatFigures[], figure: (each: SeatFigures) => number | null) =>
   warmth
     .map((each) => ({ seatId: each.seat.id, irradiance: figure(each) }))
     .filter((each): each is { seatId: string; irradiance: number } => each.irradiance !== null)

@@ -4,6 +4,9 @@ import { add, cross, dot, lengthOf, normalise, scale, type Vec3 } from '#app/dom
 const mostSources = 24
 const mostStarts = 12
 
+/** Sources of less than this share of the strongest part no sets: a climb takes them along. */
+const weakest = 0.01
+
 /** Squares of lengths that differ by less than this share are of one sum, found by several pairs. */
 const same = 1e-9
 
@@ -14,15 +17,17 @@ const hair = (i: number): Vec3 => [Math.sin(12.9898 * i + 1), Math.sin(78.233 * 
  * Directions from which to seek the plane that receives most. A plane sees some of the sources, and what it then
  * receives at best is the length of the sum of their net flux vectors. Sets of sources that a plane can see are parted
  * by the planes through two of them: for each pair the sum of those in front, with and without the two. The longest of
- * these sums come first. `vectors`: net flux of each source, W/m²; beyond the 24 strongest they join only in the sum of
- * all.
+ * these sums come first. `vectors`: net flux of each source, W/m²; beyond the 24 strongest, and under 1 % of the
+ * strongest, they join only in the sum of all.
  */
 export function planeStarts(vectors: readonly Vec3[]): Vec3[] {
   const whole = vectors.reduce<Vec3>(add, [0, 0, 0])
-  const strong = vectors
-    .filter((vector) => lengthOf(vector) > 0)
-    .toSorted((a, b) => lengthOf(b) - lengthOf(a))
+  const sized = vectors.map((vector) => ({ vector, size: lengthOf(vector) })).sort((a, b) => b.size - a.size)
+  const least = (sized[0]?.size ?? 0) * weakest
+  const strong = sized
+    .filter(({ size }) => size > least)
     .slice(0, mostSources)
+    .map(({ vector }) => vector)
   const isNarrow = strong.every((a, i) => strong.every((b, j) => j <= i || dot(a, b) >= 0))
   // Within a right angle of one another every source adds to every sum: none is longer than that of all.
   if (isNarrow) return [whole, ...strong.slice(0, 1)]

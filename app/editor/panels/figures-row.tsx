@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react'
-import type { LayoutTotals, SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
+import type { LayoutTotals, SeatFigures } from '#app/domain/comfort/seat-warmth.ts'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import { formatMoney } from '#app/domain/comparison/list-price.ts'
 import { formatQuantity, unitSymbol, type DisplayUnits } from '#app/domain/units.ts'
@@ -8,7 +8,7 @@ import type { FluxUnit } from '#app/editor/view-choice.ts'
 
 interface FiguresRowProps {
   readonly totals: LayoutTotals
-  readonly warmth: readonly SeatWarmth[]
+  readonly warmth: readonly SeatFigures[]
   readonly brief: Brief
   readonly units: DisplayUnits
   readonly fluxUnit: FluxUnit
@@ -70,7 +70,7 @@ export function FiguresRow(props: FiguresRowProps) {
 }
 
 /** Before with the heaters off, and the least and most after, at the design wind: "4.2 → 7.2–8.6". */
-function feelsLikeRange(warmth: readonly SeatWarmth[], units: DisplayUnits): string {
+function feelsLikeRange(warmth: readonly SeatFigures[], units: DisplayUnits): string {
   const counted = warmth.filter(({ onFloor, seat }) => onFloor && seat.priority !== 'not heated')
   const before = counted.map(({ feelsLike }) => feelsLike.design.before)
   if (before.length === 0) return noFigure

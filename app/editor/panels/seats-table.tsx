@@ -1,5 +1,5 @@
 import { memo, useState } from 'react'
-import type { SeatWarmth, TargetOutcome } from '#app/domain/comfort/seat-warmth.ts'
+import type { SeatFigures, TargetOutcome } from '#app/domain/comfort/seat-warmth.ts'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import { fromSi, unitSymbol, type DisplayUnits } from '#app/domain/units.ts'
 import { Choice } from '#app/components/choice.tsx'
@@ -14,7 +14,7 @@ const orders = [
 type Order = (typeof orders)[number]['value']
 
 interface SeatsTableProps {
-  readonly warmth: readonly SeatWarmth[]
+  readonly warmth: readonly SeatFigures[]
   readonly brief: Brief
   readonly units: DisplayUnits
   readonly fluxUnit: FluxUnit
@@ -84,16 +84,16 @@ export function SeatsTable({ warmth, brief, units, fluxUnit, seatId, onSeat, onE
   )
 }
 
-function ordered(warmth: readonly SeatWarmth[], order: Order): readonly SeatWarmth[] {
-  const byName = (a: SeatWarmth, b: SeatWarmth) => a.seat.id.localeCompare(b.seat.id, 'en', { numeric: true })
+function ordered(warmth: readonly SeatFigures[], order: Order): readonly SeatFigures[] {
+  const byName = (a: SeatFigures, b: SeatFigures) => a.seat.id.localeCompare(b.seat.id, 'en', { numeric: true })
   if (order === 'table')
     return warmth.toSorted((a, b) => a.seat.group.localeCompare(b.seat.group, 'en', { numeric: true }) || byName(a, b))
   const sign = order === 'coolest' ? 1 : -1
-  const figure = ({ body }: SeatWarmth) => Math.round(fromSi(body ?? 0, 'irradiance', 'metric'))
+  const figure = ({ body }: SeatFigures) => Math.round(fromSi(body ?? 0, 'irradiance', 'metric'))
   return warmth.toSorted((a, b) => sign * (figure(a) - figure(b)) || byName(a, b))
 }
 
-function asideOf({ onFloor, target, seat }: SeatWarmth): string | null {
+function asideOf({ onFloor, target, seat }: SeatFigures): string | null {
   if (!onFloor) return 'outside the floor, not counted'
   if (target === 'not heated') return 'not heated'
   return seat.priority === 'secondary' ? 'secondary' : null
