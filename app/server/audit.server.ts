@@ -17,6 +17,10 @@ export type AuditedAction =
   | 'variant restored'
   | 'variant deleted'
   | 'variant brought back'
+  | 'photo added'
+  | 'photo marks saved'
+  | 'photo deleted'
+  | 'photo brought back'
   | 'comparison exported'
 
 /** Something that happened: `subject` is the thing's path (`variants/<id>`), `detail` figures and never a secret. */

@@ -1,8 +1,10 @@
+import { randomUUID } from 'node:crypto'
 import { count, eq, sql } from 'drizzle-orm'
 import { drizzle, type NodePgDatabase } from 'drizzle-orm/node-postgres'
 import { Client } from 'pg'
 import type { Stage } from '#app/domain/job/stage.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
+import { photos } from '#drizzle/photo-schema.ts'
 import {
   briefRevisions,
   briefs,
@@ -16,6 +18,7 @@ import {
   variants,
 } from '#drizzle/schema.ts'
 import { demoAddress, hasNoAccounts, seedAccounts } from '#drizzle/seed/accounts.ts'
+import { demoMarks, demoPhotoKey, demoPhotoSize, withDemoPhoto } from '#drizzle/seed/demo-photo.ts'
 import { demoModels, demoSites, type DemoSite } from '#drizzle/seed/demo-sites.ts'
 
 type Database = NodePgDatabase<Record<string, never>>
@@ -60,6 +63,15 @@ async function seedCatalogue(tx: Transaction, { organisationId }: Author): Promi
   await tx.insert(heaterModels).values(demoModels().map((body) => ({ organisationId, code: body.code, body })))
 }
 
+/** Adds the demonstration's photo, whose picture is drawn when it is asked for. */
+async function seedPhoto(tx: Transaction, author: Author, jobId: string, id: string): Promise<void> {
+  const { organisationId, authorId: updatedBy } = author
+  const drawn = { ...demoPhotoSize, fileKey: demoPhotoKey, marks: demoMarks() }
+  await tx
+    .insert(photos)
+    .values({ organisationId, id, jobId, name: 'Veranda from the garden', revision: 1, updatedBy, ...drawn })
+}
+
 /** Adds a job with its site, brief and numbered variants, all at revision 1; gives the job's id. */
 async function seedJob(tx: Transaction, author: Author, demo: DemoSite): Promise<string> {
   const { organisationId, authorId } = author
@@ -77,7 +89,9 @@ async function seedJob(tx: Transaction, author: Author, demo: DemoSite): Promise
     .returning({ id: jobs.id })
   if (!job) throw new Error('The job was not made.')
   const first = { organisationId, jobId: job.id, revision: 1 }
-  const site = { ...first, body: demo.site }
+  const photoId = demo.key === 'C' ? randomUUID() : null
+  const site = { ...first, body: photoId ? withDemoPhoto(demo.site, photoId) : demo.site }
+  if (photoId) await seedPhoto(tx, author, job.id, photoId)
   await tx.insert(sites).values({ ...site, updatedBy: authorId })
   await tx.insert(siteRevisions).values({ ...site, contentHash: contentHash(site.body), authorId })
   const brief = { ...first, body: demo.brief }

@@ -11,7 +11,11 @@ import {
 import { type Method, methods, reachOf } from './route-table.ts'
 
 const canary = { own: 'canary-osierfold-7c1f', other: 'canary-quillet-e93b' }
-const nowhere = { jobId: '00000000-0000-4000-8000-000000000000', variantId: '00000000-0000-4000-8000-000000000001' }
+const nowhere = {
+  jobId: '00000000-0000-4000-8000-000000000000',
+  variantId: '00000000-0000-4000-8000-000000000001',
+  photoId: '00000000-0000-4000-8000-000000000002',
+}
 type Ids = typeof nowhere
 
 let application: Application
@@ -38,10 +42,13 @@ async function plantCanary(slug: string, text: string): Promise<Ids> {
     `update heater_models set body = jsonb_set(body, '{note}', to_jsonb($2::text)) where organisation_id = $1`,
     of,
   )
-  const found = await admin.query('select job_id, id from variants where organisation_id = $1 order by id limit 1', [
-    of[0],
-  ])
-  return { jobId: found.rows[0].job_id, variantId: found.rows[0].id }
+  await admin.query('update photos set name = $2 where organisation_id = $1', of)
+  const found = await admin.query(
+    `select v.job_id as "jobId", v.id as "variantId", p.id as "photoId" from variants v join photos p
+     on p.organisation_id = v.organisation_id and p.job_id = v.job_id where v.organisation_id = $1 order by v.id limit 1`,
+    [of[0]],
+  )
+  return found.rows[0]
 }
 
 /** Sessions that are no longer good, whoever held them. */
@@ -75,10 +82,11 @@ beforeAll(async () => {
 })
 afterAll(() => application.close())
 
-const filled = (pattern: string, { jobId, variantId }: Ids) =>
+const filled = (pattern: string, { jobId, variantId, photoId }: Ids) =>
   pattern
     .replace(':jobId', jobId)
     .replace(':variantId', variantId)
+    .replace(':photoId', photoId)
     .replace(/:[^/]+/g, 'none')
     .replace('*', 'no/such')
 
@@ -122,6 +130,7 @@ function comparable({ status, body, location }: Answered, of: Ids): string {
   return `${status} ${location} ${body}`
     .replaceAll(of.jobId, 'JOB')
     .replaceAll(of.variantId, 'VARIANT')
+    .replaceAll(of.photoId, 'PHOTO')
     .replace(/nonce="[^"]*"/g, '')
 }
 
@@ -132,7 +141,7 @@ const named = lines.map((line) => ({
   reach: reachOf[line.pattern] ?? ('missing' as const),
 }))
 const closed = named.filter(({ reach }) => reach !== 'open')
-const withIds = closed.filter(({ pattern }) => /:(jobId|variantId)/.test(pattern))
+const withIds = closed.filter(({ pattern }) => /:(jobId|variantId|photoId)/.test(pattern))
 
 /** What a method of a line asks of a role; undefined where the line does not know the method. */
 function needOf(reach: (typeof named)[number]['reach'], method: Method) {
@@ -190,7 +199,7 @@ describe.each(withIds)('$pattern', ({ line, reach }) => {
 
   it('answers an id that is none with 404', async () => {
     for (const id of ['x', '%00', "'--", '00000000-0000-4000-8000-00000000000g']) {
-      const { status } = await ask('designer', 'GET', filled(line.pattern, { jobId: id, variantId: id }))
+      const { status } = await ask('designer', 'GET', filled(line.pattern, { jobId: id, variantId: id, photoId: id }))
       expect(needOf(reach, 'GET') ? [404] : [400, 405], id).toContain(status)
     }
   })

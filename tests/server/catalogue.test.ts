@@ -121,6 +121,7 @@ describe('the catalogue of the database', () => {
       heater_models: 'DELETE INSERT SELECT UPDATE',
       jobs: 'INSERT SELECT UPDATE',
       offer_links: 'INSERT SELECT UPDATE',
+      photos: 'INSERT SELECT UPDATE',
       saved_answers: 'DELETE INSERT SELECT UPDATE',
       site_revisions: 'INSERT SELECT',
       sites: 'INSERT SELECT UPDATE',
