@@ -1,4 +1,5 @@
 import { useCallback, useMemo } from 'react'
+import { Link } from 'react-router'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { HeaterChange } from '#app/domain/layout/edits.ts'
@@ -150,7 +151,7 @@ function NothingChosen({ subject }: PartProps) {
 
 /** What was checked; a finding shows its subject on the plan. */
 export function Findings({ subject }: PartProps) {
-  const { editor, figures, site, choice, onExplain } = subject
+  const { editor, figures, layout, site, choice, onExplain } = subject
   const onPoint = (about: Finding['subject']) => {
     if (about.kind === 'heater') editor.dispatch({ type: 'select', ids: [about.id] })
     if (about.kind === 'seat') {
@@ -159,7 +160,24 @@ export function Findings({ subject }: PartProps) {
     }
   }
   return (
-    <FindingsList findings={figures.findings} units={site.displayUnits} fluxUnit={choice.fluxUnit} onPoint={onPoint} />
+    <>
+      <FindingsList
+        findings={figures.findings}
+        units={site.displayUnits}
+        fluxUnit={choice.fluxUnit}
+        onPoint={onPoint}
+      />
+      {layout.heaters.length > 0 && (
+        <p className="px-4.5 pb-3">
+          <Link
+            to="sizes"
+            className="inline-flex min-h-8 items-center underline hover:text-ink pointer-coarse:min-h-11"
+          >
+            Which size to measure next
+          </Link>
+        </p>
+      )}
+    </>
   )
 }
 

@@ -17,6 +17,7 @@ export const reachOf: Record<string, Reach> = {
   '/jobs/:jobId/site': { GET: 'view' },
   '/jobs/:jobId/variants': { GET: 'view' },
   '/jobs/:jobId/variants/:variantId': { GET: 'view' },
+  '/jobs/:jobId/variants/:variantId/sizes': { GET: 'view' },
   '/jobs/:jobId/compare': { GET: 'view' },
   '/jobs/:jobId/compare.png': { GET: 'export' },
   '/jobs/:jobId/compare.svg': { GET: 'export' },

@@ -1,5 +1,6 @@
 import type { FiguresQuestion } from '#app/domain/comparison/layout-figures.ts'
 import { doubtsOf, unmoved, unstatedDoubts, type Doubt, type DoubtfulSize } from '#app/domain/doubt/doubtful-size.ts'
+import { requireWorker } from '#app/domain/doubt/off-page.ts'
 import { marginIn, turnedChecks, weigh, type Figures, type Weighed } from '#app/domain/doubt/weighed.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 
@@ -44,13 +45,14 @@ const mostUnstated = 600
 
 /**
  * Every doubtful size moved both ways by its tolerance, the layout weighed each time by the exact engine. `unstated` also
- * moves the sizes that no dimension moves, at ± 25 mm, no more than `most` of them. Tells its progress after each size.
+ * moves the sizes that no dimension moves, at ± 25 mm, no more than `most` of them. Throws on a page's main thread. Tells its progress after each size.
  */
 export function* sizeEffects(
   question: FiguresQuestion,
   unstated: boolean,
   most = mostUnstated,
 ): Generator<Progress, SizeEffects, undefined> {
+  requireWorker()
   const nominal = weigh(unmoved(question))
   const groups = unstated ? unstatedDoubts(question) : []
   const taken = groups.filter((_, i) => sizesOf(groups.slice(0, i + 1)) <= most)

@@ -1,3 +1,4 @@
+import { requireWorker } from '#app/domain/doubt/off-page.ts'
 import type { Progress } from '#app/domain/doubt/size-effects.ts'
 import { outcomeIn, turnedChecks, type Figures } from '#app/domain/doubt/weighed.ts'
 import type { FiguresAt } from '#app/domain/doubt/wrong-sizes.ts'
@@ -46,9 +47,10 @@ const answerOf = (figures: Figures, key: string): string =>
 
 /**
  * The smallest errors either way at which checks and the coldest seat's target turn: by steps of 0.5 % outward from none
- * up to 15 %, then by halving to 0.005 %. Tells its progress after each step.
+ * up to 15 %, then by halving to 0.005 %. Throws on a page's main thread. Tells its progress after each step.
  */
 export function* turningPoints(figuresAt: FiguresAt): Generator<Progress, TurningPoints, undefined> {
+  requireWorker()
   const steps = Math.round(largestError / scanStep)
   const turns: Record<'shorter' | 'longer', Turn[]> = { shorter: [], longer: [] }
   let done = 0
