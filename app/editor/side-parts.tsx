@@ -1,5 +1,4 @@
 import { useCallback, useMemo } from 'react'
-import { Link } from 'react-router'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { HeaterChange } from '#app/domain/layout/edits.ts'
@@ -7,6 +6,7 @@ import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { obstructionsOf } from '#app/domain/flux/shading.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
+import { ButtonLink } from '#app/components/button.tsx'
 import { ArrangePanel } from '#app/editor/panels/arrange-panel.tsx'
 import { ExplainPanel } from '#app/editor/panels/explain-panel.tsx'
 import { FindingsList } from '#app/editor/panels/findings-list.tsx'
@@ -37,6 +37,8 @@ export interface SideSubject {
   readonly placing: boolean
   readonly onPlacing: (placing: boolean) => void
   readonly onSeat: (seatId: string | null) => void
+  /** The page about which rough size matters most. */
+  readonly sizesHref: string
 }
 
 /** What each part is given. */
@@ -151,7 +153,7 @@ function NothingChosen({ subject }: PartProps) {
 
 /** What was checked; a finding shows its subject on the plan. */
 export function Findings({ subject }: PartProps) {
-  const { editor, figures, layout, site, choice, onExplain } = subject
+  const { editor, figures, layout, site, choice, onExplain, sizesHref } = subject
   const onPoint = (about: Finding['subject']) => {
     if (about.kind === 'heater') editor.dispatch({ type: 'select', ids: [about.id] })
     if (about.kind === 'seat') {
@@ -169,12 +171,9 @@ export function Findings({ subject }: PartProps) {
       />
       {layout.heaters.length > 0 && (
         <p className="px-4.5 pb-3">
-          <Link
-            to="sizes"
-            className="inline-flex min-h-8 items-center underline hover:text-ink pointer-coarse:min-h-11"
-          >
+          <ButtonLink to={sizesHref} size="small">
             Which size to measure next
-          </Link>
+          </ButtonLink>
         </p>
       )}
     </>

@@ -43,6 +43,8 @@ export interface VariantEditorProps {
   readonly catalogue: readonly HeaterModel[]
   readonly readOnly: boolean
   readonly keeping: Keeping
+  /** The page about which rough size matters most. */
+  readonly sizesHref: string
   readonly onCreate: () => void
   readonly onDuplicate: () => void
   readonly onDelete: (revision: number) => void
@@ -125,6 +127,7 @@ export function VariantEditor(props: VariantEditorProps) {
     placing,
     onPlacing: setPlacing,
     onSeat,
+    sizesHref: props.sizesHref,
   }
   const legend = {
     scale,

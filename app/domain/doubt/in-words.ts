@@ -112,7 +112,7 @@ function reasons(
   const parts = [
     alone.length > 0 && `Measured to ${exact} it would settle: ${checksInWords(alone.map(({ finding }) => finding))}.`,
     together.length > 0 && `Together with ${named.join(' and ')} it would settle: ${checksInWords(together.map(({ finding }) => finding))}.`, // prettier-ignore
-    turned.length > 0 && `May turn: ${checksInWords(turned)}.`,
+    turned.length > 0 && `Within it these may come out otherwise: ${checksInWords(turned)}.`,
     relativeEffect(effect, nominal) >= leastEffect && figuresMoved(effect, nominal, units),
   ].filter((part) => part !== false && part !== null)
   return parts.length > 0 ? parts.join(' ') : null
@@ -135,7 +135,8 @@ function figuresMoved(
   return moved.length > 0 ? `Moves ${moved.join(' and ')}.` : null
 }
 
-const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1)
+/** With a capital at its start. */
+export const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1)
 
 /** The list as text to send: a heading, then a numbered line for each size. */
 export function measureText(lines: readonly MeasureLine[], title: string): string {

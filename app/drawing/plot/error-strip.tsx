@@ -25,12 +25,12 @@ export function ErrorStrip({
   width: number
   ink: PlotInk
 }) {
-  const margin = 14
+  const margin = 20
   const line = 26
   const x = (error: number) => margin + ((error + most) / (2 * most)) * (width - 2 * margin)
-  const figures = Array.from({ length: 7 }, (_, i) => -most + (i * most) / 3)
+  const figures = Array.from({ length: 7 }, (_, i) => (i - 3) * (most / 3))
   return (
-    <svg width="100%" viewBox={`0 0 ${width} 62`} aria-hidden="true" className="block">
+    <svg width={width} height={62} viewBox={`0 0 ${width} 62`} aria-hidden="true" className="block">
       <line x1={x(-most)} x2={x(most)} y1={line} y2={line} stroke={ink.quiet} strokeWidth={1} />
       {figures.map((error) => (
         <g key={error}>

@@ -12,7 +12,7 @@ import { MeasureList } from '#app/editor/doubt/measure-list.tsx'
 import { RunState } from '#app/editor/doubt/run-state.tsx'
 import { TurningStrip, TurningTable } from '#app/editor/doubt/turning-table.tsx'
 import { useDoubt } from '#app/editor/doubt/use-doubt.ts'
-import { AtError, ErrorSlider } from '#app/editor/doubt/wrong-by.tsx'
+import { AtError, ErrorField, ErrorSlider } from '#app/editor/doubt/wrong-by.tsx'
 
 const sorts = [
   { value: 'overall', label: 'Overall' },
@@ -87,6 +87,7 @@ export function DoubtfulSizes({ question, variant, listTitle, photoLink }: Doubt
             <h2 id="wrong-title" className="flex-1 text-base font-strong">
               {range === 'photo' ? 'If the photo is wrong by …' : 'If all rough sizes are wrong by …'}
             </h2>
+            <ErrorField error={error} onError={setError} />
             <Choice
               label="Sizes that are wrong"
               options={[

@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react'
-import { checksInWords, sizeText, smallLength, sourceWords } from '#app/domain/doubt/in-words.ts'
+import { capital, checksInWords, sizeText, smallLength, sourceWords } from '#app/domain/doubt/in-words.ts'
 import { largestChange } from '#app/domain/doubt/ranking.ts'
 import type { Settling } from '#app/domain/doubt/settling.ts'
 import type { Change, SizeEffect, SizeEffects } from '#app/domain/doubt/size-effects.ts'
@@ -36,6 +36,7 @@ interface EffectsListProps {
 export function EffectsList({ found, ranked, settled, units, photoLink }: EffectsListProps) {
   const most = (figure: (typeof figures)[number]) => Math.max(...ranked.map((effect) => largestChange(effect[figure])))
   const scales = { coldest: most('coldest'), head: most('head'), margin: most('margin') }
+  const [telling, idle] = [ranked.filter(tells), ranked.filter((effect) => !tells(effect))]
   const grid = 'grid grid-cols-3 gap-x-4 desk:grid-cols-[minmax(0,1fr)_8.5rem_8.5rem_8.5rem]'
   return (
     <>
@@ -46,7 +47,7 @@ export function EffectsList({ found, ranked, settled, units, photoLink }: Effect
         ))}
       </div>
       <ol>
-        {ranked.map((effect) => (
+        {telling.map((effect) => (
           <li key={effect.size.key} className={`${grid} border-t border-rule py-2`}>
             <div className="col-span-3 min-w-0 pb-1 desk:col-span-1 desk:pb-0">
               <SizeHead effect={effect} {...{ units, photoLink }} />
@@ -61,9 +62,19 @@ export function EffectsList({ found, ranked, settled, units, photoLink }: Effect
           </li>
         ))}
       </ol>
+      {idle.length > 0 && (
+        <p className="border-t border-rule py-2 text-ink-2">
+          <span className="font-medium text-ink">Change nothing here: </span>
+          {idle.map(({ size }) => `${size.label} (${sizeText(size, units)}, ${sourceWords(size)})`).join(', ')}.
+        </p>
+      )}
     </>
   )
 }
+
+/** Whether a size changes any figure or check. */
+const tells = ({ coldest, head, margin, turns, shares }: SizeEffect): boolean =>
+  largestChange(coldest) > 1e-3 || largestChange(head) > 1e-3 || largestChange(margin) > 1e-5 || turns.length > 0 || Object.values(shares).some((share) => share > 1e-6) // prettier-ignore
 
 function SizeHead({
   effect: { size },
@@ -75,7 +86,7 @@ function SizeHead({
   const source = size.kind === 'unstated' ? '' : `, ${sourceWords(size)}`
   return (
     <p>
-      <span className="font-medium first-letter:uppercase">{size.label}</span>
+      <span className="font-medium">{capital(size.label)}</span>
       <span className="ml-2 text-ink-2">
         {several}
         {sizeText(size, units)}
@@ -118,7 +129,9 @@ function Bar({
   // prettier-ignore
   const text = (by: number | null) => changeText(by, inMetres, units)
   if (change.lower === null && change.higher === null) return <p className="text-ink-3">–</p>
-  if (largestChange(change) < (inMetres ? 5e-5 : 0.05)) return <p className="text-xs text-ink-3">no change</p>
+  const largest = largestChange(change)
+  if (largest < leastShown(inMetres))
+    return <p className="text-xs text-ink-3">{largest < 1e-3 * leastShown(inMetres) ? 'none' : 'hardly any'}</p>
   const [less, more] = [text(change.lower), text(change.higher)]
   return (
     <>
@@ -131,10 +144,13 @@ function Bar({
   )
 }
 
+/** Changes that are written as figures, W/m² or m. */
+const leastShown = (inMetres: boolean): number => (inMetres ? 5e-4 : 0.54)
+
 /** "−12 W/m²", "+60 mm", "0". */
 function changeText(by: number | null, inMetres: boolean, units: DisplayUnits): string {
   if (by === null) return '–'
-  if (Math.abs(by) < (inMetres ? 5e-4 : 0.05)) return '0'
+  if (Math.abs(by) < leastShown(inMetres)) return '0'
   const size = Math.abs(by)
   const text = inMetres ? smallLength(size, units) : formatQuantity(size, 'irradiance', units)
   return `${by < 0 ? '−' : '+'}${text}`

@@ -1,10 +1,11 @@
-import { nearestError, type TurningCheck, type TurningPoints } from '#app/domain/doubt/turning-points.ts'
+import { useRef } from 'react'
+import { largestError, nearestError, type TurningCheck, type TurningPoints } from '#app/domain/doubt/turning-points.ts'
 import { OutcomeMark } from '#app/components/outcome-mark.tsx'
 import { DataTable, type Column } from '#app/components/table.tsx'
 import { ErrorStrip } from '#app/drawing/plot/error-strip.tsx'
-import { largestError } from '#app/domain/doubt/turning-points.ts'
 import type { Outcome } from '#app/domain/rules/finding.ts'
 import { pageInk } from '#app/editor/doubt/effects-list.tsx'
+import { useSize } from '#app/editor/use-size.ts'
 import { checkAt } from '#app/editor/doubt/wrong-by.tsx'
 
 const order: readonly Outcome[] = ['fails', 'cannot tell', 'measure first', 'pass']
@@ -18,7 +19,13 @@ export function TurningStrip({ points, error }: { points: TurningPoints | null; 
       { key: `${check} longer`, error: longer, to: toLonger },
     ].flatMap(({ key, error: at, to }) => (at === null || to === null ? [] : [{ key, error: at, good: isBetter(from, to) }])),
   ) // prettier-ignore
-  return <ErrorStrip marks={marks} most={largestError} at={error} width={640} ink={pageInk} />
+  const box = useRef<HTMLDivElement>(null)
+  const { width } = useSize(box, { width: 600, height: 62 })
+  return (
+    <div ref={box} className="h-[62px] overflow-hidden">
+      <ErrorStrip marks={marks} most={largestError} at={error} width={width} ink={pageInk} />
+    </div>
+  )
 }
 
 /** At which error each check turns, and the coldest seat; the soonest first. */

@@ -1,59 +1,70 @@
 import { useId } from 'react'
-import { checkWords, smallLength, subjectWords } from '#app/domain/doubt/in-words.ts'
+import { capital, checkWords, smallLength, subjectWords } from '#app/domain/doubt/in-words.ts'
 import { largestError } from '#app/domain/doubt/turning-points.ts'
 import type { WrongFigures } from '#app/domain/doubt/wrong-sizes.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
+import { inputClass } from '#app/components/field.tsx'
 import { OutcomeMark } from '#app/components/outcome-mark.tsx'
 
-interface ErrorSliderProps {
+interface ErrorProps {
   /** As a share; positive: in truth everything is longer. */
   readonly error: number
   readonly onError: (error: number) => void
 }
 
-/** "If the photo is wrong by …": a slider and a figure to type, −15 to +15 %. */
-export function ErrorSlider({ error, onError }: ErrorSliderProps) {
+const most = largestError * 100
+const percentOf = (error: number) => Math.round(error * 1000) / 10
+
+/** A slider from −15 to +15 %, its ends under those of the strip above it. */
+export function ErrorSlider({ error, onError }: ErrorProps) {
+  const percent = percentOf(error)
+  return (
+    <input
+      type="range"
+      aria-label="Error of the sizes, percent"
+      aria-valuetext={`${percent} percent`}
+      min={-most}
+      max={most}
+      step={0.5}
+      value={percent}
+      onChange={(event) => onError(Number(event.target.value) / 100)}
+      className="mx-3 block h-8 w-[calc(100%-24px)] cursor-pointer accent-ember pointer-coarse:h-11"
+    />
+  )
+}
+
+/** The same error as a figure to type; one beyond ±15 % is taken as that. */
+export function ErrorField({ error, onError }: ErrorProps) {
   const id = useId()
-  const percent = Math.round(error * 1000) / 10
-  const most = largestError * 100
+  const percent = percentOf(error)
   const take = (text: string) => {
     const typed = Number(text.replace(',', '.').replace('−', '-'))
     if (text.trim() !== '' && Number.isFinite(typed)) onError(Math.max(-most, Math.min(most, typed)) / 100)
   }
   return (
-    <div className="flex items-center gap-3">
-      <input
-        type="range"
-        aria-label="Error of the sizes, percent"
-        aria-valuetext={`${percent} percent`}
-        min={-most}
-        max={most}
-        step={0.5}
-        value={percent}
-        onChange={(event) => onError(Number(event.target.value) / 100)}
-        className="h-8 min-w-0 flex-1 cursor-pointer accent-ember pointer-coarse:h-11"
-      />
-      <label htmlFor={id} className="sr-only">
-        Error of the sizes, −15 to 15 %
+    <span className="inline-flex items-center gap-2">
+      <label htmlFor={id} className="text-ink-2">
+        −15 to 15
       </label>
-      <span className="flex h-8 w-20 flex-none items-center gap-1 rounded-md border border-rule-strong bg-paper-raised pr-2 pointer-coarse:h-11">
+      <span className="flex h-8 w-20 flex-none items-center gap-1 rounded-md border border-rule-strong bg-paper-raised pr-2 has-[:focus-visible]:outline-2 has-[:focus-visible]:outline-offset-1 has-[:focus-visible]:outline-focus pointer-coarse:h-11">
         <input
           id={id}
           key={percent}
           type="text"
           inputMode="decimal"
           autoComplete="off"
+          aria-label="Error of the sizes, −15 to 15 %"
           defaultValue={`${percent}`.replace('-', '−')}
           onBlur={(event) => take(event.target.value)}
           onKeyDown={(event) => event.key === 'Enter' && take(event.currentTarget.value)}
-          className="h-full min-w-0 flex-1 rounded-md bg-transparent pl-2 font-medium text-ink"
+          className={inputClass}
         />
         <span aria-hidden="true" className="text-xs text-ink-3">
           %
         </span>
       </span>
-    </div>
+    </span>
   )
 }
 
@@ -85,7 +96,7 @@ export function AtError({ wrong, units }: { wrong: WrongFigures; units: DisplayU
           : `${turned.length} ${turned.length === 1 ? 'check comes' : 'checks come'} out otherwise:`}
       </p>
       {turned.length > 0 && (
-        <ul className="max-h-64 overflow-y-auto" tabIndex={0} aria-label="Checks that come out otherwise">
+        <ul className="relative max-h-64 overflow-y-auto" tabIndex={0} aria-label="Checks that come out otherwise">
           {turned.map(({ check, finding, from, to }) => (
             <li key={check} className="flex items-center gap-2 border-t border-rule py-1">
               <OutcomeMark outcome={to} />
@@ -103,7 +114,7 @@ export function AtError({ wrong, units }: { wrong: WrongFigures; units: DisplayU
 export function checkAt(finding: Finding): string {
   const [words, subject] = [checkWords(finding), subjectWords(finding)]
   const condition = finding.condition ? `, when ${finding.condition}` : ''
-  return `${words.charAt(0).toUpperCase()}${words.slice(1)}${subject ? `, ${subject}` : ''}${condition}`
+  return `${capital(words)}${subject ? `, ${subject}` : ''}${condition}`
 }
 
 const signedLength = (metres: number, units: DisplayUnits): string =>

@@ -92,6 +92,7 @@ function KeptVariant({ variant, variants, job, ...rest }: Route.ComponentProps['
       {...rest}
       {...{ job, variants, initial, newest, keeping }}
       variantId={variant.id}
+      sizesHref={`/jobs/${job.id}/variants/${variant.id}/sizes`}
       onCreate={() => void makeAndOpen({ title: 'New layout' })}
       onDuplicate={() => void makeAndOpen({ copyOf: variant.id })}
       onDelete={(revision) => void remove(revision)}
