@@ -2,7 +2,7 @@ import { defineConfig } from 'drizzle-kit'
 
 export default defineConfig({
   dialect: 'postgresql',
-  schema: ['./drizzle/schema.ts', './drizzle/photo-schema.ts'],
+  schema: ['./drizzle/schema.ts', './drizzle/photo-schema.ts', './drizzle/hanging-schema.ts'],
   out: './drizzle/migrations',
   casing: 'snake_case',
 })

@@ -1,12 +1,13 @@
 import { useCallback, useEffect, useMemo, useState } from 'react'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { HangingData } from '#app/domain/layout/hanging-data.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { largestTolerance } from '#app/domain/site/tolerance.ts'
 import { irradianceScale } from '#app/drawing/heat/quantity.ts'
 import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
-import { IconButton } from '#app/components/button.tsx'
+import { ButtonLink, IconButton } from '#app/components/button.tsx'
 import { JobFrame, type Viewer } from '#app/components/page-frame.tsx'
 import { SaveState } from '#app/components/status.tsx'
 import { shownLayout } from '#app/editor/editor-state.ts'
@@ -41,10 +42,13 @@ export interface VariantEditorProps {
   readonly site: Site
   readonly brief: Brief
   readonly catalogue: readonly HeaterModel[]
+  readonly hanging: HangingData
   readonly readOnly: boolean
   readonly keeping: Keeping
   /** The page about which rough size matters most. */
   readonly sizesHref: string
+  /** The page that says how each heater hangs. */
+  readonly hangHref: string
   readonly onCreate: () => void
   readonly onDuplicate: () => void
   readonly onDelete: (revision: number) => void
@@ -85,7 +89,7 @@ export function VariantEditor(props: VariantEditorProps) {
 
   const moving = state.draft !== null
   const beat = useBeat(moving)
-  const figures = useFigures({ site, brief, layout, models, shade: choice.shade, moving, beat })
+  const figures = useFigures({ site, brief, layout, models, hanging: props.hanging, shade: choice.shade, moving, beat })
   const scale = useMemo(() => scaleOf(choice, brief, site.displayUnits), [choice, brief, site])
   const coverTolerance = useMemo(() => toleranceOfCovers(site), [site])
   const question = useMemo(
@@ -163,7 +167,11 @@ export function VariantEditor(props: VariantEditorProps) {
           onDuplicate={props.onDuplicate}
           onRename={(title) => editor.edit({ ...kept, title }, state.selected, 'Renamed')}
           onDelete={() => props.onDelete(autosave.revision())}
-        />
+        >
+          <ButtonLink kind="text" size="small" to={props.hangHref}>
+            Hang schedule
+          </ButtonLink>
+        </VariantTabs>
       }
       tools={
         <>

@@ -1,4 +1,5 @@
 import { heaterModelSchema, type HeaterModel, type Mount } from '#app/domain/heaters/heater-model.ts'
+import { plainHanging, type HangingData } from '#app/domain/layout/hanging-data.ts'
 import { demoFile, type CatalogueEntry } from '#drizzle/seed/demo-file.ts'
 
 const metres = (mm: number): number => mm / 1000
@@ -71,4 +72,17 @@ function modelOf(entry: CatalogueEntry): HeaterModel {
 /** The invented catalogue, eleven models, one of them without beam data and one withdrawn. */
 export function demoModels(): HeaterModel[] {
   return demoFile.catalogue.map(modelOf)
+}
+
+/** The hanging data of the demo file; what it does not state is as by default. */
+export function demoHanging(): HangingData {
+  const { chainLinkPitchMm, hardwareAllowanceMm, turnbuckleTakeUpMm } = demoFile.hanging
+  const [shorter, longer] = turnbuckleTakeUpMm
+  return {
+    ...plainHanging,
+    linkPitch: metres(chainLinkPitchMm),
+    hardwareAllowance: metres(hardwareAllowanceMm),
+    shortens: metres(-shorter),
+    lengthens: metres(longer),
+  }
 }

@@ -19,6 +19,8 @@ import {
 } from '#drizzle/schema.ts'
 import { demoAddress, hasNoAccounts, seedAccounts } from '#drizzle/seed/accounts.ts'
 import { demoMarks, demoPhotoKey, demoPhotoSize, withDemoPhoto } from '#drizzle/seed/demo-photo.ts'
+import { hangingData } from '#drizzle/hanging-schema.ts'
+import { demoHanging } from '#drizzle/seed/demo-models.ts'
 import { demoModels, demoSites, type DemoSite } from '#drizzle/seed/demo-sites.ts'
 
 type Database = NodePgDatabase<Record<string, never>>
@@ -58,9 +60,10 @@ function findAuthors(authUrl: string): Promise<{ own: Author; other: Author } | 
   })
 }
 
-/** Adds the invented catalogue to an organisation. */
-async function seedCatalogue(tx: Transaction, { organisationId }: Author): Promise<void> {
+/** Adds the invented catalogue and its hanging data to an organisation. */
+async function seedCatalogue(tx: Transaction, { organisationId, authorId }: Author): Promise<void> {
   await tx.insert(heaterModels).values(demoModels().map((body) => ({ organisationId, code: body.code, body })))
+  await tx.insert(hangingData).values({ organisationId, revision: 1, body: demoHanging(), updatedBy: authorId })
 }
 
 /** Adds the demonstration's photo, whose picture is drawn when it is asked for. */

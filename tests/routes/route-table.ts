@@ -18,6 +18,7 @@ export const reachOf: Record<string, Reach> = {
   '/jobs/:jobId/variants': { GET: 'view' },
   '/jobs/:jobId/variants/:variantId': { GET: 'view' },
   '/jobs/:jobId/variants/:variantId/sizes': { GET: 'view' },
+  '/jobs/:jobId/variants/:variantId/hang': { GET: 'view' },
   '/jobs/:jobId/compare': { GET: 'view' },
   '/jobs/:jobId/compare.png': { GET: 'export' },
   '/jobs/:jobId/compare.svg': { GET: 'export' },

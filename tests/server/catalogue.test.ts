@@ -118,6 +118,7 @@ describe('the catalogue of the database', () => {
       audit_events: 'INSERT SELECT',
       brief_revisions: 'INSERT SELECT',
       briefs: 'INSERT SELECT UPDATE',
+      hanging_data: 'INSERT SELECT UPDATE',
       heater_models: 'DELETE INSERT SELECT UPDATE',
       jobs: 'INSERT SELECT UPDATE',
       offer_links: 'INSERT SELECT UPDATE',

@@ -1,10 +1,7 @@
+import { hangerTolerance } from '#app/domain/layout/hanger-tolerance.ts'
 import { hangScheduleOf, type Hanger } from '#app/domain/layout/hanging.ts'
 import { heaterRule, judgedBy, type HeaterCheck, type Rule } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
-import type { ThingOf } from '#app/domain/site/dimension.ts'
-import { undersideAt } from '#app/domain/site/member.ts'
-import type { Site } from '#app/domain/site/site.ts'
-import { toleranceOf } from '#app/domain/site/tolerance.ts'
 import { formatLength } from '#app/domain/units.ts'
 
 /**
@@ -35,7 +32,7 @@ export function hangerLength(check: HeaterCheck): Finding | null {
       value: shortest.length,
       limit: least,
       margin: shortest.length - least,
-      tolerance: lengthTolerance(site, shortest),
+      tolerance: hangerTolerance(site, shortest),
       remedy: `A bracket of ${bracket} from underside to eye${others.length > 0 ? ` (offered: ${others.join(', ')})` : ', by the maker'}, or hang it lower.`,
     },
   )
@@ -58,16 +55,3 @@ const beyondTurnbuckle = (rule: Rule, { residual, left }: Hanger, { lengthens, s
       remedy: 'Take chain of a smaller pitch, a rod, or a turnbuckle of more range.',
     },
   )
-
-/** How uncertain the sizes of member and cover leave the hanger's length, m; null when its height cannot be told. */
-function lengthTolerance(site: Site, { memberId, anchor, eye, sideways }: Hanger): number | null {
-  const member = site.members.find(({ id }) => id === memberId)
-  if (!member) return null
-  const thing: ThingOf = 'follows' in member.underside ? { of: 'cover', id: member.underside.follows } : { of: 'member', id: memberId } // prettier-ignore
-  const length = (moved: Site) => {
-    const same = moved.members.find(({ id }) => id === memberId)
-    const underside = same ? undersideAt(moved, same, anchor[0], anchor[1]) : null
-    return underside === null ? null : Math.hypot(sideways, underside - eye[2])
-  }
-  return toleranceOf(length, site, [thing])
-}

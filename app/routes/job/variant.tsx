@@ -21,7 +21,7 @@ export async function loader({ request, params }: Route.LoaderArgs) {
   const { variantId } = params
   const laidOut = isId(variantId) ? await findLaidOut({ id: variantId, member: job.member }) : null
   if (laidOut?.variant.jobId !== job.id) throw data('No such variant', 404)
-  const { variant, site, brief, models, ofJob } = laidOut
+  const { variant, site, brief, models, hanging, ofJob } = laidOut
   return {
     viewer: viewerOf(job.member),
     job: { id: job.id, name: job.name },
@@ -30,6 +30,7 @@ export async function loader({ request, params }: Route.LoaderArgs) {
     site,
     brief,
     catalogue: [...models.values()],
+    hanging,
     readOnly: !can(job.member.role, 'edit-layout'),
   }
 }
@@ -93,6 +94,7 @@ function KeptVariant({ variant, variants, job, ...rest }: Route.ComponentProps['
       {...{ job, variants, initial, newest, keeping }}
       variantId={variant.id}
       sizesHref={`/jobs/${job.id}/variants/${variant.id}/sizes`}
+      hangHref={`/jobs/${job.id}/variants/${variant.id}/hang`}
       onCreate={() => void makeAndOpen({ title: 'New layout' })}
       onDuplicate={() => void makeAndOpen({ copyOf: variant.id })}
       onDelete={(revision) => void remove(revision)}

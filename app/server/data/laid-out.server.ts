@@ -2,11 +2,14 @@ import { and, eq } from 'drizzle-orm'
 import { z } from 'zod'
 import { briefSchema, type Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { HangingData } from '#app/domain/layout/hanging-data.ts'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
+import { hangingOf } from '#app/server/data/hanging.server.ts'
 import { modelsByCode } from '#app/server/data/heaters.server.ts'
 import { present, variantColumns, variantList, variantOf, type Variant } from '#app/server/data/variants.server.ts'
 import { asOrganisation, own } from '#app/server/organisation.server.ts'
 import type { Member } from '#app/server/session.server.ts'
+import { hangingData } from '#drizzle/hanging-schema.ts'
 import { briefs, sites, variants } from '#drizzle/schema.ts'
 
 const neighbourSchema = z.object({ id: z.string(), number: z.number(), title: z.string() })
@@ -19,6 +22,7 @@ export interface LaidOut {
   readonly brief: Brief
   readonly briefRevision: number
   readonly models: ReadonlyMap<string, HeaterModel>
+  readonly hanging: HangingData
   /** Every variant of the job by number, this one too. */
   readonly ofJob: readonly z.infer<typeof neighbourSchema>[]
 }
@@ -31,11 +35,13 @@ export function findLaidOut(of: { readonly id: string; readonly member: Member }
         variant: variantColumns,
         site: { revision: sites.revision, body: sites.body },
         brief: { revision: briefs.revision, body: briefs.body },
+        hanging: { revision: hangingData.revision, body: hangingData.body },
         ofJob: variantList(tx, variants.jobId, ['id', 'number', 'title']),
       })
       .from(variants)
       .innerJoin(sites, and(own(sites), eq(sites.jobId, variants.jobId)))
       .innerJoin(briefs, and(own(briefs), eq(briefs.jobId, variants.jobId)))
+      .leftJoin(hangingData, own(hangingData))
       .where(and(own(variants), eq(variants.id, of.id), present))
     if (!row) return null
     return {
@@ -45,6 +51,7 @@ export function findLaidOut(of: { readonly id: string; readonly member: Member }
       brief: briefSchema.parse(row.brief.body),
       briefRevision: row.brief.revision,
       models: await modelsByCode(tx),
+      hanging: hangingOf(row.hanging).data,
       ofJob: neighbourSchema.array().parse(row.ofJob),
     }
   })
