@@ -4,21 +4,18 @@ import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
 import { screenPen } from '#app/drawing/pen.ts'
-import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
+import { cutAlong, type SectionCut } from '#app/drawing/plan/section-cut.tsx'
 import { SectionDrawing, sectionTitle } from '#app/drawing/section/section-drawing.tsx'
 import { commonScale, cutExtent, sectionViewOf } from '#app/drawing/section/section-view.ts'
 import type { SectionsView } from '#app/editor/use-flux.ts'
 import { useSize } from '#app/editor/use-size.ts'
 
 /** The cuts of a layout: across through its chosen heater, else through the third; and along through the same. */
-export function cutsOf(layout: Layout, selected: readonly string[]): readonly SectionCut[] {
+export function cutsOf(site: Site, layout: Layout, selected: readonly string[]): readonly SectionCut[] {
   const lead: MountedHeater | undefined =
     layout.heaters.find(({ id }) => id === selected[0]) ?? layout.heaters[2] ?? layout.heaters[0]
   if (!lead) return []
-  return [
-    { letter: 'A', along: 'y', at: lead.x, looking: 1 },
-    { letter: 'B', along: 'x', at: lead.y, looking: 1 },
-  ]
+  return [cutAlong(site, 'A', 'y', lead.x, 1), cutAlong(site, 'B', 'x', lead.y, 1)]
 }
 
 interface SectionsProps {
@@ -41,7 +38,7 @@ export const Sections = memo(function Sections(props: SectionsProps) {
   const chosen = useMemo(() => new Set(selected), [selected])
   const views = useMemo(() => {
     const lengths = cuts.map((cut) => {
-      const [low, high] = cutExtent(site, cut)
+      const [low, high] = cutExtent(cut)
       return Math.max(0.5, high - low)
     })
     const fixed = 150

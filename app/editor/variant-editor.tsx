@@ -96,7 +96,7 @@ export function VariantEditor(props: VariantEditorProps) {
     () => mapQuestion({ site, brief, layout, models, choice }, scale, moving ? 'coarse' : 'sharp'),
     [site, brief, layout, models, choice, scale, moving],
   )
-  const cuts = useMemo(() => cutsOf(kept, state.selected), [kept, state.selected])
+  const cuts = useMemo(() => cutsOf(site, kept, state.selected), [site, kept, state.selected])
   const heat = useMemo(() => irradianceScale('dusk', brief.target), [brief])
   const about = useMemo(
     () => ({ emitters: emittersOf(kept, models), site, cuts, levels: heat.levels, edges: heat.edges }),

@@ -4,14 +4,14 @@ import { emitterOf } from '#app/domain/flux/emitter.ts'
 import { irradianceAt } from '#app/domain/flux/irradiance.ts'
 import { irradianceScale } from '#app/drawing/heat/quantity.ts'
 import { screenPen } from '#app/drawing/pen.ts'
-import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
+import { cutAlong } from '#app/drawing/plan/section-cut.tsx'
 import { heatersInCut, SectionDrawing, sectionTitle } from '#app/drawing/section/section-drawing.tsx'
-import { behindCut, onSection, sectionViewOf } from '#app/drawing/section/section-view.ts'
+import { behindCut, onSection, projected, sectionViewOf } from '#app/drawing/section/section-view.ts'
 import { sectionPicture, sectionValues } from '#app/drawing/section/section-values.ts'
 import { cutCovers } from '#app/drawing/section/section-structure.tsx'
 import { smallHeater, smallLayout, smallModel, smallModels, smallTerrace } from '#tests/drawing/small-terrace.ts'
 
-const along = (axis: 'x' | 'y', at: number, looking: 1 | -1): SectionCut => ({ letter: 'A', along: axis, at, looking })
+const along = (axis: 'x' | 'y', at: number, looking: 1 | -1) => cutAlong(smallTerrace, 'A', axis, at, looking)
 const cutA = along('y', 2, -1)
 const emitter = emitterOf(smallHeater(), smallModel)!
 const quantity = irradianceScale('dusk', { low: 150, high: 350 })
@@ -24,7 +24,8 @@ describe('the view of a section', () => {
     ['looking along −x, y runs to the right', cutA, 1],
   ])('%s', (_, cut, side) => {
     const view = sectionViewOf(smallTerrace, cut, { width: 300 })
-    expect(Math.sign(onSection(view, 2, 1)[0] - onSection(view, 1, 1)[0])).toBe(side)
+    const ways = [1, 2].map((place) => projected(view, [place, place, 1])[0])
+    expect(Math.sign((ways[1] ?? 0) - (ways[0] ?? 0))).toBe(side)
     expect(onSection(view, 1, 2)[1]).toBeLessThan(onSection(view, 1, 1)[1])
   })
   it('knows what lies behind the cut', () => {

@@ -24,7 +24,9 @@ const noCuts: readonly SectionCut[] = []
 
 /** Places on the drawing's width where sections along y are cut, px. */
 const cutsAcross = (cuts: readonly SectionCut[], view: PlanView): number[] =>
-  cuts.filter((cut) => cut.along === 'y').map((cut) => view.x0 + view.scale * cut.at)
+  cuts
+    .filter(({ from, to, placed }) => !placed && Math.abs(from[0] - to[0]) < Math.abs(from[1] - to[1]))
+    .map(({ from }) => view.x0 + view.scale * from[0])
 
 interface PartProps {
   readonly name: string

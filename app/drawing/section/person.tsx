@@ -1,19 +1,19 @@
 import type { Seat } from '#app/domain/site/site.ts'
 import { radians } from '#app/domain/vector.ts'
-import { onSection, type SectionView } from '#app/drawing/section/section-view.ts'
+import { alongCut, alongDirectionOf, onSection, type SectionView } from '#app/drawing/section/section-view.ts'
 import type { Pen } from '#app/drawing/pen.ts'
 
 /** Which way a person faces on a section: to the drawing's right (1), left (−1), or towards or away from us (0). */
 function facingOn(seat: Seat, view: SectionView): -1 | 0 | 1 {
   const turn = radians(seat.facingDeg)
-  const along = (view.cut.along === 'x' ? Math.cos(turn) : Math.sin(turn)) * view.direction
+  const along = alongDirectionOf(view.cut, [Math.cos(turn), Math.sin(turn)])
   return Math.abs(along) < 0.5 ? 0 : along > 0 ? 1 : -1
 }
 
 /** A guest on a section: head, back, seat and legs at the seat's own heights, turned as the seat faces. */
 export function Person({ seat, view, pen }: { seat: Seat; view: SectionView; pen: Pen }) {
-  const along = view.cut.along === 'x' ? seat.x : seat.y
-  const facing = facingOn(seat, view) * view.direction
+  const along = alongCut(view.cut, [seat.x, seat.y])
+  const facing = facingOn(seat, view)
   const hip = seat.posture === 'seated' ? seat.bodyHeight - 0.1 : seat.bodyHeight - 0.2
   const at = (aside: number, z: number): string =>
     onSection(view, along + aside * facing, z)

@@ -1,7 +1,8 @@
-import { memo } from 'react'
+import { Fragment, memo } from 'react'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
+import type { Vec2 } from '#app/domain/vector.ts'
 import { HeatFill, Isolines } from '#app/drawing/heat/heat-fill.tsx'
 import { patternIds, ZonePatterns } from '#app/drawing/heat/patterns.tsx'
 import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
@@ -20,8 +21,10 @@ import {
   type CutCover,
 } from '#app/drawing/section/section-structure.tsx'
 import {
+  alongCut,
   behindCut,
   cutExtent,
+  isBetweenEnds,
   onSection,
   sectionTransform,
   topOf,
@@ -36,6 +39,8 @@ const fillTop = 1.3
 /** Seats and tables this near to the cut are drawn, m; heaters nearer than the second figure. */
 const nearSeats = 0.75
 const nearHeaters = 0.25
+/** How far behind the cut a section that a person put still shows heaters, m. */
+const seenBehind = 1.5
 
 /** A section through some of the heaters of a layout. */
 export interface SectionProps {
@@ -52,29 +57,45 @@ export interface SectionProps {
   readonly selected?: ReadonlySet<string>
 }
 
+const place = ({ x, y }: MountedHeater): Vec2 => [x, y]
+
+/** Heaters of a layout at a way behind the cut that `isShown` picks, in their order along it. */
+const heatersWhere = (layout: Layout, cut: SectionCut, isShown: (behind: number) => boolean): MountedHeater[] =>
+  layout.heaters
+    .filter((heater) => isShown(behindCut(cut, place(heater))) && isBetweenEnds(cut, alongCut(cut, place(heater))))
+    .sort((a, b) => alongCut(cut, place(a)) - alongCut(cut, place(b)))
+
 /** The heaters that stand in a section, in their order along it. */
 export const heatersInCut = (layout: Layout, cut: SectionCut): MountedHeater[] =>
-  layout.heaters
-    .filter((heater) => Math.abs(behindCut(cut, [heater.x, heater.y])) <= nearHeaters)
-    .sort((a, b) => (cut.along === 'x' ? a.x - b.x : a.y - b.y))
+  heatersWhere(layout, cut, (behind) => Math.abs(behind) <= nearHeaters)
+
+/** Of a section that a person put: the heaters that are seen a little behind it. */
+export const heatersBehindCut = (layout: Layout, cut: SectionCut): MountedHeater[] =>
+  cut.placed ? heatersWhere(layout, cut, (behind) => behind > nearHeaters && behind <= seenBehind) : []
 
 /** "Section A–A through H3 and H4". */
 export function sectionTitle(layout: Layout, cut: SectionCut): string {
   const ids = heatersInCut(layout, cut).map(({ id }) => id)
-  const [first, last] = [ids[0], ids.at(-1)]
-  const through = ids.length > 2 ? `${first} to ${last}` : ids.join(' and ')
-  return `Section ${cut.letter}–${cut.letter}${first ? ` through ${through}` : ''}`
+  const behind = heatersBehindCut(layout, cut).map(({ id }) => id)
+  const through = ids.length > 0 ? ` through ${asRange(ids)}` : ''
+  const seen = behind.length > 0 ? `${through ? ',' : ''} ${asRange(behind)} behind it` : ''
+  return `Section ${cut.letter}–${cut.letter}${through}${seen}`
 }
+
+const asRange = (ids: readonly string[]): string => (ids.length > 2 ? `${ids[0]} to ${ids.at(-1)}` : ids.join(' and '))
 
 /** The section as a group, fill first, figures last. */
 function Section(props: SectionProps) {
   const { name, site, layout, models, view, pen, selected = new Set<string>() } = props
   const covers = cutCovers(site, view)
-  const heaters = heatersInCut(layout, view.cut).flatMap((heater) => {
+  const known = (heater: MountedHeater) => {
     const model = models.get(heater.model)
     return model ? [{ heater, model }] : []
-  })
-  const isNear = (point: readonly [number, number]) => Math.abs(behindCut(view.cut, point)) <= nearSeats
+  }
+  const heaters = heatersInCut(layout, view.cut).flatMap(known)
+  const behind = heatersBehindCut(layout, view.cut).flatMap(known)
+  const isNear = (point: Vec2, near = nearSeats) =>
+    Math.abs(behindCut(view.cut, point)) <= near && isBetweenEnds(view.cut, alongCut(view.cut, point), 0.25)
   const shownHeight = heaters.find(({ heater }) => selected.has(heater.id)) ?? heaters[0]
   return (
     <g fontFamily={fontFamily}>
@@ -93,7 +114,7 @@ function Section(props: SectionProps) {
         <CutMember key={member.id} {...{ member, site, view, pen }} />
       ))}
       {site.poles
-        .filter((pole) => Math.abs(behindCut(view.cut, pole.at)) <= nearHeaters)
+        .filter((pole) => isNear(pole.at, nearHeaters))
         .map((pole) => (
           <SectionPole key={pole.id} {...{ pole, view, pen }} />
         ))}
@@ -107,6 +128,14 @@ function Section(props: SectionProps) {
         .map((seat) => (
           <Person key={seat.id} {...{ seat, view, pen }} />
         ))}
+      <g opacity={0.55}>
+        {behind.map(({ heater, model }) => (
+          <Fragment key={heater.id}>
+            <SectionHangers {...{ heater, model, site, view, pen }} />
+            <SectionHeater {...{ heater, model, site, view, pen }} selected={selected.has(heater.id)} />
+          </Fragment>
+        ))}
+      </g>
       {heaters.map(({ heater, model }) => (
         <SectionHangers key={heater.id} {...{ heater, model, site, view, pen }} />
       ))}
@@ -122,7 +151,7 @@ function Section(props: SectionProps) {
 /** The air of the section: its fill up to 1.30 m, isolines up to the heaters, the ground. */
 const SectionAir = memo(function SectionAir(props: SectionProps & { covers: readonly CutCover[] }) {
   const { name, site, view, pen, quantity, picture, covers } = props
-  const [low, high] = cutExtent(site, view.cut)
+  const [low, high] = cutExtent(view.cut)
   const ids = patternIds(name)
   const [x1, floor] = onSection(view, low, 0)
   const [x2] = onSection(view, high, 0)

@@ -4,7 +4,7 @@ import { DimensionChain } from '#app/drawing/plan/dimension-line.tsx'
 import { dimensionText } from '#app/drawing/plan/dimension-text.ts'
 import { heightLine } from '#app/drawing/section/section-heater.tsx'
 import { coverTolerance, type CutCover } from '#app/drawing/section/section-structure.tsx'
-import { cutExtent, onSection, type SectionView } from '#app/drawing/section/section-view.ts'
+import { alongCut, cutExtent, onSection, type SectionView } from '#app/drawing/section/section-view.ts'
 import type { Pen } from '#app/drawing/pen.ts'
 import { Words } from '#app/drawing/text/words.tsx'
 
@@ -17,7 +17,7 @@ function usual(heights: readonly number[], fallback: number): number {
 
 /** The body plane, long dashes, and the head plane, dash-dot, at the height most seats have; named at the right. */
 export function PlaneLines({ site, view, pen }: { site: Site; view: SectionView; pen: Pen }) {
-  const [low, high] = cutExtent(site, view.cut)
+  const [low, high] = cutExtent(view.cut)
   const planes = [
     {
       word: 'Head',
@@ -91,7 +91,7 @@ export function SectionHeights({
     const [left, right] = a.x < b.x ? [a, b] : [b, a]
     const [mx, my] = onSection(view, (a.along + b.along) / 2, (a.z + b.z) / 2)
     const textOf = (end: { along: number; z: number }): string => {
-      const inner = end.along + (end === left ? 1 : -1) * view.direction * 1e-4
+      const inner = end.along + (end === left ? 1 : -1) * 1e-4
       const tolerance = coverTolerance(site, cut, view, inner)
       const size = dimensionText(end.z, site.displayUnits)
       if (tolerance === null || tolerance === 0) return size
@@ -198,7 +198,6 @@ export function HeightOf({
 
 /** The height stands a little aside of the heater, towards the middle of the drawing. */
 const heightLineAside = (heater: MountedHeater, view: SectionView): number => {
-  const along = view.cut.along === 'x' ? heater.x : heater.y
-  const [x] = onSection(view, along, 0)
+  const [x] = onSection(view, alongCut(view.cut, [heater.x, heater.y]), 0)
   return (x < view.width / 2 ? 1 : -1) * 0.62 * view.scale
 }

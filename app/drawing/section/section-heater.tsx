@@ -6,7 +6,13 @@ import { coverHeightAt } from '#app/domain/site/cover.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { add, scale, type Vec2, type Vec3 } from '#app/domain/vector.ts'
 import { supportPoint } from '#app/drawing/plan/heater-place.ts'
-import { alongCut, onSection, projected, type SectionView } from '#app/drawing/section/section-view.ts'
+import {
+  alongCut,
+  alongDirectionOf,
+  onSection,
+  projected,
+  type SectionView,
+} from '#app/drawing/section/section-view.ts'
 import type { Pen } from '#app/drawing/pen.ts'
 import { Words } from '#app/drawing/text/words.tsx'
 
@@ -135,7 +141,7 @@ export function SectionHeater({ heater, model, view, pen, selected }: HeaterProp
   const outline = hull(cornersOf(body).map((corner) => projected(view, corner)))
   const xs = outline.map((p) => p[0])
   const ys = outline.map((p) => p[1])
-  const beamAside = alongCut(view.cut, body.w) * view.direction
+  const beamAside = alongDirectionOf(view.cut, body.w)
   const tiltSeen = Math.abs(beamAside) > 0.03
   return (
     <g data-heater={heater.id}>
@@ -189,6 +195,6 @@ export function SectionHeater({ heater, model, view, pen, selected }: HeaterProp
 
 /** Foot and head of the line that gives a heater's height, on the drawing. */
 export const heightLine = (heater: MountedHeater, view: SectionView): { foot: Vec2; head: Vec2 } => {
-  const along = view.cut.along === 'x' ? heater.x : heater.y
+  const along = alongCut(view.cut, [heater.x, heater.y])
   return { foot: onSection(view, along, 0), head: onSection(view, along, heater.lowestPoint) }
 }

@@ -1,7 +1,14 @@
-import { coverHeightAt, coverOutline } from '#app/domain/site/cover.ts'
+import { coverHeightAt, coverOutline, coverPlane, planeHeightAt } from '#app/domain/site/cover.ts'
 import { undersideAt } from '#app/domain/site/member.ts'
 import type { Cover, Member, Obstacle, Pole, Site, Table } from '#app/domain/site/site.ts'
 import { degrees, type Vec2 } from '#app/domain/vector.ts'
+import {
+  halfSeen,
+  stretchesIn,
+  stretchesOfShape,
+  stripOutline,
+  type Stretch,
+} from '#app/drawing/section/cut-outline.ts'
 import { alongCut, behindCut, onSection, pointOfCut, type SectionView } from '#app/drawing/section/section-view.ts'
 import type { Pen } from '#app/drawing/pen.ts'
 import { toleranceOf } from '#app/domain/site/tolerance.ts'
@@ -19,17 +26,15 @@ export interface CutCover {
 }
 
 /** The covers that a section cuts. */
-export function cutCovers(site: Site, view: SectionView): CutCover[] {
+export function cutCovers(site: Site, { cut }: SectionView): CutCover[] {
   return site.covers.flatMap((cover) => {
-    const crossings = crossingsOf(coverOutline(cover), view)
-    const [a, b] = [crossings[0], crossings.at(-1)]
-    if (a === undefined || b === undefined || b - a < 0.05) return []
-    const inner = 1e-6
-    const zOf = (along: number) => coverHeightAt(cover, ...pointOfCut(view.cut, along))
-    const [za, zb] = [zOf(a + inner), zOf(b - inner)]
-    if (za === null || zb === null) return []
-    const slopeDeg = degrees(Math.atan2(Math.abs(zb - za), b - a))
-    return [{ cover, from: { along: a, z: za }, to: { along: b, z: zb }, slopeDeg }]
+    const plane = coverPlane(cover)
+    const [stretch] = stretchesIn(coverOutline(cover), cut)
+    if (!plane || !stretch || stretch[1] - stretch[0] < 0.05) return []
+    const endAt = (along: number) => ({ along, z: planeHeightAt(plane, ...pointOfCut(cut, along)) })
+    const [from, to] = [endAt(stretch[0]), endAt(stretch[1])]
+    const slopeDeg = degrees(Math.atan2(Math.abs(to.z - from.z), to.along - from.along))
+    return [{ cover, from, to, slopeDeg }]
   })
 }
 
@@ -43,19 +48,6 @@ export const coverTolerance = (site: Site, { cover }: CutCover, view: SectionVie
     site,
     [{ of: 'cover', id: cover.id }],
   )
-
-/** Places along the section where an outline in plan crosses it, m, in rising order. */
-function crossingsOf(outline: readonly Vec2[], view: SectionView): number[] {
-  const found = outline.flatMap((a, i) => {
-    const b = outline[(i + 1) % outline.length] ?? a
-    const [da, db] = [behindCut(view.cut, a), behindCut(view.cut, b)]
-    if (Math.abs(da) < 1e-9) return [alongCut(view.cut, a)]
-    if (da * db >= 0) return []
-    const t = da / (da - db)
-    return [alongCut(view.cut, a) + t * (alongCut(view.cut, b) - alongCut(view.cut, a))]
-  })
-  return found.sort((a, b) => a - b)
-}
 
 /** The cover as a band over its underside. */
 export function CoverBand({ cut, view, pen }: { cut: CutCover; view: SectionView; pen: Pen }) {
@@ -75,33 +67,39 @@ export function CoverBand({ cut, view, pen }: { cut: CutCover; view: SectionView
   )
 }
 
-/** A member where it is cut (its section, filled) or, lying in the section, its depth along it. */
+/**
+ * A member where it is cut: its section, filled, wider the more askew the cut runs to it, with its underside at both
+ * edges. Lying in the section: its underside along it.
+ */
 export function CutMember({ member, site, view, pen }: { member: Member; site: Site; view: SectionView; pen: Pen }) {
-  const [da, db] = [behindCut(view.cut, member.from), behindCut(view.cut, member.to)]
-  if (Math.abs(da) < 0.06 && Math.abs(db) < 0.06) {
-    const ends = [member.from, member.to].map((end) => ({
-      along: alongCut(view.cut, end),
-      z: undersideAt(site, member, end[0], end[1]),
-    }))
-    const low = ends.flatMap(({ along, z }) => (z === null ? [] : [onSection(view, along, z)]))
+  const { cut } = view
+  if ([member.from, member.to].every((end) => Math.abs(behindCut(cut, end)) < 0.06)) {
+    const low = [member.from, member.to].flatMap((end) => {
+      const z = undersideAt(site, member, end[0], end[1])
+      return z === null ? [] : [onSection(view, alongCut(cut, end), z)]
+    })
     return low.length === 2 ? (
       <path d={path(low)} stroke={pen.colours.line} strokeWidth={1.6 * pen.k} fill="none" data-member={member.id} />
     ) : null
   }
-  if (da * db > 0) return null
-  const t = da / (da - db || 1)
-  const along = alongCut(view.cut, member.from) + t * (alongCut(view.cut, member.to) - alongCut(view.cut, member.from))
-  const z = undersideAt(site, member, ...pointOfCut(view.cut, along))
-  if (z === null) return null
-  const [x, y] = onSection(view, along, z)
-  const width = Math.max(3 * pen.k, member.width * view.scale)
+  const half = member.width / 2
+  const [stretch] = stretchesIn(stripOutline(member.from, member.to, half, half), cut)
+  if (!stretch) return null
+  const ends = stretch.flatMap((along) => {
+    const z = undersideAt(site, member, ...pointOfCut(cut, along))
+    return z === null ? [] : [onSection(view, along, z)]
+  })
+  const [a, b] = ends
+  if (!a || !b) return null
+  const wider = Math.max(0, 3 * pen.k - (b[0] - a[0])) / 2
   const depth = Math.max(4 * pen.k, Math.min(member.depth, 0.14) * view.scale)
+  const low: readonly Vec2[] = [
+    [a[0] - wider, a[1]],
+    [b[0] + wider, b[1]],
+  ]
   return (
-    <rect
-      x={rounded(x - width / 2)}
-      y={rounded(y - depth)}
-      width={rounded(width)}
-      height={rounded(depth)}
+    <path
+      d={`${path([...low, ...low.toReversed().map(([x, y]): Vec2 => [x, y - depth])])}Z`}
       fill={pen.colours.secondLine}
       stroke={pen.colours.line}
       strokeWidth={0.9 * pen.k}
@@ -110,13 +108,28 @@ export function CutMember({ member, site, view, pen }: { member: Member; site: S
   )
 }
 
-/** An obstacle that the section cuts, in its true place and height; crossed when solid, dashed when it hangs or moves. */
+/** An obstacle in every stretch in which the section cuts it. */
 export function CutObstacle({ obstacle, view, pen }: { obstacle: Obstacle; view: SectionView; pen: Pen }) {
+  return stretchesOfShape(obstacle.shape, view.cut).map((stretch) => (
+    <ObstacleStretch key={stretch[0]} {...{ obstacle, stretch, view, pen }} />
+  ))
+}
+
+/** An obstacle where it is cut, in its true place and height; crossed when solid, dashed when it hangs or moves. */
+function ObstacleStretch({
+  obstacle,
+  stretch,
+  view,
+  pen,
+}: {
+  obstacle: Obstacle
+  stretch: Stretch
+  view: SectionView
+  pen: Pen
+}) {
   const { shape } = obstacle
-  const range = cutRange(shape, view)
-  if (!range) return null
-  const [x1, top] = onSection(view, range[0], shape.z[1])
-  const [x2, bottom] = onSection(view, range[1], shape.z[0])
+  const [x1, top] = onSection(view, stretch[0], shape.z[1])
+  const [x2, bottom] = onSection(view, stretch[1], shape.z[0])
   const left = Math.min(x1, x2)
   const width = Math.max(1.5 * pen.k, Math.abs(x2 - x1))
   const height = bottom - top
@@ -154,28 +167,9 @@ export function CutObstacle({ obstacle, view, pen }: { obstacle: Obstacle; view:
   )
 }
 
-/** The stretch along the section in which a shape is cut, m. */
-function cutRange(shape: Obstacle['shape'], view: SectionView): readonly [number, number] | null {
-  if (shape.kind === 'box') {
-    const across = view.cut.along === 'x' ? shape.y : shape.x
-    if (view.cut.at < across[0] || view.cut.at > across[1]) return null
-    return view.cut.along === 'x' ? shape.x : shape.y
-  }
-  if (shape.kind === 'cylinder') {
-    const off = behindCut(view.cut, shape.centre)
-    if (Math.abs(off) >= shape.radius) return null
-    const half = Math.sqrt(shape.radius ** 2 - off ** 2)
-    const middle = alongCut(view.cut, shape.centre)
-    return [middle - half, middle + half]
-  }
-  const crossings = crossingsOf(shape.outline, view)
-  const [a, b] = [crossings[0], crossings.at(-1)]
-  return a === undefined || b === undefined || b <= a ? null : [a, b]
-}
-
 /** A table near the section: its top and two legs. */
 export function SectionTable({ table, view, pen }: { table: Table; view: SectionView; pen: Pen }) {
-  const half = (view.cut.along === 'x' ? table.size[0] : table.size[1]) / 2
+  const half = halfSeen(table, view.cut)
   const middle = alongCut(view.cut, table.centre)
   const at = (along: number, z: number) => onSection(view, along, z)
   return (

@@ -29,7 +29,7 @@ export function sectionValues(
 ): SectionField | null {
   const heights = emitters.flatMap(({ elements }) => elements.map(({ centre }) => centre[2]))
   if (heights.length === 0) return null
-  const [low, high] = cutExtent(site, cut)
+  const [low, high] = cutExtent(cut)
   const top = Math.max(1.4, Math.max(...heights) - 0.04)
   const cell = Math.max(0.05, Math.sqrt(((high - low) * top) / most))
   const columns = Math.max(1, Math.floor((high - low) / cell))
