@@ -12,13 +12,16 @@ interface ConflictRow {
 }
 
 interface ConflictPanelProps {
+  /** Who saved the other copy, "by …" or "elsewhere", and when, " at …" or nothing. */
+  who: string
+  when: string
   rows: readonly ConflictRow[]
   /** Keys of the rows where the other copy is taken. */
   onSettle: (theirs: ReadonlySet<string>) => void
 }
 
 /** Both values of everything that was changed twice; the buttons are the values, and nothing is lost until one is taken. */
-export function ConflictPanel({ rows, onSettle }: ConflictPanelProps) {
+export function ConflictPanel({ rows, who, when, onSettle }: ConflictPanelProps) {
   const [taken, setTaken] = useState<ReadonlySet<string>>(
     () => new Set(rows.filter(({ theirsAlone }) => theirsAlone).map(({ key }) => key)),
   )
@@ -30,14 +33,15 @@ export function ConflictPanel({ rows, onSettle }: ConflictPanelProps) {
       className="mb-5 rounded-md border border-rule-strong bg-paper-raised px-4 py-3.5"
     >
       <h2 id="conflict" className="text-base font-strong">
-        Saved elsewhere while you were changing it
+        Saved {who}
+        {when} while you were changing it
       </h2>
       <p className="mt-0.5 mb-3 text-ink-2">Choose which value stays. Until then nothing of yours or theirs is lost.</p>
       <ul className="space-y-2.5">
         {rows.map(({ key, label, mine, theirs }) => (
           <li key={key} className="grid items-center gap-x-3 gap-y-1 tablet:grid-cols-[12rem_1fr_1fr]">
             <span className="font-medium">{label}</span>
-            <Value text={theirs} who="Saved there" chosen={taken.has(key)} onChoose={() => choose(key, true)} />
+            <Value text={theirs} who={`Saved ${who}`} chosen={taken.has(key)} onChoose={() => choose(key, true)} />
             <Value text={mine} who="Yours" chosen={!taken.has(key)} onChoose={() => choose(key, false)} />
           </li>
         ))}
@@ -47,7 +51,7 @@ export function ConflictPanel({ rows, onSettle }: ConflictPanelProps) {
           Save these
         </Button>
         <Button kind="text" onClick={() => onSettle(new Set(rows.map(({ key }) => key)))}>
-          Take everything saved there
+          Take everything saved {who}
         </Button>
       </p>
     </section>

@@ -1,38 +1,36 @@
-import { sameLayout } from '#app/domain/layout/merge.ts'
-import type { Layout } from '#app/domain/layout/layout.ts'
-import type { DeviceCopy, KeptLayout, Keeping, SaveRequest } from '#app/editor/keeping.ts'
+import type { DeviceCopy, Kept, Keeping, SaveRequest } from '#app/editor/keeping.ts'
 
-/** A save that met another one: both layouts, and what they were made from. */
-export interface SaveConflict {
-  readonly base: Layout
-  readonly mine: Layout
-  readonly theirs: KeptLayout
+/** A save that met another one: both copies, what they were made from, and who saved the other when. */
+export interface SaveConflict<T> {
+  readonly base: T
+  readonly mine: T
+  readonly theirs: Kept<T>
   readonly by: string | null
-  readonly at: string | null
+  readonly at: Date | null
 }
 
 /** Where the work stands. */
-export type SaveState =
+export type SaveState<T> =
   /** `at`: when the server last acknowledged; null before the first time. */
   | { readonly kind: 'saved'; readonly at: Date | null }
   | { readonly kind: 'unsaved' | 'saving' }
   | { readonly kind: 'offline'; readonly changes: number }
   | { readonly kind: 'refused'; readonly reason: string }
-  | { readonly kind: 'conflict'; readonly conflict: SaveConflict }
+  | { readonly kind: 'conflict'; readonly conflict: SaveConflict<T> }
 
 /** Saves by itself; hears of every step. */
-export interface Autosave {
-  /** The layout is now this one. */
-  changed: (layout: Layout) => void
+export interface Autosave<T> {
+  /** It is now this. */
+  changed: (body: T) => void
   /** Goes on with edits that the device kept over a reload. */
-  resume: (copy: DeviceCopy) => void
+  resume: (copy: DeviceCopy<T>) => void
   /** Sends now what waits: the connection is back, or the person asks. */
   retry: () => void
-  /** Ends a conflict: goes on from the server's revision with this layout. */
-  settle: (layout: Layout) => void
-  /** The server's layout changed elsewhere; true when it was taken in because nothing here waits. */
-  heardOf: (current: KeptLayout) => boolean
-  state: () => SaveState
+  /** Ends a conflict: goes on from the server's revision with this. */
+  settle: (body: T) => void
+  /** The server's copy changed elsewhere; true when it was taken in because nothing here waits. */
+  heardOf: (current: Kept<T>) => boolean
+  state: () => SaveState<T>
   /** The newest revision that is known here. */
   revision: () => number
   subscribe: (listener: () => void) => () => void
@@ -46,26 +44,27 @@ export interface AutosaveDelays {
 }
 
 /**
- * Keeps a layout saved: one save in flight; changes meanwhile wait for its answer. A save without an answer is sent
+ * Keeps something saved: one save in flight; changes meanwhile wait for its answer. A save without an answer is sent
  * again with its id before anything newer, so that its effect is known and happens once. Every edit not acknowledged
- * is kept on the device.
+ * is kept on the device. `same`: whether two bodies say the same.
  */
-export function startAutosave(
-  initial: KeptLayout,
-  keeping: Keeping,
+export function startAutosave<T>(
+  initial: Kept<T>,
+  keeping: Keeping<T>,
+  same: (a: T, b: T) => boolean,
   delays: AutosaveDelays = { rest: 500, again: 4000 },
-): Autosave {
+): Autosave<T> {
   let base = initial
-  let present = initial.layout
+  let present = initial.body
   let changes = 0
-  let open: SaveRequest | null = null
+  let open: SaveRequest<T> | null = null
   let sending = false
   let stopped = false
   let timer: ReturnType<typeof setTimeout> | undefined
-  let state: SaveState = { kind: 'saved', at: null }
+  let state: SaveState<T> = { kind: 'saved', at: null }
   const listeners = new Set<() => void>()
 
-  const become = (next: SaveState) => {
+  const become = (next: SaveState<T>) => {
     state = next
     for (const listener of listeners) listener()
   }
@@ -77,9 +76,7 @@ export function startAutosave(
   async function send(): Promise<void> {
     clearTimeout(timer)
     if (sending || state.kind === 'conflict') return
-    open ??= sameLayout(present, base.layout)
-      ? null
-      : { saveId: keeping.newSaveId(), layout: present, revision: base.revision }
+    open ??= same(present, base.body) ? null : { saveId: keeping.newSaveId(), body: present, revision: base.revision }
     if (!open) return rest()
     const request = open
     sending = true
@@ -89,17 +86,17 @@ export function startAutosave(
     switch (answer.kind) {
       case 'saved':
         open = null
-        base = { layout: request.layout, revision: answer.revision }
-        return sameLayout(present, base.layout) ? rest() : void send()
+        base = { body: request.body, revision: answer.revision }
+        return same(present, base.body) ? rest() : void send()
       case 'conflict':
         open = null
-        if (sameLayout(present, answer.current.layout)) {
+        if (same(present, answer.current.body)) {
           base = answer.current
           return rest()
         }
         return become({
           kind: 'conflict',
-          conflict: { base: base.layout, mine: present, theirs: answer.current, by: answer.by, at: answer.at },
+          conflict: { base: base.body, mine: present, theirs: answer.current, by: answer.by, at: answer.at },
         })
       case 'refused':
         open = null
@@ -117,13 +114,13 @@ export function startAutosave(
   }
 
   return {
-    changed(layout) {
+    changed(body) {
       stopped = false
-      if (layout === present) return
-      present = layout
+      if (body === present) return
+      present = body
       changes += 1
-      keeping.keepOnDevice({ base, layout, changes })
-      if (state.kind === 'conflict') return become({ kind: 'conflict', conflict: { ...state.conflict, mine: layout } })
+      keeping.keepOnDevice({ base, body, changes })
+      if (state.kind === 'conflict') return become({ kind: 'conflict', conflict: { ...state.conflict, mine: body } })
       if (state.kind === 'offline') return become({ kind: 'offline', changes })
       if (!sending) become({ kind: 'unsaved' })
       later(delays.rest)
@@ -131,24 +128,24 @@ export function startAutosave(
     resume(copy) {
       stopped = false
       base = copy.base
-      present = copy.layout
+      present = copy.body
       changes = copy.changes
       become({ kind: 'unsaved' })
       void send()
     },
     retry: () => void send(),
-    settle(layout) {
+    settle(body) {
       if (state.kind !== 'conflict') return
       base = state.conflict.theirs
-      present = layout
+      present = body
       become({ kind: 'unsaved' })
-      keeping.keepOnDevice({ base, layout, changes })
+      keeping.keepOnDevice({ base, body, changes })
       void send()
     },
     heardOf(current) {
-      if (current.revision <= base.revision || sending || open || !sameLayout(present, base.layout)) return false
+      if (current.revision <= base.revision || sending || open || !same(present, base.body)) return false
       base = current
-      present = current.layout
+      present = current.body
       return true
     },
     state: () => state,

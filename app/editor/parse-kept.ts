@@ -1,22 +1,50 @@
 import { z } from 'zod'
-import { layoutSchema } from '#app/domain/layout/layout.ts'
-import type { DeviceCopy } from '#app/editor/keeping.ts'
+import { layoutSchema, type Layout } from '#app/domain/layout/layout.ts'
+import type { DeviceCopy, Kept } from '#app/editor/keeping.ts'
 
-// Loaded when an answer comes, so that the page does not wait for a parser.
+// The variant page loads this when an answer comes, so that it does not wait for a parser.
 
-const variantSchema = z.object({ id: z.string(), revision: z.int(), ...layoutSchema.shape })
-const refusalSchema = z.object({ error: z.string(), current: z.unknown().optional() })
-const keptLayoutSchema = z.object({ layout: layoutSchema, revision: z.int() })
-const deviceCopySchema = z.object({ base: keptLayoutSchema, layout: layoutSchema, changes: z.int() })
+const refusalSchema = z.object({
+  error: z.string(),
+  current: z.unknown().optional(),
+  changed: z.object({ by: z.string().nullable(), at: z.coerce.date() }).optional(),
+})
 
-/** A variant as the API answers it. */
-export type KeptVariant = z.infer<typeof variantSchema>
+/** Reads what the server and the device give; every function throws when it is something else. */
+export interface KeptParsing<T> {
+  /** What is kept, in an answer of the API. */
+  readonly kept: (json: unknown) => Kept<T>
+  /** Why a save was refused, with the server's copy where it sent one. */
+  readonly refusal: (json: unknown) => z.infer<typeof refusalSchema>
+  /** Unsaved edits as the device kept them. */
+  readonly deviceCopy: (text: string) => DeviceCopy<T>
+}
 
-/** The variant in an answer of the API; throws when it is not one. */
-export const parseVariant = (json: unknown): KeptVariant => variantSchema.parse(json)
+function parsingOf<T>(kept: z.ZodType<Kept<T>>, body: z.ZodType<T>): KeptParsing<T> {
+  const copy = z.object({ base: z.object({ revision: z.int(), body }), body, changes: z.int() })
+  return {
+    kept: (json) => kept.parse(json),
+    refusal: (json) => refusalSchema.parse(json),
+    deviceCopy: (text) => copy.parse(JSON.parse(text)),
+  }
+}
 
-/** Why a save was refused, with the server's copy where it sent one; throws when the answer is something else. */
-export const parseRefusal = (json: unknown): z.infer<typeof refusalSchema> => refusalSchema.parse(json)
+/** Of a variant: `{ id, revision, title, heaters }`. */
+export const variantParsing: KeptParsing<Layout> = parsingOf(
+  z
+    .object({ revision: z.int(), ...layoutSchema.shape })
+    .transform(({ revision, title, heaters }) => ({ revision, body: { title, heaters } })),
+  layoutSchema,
+)
 
-/** Unsaved edits as the device kept them; throws when they are not whole. */
-export const parseDeviceCopy = (text: string): DeviceCopy => deviceCopySchema.parse(JSON.parse(text))
+/** The id in the answer to a new variant. */
+export const variantId = (json: unknown): string => z.object({ id: z.string() }).parse(json).id
+
+/** Of a document whose answers carry its body under a name: `{ revision, [name]: body }`. */
+export const documentParsing = <T>(name: string, body: z.ZodType<T>): KeptParsing<T> =>
+  parsingOf(
+    z
+      .looseObject({ revision: z.int() })
+      .transform((found) => ({ revision: found.revision, body: body.parse(found[name]) })),
+    body,
+  )

@@ -1,26 +1,24 @@
 import { useEffect, useState, useSyncExternalStore } from 'react'
 import { sameLayout } from '#app/domain/layout/merge.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
-import type { SaveStatus } from '#app/components/status.tsx'
 import { startAutosave, type Autosave, type SaveState } from '#app/editor/autosave.ts'
-import { clockOf } from '#app/editor/figures.ts'
-import type { KeptLayout, Keeping } from '#app/editor/keeping.ts'
+import type { Kept, Keeping } from '#app/editor/keeping.ts'
 
 interface AutosaveInput {
-  readonly initial: KeptLayout
+  readonly initial: Kept<Layout>
   /** The server's newest as far as the page has heard. */
-  readonly newest: KeptLayout
+  readonly newest: Kept<Layout>
   readonly layout: Layout
-  readonly keeping: Keeping
+  readonly keeping: Keeping<Layout>
   readonly readOnly: boolean
   /** The layout to go on with, from the device or from elsewhere. */
   readonly onTaken: (layout: Layout, said: string) => void
 }
 
 /** Keeps the layout saved while the page is open; edits kept on the device come back, changes elsewhere are taken in. */
-export function useAutosave(input: AutosaveInput): { autosave: Autosave; state: SaveState } {
+export function useAutosave(input: AutosaveInput): { autosave: Autosave<Layout>; state: SaveState<Layout> } {
   const { initial, newest, layout, keeping, readOnly, onTaken } = input
-  const [autosave] = useState(() => startAutosave(initial, keeping))
+  const [autosave] = useState(() => startAutosave(initial, keeping, sameLayout))
   const state = useSyncExternalStore(autosave.subscribe, autosave.state, autosave.state)
 
   useEffect(() => {
@@ -28,8 +26,8 @@ export function useAutosave(input: AutosaveInput): { autosave: Autosave; state: 
     let open = true
     void keeping.findOnDevice().then((copy) => {
       if (!open || !copy) return
-      if (sameLayout(copy.layout, initial.layout)) return keeping.keepOnDevice(null)
-      onTaken(copy.layout, 'Changes kept on this device are back')
+      if (sameLayout(copy.body, initial.body)) return keeping.keepOnDevice(null)
+      onTaken(copy.body, 'Changes kept on this device are back')
       autosave.resume(copy)
     })
     const again = () => autosave.retry()
@@ -48,27 +46,10 @@ export function useAutosave(input: AutosaveInput): { autosave: Autosave; state: 
   }, [autosave, layout, readOnly])
 
   useEffect(() => {
-    if (autosave.heardOf(newest)) onTaken(newest.layout, 'Changed elsewhere, taken in')
+    if (autosave.heardOf(newest)) onTaken(newest.body, 'Changed elsewhere, taken in')
     // Only a new revision is news.
     // eslint-disable-next-line react-hooks/exhaustive-deps
   }, [autosave, newest.revision])
 
   return { autosave, state }
-}
-
-/** The save state as the page's status line says it. */
-export function statusOf(state: SaveState, readOnly: boolean): SaveStatus {
-  if (readOnly) return { kind: 'read-only', why: 'Read only' }
-  switch (state.kind) {
-    case 'saved':
-      return state.at ? { kind: 'saved', at: clockOf(state.at) } : { kind: 'saved' }
-    case 'offline':
-      return { kind: 'offline', kept: state.changes }
-    case 'refused':
-      return { kind: 'not saved', reason: state.reason }
-    case 'conflict':
-      return { kind: 'conflict' }
-    default:
-      return { kind: state.kind }
-  }
 }

@@ -11,7 +11,7 @@ import { ButtonLink, IconButton } from '#app/components/button.tsx'
 import { JobFrame, type Viewer } from '#app/components/page-frame.tsx'
 import { SaveState } from '#app/components/status.tsx'
 import { shownLayout } from '#app/editor/editor-state.ts'
-import type { KeptLayout, Keeping } from '#app/editor/keeping.ts'
+import type { Kept, Keeping } from '#app/editor/keeping.ts'
 import { emittersOf, mapQuestion, scaleOf } from '#app/editor/map-questions.ts'
 import { FiguresRow } from '#app/editor/panels/figures-row.tsx'
 import { ConflictPanel } from '#app/editor/panels/conflict-panel.tsx'
@@ -21,8 +21,9 @@ import { PlanSurface } from '#app/editor/plan-surface.tsx'
 import { pointedStore } from '#app/editor/pointed.ts'
 import { SidePanels } from '#app/editor/side-panels.tsx'
 import type { SideSubject } from '#app/editor/side-parts.tsx'
+import { statusOf } from '#app/editor/save-status.ts'
 import { cutsOf, Sections } from '#app/editor/sections.tsx'
-import { statusOf, useAutosave } from '#app/editor/use-autosave.ts'
+import { useAutosave } from '#app/editor/use-autosave.ts'
 import { useEditor } from '#app/editor/use-editor.ts'
 import { useFigures } from '#app/editor/use-figures.ts'
 import { useFlux } from '#app/editor/use-flux.ts'
@@ -36,15 +37,15 @@ export interface VariantEditorProps {
   readonly job: { readonly id: string; readonly name: string }
   readonly variantId: string
   readonly variants: readonly VariantTab[]
-  readonly initial: KeptLayout
+  readonly initial: Kept<Layout>
   /** The server's newest as far as the page has heard. */
-  readonly newest: KeptLayout
+  readonly newest: Kept<Layout>
   readonly site: Site
   readonly brief: Brief
   readonly catalogue: readonly HeaterModel[]
   readonly hanging: HangingData
   readonly readOnly: boolean
-  readonly keeping: Keeping
+  readonly keeping: Keeping<Layout>
   /** The page about which rough size matters most. */
   readonly sizesHref: string
   /** The page that says how each heater hangs. */
@@ -64,7 +65,7 @@ export function VariantEditor(props: VariantEditorProps) {
   const room = useRoom()
   const touch = useMedia('(pointer: coarse)')
   const readOnly = props.readOnly || room === 'phone'
-  const editor = useEditor({ site, brief, catalogue, initial: initial.layout })
+  const editor = useEditor({ site, brief, catalogue, initial: initial.body })
   const { state, dispatch, models } = editor
   const kept = state.history.present
   const layout = shownLayout(state)
@@ -214,8 +215,8 @@ export function VariantEditor(props: VariantEditorProps) {
               onTwoVariants={async () => {
                 const { mine, theirs } = save.conflict
                 if (!(await props.onMake({ ...mine, title: `${mine.title.slice(0, 108)} (yours)` }))) return
-                editor.edit(theirs.layout, [], 'Two variants made')
-                autosave.settle(theirs.layout)
+                editor.edit(theirs.body, [], 'Two variants made')
+                autosave.settle(theirs.body)
               }}
             />
           )}

@@ -7,6 +7,8 @@ export interface Refusal {
   readonly path: string
   /** The server's copy, when the refusal is about a newer one. */
   readonly current?: unknown
+  /** Who saved that copy, by name, and when, ISO 8601. */
+  readonly changed?: { readonly by: string | null; readonly at: string }
 }
 
 /** A request that is carried out: what goes back as JSON, and the revision it now has. */

@@ -3,6 +3,7 @@ import type { z } from 'zod'
 import { isRefusal, type Answer, type Refusal } from '#app/server/answers.server.ts'
 import { recordEvent, type AuditedAction } from '#app/server/audit.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
+import { findName } from '#app/server/data/people.server.ts'
 import { readBody } from '#app/server/json-body.server.ts'
 import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
 import { readExpected, readKey } from '#app/server/preconditions.server.ts'
@@ -26,13 +27,21 @@ export interface Save<Body> {
   readonly bodyHash: string
 }
 
+/** The newest revision of something: what a reader gets, and who wrote it when. */
+export interface Locked {
+  readonly revision: number
+  readonly shown: object
+  readonly updatedBy: string
+  readonly updatedAt: Date
+}
+
 /** Something kept in revisions: how it is locked and shown, and how a new revision of it is written. */
 export interface Revisioned<Body> {
   readonly resource: string
   /** What the audit calls a new revision. */
   readonly saved: AuditedAction
-  /** Locks it until the transaction ends; null when it is gone. `shown` is what a reader gets. */
-  readonly lock: (tx: Transaction) => Promise<{ readonly revision: number; readonly shown: object } | null>
+  /** Locks it until the transaction ends; null when it is gone. */
+  readonly lock: (tx: Transaction) => Promise<Locked | null>
   /** Writes the new state and its immutable revision row; gives what a reader gets from now on. */
   readonly write: (tx: Transaction, revision: number, body: Body, hash: string) => Promise<object>
 }
@@ -111,12 +120,13 @@ export async function answerOnce(
 }
 
 /** Why a change is refused that does not stand on the newest revision: 428 without If-Match, 412 with the copy kept. */
-export function staleness(expected: number | null, kept: { revision: number; shown: object }): Refusal | null {
+export async function staleness(expected: number | null, kept: Locked): Promise<Refusal | null> {
   if (expected === null)
     return { status: 428, error: 'If-Match is needed: the revision you changed.', path: 'If-Match' }
   if (expected === kept.revision) return null
   const error = `Somebody saved revision ${kept.revision} meanwhile.`
-  return { status: 412, error, path: 'If-Match', current: kept.shown }
+  const changed = { by: await findName(kept.updatedBy), at: kept.updatedAt.toISOString() }
+  return { status: 412, error, path: 'If-Match', current: kept.shown, changed }
 }
 
 /** The answer to something that is not there, the same for what never was and what is another organisation's. */
@@ -136,7 +146,7 @@ export function saveRevision<Body>(
     answerOnce(tx, { member, resource: thing.resource, key: save.key, bodyHash: save.bodyHash }, async () => {
       const kept = await thing.lock(tx)
       if (!kept) return gone('resource')
-      const stale = staleness(save.expected, kept)
+      const stale = await staleness(save.expected, kept)
       if (stale) return stale
       const body = await bodyOf(tx)
       if (typeof body === 'object' && body !== null && isRefusal(body)) return body

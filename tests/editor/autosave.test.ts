@@ -1,55 +1,12 @@
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { moveHeaters } from '#app/domain/layout/edits.ts'
-import type { Layout } from '#app/domain/layout/layout.ts'
+import { sameLayout } from '#app/domain/layout/merge.ts'
 import { startAutosave } from '#app/editor/autosave.ts'
-import type { DeviceCopy, KeptLayout, Keeping, SaveAnswer, SaveRequest } from '#app/editor/keeping.ts'
+import { keepingServer } from '#tests/support/keeping-server.ts'
 import { heaterAt, layoutOf } from '#tests/support/layouts.ts'
 
 const first = layoutOf(heaterAt('H1', 1, 1))
 const moved = (dx: number) => moveHeaters(first, ['H1'], dx, 0)
-
-/** A server with one variant, an idempotency table and a cable that can be pulled. */
-function server(initial: KeptLayout) {
-  let kept = initial
-  let cable: 'in' | 'out' | 'answers lost' = 'in'
-  let device: DeviceCopy | null = null
-  const answers = new Map<string, { body: Layout; answer: SaveAnswer }>()
-  const requests: SaveRequest[] = []
-  const keeping: Keeping = {
-    newSaveId: () => `save-${requests.length}-${Math.floor(performance.now() * 1000)}`,
-    keepOnDevice: (copy) => {
-      device = copy
-    },
-    findOnDevice: () => Promise.resolve(device),
-    save: async (request) => {
-      requests.push(request)
-      await Promise.resolve()
-      if (cable === 'out') return { kind: 'unreachable' }
-      const known = answers.get(request.saveId)
-      if (known && known.body !== request.layout) throw new Error('same key, other body')
-      const answer: SaveAnswer =
-        known?.answer ??
-        (request.revision === kept.revision
-          ? { kind: 'saved', revision: kept.revision + 1 }
-          : { kind: 'conflict', current: kept, by: 'engineer', at: '18:40' })
-      if (!known && answer.kind === 'saved') kept = { layout: request.layout, revision: answer.revision }
-      answers.set(request.saveId, { body: request.layout, answer })
-      return cable === 'answers lost' ? { kind: 'unreachable' } : answer
-    },
-  }
-  return {
-    keeping,
-    requests,
-    kept: () => kept,
-    device: () => device,
-    pull: (next: typeof cable) => {
-      cable = next
-    },
-    elsewhere: (layout: Layout) => {
-      kept = { layout, revision: kept.revision + 1 }
-    },
-  }
-}
 
 beforeEach(() => {
   vi.useFakeTimers()
@@ -59,8 +16,8 @@ const delays = { rest: 500, again: 4000 }
 
 describe('autosave', () => {
   it('saves once after rest, however many changes', async () => {
-    const remote = server({ layout: first, revision: 7 })
-    const autosave = startAutosave({ layout: first, revision: 7 }, remote.keeping, delays)
+    const remote = keepingServer({ body: first, revision: 7 })
+    const autosave = startAutosave({ body: first, revision: 7 }, remote.keeping, sameLayout, delays)
     for (let i = 1; i <= 20; i += 1) {
       autosave.changed(moved(i / 100))
       await vi.advanceTimersByTimeAsync(100)
@@ -68,30 +25,30 @@ describe('autosave', () => {
     expect(autosave.state().kind).toBe('unsaved')
     await vi.advanceTimersByTimeAsync(600)
     expect(remote.requests).toHaveLength(1)
-    expect(remote.kept()).toEqual({ layout: moved(0.2), revision: 8 })
+    expect(remote.kept()).toEqual({ body: moved(0.2), revision: 8 })
     expect(autosave.state().kind).toBe('saved')
     expect(remote.device()).toBeNull()
   })
 
   it('keeps edits on the device without a connection, and sends them when it is back', async () => {
-    const remote = server({ layout: first, revision: 7 })
-    const autosave = startAutosave({ layout: first, revision: 7 }, remote.keeping, delays)
+    const remote = keepingServer({ body: first, revision: 7 })
+    const autosave = startAutosave({ body: first, revision: 7 }, remote.keeping, sameLayout, delays)
     remote.pull('out')
     autosave.changed(moved(0.1))
     await vi.advanceTimersByTimeAsync(600)
     autosave.changed(moved(0.2))
     autosave.changed(moved(0.3))
     expect(autosave.state()).toEqual({ kind: 'offline', changes: 3 })
-    expect(remote.device()).toMatchObject({ layout: moved(0.3), base: { revision: 7 } })
+    expect(remote.device()).toMatchObject({ body: moved(0.3), base: { revision: 7 } })
     remote.pull('in')
     await vi.advanceTimersByTimeAsync(4100)
-    expect(remote.kept().layout).toEqual(moved(0.3))
+    expect(remote.kept().body).toEqual(moved(0.3))
     expect(autosave.state().kind).toBe('saved')
   })
 
   it('has one effect when only the answer was lost', async () => {
-    const remote = server({ layout: first, revision: 7 })
-    const autosave = startAutosave({ layout: first, revision: 7 }, remote.keeping, delays)
+    const remote = keepingServer({ body: first, revision: 7 })
+    const autosave = startAutosave({ body: first, revision: 7 }, remote.keeping, sameLayout, delays)
     remote.pull('answers lost')
     autosave.changed(moved(0.1))
     await vi.advanceTimersByTimeAsync(600)
@@ -100,41 +57,41 @@ describe('autosave', () => {
     remote.pull('in')
     autosave.retry()
     await vi.advanceTimersByTimeAsync(5000)
-    expect(remote.kept()).toEqual({ layout: moved(0.2), revision: 9 })
+    expect(remote.kept()).toEqual({ body: moved(0.2), revision: 9 })
     expect(new Set(remote.requests.map((request) => request.saveId)).size).toBe(2)
     expect(autosave.state().kind).toBe('saved')
   })
 
   it('shows a conflict with both layouts, saves nothing over it, and goes on from what was chosen', async () => {
-    const remote = server({ layout: first, revision: 7 })
-    const autosave = startAutosave({ layout: first, revision: 7 }, remote.keeping, delays)
+    const remote = keepingServer({ body: first, revision: 7 })
+    const autosave = startAutosave({ body: first, revision: 7 }, remote.keeping, sameLayout, delays)
     remote.elsewhere(moved(5))
     autosave.changed(moved(0.1))
     await vi.advanceTimersByTimeAsync(600)
     expect(autosave.state()).toMatchObject({
       kind: 'conflict',
-      conflict: { base: first, mine: moved(0.1), theirs: { layout: moved(5), revision: 8 }, by: 'engineer' },
+      conflict: { base: first, mine: moved(0.1), theirs: { body: moved(5), revision: 8 }, by: 'Ann Other' },
     })
     autosave.changed(moved(0.2))
     await vi.advanceTimersByTimeAsync(10_000)
     expect(remote.requests).toHaveLength(1)
-    expect(remote.device()?.layout).toEqual(moved(0.2))
+    expect(remote.device()?.body).toEqual(moved(0.2))
     autosave.settle(moved(0.2))
     await vi.advanceTimersByTimeAsync(10)
-    expect(remote.kept()).toEqual({ layout: moved(0.2), revision: 9 })
+    expect(remote.kept()).toEqual({ body: moved(0.2), revision: 9 })
   })
 
   it('takes in what changed elsewhere only while nothing here waits', async () => {
-    const remote = server({ layout: first, revision: 7 })
-    const autosave = startAutosave({ layout: first, revision: 7 }, remote.keeping, delays)
-    expect(autosave.heardOf({ layout: moved(2), revision: 8 })).toBe(true)
+    const remote = keepingServer({ body: first, revision: 7 })
+    const autosave = startAutosave({ body: first, revision: 7 }, remote.keeping, sameLayout, delays)
+    expect(autosave.heardOf({ body: moved(2), revision: 8 })).toBe(true)
     autosave.changed(moved(0.1))
-    expect(autosave.heardOf({ layout: moved(3), revision: 9 })).toBe(false)
+    expect(autosave.heardOf({ body: moved(3), revision: 9 })).toBe(false)
   })
 
   it('goes on after a reload with what the device kept, from the revision it was made from', async () => {
-    const remote = server({ layout: first, revision: 7 })
-    const before = startAutosave({ layout: first, revision: 7 }, remote.keeping, delays)
+    const remote = keepingServer({ body: first, revision: 7 })
+    const before = startAutosave({ body: first, revision: 7 }, remote.keeping, sameLayout, delays)
     remote.pull('out')
     before.changed(moved(0.1))
     await vi.advanceTimersByTimeAsync(600)
@@ -143,16 +100,16 @@ describe('autosave', () => {
     if (!copy) throw new Error('nothing kept')
     remote.pull('in')
     remote.elsewhere(moved(5))
-    const after = startAutosave({ layout: moved(5), revision: 8 }, remote.keeping, delays)
+    const after = startAutosave({ body: moved(5), revision: 8 }, remote.keeping, sameLayout, delays)
     after.resume(copy)
     await vi.advanceTimersByTimeAsync(10)
     expect(after.state()).toMatchObject({ kind: 'conflict', conflict: { mine: moved(0.1), base: first } })
-    expect(remote.kept().layout).toEqual(moved(5))
+    expect(remote.kept().body).toEqual(moved(5))
   })
 
   it('is at rest when the other copy says the same', async () => {
-    const remote = server({ layout: first, revision: 7 })
-    const autosave = startAutosave({ layout: first, revision: 7 }, remote.keeping, delays)
+    const remote = keepingServer({ body: first, revision: 7 })
+    const autosave = startAutosave({ body: first, revision: 7 }, remote.keeping, sameLayout, delays)
     remote.elsewhere(moved(0.1))
     autosave.changed(moved(0.1))
     await vi.advanceTimersByTimeAsync(600)
@@ -161,20 +118,20 @@ describe('autosave', () => {
   })
 
   it('sends what waits when the page is left', async () => {
-    const remote = server({ layout: first, revision: 7 })
-    const autosave = startAutosave({ layout: first, revision: 7 }, remote.keeping, delays)
+    const remote = keepingServer({ body: first, revision: 7 })
+    const autosave = startAutosave({ body: first, revision: 7 }, remote.keeping, sameLayout, delays)
     autosave.changed(moved(0.1))
     autosave.stop()
     await vi.advanceTimersByTimeAsync(10)
-    expect(remote.kept().layout).toEqual(moved(0.1))
+    expect(remote.kept().body).toEqual(moved(0.1))
   })
 
   it('tells a refusal and tries again with the next change', async () => {
-    const remote = server({ layout: first, revision: 7 })
+    const remote = keepingServer({ body: first, revision: 7 })
     const save = vi
       .spyOn(remote.keeping, 'save')
       .mockResolvedValueOnce({ kind: 'refused', reason: 'Too many heaters.' })
-    const autosave = startAutosave({ layout: first, revision: 7 }, remote.keeping, delays)
+    const autosave = startAutosave({ body: first, revision: 7 }, remote.keeping, sameLayout, delays)
     autosave.changed(moved(0.1))
     await vi.advanceTimersByTimeAsync(600)
     expect(autosave.state()).toEqual({ kind: 'refused', reason: 'Too many heaters.' })

@@ -63,6 +63,7 @@ describe.each(kinds)('saving a $name', ({ name, good, other, bad, path }) => {
     expect(JSON.parse(answer)).toMatchObject({ revision: 2, [name]: other })
     expect(await refused(await put('engineer', good, 1))).toMatchObject({
       status: 412,
+      changed: { by: 'Tilda Fenwick' },
       current: { revision: 2, [name]: other },
     })
     expect((await put('engineer', good, 2)).status).toBe(200)

@@ -11,7 +11,12 @@ const variantSchema = z.object({
   title: z.string(),
   heaters: z.array(z.looseObject({ id: z.string(), x: z.number() })),
 })
-const refusalSchema = z.object({ error: z.string().min(1), path: z.string(), current: z.unknown().optional() })
+const refusalSchema = z.object({
+  error: z.string().min(1),
+  path: z.string(),
+  current: z.unknown().optional(),
+  changed: z.object({ by: z.string().nullable(), at: z.iso.datetime() }).optional(),
+})
 
 let desk: ApiDesk
 let designer: Caller
@@ -204,7 +209,8 @@ describe('saving a variant', () => {
     const { id } = await fresh()
     await put({ id, match: 1, body: layout('Theirs', heater('H7', 7)), as: desk.as('engineer') })
     const refused = await refusalOf(await put({ id, match: 1, body: layout('Mine') }))
-    expect(refused).toMatchObject({ status: 412, path: 'If-Match' })
+    expect(refused).toMatchObject({ status: 412, path: 'If-Match', changed: { by: 'Joss Harrow' } })
+    expect(Math.abs(Date.now() - Date.parse(refused.changed?.at ?? ''))).toBeLessThan(60_000)
     expect(variantSchema.parse(refused.current)).toMatchObject({
       revision: 2,
       title: 'Theirs',

@@ -6,6 +6,7 @@ import { addElement } from '#app/domain/flux/kernel.ts'
 import { shadeElement } from '#app/domain/flux/shaded-cells.ts'
 import { maxHeaters } from '#app/domain/layout/limits.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
+import { sameData } from '#app/domain/same-data.ts'
 
 /** What one emitter gives the cells of a window of the grid, W/m². */
 export interface Layer {
@@ -25,17 +26,6 @@ export interface FluxMap {
   readonly total: Float64Array
   /** How many layers were computed for this map; the others were kept. */
   readonly computed: number
-}
-
-/** Equality by value of plain data: numbers, strings, null, arrays and objects of them. */
-export function sameData(a: unknown, b: unknown): boolean {
-  if (Object.is(a, b)) return true
-  if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return false
-  const [keysOfA, keysOfB] = [Object.keys(a), Object.keys(b)]
-  return (
-    keysOfA.length === keysOfB.length &&
-    keysOfA.every((key) => sameData(Reflect.get(a, key) ?? null, Reflect.get(b, key) ?? null))
-  )
 }
 
 function layerOf(grid: Grid, emitter: Emitter, extent: Extent, obstructions: readonly Obstruction[]): Layer {

@@ -3,9 +3,10 @@ import { effectiveAreaShare, meanProjectedAreaFactor, type Posture } from '#app/
 import { addDirected } from '#app/domain/flux/directed-map.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import { gridOf, type Grid } from '#app/domain/flux/grid.ts'
-import { irradianceMap, sameData, type FluxMap, type Layer } from '#app/domain/flux/map.ts'
+import { irradianceMap, type FluxMap, type Layer } from '#app/domain/flux/map.ts'
 import type { MapConditions, MapQuestion } from '#app/domain/flux/map-question.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
+import { sameData } from '#app/domain/same-data.ts'
 import { contoursOf, type HeatPicture } from '#app/drawing/heat/contours.ts'
 
 /** The answer to a question about the map. */

@@ -5,9 +5,10 @@ import { formatLength, type DisplayUnits } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
 import type { SaveConflict } from '#app/editor/autosave.ts'
 import { degreesFigure } from '#app/editor/figures.ts'
+import { changedWords } from '#app/editor/save-status.ts'
 
 interface ConflictPanelProps {
-  readonly conflict: SaveConflict
+  readonly conflict: SaveConflict<Layout>
   readonly units: DisplayUnits
   /** Goes on from the other side's revision with this layout. */
   readonly onSettle: (layout: Layout) => void
@@ -19,13 +20,12 @@ type Side = 'mine' | 'theirs'
 
 /** Both values of everything that two people changed; nothing is saved until one is chosen for each. */
 export function ConflictPanel({ conflict, units, onSettle, onTwoVariants }: ConflictPanelProps) {
-  const { base, mine, theirs, by, at } = conflict
-  const merge = useMemo(() => mergeLayouts(base, mine, theirs.layout), [base, mine, theirs])
+  const { base, mine, theirs } = conflict
+  const merge = useMemo(() => mergeLayouts(base, mine, theirs.body), [base, mine, theirs])
   const [chosen, setChosen] = useState<Readonly<Record<string, Side>>>({})
   const [title, setTitle] = useState<Side | null>(null)
   const left = merge.conflicts.filter(({ id }) => !chosen[id]).length + (merge.title && !title ? 1 : 0)
-  const who = by ? `by ${by}` : 'elsewhere'
-  const when = at ? ` at ${at}` : ''
+  const { who, when } = changedWords(conflict)
   const settle = () => {
     const heaters = merge.conflicts
       .filter(({ id }) => chosen[id] === 'theirs')

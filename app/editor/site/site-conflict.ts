@@ -1,4 +1,5 @@
 import type { Dimension, Member, Seat, Site } from '#app/domain/site/site.ts'
+import { sameData } from '#app/domain/same-data.ts'
 import { formatLength } from '#app/domain/units.ts'
 
 /** Something that two people left different: what each says of it in words. */
@@ -11,16 +12,6 @@ export interface SiteDifference {
   readonly theirsAlone: boolean
 }
 
-/** The database gives keys back in an order of its own, so order says nothing. */
-const canonical = (value: unknown): string =>
-  JSON.stringify(value, (_, part: unknown) =>
-    typeof part === 'object' && part !== null && !Array.isArray(part)
-      ? Object.fromEntries(Object.entries(part).toSorted(([a], [b]) => (a < b ? -1 : 1)))
-      : part,
-  ) ?? ''
-
-const same = (a: unknown, b: unknown): boolean => canonical(a) === canonical(b)
-
 /** Everything that differs between two copies of a site, thing by thing; `base` is what both were made from, if known. */
 export function siteDifferences(mine: Site, theirs: Site, base: Site | null = null): SiteDifference[] {
   const length = (metres: number) => formatLength(metres, mine.displayUnits)
@@ -28,7 +19,7 @@ export function siteDifferences(mine: Site, theirs: Site, base: Site | null = nu
   const memberWords = ({ from, to }: Member) =>
     `${length(from[0])}, ${length(from[1])} to ${length(to[0])}, ${length(to[1])}`
   const sizeWords = ({ value, tolerance, source }: Dimension) => `${length(value)} ± ${length(tolerance)}, ${source}`
-  const rest = same(withoutThings(mine), withoutThings(theirs))
+  const rest = sameData(withoutThings(mine), withoutThings(theirs))
     ? []
     : [
         {
@@ -36,7 +27,7 @@ export function siteDifferences(mine: Site, theirs: Site, base: Site | null = nu
           label: 'The rest of the site',
           mine: 'what stands here',
           theirs: 'what was saved there',
-          theirsAlone: base !== null && same(withoutThings(mine), withoutThings(base)),
+          theirsAlone: base !== null && sameData(withoutThings(mine), withoutThings(base)),
         },
       ]
   return [
@@ -62,11 +53,11 @@ function differing<T extends { readonly id: string }>(
     const left = mine.find((thing) => thing.id === id)
     const right = theirs.find((thing) => thing.id === id)
     const named = left ?? right
-    if (!named || same(left, right)) return []
+    if (!named || sameData(left, right)) return []
     const told = (thing: T | undefined) => (thing ? words(thing) : 'none')
     const theirsAlone =
       base !== undefined &&
-      same(
+      sameData(
         left,
         base.find((thing) => thing.id === id),
       )

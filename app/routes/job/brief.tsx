@@ -11,6 +11,7 @@ import { ConflictPanel } from '#app/components/conflict-panel.tsx'
 import { CheckField, SelectField, TextAreaField, TextField } from '#app/components/field.tsx'
 import { JobFrame } from '#app/components/page-frame.tsx'
 import { SaveState } from '#app/components/status.tsx'
+import { changedWords, statusOf } from '#app/editor/save-status.ts'
 import { useDocument } from '#app/editor/use-document.ts'
 import { findBriefWithUnits } from '#app/server/data/briefs.server.ts'
 import { requireJob } from '#app/server/data/jobs.server.ts'
@@ -51,7 +52,7 @@ export default function BriefPage({ loaderData }: Route.ComponentProps) {
 type Loaded = Route.ComponentProps['loaderData']
 
 function BriefForm({ viewer, job, kept, units, readOnly }: Loaded) {
-  const [{ history, status, theirs, base }, document] = useDocument<Brief>(kept, {
+  const [{ history, save }, document] = useDocument<Brief>(kept, {
     url: `/api/jobs/${job.id}/brief`,
     name: 'brief',
     schema: briefSchema,
@@ -75,7 +76,7 @@ function BriefForm({ viewer, job, kept, units, readOnly }: Loaded) {
   const tools = (
     <>
       <SaveState
-        status={readOnly ? { kind: 'read-only', why: 'You read this brief' } : status}
+        status={readOnly ? { kind: 'read-only', why: 'You read this brief' } : statusOf(save, false)}
         onRetry={document.retry}
       />
       {!readOnly && (
@@ -92,10 +93,11 @@ function BriefForm({ viewer, job, kept, units, readOnly }: Loaded) {
         <div>
           <h1 className="text-xl font-strong">Brief</h1>
           <p className="mt-0.5 mb-4 text-ink-2">{job.customer || 'No customer named'}</p>
-          {theirs && (
+          {save.kind === 'conflict' && (
             <ConflictPanel
-              rows={differing(brief, theirs.body, units, base)}
-              onSettle={(taken) => document.settle(merged(brief, theirs.body, taken, units))}
+              {...changedWords(save.conflict)}
+              rows={differing(brief, save.conflict.theirs.body, units, save.conflict.base)}
+              onSettle={(taken) => document.settle(merged(brief, save.conflict.theirs.body, taken, units))}
             />
           )}
           {sections.map(({ title, fields }) => (

@@ -24,6 +24,7 @@ import { mergedSite, siteDifferences } from '#app/editor/site/site-conflict.ts'
 import { SitePlan } from '#app/editor/site/site-plan.tsx'
 import { SiteTables } from '#app/editor/site/site-panel.tsx'
 import type { KeyAction } from '#app/editor/tools/keys.ts'
+import { changedWords, statusOf } from '#app/editor/save-status.ts'
 import { useDocument } from '#app/editor/use-document.ts'
 import { requireJob } from '#app/server/data/jobs.server.ts'
 import { findSite } from '#app/server/data/sites.server.ts'
@@ -56,7 +57,7 @@ type Loaded = Route.ComponentProps['loaderData']
 type Adding = 'seat' | 'member' | null
 
 function SiteEditor({ viewer, job, kept, readOnly }: Loaded) {
-  const [{ history, status, theirs, base }, document] = useDocument<Site>(kept, {
+  const [{ history, save }, document] = useDocument<Site>(kept, {
     url: `/api/jobs/${job.id}/site`,
     name: 'site',
     schema: siteSchema,
@@ -99,7 +100,7 @@ function SiteEditor({ viewer, job, kept, readOnly }: Loaded) {
   const tools = (
     <>
       <SaveState
-        status={readOnly ? { kind: 'read-only', why: 'You read this site' } : status}
+        status={readOnly ? { kind: 'read-only', why: 'You read this site' } : statusOf(save, false)}
         onRetry={document.retry}
       />
       {!readOnly && (
@@ -128,10 +129,11 @@ function SiteEditor({ viewer, job, kept, readOnly }: Loaded) {
         )}
         {!readOnly && <AddButtons adding={adding} onAdding={setAdding} />}
       </header>
-      {theirs && (
+      {save.kind === 'conflict' && (
         <ConflictPanel
-          rows={siteDifferences(site, theirs.body, base)}
-          onSettle={(taken) => document.settle(mergedSite(site, theirs.body, taken))}
+          {...changedWords(save.conflict)}
+          rows={siteDifferences(site, save.conflict.theirs.body, save.conflict.base)}
+          onSettle={(taken) => document.settle(mergedSite(site, save.conflict.theirs.body, taken))}
         />
       )}
       <div className="grid items-start gap-x-6 gap-y-5 *:min-w-0 wide:grid-cols-[minmax(0,1fr)_36rem]">

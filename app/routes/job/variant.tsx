@@ -1,10 +1,11 @@
 import { useMemo } from 'react'
 import { data, useNavigate, type ShouldRevalidateFunctionArgs } from 'react-router'
-import useSWR, { type KeyedMutator } from 'swr'
+import useSWR from 'swr'
 import { can } from '#app/domain/access/roles.ts'
+import type { Layout } from '#app/domain/layout/layout.ts'
 import { useToast } from '#app/components/toast.tsx'
-import type { DeviceCopy, KeptLayout, Keeping } from '#app/editor/keeping.ts'
-import type { KeptVariant as Kept } from '#app/editor/parse-kept.ts'
+import type { Kept } from '#app/editor/keeping.ts'
+import { keptAt } from '#app/editor/kept-at.ts'
 import { VariantEditor } from '#app/editor/variant-editor.tsx'
 import { requireJob } from '#app/server/data/jobs.server.ts'
 import { findLaidOut } from '#app/server/data/laid-out.server.ts'
@@ -45,38 +46,40 @@ export default function VariantPage({ loaderData }: Route.ComponentProps) {
 
 const parsing = () => import('#app/editor/parse-kept.ts')
 
-const keptLayout = ({ revision, title, heaters }: Kept): KeptLayout => ({
-  revision,
-  layout: { title, heaters },
-})
+const variantParsing = async () => (await parsing()).variantParsing
 
-async function findKept(url: string): Promise<Kept> {
+async function findKept(url: string): Promise<Kept<Layout>> {
   const response = await fetch(url)
   if (!response.ok) throw new Error(`${response.status}`)
-  return (await parsing()).parseVariant(await response.json())
+  return (await variantParsing()).kept(await response.json())
 }
 
 function KeptVariant({ variant, variants, job, ...rest }: Route.ComponentProps['loaderData']) {
   const navigate = useNavigate()
   const toast = useToast()
   const url = `/api/variants/${variant.id}`
-  const { data: kept = variant, mutate } = useSWR(url, findKept, {
-    fallbackData: variant,
+  const initial = useMemo(() => {
+    const { revision, title, heaters } = variant
+    return { revision, body: { title, heaters } }
+  }, [variant])
+  const { data: newest = initial, mutate } = useSWR(url, findKept, {
+    fallbackData: initial,
     revalidateOnMount: false,
     revalidateIfStale: false,
   })
-  const keeping = useMemo(() => keepingAt(url, mutate), [url, mutate])
-  const initial = useMemo(() => keptLayout(variant), [variant])
-  const newest = useMemo(() => keptLayout(kept), [kept])
+  const keeping = useMemo(() => {
+    const onSaved = async (saved: Kept<Layout>) => void (await mutate(saved, { revalidate: false }))
+    return keptAt({ url, parsing: variantParsing, onSaved })
+  }, [url, mutate])
   const make = async (body: object) => {
     const made = await send('POST', `/api/jobs/${job.id}/variants`, body)
     if (!made) toast({ text: 'No variant made: no connection. Nothing was lost.' })
-    return made ? (await parsing()).parseVariant(made) : null
+    return made ? (await parsing()).variantId(made) : null
   }
   const open = (id: string) => navigate(`/jobs/${job.id}/variants/${id}`)
   const makeAndOpen = async (body: object) => {
     const made = await make(body)
-    if (made) await open(made.id)
+    if (made) await open(made)
   }
   const remove = async (revision: number) => {
     const next = variants.find(({ id }) => id !== variant.id)
@@ -86,7 +89,7 @@ function KeptVariant({ variant, variants, job, ...rest }: Route.ComponentProps['
     const undo = async () => {
       if (await send('POST', `${url}/restore`, { deleted: true })) await open(variant.id)
     }
-    toast({ text: `Variant “${kept.title}” deleted`, action: { label: 'Undo', run: () => void undo() } })
+    toast({ text: `Variant “${newest.body.title}” deleted`, action: { label: 'Undo', run: () => void undo() } })
   }
   return (
     <VariantEditor
@@ -116,52 +119,5 @@ async function send(method: string, url: string, body: object | null, headers: R
     return json
   } catch {
     return null
-  }
-}
-
-/** Keeps a layout at a URL of the API and, until it is there, on this device. */
-function keepingAt(url: string, mutate: KeyedMutator<Kept>): Keeping {
-  const device = `unsaved:${url}`
-  return {
-    newSaveId: () => crypto.randomUUID(),
-    keepOnDevice: (copy) => keepOnDevice(device, copy),
-    findOnDevice: () => findOnDevice(device),
-    async save({ layout, revision, saveId }) {
-      const headers = { 'Content-Type': 'application/json', 'If-Match': `"${revision}"`, 'Idempotency-Key': saveId }
-      try {
-        const response = await fetch(url, { method: 'PUT', headers, body: JSON.stringify(layout) })
-        if (response.status >= 500) return { kind: 'unreachable' }
-        const json: unknown = await response.json()
-        const { parseRefusal, parseVariant } = await parsing()
-        if (response.ok) {
-          const saved = parseVariant(json)
-          await mutate(saved, { revalidate: false })
-          return { kind: 'saved', revision: saved.revision }
-        }
-        const refusal = parseRefusal(json)
-        if (response.status !== 412) return { kind: 'refused', reason: refusal.error }
-        return { kind: 'conflict', current: keptLayout(parseVariant(refusal.current)), by: null, at: null }
-      } catch {
-        return { kind: 'unreachable' }
-      }
-    },
-  }
-}
-
-async function findOnDevice(key: string): Promise<DeviceCopy | null> {
-  try {
-    const kept = localStorage.getItem(key)
-    return kept === null ? null : (await parsing()).parseDeviceCopy(kept)
-  } catch {
-    return null
-  }
-}
-
-function keepOnDevice(key: string, copy: DeviceCopy | null): void {
-  try {
-    if (copy) localStorage.setItem(key, JSON.stringify(copy))
-    else localStorage.removeItem(key)
-  } catch {
-    // A device that keeps nothing still saves to the server.
   }
 }

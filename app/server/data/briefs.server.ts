@@ -6,7 +6,7 @@ import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
 import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
-import { saveRevision, type Revisioned, type Save } from '#app/server/saving.server.ts'
+import { saveRevision, type Locked, type Revisioned, type Save } from '#app/server/saving.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { briefRevisions, briefs, jobs, sites } from '#drizzle/schema.ts'
 
@@ -16,13 +16,22 @@ export interface KeptBrief {
   readonly brief: Brief
 }
 
-async function readBrief(tx: Transaction, jobId: string, lock: boolean): Promise<KeptBrief | null> {
-  const asked = tx
+async function readBrief(tx: Transaction, jobId: string): Promise<KeptBrief | null> {
+  const [row] = await tx
     .select({ revision: briefs.revision, body: briefs.body })
     .from(briefs)
     .where(and(own(briefs), eq(briefs.jobId, jobId)))
-  const [row] = lock ? await asked.for('update') : await asked
   return row ? { revision: row.revision, brief: briefSchema.parse(row.body) } : null
+}
+
+async function lockBrief(tx: Transaction, jobId: string): Promise<Locked | null> {
+  const { revision, body, updatedBy, updatedAt } = briefs
+  const [row] = await tx
+    .select({ revision, body, updatedBy, updatedAt })
+    .from(briefs)
+    .where(and(own(briefs), eq(briefs.jobId, jobId)))
+    .for('update')
+  return row ? { ...row, shown: { revision: row.revision, brief: briefSchema.parse(row.body) } } : null
 }
 
 /** The brief of a job and the units its site is written in. Throws when a job has none: every job starts with both. */
@@ -41,7 +50,7 @@ export async function findBriefWithUnits(job: OpenJob): Promise<KeptBrief & { re
 
 /** The brief of a job as it is now. Throws when a job has none: every job starts with one. */
 export async function findBrief(job: OpenJob): Promise<KeptBrief> {
-  const kept = await asOrganisation(job.member.organisationId, (tx) => readBrief(tx, job.id, false))
+  const kept = await asOrganisation(job.member.organisationId, (tx) => readBrief(tx, job.id))
   if (!kept) throw new Error(`Job ${job.id} has no brief.`)
   return kept
 }
@@ -56,10 +65,7 @@ export async function insertBrief(tx: Transaction, member: Member, jobId: string
 const briefOf = ({ id: jobId, member }: OpenJob): Revisioned<Brief> => ({
   resource: `jobs/${jobId}/brief`,
   saved: 'brief saved',
-  lock: async (tx) => {
-    const kept = await readBrief(tx, jobId, true)
-    return kept && { revision: kept.revision, shown: kept }
-  },
+  lock: (tx) => lockBrief(tx, jobId),
   write: async (tx, revision, brief, hash) => {
     const { organisationId, userId } = member
     await tx

@@ -12,6 +12,12 @@ export interface Person {
   readonly email: string | null
 }
 
+/** The name of an account; null when it is gone. */
+export async function findName(userId: string): Promise<string | null> {
+  const [row] = await authDatabase.select({ name: user.name }).from(user).where(eq(user.id, userId))
+  return row?.name ?? null
+}
+
 /** The people of the member's organisation by name. */
 export async function listPeople(member: Member): Promise<Person[]> {
   const rows = await authDatabase

@@ -6,7 +6,7 @@ import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
 import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
-import { saveRevision, type Revisioned, type Save } from '#app/server/saving.server.ts'
+import { saveRevision, type Locked, type Revisioned, type Save } from '#app/server/saving.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { siteRevisions, sites } from '#drizzle/schema.ts'
 
@@ -34,18 +34,27 @@ export interface KeptSite {
   readonly site: Site
 }
 
-async function readSite(tx: Transaction, jobId: string, lock: boolean): Promise<KeptSite | null> {
-  const asked = tx
+async function readSite(tx: Transaction, jobId: string): Promise<KeptSite | null> {
+  const [row] = await tx
     .select({ revision: sites.revision, body: sites.body })
     .from(sites)
     .where(and(own(sites), eq(sites.jobId, jobId)))
-  const [row] = lock ? await asked.for('update') : await asked
   return row ? { revision: row.revision, site: siteSchema.parse(row.body) } : null
+}
+
+async function lockSite(tx: Transaction, jobId: string): Promise<Locked | null> {
+  const { revision, body, updatedBy, updatedAt } = sites
+  const [row] = await tx
+    .select({ revision, body, updatedBy, updatedAt })
+    .from(sites)
+    .where(and(own(sites), eq(sites.jobId, jobId)))
+    .for('update')
+  return row ? { ...row, shown: { revision: row.revision, site: siteSchema.parse(row.body) } } : null
 }
 
 /** The site of a job as it is now. Throws when a job has none: every job starts with one. */
 export async function findSite(job: OpenJob): Promise<KeptSite> {
-  const kept = await asOrganisation(job.member.organisationId, (tx) => readSite(tx, job.id, false))
+  const kept = await asOrganisation(job.member.organisationId, (tx) => readSite(tx, job.id))
   if (!kept) throw new Error(`Job ${job.id} has no site.`)
   return kept
 }
@@ -60,10 +69,7 @@ export async function insertSite(tx: Transaction, member: Member, jobId: string,
 const siteOf = ({ id: jobId, member }: OpenJob): Revisioned<Site> => ({
   resource: `jobs/${jobId}/site`,
   saved: 'site saved',
-  lock: async (tx) => {
-    const kept = await readSite(tx, jobId, true)
-    return kept && { revision: kept.revision, shown: kept }
-  },
+  lock: (tx) => lockSite(tx, jobId),
   write: async (tx, revision, site, hash) => {
     const { organisationId, userId } = member
     await tx

@@ -77,7 +77,7 @@ export function deleteVariant({ id, member }: OpenVariant, expected: number | nu
   return asOrganisation(member.organisationId, async (tx) => {
     const kept = await lockVariant(tx, id)
     if (!kept) return gone('variant')
-    const stale = staleness(expected, kept)
+    const stale = await staleness(expected, kept)
     if (stale) return stale
     await tx
       .update(variants)

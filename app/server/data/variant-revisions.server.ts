@@ -4,9 +4,9 @@ import { layoutSchema, type Layout } from '#app/domain/layout/layout.ts'
 import { roundLength } from '#app/domain/units.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { touchJob } from '#app/server/data/jobs.server.ts'
-import { present, variantColumns, variantOf, type OpenVariant } from '#app/server/data/variants.server.ts'
+import { present, variantColumns, variantOf, type OpenVariant, type Variant } from '#app/server/data/variants.server.ts'
 import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
-import { gone, saveRevision, type Revisioned, type Save } from '#app/server/saving.server.ts'
+import { gone, saveRevision, type Locked, type Revisioned, type Save } from '#app/server/saving.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { variantRevisions, variants } from '#drizzle/schema.ts'
 
@@ -21,14 +21,15 @@ export interface VariantRevision {
 }
 
 /** Locks a variant until the transaction ends; null when it is gone. */
-export async function lockVariant(tx: Transaction, id: string) {
+export async function lockVariant(tx: Transaction, id: string): Promise<(Locked & { shown: Variant }) | null> {
   const [row] = await tx
-    .select(variantColumns)
+    .select({ ...variantColumns, updatedBy: variants.updatedBy })
     .from(variants)
     .where(and(own(variants), eq(variants.id, id), present))
     .for('update')
-  const shown = row && variantOf(row)
-  return shown ? { revision: shown.revision, shown } : null
+  if (!row) return null
+  const { updatedBy, ...shown } = row
+  return { revision: row.revision, shown: variantOf(shown), updatedBy, updatedAt: row.updatedAt }
 }
 
 /** How far a job has come that has such a layout. */
