@@ -106,7 +106,7 @@ export function deletePhoto({ id, jobId, member }: OpenPhoto, expected: number |
   return asOrganisation(member.organisationId, async (tx) => {
     const kept = await lockPhoto(tx, id)
     if (!kept) return gone('photo')
-    const stale = staleness(expected, kept)
+    const stale = await staleness(expected, kept)
     if (stale) return stale
     await tx
       .update(photos)

@@ -4,6 +4,7 @@ import { photoMarksSchema, type PhotoMarks } from '#app/domain/photo/measurement
 import type { OpenJob } from '#app/server/data/jobs.server.ts'
 import { isId, missing } from '#app/server/missing.server.ts'
 import { asOrganisation, own, type Transaction } from '#app/server/organisation.server.ts'
+import type { Locked } from '#app/server/saving.server.ts'
 import { requireMay, type Member } from '#app/server/session.server.ts'
 import { photos } from '#drizzle/photo-schema.ts'
 
@@ -81,14 +82,13 @@ export async function requirePhoto(
 }
 
 /** A photo that is not deleted, locked until the transaction ends; null when there is none. */
-export async function lockPhoto(
-  tx: Transaction,
-  id: string,
-): Promise<{ readonly revision: number; readonly shown: Photo } | null> {
+export async function lockPhoto(tx: Transaction, id: string): Promise<(Locked & { readonly shown: Photo }) | null> {
   const [row] = await tx
-    .select(photoColumns)
+    .select({ ...photoColumns, updatedBy: photos.updatedBy, updatedAt: photos.updatedAt })
     .from(photos)
     .where(and(own(photos), eq(photos.id, id), presentPhoto))
     .for('update')
-  return row ? { revision: row.revision, shown: photoOf(row) } : null
+  if (!row) return null
+  const { updatedBy, updatedAt, ...shown } = row
+  return { revision: row.revision, shown: photoOf(shown), updatedBy, updatedAt }
 }
