@@ -34,12 +34,12 @@ const rest = 140
  * it is drawn once at the new size, so that lines and words keep theirs.
  */
 export function usePlanView(
-  site: Site,
+  { floor }: Pick<Site, 'floor'>,
   size: { readonly width: number; readonly height: number },
   margins: PlanMargins,
   moving: RefObject<HTMLElement | SVGElement | null>,
 ): PlanViewing {
-  const whole = useMemo(() => planViewOf(site, size.width, size.height, margins), [site, size, margins])
+  const whole = useMemo(() => planViewOf({ floor }, size.width, size.height, margins), [floor, size, margins])
   const [drawn, setDrawn] = useState(wholePlan)
   const wanted = useRef(wholePlan)
   const timer = useRef<ReturnType<typeof setTimeout>>(undefined)

@@ -1,11 +1,10 @@
 import { z } from 'zod'
 import { briefSchema } from '#app/domain/brief/brief.ts'
+import { usualTolerance } from '#app/domain/site/size-source.ts'
 import type { Dimension, Site } from '#app/domain/site/site.ts'
 
 /** The floor assumed until a size is known, m. */
 const assumedFloor = { length: 6, depth: 4 } as const
-/** Share of a guessed length that it may be wrong by (house rule). */
-const guessTolerance = 0.1
 
 /** What starts a job: what it is called, for whom, the brief, and the floor's size when the customer gave one, m. */
 export const jobRequestSchema = z.strictObject({
@@ -29,7 +28,7 @@ function floorSize(label: string, value: number, axis: 0 | 1, told: boolean): Di
     id: axis === 0 ? 'size-length' : 'size-depth',
     label,
     value,
-    tolerance: value * guessTolerance,
+    tolerance: usualTolerance(told ? 'told' : 'guessed', value),
     source: told ? 'told' : 'guessed',
     note: told ? null : 'assumed until measured',
     moves: corners.map((corner) => ({ of: 'floor', id: 'floor', coordinate: `${corner}.${axis}`, by: 1 })),

@@ -27,6 +27,14 @@ export const houseRules = {
   overlapThreshold: rule(80),
   /** Tolerance of a coordinate that no dimension moves, m. */
   tolerance: rule(0.025),
+  /** Tolerance of a size by where it comes from: fixed, m, or a share of the size. A told size is as good as a guess. */
+  toleranceLaser: rule(0.005),
+  toleranceTape: rule(0.01),
+  toleranceDrawing: rule(0.025),
+  /** Of a size scaled from a photo the greater of a share and a length, m. */
+  tolerancePhotoShare: rule(0.03),
+  tolerancePhotoLeast: rule(0.05),
+  toleranceGuessShare: rule(0.1),
   /** How far sideways of its member an eye may be for a chain to hang plumb, m. */
   chainSidewaysLimit: rule(0.02),
   /** How far in plan each member of a splayed pair may be from its eye, m. */

@@ -1,15 +1,46 @@
+import {
+  movedCover,
+  movedLevel,
+  movedMember,
+  movedObstacle,
+  movedPole,
+  movedSeat,
+  movedTable,
+  movedWall,
+} from '#app/domain/site/moved-things.ts'
+import { undersideAt } from '#app/domain/site/member.ts'
 import type { Dimension, Member, Seat, Site } from '#app/domain/site/site.ts'
-import type { Vec2 } from '#app/domain/vector.ts'
+import { roundLength } from '#app/domain/units.ts'
 
-/** Lengths are kept to 0.1 mm. */
-const rounded = (metres: number): number => Math.round(metres * 1e4) / 1e4
+/** What a site is made of, beside its floor and its sizes. */
+export interface SiteThings {
+  readonly cover: Site['covers'][number]
+  readonly member: Site['members'][number]
+  readonly wall: Site['walls'][number]
+  readonly pole: Site['poles'][number]
+  readonly obstacle: Site['obstacles'][number]
+  readonly table: Site['tables'][number]
+  readonly level: Site['levels'][number]
+  readonly seat: Site['seats'][number]
+}
+export type ThingKind = keyof SiteThings
 
-const shifted = ([x, y]: Vec2, dx: number, dy: number): [number, number] => [rounded(x + dx), rounded(y + dy)]
+/** Where a site keeps the things of each kind. */
+export const listOf = {
+  cover: 'covers',
+  member: 'members',
+  wall: 'walls',
+  pole: 'poles',
+  obstacle: 'obstacles',
+  table: 'tables',
+  level: 'levels',
+  seat: 'seats',
+} as const satisfies Record<ThingKind, keyof Site>
 
 /** Every id of the site, whatever it names. */
-function idsOf(site: Site): Set<string> {
-  const named = [site.covers, site.members, site.walls, site.poles, site.obstacles, site.tables, site.seats]
-  return new Set([...named.flatMap((things) => things.map(({ id }) => id)), ...site.dimensions.map(({ id }) => id)])
+export function idsOf(site: Site): Set<string> {
+  const named = Object.values(listOf).flatMap((list) => site[list].map(({ id }) => id))
+  return new Set([...named, ...site.dimensions.map(({ id }) => id)])
 }
 
 /** An id that nothing on the site has: the stem with the lowest free number. */
@@ -20,59 +51,112 @@ export function unusedId(site: Site, stem: string): string {
   return `${stem}-${number}`
 }
 
-/** The site with one more seat; its id must be unused (`unusedId`). */
-export const addSeat = (site: Site, seat: Seat): Site => ({ ...site, seats: [...site.seats, seat] })
+/** The site with one more thing; its id must be unused (`unusedId`). */
+export function addThing<K extends ThingKind>(site: Site, kind: K, thing: SiteThings[K]): Site {
+  return { ...site, [listOf[kind]]: [...site[listOf[kind]], thing] }
+}
 
-/** The site with the named seats moved by (dx, dy), m. */
-export const moveSeats = (site: Site, ids: readonly string[], dx: number, dy: number): Site => ({
+/** Some facts of a thing replaced, given or worked out from it as it is. Its id stays. */
+export type Facts<T> = Partial<Omit<T, 'id'>> | ((thing: T) => Partial<Omit<T, 'id'>>)
+
+const changed = <T extends { readonly id: string }>(things: readonly T[], id: string, facts: Facts<T>): T[] =>
+  things.map((thing) =>
+    thing.id === id ? { ...thing, ...(typeof facts === 'function' ? facts(thing) : facts) } : thing,
+  )
+
+type Change<K extends ThingKind> = (site: Site, id: string, facts: Facts<SiteThings[K]>) => Site
+
+export const changeCover: Change<'cover'> = (site, id, facts) => ({
   ...site,
-  seats: site.seats.map((seat) =>
-    ids.includes(seat.id) ? { ...seat, x: rounded(seat.x + dx), y: rounded(seat.y + dy) } : seat,
-  ),
+  covers: changed(site.covers, id, facts),
+})
+export const changeMember: Change<'member'> = (site, id, facts) => ({
+  ...site,
+  members: changed(site.members, id, facts),
+})
+export const changeWall: Change<'wall'> = (site, id, facts) => ({ ...site, walls: changed(site.walls, id, facts) })
+export const changePole: Change<'pole'> = (site, id, facts) => ({ ...site, poles: changed(site.poles, id, facts) })
+export const changeObstacle: Change<'obstacle'> = (site, id, facts) => ({
+  ...site,
+  obstacles: changed(site.obstacles, id, facts),
+})
+export const changeTable: Change<'table'> = (site, id, facts) => ({
+  ...site,
+  tables: changed(site.tables, id, facts),
+})
+export const changeLevel: Change<'level'> = (site, id, facts) => ({
+  ...site,
+  levels: changed(site.levels, id, facts),
 })
 
-/** The site with some facts of one seat replaced: place, facing, priority, group, posture, heights. */
-export const changeSeat = (site: Site, id: string, facts: Partial<Omit<Seat, 'id'>>): Site => ({
-  ...site,
-  seats: site.seats.map((seat) => (seat.id === id ? { ...seat, ...facts } : seat)),
-})
+/** The site with the same facts of several seats replaced: place, facing, priority, group, posture, heights. */
+export function changeSeats(site: Site, ids: readonly string[], facts: Partial<Omit<Seat, 'id'>>): Site {
+  const chosen = new Set(ids)
+  return { ...site, seats: site.seats.map((seat) => (chosen.has(seat.id) ? { ...seat, ...facts } : seat)) }
+}
 
-/** The site without the named seats, and without what dimensions said about them. */
-export const removeSeats = (site: Site, ids: readonly string[]): Site => ({
-  ...site,
-  seats: site.seats.filter((seat) => !ids.includes(seat.id)),
-  dimensions: withoutMoves(site.dimensions, 'seat', ids),
-})
+/** The site with things of one kind moved by (dx, dy), m; everything else stays as it is. */
+export function moveThings(site: Site, kind: ThingKind, ids: readonly string[], dx: number, dy: number): Site {
+  const chosen = new Set(ids)
+  const step = { dx, dy }
+  const edit = <T extends { readonly id: string }>(things: readonly T[], move: (thing: T, by: typeof step) => T): T[] =>
+    things.map((thing) => (chosen.has(thing.id) ? move(thing, step) : thing))
+  switch (kind) {
+    case 'cover':
+      return { ...site, covers: edit(site.covers, movedCover) }
+    case 'member':
+      return { ...site, members: edit(site.members, movedMember) }
+    case 'wall':
+      return { ...site, walls: edit(site.walls, movedWall) }
+    case 'pole':
+      return { ...site, poles: edit(site.poles, movedPole) }
+    case 'obstacle':
+      return { ...site, obstacles: edit(site.obstacles, movedObstacle) }
+    case 'table':
+      return { ...site, tables: edit(site.tables, movedTable) }
+    case 'level':
+      return { ...site, levels: edit(site.levels, movedLevel) }
+    case 'seat':
+      return { ...site, seats: edit(site.seats, movedSeat) }
+  }
+}
 
-/** The site with one more member; its id must be unused (`unusedId`). */
-export const addMember = (site: Site, member: Member): Site => ({ ...site, members: [...site.members, member] })
+/**
+ * The site without the named things, and without what dimensions said about them. Members that followed a cover that
+ * goes keep the heights they had. Heaters that name a removed thing become unsupported.
+ */
+export function removeThings(site: Site, kind: ThingKind, ids: readonly string[]): Site {
+  const gone = new Set(ids)
+  const kept = <T extends { readonly id: string }>(of: ThingKind, things: T[]): T[] =>
+    of === kind ? things.filter(({ id }) => !gone.has(id)) : things
+  const members = kind === 'cover' ? site.members.map((each) => ownHeights(site, each, gone)) : site.members
+  return {
+    ...site,
+    covers: kept('cover', site.covers),
+    members: kept('member', members),
+    walls: kept('wall', site.walls),
+    poles: kept('pole', site.poles),
+    obstacles: kept('obstacle', site.obstacles),
+    tables: kept('table', site.tables),
+    levels: kept('level', site.levels),
+    seats: kept('seat', site.seats),
+    dimensions: kind === 'level' ? site.dimensions : withoutMoves(site.dimensions, kind, gone),
+  }
+}
 
-/** The site with one member moved by (dx, dy), m; an underside that follows a cover follows it at the new place. */
-export const moveMember = (site: Site, id: string, dx: number, dy: number): Site =>
-  changeMember(site, id, ({ from, to }) => ({ from: shifted(from, dx, dy), to: shifted(to, dx, dy) }))
+function ownHeights(site: Site, member: Member, gone: ReadonlySet<string>): Member {
+  if (!('follows' in member.underside) || !gone.has(member.underside.follows)) return member
+  const [from, to] = [member.from, member.to].map(([x, y]) => undersideAt(site, member, x, y))
+  if (from === null || to === null || from === undefined || to === undefined) return member
+  return { ...member, underside: { from: roundLength(from), to: roundLength(to) } }
+}
 
-/** The site with one end of a member put at a point. */
-export const moveMemberEnd = (site: Site, id: string, end: 'from' | 'to', at: Vec2): Site =>
-  changeMember(site, id, () => ({ [end]: shifted(at, 0, 0) }))
-
-/** The site with some facts of one member replaced, given or worked out from the member as it is. */
-export const changeMember = (
-  site: Site,
-  id: string,
-  facts: Partial<Omit<Member, 'id'>> | ((member: Member) => Partial<Omit<Member, 'id'>>),
-): Site => ({
-  ...site,
-  members: site.members.map((member) =>
-    member.id === id ? { ...member, ...(typeof facts === 'function' ? facts(member) : facts) } : member,
-  ),
-})
-
-/** The site without one member, and without what dimensions said about it. Heaters that name it become unsupported. */
-export const removeMember = (site: Site, id: string): Site => ({
-  ...site,
-  members: site.members.filter((member) => member.id !== id),
-  dimensions: withoutMoves(site.dimensions, 'member', [id]),
-})
+function withoutMoves(dimensions: Dimension[], of: Dimension['moves'][number]['of'], gone: ReadonlySet<string>) {
+  return dimensions.map((dimension) => {
+    const moves = dimension.moves.filter((move) => move.of !== of || !gone.has(move.id))
+    return moves.length === dimension.moves.length ? dimension : { ...dimension, moves }
+  })
+}
 
 /** Copies of a member at equal spacing: `count` of them, each (dx, dy) m from the one before, in one step. */
 export function repeatMember(site: Site, id: string, dx: number, dy: number, count: number): Site {
@@ -81,15 +165,8 @@ export function repeatMember(site: Site, id: string, dx: number, dy: number, cou
   let repeated = site
   for (let i = 1; i <= count; i++) {
     const copy = unusedId(repeated, 'member')
-    repeated = addMember(repeated, { ...original, id: copy, name: copy.replace('-', ' ') })
-    repeated = moveMember(repeated, copy, dx * i, dy * i)
+    const step = { dx: dx * i, dy: dy * i }
+    repeated = addThing(repeated, 'member', movedMember({ ...original, id: copy, name: copy.replace('-', ' ') }, step))
   }
   return repeated
-}
-
-function withoutMoves(dimensions: Dimension[], of: 'seat' | 'member', ids: readonly string[]): Dimension[] {
-  return dimensions.map((dimension) => {
-    const moves = dimension.moves.filter((move) => move.of !== of || !ids.includes(move.id))
-    return moves.length === dimension.moves.length ? dimension : { ...dimension, moves }
-  })
 }

@@ -11,21 +11,28 @@ export function TableMark({ table, view, pen }: { table: Table; view: PlanView; 
   const height = table.size[1] * view.scale
   const fits =
     textWidth(table.id, pen.text, 500) + 6 < Math.max(width, height) && Math.min(width, height) > pen.text + 3
+  const look = {
+    fill: pen.theme === 'dusk' ? pen.colours.ground : 'none',
+    fillOpacity: pen.theme === 'dusk' ? 0.22 : undefined,
+    stroke: pen.colours.line,
+    strokeWidth: 0.8 * pen.k,
+    opacity: 0.9,
+  }
   return (
     <g data-table={table.id}>
-      <rect
-        x={x - width / 2}
-        y={y - height / 2}
-        width={width}
-        height={height}
-        rx={0.07 * view.scale}
-        transform={table.turnDeg ? `rotate(${-table.turnDeg} ${x} ${y})` : undefined}
-        fill={pen.theme === 'dusk' ? pen.colours.ground : 'none'}
-        fillOpacity={pen.theme === 'dusk' ? 0.22 : undefined}
-        stroke={pen.colours.line}
-        strokeWidth={0.8 * pen.k}
-        opacity={0.9}
-      />
+      {table.form === 'round' ? (
+        <circle cx={x} cy={y} r={width / 2} {...look} />
+      ) : (
+        <rect
+          x={x - width / 2}
+          y={y - height / 2}
+          width={width}
+          height={height}
+          rx={0.07 * view.scale}
+          transform={table.turnDeg ? `rotate(${-table.turnDeg} ${x} ${y})` : undefined}
+          {...look}
+        />
+      )}
       {fits ? (
         <Words
           x={x}

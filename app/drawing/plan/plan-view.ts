@@ -42,7 +42,7 @@ export function extentOf(outline: readonly Vec2[]): Extent {
  * drawing is as high as the floor and its margins need. The floor stands in the middle of the room it has.
  */
 export function planViewOf(
-  site: Site,
+  site: Pick<Site, 'floor'>,
   width: number,
   height?: number,
   margins: PlanMargins = workingMargins,

@@ -8,11 +8,13 @@ interface LengthInputProps {
   readonly min?: number
   readonly max?: number
   readonly hint?: string
+  readonly aside?: string
+  readonly error?: string | null
   readonly disabled?: boolean
   readonly onCommit: (metres: number) => void
 }
 
-/** A length of the site in the person's units; within 1000 m unless said otherwise. */
+/** A length in the person's units that is not part of the site yet; within 1000 m unless said otherwise. */
 export function LengthInput({ units, min = -1000, max = 1000, ...field }: LengthInputProps) {
   return (
     <LengthField

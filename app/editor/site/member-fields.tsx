@@ -1,119 +1,105 @@
 import { useState } from 'react'
-import { changeMember, moveMemberEnd, repeatMember } from '#app/domain/site/edits.ts'
-import { materialSchema, type Member, type Site } from '#app/domain/site/site.ts'
+import { changeMember, repeatMember } from '#app/domain/site/edits.ts'
+import { memberLength } from '#app/domain/site/member.ts'
+import { refusalOf } from '#app/domain/site/site-faults.ts'
+import type { Member } from '#app/domain/site/site.ts'
+import { formatLength } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
-import { SelectField, TextField } from '#app/components/field.tsx'
+import { TextField } from '#app/components/field.tsx'
+import { chosenThing } from '#app/editor/site/choice.ts'
+import { useSiteEditing } from '#app/editor/site/editing.ts'
+import { MaterialInput, PickInput, TextInput } from '#app/editor/site/fact-inputs.tsx'
+import { FieldGrid, FieldsFrame } from '#app/editor/site/fields-frame.tsx'
+import { putHandle } from '#app/editor/site/handles.ts'
 import { LengthInput } from '#app/editor/site/length-input.tsx'
+import { LoadInput } from '#app/editor/site/load-input.tsx'
+import { SizeInput } from '#app/editor/site/size-input.tsx'
 
 interface MemberFieldsProps {
-  readonly site: Site
   readonly member: Member
-  readonly readOnly: boolean
-  readonly onChange: (edit: (site: Site) => Site) => void
   readonly onRemove: () => void
 }
 
 /** Every fact of one beam, rafter, joist or purlin. */
-export function MemberFields({ site, member, readOnly, onChange, onRemove }: MemberFieldsProps) {
-  const units = site.displayUnits
+export function MemberFields({ member, onRemove }: MemberFieldsProps) {
+  const { site, readOnly } = useSiteEditing()
   const { id } = member
-  const set = (facts: Partial<Omit<Member, 'id'>>) => onChange((old) => changeMember(old, id, facts))
-  const end = (which: 'from' | 'to', axis: 0 | 1) => (
-    <LengthInput
-      label={`${which === 'from' ? 'From' : 'To'} ${axis === 0 ? 'x' : 'y'}`}
-      units={units}
-      value={member[which][axis]}
-      disabled={readOnly}
-      onCommit={(metres) => {
-        const [x, y] = member[which]
-        onChange((old) => moveMemberEnd(old, id, which, axis === 0 ? [metres, y] : [x, metres]))
-      }}
-    />
-  )
-  const size = (label: string, name: 'width' | 'depth') => (
-    <LengthInput
+  const end = (part: 0 | 1, axis: 0 | 1) => {
+    const [x, y] = part === 0 ? member.from : member.to
+    return (
+      <SizeInput
+        label={`${part === 0 ? 'From' : 'To'} ${axis === 0 ? 'x' : 'y'}`}
+        value={axis === 0 ? x : y}
+        edit={(old, metres) => putHandle(old, chosenThing('member', id), part, axis === 0 ? [metres, y] : [x, metres])}
+      />
+    )
+  }
+  const section = (label: string, name: 'width' | 'depth') => (
+    <SizeInput
       label={label}
-      units={units}
       value={member[name]}
       min={0.001}
       max={2}
-      disabled={readOnly}
-      onCommit={(metres) => set({ [name]: metres })}
+      edit={(old, metres) => changeMember(old, id, { [name]: metres })}
     />
   )
   return (
-    <section aria-labelledby="chosen-title" className="border-b border-rule pb-4">
-      <header className="mb-2 flex items-center justify-between">
-        <h2 id="chosen-title" className="text-sm font-strong">
-          {member.name}
-        </h2>
-        {!readOnly && (
-          <Button kind="danger" size="small" icon="remove" onClick={onRemove}>
-            Remove
-          </Button>
-        )}
-      </header>
-      <div key={id} className="grid grid-cols-2 gap-x-3 gap-y-2.5 tablet:grid-cols-4">
-        {end('from', 0)}
-        {end('from', 1)}
-        {end('to', 0)}
-        {end('to', 1)}
-        <Underside site={site} member={member} readOnly={readOnly} onSet={(underside) => set({ underside })} />
-        {size('Wide', 'width')}
-        {size('Deep', 'depth')}
-        <SelectField
-          label="Material"
-          value={member.material}
-          disabled={readOnly}
-          hint={member.material === 'unknown' ? 'Judged as combustible' : ''}
-          options={materialSchema.options.map((value) => ({ value, label: value }))}
-          onChange={(event) => {
-            const read = materialSchema.safeParse(event.target.value)
-            if (read.success) set({ material: read.data })
-          }}
+    <FieldsFrame
+      title={member.name}
+      note={`${formatLength(memberLength(member), site.displayUnits)} long in plan`}
+      onRemove={onRemove}
+    >
+      <FieldGrid key={id}>
+        <TextInput label="Name" value={member.name} edit={(old, name) => changeMember(old, id, { name })} />
+        <TextInput label="Kind and section" value={member.kind} edit={(old, kind) => changeMember(old, id, { kind })} />
+        <MaterialInput value={member.material} edit={(old, material) => changeMember(old, id, { material })} />
+        {end(0, 0)}
+        {end(0, 1)}
+        {end(1, 0)}
+        {end(1, 1)}
+        {section('Wide', 'width')}
+        {section('Deep', 'depth')}
+        <Underside member={member} />
+        <LoadInput
+          value={member.allowedPointLoad}
+          edit={(old, allowedPointLoad) => changeMember(old, id, { allowedPointLoad })}
         />
-      </div>
-      {!readOnly && (
-        <Repeat site={site} onRepeat={(dx, count) => onChange((old) => repeatMember(old, id, dx, 0, count))} />
-      )}
-    </section>
+        <TextInput
+          label="What is known of the load"
+          value={member.loadStatus}
+          edit={(old, loadStatus) => changeMember(old, id, { loadStatus })}
+        />
+      </FieldGrid>
+      {!readOnly && <Repeat member={member} />}
+    </FieldsFrame>
   )
 }
 
-interface UndersideProps {
-  site: Site
-  member: Member
-  readOnly: boolean
-  onSet: (underside: Member['underside']) => void
-}
-
-function Underside({ site, member: { underside }, readOnly, onSet }: UndersideProps) {
+function Underside({ member: { id, underside } }: { member: Member }) {
+  const { site } = useSiteEditing()
+  const follows = 'follows' in underside ? underside.follows : ''
   const heights = 'follows' in underside ? null : underside
-  const options = [
-    { value: '', label: 'its own heights' },
-    ...site.covers.map(({ id, name }) => ({ value: id, label: `under ${name}` })),
-  ]
   const height = (label: string, name: 'from' | 'to') =>
     heights && (
-      <LengthInput
+      <SizeInput
         label={label}
-        units={site.displayUnits}
         value={heights[name]}
         min={-10}
         max={100}
-        disabled={readOnly}
-        onCommit={(metres) => onSet({ ...heights, [name]: metres })}
+        edit={(old, metres) => changeMember(old, id, { underside: { ...heights, [name]: metres } })}
       />
     )
   return (
     <>
-      <SelectField
+      <PickInput
         label="Underside"
-        value={'follows' in underside ? underside.follows : ''}
-        disabled={readOnly}
-        options={options}
-        onChange={(event) =>
-          onSet(event.target.value === '' ? { from: 2.6, to: 2.6 } : { follows: event.target.value })
+        value={follows}
+        options={[
+          { value: '', label: 'its own heights' },
+          ...site.covers.map((cover) => ({ value: cover.id, label: `under ${cover.name}` })),
+        ]}
+        edit={(old, cover) =>
+          changeMember(old, id, { underside: cover === '' ? { from: 2.6, to: 2.6 } : { follows: cover } })
         }
       />
       {height('Underside at from', 'from')}
@@ -122,30 +108,39 @@ function Underside({ site, member: { underside }, readOnly, onSet }: UndersidePr
   )
 }
 
-function Repeat({ site, onRepeat }: { site: Site; onRepeat: (dx: number, count: number) => void }) {
+/** Copies at a spacing square to the member: along x for one that runs away from the wall, along y for one beside it. */
+function Repeat({ member }: { member: Member }) {
+  const { site, change } = useSiteEditing()
   const [spacing, setSpacing] = useState<number | null>(null)
   const [count, setCount] = useState('1')
   const many = Number(count)
-  const ready = spacing !== null && spacing !== 0 && Number.isInteger(many) && many >= 1 && many <= 50
+  const counts = Number.isInteger(many) && many >= 1 && many <= 50
+  const alongX = Math.abs(member.to[1] - member.from[1]) >= Math.abs(member.to[0] - member.from[0])
+  const by = (metres: number) => repeatMember(site, member.id, alongX ? metres : 0, alongX ? 0 : metres, many)
+  const refusal = spacing !== null && spacing !== 0 && counts ? refusalOf(site, by(spacing)) : null
   return (
-    <div className="mt-3 grid grid-cols-2 items-start gap-x-3 gap-y-2 tablet:grid-cols-4">
+    <div className="mt-3 grid grid-cols-2 items-start gap-x-3 gap-y-2 tablet:grid-cols-4 wide:grid-cols-3">
       <LengthInput
-        label="Repeat along x every"
+        label={`Repeat along ${alongX ? 'x' : 'y'} every`}
         units={site.displayUnits}
         value={spacing}
         min={-100}
         max={100}
+        error={refusal?.message ?? null}
         onCommit={setSpacing}
       />
       <TextField
         label="Times"
         inputMode="numeric"
         value={count}
-        error={Number.isInteger(many) && many >= 1 && many <= 50 ? null : 'Between 1 and 50.'}
+        error={counts ? null : 'Between 1 and 50.'}
         onChange={(event) => setCount(event.target.value)}
       />
       <p className="pt-4">
-        <Button disabled={!ready} onClick={() => spacing !== null && onRepeat(spacing, many)}>
+        <Button
+          disabled={spacing === null || spacing === 0 || !counts || refusal !== null}
+          onClick={() => spacing !== null && change(() => by(spacing))}
+        >
           Repeat
         </Button>
       </p>

@@ -1,26 +1,36 @@
-import { useEffect, useMemo, useRef, useState, type KeyboardEvent, type PointerEvent } from 'react'
+import { memo, useEffect, useMemo, useRef, useState, type RefObject } from 'react'
+import { refusalOf } from '#app/domain/site/site-faults.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 import { irradianceScale } from '#app/drawing/heat/quantity.ts'
-import { screenPen } from '#app/drawing/pen.ts'
+import { screenPen, type Pen } from '#app/drawing/pen.ts'
+import { CoverMark, LevelMark } from '#app/drawing/plan/cover-mark.tsx'
 import { Plan } from '#app/drawing/plan/plan-drawing.tsx'
-import { seatRadius } from '#app/drawing/plan/seat.tsx'
-import { toScreen, toSite, workingMargins, type PlanView } from '#app/drawing/plan/plan-view.ts'
+import { workingMargins, type PlanView } from '#app/drawing/plan/plan-view.ts'
+import { SizeTags } from '#app/drawing/plan/size-tags.tsx'
 import { IconButton } from '#app/components/button.tsx'
-import { chosenAfterClick, chosenWords, moveChosen, type Chosen } from '#app/editor/site/chosen.ts'
-import { keyActionOf, type KeyAction } from '#app/editor/tools/keys.ts'
-import { usePlanView } from '#app/editor/use-plan-view.ts'
+import { pointedStore } from '#app/editor/pointed.ts'
+import type { Chosen } from '#app/editor/site/choice.ts'
+import { chosenWords } from '#app/editor/site/chosen.ts'
+import { useSiteEditing } from '#app/editor/site/editing.ts'
+import { HandleMarks } from '#app/editor/site/handle-marks.tsx'
+import { PointedHeights } from '#app/editor/site/pointed-heights.tsx'
+import { ChosenMarks, ThingMarks } from '#app/editor/site/thing-mark.tsx'
+import { useFittedFloor } from '#app/editor/site/use-fitted-floor.ts'
+import { useSiteGestures, type SiteDraft, type SiteHand } from '#app/editor/site/use-site-gestures.ts'
+import { useSiteKeys } from '#app/editor/site/use-site-keys.ts'
+import type { KeyAction } from '#app/editor/tools/keys.ts'
+import { usePlanView, type PlanViewing } from '#app/editor/use-plan-view.ts'
 import { useSize } from '#app/editor/use-size.ts'
 
 interface SitePlanProps {
-  readonly site: Site
   readonly theme: 'dusk' | 'day'
   readonly chosen: Chosen | null
-  readonly readOnly: boolean
-  /** What a click on the floor adds; null when it only lets go. */
-  readonly adding: 'seat' | 'member' | null
+  /** Something waits for a click on the floor. */
+  readonly adding: boolean
+  /** Every named size with its tolerance and source; assumed ones show always. */
+  readonly sizes: boolean
   readonly onChoose: (chosen: Chosen | null) => void
-  readonly onMove: (chosen: Chosen, dx: number, dy: number) => void
   readonly onAdd: (at: Vec2) => void
   readonly onKey: (action: KeyAction) => boolean
 }
@@ -29,128 +39,81 @@ const noLayout = { title: '', heaters: [] }
 const noModels = new Map<string, never>()
 const noSigns = new Map<string, never>()
 
-interface Drag {
-  readonly chosen: Chosen
-  readonly from: Vec2
-  readonly to: Vec2
-  readonly moved: boolean
-}
-
-/** Pixels a pointer moves before it is a drag. */
-const slack = 4
-const rounded = (metres: number): number => Math.round(metres * 100) / 100
-
-/** The plan of the cold site: seats and members are chosen, dragged and nudged; the floor is clicked to add one. */
-export function SitePlan(props: SitePlanProps) {
-  const { site, theme, chosen, readOnly, adding, onChoose, onMove, onAdd, onKey } = props
+/** The plan of the cold site: everything is chosen, dragged and nudged; corners and ends move by themselves. */
+export function SitePlan({ theme, chosen, adding, sizes, onChoose, onAdd, onKey }: SitePlanProps) {
+  const { site, readOnly, change } = useSiteEditing()
   const box = useRef<HTMLDivElement>(null)
-  const svg = useRef<SVGSVGElement>(null)
-  const moving = useRef<SVGGElement>(null)
+  const ground = useRef<SVGSVGElement>(null)
+  const moving = useRef<HTMLDivElement>(null)
   const size = useSize(box, { width: 860, height: 560 })
-  const viewing = usePlanView(site, size, workingMargins, moving)
-  const [drag, setDrag] = useState<Drag | null>(null)
-  const pan = useRef<Vec2 | null>(null)
+  const viewing = usePlanView(useFittedFloor(site), size, workingMargins, moving)
+  const [draft, setDraft] = useState<SiteDraft | null>(null)
+  const [note, setNote] = useState<string | null>(null)
+  const [pointed] = useState(pointedStore)
   const pen = useMemo(() => screenPen(theme), [theme])
-  const quantity = useMemo(() => irradianceScale(theme, { low: 150, high: 350 }), [theme])
-  const shown = drag?.moved
-    ? moveChosen(site, drag.chosen, rounded(drag.to[0] - drag.from[0]), rounded(drag.to[1] - drag.from[1]))
-    : site
 
-  useEffect(() => {
-    const element = svg.current
-    const turned = (event: WheelEvent) => {
-      event.preventDefault()
-      const place = element?.getBoundingClientRect()
-      const at: Vec2 = [event.clientX - (place?.left ?? 0), event.clientY - (place?.top ?? 0)]
-      if (event.ctrlKey || Math.abs(event.deltaX) < 1) viewing.enlargeAt(Math.exp(-event.deltaY / 400), at)
-      else viewing.shiftBy(-event.deltaX, -event.deltaY)
-    }
-    element?.addEventListener('wheel', turned, { passive: false })
-    return () => element?.removeEventListener('wheel', turned)
-  })
-
-  const screenOf = (event: PointerEvent): Vec2 => {
-    const place = svg.current?.getBoundingClientRect()
-    return [event.clientX - (place?.left ?? 0), event.clientY - (place?.top ?? 0)]
-  }
-  const siteOf = (event: PointerEvent) => toSite(viewing.wanted(), screenOf(event))
-
-  const down = (event: PointerEvent<SVGSVGElement>) => {
-    if (event.button > 0) return
-    svg.current?.setPointerCapture(event.pointerId)
-    const hit = hitOf(event.target)
-    if (!hit) {
-      pan.current = screenOf(event)
-      return
-    }
-    const kept = chosen?.kind === 'seat' && hit.kind === 'seat' && chosen.ids.includes(hit.ids[0] ?? '')
-    const next = kept && !event.shiftKey ? chosen : chosenAfterClick(chosen, hit, event.shiftKey)
+  const keep: SiteHand['onKeep'] = (edit, next) => {
+    const refusal = refusalOf(site, edit(site))
+    setNote(refusal && `Left as it was. ${refusal.message}`)
+    if (refusal) return
+    change(edit)
     onChoose(next)
-    if (!readOnly) setDrag({ chosen: next, from: siteOf(event), to: siteOf(event), moved: false })
   }
-  const move = (event: PointerEvent<SVGSVGElement>) => {
-    if (drag) {
-      const to = siteOf(event)
-      const far = Math.hypot(to[0] - drag.from[0], to[1] - drag.from[1]) * viewing.view.scale > slack
-      setDrag({ ...drag, to, moved: drag.moved || far })
-    } else if (pan.current && event.buttons === 1 && !adding) {
-      const at = screenOf(event)
-      viewing.shiftBy(at[0] - pan.current[0], at[1] - pan.current[1])
-      pan.current = at
-    }
+  const common = { site, chosen, readOnly, viewing, onDraft: setDraft, onKeep: keep }
+  const choose = (next: Chosen | null) => {
+    setNote(null)
+    onChoose(next)
   }
-  const up = (event: PointerEvent<SVGSVGElement>) => {
-    if (drag?.moved) onMove(drag.chosen, rounded(drag.to[0] - drag.from[0]), rounded(drag.to[1] - drag.from[1]))
-    else if (!drag && pan.current && adding) onAdd(siteOf(event))
-    else if (!drag && pan.current && !hitOf(event.target)) onChoose(null)
-    setDrag(null)
-    pan.current = null
-  }
-  const key = (event: KeyboardEvent) => {
-    const action = keyActionOf(event)
-    if (!action) return
-    if (action.kind === 'let go' && drag) setDrag(null)
-    else if (action.kind === 'enlarge') viewing.enlargeAt(action.factor)
-    else if (action.kind === 'whole plan') viewing.showAll()
-    else if (!onKey(action)) return
-    event.preventDefault()
-  }
+  const gestures = useSiteGestures(box, {
+    ...common,
+    adding,
+    onChoose: choose,
+    onAdd,
+    onPoint: (at) => pointed.set(at && { at, screen: at, seatId: null, by: 'pointer' }),
+  })
+  const keys = useSiteKeys({ ...common, dropGesture: gestures.drop, onKey })
+  useWheel(box, viewing)
+  useHidden(ground, draft?.chosen ?? null)
 
+  const shown = draft ?? (chosen && { site, chosen })
+  const { view } = viewing
+  const sheet = { width: view.width, height: view.height, className: 'absolute inset-0 overflow-visible' }
   return (
     <div
       ref={box}
-      className={`relative h-72 overflow-hidden rounded-md border border-rule tablet:h-[min(60dvh,32rem)] ${theme === 'day' ? 'bg-white' : 'bg-dusk-ground'}`}
+      className={`relative h-72 overflow-hidden rounded-md border border-rule select-none tablet:h-[min(60dvh,32rem)] ${theme === 'day' ? 'bg-white' : 'bg-dusk-ground'}`}
     >
-      {/* The drawing is moved in with the keyboard as a whole; its things are rows of the tables beside it. */}
-      <svg
-        ref={svg}
-        width={size.width}
-        height={size.height}
-        tabIndex={0}
-        role="application"
-        aria-label={`Plan of the site. ${chosen ? `${chosenWords(site, chosen)} chosen: arrows move by 10 mm, with Shift 100 mm.` : 'Choose seats and members in the tables.'}`}
-        className={`block touch-none select-none ${adding ? 'cursor-crosshair' : ''}`}
-        onPointerDown={down}
-        onPointerMove={move}
-        onPointerUp={up}
-        onPointerCancel={() => setDrag(null)}
-        onKeyDown={key}
-      >
-        <g ref={moving}>
-          <Plan
-            name="site-plan"
-            site={shown}
-            layout={noLayout}
-            models={noModels}
-            view={viewing.view}
-            pen={pen}
-            quantity={quantity}
-            picture={null}
-            signs={noSigns}
-          />
-          {chosen && <ChosenMarks site={shown} chosen={chosen} view={viewing.view} theme={theme} />}
-        </g>
-      </svg>
+      <div ref={moving} className="absolute inset-0 origin-top-left">
+        <svg ref={ground} {...sheet} aria-hidden="true">
+          <SiteGround site={site} view={view} pen={pen} theme={theme} sizes={sizes} />
+        </svg>
+        {/* The drawing is moved in with the keyboard as a whole; its things are rows of the lists beside it. */}
+        <svg
+          {...sheet}
+          tabIndex={0}
+          role="application"
+          aria-label={`Plan of the site. ${chosen ? `${chosenWords(site, chosen)} chosen: arrows move by 10 mm, with Shift 100 mm.` : 'Choose things in the lists.'}`}
+          className={`${sheet.className} touch-none [will-change:transform] ${adding ? 'cursor-crosshair' : ''}`}
+          {...gestures.handlers}
+          {...keys}
+        >
+          <rect x={-20_000} y={-20_000} width={40_000} height={40_000} fill="transparent" />
+          <g pointerEvents="none">
+            {draft && <ThingMarks {...draft} view={view} pen={pen} />}
+            {shown && <ChosenMarks {...shown} view={view} pen={pen} />}
+            {shown && !readOnly && <HandleMarks {...shown} view={view} pen={pen} />}
+          </g>
+        </svg>
+      </div>
+      <PointedHeights store={pointed} site={site} />
+      {note && (
+        <p
+          role="status"
+          className="absolute inset-x-4 top-12 rounded-sm bg-paper-raised px-2 py-1 text-center text-clay shadow-lift"
+        >
+          {note}
+        </p>
+      )}
       <p className="absolute top-2 right-2 flex rounded-md bg-paper-raised/90 print:hidden">
         <IconButton icon="minus" label="Smaller" onClick={() => viewing.enlargeAt(0.8)} />
         <IconButton icon="plus" label="Larger" onClick={() => viewing.enlargeAt(1.25)} />
@@ -160,49 +123,74 @@ export function SitePlan(props: SitePlanProps) {
   )
 }
 
-function hitOf(target: EventTarget): Chosen | null {
-  if (!(target instanceof Element)) return null
-  const seat = target.closest('[data-seat]')?.getAttribute('data-seat')
-  if (seat) return { kind: 'seat', ids: [seat] }
-  const member = target.closest('[data-member]')?.getAttribute('data-member')
-  return member ? { kind: 'member', id: member } : null
+interface GroundProps {
+  readonly site: Site
+  readonly view: PlanView
+  readonly pen: Pen
+  readonly theme: 'dusk' | 'day'
+  readonly sizes: boolean
 }
 
-interface MarksProps {
-  site: Site
-  chosen: Chosen
-  view: PlanView
-  theme: 'dusk' | 'day'
-}
-
-function ChosenMarks({ site, chosen, view, theme }: MarksProps) {
-  const stroke = theme === 'day' ? 'var(--color-ember)' : 'var(--color-dusk-select)'
-  if (chosen.kind === 'member') {
-    const member = site.members.find(({ id }) => id === chosen.id)
-    if (!member) return null
-    const [a, b] = [toScreen(view, member.from), toScreen(view, member.to)]
-    return (
-      <line
-        x1={a[0]}
-        y1={a[1]}
-        x2={b[0]}
-        y2={b[1]}
-        stroke={stroke}
-        strokeWidth="9"
-        strokeOpacity="0.45"
-        pointerEvents="none"
-      />
-    )
-  }
-  const r = seatRadius(view, screenPen(theme), false) + 7
+/** Everything that stays while something is dragged: drawn anew only when the site or the view is another. */
+const SiteGround = memo(function SiteGround({ site, view, pen, theme, sizes }: GroundProps) {
+  const quantity = useMemo(() => irradianceScale(theme, { low: 150, high: 350 }), [theme])
   return (
-    <g fill="none" stroke={stroke} strokeWidth="1.8" pointerEvents="none">
-      {site.seats
-        .filter(({ id }) => chosen.ids.includes(id))
-        .map((seat) => {
-          const [x, y] = toScreen(view, [seat.x, seat.y])
-          return <circle key={seat.id} cx={x} cy={y} r={r} />
-        })}
-    </g>
+    <>
+      <Plan
+        name="site-plan"
+        {...{ site, view, pen, quantity }}
+        layout={noLayout}
+        models={noModels}
+        picture={null}
+        signs={noSigns}
+      />
+      {site.levels.map((level) => (
+        <LevelMark key={level.id} level={level} view={view} pen={pen} units={site.displayUnits} />
+      ))}
+      {site.covers.map((cover) => (
+        <CoverMark key={cover.id} cover={cover} view={view} pen={pen} />
+      ))}
+      <SizeTags site={site} view={view} pen={pen} all={sizes} />
+    </>
   )
+})
+
+/** Hides what is being dragged where it was, without drawing the rest anew. */
+function useHidden(ground: RefObject<SVGSVGElement | null>, chosen: Chosen | null) {
+  const key = chosen && `${chosen.kind} ${chosen.ids.join(' ')}`
+  const latest = useRef(chosen)
+  useEffect(() => {
+    latest.current = chosen
+  })
+  useEffect(() => {
+    const { kind, ids } = latest.current ?? { kind: 'floor', ids: [] }
+    if (key === null || kind === 'floor') return
+    const marks = ids.flatMap(
+      (id) => ground.current?.querySelector<SVGElement>(`[data-${kind}="${CSS.escape(id)}"]`) ?? [],
+    )
+    for (const mark of marks) mark.style.visibility = 'hidden'
+    return () => {
+      for (const mark of marks) mark.style.visibility = ''
+    }
+  }, [ground, key])
+}
+
+/** A wheel and a pinch enlarge about the pointer, two fingers on a pad shift. */
+function useWheel(box: RefObject<HTMLDivElement | null>, viewing: PlanViewing) {
+  const latest = useRef(viewing)
+  useEffect(() => {
+    latest.current = viewing
+  })
+  useEffect(() => {
+    const element = box.current
+    const turned = (event: WheelEvent) => {
+      event.preventDefault()
+      const place = element?.getBoundingClientRect()
+      const at: Vec2 = [event.clientX - (place?.left ?? 0), event.clientY - (place?.top ?? 0)]
+      if (event.ctrlKey || Math.abs(event.deltaX) < 1) latest.current.enlargeAt(Math.exp(-event.deltaY / 400), at)
+      else latest.current.shiftBy(-event.deltaX, -event.deltaY)
+    }
+    element?.addEventListener('wheel', turned, { passive: false })
+    return () => element?.removeEventListener('wheel', turned)
+  }, [box])
 }
