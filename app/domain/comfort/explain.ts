@@ -1,5 +1,6 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
 import { convectiveCoefficient } from '#app/domain/comfort/feels-like.ts'
+import { indoorsAt } from '#app/domain/comfort/indoors.ts'
 import { effectiveAreaShare } from '#app/domain/comfort/projected-area.ts'
 import { bodyPoint, headPoint } from '#app/domain/comfort/seat-heat.ts'
 import { conditionsAt, warmthOfSeat, type SeatWarmth, type WarmthInput } from '#app/domain/comfort/seat-warmth.ts'
@@ -50,6 +51,8 @@ export interface Explanation {
   readonly formula: string
   readonly source: string
   readonly notModelled: string
+  /** Of a feels-like temperature: what it would take to feel like indoors, in a sentence. */
+  readonly indoors: string | null
   readonly inputs: readonly ExplainedInput[]
   readonly parts: readonly ExplainedPart[]
   readonly byHeater: readonly { readonly heaterId: string; readonly value: number; readonly share: number }[]
@@ -101,6 +104,7 @@ export function explainSeat(input: WarmthInput, seatId: string, figure: SeatFigu
     base: feelsLike ? warmth.feelsLike[figure.wind].before : 0,
     ...formulas[figure.quantity],
     notModelled,
+    indoors: feelsLike ? indoorsAt(warmth, input.brief, figure.wind).sentence : null,
     inputs: [
       ...seatInputs(warmth, figure),
       ...(feelsLike ? feelingInputs(warmth, input.brief, figure) : []),

@@ -2,7 +2,7 @@ import type { Brief } from '#app/domain/brief/brief.ts'
 import { headCaution } from '#app/domain/comfort/cautions.ts'
 import { fieldToFeelLike } from '#app/domain/comfort/feels-like.ts'
 import { effectiveAreaShare, projectedAreaFactor } from '#app/domain/comfort/projected-area.ts'
-import { conditionsAt, type SeatWarmth, type WindName } from '#app/domain/comfort/seat-warmth.ts'
+import { conditionsAt, type SeatFigures, type WindName } from '#app/domain/comfort/seat-warmth.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
 
 /** What "like indoors" means here, °C of feels-like (house rule, no published source). */
@@ -26,7 +26,7 @@ const mostAbsorbed = 0.95
  * Heat that would make a seat feel like indoors, against the house caution and the stop line: feels-like is linear in
  * the heat, so the whole layout is thought stronger by one factor.
  */
-export function indoorsAt(warmth: SeatWarmth, brief: Brief, wind: WindName): Indoors {
+export function indoorsAt(warmth: SeatFigures, brief: Brief, wind: WindName): Indoors {
   const { seat, field, head } = warmth
   const conditions = conditionsAt(seat, brief, warmth.surroundings, wind)
   const needed = fieldToFeelLike(indoorsTemperature, conditions)

@@ -2,6 +2,7 @@ import type { Brief } from '#app/domain/brief/brief.ts'
 import { assumptionOf } from '#app/domain/brief/brief-fields.ts'
 import type { LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
 import { headCaution } from '#app/domain/comfort/cautions.ts'
+import { indoorsAt } from '#app/domain/comfort/indoors.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { isStopped } from '#app/domain/rules/check-layout.ts'
@@ -87,12 +88,15 @@ function assumptions({ brief, units }: Told): string[] {
   return [`Assumed: ${brief.assumed.map((name) => assumptionOf(brief, name, units)).join('; ')}.`]
 }
 
-function withoutHeat({ variants, units }: Told): string {
+function withoutHeat({ variants, units, brief }: Told): string {
   const seat = variants[0]?.warmth[0]
   const base = 'Heaters warm people, not the air.'
   if (!seat) return base
   const [calm, windy] = [seat.feelsLike.calm.before, seat.feelsLike.design.before].map((celsius) =>
     formatQuantity(celsius, 'temperature', units, 0),
   )
-  return `${base} Without heat it feels like ${calm} out of the wind, ${windy} in it.`
+  const feel = `${base} Without heat it feels like ${calm} out of the wind, ${windy} in it.`
+  const heated = variants.flatMap(({ warmth }) => warmth.filter(({ seat }) => seat.priority !== 'not heated'))
+  const indoors = heated.some((each) => indoorsAt(each, brief, 'design').answer === 'it does')
+  return indoors || heated.length === 0 ? feel : `${feel} In that wind no seat here feels like indoors.`
 }

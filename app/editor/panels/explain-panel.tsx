@@ -72,6 +72,7 @@ function Explained({ explained, units, fluxUnit }: ExplainedProps) {
         {tolerance && <small className="ml-2 text-xs font-regular text-ink-2">± {difference(tolerance.total)}</small>}
       </p>
       {explained.unit === '°C' && <p className="text-ink-2">With the heaters off, {text(base)} at the same wind.</p>}
+      {explained.indoors && <p className="text-ink-2">{explained.indoors}</p>}
       {explained.cannotTell.length > 0 && (
         <p className="text-slate">Without {explained.cannotTell.join(', ')}: no beam data.</p>
       )}

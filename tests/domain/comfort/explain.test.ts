@@ -106,6 +106,14 @@ describe('feels-like explained', () => {
   })
 })
 
+describe('what it would take to feel like indoors', () => {
+  it('is said of a feels-like temperature at its own wind, and of nothing else', () => {
+    const cold = input({ brief: brief({ airTemperature: -5, windDesign: 2 }) })
+    expect(explained(cold, { quantity: 'feels-like', wind: 'design' }).indoors).toContain('indoors at 2.0 m/s of wind')
+    expect(explained(cold, { quantity: 'body' }).indoors).toBeNull()
+  })
+})
+
 describe('what cannot be explained', () => {
   it('has no seat, no heater or no beam data', () => {
     expect(explainSeat(input(), 'nobody', { quantity: 'body' })).toBeNull()

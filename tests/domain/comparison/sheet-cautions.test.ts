@@ -1,0 +1,19 @@
+import { describe, expect, it } from 'vitest'
+import { layoutFigures } from '#app/domain/comparison/layout-figures.ts'
+import { sheetCautions } from '#app/domain/comparison/sheet-cautions.ts'
+import { brief, heater, model, modelsOf, seat, site } from '#tests/domain/comfort/terrace.ts'
+
+const models = modelsOf(model())
+const said = (change: Parameters<typeof brief>[0]) => {
+  const place = { site: site([seat('S1')]), brief: brief(change), models }
+  const layout = { title: 'One', heaters: [heater('H1')] }
+  const variants = [{ number: 1, layout, ...layoutFigures({ ...place, layout }) }]
+  return sheetCautions({ brief: place.brief, models, units: 'metric', variants }).join(' ')
+}
+
+describe('what a sheet says of the heat', () => {
+  it('says plainly when no seat feels like indoors in the wind, and not when one does', () => {
+    expect(said({ airTemperature: 2, windDesign: 2 })).toContain('In that wind no seat here feels like indoors.')
+    expect(said({ airTemperature: 21, windDesign: 0.1 })).not.toContain('indoors')
+  })
+})
