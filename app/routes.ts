@@ -8,6 +8,8 @@ export default [
   route('jobs/:jobId', 'routes/job/variants.ts', { id: 'routes/job/first-variant' }),
   route('jobs/:jobId/brief', 'routes/job/brief.tsx'),
   route('jobs/:jobId/site', 'routes/job/site.tsx'),
+  route('jobs/:jobId/photos', 'routes/job/photos.tsx'),
+  route('jobs/:jobId/photos/:photoId', 'routes/job/photo.tsx'),
   route('jobs/:jobId/compare', 'routes/job/compare.tsx'),
   route('jobs/:jobId/compare.png', 'routes/job/compare-png.ts'),
   route('jobs/:jobId/compare.svg', 'routes/job/compare-svg.ts'),

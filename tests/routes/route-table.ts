@@ -15,6 +15,8 @@ export const reachOf: Record<string, Reach> = {
   '/jobs/:jobId': { GET: 'view' },
   '/jobs/:jobId/brief': { GET: 'view' },
   '/jobs/:jobId/site': { GET: 'view' },
+  '/jobs/:jobId/photos': { GET: 'view' },
+  '/jobs/:jobId/photos/:photoId': { GET: 'view' },
   '/jobs/:jobId/variants': { GET: 'view' },
   '/jobs/:jobId/variants/:variantId': { GET: 'view' },
   '/jobs/:jobId/variants/:variantId/sizes': { GET: 'view' },

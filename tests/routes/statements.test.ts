@@ -22,8 +22,9 @@ beforeAll(async () => {
   application = await openApplication()
   cookie = await application.signInAs('owner')
   const { rows } = await application.admin.query(
-    `select job_id as "jobId", id as "variantId" from variants where organisation_id =
-      (select id from organization where slug = 'osierfold') limit 1`,
+    `select v.job_id as "jobId", v.id as "variantId", p.id as "photoId" from variants v
+      join photos p on p.organisation_id = v.organisation_id and p.job_id = v.job_id
+      where v.organisation_id = (select id from organization where slug = 'osierfold') limit 1`,
   )
   Object.assign(ids, rows[0])
   listen()

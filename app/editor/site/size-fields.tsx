@@ -1,3 +1,4 @@
+import { Link } from 'react-router'
 import { moveDimension } from '#app/domain/site/dimension.ts'
 import { isAssumed, usualTolerance } from '#app/domain/site/size-source.ts'
 import { sizeSourceSchema, type Dimension, type Site } from '#app/domain/site/site.ts'
@@ -83,6 +84,17 @@ export function SizeFields({ size, onClose }: SizeFieldsProps) {
           >
             Forget this size
           </Button>
+        </p>
+      )}
+      {size.photo && (
+        <p className="mt-1.5">
+          <Link
+            relative="path"
+            to={`../photos/${size.photo.photoId}?at=${size.photo.measurementId}`}
+            className="underline pointer-coarse:py-3"
+          >
+            The photo, at these marks
+          </Link>
         </p>
       )}
     </section>

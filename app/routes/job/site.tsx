@@ -1,5 +1,6 @@
 import { useState } from 'react'
 import { z } from 'zod'
+import { Link } from 'react-router'
 import { can } from '#app/domain/access/roles.ts'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
 import { Button, IconButton } from '#app/components/button.tsx'
@@ -107,6 +108,9 @@ function SiteOfJob({ viewer, job, kept, readOnly }: Loaded) {
         >
           Sizes
         </Button>
+        <Link to={`/jobs/${job.id}/photos`} className="underline pointer-coarse:py-3">
+          Photos
+        </Link>
         {!readOnly && (
           <>
             <Choice

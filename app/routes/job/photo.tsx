@@ -1,0 +1,147 @@
+import { Link, useSearchParams } from 'react-router'
+import { can } from '#app/domain/access/roles.ts'
+import { addPhotoSize, replaceByPhotoSize, traceOf } from '#app/domain/photo/into-site.ts'
+import { photoMarksSchema, type PhotoMarks } from '#app/domain/photo/measurements.ts'
+import { siteSchema, type Site } from '#app/domain/site/site.ts'
+import { IconButton } from '#app/components/button.tsx'
+import { ConflictPanel } from '#app/components/conflict-panel.tsx'
+import { JobFrame } from '#app/components/page-frame.tsx'
+import { SaveState } from '#app/components/status.tsx'
+import { useToast } from '#app/components/toast.tsx'
+import { PhotoEditor } from '#app/editor/photo/photo-editor.tsx'
+import type { SizeUse } from '#app/editor/photo/use-as-size.tsx'
+import { mergedSite, siteDifferences } from '#app/editor/site/site-conflict.ts'
+import { useDocument } from '#app/editor/use-document.ts'
+import { requireJob } from '#app/server/data/jobs.server.ts'
+import { listPhotos } from '#app/server/data/photos.server.ts'
+import { findSite } from '#app/server/data/sites.server.ts'
+import { missing } from '#app/server/missing.server.ts'
+import { viewerOf } from '#app/server/viewer.server.ts'
+import type { Route } from './+types/photo'
+
+export const meta: Route.MetaFunction = ({ loaderData }) => [
+  { title: `${loaderData?.photo.name ?? 'Photo'} · ${loaderData?.job.name ?? 'Job'} · Inglefield` },
+]
+
+export async function loader({ request, params }: Route.LoaderArgs) {
+  const job = await requireJob(request, params.jobId, 'view')
+  const photos = await listPhotos(job)
+  const found = photos.find(({ id }) => id === params.photoId)
+  if (!found) throw missing(request, 'photo')
+  const { revision, site } = await findSite(job)
+  const { id, name, width, height } = found
+  return {
+    viewer: viewerOf(job.member),
+    job: { id: job.id, name: job.name },
+    photo: { id, name, width, height },
+    kept: { revision: found.revision, body: found.marks },
+    others: photos.filter((photo) => photo.id !== id).map((photo) => ({ id: photo.id, marks: photo.marks })),
+    keptSite: { revision, body: site },
+    readOnly: !can(job.member.role, 'edit-site'),
+  }
+}
+
+/** The page saves by itself; what it loaded stays until it is opened again. */
+export const shouldRevalidate = () => false
+
+export default function PhotoPage({ loaderData }: Route.ComponentProps) {
+  return <Measuring key={loaderData.photo.id} {...loaderData} />
+}
+
+function Measuring({ viewer, job, photo, kept, others, keptSite, readOnly }: Route.ComponentProps['loaderData']) {
+  const [marking, marks] = useDocument<PhotoMarks>(kept, {
+    url: `/api/photos/${photo.id}`,
+    name: 'marks',
+    schema: photoMarksSchema,
+  })
+  const [siting, siteDocument] = useDocument<Site>(keptSite, {
+    url: `/api/jobs/${job.id}/site`,
+    name: 'site',
+    schema: siteSchema,
+  })
+  const [search] = useSearchParams()
+  const toast = useToast()
+  const site = siting.history.present
+  const undoSite = { label: 'Undo', run: siteDocument.undo }
+
+  const use: SizeUse['onUse'] = ({ measurementId, ...size }, replaces) => {
+    const whole = { ...size, photo: { photoId: photo.id, measurementId } }
+    const next = replaces === null ? addPhotoSize(site, whole) : replaceByPhotoSize(site, replaces, whole)
+    if (!next) return toast({ text: 'The site cannot be like that. The size stays as it was.' })
+    siteDocument.change(() => next)
+    toast({ text: `${size.label} is among the site’s sizes`, action: undoSite })
+  }
+  const { history, status, theirs } = marking
+  const worse = siting.status.kind === 'saved' ? status : siting.status
+  const tools = (
+    <>
+      <SaveState
+        status={readOnly ? { kind: 'read-only', why: 'You read this photo' } : worse}
+        onRetry={siting.status.kind === 'saved' ? marks.retry : siteDocument.retry}
+      />
+      {!readOnly && (
+        <span className="flex">
+          <IconButton icon="undo" label="Undo" disabled={history.past.length === 0} onClick={marks.undo} />
+          <IconButton icon="redo" label="Redo" disabled={history.future.length === 0} onClick={marks.redo} />
+        </span>
+      )}
+    </>
+  )
+  return (
+    <JobFrame viewer={viewer} job={job} current="site" tools={tools}>
+      <header className="flex flex-wrap items-baseline gap-x-4 pb-1">
+        <h1 className="text-xl font-strong">{photo.name}</h1>
+        <p className="text-ink-2">
+          {photo.width} × {photo.height} px
+        </p>
+        <span className="flex-1" />
+        <Link to={`/jobs/${job.id}/photos`} className="underline pointer-coarse:py-3">
+          All photos
+        </Link>
+        <Link to={`/jobs/${job.id}/site`} className="underline pointer-coarse:py-3">
+          Site
+        </Link>
+      </header>
+      {theirs && (
+        <ConflictPanel
+          rows={[{ key: 'marks', label: 'Marks', mine: marksWords(history.present), theirs: marksWords(theirs.body) }]}
+          onSettle={(taken) => marks.settle(taken.has('marks') ? theirs.body : history.present)}
+        />
+      )}
+      {siting.theirs && (
+        <ConflictPanel
+          rows={siteDifferences(site, siting.theirs.body, siting.base)}
+          onSettle={(taken) => siting.theirs && siteDocument.settle(mergedSite(site, siting.theirs.body, taken))}
+        />
+      )}
+      <PhotoEditor
+        photo={photo}
+        picture={`/api/photos/${photo.id}/picture.jpg`}
+        marks={history.present}
+        others={others}
+        site={site}
+        readOnly={readOnly}
+        opened={search.get('at')}
+        onChange={marks.change}
+        onUndo={marks.undo}
+        onRedo={marks.redo}
+        onUse={use}
+        onTrace={({ length, origin, turnDeg }, [from, to]) => {
+          if (!from || !to) return
+          const trace = traceOf({ photoId: photo.id, height: photo.height, from, to, length, origin, turnDeg })
+          if ('error' in trace) return toast({ text: trace.error })
+          siteDocument.change((old) => ({ ...old, trace }))
+          toast({ text: 'The picture lies under the site’s plan', action: undoSite })
+        }}
+        onUntrace={() => {
+          siteDocument.change((old) => ({ ...old, trace: null }))
+          toast({ text: 'The picture is no longer under the plan', action: undoSite })
+        }}
+      />
+    </JobFrame>
+  )
+}
+
+function marksWords({ planes, measurements }: PhotoMarks): string {
+  return `${planes.length} ${planes.length === 1 ? 'plane' : 'planes'}, ${measurements.length} ${measurements.length === 1 ? 'measurement' : 'measurements'}`
+}
