@@ -8,13 +8,14 @@ import { ConflictPanel } from '#app/components/conflict-panel.tsx'
 import { JobFrame } from '#app/components/page-frame.tsx'
 import { SaveState } from '#app/components/status.tsx'
 import { useToast } from '#app/components/toast.tsx'
+import type { DocumentState } from '#app/editor/document.ts'
 import { PhotoEditor } from '#app/editor/photo/photo-editor.tsx'
 import type { SizeUse } from '#app/editor/photo/use-as-size.tsx'
 import { mergedSite, siteDifferences } from '#app/editor/site/site-conflict.ts'
+import { changedWords, statusOf } from '#app/editor/save-status.ts'
 import { useDocument } from '#app/editor/use-document.ts'
 import { requireJob } from '#app/server/data/jobs.server.ts'
-import { listPhotos } from '#app/server/data/photos.server.ts'
-import { findSite } from '#app/server/data/sites.server.ts'
+import { listPhotosWithSite } from '#app/server/data/photos.server.ts'
 import { missing } from '#app/server/missing.server.ts'
 import { viewerOf } from '#app/server/viewer.server.ts'
 import type { Route } from './+types/photo'
@@ -25,10 +26,9 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 
 export async function loader({ request, params }: Route.LoaderArgs) {
   const job = await requireJob(request, params.jobId, 'view')
-  const photos = await listPhotos(job)
+  const { photos, kept } = await listPhotosWithSite(job)
   const found = photos.find(({ id }) => id === params.photoId)
   if (!found) throw missing(request, 'photo')
-  const { revision, site } = await findSite(job)
   const { id, name, width, height } = found
   return {
     viewer: viewerOf(job.member),
@@ -36,7 +36,7 @@ export async function loader({ request, params }: Route.LoaderArgs) {
     photo: { id, name, width, height },
     kept: { revision: found.revision, body: found.marks },
     others: photos.filter((photo) => photo.id !== id).map((photo) => ({ id: photo.id, marks: photo.marks })),
-    keptSite: { revision, body: site },
+    keptSite: { revision: kept.revision, body: kept.site },
     readOnly: !can(job.member.role, 'edit-site'),
   }
 }
@@ -71,13 +71,19 @@ function Measuring({ viewer, job, photo, kept, others, keptSite, readOnly }: Rou
     siteDocument.change(() => next)
     toast({ text: `${size.label} is among the site’s sizes`, action: undoSite })
   }
-  const { history, status, theirs } = marking
-  const worse = siting.status.kind === 'saved' ? status : siting.status
+  const { history, save } = marking
+  const siteSaved = siting.save.kind === 'saved'
   const tools = (
     <>
       <SaveState
-        status={readOnly ? { kind: 'read-only', why: 'You read this photo' } : worse}
-        onRetry={siting.status.kind === 'saved' ? marks.retry : siteDocument.retry}
+        status={
+          readOnly
+            ? { kind: 'read-only', why: 'You read this photo' }
+            : siteSaved
+              ? statusOf(save, false)
+              : statusOf(siting.save, false)
+        }
+        onRetry={siteSaved ? marks.retry : siteDocument.retry}
       />
       {!readOnly && (
         <span className="flex">
@@ -102,18 +108,14 @@ function Measuring({ viewer, job, photo, kept, others, keptSite, readOnly }: Rou
           Site
         </Link>
       </header>
-      {theirs && (
+      {save.kind === 'conflict' && (
         <ConflictPanel
-          rows={[{ key: 'marks', label: 'Marks', mine: marksWords(history.present), theirs: marksWords(theirs.body) }]}
-          onSettle={(taken) => marks.settle(taken.has('marks') ? theirs.body : history.present)}
+          {...changedWords(save.conflict)}
+          rows={[marksRow(history.present, save.conflict.theirs.body)]}
+          onSettle={(taken) => marks.settle(taken.size > 0 ? save.conflict.theirs.body : history.present)}
         />
       )}
-      {siting.theirs && (
-        <ConflictPanel
-          rows={siteDifferences(site, siting.theirs.body, siting.base)}
-          onSettle={(taken) => siting.theirs && siteDocument.settle(mergedSite(site, siting.theirs.body, taken))}
-        />
-      )}
+      <SiteConflict siting={siting} onSettle={siteDocument.settle} />
       <PhotoEditor
         photo={photo}
         picture={`/api/photos/${photo.id}/picture.jpg`}
@@ -141,6 +143,31 @@ function Measuring({ viewer, job, photo, kept, others, keptSite, readOnly }: Rou
     </JobFrame>
   )
 }
+
+interface SiteConflictProps {
+  readonly siting: DocumentState<Site>
+  readonly onSettle: (site: Site) => void
+}
+
+/** The site was changed elsewhere while a size or a trace went into it. */
+function SiteConflict({ siting: { history, save }, onSettle }: SiteConflictProps) {
+  if (save.kind !== 'conflict') return null
+  const { theirs, base } = save.conflict
+  return (
+    <ConflictPanel
+      {...changedWords(save.conflict)}
+      rows={siteDifferences(history.present, theirs.body, base)}
+      onSettle={(taken) => onSettle(mergedSite(history.present, theirs.body, taken))}
+    />
+  )
+}
+
+const marksRow = (mine: PhotoMarks, theirs: PhotoMarks) => ({
+  key: 'marks',
+  label: 'Marks',
+  mine: marksWords(mine),
+  theirs: marksWords(theirs),
+})
 
 function marksWords({ planes, measurements }: PhotoMarks): string {
   return `${planes.length} ${planes.length === 1 ? 'plane' : 'planes'}, ${measurements.length} ${measurements.length === 1 ? 'measurement' : 'measurements'}`

@@ -2,6 +2,7 @@ import { and, asc, eq, isNull } from 'drizzle-orm'
 import type { Action } from '#app/domain/access/roles.ts'
 import { photoMarksSchema, type PhotoMarks } from '#app/domain/photo/measurements.ts'
 import type { OpenJob } from '#app/server/data/jobs.server.ts'
+import { readSite, type KeptSite } from '#app/server/data/sites.server.ts'
 import { isId, missing } from '#app/server/missing.server.ts'
 import { asOrganisation, own, type Transaction } from '#app/server/organisation.server.ts'
 import type { Locked } from '#app/server/saving.server.ts'
@@ -47,15 +48,24 @@ export const photoOf = (row: Omit<Photo, 'marks'> & { marks: unknown }): Photo =
 })
 
 /** The photos of a job with their marks, oldest first. */
-export function listPhotos(job: OpenJob): Promise<Photo[]> {
-  return asOrganisation(job.member.organisationId, async (tx) => {
-    const rows = await tx
-      .select(photoColumns)
-      .from(photos)
-      .where(and(own(photos), eq(photos.jobId, job.id), presentPhoto))
-      .orderBy(asc(photos.createdAt), asc(photos.id))
-    return rows.map(photoOf)
+export const listPhotos = (job: OpenJob): Promise<Photo[]> =>
+  asOrganisation(job.member.organisationId, (tx) => readPhotos(tx, job.id))
+
+/** The photos of a job, and the site that is measured in them. Throws when a job has no site: every job starts with one. */
+export const listPhotosWithSite = (job: OpenJob): Promise<{ photos: Photo[]; kept: KeptSite }> =>
+  asOrganisation(job.member.organisationId, async (tx) => {
+    const kept = await readSite(tx, job.id)
+    if (!kept) throw new Error(`Job ${job.id} has no site.`)
+    return { photos: await readPhotos(tx, job.id), kept }
   })
+
+async function readPhotos(tx: Transaction, jobId: string): Promise<Photo[]> {
+  const rows = await tx
+    .select(photoColumns)
+    .from(photos)
+    .where(and(own(photos), eq(photos.jobId, jobId), presentPhoto))
+    .orderBy(asc(photos.createdAt), asc(photos.id))
+  return rows.map(photoOf)
 }
 
 /**

@@ -34,7 +34,8 @@ export interface KeptSite {
   readonly site: Site
 }
 
-async function readSite(tx: Transaction, jobId: string): Promise<KeptSite | null> {
+/** The site of a job within a transaction that reads other things of the job too; null when there is none. */
+export async function readSite(tx: Transaction, jobId: string): Promise<KeptSite | null> {
   const [row] = await tx
     .select({ revision: sites.revision, body: sites.body })
     .from(sites)
