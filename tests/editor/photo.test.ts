@@ -40,7 +40,7 @@ describe('what a photo gives', () => {
     const { own, mean } = figure('joist spacing')
     expect('value' in own && figureWords(own, 'metric')).toBe('0.60 m ± 0.05 m')
     expect('value' in own && errorWords(own, 'metric')).toMatch(
-      /^± is 50 mm\. Standard error 12 mm: marks 12 mm, reference/,
+      /^± is 0\.05 m, the least for photos by house rule\. Standard error 12 mm: marks 12 mm, reference/,
     )
     expect(mean).toBeNull()
   })

@@ -1,19 +1,17 @@
 import { sigmasOfTolerance } from '#app/domain/photo/plane-inputs.ts'
+import { houseRules } from '#app/domain/rules/house-rules.ts'
 
-/** House rule: a length scaled from a photo is good to 3 %, and never to better than 50 mm. */
-export const photoShare = 0.03
-export const photoLeast = 0.05
-
-/** A tolerance, m, and which of the three figures it is. */
+/** A tolerance, m, and which figure it is: the share of the length, the least of a photo, or two standard errors. */
 export interface PhotoTolerance {
   readonly tolerance: number
-  readonly by: '3 % of the length' | '50 mm' | 'twice the standard error'
+  readonly by: 'share' | 'least' | 'marks'
 }
 
-/** The tolerance of a length measured in a photo: the greatest of 3 %, 50 mm and two standard errors. */
+/** The tolerance of a length measured in a photo: the greatest of the house's share and least, and two standard errors. */
 export function photoTolerance(value: number, sigma: number): PhotoTolerance {
-  const share = photoShare * Math.abs(value)
+  const share = houseRules.tolerancePhotoShare.value * Math.abs(value)
+  const least = houseRules.tolerancePhotoLeast.value
   const marks = sigmasOfTolerance * sigma
-  if (marks > share && marks > photoLeast) return { tolerance: marks, by: 'twice the standard error' }
-  return share > photoLeast ? { tolerance: share, by: '3 % of the length' } : { tolerance: photoLeast, by: '50 mm' }
+  if (marks > share && marks > least) return { tolerance: marks, by: 'marks' }
+  return share > least ? { tolerance: share, by: 'share' } : { tolerance: least, by: 'least' }
 }

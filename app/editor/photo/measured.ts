@@ -6,6 +6,7 @@ import type { Measurement } from '#app/domain/photo/measurements.ts'
 import { photoTolerance, type PhotoTolerance } from '#app/domain/photo/photo-tolerance.ts'
 import { isClick } from '#app/domain/photo/plane-inputs.ts'
 import { isRefused, type Refusal } from '#app/domain/photo/refusal.ts'
+import { houseRules } from '#app/domain/rules/house-rules.ts'
 import { formatLength, type DisplayUnits } from '#app/domain/units.ts'
 
 /** A figure of a photo, m: its standard error, what of it comes from clicks and from references, and its tolerance. */
@@ -67,5 +68,10 @@ function smallWords(metres: number, units: DisplayUnits): string {
 /** Where the tolerance comes from, with the standard error that the marks give. */
 export function errorWords({ sigma, clicks, references, by }: Figure, units: DisplayUnits): string {
   const say = (metres: number) => smallWords(metres, units)
-  return `± is ${by}. Standard error ${say(sigma)}: marks ${say(clicks)}, reference sizes ${say(references)}.`
+  const rule = {
+    share: `${100 * houseRules.tolerancePhotoShare.value} % of it, the house rule for photos`,
+    least: `${formatLength(houseRules.tolerancePhotoLeast.value, units)}, the least for photos by house rule`,
+    marks: 'twice the standard error',
+  }
+  return `± is ${rule[by]}. Standard error ${say(sigma)}: marks ${say(clicks)}, reference sizes ${say(references)}.`
 }

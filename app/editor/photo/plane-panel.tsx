@@ -2,6 +2,7 @@ import { useState } from 'react'
 import { changePlane, removePlane } from '#app/domain/photo/edits.ts'
 import { mostPlanes, type PhotoMarks, type PhotoPlane } from '#app/domain/photo/measurements.ts'
 import { refusePlane } from '#app/domain/photo/plane-inputs.ts'
+import { houseRules } from '#app/domain/rules/house-rules.ts'
 import type { DisplayUnits } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
 import { TextField } from '#app/components/field.tsx'
@@ -17,8 +18,8 @@ export interface PhotoPanelProps {
   readonly onPlacing: (placing: Placing) => void
 }
 
-/** House rule: sizes of a reference are taped. */
-const usualTolerance = 0.01
+/** Sizes of a reference are taped unless something else is said. */
+const usualTolerance = houseRules.toleranceTape.value
 
 const smallest = 0.01
 const largest = 100
