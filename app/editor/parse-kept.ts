@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { layoutSchema, type Layout } from '#app/domain/layout/layout.ts'
+import { siteSchema, type Site } from '#app/domain/site/site.ts'
 import type { DeviceCopy, Kept } from '#app/editor/keeping.ts'
 
 // The variant page loads this when an answer comes, so that it does not wait for a parser.
@@ -48,3 +49,6 @@ export const documentParsing = <T>(name: string, body: z.ZodType<T>): KeptParsin
       .transform((found) => ({ revision: found.revision, body: body.parse(found[name]) })),
     body,
   )
+
+/** Of a job's site: `{ revision, site }`. */
+export const siteParsing: KeptParsing<Site> = documentParsing('site', siteSchema)

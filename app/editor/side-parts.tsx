@@ -14,6 +14,8 @@ import { HeaterFields } from '#app/editor/panels/heater-fields.tsx'
 import { HeatersTable } from '#app/editor/panels/heaters-table.tsx'
 import { PlacePanel } from '#app/editor/panels/place-panel.tsx'
 import { SeatsTable } from '#app/editor/panels/seats-table.tsx'
+import { UnheldHeater } from '#app/editor/panels/unheld-heater.tsx'
+import type { ChangeSite } from '#app/editor/site-change.ts'
 import type { Editor } from '#app/editor/use-editor.ts'
 import type { ShownFigures } from '#app/editor/use-figures.ts'
 import type { ViewChoice } from '#app/editor/view-choice.ts'
@@ -39,6 +41,7 @@ export interface SideSubject {
   readonly onSeat: (seatId: string | null) => void
   /** The page about which rough size matters most. */
   readonly sizesHref: string
+  readonly onSite: ChangeSite
 }
 
 /** What each part is given. */
@@ -153,13 +156,18 @@ function NothingChosen({ subject }: PartProps) {
 
 /** What was checked; a finding shows its subject on the plan. */
 export function Findings({ subject }: PartProps) {
-  const { editor, figures, layout, site, choice, onExplain, sizesHref } = subject
+  const { editor, figures, layout, site, brief, choice, readOnly, onExplain, onSite, sizesHref } = subject
   const onPoint = (about: Finding['subject']) => {
     if (about.kind === 'heater') editor.dispatch({ type: 'select', ids: [about.id] })
     if (about.kind === 'seat') {
       editor.dispatch({ type: 'seat', id: about.id })
       onExplain(about.id)
     }
+  }
+  const actionsFor = ({ rule, outcome, subject: about }: Finding) => {
+    if (rule !== 'supported' || outcome !== 'fails') return null
+    const heater = layout.heaters.find(({ id }) => id === about.id)
+    return heater ? <UnheldHeater key={heater.id} {...{ heater, editor, site, brief, choice, onSite }} /> : null
   }
   return (
     <>
@@ -168,6 +176,7 @@ export function Findings({ subject }: PartProps) {
         units={site.displayUnits}
         fluxUnit={choice.fluxUnit}
         onPoint={onPoint}
+        {...(readOnly ? {} : { actionsFor })}
       />
       {layout.heaters.length > 0 && (
         <p className="px-4.5 pb-3">

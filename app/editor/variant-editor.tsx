@@ -23,6 +23,7 @@ import { SidePanels } from '#app/editor/side-panels.tsx'
 import type { SideSubject } from '#app/editor/side-parts.tsx'
 import { statusOf } from '#app/editor/save-status.ts'
 import { cutsOf, Sections } from '#app/editor/sections.tsx'
+import type { ChangeSite } from '#app/editor/site-change.ts'
 import { useAutosave } from '#app/editor/use-autosave.ts'
 import { useEditor } from '#app/editor/use-editor.ts'
 import { useFigures } from '#app/editor/use-figures.ts'
@@ -50,6 +51,7 @@ export interface VariantEditorProps {
   readonly sizesHref: string
   /** The page that says how each heater hangs. */
   readonly hangHref: string
+  readonly onSite: ChangeSite
   readonly onCreate: () => void
   readonly onDuplicate: () => void
   readonly onDelete: (revision: number) => void
@@ -133,6 +135,7 @@ export function VariantEditor(props: VariantEditorProps) {
     onPlacing: setPlacing,
     onSeat,
     sizesHref: props.sizesHref,
+    onSite: props.onSite,
   }
   const legend = {
     scale,

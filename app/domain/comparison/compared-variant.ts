@@ -43,11 +43,14 @@ export function countUnsupported(findings: readonly Finding[]): number {
   return new Set(subjects.map(({ subject }) => subject.id)).size
 }
 
-/** The clearance or height with the least distance to its limit, m; null when none has a margin. How far a heater hangs
- * from its support is no clearance and does not count. */
+/** Rules about how a heater hangs: their lengths are no clearances. */
+const aboutHanging: readonly string[] = ['supported', 'hanger-length']
+
+/** The clearance or height with the least distance to its limit, m; null when none has a margin. How a heater hangs from
+ * its support is no clearance and does not count. */
 export function tightestMargin(findings: readonly Finding[]): { finding: Finding; margin: number } | null {
   const lengths = findings.flatMap((finding) =>
-    finding.rule !== 'supported' && finding.unit === 'm' && finding.margin !== null
+    !aboutHanging.includes(finding.rule) && finding.unit === 'm' && finding.margin !== null
       ? [{ finding, margin: finding.margin }]
       : [],
   )

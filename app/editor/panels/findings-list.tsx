@@ -1,4 +1,4 @@
-import { useState } from 'react'
+import { useState, type ReactNode } from 'react'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
 import { formatLength, type DisplayUnits } from '#app/domain/units.ts'
 import { OutcomeMark } from '#app/components/outcome-mark.tsx'
@@ -28,10 +28,12 @@ interface FindingsListProps {
   readonly fluxUnit: FluxUnit
   /** Shows on the plan what a finding is about. */
   readonly onPoint: (subject: Finding['subject']) => void
+  /** What may be done at once about a finding; null: nothing. */
+  readonly actionsFor?: (finding: Finding) => ReactNode
 }
 
 /** What was checked: failing first, each rule once with its tightest margin, tolerance, limit and source. */
-export function FindingsList({ findings, units, fluxUnit, onPoint }: FindingsListProps) {
+export function FindingsList({ findings, units, fluxUnit, onPoint, actionsFor }: FindingsListProps) {
   const [unfolded, setUnfolded] = useState(false)
   const groups = groupFindings(findings)
   const others = groups.filter(({ worst }) => worst.outcome !== 'pass')
@@ -41,7 +43,7 @@ export function FindingsList({ findings, units, fluxUnit, onPoint }: FindingsLis
   return (
     <section aria-labelledby="findings-title" className="border-t border-rule px-4.5 py-3.5">
       <header className="mb-2 flex items-baseline gap-2.5">
-        <h2 id="findings-title" className="text-sm font-strong">
+        <h2 id="findings-title" tabIndex={-1} className="text-sm font-strong">
           Findings
         </h2>
         <p className="text-ink-2">{summaryOf(groups)}</p>
@@ -50,7 +52,14 @@ export function FindingsList({ findings, units, fluxUnit, onPoint }: FindingsLis
         {shown.map(({ key, worst, others: elsewhere }) => (
           <li key={key} className="border-t border-rule">
             <FindingRow finding={worst} {...{ units, fluxUnit, onPoint }} />
-            {elsewhere.length > 0 && <Others others={elsewhere} {...{ worst, units, fluxUnit, onPoint }} />}
+            {actionsFor?.(worst)}
+            {elsewhere.length > 0 && (
+              <Others
+                others={elsewhere}
+                {...{ worst, units, fluxUnit, onPoint }}
+                {...(actionsFor ? { actionsFor } : {})}
+              />
+            )}
           </li>
         ))}
       </ul>
@@ -74,7 +83,7 @@ interface OthersProps extends FindingsListProps {
 }
 
 /** The same finding elsewhere, folded. */
-function Others({ worst, others, units, fluxUnit, onPoint }: Omit<OthersProps, 'findings'>) {
+function Others({ worst, others, units, fluxUnit, onPoint, actionsFor }: Omit<OthersProps, 'findings'>) {
   const kind = worst.subject.kind === 'seat' ? 'seat' : 'heater'
   return (
     <details className="pb-1 pl-6">
@@ -83,7 +92,7 @@ function Others({ worst, others, units, fluxUnit, onPoint }: Omit<OthersProps, '
       </summary>
       <ul className="flex flex-wrap gap-x-3">
         {others.map((finding, i) => (
-          <li key={`${finding.subject.id} ${i}`}>
+          <li key={`${finding.subject.id} ${i}`} className={actionsFor?.(finding) ? 'w-full' : ''}>
             <button
               type="button"
               onClick={() => onPoint(finding.subject)}
@@ -92,6 +101,7 @@ function Others({ worst, others, units, fluxUnit, onPoint }: Omit<OthersProps, '
             >
               {finding.subject.id} {finding.margin === null ? '' : marginText(finding, units, fluxUnit)}
             </button>
+            {actionsFor?.(finding)}
           </li>
         ))}
       </ul>
@@ -99,7 +109,7 @@ function Others({ worst, others, units, fluxUnit, onPoint }: Omit<OthersProps, '
   )
 }
 
-interface FindingRowProps extends Omit<FindingsListProps, 'findings'> {
+interface FindingRowProps extends Omit<FindingsListProps, 'findings' | 'actionsFor'> {
   readonly finding: Finding
 }
 

@@ -45,10 +45,14 @@ export function mountOptions(heater: MountedHeater, model: HeaterModel | undefin
   }))
 }
 
+/** Whether a mount hangs from suspension eyes, so that it may be splayed. */
+export const hangs = (mount: Mount): boolean => mount === 'chain' || mount === 'drop rods'
+
 /** The change to a chosen mount; none for one that the model does not offer. */
 export function mountChange(chosen: string, model: HeaterModel | undefined): HeaterChange {
   const mount = model?.mounts.find((each) => each === chosen)
-  return mount ? { mount } : {}
+  if (!mount) return {}
+  return hangs(mount) ? { mount } : { mount, splayed: false }
 }
 
 const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1)

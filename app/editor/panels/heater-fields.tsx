@@ -10,7 +10,7 @@ import { CheckField, SelectField } from '#app/components/field.tsx'
 import { LengthField } from '#app/components/length-field.tsx'
 import { AngleField } from '#app/editor/panels/angle-field.tsx'
 import { alongLabel, fieldLength, fromLabel } from '#app/editor/panels/axis-words.ts'
-import { modelChange, modelOptions, mountChange, mountOptions } from '#app/editor/panels/heater-choices.ts'
+import { hangs, modelChange, modelOptions, mountChange, mountOptions } from '#app/editor/panels/heater-choices.ts'
 import { beamSide, limitsNote, supportsFor, wrongHeight, wrongTilt } from '#app/editor/panels/heater-limits.ts'
 
 interface HeaterFieldsProps {
@@ -94,6 +94,14 @@ export function HeaterFields(props: HeaterFieldsProps) {
             ]}
           />
         </div>
+        {heaters.every(({ mount }) => hangs(mount)) && (
+          <CheckField
+            label="Splayed: each eye hangs from two members"
+            checked={heaters.every(({ splayed }) => splayed)}
+            onChange={(event) => set({ splayed: event.target.checked })}
+            className="mt-1.5"
+          />
+        )}
         <SupplyFields {...{ heaters, model, brief, set }} />
       </fieldset>
       <div className="mt-1.5 flex flex-wrap items-baseline gap-x-4 gap-y-1">

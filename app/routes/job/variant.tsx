@@ -6,6 +6,7 @@ import type { Layout } from '#app/domain/layout/layout.ts'
 import { useToast } from '#app/components/toast.tsx'
 import type { Kept } from '#app/editor/keeping.ts'
 import { keptAt } from '#app/editor/kept-at.ts'
+import { useSiteChange } from '#app/editor/use-site-change.ts'
 import { VariantEditor } from '#app/editor/variant-editor.tsx'
 import { requireJob } from '#app/server/data/jobs.server.ts'
 import { findLaidOut } from '#app/server/data/laid-out.server.ts'
@@ -22,13 +23,13 @@ export async function loader({ request, params }: Route.LoaderArgs) {
   const { variantId } = params
   const laidOut = isId(variantId) ? await findLaidOut({ id: variantId, member: job.member }) : null
   if (laidOut?.variant.jobId !== job.id) throw data('No such variant', 404)
-  const { variant, site, brief, models, hanging, ofJob } = laidOut
+  const { variant, site, siteRevision, brief, models, hanging, ofJob } = laidOut
   return {
     viewer: viewerOf(job.member),
     job: { id: job.id, name: job.name },
     variant: { id: variant.id, title: variant.title, revision: variant.revision, heaters: variant.heaters },
     variants: ofJob.map(({ id, number, title }) => ({ id, number, title, href: `/jobs/${job.id}/variants/${id}` })),
-    site,
+    kept: { revision: siteRevision, body: site },
     brief,
     catalogue: [...models.values()],
     hanging,
@@ -54,7 +55,7 @@ async function findKept(url: string): Promise<Kept<Layout>> {
   return (await variantParsing()).kept(await response.json())
 }
 
-function KeptVariant({ variant, variants, job, ...rest }: Route.ComponentProps['loaderData']) {
+function KeptVariant({ variant, variants, job, kept: keptSite, ...rest }: Route.ComponentProps['loaderData']) {
   const navigate = useNavigate()
   const toast = useToast()
   const url = `/api/variants/${variant.id}`
@@ -71,6 +72,7 @@ function KeptVariant({ variant, variants, job, ...rest }: Route.ComponentProps['
     const onSaved = async (saved: Kept<Layout>) => void (await mutate(saved, { revalidate: false }))
     return keptAt({ url, parsing: variantParsing, onSaved })
   }, [url, mutate])
+  const [site, changeSite] = useSiteChange(`/api/jobs/${job.id}/site`, keptSite)
   const make = async (body: object) => {
     const made = await send('POST', `/api/jobs/${job.id}/variants`, body)
     if (!made) toast({ text: 'No variant made: no connection. Nothing was lost.' })
@@ -94,7 +96,8 @@ function KeptVariant({ variant, variants, job, ...rest }: Route.ComponentProps['
   return (
     <VariantEditor
       {...rest}
-      {...{ job, variants, initial, newest, keeping }}
+      {...{ job, variants, initial, newest, keeping, site }}
+      onSite={changeSite}
       variantId={variant.id}
       sizesHref={`/jobs/${job.id}/variants/${variant.id}/sizes`}
       hangHref={`/jobs/${job.id}/variants/${variant.id}/hang`}
