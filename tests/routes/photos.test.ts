@@ -277,6 +277,18 @@ describe('the picture of a photo', () => {
   })
 })
 
+describe('a picture under the plan', () => {
+  it('keeps its scale to the last digit', async () => {
+    const { revision, site } = z
+      .object({ revision: z.number(), site: z.looseObject({}) })
+      .parse(await (await ask('GET', `/api/jobs/${jobId}/site`)).json())
+    const trace = { photoId: foreignPhoto, at: [-2.00004, 0], metresPerPixel: 0.00561337, turnDeg: 0 }
+    const headers = { 'If-Match': `"${revision}"`, 'Idempotency-Key': key() }
+    const saved = await ask('PUT', `/api/jobs/${jobId}/site`, { body: { ...site, trace }, headers })
+    expect(await saved.json()).toMatchObject({ site: { trace: { at: [-2, 0], metresPerPixel: 0.00561337 } } })
+  })
+})
+
 describe('a store of the S3 kind', () => {
   it('is given and asked for files with a signature, and one that is away is told', async () => {
     const kept = new Map<string, { bytes: Buffer; type: string; signed: string }>()

@@ -158,7 +158,8 @@ function NewPlane({ units, onPlacing }: Pick<PhotoPanelProps, 'units' | 'onPlaci
   return (
     <div className="mt-2 border-t border-rule pt-2.5">
       <h3 className="mb-1 font-medium">New plane</h3>
-      <div className="grid grid-cols-2 gap-x-3 gap-y-2 tablet:grid-cols-4">
+      {/* Room for what a field says of its reading, so that the button below stays where it is when the field is left. */}
+      <div className="grid auto-rows-[minmax(5.25rem,auto)] grid-cols-2 gap-x-3 pointer-coarse:auto-rows-[minmax(6rem,auto)]">
         <TextField
           label="Name"
           placeholder="Floor"
@@ -171,7 +172,7 @@ function NewPlane({ units, onPlacing }: Pick<PhotoPanelProps, 'units' | 'onPlaci
         <LengthInput {...shared} label="Second side" value={depth} error={missing(depth)} onCommit={setDepth} />
         <LengthInput units={units} label="± of both" min={0} max={10} value={tolerance} onCommit={setTolerance} />
       </div>
-      <Button className="mt-2" icon="plus" onClick={start}>
+      <Button icon="plus" onClick={start}>
         Mark its four corners
       </Button>
     </div>

@@ -39,7 +39,7 @@ export function TracePanel({ units, trace, photoId, readOnly, onMark, onRemove }
         {trace && !here && 'Another picture lies under the site’s plan; this one would take its place.'}
       </p>
       {!readOnly && (
-        <div className="mt-1.5 grid grid-cols-2 gap-x-3 gap-y-2 tablet:grid-cols-4">
+        <div className="mt-1.5 grid auto-rows-[minmax(5.25rem,auto)] grid-cols-2 gap-x-3 pointer-coarse:auto-rows-[minmax(6rem,auto)]">
           <LengthInput
             label="Known length"
             units={units}
@@ -60,7 +60,7 @@ export function TracePanel({ units, trace, photoId, readOnly, onMark, onRemove }
         </div>
       )}
       {!readOnly && (
-        <p className="mt-2 flex gap-2">
+        <p className="flex gap-2">
           <Button onClick={() => (length === null ? setAsked(true) : onMark({ length, origin: [x, y], turnDeg }))}>
             Mark its two ends
           </Button>

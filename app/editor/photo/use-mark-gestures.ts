@@ -36,8 +36,9 @@ export function useMarkGestures(box: RefObject<HTMLElement | null>, hand: MarkHa
   const downAt = useRef<Vec2>([0, 0])
 
   const screenOf = (event: PointerEvent): Vec2 => {
-    const place = box.current?.getBoundingClientRect()
-    return [event.clientX - (place?.left ?? 0), event.clientY - (place?.top ?? 0)]
+    if (!box.current) return [0, 0]
+    const { left, top } = box.current.getBoundingClientRect()
+    return [event.clientX - left - box.current.clientLeft, event.clientY - top - box.current.clientTop]
   }
   const nearest = (screen: Vec2, type: string): MarkPlace | null => {
     const away = (place: MarkPlace) => {

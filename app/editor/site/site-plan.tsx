@@ -16,6 +16,7 @@ import { useSiteEditing } from '#app/editor/site/editing.ts'
 import { HandleMarks } from '#app/editor/site/handle-marks.tsx'
 import { PointedHeights } from '#app/editor/site/pointed-heights.tsx'
 import { ChosenMarks, ThingMarks } from '#app/editor/site/thing-mark.tsx'
+import { TracedPicture } from '#app/editor/site/traced-picture.tsx'
 import { useFittedFloor } from '#app/editor/site/use-fitted-floor.ts'
 import { useSiteGestures, type SiteDraft, type SiteHand } from '#app/editor/site/use-site-gestures.ts'
 import { useSiteKeys } from '#app/editor/site/use-site-keys.ts'
@@ -87,6 +88,7 @@ export function SitePlan({ theme, chosen, adding, sizes, onChoose, onAdd, onKey 
         <svg ref={ground} {...sheet} aria-hidden="true">
           <SiteGround site={site} view={view} pen={pen} theme={theme} sizes={sizes} />
         </svg>
+        {site.trace && <TracedPicture trace={site.trace} view={view} theme={theme} />}
         {/* The drawing is moved in with the keyboard as a whole; its things are rows of the lists beside it. */}
         <svg
           {...sheet}

@@ -10,9 +10,12 @@ import { saveRevision, type Locked, type Revisioned, type Save } from '#app/serv
 import type { Member } from '#app/server/session.server.ts'
 import { siteRevisions, sites } from '#drizzle/schema.ts'
 
-/** Every figure to four digits: lengths are kept to 0.1 mm. How far a size moves things stays exact. */
+/** Figures that are no lengths and stay exact: how far a size moves things, the scale of a picture to trace. */
+const exact = new Set(['by', 'metresPerPixel'])
+
+/** Every length to four digits: 0.1 mm. */
 function rounded(value: unknown, key = ''): unknown {
-  if (typeof value === 'number') return key === 'by' ? value : roundLength(value)
+  if (typeof value === 'number') return exact.has(key) ? value : roundLength(value)
   if (Array.isArray(value)) return value.map((inner) => rounded(inner))
   if (typeof value !== 'object' || value === null) return value
   return Object.fromEntries(Object.entries(value).map(([name, inner]) => [name, rounded(inner, name)]))
