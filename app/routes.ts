@@ -19,6 +19,7 @@ export default [
   route('jobs/:jobId/variants/:variantId/hang', 'routes/job/hang.tsx'),
   route('heaters', 'routes/heaters/list.tsx'),
   route('rules', 'routes/rules/list.tsx'),
+  route('rules/hanging', 'routes/rules/hanging.tsx'),
   route('team', 'routes/team/list.tsx'),
   route('sign-in', 'routes/account/sign-in.tsx'),
   route('sign-out', 'routes/account/sign-out.ts'),

@@ -119,6 +119,8 @@ export function Chosen({ subject }: PartProps) {
           layout={state.history.present}
           selected={state.selected}
           site={site}
+          brief={brief}
+          models={models}
           onEdit={editor.edit}
           onDuplicate={() => editor.dispatch({ type: 'duplicate' })}
         />

@@ -26,6 +26,7 @@ export const reachOf: Record<string, Reach> = {
   '/jobs/:jobId/compare.svg': { GET: 'export' },
   '/heaters': { GET: 'view' },
   '/rules': { GET: 'view' },
+  '/rules/hanging': { GET: 'view', POST: 'edit-rules' },
   '/team': { GET: 'any member' },
   '/sign-in': 'open',
   '/sign-out': 'open',

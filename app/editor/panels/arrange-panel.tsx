@@ -1,4 +1,6 @@
-import { useState } from 'react'
+import { useMemo, useState } from 'react'
+import type { Brief } from '#app/domain/brief/brief.ts'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { alignHeaters } from '#app/domain/layout/edits.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { repeatAtSpacing, spaceEqually } from '#app/domain/layout/repeat.ts'
@@ -7,12 +9,15 @@ import { parseLength } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
 import { SelectField, TextField } from '#app/components/field.tsx'
 import { LengthField } from '#app/components/length-field.tsx'
+import { SpacingCosts } from '#app/editor/panels/spacing-costs.tsx'
 import { alongLabel, fieldLength, fromLabel } from '#app/editor/panels/axis-words.ts'
 
 interface ArrangePanelProps {
   readonly layout: Layout
   readonly selected: readonly string[]
   readonly site: Site
+  readonly brief: Brief
+  readonly models: ReadonlyMap<string, HeaterModel>
   readonly onEdit: (layout: Layout, selected: readonly string[], said: string) => void
   readonly onDuplicate: () => void
 }
@@ -25,7 +30,7 @@ const directions = [
 ]
 
 /** Repeats the chosen heaters at a spacing; brings several into line or to equal spacing. */
-export function ArrangePanel({ layout, selected, site, onEdit, onDuplicate }: ArrangePanelProps) {
+export function ArrangePanel({ layout, selected, site, brief, models, onEdit, onDuplicate }: ArrangePanelProps) {
   const [open, setOpen] = useState(false)
   const several = selected.length > 1
   const align = (along: 'x' | 'y') =>
@@ -59,57 +64,64 @@ export function ArrangePanel({ layout, selected, site, onEdit, onDuplicate }: Ar
           </Button>
         )}
       </div>
-      {open && <RepeatForm {...{ layout, selected, site, onEdit }} />}
+      {open && <RepeatForm {...{ layout, selected, site, brief, models, onEdit }} />}
     </section>
   )
 }
 
-function RepeatForm({ layout, selected, site, onEdit }: Omit<ArrangePanelProps, 'onDuplicate'>) {
+function RepeatForm({ layout, selected, site, brief, models, onEdit }: Omit<ArrangePanelProps, 'onDuplicate'>) {
   const units = site.displayUnits
   const [spacing, setSpacing] = useState(firstSpacing(site))
   const [count, setCount] = useState('1')
   const [direction, setDirection] = useState('0')
   const [error, setError] = useState<string | null>(null)
-  const repeat = () => {
-    const answer = repeatAtSpacing(layout, selected, { spacing, count: Number(count), directionDeg: Number(direction) })
+  const asked = useMemo(
+    () => ({ spacing, count: Number(count), directionDeg: Number(direction) }),
+    [spacing, count, direction],
+  )
+  const repeat = (at: number) => {
+    const answer = repeatAtSpacing(layout, selected, { ...asked, spacing: at })
     if ('error' in answer) return setError(answer.error)
     setError(null)
     onEdit(answer.layout, [...selected, ...answer.ids], `${answer.ids.length} heaters placed`)
   }
   return (
-    <form
-      className="mt-1 mb-1.5 grid grid-cols-2 items-start gap-2 wide:grid-cols-4"
-      onSubmit={(event) => {
-        event.preventDefault()
-        repeat()
-      }}
-    >
-      <LengthField
-        label="Spacing"
-        unit={units === 'metric' ? 'm' : ''}
-        hint="Centre to centre"
-        value={spacing}
-        show={(metres) => fieldLength(metres, units)}
-        read={(text) => parseLength(text, units, { min: 0.1, max: 100 })}
-        onCommit={setSpacing}
-      />
-      <TextField
-        label="How many more"
-        inputMode="numeric"
-        value={count}
-        error={error}
-        onChange={(event) => setCount(event.target.value)}
-      />
-      <SelectField
-        label="Direction on the plan"
-        options={directions}
-        value={direction}
-        onChange={(event) => setDirection(event.target.value)}
-      />
-      <Button type="submit" className="mt-4" disabled={selected.length === 0}>
-        Repeat
-      </Button>
-    </form>
+    <>
+      <form
+        className="mt-1 mb-1.5 grid grid-cols-2 items-start gap-2 wide:grid-cols-4"
+        onSubmit={(event) => {
+          event.preventDefault()
+          repeat(spacing)
+        }}
+      >
+        <LengthField
+          label="Spacing"
+          unit={units === 'metric' ? 'm' : ''}
+          hint="Centre to centre"
+          value={spacing}
+          show={(metres) => fieldLength(metres, units)}
+          read={(text) => parseLength(text, units, { min: 0.1, max: 100 })}
+          onCommit={setSpacing}
+        />
+        <TextField
+          label="How many more"
+          inputMode="numeric"
+          value={count}
+          error={error}
+          onChange={(event) => setCount(event.target.value)}
+        />
+        <SelectField
+          label="Direction on the plan"
+          options={directions}
+          value={direction}
+          onChange={(event) => setDirection(event.target.value)}
+        />
+        <Button type="submit" className="mt-4" disabled={selected.length === 0}>
+          Repeat
+        </Button>
+      </form>
+      <SpacingCosts {...{ site, brief, layout, models, selected }} repeat={asked} onTake={repeat} />
+    </>
   )
 }
 

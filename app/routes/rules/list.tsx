@@ -1,5 +1,6 @@
 import { houseRules } from '#app/domain/rules/house-rules.ts'
 import { formatLength, formatQuantity } from '#app/domain/units.ts'
+import { ButtonLink } from '#app/components/button.tsx'
 import { PageFrame } from '#app/components/page-frame.tsx'
 import { DataTable, type Column } from '#app/components/table.tsx'
 import { requireMay } from '#app/server/session.server.ts'
@@ -70,6 +71,24 @@ const hanging: readonly RuleRow[] = [
     meaning: 'How far sideways of the member an eye may be for a chain to hang plumb.',
   },
   {
+    name: 'Splayed hanger, reach',
+    figure: formatLength(houseRules.splayReach.value, 'metric'),
+    source: houseRules.splayReach.source,
+    meaning: 'How far in plan each member of a splayed pair may be from its eye.',
+  },
+  {
+    name: 'Splayed hanger, angle',
+    figure: `${houseRules.splayAngleDeg.value}° from plumb`,
+    source: houseRules.splayAngleDeg.source,
+    meaning: 'The flattest that a splayed hanger may lie.',
+  },
+  {
+    name: 'One point alone',
+    figure: 'a whole heater',
+    source: houseRules.safetyLine.source,
+    meaning: 'What a suspension point should hold where its load is known, should the other hanger let go.',
+  },
+  {
     name: 'Supply above rated voltage',
     figure: `× ${houseRules.supplyOverRated.value}`,
     source: houseRules.supplyOverRated.source,
@@ -119,6 +138,9 @@ export default function RulesPage({ loaderData: { viewer } }: Route.ComponentPro
       </p>
       {table('Warmth and cautions', warmth)}
       {table('Hanging, supply and weather', hanging)}
+      <p className="mt-3">
+        <ButtonLink to="/rules/hanging">Hanging data: chain, rods and fittings</ButtonLink>
+      </p>
     </PageFrame>
   )
 }
