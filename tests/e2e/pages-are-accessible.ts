@@ -24,8 +24,15 @@ for (const chrome of chromes)
       await check('/reset-password')
       await signIn(page, 'designer')
       const job = await readJob(page.request, /Tansy Weir/)
-      for (const path of ['/jobs', '/jobs/new', '/heaters', '/rules', '/team', '/no-such-page']) await check(path)
-      for (const path of ['brief', 'site', 'compare?variants=2,3', `variants/${variantOf(job, 3).id}`])
+      for (const path of ['/jobs', '/jobs/new', '/heaters', '/rules', '/rules/hanging', '/team', '/no-such-page'])
+        await check(path)
+      for (const path of [
+        'brief',
+        'site',
+        'compare?variants=2,3',
+        `variants/${variantOf(job, 3).id}`,
+        `variants/${variantOf(job, 3).id}/hang`,
+      ])
         await check(`/jobs/${job.id}/${path}`)
       const veranda = await readJob(page.request, /Sallow/)
       const { photos } = await (await page.request.get(`/api/jobs/${veranda.id}/photos`)).json()

@@ -38,15 +38,18 @@ export function SpacingCosts({ onTake, ...subject }: SpacingSubject & { onTake: 
                 <span className="block text-2xs font-regular text-ink-2">{place}</span>
               </th>
               <td className="px-1.5">
-                {totals.coldest
-                  ? `${fluxFigure(totals.coldest.irradiance, 'W/m²')}, ${totals.coldest.seatId}`
-                  : noFigure}
+                {totals.coldest ? fluxFigure(totals.coldest.irradiance, 'W/m²') : noFigure}
+                <span className="block text-2xs text-ink-2">{totals.coldest?.seatId}</span>
               </td>
               <td className="px-1.5">{totals.evenness === null ? noFigure : totals.evenness.toFixed(2)}</td>
               <td className="px-1.5">{area(overlap)}</td>
               <td className="text-right">
-                <Button size="small" onClick={() => onTake(spacing)}>
-                  Repeat at {formatLength(spacing, site.displayUnits)}
+                <Button
+                  size="small"
+                  aria-label={`Take ${formatLength(spacing, site.displayUnits)}`}
+                  onClick={() => onTake(spacing)}
+                >
+                  Take
                 </Button>
               </td>
             </tr>
