@@ -64,7 +64,7 @@ export function HungHeaterSection({ hung, site, data, unsupported }: HungHeaterP
               words={{ length: (m) => cutText(m, units), height: (m) => formatLength(m, units) }}
             />
           </div>
-          <div className="min-w-0 flex-1 basis-120 print:basis-0 print:text-2xs print:[&_td]:px-1 print:[&_th]:px-1">
+          <div className="min-w-0 flex-1 basis-120 print:basis-0 print:text-2xs print:[&_td]:px-0.5 print:[&_th]:px-0.5">
             <Hangers {...{ hung, site, data, schedule }} />
             <Levelness {...{ schedule, model, mount: heater.mount }} />
             {asideText(hung, units) && <p className="mt-1 text-ink-2">{asideText(hung, units)}</p>}
