@@ -12,7 +12,7 @@ export interface MarkedPhoto {
 }
 
 /** Share of a figure that its standard error may be: beyond it first order says nothing, and nobody should build by it. */
-export const roughest = 0.25
+const roughest = 0.25
 
 /** The plane that a mark is said to lie in, with its homography; or why nothing is measured in it. */
 export function planeNamed(

@@ -17,7 +17,7 @@ export interface Reading {
 }
 
 /** Two measurements are of one thing when they have one name and one kind. */
-export const sameThing = (a: Measurement, b: Measurement): boolean =>
+const sameThing = (a: Measurement, b: Measurement): boolean =>
   a.kind === b.kind && a.label.trim().toLowerCase() === b.label.trim().toLowerCase()
 
 /** Every reading of the thing that a measurement measures, in all photos of a job; those refused are left out. */

@@ -38,7 +38,7 @@ const lengthSchema = z.strictObject({ id, kind: z.literal('length'), label, from
 const heightSchema = z.strictObject({ id, kind: z.literal('height'), label, foot: placedSchema, top: mark })
 
 /** A length between two marks of one plane, or a height over a plane from its foot in that plane to its top. */
-export const measurementSchema = z.discriminatedUnion('kind', [lengthSchema, heightSchema])
+const measurementSchema = z.discriminatedUnion('kind', [lengthSchema, heightSchema])
 export type Measurement = z.infer<typeof measurementSchema>
 
 /** Stated maxima of one photo. */

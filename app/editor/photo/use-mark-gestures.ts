@@ -8,6 +8,8 @@ interface MarkHand {
   readonly view: PhotoView
   readonly places: readonly MarkPlace[]
   readonly placing: boolean
+  /** Path of the chosen mark: where several lie on each other, it is the one that is taken. */
+  readonly chosen: string | null
   readonly readOnly: boolean
   readonly onChoose: (path: string | null) => void
   readonly onMove: (path: string, at: Mark) => void
@@ -28,7 +30,7 @@ const reachOf = (type: string): number => (type === 'touch' ? reach.touch : type
 
 /** The mark under a pointer and where the pointer is; the mark follows the pointer's way, so a finger need not hide it. */
 export function useMarkGestures(box: RefObject<HTMLElement | null>, hand: MarkHand) {
-  const { view, places, placing, readOnly, onChoose, onMove, onPlace } = hand
+  const { view, places, placing, chosen, readOnly, onChoose, onMove, onPlace } = hand
   const [moved, setMoved] = useState<{ path: string; at: Mark } | null>(null)
   const [pointed, setPointed] = useState<Mark | null>(null)
   const active = useRef<Active | null>(null)
@@ -45,8 +47,8 @@ export function useMarkGestures(box: RefObject<HTMLElement | null>, hand: MarkHa
       const [x, y] = view.toScreen(place.at)
       return Math.hypot(x - screen[0], y - screen[1])
     }
-    const [first] = places.toSorted((a, b) => away(a) - away(b))
-    return first && away(first) <= reachOf(type) ? first : null
+    const near = places.filter((place) => away(place) <= reachOf(type)).toSorted((a, b) => away(a) - away(b))
+    return near.find(({ path }) => path === chosen) ?? near[0] ?? null
   }
   const begin = (event: PointerEvent, screen: Vec2): Active => {
     if (event.button === 1) return { kind: 'pan' }

@@ -2,7 +2,7 @@ import { useRef, useState } from 'react'
 import { mostMegabytes } from '#app/domain/photo/photo-limits.ts'
 
 /** What became of one file that was chosen. */
-export type Sent = { readonly kind: 'kept' } | { readonly kind: 'refused'; readonly reason: string }
+type Sent = { readonly kind: 'kept' } | { readonly kind: 'refused'; readonly reason: string }
 
 /** Sends one file; the page brings the address. `key` names the effect: the same is kept once. */
 export type SendPhoto = (file: File, key: string, signal: AbortSignal) => Promise<Sent>
