@@ -5,6 +5,7 @@ import type { HeaterChange } from '#app/domain/layout/edits.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { obstructionsOf } from '#app/domain/flux/shading.ts'
+import { assumedInWords } from '#app/domain/site/size-source.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { ButtonLink } from '#app/components/button.tsx'
 import { ArrangePanel } from '#app/editor/panels/arrange-panel.tsx'
@@ -159,6 +160,7 @@ function NothingChosen({ subject }: PartProps) {
 /** What was checked; a finding shows its subject on the plan. */
 export function Findings({ subject }: PartProps) {
   const { editor, figures, layout, site, brief, choice, readOnly, onExplain, onSite, sizesHref } = subject
+  const assumed = assumedInWords(site, site.displayUnits)
   const onPoint = (about: Finding['subject']) => {
     if (about.kind === 'heater') editor.dispatch({ type: 'select', ids: [about.id] })
     if (about.kind === 'seat') {
@@ -180,6 +182,11 @@ export function Findings({ subject }: PartProps) {
         onPoint={onPoint}
         {...(readOnly ? {} : { actionsFor })}
       />
+      {assumed.length > 0 && (
+        <p className="px-4.5 pb-2 text-xs text-ink-2">
+          <b className="font-medium text-amber">Assumed sizes:</b> {assumed.join('; ')}.
+        </p>
+      )}
       {layout.heaters.length > 0 && (
         <p className="px-4.5 pb-3">
           <ButtonLink to={sizesHref} size="small">

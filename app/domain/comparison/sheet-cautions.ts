@@ -6,6 +6,8 @@ import { indoorsAt } from '#app/domain/comfort/indoors.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { isStopped } from '#app/domain/rules/check-layout.ts'
+import { assumedInWords } from '#app/domain/site/size-source.ts'
+import type { Site } from '#app/domain/site/site.ts'
 import { formatLength, formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
 
 /** A variant as far as the cautions of a sheet need it. */
@@ -18,6 +20,7 @@ interface Told {
   readonly brief: Brief
   readonly models: ReadonlyMap<string, HeaterModel>
   readonly units: DisplayUnits
+  readonly site: Pick<Site, 'dimensions'>
   readonly variants: readonly CautionedVariant[]
 }
 
@@ -83,9 +86,9 @@ function measureFirst({ variants }: Told): string[] {
   })
 }
 
-function assumptions({ brief, units }: Told): string[] {
-  if (brief.assumed.length === 0) return []
-  return [`Assumed: ${brief.assumed.map((name) => assumptionOf(brief, name, units)).join('; ')}.`]
+function assumptions({ brief, units, site }: Told): string[] {
+  const all = [...brief.assumed.map((name) => assumptionOf(brief, name, units)), ...assumedInWords(site, units)]
+  return all.length === 0 ? [] : [`Assumed: ${all.join('; ')}.`]
 }
 
 function withoutHeat({ variants, units, brief }: Told): string {

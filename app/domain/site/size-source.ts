@@ -1,6 +1,6 @@
 import { houseRules } from '#app/domain/rules/house-rules.ts'
 import type { Dimension, Site, SizeSource } from '#app/domain/site/site.ts'
-import { roundLength } from '#app/domain/units.ts'
+import { formatLength, roundLength, type DisplayUnits } from '#app/domain/units.ts'
 
 /** The tolerance of a size by where it comes from, m, until a better one is known (house rules). */
 export function usualTolerance(source: SizeSource, value: number): number {
@@ -24,4 +24,17 @@ export function usualTolerance(source: SizeSource, value: number): number {
 export const isAssumed = ({ source }: Pick<Dimension, 'source'>): boolean => source === 'told' || source === 'guessed'
 
 /** The sizes of a site that nobody measured. */
-export const assumedSizes = (site: Site): Dimension[] => site.dimensions.filter(isAssumed)
+export const assumedSizes = (site: Pick<Site, 'dimensions'>): Dimension[] => site.dimensions.filter(isAssumed)
+
+/** Sizes that are named one by one; the rest are counted. */
+const namedSizes = 3
+
+/** The assumed sizes of a site in words, each with its tolerance: the first by name, the rest by number. */
+export function assumedInWords(site: Pick<Site, 'dimensions'>, units: DisplayUnits): string[] {
+  const sizes = assumedSizes(site)
+  const named = sizes.slice(0, namedSizes).map(({ label, value, tolerance }) => {
+    return `${label} ${formatLength(value, units)} ± ${formatLength(tolerance, units)}`
+  })
+  const rest = sizes.length - namedSizes
+  return rest > 0 ? [...named, `${rest} more ${rest === 1 ? 'size' : 'sizes'} of the site`] : named
+}

@@ -13,11 +13,14 @@ const middleOf = (outline: readonly Vec2[]): Vec2 => [
   outline.reduce((sum, [, y]) => sum + y, 0) / outline.length,
 ]
 
+/** A fall per length below this is none that anybody could see or measure. */
+const level = 5e-4
+
 /** The slope of a cover in words: degrees and inches per foot; "level" when it has none. */
 export function slopeText(cover: Cover): string {
   const slope = coverSlope(cover)
   if (!slope) return 'no plane'
-  if (slope.fall < 1e-4) return 'level'
+  if (slope.fall < level) return 'level'
   return `${degrees(slope.angle).toFixed(1)}°, ${formatQuantity(slope.angle, 'slope', 'imperial')}`
 }
 
@@ -27,7 +30,7 @@ export function CoverMark({ cover, view, pen }: { cover: Cover; view: PlanView; 
   const slope = coverSlope(cover)
   const [x, y] = toScreen(view, middleOf(outline))
   const [dx, dy] = slope ? [slope.downhill[0], -slope.downhill[1]] : [0, 0]
-  const isSloping = slope !== null && slope.fall >= 1e-4
+  const isSloping = slope !== null && slope.fall >= level
   const half = 16 * pen.k
   const [tx, ty] = [x + dx * half, y + dy * half]
   const wing = (side: 1 | -1) => `${tx - dx * 7 + side * dy * 4} ${ty - dy * 7 - side * dx * 4}`
@@ -65,7 +68,7 @@ export function CoverMark({ cover, view, pen }: { cover: Cover; view: PlanView; 
 
 /** A part of the floor that lies higher or lower: its edge and by how much. */
 export function LevelMark({
-  level,
+  level: part,
   view,
   pen,
   units,
@@ -75,19 +78,19 @@ export function LevelMark({
   pen: Pen
   units: Site['displayUnits']
 }) {
-  const [x, y] = toScreen(view, middleOf(level.outline))
-  const sign = level.height > 0 ? '+' : level.height < 0 ? '−' : ''
+  const [x, y] = toScreen(view, middleOf(part.outline))
+  const sign = part.height > 0 ? '+' : part.height < 0 ? '−' : ''
   return (
-    <g data-level={level.id}>
+    <g data-level={part.id}>
       <path
-        d={outlinePath(level.outline, view)}
+        d={outlinePath(part.outline, view)}
         fill={pen.colours.secondLine}
         fillOpacity={0.12}
         stroke={pen.colours.line}
         strokeWidth={0.7 * pen.k}
       />
       <Words x={x} y={y} centred anchor="middle" size={pen.text} colour={pen.colours.line} halo={pen.colours.halo}>
-        {`${sign}${dimensionText(Math.abs(level.height), units)}`}
+        {`${sign}${dimensionText(Math.abs(part.height), units)}`}
       </Words>
     </g>
   )

@@ -81,14 +81,25 @@ const middle = (points: readonly Vec2[]): Vec2 => [
   points.reduce((sum, [, y]) => sum + y, 0) / points.length,
 ]
 
+/** A drawing narrower than this has no room for the assumed sizes one by one, px. */
+const narrow = 560
+
 /** Sizes on the plan with their tolerance and source: all of them, or those alone that nobody measured. */
 export function SizeTags({ site, view, pen, all }: { site: Site; view: PlanView; pen: Pen; all: boolean }) {
+  const look = { size: pen.text, colour: pen.colours.selection, halo: pen.colours.halo, haloWidth: 3.4 }
+  const assumed = site.dimensions.filter(isAssumed).length
+  if (!all && view.width < narrow * pen.k)
+    return assumed === 0 ? null : (
+      <Words x={10} y={18} {...look}>
+        {`${assumed} ${assumed === 1 ? 'size' : 'sizes'} assumed`}
+      </Words>
+    )
   return (
     <g data-sizes={all ? 'all' : 'assumed'}>
       {placeSizeTags(site, view, pen, all).map(({ id, text, x, y, about }) => (
         <g key={id}>
           {about ? <circle cx={about[0]} cy={about[1]} r={2.2} fill={pen.colours.selection} /> : null}
-          <Words x={x} y={y} size={pen.text} colour={pen.colours.selection} halo={pen.colours.halo} haloWidth={3.4}>
+          <Words x={x} y={y} {...look}>
             {text}
           </Words>
         </g>

@@ -20,7 +20,7 @@ export function TableFields({ table, onChoose, onRemove }: TableFieldsProps) {
   const round = table.form === 'round'
   const withSize = (old: Site, next: [number, number]) => changeTable(old, id, { size: next })
   return (
-    <FieldsFrame title={`Table ${id}`} onRemove={onRemove}>
+    <FieldsFrame title={id.startsWith('table') ? id.replace('-', ' ') : `Table ${id}`} onRemove={onRemove}>
       <div key={id} className="space-y-3">
         <FieldGrid>
           <PickInput

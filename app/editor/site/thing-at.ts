@@ -89,7 +89,7 @@ function bodyOf(shape: Shape, x: number, y: number) {
 }
 
 /** Corners of a table in plan; a round one as the square around it. */
-function tableOutline({ centre, size, turnDeg }: Table): Vec2[] {
+export function tableOutline({ centre, size, turnDeg }: Table): Vec2[] {
   const [cos, sin] = [Math.cos(radians(turnDeg)), Math.sin(radians(turnDeg))]
   const [a, b] = [size[0] / 2, size[1] / 2]
   const corner = (u: number, v: number): Vec2 => [centre[0] + u * cos - v * sin, centre[1] + u * sin + v * cos]

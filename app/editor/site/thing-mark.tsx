@@ -10,6 +10,7 @@ import { SeatMark, seatRadius } from '#app/drawing/plan/seat.tsx'
 import { wallCorners } from '#app/drawing/plan/wall.tsx'
 import type { Pen } from '#app/drawing/pen.ts'
 import type { Chosen } from '#app/editor/site/choice.ts'
+import { tableOutline } from '#app/editor/site/thing-at.ts'
 
 interface MarkProps {
   readonly site: Site
@@ -100,7 +101,9 @@ function edgePath(thing: Outlined, view: PlanView): string {
     return outlinePath([[x0, y0], [x1, y0], [x1, y1], [x0, y1]], view) // prettier-ignore
   }
   if ('centre' in thing)
-    return circlePath(toScreen(view, thing.centre), (Math.hypot(thing.size[0], thing.size[1]) / 2) * view.scale)
+    return thing.form === 'round'
+      ? circlePath(toScreen(view, thing.centre), (thing.size[0] / 2) * view.scale)
+      : outlinePath(tableOutline(thing), view)
   return ''
 }
 

@@ -25,7 +25,7 @@ export function rowsOf(site: Site, kind: ThingKind): ThingRow[] {
     case 'pole':
       return site.poles.map((pole) => ({ id: pole.id, name: pole.name, words: say.pole(pole) }))
     case 'obstacle':
-      return site.obstacles.map((thing) => ({ id: thing.id, name: thing.name, words: say.obstacle(thing) }))
+      return site.obstacles.map((thing) => ({ id: thing.id, name: nameAmong(site, thing), words: say.obstacle(thing) }))
     case 'table':
       return site.tables.map((table) => ({ id: table.id, name: table.id, words: say.table(table) }))
     case 'level':
@@ -34,6 +34,10 @@ export function rowsOf(site: Site, kind: ThingKind): ThingRow[] {
       return site.seats.map((seat) => ({ id: seat.id, name: seat.id, words: say.seat(seat) }))
   }
 }
+
+/** An obstacle's name, with its id where several have the same. */
+const nameAmong = ({ obstacles }: Site, { id, name }: Obstacle): string =>
+  obstacles.some((other) => other.name === name && other.id !== id) ? `${name} (${id})` : name
 
 const wordsWith = (length: (metres: number) => string, site: Site) => ({
   cover: (cover: Cover) => {

@@ -100,7 +100,7 @@ function SiteOfJob({ viewer, job, kept, readOnly }: Loaded) {
     <JobFrame viewer={viewer} job={job} current="site" tools={tools}>
       <header className="flex flex-wrap items-center gap-x-3 gap-y-2 pb-3">
         <h1 className="text-xl font-strong">Site</h1>
-        <p className="min-w-0 flex-1 text-ink-2">{siteWords(site)}</p>
+        <p className="w-full min-w-0 text-ink-2 max-tablet:order-last tablet:w-auto tablet:flex-1">{siteWords(site)}</p>
         <Button
           aria-pressed={sizes}
           className="aria-pressed:border-ink aria-pressed:bg-ink aria-pressed:text-paper-raised"

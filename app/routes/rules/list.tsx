@@ -65,6 +65,19 @@ const hanging: readonly RuleRow[] = [
     meaning: 'Counts for every coordinate that no measured size decides. Placed heights have none.',
   },
   {
+    name: 'Tolerance of a size by its source',
+    figure: [
+      `laser ± ${formatLength(houseRules.toleranceLaser.value, 'metric')}`,
+      `tape ± ${formatLength(houseRules.toleranceTape.value, 'metric')}`,
+      `drawing ± ${formatLength(houseRules.toleranceDrawing.value, 'metric')}`,
+      `photo ${100 * houseRules.tolerancePhotoShare.value} %, at least ± ${formatLength(houseRules.tolerancePhotoLeast.value, 'metric')}`,
+      `told or guessed ± ${100 * houseRules.toleranceGuessShare.value} %`,
+    ].join(', '),
+    source: houseRules.toleranceLaser.source,
+    meaning:
+      'Taken when a source is named, until somebody says better. Told and guessed sizes stay visible as assumed.',
+  },
+  {
     name: 'Chain beside its member',
     figure: formatLength(houseRules.chainSidewaysLimit.value, 'metric'),
     source: houseRules.chainSidewaysLimit.source,

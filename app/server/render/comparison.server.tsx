@@ -45,7 +45,7 @@ export async function comparisonSheet(compared: Compared, organisation: string, 
       {...{ site, brief, models, variants, organisation }}
       planeHeight={plane}
       date={dayInWords(day)}
-      cautions={sheetCautions({ brief, models, units: site.displayUnits, variants })}
+      cautions={sheetCautions({ brief, models, units: site.displayUnits, site, variants })}
     />
   )
 }

@@ -150,11 +150,13 @@ describe('the variants that an address asks for', () => {
 })
 
 describe('the cautions of a sheet', () => {
-  const cautions = sheetCautions({ brief, models, units: 'metric', variants: [second, third] }).join('\n')
+  const cautions = sheetCautions({ brief, models, units: 'metric', site, variants: [second, third] }).join('\n')
   it('name the clearances of the manuals, what is assumed, what it feels like without heat and who approves', () => {
     expect(cautions).toContain('variant 2, 0.45 m at the ends, 0.45 m above, 1.30 m in front')
     expect(cautions).toContain('variant 3, 0.40 m at the ends, 0.35 m above, 1.10 m in front')
     expect(cautions).toContain('Assumed: Gusts: 3 m/s')
+    expect(cautions).toContain('beam spacing 2.64 m ± 0.025 m')
+    expect(cautions).not.toContain('terrace length')
     expect(cautions).toContain('out of the wind')
     expect(cautions).toContain('No figure approves')
   })

@@ -20,7 +20,7 @@ import {
 import { undersideAt } from '#app/domain/site/member.ts'
 import { siteFaults } from '#app/domain/site/site-faults.ts'
 import { siteSchema, type Dimension, type Site } from '#app/domain/site/site.ts'
-import { assumedSizes, usualTolerance } from '#app/domain/site/size-source.ts'
+import { assumedInWords, assumedSizes, usualTolerance } from '#app/domain/site/size-source.ts'
 import { solidOf } from '#app/domain/site/solids.ts'
 import { statesAfter, usualStates } from '#app/domain/site/usual-states.ts'
 import { demoSites } from '#drizzle/seed/demo-sites.ts'
@@ -156,6 +156,15 @@ describe('sizes by source', () => {
     ['told', 2.5, 0.25],
   ] as const)('%s of %d m: ± %d m', (source, value, tolerance) => {
     expect(usualTolerance(source, value)).toBeCloseTo(tolerance, 9)
+  })
+  it('assumed ones in words: three by name, the rest by number', () => {
+    const sizes = ['a', 'b', 'c', 'd', 'e'].map((label) => ({ ...c.dimensions[3]!, id: label, label }))
+    expect(assumedInWords({ dimensions: sizes }, 'metric')).toEqual([
+      'a 0.205 m ± 0.025 m',
+      'b 0.205 m ± 0.025 m',
+      'c 0.205 m ± 0.025 m',
+      '2 more sizes of the site',
+    ])
   })
   it('guessed and told ones are assumed', () => {
     expect(assumedSizes(c).map(({ label }) => label)).toEqual(['ceiling void'])

@@ -1,0 +1,163 @@
+import { expect, test, type Locator, type Page } from '@playwright/test'
+import { coverPlane, planeHeightAt } from '#app/domain/site/cover.ts'
+import type { Obstacle, Site } from '#app/domain/site/site.ts'
+import { readJob, signIn } from '#tests/support/journey.ts'
+
+/** The most that a newcomer may need for the veranda of demo site C. */
+const mostActions = 60
+
+/**
+ * Does what a hand does and counts it: a click is one action; so is typing a field, with going into it and leaving it;
+ * so is one choice in a list; so is one key outside a field.
+ */
+class Hand {
+  actions = 0
+  constructor(readonly page: Page) {}
+
+  async click(what: Locator): Promise<void> {
+    this.actions += 1
+    await what.click()
+  }
+  async type(label: string, text: string): Promise<void> {
+    this.actions += 1
+    const field = this.page.getByLabel(label, { exact: true })
+    await field.fill(text)
+    await field.press('Enter')
+  }
+  async pick(label: string, option: string): Promise<void> {
+    this.actions += 1
+    await this.page.getByLabel(label, { exact: true }).selectOption(option)
+  }
+  open = (kind: string) => this.click(this.page.getByRole('tab', { name: new RegExp(`^${kind}`) }))
+  press = (name: string) => this.click(this.page.getByRole('button', { name, exact: true }))
+}
+
+async function openEmptyJob(page: Page): Promise<void> {
+  await page.goto('/jobs/new')
+  await page.getByLabel('Job', { exact: true }).fill('Newcomer veranda')
+  await page.getByLabel('Place', { exact: true }).fill('Sallow Lane again')
+  for (const unknown of await page.getByRole('checkbox').all()) await unknown.check()
+  await page.getByRole('button', { name: 'Open the job' }).click()
+  await page.waitForURL(/\/site$/)
+}
+
+test('a newcomer models the veranda of site C from its listed sizes', async ({ page }) => {
+  await signIn(page, 'designer')
+  await openEmptyJob(page)
+  const hand = new Hand(page)
+
+  // The kind of place, with the sizes that were listed.
+  await hand.click(page.getByRole('radio', { name: /^Veranda against a house wall/ }))
+  await hand.type('Length along the wall, x', '7200')
+  await hand.type('Depth from the wall, y', '3.1 m')
+  await hand.type('Ceiling height at the wall', '2650')
+  await hand.type('Ceiling height at the open edge', `8' 8 5/16"`)
+  await hand.type('Joist spacing', '60 cm')
+  await hand.press('Start the site')
+
+  await hand.open('Covers')
+  await hand.click(page.getByRole('button', { name: /^timber ceiling/ }))
+  await hand.type('Void above', '205')
+
+  await hand.open('Obstacles')
+  const round = async (kind: string, x: string, y: string, across: string, foot: string, top: string) => {
+    await hand.press(kind)
+    await hand.type('Middle x', x)
+    await hand.type('Middle y', y)
+    await hand.type('Across', across)
+    // From above: a top below the old foot is refused, so what hangs lower gets its foot first.
+    if (kind === 'Lamp') await hand.type('Foot', foot)
+    await hand.type('Top', top)
+    if (kind !== 'Lamp') await hand.type('Foot', foot)
+  }
+  await round('Fan', '5.2', '1.55', '1.3', '2.33', '2.43')
+  await round('Lamp', '2.6', '1.55', '45 cm', '1.65', '1.95')
+  await hand.press('Blind')
+  await hand.type('Top', '2.6')
+  await hand.press('Door')
+  await hand.type('To x', '4.72')
+  await hand.type('From x', '3.9')
+  await hand.type('From y', '0')
+  await hand.type('To y', '0.82')
+  await hand.type('Top', '2040')
+
+  await hand.open('Tables')
+  await hand.press('Table')
+  await hand.type('Middle x', '2.6')
+  await hand.type('Long', '2.4')
+  await hand.type('Deep', '0.9')
+  await hand.type('Along it, lower side', '4')
+  await hand.type('Along it, upper side', '4')
+  await hand.type('From the edge', '270')
+  await hand.type('Group', 'T')
+  await hand.press('Set 8 seats')
+
+  await hand.press('Seats in rows')
+  await hand.type('First seat x', '5.85')
+  await hand.type('First seat y', '1.7')
+  await hand.type('In a row', '2')
+  await hand.type('Apart', '0.7')
+  await hand.type('Group', 'D')
+  await hand.press('Set 2 seats')
+  await hand.pick('Counts as', 'not heated')
+  await hand.type('Body plane', '0.5')
+  await hand.type('Head plane', '1')
+
+  console.log(`actions: ${hand.actions}`)
+  expect(hand.actions).toBeLessThanOrEqual(mostActions)
+  await expect(page.getByText('Saved', { exact: false }).first()).toBeVisible()
+  await expect.poll(async () => (await readJob(page.request, /Newcomer/)).site.seats.at(-1)?.headHeight).toBe(1)
+  const demo = (await readJob(page.request, /^Sallow Lane/)).site
+  compare((await readJob(page.request, /Newcomer/)).site, demo)
+})
+
+/** The same place as the demo's, each size within the tolerance that it was listed with, else ± 25 mm (house rule). */
+function compare(site: Site, demo: Site): void {
+  const sizeOf = (label: string) => demo.dimensions.find((size) => size.label === label)!
+  const [length, depth, height, spacing] = [
+    'veranda length, x',
+    'veranda depth, y',
+    'ceiling height',
+    'joist spacing',
+  ].map((label) => sizeOf(label).tolerance) as [number, number, number, number]
+  const within = (value: number, wanted: number, tolerance: number) =>
+    expect(Math.abs(value - wanted), `${value} for ${wanted}`).toBeLessThanOrEqual(tolerance + 1e-9)
+  expect(site.floor).toHaveLength(demo.floor.length)
+  site.floor.forEach(([x, y], i) => {
+    within(x, demo.floor[i]![0], length)
+    within(y, demo.floor[i]![1], depth)
+  })
+  const [own, listed] = [coverPlane(site.covers[0]!)!, coverPlane(demo.covers[0]!)!]
+  for (const [x, y] of demo.floor) within(planeHeightAt(own, x, y), planeHeightAt(listed, x, y), height)
+  within(site.covers[0]!.voidDepth!, sizeOf('ceiling void').value, sizeOf('ceiling void').tolerance)
+  expect(site.members).toHaveLength(demo.members.length)
+  site.members.forEach(({ from, to, width, depth: deep }, i) => {
+    const wanted = demo.members[i]!
+    within(from[0], wanted.from[0], Math.max(1, i) * spacing)
+    within(to[1], wanted.to[1], depth)
+    expect([width, deep]).toEqual([wanted.width, wanted.depth])
+  })
+  for (const wanted of demo.obstacles) {
+    const made = site.obstacles.find(({ kind }) => kind === wanted.kind)!
+    expect(made.material, made.kind).toMatch(/unknown|combustible/)
+    within2(extent(made), extent(wanted), 0.025)
+  }
+  expect(site.obstacles).toHaveLength(demo.obstacles.length)
+  const placed = (of: Site) =>
+    of.seats.map(({ x, y, priority }) => `${x.toFixed(2)} ${y.toFixed(2)} ${priority}`).toSorted()
+  expect(placed(site)).toEqual(placed(demo))
+}
+
+/** Lowest and highest x, y, z of an obstacle. */
+function extent({ shape }: Obstacle): number[] {
+  if (shape.kind === 'box') return [...shape.x, ...shape.y, ...shape.z]
+  if (shape.kind === 'prism') throw new Error('no prism on this site')
+  const { centre, radius, z } = shape
+  return [centre[0] - radius, centre[0] + radius, centre[1] - radius, centre[1] + radius, ...z]
+}
+
+function within2(values: readonly number[], wanted: readonly number[], tolerance: number): void {
+  values.forEach((value, i) =>
+    expect(Math.abs(value - wanted[i]!), `${value} for ${wanted[i]}`).toBeLessThanOrEqual(tolerance),
+  )
+}
