@@ -8,7 +8,7 @@ const said = (change: Parameters<typeof brief>[0]) => {
   const place = { site: site([seat('S1')]), brief: brief(change), models }
   const layout = { title: 'One', heaters: [heater('H1')] }
   const variants = [{ number: 1, layout, ...layoutFigures({ ...place, layout }) }]
-  return sheetCautions({ brief: place.brief, models, units: 'metric', variants }).join(' ')
+  return sheetCautions({ brief: place.brief, site: place.site, models, units: 'metric', variants }).join(' ')
 }
 
 describe('what a sheet says of the heat', () => {
