@@ -161,3 +161,67 @@ function within2(values: readonly number[], wanted: readonly number[], tolerance
     expect(Math.abs(value - wanted[i]!), `${value} for ${wanted[i]}`).toBeLessThanOrEqual(tolerance),
   )
 }
+
+test('what cannot be is refused beside its field and nothing typed is lost; a corner moves by hand, by key and by typing', async ({
+  page,
+}) => {
+  await signIn(page, 'designer')
+  const before = (await readJob(page.request, /^Sallow Lane/)).site
+  await page.goto(`/jobs/${(await readJob(page.request, /^Sallow Lane/)).id}/site`)
+  await page.getByRole('tab', { name: /^Floor/ }).click()
+  await page.getByText('All corners as text').click()
+  const corners = page.getByLabel('Corners, one a line: x, y')
+  const many = Array.from({ length: 10_000 }, (_, i) => `${i / 100}, ${i % 7}`).join('\n')
+  await corners.evaluate((field, text) => {
+    if (!(field instanceof HTMLTextAreaElement)) return
+    field.select()
+    const clipboardData = new DataTransfer()
+    clipboardData.setData('text/plain', text)
+    field.dispatchEvent(new ClipboardEvent('paste', { clipboardData, bubbles: true, cancelable: true }))
+  }, many)
+  await page.getByRole('button', { name: 'Take these corners' }).click()
+  await expect(page.getByText('An outline has at most 200 corners; here are 10,000 lines.')).toBeVisible()
+  expect(await corners.inputValue()).toBe(many)
+  await corners.fill('0, 0\n7.2, 3.1\n7.2, 0\n0, 3.1')
+  await page.getByRole('button', { name: 'Take these corners' }).click()
+  await expect(page.getByText(/Edges 1 and 3 cross/)).toBeVisible()
+
+  await page.getByRole('tab', { name: /^Covers/ }).click()
+  await page.getByRole('button', { name: /^tongue-and-groove/ }).click()
+  for (const corner of [1, 2]) {
+    const height = page.getByLabel(`Corner ${corner} height`, { exact: true })
+    await height.fill(corner === 1 ? '-1' : '300 mm')
+    await height.press('Enter')
+    await expect(
+      page.getByText(/above the floor\. Corner 1 is at −1\.00 m|Over seat T\d the cover reaches down/).first(),
+    ).toBeVisible()
+    expect(await height.inputValue()).toBe(corner === 1 ? '-1' : '300 mm')
+    await height.press('Escape')
+  }
+  expect((await readJob(page.request, /^Sallow Lane/)).site).toEqual(before)
+
+  await page.getByRole('tab', { name: /^Floor/ }).click()
+  const corner = async () => (await readJob(page.request, /^Sallow Lane/)).site.floor[2]!
+  const plan = page.getByRole('application')
+  await page.getByRole('button', { name: 'Corner 3', exact: true }).click()
+  await plan.focus()
+  await plan.press('Shift+ArrowRight')
+  await expect.poll(corner).toEqual([7.3, 3.1])
+  const y = page.getByLabel('Corner 3, y', { exact: true })
+  await y.fill('3200')
+  await y.press('Enter')
+  await expect.poll(corner).toEqual([7.3, 3.2])
+  const undo = page.getByRole('button', { name: 'Undo' }).first()
+  await undo.click()
+  await undo.click()
+  await expect.poll(corner).toEqual([7.2, 3.1])
+  const seat = (await page.locator('[data-seat="D2"] circle').first().boundingBox())!
+  await page.mouse.move(seat.x + seat.width / 2, seat.y + seat.height / 2)
+  await page.mouse.down()
+  for (let step = 1; step <= 5; step++)
+    await page.mouse.move(seat.x + seat.width / 2, seat.y + seat.height / 2 - 8 * step)
+  await page.mouse.up()
+  await expect.poll(async () => (await readJob(page.request, /^Sallow Lane/)).site.seats.at(-1)!.y).toBeGreaterThan(1.8)
+  await undo.click()
+  await expect.poll(async () => (await readJob(page.request, /^Sallow Lane/)).site).toEqual(before)
+})

@@ -144,6 +144,9 @@ function CornerFields({ chosen, outline, part, at, replace }: CornerFieldsProps)
   )
 }
 
+/** A list as long as this is put in at once: a browser's own way takes a minute for 10,000 lines, characters. */
+const longPaste = 2000
+
 /** All corners as text, one a line: a typed way for the whole outline, and for a list that comes from elsewhere. */
 function PastedCorners({ outline, replace }: { outline: readonly Vec2[]; replace: OutlineFieldsProps['replace'] }) {
   const { site, change } = useSiteEditing()
@@ -172,6 +175,14 @@ function PastedCorners({ outline, replace }: { outline: readonly Vec2[]; replace
           value={typed ?? kept}
           error={error}
           spellCheck={false}
+          onPaste={(event) => {
+            const pasted = event.clipboardData.getData('text/plain')
+            if (pasted.length < longPaste) return
+            event.preventDefault()
+            const { value, selectionStart, selectionEnd } = event.currentTarget
+            setTyped(value.slice(0, selectionStart) + pasted + value.slice(selectionEnd))
+            setError(null)
+          }}
           onChange={(event) => {
             setTyped(event.target.value)
             setError(null)
