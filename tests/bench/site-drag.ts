@@ -130,7 +130,7 @@ async function drag(selector: string): Promise<number[]> {
 const at = (sorted: readonly number[], part: number) =>
   sorted[Math.min(sorted.length - 1, Math.floor(part * sorted.length))] ?? Number.NaN
 
-let revision = await save(largeSite(kept.site), kept.revision)
+const revision = await save(largeSite(kept.site), kept.revision)
 try {
   await page.goto(url.replace('/api', ''))
   await page.waitForSelector('[data-seat="s1999"]')
@@ -148,6 +148,6 @@ try {
     if (!(times.length >= rounds * steps * 0.5 && at(times, 0.95) <= limit)) process.exitCode = 1
   }
 } finally {
-  revision = await save(kept.site, revision)
+  await save(kept.site, revision)
   await browser.close()
 }
