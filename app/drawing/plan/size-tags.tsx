@@ -42,8 +42,8 @@ export function placeSizeTags(site: Site, view: PlanView, pen: Pen, all: boolean
       const [left, top] = at ?? [16, 24 + 16 * i]
       const width = textWidth(text, pen.text, 500)
       const spots = Array.from({ length: 24 }, (_, k): Vec2 => {
-        const down = (k % 2 === 0 ? 1 : -1) * Math.ceil(k / 2) * (pen.text + 6)
-        return [Math.max(6, Math.min(left + 10, view.width - width - 6)), Math.max(14, top + 4 + down)]
+        const down = k % 2 === 0 ? -9 - (k / 2) * (pen.text + 6) : 19 + ((k - 1) / 2) * (pen.text + 6)
+        return [Math.max(6, Math.min(left + 10, view.width - width - 6)), Math.max(14, top + down * pen.k)]
       })
       const spot = spots.find(([sx, sy]) => isClear(patchOf(sx, sy, text, pen), taken, 1)) ?? spots[0]
       if (!spot) return []
