@@ -1,5 +1,6 @@
 import { duplicateHeaters, placeHeaters, removeHeaters, type HeaterPlace } from '#app/domain/layout/edits.ts'
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
+import type { ChosenFinding } from '#app/editor/nearest-shown.ts'
 import { historyOf, record, redo, undo, type History } from '#app/editor/history.ts'
 import type { GestureStep } from '#app/editor/tools/gesture.ts'
 
@@ -10,6 +11,8 @@ export interface EditorState {
   readonly draft: GestureStep | null
   readonly selected: readonly string[]
   readonly seatId: string | null
+  /** The finding whose nearest pair is drawn; null: none chosen. */
+  readonly finding: ChosenFinding | null
   readonly copied: readonly MountedHeater[]
   /** Model that the next click on the plan places; null: none. */
   readonly placing: string | null
@@ -30,6 +33,7 @@ export type EditorAction =
   | { type: 'undo' | 'redo' | 'copy' | 'paste' | 'duplicate' | 'remove' | 'select all' | 'let go' }
   | { type: 'select'; ids: readonly string[] }
   | { type: 'seat'; id: string | null }
+  | { type: 'finding'; finding: ChosenFinding | null }
   | { type: 'placing'; model: string | null }
   | { type: 'say'; said: string }
 
@@ -39,6 +43,7 @@ export const editorStateOf = (layout: Layout): EditorState => ({
   draft: null,
   selected: [],
   seatId: null,
+  finding: null,
   copied: [],
   placing: null,
   said: '',
@@ -94,16 +99,25 @@ export function editorReducer(state: EditorState, action: EditorAction): EditorS
       return { ...state, selected: layout.heaters.map((heater) => heater.id) }
     case 'let go':
       if (state.draft) return { ...state, draft: null, dropped: state.dropped + 1 }
-      return state.placing ? { ...state, placing: null } : { ...state, selected: [], seatId: null }
+      return state.placing ? { ...state, placing: null } : { ...state, selected: [], seatId: null, finding: null }
     case 'select':
       return { ...state, selected: action.ids }
     case 'seat':
       return { ...state, seatId: action.id }
+    case 'finding':
+      return withFinding(state, action.finding)
     case 'placing':
       return { ...state, placing: action.model, draft: null }
     case 'say':
       return { ...state, said: action.said }
   }
+}
+
+function withFinding(state: EditorState, finding: ChosenFinding | null): EditorState {
+  if (!finding) return { ...state, finding: null }
+  const { kind, id } = finding.subject
+  const about = kind === 'heater' ? { selected: [id] } : kind === 'seat' ? { seatId: id } : {}
+  return { ...state, ...about, finding, said: `${id === 'layout' ? '' : `${id}: `}${finding.title}` }
 }
 
 function edited(state: EditorState, layout: Layout, selected: readonly string[], said: string): EditorState {

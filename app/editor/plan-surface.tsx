@@ -2,6 +2,8 @@ import { useEffect, useMemo, useRef, useState, type Dispatch, type FocusEvent, t
 import { Button, IconButton } from '#app/components/button.tsx'
 import type { SeatFigures } from '#app/domain/comfort/seat-warmth.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { PlanCaution } from '#app/domain/rules/cautions-on-plan.ts'
+import type { Finding } from '#app/domain/rules/finding.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength } from '#app/domain/units.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
@@ -11,6 +13,8 @@ import { toScreen, workingMargins, type PlanMargins } from '#app/drawing/plan/pl
 import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
 import { shownLayout, type EditorAction, type EditorState } from '#app/editor/editor-state.ts'
 import { emittersOf } from '#app/editor/map-questions.ts'
+import type { ShownNearest } from '#app/editor/nearest-shown.ts'
+import { PlanFindings } from '#app/editor/plan-findings.tsx'
 import { PlanMarks, PlanScaleBar, PlanUnder } from '#app/editor/plan-marks.tsx'
 import { HoldLines, Marquee, PlanHandles } from '#app/editor/plan-overlay.tsx'
 import type { PointedStore } from '#app/editor/pointed.ts'
@@ -41,6 +45,10 @@ interface PlanSurfaceProps {
   readonly coverTolerance: number | null
   readonly onPlace: (at: Vec2, free: boolean) => void
   readonly onSeat: (id: string) => void
+  /** Pairs and cautions that the findings have to show; none while something moves. */
+  readonly nearest: readonly ShownNearest[]
+  readonly cautions: readonly PlanCaution[]
+  readonly onFinding: (finding: Finding) => void
 }
 
 const pen = screenPen('dusk')
@@ -149,6 +157,16 @@ export function PlanSurface(props: PlanSurfaceProps) {
             fluxUnit={choice.fluxUnit}
             words={props.words}
           />
+          {state.draft === null && (
+            <PlanFindings
+              {...{ site, models, view, pen }}
+              layout={kept}
+              nearest={props.nearest}
+              cautions={props.cautions}
+              words={props.words}
+              onFinding={props.onFinding}
+            />
+          )}
           {state.draft && <HoldLines lines={state.draft.lines} view={view} />}
           {marquee && <Marquee corners={marquee} view={view} />}
           {lead && !readOnly && state.selected.length === 1 && (

@@ -3,6 +3,7 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
+import type { NearestPair } from '#app/drawing/nearest/nearest-dimension.tsx'
 import { screenPen } from '#app/drawing/pen.ts'
 import { cutAlong, type SectionCut } from '#app/drawing/plan/section-cut.tsx'
 import { SectionDrawing, sectionTitle } from '#app/drawing/section/section-drawing.tsx'
@@ -26,6 +27,7 @@ interface SectionsProps {
   readonly scale: QuantityScale
   readonly sections: SectionsView | null
   readonly selected: readonly string[]
+  readonly nearest: readonly NearestPair[]
 }
 
 const pen = screenPen('dusk')
@@ -62,6 +64,7 @@ export const Sections = memo(function Sections(props: SectionsProps) {
             quantity={scale}
             picture={same ? (sections?.pictures[i] ?? null) : null}
             selected={chosen}
+            nearest={props.nearest}
           />
           <figcaption className="h-6 pl-13 text-xs text-dusk-line opacity-80">
             {sectionTitle(layout, view.cut)}

@@ -16,6 +16,7 @@ import { HeatersTable } from '#app/editor/panels/heaters-table.tsx'
 import { PlacePanel } from '#app/editor/panels/place-panel.tsx'
 import { SeatsTable } from '#app/editor/panels/seats-table.tsx'
 import { UnheldHeater } from '#app/editor/panels/unheld-heater.tsx'
+import { findChosen } from '#app/editor/nearest-shown.ts'
 import type { ChangeSite } from '#app/editor/site-change.ts'
 import type { Editor } from '#app/editor/use-editor.ts'
 import type { ShownFigures } from '#app/editor/use-figures.ts'
@@ -161,12 +162,10 @@ function NothingChosen({ subject }: PartProps) {
 export function Findings({ subject }: PartProps) {
   const { editor, figures, layout, site, brief, choice, readOnly, onExplain, onSite, sizesHref } = subject
   const assumed = assumedInWords(site, site.displayUnits)
-  const onPoint = (about: Finding['subject']) => {
-    if (about.kind === 'heater') editor.dispatch({ type: 'select', ids: [about.id] })
-    if (about.kind === 'seat') {
-      editor.dispatch({ type: 'seat', id: about.id })
-      onExplain(about.id)
-    }
+  const chosen = findChosen(figures.findings, editor.state.finding)
+  const onPoint = (finding: Finding) => {
+    editor.dispatch({ type: 'finding', finding: finding === chosen ? null : finding })
+    if (finding.subject.kind === 'seat') onExplain(finding.subject.id)
   }
   const actionsFor = ({ rule, outcome, subject: about }: Finding) => {
     if (rule !== 'supported' || outcome !== 'fails') return null
@@ -179,7 +178,7 @@ export function Findings({ subject }: PartProps) {
         findings={figures.findings}
         units={site.displayUnits}
         fluxUnit={choice.fluxUnit}
-        onPoint={onPoint}
+        {...{ chosen, onPoint }}
         {...(readOnly ? {} : { actionsFor })}
       />
       {assumed.length > 0 && (

@@ -6,6 +6,7 @@ import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { largestTolerance } from '#app/domain/site/tolerance.ts'
 import { irradianceScale } from '#app/drawing/heat/quantity.ts'
+import type { NearestPair } from '#app/drawing/nearest/nearest-dimension.tsx'
 import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
 import { ButtonLink, IconButton } from '#app/components/button.tsx'
 import { JobFrame, type Viewer } from '#app/components/page-frame.tsx'
@@ -26,6 +27,7 @@ import { cutsOf, Sections } from '#app/editor/sections.tsx'
 import type { ChangeSite } from '#app/editor/site-change.ts'
 import { useAutosave } from '#app/editor/use-autosave.ts'
 import { useEditor } from '#app/editor/use-editor.ts'
+import { useFindingMarks } from '#app/editor/use-finding-marks.ts'
 import { useFigures } from '#app/editor/use-figures.ts'
 import { useFlux } from '#app/editor/use-flux.ts'
 import { useMedia, useRoom } from '#app/editor/use-media.ts'
@@ -60,6 +62,7 @@ export interface VariantEditorProps {
 }
 
 const noCuts: readonly SectionCut[] = []
+const noPairs: readonly NearestPair[] = []
 
 /** The variant page: figures, plan, findings and seats of one layout, and the hand that changes it. */
 export function VariantEditor(props: VariantEditorProps) {
@@ -93,6 +96,7 @@ export function VariantEditor(props: VariantEditorProps) {
   const moving = state.draft !== null
   const beat = useBeat(moving)
   const figures = useFigures({ site, brief, layout, models, hanging: props.hanging, shade: choice.shade, moving, beat })
+  const findingMarks = useFindingMarks(state, dispatch, figures, site.displayUnits)
   const scale = useMemo(() => scaleOf(choice, brief, site.displayUnits), [choice, brief, site])
   const coverTolerance = useMemo(() => toleranceOfCovers(site), [site])
   const question = useMemo(
@@ -242,6 +246,7 @@ export function VariantEditor(props: VariantEditorProps) {
             coverTolerance={coverTolerance}
             onPlace={editor.placeAt}
             onSeat={explain}
+            {...findingMarks}
           />
           {withSections && (
             <div className="h-[clamp(9rem,24dvh,13.75rem)] flex-none border-t border-[#26324c]">
@@ -251,6 +256,7 @@ export function VariantEditor(props: VariantEditorProps) {
                 scale={heat}
                 sections={flux.sections}
                 selected={state.selected}
+                nearest={moving ? noPairs : findingMarks.nearest}
               />
             </div>
           )}

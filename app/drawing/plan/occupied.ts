@@ -18,6 +18,14 @@ export const patch = (x: number, y: number, width: number, height: number, turnD
   turnDeg,
 })
 
+/** The patch of a turned rectangle given by its corners in order. */
+export function patchAround(corners: readonly Vec2[]): Patch {
+  const [a = [0, 0], b = a, c = b] = corners
+  const turnDeg = (Math.atan2(b[1] - a[1], b[0] - a[0]) * 180) / Math.PI
+  const [width, height] = [Math.hypot(b[0] - a[0], b[1] - a[1]), Math.hypot(c[0] - b[0], c[1] - b[1])]
+  return patch((a[0] + c[0]) / 2, (a[1] + c[1]) / 2, width, height, turnDeg)
+}
+
 const axesOf = (p: Patch): readonly [Vec2, Vec2] => {
   const turn = (p.turnDeg * Math.PI) / 180
   return [

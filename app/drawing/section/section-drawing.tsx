@@ -30,6 +30,8 @@ import {
   topOf,
   type SectionView,
 } from '#app/drawing/section/section-view.ts'
+import type { NearestPair } from '#app/drawing/nearest/nearest-dimension.tsx'
+import { SectionNearest } from '#app/drawing/section/section-nearest.tsx'
 import { CutWall } from '#app/drawing/section/cut-wall.tsx'
 import type { SectionPicture } from '#app/drawing/section/section-values.ts'
 import { fontFamily } from '#app/drawing/theme.ts'
@@ -55,6 +57,8 @@ export interface SectionProps {
   /** From `sectionPicture`; null while it is computed and without heaters. */
   readonly picture: SectionPicture | null
   readonly selected?: ReadonlySet<string>
+  /** Nearest pairs of findings; those that the section shows are drawn. */
+  readonly nearest?: readonly NearestPair[]
 }
 
 const place = ({ x, y }: MountedHeater): Vec2 => [x, y]
@@ -144,6 +148,7 @@ function Section(props: SectionProps) {
       ))}
       {shownHeight ? <HeightOf heater={shownHeight.heater} site={site} view={view} pen={pen} /> : null}
       <SectionHeights {...{ site, covers, view, pen }} />
+      {props.nearest ? <SectionNearest pairs={props.nearest} {...{ site, layout, view, pen }} /> : null}
     </g>
   )
 }

@@ -2,7 +2,7 @@ import { useState, type ReactNode } from 'react'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
 import { formatLength, type DisplayUnits } from '#app/domain/units.ts'
 import { OutcomeMark } from '#app/components/outcome-mark.tsx'
-import { groupFindings, summaryOf, tightestPasses } from '#app/editor/finding-groups.ts'
+import { groupFindings, summaryOf, tightestPasses, type FindingGroup } from '#app/editor/finding-groups.ts'
 import { fluxFigure, noFigure, signedFigure } from '#app/editor/figures.ts'
 import type { FluxUnit } from '#app/editor/view-choice.ts'
 
@@ -26,19 +26,23 @@ interface FindingsListProps {
   readonly findings: readonly Finding[]
   readonly units: DisplayUnits
   readonly fluxUnit: FluxUnit
-  /** Shows on the plan what a finding is about. */
-  readonly onPoint: (subject: Finding['subject']) => void
+  /** Shows on the drawings what a finding is about, its nearest pair with it. */
+  readonly onPoint: (finding: Finding) => void
+  /** The finding that the drawings show; null: none. */
+  readonly chosen: Finding | null
   /** What may be done at once about a finding; null: nothing. */
   readonly actionsFor?: (finding: Finding) => ReactNode
 }
 
 /** What was checked: failing first, each rule once with its tightest margin, tolerance, limit and source. */
-export function FindingsList({ findings, units, fluxUnit, onPoint, actionsFor }: FindingsListProps) {
+export function FindingsList({ findings, units, fluxUnit, chosen, onPoint, actionsFor }: FindingsListProps) {
   const [unfolded, setUnfolded] = useState(false)
   const groups = groupFindings(findings)
   const others = groups.filter(({ worst }) => worst.outcome !== 'pass')
   const passes = tightestPasses(groups)
-  const shown = [...others, ...(unfolded ? passes : passes.slice(0, passesShown))]
+  const isChosen = ({ worst, others: elsewhere }: FindingGroup) =>
+    chosen !== null && [worst, ...elsewhere].includes(chosen)
+  const shown = [...others, ...passes.filter((group, i) => unfolded || i < passesShown || isChosen(group))]
   const folded = groups.length - shown.length
   return (
     <section aria-labelledby="findings-title" className="border-t border-rule px-4.5 py-3.5">
@@ -51,12 +55,12 @@ export function FindingsList({ findings, units, fluxUnit, onPoint, actionsFor }:
       <ul>
         {shown.map(({ key, worst, others: elsewhere }) => (
           <li key={key} className="border-t border-rule">
-            <FindingRow finding={worst} {...{ units, fluxUnit, onPoint }} />
+            <FindingRow finding={worst} {...{ units, fluxUnit, chosen, onPoint }} />
             {actionsFor?.(worst)}
             {elsewhere.length > 0 && (
               <Others
                 others={elsewhere}
-                {...{ worst, units, fluxUnit, onPoint }}
+                {...{ worst, units, fluxUnit, chosen, onPoint }}
                 {...(actionsFor ? { actionsFor } : {})}
               />
             )}
@@ -83,10 +87,10 @@ interface OthersProps extends FindingsListProps {
 }
 
 /** The same finding elsewhere, folded. */
-function Others({ worst, others, units, fluxUnit, onPoint, actionsFor }: Omit<OthersProps, 'findings'>) {
+function Others({ worst, others, units, fluxUnit, chosen, onPoint, actionsFor }: Omit<OthersProps, 'findings'>) {
   const kind = worst.subject.kind === 'seat' ? 'seat' : 'heater'
   return (
-    <details className="pb-1 pl-6">
+    <details className="pb-1 pl-6" open={chosen !== null && others.includes(chosen) ? true : undefined}>
       <summary className="min-h-6 cursor-pointer text-2xs text-ink-2 hover:text-ink pointer-coarse:min-h-11">
         {others.length} more {others.length === 1 ? kind : `${kind}s`}
       </summary>
@@ -95,9 +99,11 @@ function Others({ worst, others, units, fluxUnit, onPoint, actionsFor }: Omit<Ot
           <li key={`${finding.subject.id} ${i}`} className={actionsFor?.(finding) ? 'w-full' : ''}>
             <button
               type="button"
-              onClick={() => onPoint(finding.subject)}
+              ref={finding === chosen ? showRow : undefined}
+              onClick={() => onPoint(finding)}
+              aria-pressed={finding === chosen}
               title={finding.title}
-              className="min-h-6 cursor-pointer text-2xs text-ink-2 hover:underline pointer-coarse:min-h-11"
+              className={`min-h-6 cursor-pointer text-2xs hover:underline pointer-coarse:min-h-11 ${finding === chosen ? 'font-strong text-ink underline' : 'text-ink-2'}`}
             >
               {finding.subject.id} {finding.margin === null ? '' : marginText(finding, units, fluxUnit)}
             </button>
@@ -113,7 +119,10 @@ interface FindingRowProps extends Omit<FindingsListProps, 'findings' | 'actionsF
   readonly finding: Finding
 }
 
-function FindingRow({ finding, units, fluxUnit, onPoint }: FindingRowProps) {
+/** A row that has just been chosen comes into view, wherever it was chosen. */
+const showRow = (row: HTMLElement | null) => row?.scrollIntoView({ block: 'nearest' })
+
+function FindingRow({ finding, units, fluxUnit, chosen, onPoint }: FindingRowProps) {
   const figure = (value: number | null) => findingFigure(value, finding.unit, units, fluxUnit)
   const limits =
     finding.value === null || finding.limit === null
@@ -123,8 +132,10 @@ function FindingRow({ finding, units, fluxUnit, onPoint }: FindingRowProps) {
   return (
     <button
       type="button"
-      onClick={() => onPoint(finding.subject)}
-      className="grid w-full cursor-pointer grid-cols-[14px_1fr_auto] gap-x-2 py-1.5 text-left hover:bg-paper-sunk"
+      ref={finding === chosen ? showRow : undefined}
+      onClick={() => onPoint(finding)}
+      aria-pressed={finding === chosen}
+      className={`grid w-full cursor-pointer grid-cols-[14px_1fr_auto] gap-x-2 py-1.5 text-left hover:bg-paper-sunk ${finding === chosen ? 'bg-paper-sunk' : ''}`}
     >
       <span className="pt-0.5">
         <OutcomeMark outcome={finding.outcome} />
