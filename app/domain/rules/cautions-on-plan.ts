@@ -38,7 +38,7 @@ const kinds: Readonly<Record<string, CautionKind>> = {
 /** The cautions that change placement, each where its heater or seat is: findings that fail or want measuring. */
 export function cautionsOnPlan(
   layout: Pick<Layout, 'heaters'>,
-  warmth: readonly SeatWarmth[],
+  warmth: readonly Pick<SeatWarmth, 'seat'>[],
   findings: readonly Finding[],
 ): PlanCaution[] {
   return findings.flatMap((finding): PlanCaution[] => {
@@ -56,7 +56,7 @@ export function cautionsOnPlan(
 function placeOf(
   { kind, id }: Finding['subject'],
   layout: Pick<Layout, 'heaters'>,
-  warmth: readonly SeatWarmth[],
+  warmth: readonly Pick<SeatWarmth, 'seat'>[],
 ): Vec2 | null {
   if (kind === 'layout') return null
   const place =
