@@ -7,6 +7,7 @@ import { screenPen } from '#app/drawing/pen.ts'
 import { placeCautions } from '#app/drawing/plan/caution-places.ts'
 import { planFigure } from '#app/drawing/plan/nearest.tsx'
 import { isClear, meets, patch, type Patch } from '#app/drawing/plan/occupied.ts'
+import { cutAlong } from '#app/drawing/plan/section-cut.tsx'
 import { isInSection } from '#app/drawing/section/section-nearest.tsx'
 import { sectionViewOf } from '#app/drawing/section/section-view.ts'
 import { chance } from '#tests/support/chance.ts'
@@ -59,7 +60,7 @@ describe('a nearest pair on the plan', () => {
 })
 
 describe('a nearest pair in a section', () => {
-  const cut = sectionViewOf(plainSite(), { letter: 'A', along: 'y', at: 3, looking: 1 }, { width: 400 })
+  const cut = sectionViewOf(plainSite(), cutAlong(plainSite(), 'A', 'y', 3, 1), { width: 400 })
   const pair = (from: NearestPair['from'], to: NearestPair['to']): NearestPair => ({
     from,
     to,
