@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { chosenRuleSetSchema } from '#app/domain/rules/rule-set.ts'
 
 /** What the customer asked for and what the computation needs of it. °C, m/s, clo, met, minutes, V, A. */
 export const briefSchema = z.strictObject({
@@ -37,6 +38,8 @@ export const briefSchema = z.strictObject({
     .nullable(),
   /** Band of horizontal irradiance on the body plane, W/m². */
   target: z.strictObject({ low: z.number().nonnegative(), high: z.number().positive(), source: z.string().max(200) }),
+  /** The rule set that holds at the place, as it was when it was chosen; absent: none chosen. */
+  ruleSet: chosenRuleSetSchema.optional(),
   /** Fields answered with "don't know": they hold a stated default and stay visible as assumptions. */
   assumed: z.array(z.string().max(60)).max(40),
 })

@@ -1,5 +1,6 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { figureOfRuleSet } from '#app/domain/rules/rule-set.ts'
 
 /** A limit on what falls on a guest, with where it comes from. */
 export interface CautionLimit {
@@ -59,7 +60,7 @@ const headRule = (stayMinutes: number) =>
   stayMinutes >= houseRules.longStayMinutes.value ? houseRules.headCautionLongStay : houseRules.headCautionShortStay
 
 /** The limits that hold for a brief: the one source of every caution on what falls on a guest. */
-export function cautionLimits({ stayMinutes, airTemperature }: Brief): CautionLimits {
+export function cautionLimits({ stayMinutes, airTemperature, ruleSet }: Brief): CautionLimits {
   return {
     stop: {
       ...houseRules.irradianceStop,
@@ -68,7 +69,7 @@ export function cautionLimits({ stayMinutes, airTemperature }: Brief): CautionLi
       note: 'Workers, suitably clothed, continuous. It is not a comfort limit and not one for the public.',
     },
     head: {
-      ...headRule(stayMinutes),
+      ...(figureOfRuleSet(ruleSet, 'head-caution') ?? headRule(stayMinutes)),
       relaxedFrom: null,
       fromMemory: false,
       note: 'Covers children and bare skin. An engineer may set another figure.',

@@ -55,9 +55,15 @@ export function thingsAbout(check: HeaterCheck): readonly Solid[] {
   return things
 }
 
-function greatestClearance({ model }: HeaterCheck): number {
+function greatestClearance({ model, brief }: HeaterCheck): number {
   const given = [model.clearanceToCombustible, model.clearanceToNoncombustible]
-  return Math.max(0, ...given.flatMap((clearances) => Object.values(clearances ?? {}).map((length) => length ?? 0)))
+  const articles = brief.ruleSet?.articles ?? []
+  const byArticle = articles.map(({ rule, figure }) => (rule.startsWith('clearance-') ? figure : 0))
+  return Math.max(
+    0,
+    ...byArticle,
+    ...given.flatMap((clearances) => Object.values(clearances ?? {}).map((length) => length ?? 0)),
+  )
 }
 
 const tolerances = new WeakMap<Solid, number>()

@@ -11,8 +11,10 @@ import { clearanceAbove } from '#app/domain/rules/clearance-above.ts'
 import { clearanceBelow } from '#app/domain/rules/clearance-below.ts'
 import { clearanceFrontOfBeam } from '#app/domain/rules/clearance-front-of-beam.ts'
 import { clearanceSideEnd } from '#app/domain/rules/clearance-side-end.ts'
+import { lampDistance, sprinklerDistance } from '#app/domain/rules/distance-to-kind.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { hangerLength } from '#app/domain/rules/hanger-length.ts'
+import { glowNearStep } from '#app/domain/rules/glow-near-step.ts'
 import { headFlux } from '#app/domain/rules/head-flux.ts'
 import { ingressProtection } from '#app/domain/rules/ingress-protection.ts'
 import { levelAxis } from '#app/domain/rules/level-axis.ts'
@@ -20,6 +22,7 @@ import { plainWhereNoStatePasses } from '#app/domain/rules/movable-states.ts'
 import { mountOffered } from '#app/domain/rules/mount-offered.ts'
 import { mountingHeight } from '#app/domain/rules/mounting-height.ts'
 import { nearInfrared } from '#app/domain/rules/near-infrared.ts'
+import { poleWind } from '#app/domain/rules/pole-wind.ts'
 import { recessBay } from '#app/domain/rules/recess-bay.ts'
 import { recessVoid } from '#app/domain/rules/recess-void.ts'
 import { seatTarget } from '#app/domain/rules/seat-target.ts'
@@ -49,6 +52,10 @@ const heaterRules: readonly ((check: HeaterCheck) => Finding | null | readonly F
   clearanceBelow,
   recessBay,
   recessVoid,
+  sprinklerDistance,
+  lampDistance,
+  glowNearStep,
+  poleWind,
 ]
 
 /**

@@ -86,7 +86,7 @@ export function judgedBy(rule: Rule, titles: Readonly<Record<Outcome, string>>, 
 }
 
 /** The manual as the source of a figure. */
-const manualOf = (model: HeaterModel): string => `Manual of ${model.name}`
+export const manualOf = (model: HeaterModel): string => `Manual of ${model.name}`
 
 /** A rule about one heater. */
 export function heaterRule(

@@ -1,7 +1,7 @@
 import { gapUpTo, nearestOnPlane } from '#app/domain/layout/clear-space.ts'
 import { findingOf, heaterRule, judgedBy, type HeaterCheck, type Rule } from '#app/domain/rules/check.ts'
 import { coversOver } from '#app/domain/rules/about-heater.ts'
-import { clearanceAround, clearanceFor } from '#app/domain/rules/clearance-around.ts'
+import { clearanceAround, clearanceAt } from '#app/domain/rules/clearance-around.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { coverPlane, type Plane } from '#app/domain/site/cover.ts'
 import { isCombustible } from '#app/domain/site/solids.ts'
@@ -40,16 +40,16 @@ export function clearanceAbove(check: HeaterCheck): Finding[] {
 function clearanceToCover(check: HeaterCheck, cover: Cover): Finding[] {
   const combustible = isCombustible(cover.material)
   const weight = combustible ? 'hard stop' : 'soft'
-  const rule: Rule = heaterRule(check, 'clearance-above', weight, 'm')
-  const clearance = clearanceFor(check, combustible)
+  const clearance = clearanceAt(check, combustible, 'above')
+  const rule: Rule = heaterRule(check, 'clearance-above', weight, 'm', clearance?.source)
   const plane = coverPlane(cover)
   if (!clearance || !plane) {
     const why = clearance ? `Three heights of ${cover.name} in one line` : titles(cover.name)['cannot tell']
     return [findingOf(rule, 'cannot tell', { title: why, remedy: 'Enter it from the manual.' })]
   }
-  const shut = toCover(check, cover, rule, clearance.above, false)
+  const shut = toCover(check, cover, rule, clearance.value, false)
   if (cover.swing === 0 || shut.outcome === 'fails') return [shut]
-  const swung = toCover(check, cover, { ...rule, weight: 'soft' }, clearance.above, true)
+  const swung = toCover(check, cover, { ...rule, weight: 'soft' }, clearance.value, true)
   return swung.outcome === 'pass' ? [shut] : [shut, swung]
 }
 

@@ -8,17 +8,25 @@ import {
   type Lie,
 } from '#app/domain/layout/clear-space.ts'
 import { thingsAbout } from '#app/domain/rules/about-heater.ts'
-import { findingOf, heaterRule, type HeaterCheck } from '#app/domain/rules/check.ts'
+import { findingOf, heaterRule, manualOf, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
 import { findingsNear, type Left } from '#app/domain/rules/nearest-things.ts'
+import { figureOfRuleSet, stricterLength, type SourcedFigure } from '#app/domain/rules/rule-set.ts'
+import { tradePractice } from '#app/domain/rules/trade-practice.ts'
 import type { Solid } from '#app/domain/site/solids.ts'
 
-/** The manual's clearance for a thing of this kind; null when it does not state all of it. */
-export function clearanceFor({ model }: HeaterCheck, combustible: boolean): Growth | null {
+/** The clearance for a thing of this kind that governs at a face: the manual's, or a greater one of the rule set. */
+export function clearanceAt({ model, brief }: HeaterCheck, combustible: boolean, face: Face): SourcedFigure | null {
   const given = combustible ? model.clearanceToCombustible : model.clearanceToNoncombustible
-  if (!given) return null
-  const { above, side, end } = given
-  return above === undefined || side === undefined || end === undefined ? null : { above, side, end }
+  const value = given?.[face]
+  const manual = value === undefined ? null : { value, source: manualOf(model) }
+  return combustible ? stricterLength(manual, figureOfRuleSet(brief.ruleSet, `clearance-${face}`)) : manual
+}
+
+/** The governing clearances for a thing of this kind at every face; null when one of them is not stated. */
+export function clearanceFor(check: HeaterCheck, combustible: boolean): Growth | null {
+  const [above, side, end] = (['above', 'side', 'end'] as const).map((face) => clearanceAt(check, combustible, face))
+  return above && side && end ? { above: above.value, side: side.value, end: end.value } : null
 }
 
 interface Around {
@@ -37,7 +45,12 @@ export function clearanceAround(check: HeaterCheck, around: Around, without: (so
     if (clearanceFor(check, combustible) || !things.some((thing) => thing.combustible === combustible)) return []
     const title = `The manual states no clearance to ${combustible ? 'combustible' : 'non-combustible'} material`
     const weight = combustible ? rule.weight : 'soft'
-    return [findingOf({ ...rule, weight }, 'cannot tell', { title, remedy: 'Enter it from the manual.' })]
+    return [
+      findingOf({ ...rule, weight }, 'cannot tell', {
+        title,
+        remedy: `Enter it from the manual.${combustible ? ` ${tradePractice.combustibleEdge.sentence}` : ''}`,
+      }),
+    ]
   })
   const known = things.filter(({ combustible }) => clearanceFor(check, combustible))
   const found = findingsNear(check.site, known, {
@@ -71,13 +84,14 @@ function leftAround(check: HeaterCheck, solid: Solid, faces: readonly Face[]): L
 }
 
 function leftOf(
-  { body }: HeaterCheck,
+  check: HeaterCheck,
   solid: Solid,
   faces: readonly Face[],
   worst: { lie: Lie; part: number } | null,
 ): Left | null {
   const part = worst && solid.parts[worst.part]
   if (!worst || !part || !faces.includes(worst.lie.face)) return null
-  const near = worst.lie.margin < 1 ? gapToBody(body, part) : null
-  return { ...worst.lie, nearest: near && { from: near.from, to: near.to } }
+  const near = worst.lie.margin < 1 ? gapToBody(check.body, part) : null
+  const governing = clearanceAt(check, solid.combustible, worst.lie.face)
+  return { ...worst.lie, nearest: near && { from: near.from, to: near.to }, source: governing?.source }
 }

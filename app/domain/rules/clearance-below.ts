@@ -1,8 +1,9 @@
 import { bodyCorners } from '#app/domain/layout/clear-space.ts'
 import { thingsAbout } from '#app/domain/rules/about-heater.ts'
-import { findingOf, heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.ts'
+import { findingOf, heaterRule, judgedBy, manualOf, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { findingsNear, type Left } from '#app/domain/rules/nearest-things.ts'
+import { figureOfRuleSet, stricterLength } from '#app/domain/rules/rule-set.ts'
 import { boundsApart, boundsOf, uprightPrism, type Convex } from '#app/domain/site/convex.ts'
 import { gapBetween } from '#app/domain/site/gap.ts'
 import type { Solid } from '#app/domain/site/solids.ts'
@@ -22,8 +23,11 @@ const remedy = 'Raise it, or choose a model that needs less below.'
  * of unknown material is combustible. Furniture and movable things are judged by the front of the beam.
  */
 export function clearanceBelow(check: HeaterCheck): Finding[] {
-  const rule = heaterRule(check, 'clearance-below', 'hard stop', 'm')
-  const limit = check.model.clearanceToCombustible?.below ?? null
+  const byManual = check.model.clearanceToCombustible?.below ?? null
+  const manual = byManual === null ? null : { value: byManual, source: manualOf(check.model) }
+  const governing = stricterLength(manual, figureOfRuleSet(check.brief.ruleSet, 'clearance-below'))
+  const limit = governing?.value ?? null
+  const rule = heaterRule(check, 'clearance-below', 'hard stop', 'm', governing?.source)
   const { lowestPoint } = check.heater
   if (limit === null) {
     return [

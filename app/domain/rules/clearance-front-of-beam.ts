@@ -1,9 +1,11 @@
 import { nearestInBeam, type InBeam } from '#app/domain/layout/beam-reach.ts'
 import { apartAtLeast, boundsFromBody } from '#app/domain/layout/clear-space.ts'
 import { thingsAbout } from '#app/domain/rules/about-heater.ts'
-import { findingOf, heaterRule, type HeaterCheck } from '#app/domain/rules/check.ts'
+import { findingOf, heaterRule, manualOf, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { findingsNear, type Left } from '#app/domain/rules/nearest-things.ts'
+import { figureOfRuleSet, stricterLength } from '#app/domain/rules/rule-set.ts'
+import { tradePractice } from '#app/domain/rules/trade-practice.ts'
 import type { Solid } from '#app/domain/site/solids.ts'
 
 /** Beyond the clearance by this much a thing is of no account for the beam, m. */
@@ -14,11 +16,19 @@ const farther = 1
  * in front of the beam; furniture too. What holds the heater is left out.
  */
 export function clearanceFrontOfBeam(check: HeaterCheck): Finding[] {
-  const rule = heaterRule(check, 'clearance-front-of-beam', 'hard stop', 'm')
-  const limit = check.model.clearanceToCombustible?.frontOfBeam ?? null
+  const byManual = check.model.clearanceToCombustible?.frontOfBeam ?? null
+  const manual = byManual === null ? null : { value: byManual, source: manualOf(check.model) }
+  const governing = stricterLength(manual, figureOfRuleSet(check.brief.ruleSet, 'clearance-front-of-beam'))
+  const limit = governing?.value ?? null
+  const rule = heaterRule(check, 'clearance-front-of-beam', 'hard stop', 'm', governing?.source)
   if (limit === null || !check.model.beam) {
     const what = limit === null ? 'The manual states no clearance in front of the beam' : 'No beam data'
-    return [findingOf(rule, 'cannot tell', { title: what, remedy: 'Enter it from the manual.' })]
+    return [
+      findingOf(rule, 'cannot tell', {
+        title: what,
+        remedy: `Enter it from the manual.${limit === null ? ` ${tradePractice.combustibleEdge.sentence}` : ''}`,
+      }),
+    ]
   }
   const things = thingsAbout(check).filter(({ combustible }) => combustible)
   return findingsNear(check.site, things, {

@@ -19,7 +19,7 @@ export interface Finding {
   readonly tolerance: number | null
   readonly value: number | null
   readonly limit: number | null
-  readonly unit: 'm' | 'W/m²' | '°' | 'V' | 'N' | 'none'
+  readonly unit: 'm' | 'W/m²' | '°' | 'V' | 'N' | 'N·m' | 'none'
   /** The manual's page, a rule set's edition and article, or "house rule". */
   readonly source: string
   /** State of a movable thing in which the finding holds: a named condition of use. */

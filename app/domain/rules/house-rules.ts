@@ -23,6 +23,8 @@ export const houseRules = {
   ),
   /** Air temperature from which the eye's limit for near infrared is not relaxed, °C. */
   eyeRelaxedBelow: rule(25, 'house rule: from 300 W/m² at 10 °C straight down to 100 at 25 °C'),
+  /** A bright glow nearer than this to a step is told of, m. */
+  glowNearStep: rule(2),
   /** Threshold of spread and overlap, W/m². */
   overlapThreshold: rule(80),
   /** Tolerance of a coordinate that no dimension moves, m. */

@@ -1,13 +1,18 @@
-import { heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.ts'
+import { heaterRule, judgedBy, manualOf, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
+import { figureOfRuleSet, stricterLength } from '#app/domain/rules/rule-set.ts'
+import { tradePractice } from '#app/domain/rules/trade-practice.ts'
 
-/** The lowest point is not under the manual's least height (hard stop) and not over its recommended greatest (soft). */
+/** The lowest point is not under the least height of the manual or, where it is greater, of the rule set (hard stop) and not over its recommended greatest (soft). */
 export function mountingHeight(check: HeaterCheck): Finding[] {
   const { heater, model } = check
   const value = heater.lowestPoint
-  const { min, recommendedMax } = model.mountingHeight
+  const { min: byManual, recommendedMax } = model.mountingHeight
+  const manual = byManual === null ? null : { value: byManual, source: manualOf(model) }
+  const governing = stricterLength(manual, figureOfRuleSet(check.brief.ruleSet, 'mounting-height'))
+  const min = governing?.value ?? null
   const least = judgedBy(
-    heaterRule(check, 'mounting-height', 'hard stop', 'm'),
+    heaterRule(check, 'mounting-height', 'hard stop', 'm', governing?.source),
     {
       fails: 'Hangs under the least mounting height',
       'measure first': 'Hangs near the least mounting height',
@@ -19,7 +24,10 @@ export function mountingHeight(check: HeaterCheck): Finding[] {
       limit: min,
       margin: min === null ? null : value - min,
       tolerance: 0,
-      remedy: min === null ? 'Enter it from the manual.' : 'Raise it, or choose a model for a lower height.',
+      remedy:
+        min === null
+          ? `Enter it from the manual. ${tradePractice.underside.sentence}`
+          : 'Raise it, or choose a model for a lower height.',
     },
   )
   if (recommendedMax === null) return [least]

@@ -12,6 +12,8 @@ export interface Left {
   readonly limit: number
   readonly margin: number
   readonly nearest: Finding['nearest']
+  /** Where the limit comes from, when that is not the source of the whole rule. */
+  readonly source?: string | undefined
 }
 
 /** How a rule about things near a heater measures and speaks. */
@@ -80,7 +82,11 @@ function findingAbout(site: Site, solid: Solid, found: Left, near: NearRule): Fi
     condition: solid.state,
   }
   const weight = solid.state === null && solid.combustible ? near.rule.weight : 'soft'
-  const finding = judgedBy({ ...near.rule, weight }, near.titles(solid.name), rest)
+  const finding = judgedBy(
+    { ...near.rule, weight, source: found.source ?? near.rule.source },
+    near.titles(solid.name),
+    rest,
+  )
   return finding.outcome === 'pass' ? { ...finding, weight: near.rule.weight, condition: null } : finding
 }
 

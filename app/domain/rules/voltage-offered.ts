@@ -2,6 +2,7 @@ import { electricalPower } from '#app/domain/heaters/power.ts'
 import { findingOf, heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { figureOfRuleSet } from '#app/domain/rules/rule-set.ts'
 
 /**
  * The option ordered is listed for the model, and the supply is not more than 1.1 times its rated voltage (hard stops,
@@ -9,7 +10,8 @@ import { houseRules } from '#app/domain/rules/house-rules.ts'
  */
 export function voltageOffered(check: HeaterCheck): Finding {
   const { heater, model, brief } = check
-  const rule = heaterRule(check, 'voltage-offered', 'hard stop', 'V', houseRules.supplyOverRated.source)
+  const overRated = figureOfRuleSet(brief.ruleSet, 'supply-over-rated') ?? houseRules.supplyOverRated
+  const rule = heaterRule(check, 'voltage-offered', 'hard stop', 'V', overRated.source)
   if (model.supplyOptions.length === 0) {
     return findingOf(rule, 'cannot tell', { title: 'The manual lists no supply voltage' })
   }
@@ -35,7 +37,7 @@ export function voltageOffered(check: HeaterCheck): Finding {
       remedy: `Gives ${Math.round(power)} W instead of ${Math.round(ratedPower)} W (${share} %).${order}`,
     })
   }
-  const limit = houseRules.supplyOverRated.value * ratedVoltage
+  const limit = overRated.value * ratedVoltage
   return judgedBy(
     rule,
     {

@@ -166,7 +166,11 @@ function marginText(finding: Finding, units: DisplayUnits, fluxUnit: FluxUnit): 
   if (finding.margin === null) return noFigure
   const figure = findingFigure(finding.margin, finding.unit, units, fluxUnit)
   const unit =
-    finding.unit === 'W/m²' ? ` ${fluxUnit}` : finding.unit === 'V' || finding.unit === 'N' ? ` ${finding.unit}` : ''
+    finding.unit === 'W/m²'
+      ? ` ${fluxUnit}`
+      : finding.unit === 'V' || finding.unit === 'N' || finding.unit === 'N·m'
+        ? ` ${finding.unit}`
+        : ''
   return `${figure}${unit}`
 }
 
@@ -182,6 +186,7 @@ function findingFigure(value: number | null, unit: Finding['unit'], units: Displ
       return `${signedFigure(value, 1)}°`
     case 'V':
     case 'N':
+    case 'N·m':
       return signedFigure(value, 0)
     case 'none':
       return signedFigure(value, 0)
