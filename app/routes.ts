@@ -20,6 +20,8 @@ export default [
   route('heaters', 'routes/heaters/list.tsx'),
   route('rules', 'routes/rules/list.tsx'),
   route('rules/hanging', 'routes/rules/hanging.tsx'),
+  route('rules/sets/new', 'routes/rules/new-set.tsx'),
+  route('rules/sets/:setId', 'routes/rules/set.tsx'),
   route('team', 'routes/team/list.tsx'),
   route('sign-in', 'routes/account/sign-in.tsx'),
   route('sign-out', 'routes/account/sign-out.ts'),

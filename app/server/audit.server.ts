@@ -22,6 +22,7 @@ export type AuditedAction =
   | 'photo deleted'
   | 'photo brought back'
   | 'comparison exported'
+  | 'rule set saved'
   | 'hanging data saved'
 
 /** Something that happened: `subject` is the thing's path (`variants/<id>`), `detail` figures and never a secret. */

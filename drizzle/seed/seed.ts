@@ -17,6 +17,8 @@ import {
   variantRevisions,
   variants,
 } from '#drizzle/schema.ts'
+import { ruleSetRevisions, ruleSets } from '#drizzle/rules-schema.ts'
+import { demoRuleSet } from '#drizzle/seed/demo-rule-set.ts'
 import { demoAddress, hasNoAccounts, seedAccounts } from '#drizzle/seed/accounts.ts'
 import { demoMarks, demoPhotoKey, demoPhotoSize, withDemoPhoto } from '#drizzle/seed/demo-photo.ts'
 import { hangingData } from '#drizzle/hanging-schema.ts'
@@ -75,6 +77,18 @@ async function seedPhoto(tx: Transaction, author: Author, jobId: string, id: str
     .values({ organisationId, id, jobId, name: 'Veranda from the garden', revision: 1, updatedBy, ...drawn })
 }
 
+/** Adds the invented rule set, at revision 1. */
+async function seedRuleSet(tx: Transaction, { organisationId, authorId }: Author): Promise<void> {
+  const body = demoRuleSet()
+  const [made] = await tx
+    .insert(ruleSets)
+    .values({ organisationId, ...body, revision: 1, updatedBy: authorId })
+    .returning({ id: ruleSets.id })
+  if (!made) throw new Error('The rule set was not made.')
+  const saved = { organisationId, ruleSetId: made.id, revision: 1, body }
+  await tx.insert(ruleSetRevisions).values({ ...saved, contentHash: contentHash(body), authorId })
+}
+
 /** Adds a job with its site, brief and numbered variants, all at revision 1; gives the job's id. */
 async function seedJob(tx: Transaction, author: Author, demo: DemoSite): Promise<string> {
   const { organisationId, authorId } = author
@@ -121,6 +135,7 @@ async function fillOrganisation(appUrl: string, author: Author, demos: readonly 
       const [known] = await tx.select({ models: count() }).from(heaterModels)
       if (kept?.jobs !== 0 || known?.models !== 0) return false
       await seedCatalogue(tx, author)
+      if (demos.length > 0) await seedRuleSet(tx, author)
       for (const demo of demos) await seedJob(tx, author, demo)
       return true
     }),

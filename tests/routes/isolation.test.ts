@@ -15,6 +15,7 @@ const nowhere = {
   jobId: '00000000-0000-4000-8000-000000000000',
   variantId: '00000000-0000-4000-8000-000000000001',
   photoId: '00000000-0000-4000-8000-000000000002',
+  setId: '00000000-0000-4000-8000-000000000003',
 }
 type Ids = typeof nowhere
 
@@ -43,8 +44,10 @@ async function plantCanary(slug: string, text: string): Promise<Ids> {
     of,
   )
   await admin.query('update photos set name = $2 where organisation_id = $1', of)
+  await admin.query('update rule_sets set name = $2, place = $2 where organisation_id = $1', of)
   const found = await admin.query(
-    `select v.job_id as "jobId", v.id as "variantId", p.id as "photoId" from variants v join photos p
+    `select v.job_id as "jobId", v.id as "variantId", p.id as "photoId", r.id as "setId" from variants v
+     join rule_sets r on r.organisation_id = v.organisation_id join photos p
      on p.organisation_id = v.organisation_id and p.job_id = v.job_id where v.organisation_id = $1 order by v.id limit 1`,
     [of[0]],
   )
@@ -82,11 +85,12 @@ beforeAll(async () => {
 })
 afterAll(() => application.close())
 
-const filled = (pattern: string, { jobId, variantId, photoId }: Ids) =>
+const filled = (pattern: string, { jobId, variantId, photoId, setId }: Ids) =>
   pattern
     .replace(':jobId', jobId)
     .replace(':variantId', variantId)
     .replace(':photoId', photoId)
+    .replace(':setId', setId)
     .replace(/:[^/]+/g, 'none')
     .replace('*', 'no/such')
 
@@ -131,6 +135,7 @@ function comparable({ status, body, location }: Answered, of: Ids): string {
     .replaceAll(of.jobId, 'JOB')
     .replaceAll(of.variantId, 'VARIANT')
     .replaceAll(of.photoId, 'PHOTO')
+    .replaceAll(of.setId, 'SET')
     .replace(/nonce="[^"]*"/g, '')
 }
 
@@ -141,7 +146,7 @@ const named = lines.map((line) => ({
   reach: reachOf[line.pattern] ?? ('missing' as const),
 }))
 const closed = named.filter(({ reach }) => reach !== 'open')
-const withIds = closed.filter(({ pattern }) => /:(jobId|variantId|photoId)/.test(pattern))
+const withIds = closed.filter(({ pattern }) => /:(jobId|variantId|photoId|setId)/.test(pattern))
 
 /** What a method of a line asks of a role; undefined where the line does not know the method. */
 function needOf(reach: (typeof named)[number]['reach'], method: Method) {
@@ -199,7 +204,11 @@ describe.each(withIds)('$pattern', ({ line, reach }) => {
 
   it('answers an id that is none with 404', async () => {
     for (const id of ['x', '%00', "'--", '00000000-0000-4000-8000-00000000000g']) {
-      const { status } = await ask('designer', 'GET', filled(line.pattern, { jobId: id, variantId: id, photoId: id }))
+      const { status } = await ask(
+        'designer',
+        'GET',
+        filled(line.pattern, { jobId: id, variantId: id, photoId: id, setId: id }),
+      )
       expect(needOf(reach, 'GET') ? [404] : [400, 405], id).toContain(status)
     }
   })

@@ -27,6 +27,8 @@ export const reachOf: Record<string, Reach> = {
   '/heaters': { GET: 'view' },
   '/rules': { GET: 'view' },
   '/rules/hanging': { GET: 'view', POST: 'edit-rules' },
+  '/rules/sets/new': { GET: 'edit-rules', POST: 'edit-rules' },
+  '/rules/sets/:setId': { GET: 'view', POST: 'edit-rules' },
   '/team': { GET: 'any member' },
   '/sign-in': 'open',
   '/sign-out': 'open',

@@ -123,6 +123,8 @@ describe('the catalogue of the database', () => {
       jobs: 'INSERT SELECT UPDATE',
       offer_links: 'INSERT SELECT UPDATE',
       photos: 'INSERT SELECT UPDATE',
+      rule_set_revisions: 'INSERT SELECT',
+      rule_sets: 'INSERT SELECT UPDATE',
       saved_answers: 'DELETE INSERT SELECT UPDATE',
       site_revisions: 'INSERT SELECT',
       sites: 'INSERT SELECT UPDATE',

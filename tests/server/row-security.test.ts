@@ -130,7 +130,7 @@ describe('row-level security alone, without any filter of the application', () =
 })
 
 describe('what is kept for good', () => {
-  const kept = ['site_revisions', 'brief_revisions', 'variant_revisions', 'audit_events']
+  const kept = ['site_revisions', 'brief_revisions', 'variant_revisions', 'rule_set_revisions', 'audit_events']
 
   it.each(kept)('%s is neither changed nor removed by the application', async (table) => {
     await expect(as(own, `update ${table} set organisation_id = organisation_id`)).rejects.toThrow(/permission denied/)

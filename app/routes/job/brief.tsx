@@ -5,6 +5,7 @@ import type { BriefField } from '#app/domain/brief/brief-field.ts'
 import { assumptionOf, briefFields, eveningFields, guestFields } from '#app/domain/brief/brief-fields.ts'
 import { energyFields } from '#app/domain/brief/energy-fields.ts'
 import { supplyFields } from '#app/domain/brief/supply-fields.ts'
+import type { ChosenRuleSet } from '#app/domain/rules/rule-set.ts'
 import type { DisplayUnits } from '#app/domain/units.ts'
 import { Button, IconButton } from '#app/components/button.tsx'
 import { ConflictPanel } from '#app/components/conflict-panel.tsx'
@@ -12,8 +13,10 @@ import { CheckField, SelectField, TextAreaField, TextField } from '#app/componen
 import { JobFrame } from '#app/components/page-frame.tsx'
 import { SaveState } from '#app/components/status.tsx'
 import { changedWords, statusOf } from '#app/editor/save-status.ts'
+import { RuleSetChoice } from '#app/editor/rules/rule-set-choice.tsx'
 import { useDocument } from '#app/editor/use-document.ts'
 import { findBriefWithUnits } from '#app/server/data/briefs.server.ts'
+import { listRuleSets } from '#app/server/data/rule-sets.server.ts'
 import { requireJob } from '#app/server/data/jobs.server.ts'
 import { viewerOf } from '#app/server/viewer.server.ts'
 import type { Route } from './+types/brief'
@@ -30,6 +33,7 @@ export async function loader({ request, params }: Route.LoaderArgs) {
     job: { id: job.id, name: job.name, customer: job.customer },
     kept: { revision, body: brief },
     units,
+    ruleSets: await listRuleSets(job.member),
     readOnly: !can(job.member.role, 'edit-brief'),
   }
 }
@@ -51,7 +55,7 @@ export default function BriefPage({ loaderData }: Route.ComponentProps) {
 
 type Loaded = Route.ComponentProps['loaderData']
 
-function BriefForm({ viewer, job, kept, units, readOnly }: Loaded) {
+function BriefForm({ viewer, job, kept, units, ruleSets, readOnly }: Loaded) {
   const [{ history, save }, document] = useDocument<Brief>(kept, {
     url: `/api/jobs/${job.id}/brief`,
     name: 'brief',
@@ -119,12 +123,26 @@ function BriefForm({ viewer, job, kept, units, readOnly }: Loaded) {
               </div>
             </section>
           ))}
+          <section className="border-t border-rule pt-3 pb-6">
+            <h2 className="text-sm font-strong">The rules of the place</h2>
+            <RuleSetChoice
+              chosen={brief.ruleSet ?? null}
+              ruleSets={ruleSets}
+              readOnly={readOnly}
+              onChoose={(ruleSet) => document.change((old) => withRuleSet(old, ruleSet))}
+            />
+          </section>
         </div>
         <Assumptions brief={brief} units={units} readOnly={readOnly} onConfirm={(name) => confirm(name, true)} />
       </div>
     </JobFrame>
   )
 }
+
+const withRuleSet = (brief: Brief, ruleSet: ChosenRuleSet | null): Brief => ({
+  ...brief,
+  ruleSet: ruleSet ?? undefined,
+})
 
 interface QuestionProps {
   field: BriefField
@@ -221,20 +239,40 @@ function Assumptions({ brief, units, readOnly, onConfirm }: AssumptionsProps) {
   )
 }
 
-const differing = (mine: Brief, theirs: Brief, units: DisplayUnits, base: Brief | null = null) =>
-  briefFields.flatMap((field) => {
+const differing = (mine: Brief, theirs: Brief, units: DisplayUnits, base: Brief | null = null) => [
+  ...differingRuleSet(mine, theirs, base),
+  ...briefFields.flatMap((field) => {
     const [left, right] = [field.show(mine, units), field.show(theirs, units)]
     if (left === right) return []
     const unit = field.unit(units)
     const told = (text: string) => `${text} ${unit}`.trim()
     const theirsAlone = base !== null && field.show(base, units) === left
     return [{ key: field.name, label: field.label, mine: told(left), theirs: told(right), theirsAlone }]
-  })
+  }),
+]
+
+const ruleSetWords = ({ ruleSet }: Brief): string =>
+  ruleSet ? `${ruleSet.name}, ${ruleSet.edition}, revision ${ruleSet.revision}` : 'No rule set'
+
+function differingRuleSet(mine: Brief, theirs: Brief, base: Brief | null) {
+  const [left, right] = [ruleSetWords(mine), ruleSetWords(theirs)]
+  if (left === right) return []
+  return [
+    {
+      key: 'ruleSet',
+      label: 'Rule set',
+      mine: left,
+      theirs: right,
+      theirsAlone: base !== null && ruleSetWords(base) === left,
+    },
+  ]
+}
 
 /** The server's brief with the answers of this page, but for the fields where the server's is taken. */
 function merged(mine: Brief, theirs: Brief, taken: ReadonlySet<string>, units: DisplayUnits): Brief {
   let brief = theirs
   for (const { key } of differing(mine, theirs, units)) {
+    if (key === 'ruleSet' && !taken.has(key)) brief = withRuleSet(brief, mine.ruleSet ?? null)
     const field = briefFields.find(({ name }) => name === key)
     if (!field || taken.has(key)) continue
     const written = field.write(brief, field.show(mine, units), units)

@@ -4,6 +4,7 @@ import { siteSchema } from '#app/domain/site/site.ts'
 import type { DisplayUnits } from '#app/domain/units.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
+import { isKeptRuleSet } from '#app/server/data/rule-sets.server.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
 import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import { saveRevision, type Locked, type Revisioned, type Save } from '#app/server/saving.server.ts'
@@ -86,4 +87,8 @@ const briefOf = ({ id: jobId, member }: OpenJob): Revisioned<Brief> => ({
 
 /** Saves a job's brief by the one rule for saving; the job's list shows the brief's place. */
 export const saveBrief = (job: OpenJob, save: Save<Brief>): Promise<Answer | Refusal> =>
-  saveRevision(job.member, briefOf(job), save, () => Promise.resolve(save.body))
+  saveRevision(job.member, briefOf(job), save, async (tx) => {
+    const { ruleSet } = save.body
+    if (!ruleSet || (await isKeptRuleSet(tx, ruleSet))) return save.body
+    return { status: 400, error: 'No such revision of a rule set. Choose it again.', path: 'ruleSet' }
+  })

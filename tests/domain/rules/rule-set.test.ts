@@ -74,8 +74,8 @@ describe('a rule set', () => {
 
   it('refuses a figure of another unit, of nothing and beyond all measure, each beside its field', () => {
     const errors = (wrong: Partial<Article>) => {
-      const { id: _id, revision: _revision, ...plain } = ruleSet({ ...article('head-caution', 600), ...wrong })
-      return ruleSetSchema.safeParse(plain).error?.issues.map(({ path }) => path.join('.'))
+      const { name, place, edition, articles } = ruleSet({ ...article('head-caution', 600), ...wrong })
+      return ruleSetSchema.safeParse({ name, place, edition, articles }).error?.issues.map(({ path }) => path.join('.'))
     }
     expect(errors({})).toBeUndefined()
     expect(errors({ unit: 'm' })).toEqual(['articles.0.unit'])
