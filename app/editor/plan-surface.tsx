@@ -1,4 +1,13 @@
-import { useEffect, useMemo, useRef, useState, type Dispatch, type FocusEvent, type RefObject } from 'react'
+import {
+  useEffect,
+  useMemo,
+  useRef,
+  useState,
+  type Dispatch,
+  type FocusEvent,
+  type ReactNode,
+  type RefObject,
+} from 'react'
 import { Button, IconButton } from '#app/components/button.tsx'
 import type { SeatFigures } from '#app/domain/comfort/seat-warmth.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
@@ -9,7 +18,7 @@ import { formatLength } from '#app/domain/units.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
 import { screenPen } from '#app/drawing/pen.ts'
-import { toScreen, workingMargins, type PlanMargins } from '#app/drawing/plan/plan-view.ts'
+import { toScreen, workingMargins, type PlanMargins, type PlanView } from '#app/drawing/plan/plan-view.ts'
 import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
 import { shownLayout, type EditorAction, type EditorState } from '#app/editor/editor-state.ts'
 import { emittersOf } from '#app/editor/map-questions.ts'
@@ -49,6 +58,8 @@ interface PlanSurfaceProps {
   readonly nearest: readonly ShownNearest[]
   readonly cautions: readonly PlanCaution[]
   readonly onFinding: (finding: Finding) => void
+  /** More to take hold of, over everything else. */
+  readonly over?: ((view: PlanView) => ReactNode) | null
 }
 
 const pen = screenPen('dusk')
@@ -172,6 +183,7 @@ export function PlanSurface(props: PlanSurfaceProps) {
           {lead && !readOnly && state.selected.length === 1 && (
             <PlanHandles heater={lead} model={models.get(lead.model)} view={view} plane={plane} touch={touch} />
           )}
+          {props.over?.(view)}
         </svg>
       </div>
       {props.words && (

@@ -1,4 +1,4 @@
-import { memo, useMemo, useRef } from 'react'
+import { memo, useMemo, useRef, type ReactNode } from 'react'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
@@ -11,11 +11,17 @@ import { commonScale, cutExtent, sectionViewOf } from '#app/drawing/section/sect
 import type { SectionsView } from '#app/editor/use-flux.ts'
 import { useSize } from '#app/editor/use-size.ts'
 
-/** The cuts of a layout: across through its chosen heater, else through the third; and along through the same. */
-export function cutsOf(site: Site, layout: Layout, selected: readonly string[]): readonly SectionCut[] {
+/** The cuts of a layout: across through its chosen heater, else through the third; and the line that a person put, else along
+ * through the same. */
+export function cutsOf(
+  site: Site,
+  layout: Layout,
+  selected: readonly string[],
+  placed: SectionCut | null,
+): readonly SectionCut[] {
   const lead: MountedHeater | undefined =
     layout.heaters.find(({ id }) => id === selected[0]) ?? layout.heaters[2] ?? layout.heaters[0]
-  if (!lead) return []
+  if (!lead) return placed ? [placed] : []
   return [cutAlong(site, 'A', 'y', lead.x, 1), cutAlong(site, 'B', 'x', lead.y, 1)]
 }
 
@@ -28,6 +34,8 @@ interface SectionsProps {
   readonly sections: SectionsView | null
   readonly selected: readonly string[]
   readonly nearest: readonly NearestPair[]
+  /** Puts and changes a line of one’s own. */
+  readonly line: ReactNode
 }
 
 const pen = screenPen('dusk')
@@ -54,23 +62,26 @@ export const Sections = memo(function Sections(props: SectionsProps) {
   }, [site, cuts, width, height])
   const same = sections?.question.cuts === cuts
   return (
-    <div ref={box} className="flex h-full min-h-0 overflow-hidden bg-dusk-ground">
-      {views.map((view, i) => (
-        <figure key={view.cut.letter} className="m-0 flex-none">
-          <SectionDrawing
-            name={`section-${view.cut.letter}`}
-            label={sectionTitle(layout, view.cut)}
-            {...{ site, layout, models, view, pen }}
-            quantity={scale}
-            picture={same ? (sections?.pictures[i] ?? null) : null}
-            selected={chosen}
-            nearest={props.nearest}
-          />
-          <figcaption className="h-6 pl-13 text-xs text-dusk-line opacity-80">
-            {sectionTitle(layout, view.cut)}
-          </figcaption>
-        </figure>
-      ))}
+    <div className="relative h-full min-h-0">
+      <div ref={box} className="flex h-full min-h-0 overflow-hidden bg-dusk-ground">
+        {views.map((view, i) => (
+          <figure key={view.cut.letter} className="m-0 flex-none">
+            <SectionDrawing
+              name={`section-${view.cut.letter}`}
+              label={sectionTitle(layout, view.cut)}
+              {...{ site, layout, models, view, pen }}
+              quantity={scale}
+              picture={same ? (sections?.pictures[i] ?? null) : null}
+              selected={chosen}
+              nearest={props.nearest}
+            />
+            <figcaption className="h-6 pl-13 text-xs text-dusk-line opacity-80">
+              {sectionTitle(layout, view.cut)}
+            </figcaption>
+          </figure>
+        ))}
+      </div>
+      <div className="absolute right-3 bottom-1.5 print:hidden">{props.line}</div>
     </div>
   )
 })

@@ -7,6 +7,7 @@ import type { Site } from '#app/domain/site/site.ts'
 import { largestTolerance } from '#app/domain/site/tolerance.ts'
 import { irradianceScale } from '#app/drawing/heat/quantity.ts'
 import type { NearestPair } from '#app/drawing/nearest/nearest-dimension.tsx'
+import type { PlanView } from '#app/drawing/plan/plan-view.ts'
 import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
 import { ButtonLink, IconButton } from '#app/components/button.tsx'
 import { JobFrame, type Viewer } from '#app/components/page-frame.tsx'
@@ -19,6 +20,8 @@ import { ConflictPanel } from '#app/editor/panels/conflict-panel.tsx'
 import { MapLegend, ToolRow } from '#app/editor/panels/tool-row.tsx'
 import { VariantTabs, type VariantTab } from '#app/editor/panels/variant-tabs.tsx'
 import { PlanSurface } from '#app/editor/plan-surface.tsx'
+import { SectionLinePanel } from '#app/editor/section-line/section-line-panel.tsx'
+import { usePlacedCut } from '#app/editor/section-line/use-placed-cut.ts'
 import { pointedStore } from '#app/editor/pointed.ts'
 import { SidePanels } from '#app/editor/side-panels.tsx'
 import type { SideSubject } from '#app/editor/side-parts.tsx'
@@ -61,6 +64,7 @@ export interface VariantEditorProps {
   readonly onMake: (layout: Layout) => Promise<boolean>
 }
 
+const CutHandles = lazy(() => import('#app/editor/section-line/cut-handles.tsx'))
 const noCuts: readonly SectionCut[] = []
 const noPairs: readonly NearestPair[] = []
 
@@ -103,7 +107,8 @@ export function VariantEditor(props: VariantEditorProps) {
     () => mapQuestion({ site, brief, layout, models, choice }, scale, moving ? 'coarse' : 'sharp'),
     [site, brief, layout, models, choice, scale, moving],
   )
-  const cuts = useMemo(() => cutsOf(site, kept, state.selected), [site, kept, state.selected])
+  const [placedCut, setPlacedCut] = usePlacedCut(props.variantId)
+  const cuts = useMemo(() => cutsOf(site, kept, state.selected, placedCut), [site, kept, state.selected, placedCut])
   const heat = useMemo(() => irradianceScale('dusk', brief.target), [brief])
   const about = useMemo(
     () => ({ emitters: emittersOf(kept, models), site, cuts, levels: heat.levels, edges: heat.edges }),
@@ -111,6 +116,18 @@ export function VariantEditor(props: VariantEditorProps) {
   )
   const withSections = room === 'desk' && cuts.length > 0
   const flux = useFlux(question, withSections ? about : null, state.dropped)
+  const line = useMemo(
+    () => <SectionLinePanel cut={placedCut} site={site} onChange={setPlacedCut} />,
+    [placedCut, site, setPlacedCut],
+  )
+  const overPlan =
+    placedCut && withSections
+      ? (view: PlanView) => (
+          <Suspense>
+            <CutHandles cut={placedCut} onChange={setPlacedCut} {...{ view, site, touch }} />
+          </Suspense>
+        )
+      : null
   const emitters = useMemo(() => emittersOf(layout, models), [layout, models])
   const onSeat = useCallback((id: string | null) => dispatch({ type: 'seat', id }), [dispatch])
   const explain = useCallback(
@@ -247,6 +264,7 @@ export function VariantEditor(props: VariantEditorProps) {
             onPlace={editor.placeAt}
             onSeat={explain}
             {...findingMarks}
+            over={overPlan}
           />
           {withSections && (
             <div className="h-[clamp(9rem,24dvh,13.75rem)] flex-none border-t border-[#26324c]">
@@ -257,6 +275,7 @@ export function VariantEditor(props: VariantEditorProps) {
                 sections={flux.sections}
                 selected={state.selected}
                 nearest={moving ? noPairs : findingMarks.nearest}
+                line={line}
               />
             </div>
           )}
