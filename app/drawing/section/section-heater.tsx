@@ -67,7 +67,7 @@ interface HangerLine {
 }
 
 /** What holds a heater: hangers up to its member or the cover, or an arm to its wall or pole. */
-function hangersOf({ heater, model, site }: HeaterProps): HangerLine[] {
+export function hangersOf({ heater, model, site }: Pick<HeaterProps, 'heater' | 'model' | 'site'>): HangerLine[] {
   const schedule = hangScheduleOf(site, heater, model)
   if (schedule)
     return schedule.hangers.map(({ eye, anchor, drop, sideways }) => ({
