@@ -16,6 +16,8 @@ export default [
   route('jobs/:jobId/variants', 'routes/job/variants.ts'),
   route('jobs/:jobId/variants/:variantId', 'routes/job/variant.tsx'),
   route('jobs/:jobId/variants/:variantId/sizes', 'routes/job/sizes.tsx'),
+  route('jobs/:jobId/variants/:variantId/picture.png', 'routes/job/picture-png.ts'),
+  route('jobs/:jobId/variants/:variantId/picture.svg', 'routes/job/picture-svg.ts'),
   route('jobs/:jobId/variants/:variantId/hang', 'routes/job/hang.tsx'),
   route('heaters', 'routes/heaters/list.tsx'),
   route('rules', 'routes/rules/list.tsx'),

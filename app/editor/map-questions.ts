@@ -15,6 +15,7 @@ import {
   shareScale,
   type QuantityScale,
 } from '#app/drawing/heat/quantity.ts'
+import type { Theme } from '#app/drawing/theme.ts'
 import { fluxFigure } from '#app/editor/figures.ts'
 import { planeHeight, type FluxUnit, type ViewChoice } from '#app/editor/view-choice.ts'
 
@@ -56,16 +57,21 @@ export function emittersOf(layout: Layout, models: ReadonlyMap<string, HeaterMod
 }
 
 /** How the chosen quantity is coloured and written; irradiance in the person's unit. */
-export function scaleOf(choice: ViewChoice, brief: Brief, units: Site['displayUnits']): QuantityScale {
+export function scaleOf(
+  choice: ViewChoice,
+  brief: Brief,
+  units: Site['displayUnits'],
+  theme: Theme = 'dusk',
+): QuantityScale {
   switch (choice.map.kind) {
     case 'flux':
-      return inUnit(irradianceScale('dusk', brief.target), choice.fluxUnit)
+      return inUnit(irradianceScale(theme, brief.target), choice.fluxUnit)
     case 'share':
-      return inUnit(shareScale('dusk'), choice.fluxUnit)
+      return inUnit(shareScale(theme), choice.fluxUnit)
     case 'overlap':
-      return overlapScale('dusk', choice.map.threshold)
+      return overlapScale(theme, choice.map.threshold)
     case 'feels-like':
-      return feelsLikeScale('dusk', units)
+      return feelsLikeScale(theme, units)
   }
 }
 

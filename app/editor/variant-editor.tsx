@@ -1,4 +1,4 @@
-import { lazy, Suspense, useCallback, useEffect, useMemo, useState } from 'react'
+import { lazy, Suspense, useCallback, useMemo, useState } from 'react'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { HangingData } from '#app/domain/layout/hanging-data.ts'
@@ -23,6 +23,7 @@ import { PlanSurface } from '#app/editor/plan-surface.tsx'
 import { SectionLinePanel } from '#app/editor/section-line/section-line-panel.tsx'
 import { usePlacedCut } from '#app/editor/section-line/use-placed-cut.ts'
 import { pointedStore } from '#app/editor/pointed.ts'
+import { SeenAsChoice, type SeenAs } from '#app/editor/seen-as.tsx'
 import { SidePanels } from '#app/editor/side-panels.tsx'
 import type { SideSubject } from '#app/editor/side-parts.tsx'
 import { statusOf } from '#app/editor/save-status.ts'
@@ -31,9 +32,10 @@ import type { ChangeSite } from '#app/editor/site-change.ts'
 import { useAutosave } from '#app/editor/use-autosave.ts'
 import { useEditor } from '#app/editor/use-editor.ts'
 import { useFindingMarks } from '#app/editor/use-finding-marks.ts'
+import { useUndoKeys } from '#app/editor/use-undo-keys.ts'
 import { useFigures } from '#app/editor/use-figures.ts'
 import { useFlux } from '#app/editor/use-flux.ts'
-import { useMedia, useRoom } from '#app/editor/use-media.ts'
+import { useAlive, useMedia, useRoom } from '#app/editor/use-media.ts'
 import { useBeat, usePaced } from '#app/editor/use-paced.ts'
 import { plainView, planeHeight } from '#app/editor/view-choice.ts'
 
@@ -54,6 +56,8 @@ export interface VariantEditorProps {
   readonly keeping: Keeping<Layout>
   /** The page about which rough size matters most. */
   readonly sizesHref: string
+  /** The picture in space as a file, without its ending; null for who may not take one away. */
+  readonly pictureHref: string | null
   /** The page that says how each heater hangs. */
   readonly hangHref: string
   readonly onSite: ChangeSite
@@ -64,6 +68,7 @@ export interface VariantEditorProps {
   readonly onMake: (layout: Layout) => Promise<boolean>
 }
 
+const PictureView = lazy(() => import('#app/editor/picture-view.tsx'))
 const CutHandles = lazy(() => import('#app/editor/section-line/cut-handles.tsx'))
 const noCuts: readonly SectionCut[] = []
 const noPairs: readonly NearestPair[] = []
@@ -83,6 +88,8 @@ export function VariantEditor(props: VariantEditorProps) {
   const [explained, setExplained] = useState<string | null>(null)
   const [placing, setPlacing] = useState(false)
   const [pointed] = useState(pointedStore)
+  const [seen, setSeen] = useState<SeenAs>('plan')
+  const alive = useAlive()
 
   const onTaken = useCallback(
     (taken: Layout, said: string) => dispatch({ type: 'edit', layout: taken, said }),
@@ -193,6 +200,7 @@ export function VariantEditor(props: VariantEditorProps) {
           onRename={(title) => editor.edit({ ...kept, title }, state.selected, 'Renamed')}
           onDelete={() => props.onDelete(autosave.revision())}
         >
+          {alive && <SeenAsChoice seen={seen} onSeen={setSeen} />}
           <ButtonLink kind="text" size="small" to={props.hangHref}>
             Hang schedule
           </ButtonLink>
@@ -254,30 +262,42 @@ export function VariantEditor(props: VariantEditorProps) {
           >
             {room === 'tablet' && <MapLegend {...legend} />}
           </FiguresRow>
-          {room !== 'tablet' && <ToolRow {...tools} />}
-          <PlanSurface
-            {...{ state, dispatch, site, models, choice, scale, flux, readOnly, hold, touch, pointed }}
-            warmth={figures.warmth}
-            cuts={withSections ? cuts : noCuts}
-            words={room === 'desk'}
-            coverTolerance={coverTolerance}
-            onPlace={editor.placeAt}
-            onSeat={explain}
-            {...findingMarks}
-            over={overPlan}
-          />
-          {withSections && (
-            <div className="h-[clamp(9rem,24dvh,13.75rem)] flex-none border-t border-[#26324c]">
-              <Sections
-                {...{ site, models, cuts }}
-                layout={kept}
-                scale={heat}
-                sections={flux.sections}
-                selected={state.selected}
-                nearest={moving ? noPairs : findingMarks.nearest}
-                line={line}
+          {seen === 'picture' ? (
+            <Suspense fallback={<p className="p-4 text-ink-2">Drawing the picture</p>}>
+              <PictureView
+                {...{ site, brief, layout, models, choice }}
+                picture={flux.answer?.picture ?? null}
+                exports={props.pictureHref}
               />
-            </div>
+            </Suspense>
+          ) : (
+            <>
+              {room !== 'tablet' && <ToolRow {...tools} />}
+              <PlanSurface
+                {...{ state, dispatch, site, models, choice, scale, flux, readOnly, hold, touch, pointed }}
+                warmth={figures.warmth}
+                cuts={withSections ? cuts : noCuts}
+                words={room === 'desk'}
+                coverTolerance={coverTolerance}
+                onPlace={editor.placeAt}
+                onSeat={explain}
+                {...findingMarks}
+                over={overPlan}
+              />
+              {withSections && (
+                <div className="h-[clamp(9rem,24dvh,13.75rem)] flex-none border-t border-[#26324c]">
+                  <Sections
+                    {...{ site, models, cuts }}
+                    layout={kept}
+                    scale={heat}
+                    sections={flux.sections}
+                    selected={state.selected}
+                    nearest={moving ? noPairs : findingMarks.nearest}
+                    line={line}
+                  />
+                </div>
+              )}
+            </>
           )}
         </div>
         <SidePanels
@@ -294,21 +314,4 @@ export function VariantEditor(props: VariantEditorProps) {
 function toleranceOfCovers(site: Site): number | null {
   const each = site.covers.map(({ id }) => largestTolerance(site, { of: 'cover', id }))
   return each.length > 0 ? Math.max(...each) : null
-}
-
-/** Ctrl or Cmd with Z and Y anywhere on the page that is not a field. */
-function useUndoKeys(dispatch: ReturnType<typeof useEditor>['dispatch'], readOnly: boolean) {
-  useEffect(() => {
-    if (readOnly) return
-    const onKeyDown = (event: KeyboardEvent) => {
-      if (!(event.ctrlKey || event.metaKey) || event.defaultPrevented) return
-      if (event.target instanceof Element && event.target.closest('input, textarea, select, dialog')) return
-      const key = event.key.toLowerCase()
-      if (key !== 'z' && key !== 'y') return
-      event.preventDefault()
-      dispatch({ type: key === 'y' || event.shiftKey ? 'redo' : 'undo' })
-    }
-    window.addEventListener('keydown', onKeyDown)
-    return () => window.removeEventListener('keydown', onKeyDown)
-  }, [dispatch, readOnly])
 }

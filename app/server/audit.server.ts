@@ -23,6 +23,7 @@ export type AuditedAction =
   | 'photo brought back'
   | 'comparison exported'
   | 'rule set saved'
+  | 'picture exported'
   | 'hanging data saved'
 
 /** Something that happened: `subject` is the thing's path (`variants/<id>`), `detail` figures and never a secret. */

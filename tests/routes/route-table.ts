@@ -20,6 +20,8 @@ export const reachOf: Record<string, Reach> = {
   '/jobs/:jobId/variants': { GET: 'view' },
   '/jobs/:jobId/variants/:variantId': { GET: 'view' },
   '/jobs/:jobId/variants/:variantId/sizes': { GET: 'view' },
+  '/jobs/:jobId/variants/:variantId/picture.png': { GET: 'export' },
+  '/jobs/:jobId/variants/:variantId/picture.svg': { GET: 'export' },
   '/jobs/:jobId/variants/:variantId/hang': { GET: 'view' },
   '/jobs/:jobId/compare': { GET: 'view' },
   '/jobs/:jobId/compare.png': { GET: 'export' },

@@ -34,6 +34,7 @@ export async function loader({ request, params }: Route.LoaderArgs) {
     catalogue: [...models.values()],
     hanging,
     readOnly: !can(job.member.role, 'edit-layout'),
+    mayExport: can(job.member.role, 'export'),
   }
 }
 
@@ -55,7 +56,14 @@ async function findKept(url: string): Promise<Kept<Layout>> {
   return (await variantParsing()).kept(await response.json())
 }
 
-function KeptVariant({ variant, variants, job, kept: keptSite, ...rest }: Route.ComponentProps['loaderData']) {
+function KeptVariant({
+  variant,
+  variants,
+  job,
+  mayExport,
+  kept: keptSite,
+  ...rest
+}: Route.ComponentProps['loaderData']) {
   const navigate = useNavigate()
   const toast = useToast()
   const url = `/api/variants/${variant.id}`
@@ -100,6 +108,7 @@ function KeptVariant({ variant, variants, job, kept: keptSite, ...rest }: Route.
       onSite={changeSite}
       variantId={variant.id}
       sizesHref={`/jobs/${job.id}/variants/${variant.id}/sizes`}
+      pictureHref={mayExport ? `/jobs/${job.id}/variants/${variant.id}/picture` : null}
       hangHref={`/jobs/${job.id}/variants/${variant.id}/hang`}
       onCreate={() => void makeAndOpen({ title: 'New layout' })}
       onDuplicate={() => void makeAndOpen({ copyOf: variant.id })}

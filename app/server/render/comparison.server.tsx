@@ -7,6 +7,7 @@ import { ComparisonSheet } from '#app/drawing/sheet/comparison-sheet.tsx'
 import { sheetScale } from '#app/drawing/sheet/sheet-facts.ts'
 import type { Compared, ComparedLayout } from '#app/server/data/compared.server.ts'
 import { answerMapOffThread, layoutFiguresOffThread } from '#app/server/flux.server.ts'
+import { dayInWords } from '#app/server/render/day-in-words.server.ts'
 
 /** Cells of a map on the sheet: its figures are read back from the colours, so it is finer than on the page. */
 const cells = 60_000
@@ -49,6 +50,3 @@ export async function comparisonSheet(compared: Compared, organisation: string, 
     />
   )
 }
-
-const months = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec']
-const dayInWords = (day: Date) => `${day.getDate()} ${months[day.getMonth()]} ${day.getFullYear()}`
