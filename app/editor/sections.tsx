@@ -22,7 +22,7 @@ export function cutsOf(
   const lead: MountedHeater | undefined =
     layout.heaters.find(({ id }) => id === selected[0]) ?? layout.heaters[2] ?? layout.heaters[0]
   if (!lead) return placed ? [placed] : []
-  return [cutAlong(site, 'A', 'y', lead.x, 1), cutAlong(site, 'B', 'x', lead.y, 1)]
+  return [cutAlong(site, 'A', 'y', lead.x, 1), placed ?? cutAlong(site, 'B', 'x', lead.y, 1)]
 }
 
 interface SectionsProps {

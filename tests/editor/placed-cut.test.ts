@@ -1,10 +1,26 @@
 import { describe, expect, it } from 'vitest'
 import { cutLength, type SectionCut } from '#app/drawing/plan/section-cut.tsx'
 import { endRanges, firstCut, keptCut, moveEnds, parseCut } from '#app/editor/section-line/placed-cut.ts'
-import { plainSite } from '#tests/support/plain-site.ts'
+import { cutsOf } from '#app/editor/sections.tsx'
+import { plainHeater, plainSite } from '#tests/support/plain-site.ts'
 
 const site = plainSite()
 const cut: SectionCut = { letter: 'C', from: [1, 1], to: [4, 3], placed: true }
+
+describe('the sections of a layout', () => {
+  const layout = { title: 'One', heaters: [plainHeater()] }
+  it('run across and along through the heater, and along a person’s own line instead of the second', () => {
+    expect(cutsOf(site, layout, [], null)).toEqual([
+      { letter: 'A', from: [3, 4], to: [3, 0] },
+      { letter: 'B', from: [0, 2], to: [6, 2] },
+    ])
+    expect(cutsOf(site, layout, [], cut)).toEqual([{ letter: 'A', from: [3, 4], to: [3, 0] }, cut])
+  })
+  it('are the line alone without heaters, and none without either', () => {
+    expect(cutsOf(site, { title: 'None', heaters: [] }, [], cut)).toEqual([cut])
+    expect(cutsOf(site, { title: 'None', heaters: [] }, [], null)).toEqual([])
+  })
+})
 
 describe('a section line of one’s own', () => {
   it('begins askew, on the floor', () => {

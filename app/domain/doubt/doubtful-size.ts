@@ -8,7 +8,7 @@ import type { Dimension, Site, SizeSource } from '#app/domain/site/site.ts'
 import { bareSizesOf, thingsOf } from '#app/domain/site/tolerance.ts'
 
 /** What a doubtful size is: a dimension of the site, the sizes of one thing that nobody stated, or the heaters' supply. */
-export type DoubtKind = 'dimension' | 'unstated' | 'efficiency' | 'voltage'
+type DoubtKind = 'dimension' | 'unstated' | 'efficiency' | 'voltage'
 
 /** A size that may be other than it is written. Plain data. */
 export interface DoubtfulSize {

@@ -5,13 +5,13 @@ import { checkLayout } from '#app/domain/rules/check-layout.ts'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
 
 /** A figure at a seat, W/m². */
-export interface AtSeat {
+interface AtSeat {
   readonly seatId: string
   readonly irradiance: number
 }
 
 /** The tightest clearance or height, m, and the check it belongs to. */
-export interface Tightest {
+interface Tightest {
   readonly check: string
   readonly margin: number
   readonly tolerance: number | null

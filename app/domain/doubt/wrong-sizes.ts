@@ -30,7 +30,7 @@ export function figuresAtErrors(question: FiguresQuestion, sources: readonly Siz
 }
 
 /** A check that comes out otherwise; its finding there, or as the sizes are written where it is not listed there. */
-export interface TurnedCheck {
+interface TurnedCheck {
   readonly check: string
   readonly from: Outcome
   readonly to: Outcome

@@ -12,7 +12,7 @@ import { stripOutline } from '#app/drawing/section/cut-outline.ts'
 import { hangersOf } from '#app/drawing/section/section-heater.tsx'
 
 /** What a piece is drawn as. */
-export type Look = 'wall' | 'solid' | 'see-through' | 'table' | 'seat' | 'heater' | 'hanger'
+type Look = 'wall' | 'solid' | 'see-through' | 'table' | 'seat' | 'heater' | 'hanger'
 
 /** One thing of the drawing that stands in the painter's order. */
 export interface Piece {
@@ -27,7 +27,7 @@ export interface Piece {
 /** Corners of what is round. */
 const round = 16
 
-export function circle([x, y]: Vec2, radius: number, corners = round): Vec2[] {
+function circle([x, y]: Vec2, radius: number, corners = round): Vec2[] {
   return Array.from({ length: corners }, (_, i): Vec2 => {
     const turn = (2 * Math.PI * i) / corners
     return [x + radius * Math.cos(turn), y + radius * Math.sin(turn)]

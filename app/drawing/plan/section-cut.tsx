@@ -92,7 +92,7 @@ export function SectionCutMark({ cut, site, view, pen }: { cut: SectionCut; site
 }
 
 /** How far beyond its ends the discs of a placed cut stand, px. */
-export const discBeyond = 16
+const discBeyond = 16
 
 /** A line that a person put: dash-dot from end to end, a disc beyond each. */
 function PlacedMark({

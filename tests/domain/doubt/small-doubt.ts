@@ -15,7 +15,7 @@ export const dimension = (
 export const above = 1.85
 
 /** A point of a source, so that the flux straight below it goes by 1 / h² and nothing else. */
-export const pointModel = model({
+const pointModel = model({
   elementLength: 1e-3,
   clearanceToCombustible: { above: 0.3, side: 0.2, end: 0.2, frontOfBeam: null, below: null },
 })
