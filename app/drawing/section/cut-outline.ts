@@ -11,10 +11,10 @@ export type Stretch = readonly [from: number, to: number]
 const beyondEnds = 0.3
 
 /**
- * The stretches along a cut in which it runs through an outline in plan, between its ends. An edge that lies in the cut
- * belongs to the side behind it.
+ * The stretches along a cut in which it runs through an outline in plan, between its ends or `beyond` outside them, m. An
+ * edge that lies in the cut belongs to the side behind it.
  */
-export function stretchesIn(outline: readonly Vec2[], cut: SectionCut): Stretch[] {
+export function stretchesIn(outline: readonly Vec2[], cut: SectionCut, beyond = beyondEnds): Stretch[] {
   const crossings = outline.flatMap((a, i) => {
     const b = outline[(i + 1) % outline.length] ?? a
     const [da, db] = [behindCut(cut, a), behindCut(cut, b)]
@@ -25,16 +25,16 @@ export function stretchesIn(outline: readonly Vec2[], cut: SectionCut): Stretch[
   crossings.sort((a, b) => a - b)
   const stretches: Stretch[] = []
   for (let i = 0; i + 1 < crossings.length; i += 2) {
-    const kept = betweenEnds([crossings[i] ?? 0, crossings[i + 1] ?? 0], cut)
+    const kept = betweenEnds([crossings[i] ?? 0, crossings[i + 1] ?? 0], cut, beyond)
     if (kept) stretches.push(kept)
   }
   return stretches
 }
 
 /** What of a stretch a section shows; null outside its ends. */
-function betweenEnds([from, to]: Stretch, cut: SectionCut): Stretch | null {
+function betweenEnds([from, to]: Stretch, cut: SectionCut, beyond = beyondEnds): Stretch | null {
   const [low, high] = cutExtent(cut)
-  const kept: Stretch = [Math.max(from, low - beyondEnds), Math.min(to, high + beyondEnds)]
+  const kept: Stretch = [Math.max(from, low - beyond), Math.min(to, high + beyond)]
   return kept[1] - kept[0] < 1e-9 ? null : kept
 }
 

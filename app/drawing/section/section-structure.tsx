@@ -29,7 +29,7 @@ export interface CutCover {
 export function cutCovers(site: Site, { cut }: SectionView): CutCover[] {
   return site.covers.flatMap((cover) => {
     const plane = coverPlane(cover)
-    const [stretch] = stretchesIn(coverOutline(cover), cut)
+    const [stretch] = stretchesIn(coverOutline(cover), cut, cut.placed ? 0 : undefined)
     if (!plane || !stretch || stretch[1] - stretch[0] < 0.05) return []
     const endAt = (along: number) => ({ along, z: planeHeightAt(plane, ...pointOfCut(cut, along)) })
     const [from, to] = [endAt(stretch[0]), endAt(stretch[1])]
