@@ -57,7 +57,7 @@ export function addThing<K extends ThingKind>(site: Site, kind: K, thing: SiteTh
 }
 
 /** Some facts of a thing replaced, given or worked out from it as it is. Its id stays. */
-export type Facts<T> = Partial<Omit<T, 'id'>> | ((thing: T) => Partial<Omit<T, 'id'>>)
+type Facts<T> = Partial<Omit<T, 'id'>> | ((thing: T) => Partial<Omit<T, 'id'>>)
 
 const changed = <T extends { readonly id: string }>(things: readonly T[], id: string, facts: Facts<T>): T[] =>
   things.map((thing) =>

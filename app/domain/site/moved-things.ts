@@ -13,7 +13,7 @@ const moved = ([x, y]: Vec2, { dx, dy }: Step): [number, number] => [roundLength
 const range = ([low, high]: Vec2, by: number): [number, number] => [roundLength(low + by), roundLength(high + by)]
 
 /** A shape moved in plan. */
-export function movedShape(shape: Shape, step: Step): Shape {
+function movedShape(shape: Shape, step: Step): Shape {
   switch (shape.kind) {
     case 'box':
       return { ...shape, x: range(shape.x, step.dx), y: range(shape.y, step.dy) }

@@ -1,4 +1,4 @@
-import { addThing, idsOf, unusedId } from '#app/domain/site/edits.ts'
+import { idsOf } from '#app/domain/site/edits.ts'
 import type { Seat, Site, Table } from '#app/domain/site/site.ts'
 import { roundLength } from '#app/domain/units.ts'
 import { degrees, radians, type Vec2 } from '#app/domain/vector.ts'
@@ -115,10 +115,4 @@ export function addSeats(site: Site, places: readonly Place[], facts: SeatFacts)
     return { id: `${stem}-${number}`, ...facts, ...place }
   })
   return { site: { ...site, seats: [...site.seats, ...seats] }, ids: seats.map(({ id }) => id) }
-}
-
-/** The site with a table more, named by the lowest free number; its id is unused by anything. */
-export function addTable(site: Site, table: Omit<Table, 'id'>): { site: Site; id: string } {
-  const id = unusedId(site, 'table')
-  return { site: addThing(site, 'table', { id, ...table }), id }
 }

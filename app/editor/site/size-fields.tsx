@@ -20,7 +20,7 @@ const withSize = (site: Site, id: string, facts: Partial<Dimension>): Site => ({
 })
 
 /** The site with a size measured anew: everything that it decides moves along. */
-export function withMeasured(site: Site, size: Dimension, value: number): Site {
+function withMeasured(site: Site, size: Dimension, value: number): Site {
   const rounded = (metres: number) => roundLength(metres)
   const moved = moveDimension(site, size, rounded(value - size.value))
   return withSize(moved, size.id, { value: rounded(value) })
