@@ -2,7 +2,7 @@ import { layoutTotals, seatFigures, type LayoutTotals, type WarmthInput } from '
 import type { Layout } from '#app/domain/layout/layout.ts'
 
 /** A seat's irradiance on the body plane before and after a change, W/m²; null without a heater. */
-export interface ChangedSeat {
+interface ChangedSeat {
   readonly seatId: string
   readonly before: number | null
   readonly after: number | null

@@ -8,7 +8,7 @@ import type { Site } from '#app/domain/site/site.ts'
 import { degrees, type Vec3 } from '#app/domain/vector.ts'
 
 /** What becomes of a hanger: it can be made; its fittings alone are too long; a turnbuckle cannot take up the rest. */
-export type HangerOutcome = 'can be made' | 'too short' | 'beyond the turnbuckle'
+type HangerOutcome = 'can be made' | 'too short' | 'beyond the turnbuckle'
 
 /** One hanger: from a suspension eye up to its member, plumb or splayed. Lengths m. */
 export interface Hanger {

@@ -12,7 +12,7 @@ export interface Remedies {
 }
 
 /** The heater at the nearest thing that holds it. */
-export interface MovedHeater {
+interface MovedHeater {
   readonly heater: MountedHeater
   /** How far it goes in plan, m. */
   readonly distance: number

@@ -24,7 +24,7 @@ export function clearanceAt({ model, brief }: HeaterCheck, combustible: boolean,
 }
 
 /** The governing clearances for a thing of this kind at every face; null when one of them is not stated. */
-export function clearanceFor(check: HeaterCheck, combustible: boolean): Growth | null {
+function clearanceFor(check: HeaterCheck, combustible: boolean): Growth | null {
   const [above, side, end] = (['above', 'side', 'end'] as const).map((face) => clearanceAt(check, combustible, face))
   return above && side && end ? { above: above.value, side: side.value, end: end.value } : null
 }

@@ -37,7 +37,7 @@ export const bearingSchema = z.enum(bearingNames)
 export type BearingName = z.infer<typeof bearingSchema>
 
 /** One article: its number, what it bears on, its figure in SI, and whether its text was open when it was entered. */
-export const articleSchema = z
+const articleSchema = z
   .strictObject({
     article: z.string().trim().min(1, 'Give the article’s number.').max(60, 'At most 60 characters.'),
     rule: bearingSchema,

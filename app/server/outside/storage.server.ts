@@ -40,7 +40,7 @@ export function remoteStore(url: string): FileStore {
 }
 
 /** Files in a folder of this computer, which is made with the first of them. */
-export function folderStore(folder: string): FileStore {
+function folderStore(folder: string): FileStore {
   let storage: FileStorage | undefined
   return storeOn(() => (storage ??= createFsFileStorage(folder)))
 }
