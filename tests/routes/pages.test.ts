@@ -176,10 +176,10 @@ describe('the pages of a job', () => {
     const designer = await open('designer', `/jobs/${jobCalled('Tansy')}/site`)
     expect(designer.html.match(/data-seat="/g)).toHaveLength(40)
     expect(designer.html.match(/data-member="/g)).toHaveLength(6)
-    expect(designer.text).toContain('Add a seat in the middle')
+    expect(designer.text).toContain('Start anew')
     const sales = await open('sales', `/jobs/${jobCalled('Tansy')}/site`)
     expect(sales.text).toContain('You read this site')
-    expect(sales.text).not.toContain('Add a seat in the middle')
+    expect(sales.text).not.toContain('Start anew')
   })
 
   it.each(['brief', 'site', 'compare'])('give nothing of another organisation: %s', async (page) => {

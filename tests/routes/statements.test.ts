@@ -22,7 +22,8 @@ beforeAll(async () => {
   application = await openApplication()
   cookie = await application.signInAs('owner')
   const { rows } = await application.admin.query(
-    `select v.job_id as "jobId", v.id as "variantId", p.id as "photoId" from variants v
+    `select v.job_id as "jobId", v.id as "variantId", p.id as "photoId",
+      (select id from rule_sets where organisation_id = v.organisation_id limit 1) as "setId" from variants v
       join photos p on p.organisation_id = v.organisation_id and p.job_id = v.job_id
       where v.organisation_id = (select id from organization where slug = 'osierfold') limit 1`,
   )

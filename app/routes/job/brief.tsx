@@ -15,8 +15,7 @@ import { SaveState } from '#app/components/status.tsx'
 import { changedWords, statusOf } from '#app/editor/save-status.ts'
 import { RuleSetChoice } from '#app/editor/rules/rule-set-choice.tsx'
 import { useDocument } from '#app/editor/use-document.ts'
-import { findBriefWithUnits } from '#app/server/data/briefs.server.ts'
-import { listRuleSets } from '#app/server/data/rule-sets.server.ts'
+import { findBriefPage } from '#app/server/data/briefs.server.ts'
 import { requireJob } from '#app/server/data/jobs.server.ts'
 import { viewerOf } from '#app/server/viewer.server.ts'
 import type { Route } from './+types/brief'
@@ -27,13 +26,13 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 
 export async function loader({ request, params }: Route.LoaderArgs) {
   const job = await requireJob(request, params.jobId, 'view')
-  const { revision, brief, units } = await findBriefWithUnits(job)
+  const { revision, brief, units, ruleSets } = await findBriefPage(job)
   return {
     viewer: viewerOf(job.member),
     job: { id: job.id, name: job.name, customer: job.customer },
     kept: { revision, body: brief },
     units,
-    ruleSets: await listRuleSets(job.member),
+    ruleSets,
     readOnly: !can(job.member.role, 'edit-brief'),
   }
 }

@@ -1,10 +1,11 @@
 import { and, eq, sql } from 'drizzle-orm'
 import { briefSchema, type Brief } from '#app/domain/brief/brief.ts'
 import { siteSchema } from '#app/domain/site/site.ts'
+import type { ChosenRuleSet } from '#app/domain/rules/rule-set.ts'
 import type { DisplayUnits } from '#app/domain/units.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
-import { isKeptRuleSet } from '#app/server/data/rule-sets.server.ts'
+import { isKeptRuleSet, readRuleSets } from '#app/server/data/rule-sets.server.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
 import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import { saveRevision, type Locked, type Revisioned, type Save } from '#app/server/saving.server.ts'
@@ -35,18 +36,26 @@ async function lockBrief(tx: Transaction, jobId: string): Promise<Locked | null>
   return row ? { ...row, shown: { revision: row.revision, brief: briefSchema.parse(row.body) } } : null
 }
 
-/** The brief of a job and the units its site is written in. Throws when a job has none: every job starts with both. */
-export async function findBriefWithUnits(job: OpenJob): Promise<KeptBrief & { readonly units: DisplayUnits }> {
-  const [row] = await asOrganisation(job.member.organisationId, (tx) =>
-    tx
+/** What the page of a brief shows. */
+export interface BriefPageData extends KeptBrief {
+  /** The units of the job's site. */
+  readonly units: DisplayUnits
+  /** The organisation's rule sets, of which the brief chooses one. */
+  readonly ruleSets: readonly ChosenRuleSet[]
+}
+
+/** The brief of a job for its page. Throws when a job has none or no site: every job starts with both. */
+export function findBriefPage({ id, member }: OpenJob): Promise<BriefPageData> {
+  return asOrganisation(member.organisationId, async (tx) => {
+    const [row] = await tx
       .select({ revision: briefs.revision, body: briefs.body, units: sql`${sites.body} ->> 'displayUnits'` })
       .from(briefs)
       .innerJoin(sites, and(own(sites), eq(sites.jobId, briefs.jobId)))
-      .where(and(own(briefs), eq(briefs.jobId, job.id))),
-  )
-  if (!row) throw new Error(`Job ${job.id} has no brief or no site.`)
-  const units = siteSchema.shape.displayUnits.parse(row.units)
-  return { revision: row.revision, brief: briefSchema.parse(row.body), units }
+      .where(and(own(briefs), eq(briefs.jobId, id)))
+    if (!row) throw new Error(`Job ${id} has no brief or no site.`)
+    const units = siteSchema.shape.displayUnits.parse(row.units)
+    return { revision: row.revision, brief: briefSchema.parse(row.body), units, ruleSets: await readRuleSets(tx) }
+  })
 }
 
 /** The brief of a job as it is now. Throws when a job has none: every job starts with one. */

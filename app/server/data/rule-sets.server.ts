@@ -24,10 +24,18 @@ const ruleSetOf = ({ id, revision, ...body }: Row): ChosenRuleSet => ({ id, revi
 
 /** The organisation's rule sets by name and edition. */
 export const listRuleSets = (member: Member): Promise<ChosenRuleSet[]> =>
-  asOrganisation(member.organisationId, async (tx) => {
-    const rows = await tx.select(columns).from(ruleSets).where(own(ruleSets)).orderBy(asc(ruleSets.name), asc(ruleSets.edition)) // prettier-ignore
-    return rows.map(ruleSetOf)
-  })
+  asOrganisation(member.organisationId, readRuleSets)
+
+/** The same within a transaction that asks for other things too. */
+export async function readRuleSets(tx: Transaction): Promise<ChosenRuleSet[]> {
+  const order = [asc(ruleSets.name), asc(ruleSets.edition)]
+  const rows = await tx
+    .select(columns)
+    .from(ruleSets)
+    .where(own(ruleSets))
+    .orderBy(...order)
+  return rows.map(ruleSetOf)
+}
 
 /** One revision of a rule set: who wrote it and when. */
 export interface RuleSetRevision {
