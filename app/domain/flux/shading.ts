@@ -37,8 +37,8 @@ function shapeIn(obstacle: Obstacle, { movable, states }: ShadeState): Shape | n
 const tableThickness = 0.04
 
 /**
- * Everything that can shade: obstacles (movable ones in the state stated; at their widest unless one is), table tops, poles and heaters' bodies. Walls
- * and covers bound the site and are left out.
+ * Everything that can shade: obstacles (movable ones in the state stated; at their widest unless one is), table tops,
+ * poles and heaters' bodies. Walls and covers bound the site and are left out.
  */
 export function obstructionsOf(
   site: Site,
@@ -52,11 +52,14 @@ export function obstructionsOf(
     const { id, transmittance } = obstacle
     return shape ? [{ id, heaterId: null, transmittance, solids: solidsOf(shape) }] : []
   })
-  const tables = site.tables.map(({ id, centre, size, turnDeg, height }) => ({
-    ...opaque,
-    id,
-    solids: [slabSolid(centre, size, turnDeg, height - tableThickness, height)],
-  }))
+  const tables = site.tables.map(({ id, form, centre, size, turnDeg, height }) => {
+    const under = height - tableThickness
+    const round = form === 'round'
+    const top = round
+      ? cylinderSolid(centre, size[0] / 2, under, height)
+      : slabSolid(centre, size, turnDeg, under, height)
+    return { ...opaque, id, solids: [top] }
+  })
   const poles = site.poles.map(({ id, at, diameter, top }) => ({
     ...opaque,
     id,

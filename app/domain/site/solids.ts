@@ -211,6 +211,7 @@ function shapeParts(shape: Shape): Convex[] {
 /** A table counts from the floor to its top. */
 function tableSolid(table: Table): Solid {
   const parts = () => {
+    if (table.form === 'round') return [uprightCylinder(table.centre, table.size[0] / 2, [0, table.height])]
     const [cos, sin] = [Math.cos(radians(table.turnDeg)), Math.sin(radians(table.turnDeg))]
     const [a, b] = [table.size[0] / 2, table.size[1] / 2]
     const corner = (x: number, y: number): Upright => ({

@@ -52,7 +52,14 @@ export default function SizesPage({ loaderData }: Route.ComponentProps) {
           </Link>
         }
         listTitle={`${job.name}: please measure these next`}
-        photoLink={() => <span className="text-ink-2">photo</span>}
+        photoLink={({ photoId, measurementId }) => (
+          <Link
+            to={`/jobs/${job.id}/photos/${photoId}?at=${measurementId}`}
+            className="underline hover:text-ink pointer-coarse:py-3"
+          >
+            photo
+          </Link>
+        )}
       />
     </JobFrame>
   )
