@@ -213,7 +213,7 @@ function SizeButtons({ viewing }: { viewing: PlanViewing }) {
     <div
       role="group"
       aria-label="Size of the plan"
-      className="absolute top-2 right-2 flex items-center rounded-md border border-rule bg-paper-raised/90 print:hidden"
+      className="absolute bottom-2 left-2 flex items-center rounded-md border border-rule bg-paper-raised/90 print:hidden"
     >
       <IconButton icon="fit" label="Whole plan" onClick={viewing.showAll} />
       <IconButton icon="minus" label="Smaller" onClick={() => viewing.enlargeAt(0.8)} />
