@@ -4,6 +4,7 @@
  * the frame. Prints the median, p95 and the longest, and ends with 1 when p95 is over 50 ms.
  */
 import { chromium } from '@playwright/test'
+import { watchFrames } from '#tests/bench/watch-frames.ts'
 
 const base = process.env['BASE'] ?? 'http://127.0.0.1:3000'
 const limit = 50
@@ -34,26 +35,7 @@ await page.goto(`${base}/jobs/${job?.id}/variants/${variant?.id}`)
 await page.waitForSelector('[data-heater="H5"]')
 await page.waitForTimeout(2500)
 
-/** From the event's time stamp to the first task after the frame that it brought was drawn and painted. */
-await page.evaluate(() => {
-  const times: number[] = []
-  Object.assign(globalThis, { dragTimes: times })
-  const painted = new MessageChannel()
-  let since: number | null = null
-  painted.port1.onmessage = () => {
-    if (since !== null) times.push(performance.now() - since)
-    since = null
-  }
-  addEventListener(
-    'pointermove',
-    (event: PointerEvent) => {
-      if (event.buttons !== 1 || since !== null) return
-      since = event.timeStamp
-      requestAnimationFrame(() => painted.port2.postMessage(null))
-    },
-    true,
-  )
-})
+await watchFrames(page)
 
 const figures = () => page.locator('[data-seat] text').allTextContents()
 let changed = 0

@@ -6,6 +6,7 @@
  * longest of each, and ends with 1 when a p95 is over 20 ms.
  */
 import { chromium, type Page } from '@playwright/test'
+import { watchFrames } from '#tests/bench/watch-frames.ts'
 
 const base = process.env['BASE'] ?? 'http://127.0.0.1:3000'
 const limit = 20
@@ -80,28 +81,6 @@ async function save(site: Json, revision: number): Promise<number> {
   if (!answer.ok()) throw new Error(await answer.text())
   return (await answer.json()).revision
 }
-
-/** From the event's time stamp to the first task after the frame that it brought was drawn and painted. */
-const watchFrames = (on: Page) =>
-  on.evaluate(() => {
-    const times: number[] = []
-    Object.assign(globalThis, { dragTimes: times })
-    const painted = new MessageChannel()
-    let since: number | null = null
-    painted.port1.onmessage = () => {
-      if (since !== null) times.push(performance.now() - since)
-      since = null
-    }
-    addEventListener(
-      'pointermove',
-      (event: PointerEvent) => {
-        if (event.buttons !== 1 || since !== null) return
-        since = event.timeStamp
-        requestAnimationFrame(() => painted.port2.postMessage(null))
-      },
-      true,
-    )
-  })
 
 const takeTimes = (on: Page) =>
   on.evaluate(() => {

@@ -86,7 +86,7 @@ function ArticleRow({ index, article, errors, onRemove }: ArticleRowProps) {
   }
   const rulePath = `articles.${index}.rule`
   return (
-    <li className="grid items-end gap-x-3 gap-y-2 border-t border-rule py-3 tablet:grid-cols-[7rem_minmax(0,1.4fr)_8rem_minmax(0,2fr)_8rem_auto]">
+    <li className="grid items-end gap-x-3 gap-y-2 border-t border-rule py-3 tablet:grid-cols-[6rem_minmax(0,1.8fr)_7rem_minmax(0,1.8fr)_8rem_auto]">
       <TextField {...field('article', 'Article')} />
       <SelectField
         id={rulePath}
