@@ -53,12 +53,43 @@ describe('isolines', () => {
       fill(grid, (x, y) => 600 - 60 * (x * x + y * y)),
       grid,
       [200, 350],
-      [],
+      [350, 355],
     )
     for (const line of picture.lines) {
       const area = (Math.PI * (600 - line.level)) / 60
       expect(Math.abs(areaOf(ringsOf(line.path)[0]!) / area - 1)).toBeLessThan(0.003)
     }
+  })
+  it('25 apart miss the value by less than 2.5 all along, and the fill reaches the outline', () => {
+    const f = (x: number, y: number) => 600 - 60 * (x * x + y * y) + 20 * Math.sin(2 * x)
+    const levels = Array.from({ length: 20 }, (_, i) => 25 * (i + 1))
+    const picture = contoursOf(fill(grid, f), grid, levels, [-2000])
+    for (const line of picture.lines) {
+      for (const ring of ringsOf(line.path)) {
+        const inner = ring.map((p, i) => [p, ring[(i + 1) % ring.length]!] as const)
+        for (const [[ax, ay], [bx, by]] of inner) {
+          if (Math.max(Math.abs(ax), Math.abs(ay), Math.abs(bx), Math.abs(by)) > 2.9) continue
+          expect(Math.abs(f(ax, ay) - line.level)).toBeLessThan(2.5)
+          expect(Math.abs(f((ax + bx) / 2, (ay + by) / 2) - line.level)).toBeLessThan(2.5)
+        }
+      }
+    }
+    const outline = ringsOf(picture.bands[0]!.path).flat()
+    for (const k of [0, 1] as const) {
+      expect(Math.min(...outline.map((p) => p[k]))).toBeLessThanOrEqual(-3)
+      expect(Math.max(...outline.map((p) => p[k]))).toBeGreaterThanOrEqual(3)
+    }
+  })
+  it('where the field is sharp are traced as finely as ever', () => {
+    const step = (x: number) => (x < 0.475 ? 100 : 0)
+    const picture = contoursOf(
+      fill(grid, (x) => 300 + step(x)),
+      grid,
+      [325, 350],
+      [],
+    )
+    const edge = ringsOf(picture.lines[1]!.path)[0]!.filter(([x, y]) => Math.abs(y) < 2.9 && x > 0)
+    for (const [x] of edge) expect(Math.abs(x - 0.475)).toBeLessThanOrEqual(0.03)
   })
   it('of a plane are straight and in the right place', () => {
     const picture = contoursOf(

@@ -25,15 +25,13 @@ const offered = 24
 function resample(ring: Ring): Vec2[] {
   const points: Vec2[] = []
   let carry = 0
-  for (const [i, a] of ring.entries()) {
-    const b = ring[i + 1]
-    if (!b) break
-    const length = Math.hypot(b[0] - a[0], b[1] - a[1])
+  for (let i = 0; i + 1 < ring.length; i++) {
+    const [ax, ay] = ring[i] ?? [NaN, NaN]
+    const [bx, by] = ring[i + 1] ?? [NaN, NaN]
+    const [dx, dy] = [bx - ax, by - ay]
+    const length = Math.sqrt(dx * dx + dy * dy)
     let along = carry
-    for (; along < length; along += step) {
-      const t = along / length
-      points.push([a[0] + t * (b[0] - a[0]), a[1] + t * (b[1] - a[1])])
-    }
+    for (; along < length; along += step) points.push([ax + (along / length) * dx, ay + (along / length) * dy])
     carry = along - length
   }
   return points
@@ -46,19 +44,39 @@ const turn = (from: number, to: number): number => Math.abs(((to - from + 540) %
 /** The angle of a line, whichever way it was drawn, between −90 and 90 degrees. */
 const upright = (angle: number): number => (angle > 90 ? angle - 180 : angle <= -90 ? angle + 180 : angle)
 
-function placesOf(points: readonly Vec2[], isInside: (x: number, y: number) => boolean): LinePlace[] {
+/** A point of a resampled ring and how much the ring turns around it. */
+interface Candidate {
+  readonly points: readonly Vec2[]
+  readonly i: number
+  readonly bend: number
+}
+
+/** The points of a ring that have the floor under their whole figure. */
+function candidatesOn(points: readonly Vec2[], isInside: (x: number, y: number) => boolean): Candidate[] {
   const count = points.length
   const at = (i: number): Vec2 => points[(i + count) % count] ?? [NaN, NaN]
-  const inside = points.map(([x, y]) => isInside(x, y))
   const along = points.map((point, i) => direction(point, at(i + 1)))
   const bends = along.map((angle, i) => turn(along[(i + count - 1) % count] ?? angle, angle))
-  const under = (i: number, k: number) => (i + k + count) % count
-  const around = Array.from({ length: 2 * reach + 1 }, (_, k) => k - reach)
-  return points.flatMap(([x, y], i) => {
-    if (!around.every((k) => inside[under(i, k)])) return []
-    const bend = around.slice(1, -1).reduce((sum, k) => sum + (bends[under(i, k)] ?? 0), 0)
-    return [{ x, y, angleDeg: upright(direction(at(i - reach), at(i + reach))), bend }]
-  })
+  const outside = points.map(([x, y]) => (isInside(x, y) ? 0 : 1))
+  // Sums over the points under a figure, kept up from one point to the next.
+  let [out, bend] = [0, 0]
+  for (let k = -reach; k <= reach; k++) {
+    out += outside[(k + count) % count] ?? 0
+    if (Math.abs(k) < reach) bend += bends[(k + count) % count] ?? 0
+  }
+  const found: Candidate[] = []
+  for (let i = 0; i < count; i++) {
+    if (out === 0) found.push({ points, i, bend })
+    out += (outside[(i + 1 + reach) % count] ?? 0) - (outside[(i - reach + count) % count] ?? 0)
+    bend += (bends[(i + reach) % count] ?? 0) - (bends[(i - reach + 1 + count) % count] ?? 0)
+  }
+  return found
+}
+
+function placeAt({ points, i, bend }: Candidate): LinePlace {
+  const at = (k: number): Vec2 => points[(k + points.length) % points.length] ?? [NaN, NaN]
+  const [x, y] = at(i)
+  return { x, y, angleDeg: upright(direction(at(i - reach), at(i + reach))), bend }
 }
 
 /** Places for the figure of one level, the straightest first, all inside the floor. */
@@ -66,12 +84,14 @@ export function placesOnRing(rings: readonly Ring[], isInside: (x: number, y: nu
   const found = rings
     .map(resample)
     .filter((points) => points.length >= 4 * reach)
-    .flatMap((points) => placesOf(points, isInside))
+    .flatMap((points) => candidatesOn(points, isInside))
     .sort((a, b) => a.bend - b.bend)
   const chosen: LinePlace[] = []
-  for (const place of found) {
+  for (const candidate of found) {
     if (chosen.length === offered) break
-    if (chosen.every((other) => Math.hypot(other.x - place.x, other.y - place.y) >= apart)) chosen.push(place)
+    const [x, y] = candidate.points[candidate.i] ?? [NaN, NaN]
+    if (chosen.every((other) => (other.x - x) ** 2 + (other.y - y) ** 2 >= apart * apart))
+      chosen.push(placeAt(candidate))
   }
   return chosen
 }

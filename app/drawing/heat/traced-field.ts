@@ -20,13 +20,17 @@ const pad = 3
 /** Up to this cell size, m, every second cell is a point of the field. */
 const fine = 0.1
 
+/** Greatest distance of the field's points, m. */
+const farthestApart = 0.2
+
 /**
  * The field of a grid. Of cells up to 0.1 m every second one is taken: between points h apart a line that turns with
- * radius R lies within h²/4R of its place, 5 mm at h = 0.1 m and R = 0.5 m. Outside the floor values are continued over
- * two cells.
+ * radius R lies within h²/4R of its place, 5 mm at h = 0.1 m and R = 0.5 m. Every fourth one is taken, not over 0.2 m
+ * apart, where the straight lines between those taken miss none of the others by more than `mayMiss`, in the values' unit.
+ * Outside the floor values are continued over one point, of coarse grids over two.
  */
-export function tracedField(values: Float32Array, grid: Grid): TracedField {
-  const stride = grid.cell <= fine ? 2 : 1
+export function tracedField(values: Float32Array, grid: Grid, mayMiss: number): TracedField {
+  const stride = strideOf(values, grid, mayMiss)
   const inner = { columns: Math.ceil(grid.columns / stride), rows: Math.ceil(grid.rows / stride) }
   const columns = inner.columns + 2 * pad
   const rows = inner.rows + 2 * pad
@@ -39,10 +43,36 @@ export function tracedField(values: Float32Array, grid: Grid): TracedField {
       if (grid.inside[k] === 1) field[to + i] = values[k] ?? NaN
     }
   }
-  for (let pass = stride; pass <= 2; pass++) continueOnePoint(field, columns, rows)
+  for (let pass = 0; pass < (stride === 1 ? 2 : 1); pass++) continueOnePoint(field, columns, rows)
   const step = grid.cell * stride
   const corner = (start: number) => start + grid.cell / 2 - (pad + 0.5) * step
   return { values: field, columns, rows, x0: corner(grid.x0), y0: corner(grid.y0), step, ...peaksOf(field, columns) }
+}
+
+/** Which cells are taken: every one, every second or every fourth. */
+function strideOf(values: Float32Array, grid: Grid, mayMiss: number): 1 | 2 | 4 {
+  if (grid.cell > fine) return 1
+  return grid.cell * 4 <= farthestApart && missBetween(values, grid, 4) <= mayMiss ? 4 : 2
+}
+
+/** The most that a cell halfway between two of the taken ones, along a row or a column, differs from their mean. */
+function missBetween(values: Float32Array, { columns, rows, inside }: Grid, stride: number): number {
+  const half = stride / 2
+  const missAt = (from: number, step: number) => {
+    const to = from + stride * step
+    if (inside[from] !== 1 || inside[to] !== 1) return 0
+    const [start, middle, end] = [values[from] ?? 0, values[from + half * step] ?? 0, values[to] ?? 0]
+    return Math.abs(middle - (start + end) / 2)
+  }
+  let worst = 0
+  for (let j = 0; j < rows; j += stride) {
+    for (let i = 0; i < columns; i += stride) {
+      const at = j * columns + i
+      if (i + stride < columns) worst = Math.max(worst, missAt(at, 1))
+      if (j + stride < rows) worst = Math.max(worst, missAt(at, columns))
+    }
+  }
+  return worst
 }
 
 function peaksOf(field: Float64Array, columns: number): Pick<TracedField, 'rowPeaks' | 'columnPeaks'> {
