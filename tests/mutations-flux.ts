@@ -10,6 +10,7 @@ const largest = 'tests/domain/flux/largest-irradiance.test.ts'
 const map = 'tests/domain/flux/map.test.ts'
 const grid = 'tests/domain/flux/grid.test.ts'
 const shading = 'tests/domain/flux/shading.test.ts'
+const contours = 'tests/drawing/contours.test.ts'
 const nodes = 'tests/domain/flux/nodes.test.ts'
 const cutOff = 'tests/domain/flux/cut-off.test.ts'
 const points = 'tests/domain/flux/many-points.test.ts'
@@ -124,9 +125,29 @@ export const fluxMutations: readonly Mutation[] = [
     'domain/flux/silhouette.ts',
     shading,
     ['caster.radius * k]', 'caster.radius]'],
-    ['gap / (source[2] - a[2])', 'gap / (source[2] + a[2])'],
+    ['const ka = gap / (sz - a[2])', 'const ka = gap / (sz + a[2])'],
   ),
-  ...within('domain/flux/shaded-cells.ts', shading, ['top - piece * step', 'top + piece * step']),
+  ...within(
+    'domain/flux/shaded-cells.ts',
+    shading,
+    ['(place + high) * scaled', '(place - high) * scaled'],
+    ['0.5 - end / pieces', '0.5 + end / pieces'],
+    ['1 - alike.whole', 'alike.whole'],
+  ),
+  ...within(
+    'domain/flux/shade-marks.ts',
+    shading,
+    ['(part + 0.5) / parts - 0.5', '(part + 0.5) / parts'],
+    ['(length * (top - z)) / (height - top)', '(length * (top - z)) / height'],
+  ),
+  ...within('domain/flux/shade-patterns.ts', shading, ['1 - (1 - share) * transmittance', '1 - share * transmittance']),
+  ...within(
+    'drawing/heat/traced-field.ts',
+    contours,
+    ['middle - (start + end) / 2', 'middle - (start + end)'],
+    ['grid.cell / 2 - (pad + 0.5) * step', 'grid.cell / 2 - pad * step'],
+    ['2 * near - far', 'near + far'],
+  ),
   ...within('domain/flux/nodes.ts', nodes, ['const eta = 2 * heightByLength', 'const eta = 4 * heightByLength']),
   ...within('domain/flux/cut-off.ts', cutOff, ['y + r * (along * uy + left * ux)', 'y + r * (along * uy - left * ux)']),
   ...within('domain/flux/many-points.ts', points, [

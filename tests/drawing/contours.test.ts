@@ -80,6 +80,14 @@ describe('isolines', () => {
       expect(Math.max(...outline.map((p) => p[k]))).toBeGreaterThanOrEqual(3)
     }
   })
+  it('are traced more coarsely where straight lines miss little of the step between them', () => {
+    const values = fill(grid, () => 199)
+    values[40 * grid.columns + 42] = 201
+    const levelsShown = (levels: readonly number[]) =>
+      contoursOf(values, grid, levels, []).lines.map(({ level }) => level)
+    expect(levelsShown([200, 205])).toEqual([200])
+    expect(levelsShown([200, 225])).toEqual([])
+  })
   it('where the field is sharp are traced as finely as ever', () => {
     const step = (x: number) => (x < 0.475 ? 100 : 0)
     const picture = contoursOf(

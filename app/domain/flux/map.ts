@@ -3,7 +3,7 @@ import { cutOffFor, everywhere } from '#app/domain/flux/cut-off.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { Grid } from '#app/domain/flux/grid.ts'
 import { addElement } from '#app/domain/flux/kernel.ts'
-import { shadeElement } from '#app/domain/flux/shaded-cells.ts'
+import { shadeEmitter } from '#app/domain/flux/shaded-cells.ts'
 import { maxHeaters } from '#app/domain/layout/limits.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
 import { sameData } from '#app/domain/same-data.ts'
@@ -32,26 +32,9 @@ function layerOf(grid: Grid, emitter: Emitter, extent: Extent, obstructions: rea
   const window = emitter.elements.length === 0 ? null : windowOf(grid, extent)
   const values = new Float32Array(window ? window.columns * window.rows : 0)
   if (!window) return { emitter, window, values }
-  if (obstructions.length === 0) {
-    for (const element of emitter.elements) addElement(values, window, emitter, element)
-    return { emitter, window, values }
-  }
-  emitter.elements.forEach((element, i) => {
-    const own = i === 0 ? values : emptyRoom(values.length)
-    addElement(own, window, emitter, element)
-    shadeElement(own, window, emitter, element, obstructions)
-    if (i > 0) for (let at = 0; at < own.length; at++) values[at] = (values[at] ?? 0) + (own[at] ?? 0)
-  })
+  for (const element of emitter.elements) addElement(values, window, emitter, element)
+  if (obstructions.length > 0) shadeEmitter(values, window, emitter, obstructions)
   return { emitter, window, values }
-}
-
-let room = new Float32Array(0)
-
-/** Zeros for one element at a time, in the same room each time. */
-function emptyRoom(length: number): Float32Array {
-  if (room.length === length) room.fill(0)
-  else room = new Float32Array(length)
-  return room
 }
 
 /** Adds a layer to the sum, or takes it out again with sign −1: exact but for the last digit of the sum. */

@@ -1,56 +1,42 @@
 import type { Cells } from '#app/domain/flux/cells.ts'
 import type { Element, Emitter } from '#app/domain/flux/emitter.ts'
+import { emptyPatterns, patternBehind, type ShadePatterns } from '#app/domain/flux/shade-patterns.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
 import { casterOf, drawSilhouette, emptySilhouette, topOf } from '#app/domain/flux/silhouette.ts'
 import type { Caster, Silhouette } from '#app/domain/flux/silhouette.ts'
-import { add, scale } from '#app/domain/vector.ts'
+import { add, scale, type Vec3 } from '#app/domain/vector.ts'
 
-/** How many pieces an element is taken as where shadows move along it. */
-export const pieces = 6
-
-/** Which cells are in shade of one element. All arrays are clear between elements. */
+/** Which cells are in shade of one heater, and of which pieces of its elements. */
 export interface ShadeMarks {
-  /** Hidden share of the whole element, 0 … 1. */
-  readonly even: Float32Array
-  /** Hidden share of each piece besides, a plane of cells per piece, and the cells where there is one. */
-  readonly hidden: Float32Array
-  readonly isMarked: Uint8Array
-  /** Whether any cell is marked. */
-  hasMarked: boolean
-  /** The cells under one thing of several solids, so that they count once. */
-  readonly under: Uint8Array
-  /** One per piece, and the columns that each holds in the row under way. */
-  readonly silhouettes: readonly Silhouette[]
-  readonly first: Int32Array
-  readonly last: Int32Array
+  /** Number of each cell's pattern; all 0 between heaters. */
+  readonly pattern: Uint32Array
+  patterns: ShadePatterns
+  /** The rows that hold patterns other than 0; first > last when none does. */
+  firstRow: number
+  lastRow: number
+  /** The shadows of the thing under way, one or more a caster, each with the pieces it stands for. */
+  readonly shadows: Shadow[]
+  /** The pieces hidden from each cell of the row under way, and where they change: bits, all 0 between rows. */
+  readonly hidden: Uint32Array
+  readonly changes: Uint32Array
+}
+
+interface Shadow {
+  readonly silhouette: Silhouette
+  mask: number
 }
 
 /** Room to work in for so many cells. */
-export function emptyMarks(cells: number, rows: number): ShadeMarks {
+export function emptyMarks(columns: number, rows: number): ShadeMarks {
   return {
-    even: new Float32Array(cells),
-    hidden: new Float32Array(cells * pieces),
-    isMarked: new Uint8Array(cells),
-    hasMarked: false,
-    under: new Uint8Array(cells),
-    silhouettes: Array.from({ length: pieces }, () => emptySilhouette(rows)),
-    first: new Int32Array(pieces),
-    last: new Int32Array(pieces),
+    pattern: new Uint32Array(columns * rows),
+    patterns: emptyPatterns(1, 1),
+    firstRow: rows,
+    lastRow: -1,
+    shadows: [],
+    hidden: new Uint32Array(columns),
+    changes: new Uint32Array(columns + 1),
   }
-}
-
-/** Shorter runs of cells than this are filled one by one: quicker than the call. */
-const shortRun = 24
-
-function fillRun(plane: Float32Array | Uint8Array, from: number, to: number): void {
-  if (to - from > shortRun) plane.fill(1, from, to)
-  else for (let at = from; at < to; at++) plane[at] = 1
-}
-
-/** Adds to the hidden shares of a run of cells in one plane. */
-function hideRun(plane: Float32Array, from: number, to: number, transmittance: number): void {
-  if (transmittance === 0) fillRun(plane, from, to)
-  else for (let at = from; at < to; at++) plane[at] = 1 - (1 - (plane[at] ?? 0)) * transmittance
 }
 
 /** First column of a silhouette in a row of cells. */
@@ -67,110 +53,129 @@ function lastIn({ greatest, firstRow, lastRow }: Silhouette, cells: Cells, row: 
   return Math.floor(Math.max(-1, Math.min(place, cells.columns - 1)))
 }
 
-/** Hides the cells of one row: those behind the thing from every piece in one, those at its rim piece by piece. */
-function hideRow(marks: ShadeMarks, cells: Cells, row: number, transmittance: number): void {
-  const { silhouettes, even, hidden, isMarked, first, last } = marks
-  const count = isMarked.length
-  const start = row * cells.columns
-  let coreFirst = 0
-  let coreLast = cells.columns - 1
-  for (let piece = 0; piece < pieces; piece++) {
-    const silhouette = silhouettes[piece]
-    if (!silhouette) continue
-    const from = firstIn(silhouette, cells, row)
-    const to = lastIn(silhouette, cells, row)
-    first[piece] = from
-    last[piece] = to
-    coreFirst = Math.max(coreFirst, from)
-    coreLast = Math.min(coreLast, to)
-  }
-  const hasCore = coreFirst <= coreLast
-  if (hasCore) hideRun(even, start + coreFirst, start + coreLast + 1, transmittance)
-  for (let piece = 0; piece < pieces; piece++) {
-    const from = start + (first[piece] ?? 0)
-    const end = start + (last[piece] ?? -1) + 1
-    const leftEnd = hasCore ? start + coreFirst : end
-    const rightStart = hasCore ? start + coreLast + 1 : end
-    const plane = piece * count
-    fillRun(isMarked, from, leftEnd)
-    hideRun(hidden, plane + from, plane + leftEnd, transmittance)
-    fillRun(isMarked, rightStart, end)
-    hideRun(hidden, plane + rightStart, plane + end, transmittance)
-  }
-}
-
-/** Hides the cells behind a thing whose shadow does not move along the element. */
-function hideStill({ even }: ShadeMarks, cells: Cells, silhouette: Silhouette, transmittance: number): void {
-  for (let row = silhouette.firstRow; row <= silhouette.lastRow; row++) {
-    const start = row * cells.columns
-    hideRun(even, start + firstIn(silhouette, cells, row), start + lastIn(silhouette, cells, row) + 1, transmittance)
-  }
-}
-
-/** Hides, piece by piece and each cell once, what lies behind any of several casters of one thing. */
-function hideUnion(
-  { under, hidden, isMarked }: ShadeMarks,
-  transmittance: number,
-  gather: (piece: number) => void,
-): void {
-  for (let piece = 0; piece < pieces; piece++) {
-    gather(piece)
-    for (let at = 0; at < under.length; at++) {
-      if (under[at] === 0) continue
-      isMarked[at] = 1
-      hideRun(hidden, piece * under.length + at, piece * under.length + at + 1, transmittance)
-    }
-    under.fill(0)
-  }
-}
-
-/** Sets `under` for the cells of a silhouette. */
-function gatherUnder({ under }: ShadeMarks, cells: Cells, silhouette: Silhouette): void {
-  for (let row = silhouette.firstRow; row <= silhouette.lastRow; row++) {
-    const start = row * cells.columns
-    fillRun(under, start + firstIn(silhouette, cells, row), start + lastIn(silhouette, cells, row) + 1)
-  }
-}
-
-/** How far a caster's shadow moves on the plane while its source moves along the whole element, m. */
+/** How far a caster's shadow moves on the plane while its source moves by a length, m. */
 function travelOf(caster: Caster, z: number, height: number, length: number): number {
   const top = topOf(caster)
   return (length * (top - z)) / (height - top)
 }
 
-/** Marks the cells that one thing shades from one element. */
+/** Distance between the first and the last element's centres, m. */
+function widthOf({ elements }: Emitter): number {
+  const [first, last] = [elements[0]?.centre, elements.at(-1)?.centre]
+  return first && last ? Math.hypot(last[0] - first[0], last[1] - first[1], last[2] - first[2]) : 0
+}
+
+/** A shadow that moves by no more than so many cells is taken as standing still. */
+const still = 1.5
+
+/** Into how many equal parts an element of so many pieces is cut for a shadow that moves by so many cells along it. */
+function partsFor(travel: number, pieces: number): number {
+  for (let parts = 1; parts < pieces; parts++) if (pieces % parts === 0 && travel <= parts * still) return parts
+  return pieces
+}
+
+/** An element halfway between the first and the last. */
+function middleOf(elements: readonly Element[]): Element[] {
+  const [first, last] = [elements[0], elements.at(-1)]
+  return first && last ? [{ ...first, centre: scale(add(first.centre, last.centre), 0.5) }] : []
+}
+
+/** Draws the shadows of a thing's casters into the first of `shadows`; how many there are. */
+function drawShadows(marks: ShadeMarks, cells: Cells, emitter: Emitter, casters: readonly Caster[]): number {
+  const { elements, frame } = emitter
+  const pieces = marks.patterns.perElement
+  let count = 0
+  const draw = (caster: Caster, source: Vec3, mask: number) => {
+    const shadow = (marks.shadows[count++] ??= { silhouette: emptySilhouette(cells.rows), mask })
+    shadow.mask = mask
+    drawSilhouette(shadow.silhouette, cells, caster, source)
+  }
+  const [width, length] = [widthOf(emitter), Math.max(...elements.map((element) => element.length))]
+  const height = Math.min(...elements.map(({ centre }) => centre[2]))
+  for (const caster of casters) {
+    const travel = travelOf(caster, cells.z, height, length) / cells.cell
+    const parts = partsFor(travel, pieces)
+    const isOne = parts === 1 && travelOf(caster, cells.z, height, width) <= still * cells.cell
+    const drawn = isOne ? middleOf(elements) : elements
+    const mask = isOne ? (1 << (pieces * elements.length)) - 1 : (1 << (pieces / parts)) - 1
+    drawn.forEach(({ centre, length: long }, i) => {
+      for (let part = 0; part < parts; part++) {
+        const along = ((part + 0.5) / parts - 0.5) * long
+        draw(caster, add(centre, scale(frame.u, along)), mask << (i * pieces + part * (pieces / parts)))
+      }
+    })
+  }
+  return count
+}
+
+/** Sets, in `hidden`, the pieces that the shadows hide from each cell of a row; its first and last such cell. */
+function gatherRow(marks: ShadeMarks, cells: Cells, row: number, count: number): readonly [number, number] {
+  const { shadows, hidden, changes } = marks
+  let [least, greatest] = [cells.columns, -1]
+  for (let k = 0; k < count;) {
+    let [first, last, seen] = [cells.columns, -1, 0]
+    // Shadows of the same pieces may overlap, so one bit is switched on and off at most once before the sweep.
+    for (let shadow = shadows[k]; k < count && shadow && (seen & shadow.mask) === 0; shadow = shadows[++k]) {
+      seen |= shadow.mask
+      const from = firstIn(shadow.silhouette, cells, row)
+      const to = lastIn(shadow.silhouette, cells, row)
+      if (to < from) continue
+      changes[from] = (changes[from] ?? 0) ^ shadow.mask
+      changes[to + 1] = (changes[to + 1] ?? 0) ^ shadow.mask
+      if (from < first) first = from
+      if (to > last) last = to
+    }
+    for (let i = first, mask = 0; i <= last; i++) {
+      mask ^= changes[i] ?? 0
+      changes[i] = 0
+      hidden[i] = (hidden[i] ?? 0) | mask
+    }
+    changes[last + 1] = 0
+    least = Math.min(least, first)
+    greatest = Math.max(greatest, last)
+  }
+  return [least, greatest]
+}
+
+/** Turns the patterns of a row's cells into those behind the thing whose shade is in `hidden`. */
+function hideRow(marks: ShadeMarks, start: number, first: number, last: number, transmittance: number): void {
+  const { pattern, patterns, hidden } = marks
+  let [number, mask, behind] = [-1, 0, 0]
+  for (let i = first; i <= last; i++) {
+    const here = hidden[i] ?? 0
+    hidden[i] = 0
+    if (here === 0) continue
+    const before = pattern[start + i] ?? 0
+    if (before !== number || here !== mask) {
+      number = before
+      mask = here
+      behind = patternBehind(patterns, number, mask, transmittance)
+    }
+    pattern[start + i] = behind
+  }
+}
+
+/** Marks the cells that one thing shades from the elements of an emitter, all of which are over the plane. */
 export function markShadow(
   marks: ShadeMarks,
   cells: Cells,
   emitter: Emitter,
-  element: Element,
   { solids, transmittance }: Obstruction,
 ): void {
-  const height = element.centre[2]
+  const height = Math.min(...emitter.elements.map(({ centre }) => centre[2]))
   const casters = solids.map((solid) => casterOf(solid, cells.z, height)).filter((each) => each !== null)
-  const [only] = casters
-  const [silhouette] = marks.silhouettes
-  if (!only || !silhouette) return
-  const sourceOf = (piece: number) =>
-    add(element.centre, scale(emitter.frame.u, ((piece + 0.5) / pieces - 0.5) * element.length))
-  if (casters.length > 1) {
-    marks.hasMarked = true
-    hideUnion(marks, transmittance, (piece) => {
-      for (const caster of casters) {
-        drawSilhouette(silhouette, cells, caster, sourceOf(piece))
-        gatherUnder(marks, cells, silhouette)
-      }
-    })
-    return
+  const count = drawShadows(marks, cells, emitter, casters)
+  let [firstRow, lastRow] = [cells.rows, -1]
+  for (let k = 0; k < count; k++) {
+    const silhouette = marks.shadows[k]?.silhouette
+    if (!silhouette) continue
+    firstRow = Math.min(firstRow, silhouette.firstRow)
+    lastRow = Math.max(lastRow, silhouette.lastRow)
   }
-  if (travelOf(only, cells.z, height, element.length) <= cells.cell) {
-    drawSilhouette(silhouette, cells, only, element.centre)
-    hideStill(marks, cells, silhouette, transmittance)
-    return
+  for (let row = firstRow; row <= lastRow; row++) {
+    const [first, last] = gatherRow(marks, cells, row, count)
+    hideRow(marks, row * cells.columns, first, last, transmittance)
   }
-  marks.silhouettes.forEach((each, piece) => drawSilhouette(each, cells, only, sourceOf(piece)))
-  const firstRow = Math.min(...marks.silhouettes.map((each) => each.firstRow))
-  const lastRow = Math.max(...marks.silhouettes.map((each) => each.lastRow))
-  if (lastRow >= firstRow) marks.hasMarked = true
-  for (let row = firstRow; row <= lastRow; row++) hideRow(marks, cells, row, transmittance)
+  marks.firstRow = Math.min(marks.firstRow, firstRow)
+  marks.lastRow = Math.max(marks.lastRow, lastRow)
 }

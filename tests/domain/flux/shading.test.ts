@@ -248,6 +248,23 @@ describe('shade on a map', () => {
     expect(Math.abs(mean / exactMean - 1)).toBeLessThan(0.005)
   })
 
+  it('so even on wide cells, behind a thing close under the element', () => {
+    const heater = { ...line(cosine(1, 1), { at: [2, 2, 2.4], length: 1.2 }), id: 'a' }
+    const board: Shape = { kind: 'box', x: [2, 9], y: [-9, 9], z: [1.95, 2] }
+    const grid = gridOf(floor, 0.6, 0.3)
+    const { total } = irradianceMap(null, grid, [heater], [obstruction(board)])
+    const open = irradianceMap(null, grid, [heater]).total
+    let halved = 0
+    total.forEach((value, at) => {
+      const x = grid.x0 + ((at % grid.columns) + 0.5) * grid.cell
+      const y = grid.y0 + (Math.floor(at / grid.columns) + 0.5) * grid.cell
+      const exact = irradianceAt(heater, [x, y, 0.6], [0, 0, 1], [obstruction(board)])
+      if (exact > 0.1 * open[at]! && exact < 0.9 * open[at]!) halved++
+      expect(Math.abs(value - exact)).toBeLessThan(open[at]! / 9 + 0.05)
+    })
+    expect(halved).toBeGreaterThan(20)
+  })
+
   it('a shadow for elements out of level and tabulated beams too', () => {
     const flat = {
       kind: 'table',
