@@ -1,5 +1,6 @@
 import { heaterModelSchema, type HeaterModel, type Mount } from '#app/domain/heaters/heater-model.ts'
-import { plainHanging, type HangingData } from '#app/domain/layout/hanging-data.ts'
+import type { HangingData } from '#app/domain/layout/hanging-data.ts'
+import { plainHanging } from '#app/domain/layout/plain-hanging.ts'
 import { demoFile, type CatalogueEntry } from '#drizzle/seed/demo-file.ts'
 
 const metres = (mm: number): number => mm / 1000

@@ -1,6 +1,6 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
-import { figureOfRuleSet } from '#app/domain/rules/rule-set.ts'
+import { figureOfRuleSet } from '#app/domain/rules/sourced-figure.ts'
 
 /** A limit on what falls on a guest, with where it comes from. */
 export interface CautionLimit {

@@ -23,17 +23,6 @@ export const hangingDataSchema = z.strictObject({
 })
 export type HangingData = z.infer<typeof hangingDataSchema>
 
-/** Chain of 28 mm pitch with the usual fittings. */
-export const plainHanging: HangingData = {
-  linkPitch: 0.028,
-  hardwareAllowance: 0.095,
-  shortens: 0.04,
-  lengthens: 0.04,
-  rodStep: 0.005,
-  safetySlack: 0.1,
-  orderStep: 1,
-}
-
 /** Where each of the defaults comes from. */
 export const hangingSources: Readonly<Record<keyof HangingData, string>> = {
   linkPitch: 'hanging data of the demonstration catalogue',

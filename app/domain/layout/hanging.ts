@@ -1,5 +1,6 @@
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
-import { plainHanging, type HangingData } from '#app/domain/layout/hanging-data.ts'
+import type { HangingData } from '#app/domain/layout/hanging-data.ts'
+import { plainHanging } from '#app/domain/layout/plain-hanging.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { splayedPair } from '#app/domain/layout/splayed-pair.ts'
 import { supportOf, type Support } from '#app/domain/layout/supports.ts'

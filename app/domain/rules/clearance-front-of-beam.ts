@@ -4,7 +4,7 @@ import { thingsAbout } from '#app/domain/rules/about-heater.ts'
 import { findingOf, heaterRule, manualOf, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { findingsNear, type Left } from '#app/domain/rules/nearest-things.ts'
-import { figureOfRuleSet, stricterLength } from '#app/domain/rules/rule-set.ts'
+import { figureOfRuleSet, stricterLength } from '#app/domain/rules/sourced-figure.ts'
 import { tradePractice } from '#app/domain/rules/trade-practice.ts'
 import type { Solid } from '#app/domain/site/solids.ts'
 

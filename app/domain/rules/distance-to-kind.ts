@@ -1,7 +1,7 @@
 import { gapToBody } from '#app/domain/layout/clear-space.ts'
 import { findingOf, heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
-import { figureOfRuleSet } from '#app/domain/rules/rule-set.ts'
+import { figureOfRuleSet } from '#app/domain/rules/sourced-figure.ts'
 import type { Gap } from '#app/domain/site/gap.ts'
 import type { Obstacle, Site } from '#app/domain/site/site.ts'
 import { solidOf } from '#app/domain/site/solids.ts'

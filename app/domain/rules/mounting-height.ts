@@ -1,6 +1,6 @@
 import { heaterRule, judgedBy, manualOf, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
-import { figureOfRuleSet, stricterLength } from '#app/domain/rules/rule-set.ts'
+import { figureOfRuleSet, stricterLength } from '#app/domain/rules/sourced-figure.ts'
 import { tradePractice } from '#app/domain/rules/trade-practice.ts'
 
 /** The lowest point is not under the least height of the manual or, where it is greater, of the rule set (hard stop) and not over its recommended greatest (soft). */

@@ -1,4 +1,5 @@
-import { bearings, bearingSchema, ruleSetSchema, type Article, type RuleSet } from '#app/domain/rules/rule-set.ts'
+import { bearings } from '#app/domain/rules/bearings.ts'
+import { bearingSchema, ruleSetSchema, type Article, type RuleSet } from '#app/domain/rules/rule-set.ts'
 import { formatLength, parseLength } from '#app/domain/units.ts'
 
 /** An article as it is typed: every part a text. */

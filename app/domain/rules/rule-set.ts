@@ -1,25 +1,5 @@
 import { z } from 'zod'
-
-/** A figure of ours that an article of a rule set may give, with its unit and the greatest that makes sense. */
-interface Bearing {
-  readonly label: string
-  readonly unit: 'm' | 'W/m²' | '×'
-  readonly most: number
-}
-
-/** What articles bear on. Clearances are to combustible things; 'at least' for lengths, 'at most' for the others. */
-export const bearings = {
-  'clearance-above': { label: 'Clearance above', unit: 'm', most: 20 },
-  'clearance-side': { label: 'Clearance at the side', unit: 'm', most: 20 },
-  'clearance-end': { label: 'Clearance beyond the end', unit: 'm', most: 20 },
-  'clearance-front-of-beam': { label: 'Clearance in front of the beam', unit: 'm', most: 20 },
-  'clearance-below': { label: 'Clearance below', unit: 'm', most: 20 },
-  'mounting-height': { label: 'Least mounting height', unit: 'm', most: 20 },
-  'sprinkler-distance': { label: 'Distance from a sprinkler', unit: 'm', most: 20 },
-  'lamp-distance': { label: 'Distance from a lamp', unit: 'm', most: 20 },
-  'head-caution': { label: 'Caution at the head', unit: 'W/m²', most: 5000 },
-  'supply-over-rated': { label: 'Supply above rated voltage, at most', unit: '×', most: 2 },
-} as const satisfies Record<string, Bearing>
+import { bearings, type BearingName } from '#app/domain/rules/bearings.ts'
 
 const bearingNames = [
   'clearance-above',
@@ -32,9 +12,8 @@ const bearingNames = [
   'lamp-distance',
   'head-caution',
   'supply-over-rated',
-] as const
+] as const satisfies readonly BearingName[]
 export const bearingSchema = z.enum(bearingNames)
-export type BearingName = z.infer<typeof bearingSchema>
 
 /** One article: its number, what it bears on, its figure in SI, and whether its text was open when it was entered. */
 const articleSchema = z
@@ -69,32 +48,3 @@ export const chosenRuleSetSchema = z.strictObject({
   ...ruleSetSchema.shape,
 })
 export type ChosenRuleSet = z.infer<typeof chosenRuleSetSchema>
-
-/** A figure with where it comes from. */
-export interface SourcedFigure {
-  readonly value: number
-  readonly source: string
-}
-
-/** "Demo district, edition 1, article 4.2 (from memory)". */
-const sourceOf = ({ name, edition }: RuleSet, { article, source }: Article): string =>
-  `${name}, ${edition}, article ${article}${source === 'from memory' ? ' (from memory)' : ''}`
-
-const isGreaterStricter = (rule: BearingName): boolean => bearings[rule].unit === 'm'
-
-/** The figure that a chosen rule set gives for a rule, the strictest of several articles; null when it gives none. */
-export function figureOfRuleSet(ruleSet: RuleSet | undefined, rule: BearingName): SourcedFigure | null {
-  let strictest: Article | null = null
-  for (const article of ruleSet?.articles ?? []) {
-    if (article.rule !== rule) continue
-    const isStricter = !strictest || article.figure > strictest.figure === isGreaterStricter(rule)
-    if (isStricter) strictest = article
-  }
-  return ruleSet && strictest ? { value: strictest.figure, source: sourceOf(ruleSet, strictest) } : null
-}
-
-/** The greater of the manual's length and the rule set's: neither lets the other be passed over. Null when both are silent. */
-export function stricterLength(manual: SourcedFigure | null, article: SourcedFigure | null): SourcedFigure | null {
-  if (!manual || !article) return manual ?? article
-  return article.value > manual.value ? article : manual
-}

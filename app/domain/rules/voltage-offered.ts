@@ -2,7 +2,7 @@ import { electricalPower } from '#app/domain/heaters/power.ts'
 import { findingOf, heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { houseRules } from '#app/domain/rules/house-rules.ts'
-import { figureOfRuleSet } from '#app/domain/rules/rule-set.ts'
+import { figureOfRuleSet } from '#app/domain/rules/sourced-figure.ts'
 
 /**
  * The option ordered is listed for the model, and the supply is not more than 1.1 times its rated voltage (hard stops,

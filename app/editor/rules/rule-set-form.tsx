@@ -1,6 +1,7 @@
 import { useState } from 'react'
 import { Form } from 'react-router'
-import { bearings, bearingSchema, mostArticles } from '#app/domain/rules/rule-set.ts'
+import { bearings } from '#app/domain/rules/bearings.ts'
+import { bearingSchema, mostArticles } from '#app/domain/rules/rule-set.ts'
 import type { TypedArticle, TypedRuleSet } from '#app/domain/rules/read-rule-set.ts'
 import { Button } from '#app/components/button.tsx'
 import { ErrorSummary } from '#app/components/error-summary.tsx'

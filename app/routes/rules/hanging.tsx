@@ -1,6 +1,7 @@
 import { data, Form, useNavigation } from 'react-router'
 import { can } from '#app/domain/access/roles.ts'
-import { hangingSources, plainHanging } from '#app/domain/layout/hanging-data.ts'
+import { hangingSources } from '#app/domain/layout/hanging-data.ts'
+import { plainHanging } from '#app/domain/layout/plain-hanging.ts'
 import { hangingFields, hangingValues, readHanging } from '#app/domain/layout/hanging-fields.ts'
 import { formatLength } from '#app/domain/units.ts'
 import { Button, ButtonLink } from '#app/components/button.tsx'

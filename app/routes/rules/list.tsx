@@ -1,4 +1,5 @@
-import { bearings, type ChosenRuleSet } from '#app/domain/rules/rule-set.ts'
+import { bearings } from '#app/domain/rules/bearings.ts'
+import type { ChosenRuleSet } from '#app/domain/rules/rule-set.ts'
 import { hangingRules, tradeRules, warmthRules, type RuleRow } from '#app/domain/rules/rules-in-words.ts'
 import { can } from '#app/domain/access/roles.ts'
 import { ButtonLink } from '#app/components/button.tsx'

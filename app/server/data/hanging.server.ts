@@ -1,5 +1,6 @@
 import { and, eq } from 'drizzle-orm'
-import { hangingDataSchema, plainHanging, type HangingData } from '#app/domain/layout/hanging-data.ts'
+import { hangingDataSchema, type HangingData } from '#app/domain/layout/hanging-data.ts'
+import { plainHanging } from '#app/domain/layout/plain-hanging.ts'
 import { recordEvent } from '#app/server/audit.server.ts'
 import { asOrganisation, own } from '#app/server/organisation.server.ts'
 import type { Member } from '#app/server/session.server.ts'

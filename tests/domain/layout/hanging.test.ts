@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { chainToOrder, hangScheduleOf } from '#app/domain/layout/hanging.ts'
-import { plainHanging } from '#app/domain/layout/hanging-data.ts'
+import { plainHanging } from '#app/domain/layout/plain-hanging.ts'
 import { demoModels, demoSites } from '#drizzle/seed/demo-sites.ts'
 import { chance as seededChance } from '#tests/support/chance.ts'
 import { plainHeater, plainModel, plainSite } from '#tests/support/plain-site.ts'

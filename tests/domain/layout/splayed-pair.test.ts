@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { facingMembers, firstMet } from '#app/domain/layout/facing-members.ts'
 import { hangScheduleOf } from '#app/domain/layout/hanging.ts'
-import { plainHanging } from '#app/domain/layout/hanging-data.ts'
+import { plainHanging } from '#app/domain/layout/plain-hanging.ts'
 import { splayedPair } from '#app/domain/layout/splayed-pair.ts'
 import { supportOf } from '#app/domain/layout/supports.ts'
 import type { Member, Site } from '#app/domain/site/site.ts'
