@@ -1,5 +1,5 @@
 import { expose, transfer, type Endpoint } from 'comlink'
-import { layoutFigures, type FiguresQuestion, type LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
+import type { FiguresQuestion, LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
 import type { Grid } from '#app/domain/flux/grid.ts'
 import type { MapQuestion } from '#app/domain/flux/map-question.ts'
 import { contoursOf, type HeatPicture } from '#app/drawing/heat/contours.ts'
@@ -14,8 +14,9 @@ const worker = {
     const answer = answerMap(question, cache)
     return transfer(answer, [answer.values.buffer])
   },
-  /** Seats, totals and findings of a layout, for pages that show several at once. */
-  answerFigures(input: FiguresQuestion): LayoutFigures {
+  /** Seats, totals and findings of a layout, for pages that show several at once; the rules are loaded when asked for. */
+  async answerFigures(input: FiguresQuestion): Promise<LayoutFigures> {
+    const { layoutFigures } = await import('#app/domain/comparison/layout-figures.ts')
     return layoutFigures(input)
   },
   /** Fills and isolines of values that the page made of two maps of one grid. */

@@ -3,7 +3,6 @@ import type { z } from 'zod'
 import { openDocument, type DocumentState, type OpenDocument } from '#app/editor/document.ts'
 import { keptAt } from '#app/editor/kept-at.ts'
 import type { Kept } from '#app/editor/keeping.ts'
-import { documentParsing } from '#app/editor/parse-kept.ts'
 import { sameData } from '#app/domain/same-data.ts'
 
 interface DocumentAddress<T> {
@@ -20,7 +19,10 @@ export function useDocument<T>(
   { url, name, schema }: DocumentAddress<T>,
 ): [DocumentState<T>, OpenDocument<T>] {
   const [{ document, keeping }] = useState(() => {
-    const keeping = keptAt({ url, parsing: () => documentParsing(name, schema) })
+    const keeping = keptAt({
+      url,
+      parsing: async () => (await import('#app/editor/parse-kept.ts')).documentParsing(name, schema),
+    })
     return { keeping, document: openDocument(initial, keeping, sameData) }
   })
   const state = useSyncExternalStore(document.subscribe, document.state, document.state)

@@ -3,7 +3,7 @@ import { getSessionCookie } from 'better-auth/cookies'
 import { and, asc, desc, eq, gt, sql } from 'drizzle-orm'
 import { redirect } from 'react-router'
 import { z } from 'zod'
-import { type Action, type Role, can, roleSchema } from '#app/domain/access/roles.ts'
+import { type Action, type Role, can, roles } from '#app/domain/access/roles.ts'
 import { authDatabase } from '#app/server/db.server.ts'
 import { isRefusedDemo } from '#app/server/demo-address.server.ts'
 import { env } from '#app/server/env.server.ts'
@@ -25,7 +25,7 @@ const rowSchema = z.object({
   email: z.string(),
   organisationId: z.string().nullable(),
   organisationName: z.string().nullable(),
-  role: roleSchema.nullable(),
+  role: z.enum(roles).nullable(),
 })
 
 /** The session's token, if the cookie carries our signature. */

@@ -1,9 +1,6 @@
-import { z } from 'zod'
-
 /** The roles of an organisation's people. A customer has no account: an offer link shows one offer. */
 export const roles = ['owner', 'designer', 'engineer', 'sales', 'installer'] as const
-export const roleSchema = z.enum(roles)
-export type Role = z.infer<typeof roleSchema>
+export type Role = (typeof roles)[number]
 
 /**
  * Who may do what. `view` reads jobs, sites, variants and comparisons; `view-installation` reads the installation set

@@ -1,6 +1,6 @@
 import { and, desc, eq, isNull, sql } from 'drizzle-orm'
 import { z } from 'zod'
-import { stageSchema } from '#app/domain/job/stage.ts'
+import { stages } from '#app/domain/job/stage.ts'
 import { asOrganisation, own } from '#app/server/organisation.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { briefs, jobs, sites, variants } from '#drizzle/schema.ts'
@@ -10,7 +10,7 @@ const overviewSchema = z.object({
   name: z.string(),
   customer: z.string(),
   place: z.string(),
-  stage: stageSchema,
+  stage: z.enum(stages),
   updatedAt: z.date().transform((at) => at.toISOString()),
   /** What kind of place it is, in a word or two. */
   kind: z.string().nullable(),
