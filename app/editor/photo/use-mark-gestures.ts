@@ -17,7 +17,7 @@ interface MarkHand {
 }
 
 type Active =
-  | { readonly kind: 'mark'; readonly path: string; readonly grip: Vec2 }
+  | { readonly kind: 'mark'; readonly path: string; readonly grip: Vec2; carried: boolean }
   | { readonly kind: 'place' }
   | { readonly kind: 'pan' | 'pinch' }
 
@@ -50,6 +50,8 @@ export function useMarkGestures(box: RefObject<HTMLElement | null>, hand: MarkHa
     const near = places.filter((place) => away(place) <= reachOf(type)).toSorted((a, b) => away(a) - away(b))
     return near.find(({ path }) => path === chosen) ?? near[0] ?? null
   }
+  /** Where a mark that is held goes when the pointer is there. */
+  const carriedTo = (screen: Vec2, grip: Vec2): Mark => view.toPhoto([screen[0] + grip[0], screen[1] + grip[1]])
   const begin = (event: PointerEvent, screen: Vec2): Active => {
     if (event.button === 1) return { kind: 'pan' }
     if (placing) return { kind: 'place' }
@@ -57,7 +59,7 @@ export function useMarkGestures(box: RefObject<HTMLElement | null>, hand: MarkHa
     onChoose(hit?.path ?? null)
     if (!hit || readOnly) return { kind: 'pan' }
     const at = view.toScreen(hit.at)
-    return { kind: 'mark', path: hit.path, grip: [at[0] - screen[0], at[1] - screen[1]] }
+    return { kind: 'mark', path: hit.path, grip: [at[0] - screen[0], at[1] - screen[1]], carried: false }
   }
 
   const onPointerDown = (event: PointerEvent<HTMLElement>) => {
@@ -84,8 +86,9 @@ export function useMarkGestures(box: RefObject<HTMLElement | null>, hand: MarkHa
       const other = [...fingers.current].find(([id]) => id !== event.pointerId)?.[1]
       if (other) view.pinchBy([before, other], [screen, other])
     } else if (now?.kind === 'pan') view.shiftBy(screen[0] - before[0], screen[1] - before[1])
-    else if (now?.kind === 'mark' && far) {
-      setMoved({ path: now.path, at: view.toPhoto([screen[0] + now.grip[0], screen[1] + now.grip[1]]) })
+    else if (now?.kind === 'mark' && (far || now.carried)) {
+      now.carried = true
+      setMoved({ path: now.path, at: carriedTo(screen, now.grip) })
     } else if (now?.kind === 'place') {
       if (far && event.pointerType === 'mouse') active.current = { kind: 'pan' }
       setPointed(view.toPhoto(screen))
@@ -96,7 +99,8 @@ export function useMarkGestures(box: RefObject<HTMLElement | null>, hand: MarkHa
     if (!fingers.current.delete(event.pointerId) || fingers.current.size > 0) return
     const now = active.current
     active.current = null
-    if (now?.kind === 'mark' && moved) onMove(moved.path, moved.at)
+    // From where the finger left: its last way may not have been drawn yet.
+    if (now?.kind === 'mark' && now.carried) onMove(now.path, carriedTo(screenOf(event), now.grip))
     if (now?.kind === 'place') onPlace(view.toPhoto(screenOf(event)))
     setMoved(null)
     if (event.pointerType === 'touch') setPointed(null)
