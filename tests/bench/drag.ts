@@ -4,7 +4,7 @@
  * the frame. Prints the median, p95 and the longest, and ends with 1 when p95 is over 50 ms.
  */
 import { chromium } from '@playwright/test'
-import { watchFrames } from '#tests/bench/watch-frames.ts'
+import { spread, takeWatched, watchFrames } from '#tests/bench/watch-frames.ts'
 
 const base = process.env['BASE'] ?? 'http://127.0.0.1:3000'
 const limit = 50
@@ -55,17 +55,9 @@ for (let round = 0; round < rounds; round += 1) {
   await page.mouse.up()
   await page.waitForTimeout(400)
 }
-const times = await page.evaluate(() => {
-  const found: unknown = Reflect.get(globalThis, 'dragTimes')
-  return Array.isArray(found) ? found.map(Number) : []
-})
+const { steps: times } = await takeWatched(page)
 await browser.close()
 
-const sorted = times.toSorted((a, b) => a - b)
-const at = (part: number) => sorted[Math.min(sorted.length - 1, Math.floor(part * sorted.length))] ?? Number.NaN
-const text = (ms: number) => `${ms.toFixed(1)} ms`
-console.log(
-  `drag, ${times.length} steps: median ${text(at(0.5))}, p95 ${text(at(0.95))}, longest ${text(at(1))}; ` +
-    `seats' figures followed in ${changed} of ${rounds} drags`,
-)
-if (changed < rounds || !(at(0.95) <= limit)) process.exitCode = 1
+const { p95, words } = spread(times)
+console.log(`drag, ${times.length} steps: ${words}; seats' figures followed in ${changed} of ${rounds} drags`)
+if (changed < rounds || !(p95 <= limit)) process.exitCode = 1
