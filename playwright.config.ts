@@ -6,8 +6,7 @@ export default defineConfig({
   testMatch: '**/*.ts',
   outputDir: 'test-results/playwright',
   timeout: 60_000,
-  fullyParallel: false,
-  workers: 1,
+  workers: 2,
   retries: 0,
   forbidOnly: true,
   use: {
@@ -16,6 +15,16 @@ export default defineConfig({
     trace: 'retain-on-failure',
     launchOptions: { executablePath: '/usr/bin/chromium', args: ['--no-sandbox', '--disable-dev-shm-usage'] },
   },
+  // Journeys change what others read and come one after another; looking at every page changes nothing.
+  projects: [
+    { name: 'journeys', testIgnore: '**/pages-are-accessible.ts', workers: 1 },
+    {
+      name: 'accessibility',
+      testMatch: '**/pages-are-accessible.ts',
+      fullyParallel: true,
+      dependencies: ['journeys'],
+    },
+  ],
   webServer: {
     command: 'node --import tsx tests/support/end-to-end-server.ts',
     url: `${endToEndOrigin}/healthz`,
