@@ -44,10 +44,11 @@ export interface AxonometricProps {
 /** The drawing as a group: floor with its heat, then everything from the back to the front, then what is see-through. */
 export const Axonometric = memo(function Axonometric(props: AxonometricProps) {
   const { site, layout, models, corner, pen, width, height } = props
-  const { pieces, front, order, view } = useMemo(() => {
+  const { pieces, front, order, view, withoutGuests } = useMemo(() => {
     const projection = projectionFrom(corner)
     const all = piecesOf(site, layout, models, projection.toEye)
-    const kept = all.pieces.length > mostPieces ? all.pieces.filter(({ look }) => look !== 'seat') : all.pieces
+    const withoutGuests = all.pieces.length > mostPieces
+    const kept = withoutGuests ? all.pieces.filter(({ look }) => look !== 'seat') : all.pieces
     const painted = paintingOrder(kept.map(({ solid }) => solid), projection) // prettier-ignore
     const points: Vec3[] = [
       ...site.floor.map(([x, y]): Vec3 => [x, y, 0]),
@@ -56,6 +57,7 @@ export const Axonometric = memo(function Axonometric(props: AxonometricProps) {
     ]
     return {
       ...all,
+      withoutGuests,
       order: painted.flatMap((i) => kept[i] ?? []),
       view: axonometricView(points, corner, { width, height, margin: 14 }),
     }
@@ -68,6 +70,11 @@ export const Axonometric = memo(function Axonometric(props: AxonometricProps) {
       ))}
       <SeeThrough {...{ site, front, view, pen }} />
       <HeaterNames {...{ pieces, view, pen }} />
+      {withoutGuests && (
+        <Words x={24} y={height - 10} size={pen.text} colour={pen.colours.secondLine}>
+          {`Over ${mostPieces} things: the guests are not drawn.`}
+        </Words>
+      )}
     </g>
   )
 })

@@ -11,8 +11,8 @@ import type { LaidOut } from '#app/server/data/laid-out.server.ts'
 import { answerMapOffThread } from '#app/server/flux.server.ts'
 import { dayInWords } from '#app/server/render/day-in-words.server.ts'
 
-/** Cells of the map. */
-const cells = 24_000
+/** Cells of the map: finer than on the page, for a picture that is looked at closely. */
+const cells = 60_000
 
 const lookSchema = z.object({
   corner: z.enum(corners).catch('lower left'),

@@ -7,12 +7,12 @@ import { irradianceScale } from '#app/drawing/heat/quantity.ts'
 import { screenPen } from '#app/drawing/pen.ts'
 import { smallHeater, smallLayout, smallModel, smallModels, smallTerrace } from '#tests/drawing/small-terrace.ts'
 
-const drawn = (corner: (typeof corners)[number], theme: 'dusk' | 'day' = 'dusk') =>
+const drawn = (corner: (typeof corners)[number], theme: 'dusk' | 'day' = 'dusk', site = smallTerrace) =>
   renderToStaticMarkup(
     <AxonometricDrawing
       name="a"
       label="A picture"
-      site={smallTerrace}
+      site={site}
       layout={smallLayout()}
       models={smallModels}
       picture={null}
@@ -94,5 +94,12 @@ describe('the picture as it is drawn', () => {
   it('is drawn in the colours of dusk or of daylight', () => {
     expect(drawn('lower left')).toContain('#0c1322')
     expect(drawn('lower left', 'day')).not.toContain('#0c1322')
+  })
+  it('says that guests are left out where there are too many things, and only there', () => {
+    const [seat] = smallTerrace.seats
+    const seats = Array.from({ length: 901 }, (_, i) => ({ ...seat!, id: `many ${i}` }))
+    const words = 'the guests are not drawn'
+    expect(drawn('lower left', 'dusk', { ...smallTerrace, seats })).toContain(words)
+    expect(drawn('lower left')).not.toContain(words)
   })
 })
