@@ -33,10 +33,6 @@ export function countByModel({ layout, models }: Pick<ComparedVariant, 'layout' 
   return [...counts].map(([name, count]) => ({ name, count })).sort((a, b) => b.count - a.count)
 }
 
-/** The findings of one outcome. */
-export const countOutcome = (findings: readonly Finding[], outcome: Finding['outcome']): number =>
-  findings.filter((finding) => finding.outcome === outcome).length
-
 /** Heaters that hang from nothing that holds them, or from something that nobody knows to hold them. */
 export function countUnsupported(findings: readonly Finding[]): number {
   const subjects = findings.filter(({ rule, outcome }) => rule === 'supported' && outcome === 'fails')

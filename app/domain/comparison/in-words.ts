@@ -1,6 +1,7 @@
-import { countByModel, countOutcome, type ComparedVariant } from '#app/domain/comparison/compared-variant.ts'
+import { countByModel, type ComparedVariant } from '#app/domain/comparison/compared-variant.ts'
 import { spacingsOf } from '#app/domain/comparison/spacings.ts'
 import type { ComparisonTerms } from '#app/domain/comparison/what-differs.ts'
+import { countOutcome, groupFindings } from '#app/domain/rules/finding-groups.ts'
 import { formatLength } from '#app/domain/units.ts'
 
 /** What differs between two variants in short sentences; `other` is told by how it departs from `from`. */
@@ -81,9 +82,10 @@ function power({ totals: before }: ComparedVariant, { totals: after }: ComparedV
 }
 
 function failing(from: ComparedVariant, other: ComparedVariant): string | null {
-  const [before, after] = [countOutcome(from.findings, 'fails'), countOutcome(other.findings, 'fails')]
+  const failures = ({ findings }: ComparedVariant) => countOutcome(groupFindings(findings), 'fails')
+  const [before, after] = [failures(from), failures(other)]
   if (before === after) return null
   const instead = before === 0 ? 'none' : String(before)
-  if (after === 0) return `No finding fails instead of ${instead}.`
-  return `${after} ${after === 1 ? 'finding fails' : 'findings fail'} instead of ${instead}.`
+  if (after === 0) return `No check fails instead of ${instead}.`
+  return `${after} ${after === 1 ? 'check fails' : 'checks fail'} instead of ${instead}.`
 }

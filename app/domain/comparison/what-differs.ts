@@ -1,6 +1,5 @@
 import {
   countByModel,
-  countOutcome,
   countUnsupported,
   tightestMargin,
   type ComparedVariant,
@@ -8,6 +7,7 @@ import {
 import { formatMoney } from '#app/domain/comparison/list-price.ts'
 import { spacingsOf } from '#app/domain/comparison/spacings.ts'
 import type { Outcome } from '#app/domain/rules/finding.ts'
+import { countOutcome, groupFindings, openOutcomes } from '#app/domain/rules/finding-groups.ts'
 import { formatLength, formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
 
 /** What a comparison needs beside the variants. Target and threshold in W/m². */
@@ -145,17 +145,8 @@ function unsupported({ findings, totals }: ComparedVariant): Value {
 
 function outcomes({ findings, totals }: ComparedVariant): Value {
   if (totals.heaters === 0) return missing
-  const [fails, open, first] = [
-    countOutcome(findings, 'fails'),
-    countOutcome(findings, 'cannot tell'),
-    countOutcome(findings, 'measure first'),
-  ]
-  const parts = [
-    fails > 0 ? `${fails} ${fails === 1 ? 'fails' : 'fail'}` : '',
-    open > 0 ? `${open} cannot tell` : '',
-    first > 0 ? `${first} to measure first` : '',
-  ].filter(Boolean)
-  return { text: parts.join(', ') || 'all pass', cost: fails }
+  const groups = groupFindings(findings)
+  return { text: openOutcomes(groups) || 'all pass', cost: countOutcome(groups, 'fails') }
 }
 
 function tightest({ findings }: ComparedVariant, { units }: ComparisonTerms): Value {

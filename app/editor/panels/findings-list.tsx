@@ -2,7 +2,7 @@ import { useState, type ReactNode } from 'react'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
 import { formatLength, type DisplayUnits } from '#app/domain/units.ts'
 import { OutcomeMark } from '#app/components/outcome-mark.tsx'
-import { groupFindings, summaryOf, tightestPasses, type FindingGroup } from '#app/editor/finding-groups.ts'
+import { groupFindings, summaryOf, tightestPasses, type FindingGroup } from '#app/domain/rules/finding-groups.ts'
 import { fluxFigure, noFigure, signedFigure } from '#app/editor/figures.ts'
 import type { FluxUnit } from '#app/editor/view-choice.ts'
 

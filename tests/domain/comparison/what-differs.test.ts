@@ -78,11 +78,18 @@ describe('what differs in words', () => {
     expect(words).toContain('Overlap 5.6 m² smaller.')
     expect(words).not.toContain('kW')
   })
-  it('says how many findings fail, none included', () => {
-    const fails = (count: number) => ({ ...second, findings: Array.from({ length: count }, () => failing) })
-    const failing = { ...second.findings[0]!, outcome: 'fails' as const }
-    expect(differencesInWords(fails(3), fails(0), terms)).toEqual(['No finding fails instead of 3.'])
-    expect(differencesInWords(fails(0), fails(1), terms)).toEqual(['1 finding fails instead of none.'])
+  it('says how many checks fail, none included; one that finds the same of two heaters counts once', () => {
+    const failing = (rule: string, id: string) => ({
+      ...second.findings[0]!,
+      rule,
+      outcome: 'fails' as const,
+      subject: { kind: 'heater' as const, id },
+    })
+    const twice = { ...second, findings: [failing('a', 'H1'), failing('a', 'H2'), failing('b', 'H1')] }
+    const none = { ...second, findings: [] }
+    const once = { ...second, findings: [failing('a', 'H1')] }
+    expect(differencesInWords(twice, none, terms)).toEqual(['No check fails instead of 2.'])
+    expect(differencesInWords(none, once, terms)).toEqual(['1 check fails instead of none.'])
   })
   it('says nothing of two that are the same', () => {
     expect(differencesInWords(second, { ...second, number: 5 }, terms)).toEqual([])

@@ -33,15 +33,32 @@ export function groupFindings(findings: readonly Finding[]): FindingGroup[] {
   })
 }
 
-/** "1 fails, 1 cannot tell, 1 to measure first, 9 pass": how many of the checks came out how. */
-export function summaryOf(groups: readonly FindingGroup[]): string {
-  const count = (outcome: Outcome) => groups.filter(({ worst }) => worst.outcome === outcome).length
-  const parts: [number, string][] = [
-    [count('fails'), count('fails') === 1 ? 'fails' : 'fail'],
-    [count('cannot tell'), 'cannot tell'],
-    [count('measure first'), 'to measure first'],
-    [count('pass'), count('pass') === 1 ? 'passes' : 'pass'],
-  ]
-  const said = parts.filter(([n]) => n > 0).map(([n, word]) => `${n} ${word}`)
-  return said.length > 0 ? said.join(', ') : 'Nothing to check yet'
+const outcomes = ['fails', 'cannot tell', 'measure first', 'pass'] as const
+
+/** How many of the checks came out one way: a rule that finds the same of twelve heaters is one check. */
+export const countOutcome = (groups: readonly FindingGroup[], outcome: Outcome): number =>
+  groups.filter(({ worst }) => worst.outcome === outcome).length
+
+function wordsFor(count: number, outcome: Outcome): string {
+  if (outcome === 'fails') return count === 1 ? 'fails' : 'fail'
+  if (outcome === 'pass') return count === 1 ? 'passes' : 'pass'
+  return outcome === 'measure first' ? 'to measure first' : outcome
 }
+
+const listOutcomes = (groups: readonly FindingGroup[], named: readonly Outcome[]): string =>
+  named
+    .map((outcome) => ({ outcome, count: countOutcome(groups, outcome) }))
+    .filter(({ count }) => count > 0)
+    .map(({ outcome, count }) => `${count} ${wordsFor(count, outcome)}`)
+    .join(', ')
+
+/** "1 fails, 1 cannot tell, 1 to measure first, 9 pass": how many of the checks came out how. */
+export const summaryOf = (groups: readonly FindingGroup[]): string =>
+  listOutcomes(groups, outcomes) || 'Nothing to check yet'
+
+/** The same without those that pass: empty when all do. */
+export const openOutcomes = (groups: readonly FindingGroup[]): string =>
+  listOutcomes(
+    groups,
+    outcomes.filter((outcome) => outcome !== 'pass'),
+  )

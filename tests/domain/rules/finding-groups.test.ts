@@ -1,6 +1,6 @@
 import { expect, it } from 'vitest'
 import type { Finding } from '#app/domain/rules/finding.ts'
-import { groupFindings, summaryOf } from '#app/editor/finding-groups.ts'
+import { groupFindings, summaryOf } from '#app/domain/rules/finding-groups.ts'
 
 const finding = (rule: string, outcome: Finding['outcome'], margin: number | null, id = 'H1'): Finding => ({
   rule,
