@@ -1,3 +1,4 @@
+import { listOf } from '#app/domain/site/edits.ts'
 import type { Dimension, Site } from '#app/domain/site/site.ts'
 
 /** A thing of the site by kind and id; the floor's id is of no account. */
@@ -8,6 +9,20 @@ export interface ThingOf {
 
 /** One coordinate of a thing, by its dotted path. */
 export type Coordinate = ThingOf & { readonly coordinate: string }
+
+/** A thing of the site, the floor as its outline; undefined when it is not there. */
+export const findThing = (site: Site, { of, id }: ThingOf): object | undefined =>
+  of === 'floor' ? site.floor : site[listOf[of]].find((thing) => thing.id === id)
+
+/** The value of one coordinate, m; null when the coordinate is not there. */
+export function numberAt(site: Site, coordinate: Coordinate): number | null {
+  let inside: unknown = findThing(site, coordinate)
+  for (const key of coordinate.coordinate.split('.')) inside = within(inside, key)
+  return typeof inside === 'number' ? inside : null
+}
+
+const within = (inside: unknown, key: string): unknown =>
+  typeof inside === 'object' && inside !== null && Object.hasOwn(inside, key) ? Reflect.get(inside, key) : undefined
 
 /** The site with a dimension longer by `delta`, m: every coordinate that it decides moves along. */
 export function moveDimension(site: Site, dimension: Dimension, delta: number): Site {
@@ -48,8 +63,8 @@ function withNumberMoved<T>(thing: T, path: readonly string[], delta: number): T
 }
 
 function moveNumber(inside: unknown, [key, ...rest]: readonly string[], delta: number): void {
-  if (typeof inside !== 'object' || inside === null || key === undefined || !Object.hasOwn(inside, key)) return
-  const value: unknown = Reflect.get(inside, key)
+  if (typeof inside !== 'object' || inside === null || key === undefined) return
+  const value = within(inside, key)
   if (rest.length > 0) moveNumber(value, rest, delta)
   else if (typeof value === 'number') Reflect.set(inside, key, value + delta)
 }

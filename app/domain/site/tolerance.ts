@@ -1,20 +1,10 @@
 import { houseRules } from '#app/domain/rules/house-rules.ts'
-import { moveCoordinate, moveDimension, type Coordinate, type ThingOf } from '#app/domain/site/dimension.ts'
+import { findThing, moveCoordinate, moveDimension, type Coordinate, type ThingOf } from '#app/domain/site/dimension.ts'
+import { listOf } from '#app/domain/site/edits.ts'
 import type { Dimension, Site } from '#app/domain/site/site.ts'
 
 /** Facts of a thing that are numbers but no sizes. */
 const noSizes = new Set(['allowedPointLoad', 'transmittance', 'turnDeg', 'facingDeg'])
-
-/** Where a site keeps the things of each kind. */
-const listOf = {
-  cover: 'covers',
-  member: 'members',
-  wall: 'walls',
-  pole: 'poles',
-  obstacle: 'obstacles',
-  table: 'tables',
-  seat: 'seats',
-} as const
 
 const kinds = ['cover', 'member', 'wall', 'pole', 'obstacle', 'table', 'seat'] as const
 
@@ -24,10 +14,6 @@ function sizesWithin(value: unknown, path: readonly string[]): string[] {
   if (typeof value === 'number') return noSizes.has(last) || (last === 'swing' && value === 0) ? [] : [path.join('.')]
   if (typeof value !== 'object' || value === null) return []
   return Object.entries(value).flatMap(([key, item]) => sizesWithin(item, [...path, key]))
-}
-
-function thing(site: Site, { of, id }: ThingOf): unknown {
-  return of === 'floor' ? site.floor : site[listOf[of]].find((candidate) => candidate.id === id)
 }
 
 /** One uncertain size and both sites that it may make of a site, its value lower and higher by its tolerance. */
@@ -108,7 +94,7 @@ export function shiftsOf(
 /** Dotted paths of the sizes of a thing that no dimension moves. */
 export function bareSizesOf(site: Site, about: ThingOf): string[] {
   const moved = new Set(dimensionsOf(site, about).flatMap(({ moves }) => moves.map(({ coordinate }) => coordinate)))
-  return sizesWithin(thing(site, about), []).filter((coordinate) => !moved.has(coordinate))
+  return sizesWithin(findThing(site, about), []).filter((coordinate) => !moved.has(coordinate))
 }
 
 const doubtsOfThing = new WeakMap<Site, Map<string, readonly Doubt[]>>()

@@ -1,4 +1,5 @@
-import { useMemo, useState } from 'react'
+import { useCallback, useMemo, useState } from 'react'
+import { placedByHand, placedInWords } from '#app/domain/site/placed-by-hand.ts'
 import { refusalOf, siteFaults } from '#app/domain/site/site-faults.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
@@ -6,7 +7,7 @@ import { useToast } from '#app/components/toast.tsx'
 import type { OpenDocument } from '#app/editor/document.ts'
 import { chosenFloor, type Chosen } from '#app/editor/site/choice.ts'
 import { chosenAfterClick, chosenWords, removeChosen, stillThere } from '#app/editor/site/chosen.ts'
-import { SiteEditingProvider } from '#app/editor/site/editing.ts'
+import { SiteEditingProvider, type SiteEditing } from '#app/editor/site/editing.ts'
 import type { ListedKind } from '#app/editor/site/kind-list.tsx'
 import { kindOfNew, middleOf, withThingAt, type NewThing } from '#app/editor/site/new-things.ts'
 import { SitePlan } from '#app/editor/site/site-plan.tsx'
@@ -29,7 +30,8 @@ export function SiteEditor({ site, document, readOnly, theme, sizes }: SiteEdito
   const [adding, setAdding] = useState<NewThing | null>(null)
   const toast = useToast()
   const chosen = stillThere(site, wanted)
-  const { change, undo } = document
+  const { undo } = document
+  const change = useChangeByHand(document)
   const editing = useMemo(() => ({ site, readOnly, change }), [site, readOnly, change])
 
   const choose = (next: Chosen | null) => {
@@ -96,6 +98,22 @@ export function SiteEditor({ site, document, readOnly, theme, sizes }: SiteEdito
         />
       </div>
     </SiteEditingProvider>
+  )
+}
+
+/** The way to change the site by hand: sizes that decided what was changed go along in the same step, and it is said. */
+function useChangeByHand(document: SiteEditorProps['document']): SiteEditing['change'] {
+  const toast = useToast()
+  const { change, undo } = document
+  return useCallback(
+    (edit) =>
+      change((old) => {
+        const placed = placedByHand(old, edit(old))
+        const text = placedInWords(placed, placed.site.displayUnits)
+        if (text) toast({ text, action: { label: 'Undo', run: undo } })
+        return placed.site
+      }),
+    [change, undo, toast],
   )
 }
 
