@@ -7,7 +7,6 @@ import { handlesOf, putHandle } from '#app/editor/site/handles.ts'
 import { kindOfNew, middleOf, withThingAt, type NewThing } from '#app/editor/site/new-things.ts'
 import { obstacleKinds } from '#app/editor/site/obstacle-kinds.ts'
 import { shapeAs } from '#app/editor/site/shape-fields.tsx'
-import { mergedSite, siteDifferences } from '#app/editor/site/site-conflict.ts'
 import { thingAt } from '#app/editor/site/thing-at.ts'
 import { refusalOf, siteFaults } from '#app/domain/site/site-faults.ts'
 import { listOf } from '#app/domain/site/edits.ts'
@@ -162,33 +161,5 @@ describe('what a pointer means', () => {
     expect(moved.seats.filter((seat, i) => seat !== site.seats[i])).toHaveLength(2)
     expect(siteFaults(moved)).toEqual([])
     expect(gestureAt(site, both, [1.32, 3.33], 0.1, true)!.chosen).toEqual(seats('R1-1', 'R1-2', 'R1-3'))
-  })
-})
-
-describe('a site that two people changed', () => {
-  const mine = moveChosen(site, seats('R1-1'), 0.2, 0)
-  const theirs = removeChosen(moveChosen(site, chosenThing('member', 'beam-3'), 0.3, 0), seats('W5-1'))
-
-  it('is told thing by thing with both values', () => {
-    expect(siteDifferences(mine, theirs).map(({ key }) => key)).toEqual(['seat R1-1', 'seat W5-1', 'member beam-3'])
-    expect(siteDifferences(mine, theirs)[1]).toMatchObject({ label: 'Seat W5-1', theirs: 'none' })
-    const reordered = { ...site, seats: site.seats.map((seat) => Object.fromEntries(Object.entries(seat).reverse())) }
-    expect(siteDifferences(site, siteSchema.parse(reordered))).toEqual([])
-    expect(siteDifferences(site, reordered as typeof site)).toEqual([])
-  })
-  it('tells what was changed there alone from what was changed here', () => {
-    const alone = siteDifferences(mine, theirs, site).map(({ key, theirsAlone }) => [key, theirsAlone])
-    expect(alone).toEqual([
-      ['seat R1-1', false],
-      ['seat W5-1', true],
-      ['member beam-3', true],
-    ])
-    expect(siteDifferences(mine, theirs).every(({ theirsAlone }) => !theirsAlone)).toBe(true)
-  })
-  it('becomes one site by the choice for each thing', () => {
-    const merged = mergedSite(mine, theirs, new Set(['member beam-3', 'seat W5-1']))
-    expect(siteDifferences(merged, mine).map(({ key }) => key)).toEqual(['seat W5-1', 'member beam-3'])
-    expect(siteDifferences(merged, theirs).map(({ key }) => key)).toEqual(['seat R1-1'])
-    expect(siteDifferences(mergedSite(mine, theirs, new Set()), mine)).toEqual([])
   })
 })
