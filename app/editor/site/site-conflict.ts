@@ -35,13 +35,14 @@ const wholeNames = ['name', 'kind', 'axes', 'displayUnits', 'trace'] as const sa
 export function siteDifferences(mine: Site, theirs: Site, base: Site | null = null): SiteDifference[] {
   const copies: Copies<Site> = [mine, theirs, base]
   const units = mine.displayUnits
-  const named = (site: Site, kind: ThingKind) => rowsOf({ ...site, displayUnits: units }, kind)
+  const ofKind = (kind: ThingKind) => {
+    const rows = map(copies, (site) => rowsOf({ ...site, displayUnits: units }, kind))
+    return differing(kind, map(copies, (site) => site[listOf[kind]]), rows, units) // prettier-ignore
+  }
+  const sizes = map(copies, ({ dimensions }) => dimensions)
   return [
-    ...kinds.flatMap(
-      (kind) =>
-      differing(kind, map(copies, (site) => site[listOf[kind]]), map(copies, (site) => named(site, kind)), units), // prettier-ignore
-    ),
-    ...differing('size', map(copies, (site) => site.dimensions), map(copies, (site) => sizeRows(site, units)), units), // prettier-ignore
+    ...kinds.flatMap(ofKind),
+    ...differing('size', sizes, map(sizes, (list) => sizeRows(list, units)), units), // prettier-ignore
     ...floorDifference(copies),
     ...wholeNames.flatMap((name) => wholeDifference(name, copies)),
   ]
@@ -49,8 +50,8 @@ export function siteDifferences(mine: Site, theirs: Site, base: Site | null = nu
 
 const map = <T, U>([mine, theirs, base]: Copies<T>, of: (copy: T) => U): Copies<U> => [of(mine), of(theirs), base && of(base)] // prettier-ignore
 
-const sizeRows = ({ dimensions }: Site, units: Site['displayUnits']): ThingRow[] =>
-  dimensions.map(({ id, label, value, tolerance, source }) => ({
+const sizeRows = (sizes: readonly Dimension[], units: Site['displayUnits']): ThingRow[] =>
+  sizes.map(({ id, label, value, tolerance, source }) => ({
     id,
     name: label,
     words: `${formatLength(value, units)} ± ${formatLength(tolerance, units)}, ${source}`,
