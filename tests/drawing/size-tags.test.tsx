@@ -1,12 +1,28 @@
 import { renderToStaticMarkup } from 'react-dom/server'
 import { describe, expect, it } from 'vitest'
+import { siteTemplates } from '#app/domain/site/templates/site-templates.ts'
+import { irradianceScale } from '#app/drawing/heat/quantity.ts'
 import { screenPen } from '#app/drawing/pen.ts'
 import { meets, patch } from '#app/drawing/plan/occupied.ts'
+import { Plan } from '#app/drawing/plan/plan-drawing.tsx'
 import { planViewOf } from '#app/drawing/plan/plan-view.ts'
 import { placeSizeTags, SizeTags, sizeText } from '#app/drawing/plan/size-tags.tsx'
 import { slopeText } from '#app/drawing/plan/cover-mark.tsx'
 import { textWidth } from '#app/drawing/text/widths.ts'
 import { demoSites } from '#drizzle/seed/demo-sites.ts'
+
+/** The level words of a drawing with the room they take. */
+function level(drawing: string) {
+  return [...drawing.matchAll(/<text ([^>]*)>([^<]*)<\/text>/g)].flatMap(([, attributes = '', text = '']) => {
+    const number = (name: string) => Number(new RegExp(`(?:^| )${name}="([-\\d.]+)"`).exec(attributes)?.[1])
+    if (attributes.includes('rotate')) return []
+    const [size, width] = [number('font-size'), textWidth(text, number('font-size'), 500)]
+    const anchor = /text-anchor="(\w+)"/.exec(attributes)?.[1]
+    const from = number('x') - (anchor === 'middle' ? width / 2 : anchor === 'end' ? width : 0)
+    const middle = number('y') - (attributes.includes('dy=') ? 0 : size * 0.35)
+    return [{ text, room: patch(from + width / 2, middle, width, size * 0.8) }]
+  })
+}
 
 const pen = screenPen('day')
 const [a, , c] = demoSites().map(({ site }) => site)
@@ -37,6 +53,47 @@ describe('sizes on the plan', () => {
     })
     expect(tags.length).toBe(5)
     tags.forEach((tag, i) => expect(tags.slice(i + 1).some((other) => meets(tag, other))).toBe(false))
+  })
+
+  it.each(siteTemplates.map((template) => [template.key, template] as const))(
+    'keep clear of every word of the plan of a fresh %s, where all sizes are guessed',
+    (_, template) => {
+      const made = template.start(new Map(), 'tape', { name: 'new', displayUnits: 'metric', trace: null })
+      if ('error' in made) throw new Error(made.error)
+      const view = planViewOf(made, 768, 512)
+      const plan = renderToStaticMarkup(
+        <svg>
+          <Plan
+            {...{ name: 'p', site: made, view, pen, quantity: irradianceScale('day', { low: 150, high: 350 }) }}
+            layout={{ title: '', heaters: [] }}
+            models={new Map()}
+            picture={null}
+            signs={new Map()}
+          />
+        </svg>,
+      )
+      const words = level(plan)
+      expect(words.length).toBeGreaterThan(2)
+      const tags = placeSizeTags(made, view, pen, true)
+      expect(tags).toHaveLength(template.sizes.length)
+      for (const { text, x, y } of tags) {
+        const width = textWidth(text, pen.text, 500)
+        const tag = patch(x + width / 2, y - pen.text * 0.35, width, pen.text * 0.8)
+        expect(words.filter(({ room }) => meets(tag, room)).map((word) => word.text)).toEqual([])
+      }
+    },
+  )
+
+  it('cut a long name, never the figure and its source', () => {
+    const view = planViewOf(c!, 900, 560)
+    const long = { ...c!.dimensions[2]!, label: 'from the corner of the house to the far side of the counter' }
+    const [tag] = placeSizeTags({ ...c!, dimensions: [long] }, view, pen, true)
+    expect(tag!.text).toMatch(/^from the corner.*… 2\.65 ± 0\.008, tape$/)
+  })
+
+  it('are left out where what they decide is off the drawing', () => {
+    const view = planViewOf(c!, 900, 560)
+    expect(placeSizeTags(c!, { ...view, x0: view.x0 - 2000 }, pen, true)).toEqual([])
   })
 
   it('are counted where there is no room to name them', () => {

@@ -2,6 +2,7 @@ import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { DimensionChain, type ChainStop } from '#app/drawing/plan/dimension-line.tsx'
 import { dimensionText, floorDimension, toleratedText } from '#app/drawing/plan/dimension-text.ts'
+import { patch, type Patch } from '#app/drawing/plan/occupied.ts'
 import { extentOf, type PlanView } from '#app/drawing/plan/plan-view.ts'
 import { wallCorners } from '#app/drawing/plan/wall.tsx'
 import type { Pen } from '#app/drawing/pen.ts'
@@ -71,10 +72,6 @@ export function PlanDimensions({
   }
   const stopsX = chain(0, x).map(onX)
   const stopsY = chain(1, y).map(onY).reverse()
-  const whole = (axis: 0 | 1, metres: number): string => {
-    const dimension = floorDimension(site, axis, metres)
-    return dimension ? toleratedText(dimension, metres, site.displayUnits) : text(metres)
-  }
   const hasChainX = heaters.length > 0 && stopsX.length > 1
   const hasChainY = heaters.length > 0 && stopsY.length > 1
   const isCrowded = stopsX.some(
@@ -90,7 +87,7 @@ export function PlanDimensions({
           direction="level"
           at={below + (isCrowded ? 51 : hasChainX ? 38 : 17) * pen.k}
           stops={x.map(onX)}
-          text={(metres) => whole(0, metres)}
+          text={(metres) => wholeText(site, 0, metres)}
           pen={pen}
         />
       ) : null}
@@ -102,12 +99,34 @@ export function PlanDimensions({
           direction="upright"
           at={right + (hasChainY ? 39 : 19) * pen.k}
           stops={y.map(onY).reverse()}
-          text={(metres) => whole(1, metres)}
+          text={(metres) => wholeText(site, 1, metres)}
           pen={pen}
         />
       ) : null}
     </g>
   )
+}
+
+/** The room that the floor's whole length and depth take on a plan without heaters, px: each line and its figure. */
+export function takenByOverall(site: Site, view: PlanView, pen: Pen): Patch[] {
+  const { x, y } = extentOf(site.floor)
+  const [below, right] = [lowestPx(site, view) + 17 * pen.k, view.x0 + view.scale * x[1] + 19 * pen.k]
+  const [across, deep] = [(x[1] - x[0]) * view.scale, (y[1] - y[0]) * view.scale]
+  const [midX, midY] = [view.x0 + (view.scale * (x[0] + x[1])) / 2, view.y0 - (view.scale * (y[0] + y[1])) / 2]
+  const figure = (axis: 0 | 1, metres: number) => textWidth(wholeText(site, axis, metres), pen.text, 500)
+  const above = 4 * pen.k + pen.text * 0.35
+  return [
+    patch(midX, below, across, 4 * pen.k),
+    patch(midX, below - above, figure(0, x[1] - x[0]), pen.text),
+    patch(right, midY, 4 * pen.k, deep),
+    patch(right - above, midY, pen.text, figure(1, y[1] - y[0])),
+  ]
+}
+
+/** The whole length (0) or depth (1) of the floor, with its tolerance where a size is known. */
+function wholeText(site: Site, axis: 0 | 1, metres: number): string {
+  const dimension = floorDimension(site, axis, metres)
+  return dimension ? toleratedText(dimension, metres, site.displayUnits) : dimensionText(metres, site.displayUnits)
 }
 
 /** Bottom of the floor and of the walls below it, px. */

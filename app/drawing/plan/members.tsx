@@ -1,4 +1,5 @@
 import type { Member } from '#app/domain/site/site.ts'
+import { isClear, patch, type Patch } from '#app/drawing/plan/occupied.ts'
 import { toScreen, type PlanView } from '#app/drawing/plan/plan-view.ts'
 import type { Pen } from '#app/drawing/pen.ts'
 import { textWidth } from '#app/drawing/text/widths.ts'
@@ -78,6 +79,41 @@ function namesOf(members: readonly Member[], view: PlanView, pen: Pen, cuts: rea
   return taken
 }
 
+const roomOf = ({ from, to, y }: Name, pen: Pen): Patch =>
+  patch((from + to) / 2, y - pen.text * 0.35, to - from, pen.text)
+
+/** Names of level members at their left ends: above the line, or under it where another name stands above. */
+function levelNames(members: readonly Member[], view: PlanView, pen: Pen, others: readonly Name[]): Name[] {
+  const taken = others.map((name) => roomOf(name, pen))
+  return members.flatMap((member) => {
+    const { at, level } = nameEnd(member, view)
+    if (!level) return []
+    const text = shortName(member)
+    const x = at[0] + 6
+    const named = (y: number): Name => ({ id: member.id, text, x, y, from: x, to: x + textWidth(text, pen.text), anchor: 'start' }) // prettier-ignore
+    const above = named(at[1] - 5)
+    const under = named(at[1] + pen.text + 4 * pen.k)
+    const name = [above, under].find((one) => isClear(roomOf(one, pen), taken, 2)) ?? above
+    taken.push(roomOf(name, pen))
+    return [name]
+  })
+}
+
+function allNames(members: readonly Member[], view: PlanView, pen: Pen, cuts: readonly number[]): Name[] {
+  const upright = namesOf(members, view, pen, cuts)
+  return [...upright, ...levelNames(members, view, pen, upright)]
+}
+
+/** The room that the names of members take on a plan, px; `cuts` are x of section lines. */
+export const takenByMemberNames = (
+  members: readonly Member[],
+  view: PlanView,
+  pen: Pen,
+  cuts: readonly number[],
+): Patch[] =>
+  // prettier-ignore
+  allNames(members, view, pen, cuts).map((name) => roomOf(name, pen))
+
 /** Names of the members above the floor's upper edge, those left out for which there is no room. */
 export function MemberNames({
   members,
@@ -90,10 +126,9 @@ export function MemberNames({
   pen: Pen
   cuts: readonly number[]
 }) {
-  const level = members.map((member) => ({ member, ...nameEnd(member, view) })).filter((end) => end.level)
   return (
     <g>
-      {namesOf(members, view, pen, cuts).map((name) => (
+      {allNames(members, view, pen, cuts).map((name) => (
         <Words
           key={name.id}
           x={name.x}
@@ -105,19 +140,6 @@ export function MemberNames({
           halo={pen.colours.halo}
         >
           {name.text}
-        </Words>
-      ))}
-      {level.map(({ member, at }) => (
-        <Words
-          key={member.id}
-          x={at[0] + 6}
-          y={at[1] - 5}
-          size={pen.text}
-          colour={pen.colours.line}
-          opacity={0.85}
-          halo={pen.colours.halo}
-        >
-          {shortName(member)}
         </Words>
       ))}
     </g>

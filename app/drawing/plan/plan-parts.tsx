@@ -9,7 +9,7 @@ import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
 import { Beyond } from '#app/drawing/plan/beyond.tsx'
 import { PoleMark, TableMark } from '#app/drawing/plan/furniture.tsx'
 import { LineLabels, placeLineLabels, placePeaks } from '#app/drawing/plan/line-labels.tsx'
-import { MemberLines, MemberNames } from '#app/drawing/plan/members.tsx'
+import { MemberLines, MemberNames, takenByMemberNames } from '#app/drawing/plan/members.tsx'
 import { notePatch, placeNotes, placePoleNames, takenAbove } from '#app/drawing/plan/notes.ts'
 import { ObstacleMark } from '#app/drawing/plan/obstacle.tsx'
 import { outlinePath } from '#app/drawing/plan/outline.ts'
@@ -169,10 +169,12 @@ export const PlanNames = memo(function PlanNames(props: FigureProps & { cuts: re
   const { site, layout, models, view, pen, withFigure, cuts } = props
   const taken = [...takenBySite(site, view, pen, withFigure), ...takenByHeaters(layout, models, view, pen)]
   const notes = placeNotes(site, view, pen, taken)
-  const poles = placePoleNames(site, view, pen, [...taken, ...notes.map((note) => notePatch(note, pen))])
+  const across = cutsAcross(cuts, view)
+  const members = takenByMemberNames(site.members, view, pen, across)
+  const poles = placePoleNames(site, view, pen, [...taken, ...notes.map((note) => notePatch(note, pen)), ...members])
   return (
     <>
-      <MemberNames members={site.members} view={view} pen={pen} cuts={cutsAcross(cuts, view)} />
+      <MemberNames members={site.members} view={view} pen={pen} cuts={across} />
       {[...notes, ...poles].map((note) => (
         <Words
           key={note.id}

@@ -2,12 +2,17 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { heaterNameAt, heaterPatch, heaterPlace } from '#app/drawing/plan/heater-place.ts'
+import { takenByOverall } from '#app/drawing/plan/dimensions.tsx'
+import { takenByMemberNames } from '#app/drawing/plan/members.tsx'
+import { notePatch, placeNotes, placePoleNames } from '#app/drawing/plan/notes.ts'
 import { stripOf } from '#app/drawing/plan/obstacle.tsx'
-import { patch, type Patch } from '#app/drawing/plan/occupied.ts'
+import { patch, patchAround, type Patch } from '#app/drawing/plan/occupied.ts'
 import { toScreen, type PlanView } from '#app/drawing/plan/plan-view.ts'
-import { seatRadius } from '#app/drawing/plan/seat.tsx'
+import { seatRadius, seatsCarryFigures } from '#app/drawing/plan/seat.tsx'
+import { wallCorners } from '#app/drawing/plan/wall.tsx'
 import type { Pen } from '#app/drawing/pen.ts'
 import { textWidth } from '#app/drawing/text/widths.ts'
+import type { Vec2 } from '#app/domain/vector.ts'
 
 /** The room that seats, tables, poles and cables take on a plan, px. */
 export function takenBySite(site: Site, view: PlanView, pen: Pen, withFigure: boolean): Patch[] {
@@ -33,6 +38,28 @@ export function takenBySmallThings(site: Site, view: PlanView, pen: Pen, withFig
     })
   return [...seats, ...poles, ...cables]
 }
+
+/** The room that everything said on a plan of the site without heaters takes, px: names, figures and dimension lines. */
+export function takenByWords(site: Site, view: PlanView, pen: Pen): Patch[] {
+  const things = takenBySite(site, view, pen, seatsCarryFigures(site.seats, view, pen))
+  const notes = placeNotes(site, view, pen, things).map((note) => notePatch(note, pen))
+  const members = takenByMemberNames(site.members, view, pen, [])
+  const poles = placePoleNames(site, view, pen, [...things, ...notes, ...members]).map((note) => notePatch(note, pen))
+  const walls = site.walls.map((wall) => patchAround(wallCorners(wall, view)))
+  return [
+    ...things,
+    ...notes,
+    ...poles,
+    ...walls,
+    ...members,
+    ...site.floor.map((from, i) => lineRoom(toScreen(view, from), toScreen(view, site.floor[i + 1] ?? site.floor[0] ?? from))), // prettier-ignore
+    ...takenByOverall(site, view, pen),
+  ]
+}
+
+/** The room that a line takes, with a little beside it. */
+const lineRoom = ([ax, ay]: Vec2, [bx, by]: Vec2): Patch =>
+  patch((ax + bx) / 2, (ay + by) / 2, Math.hypot(bx - ax, by - ay), 3, (Math.atan2(by - ay, bx - ax) * 180) / Math.PI)
 
 /** The room that heaters and their names take on a plan, px. */
 export function takenByHeaters(

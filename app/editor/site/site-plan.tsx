@@ -5,6 +5,7 @@ import type { Vec2 } from '#app/domain/vector.ts'
 import { irradianceScale } from '#app/drawing/heat/quantity.ts'
 import { screenPen, type Pen } from '#app/drawing/pen.ts'
 import { CoverMark, LevelMark } from '#app/drawing/plan/cover-mark.tsx'
+import { patch } from '#app/drawing/plan/occupied.ts'
 import { Plan } from '#app/drawing/plan/plan-drawing.tsx'
 import { workingMargins, type PlanView } from '#app/drawing/plan/plan-view.ts'
 import { SizeTags } from '#app/drawing/plan/size-tags.tsx'
@@ -152,7 +153,7 @@ const SiteGround = memo(function SiteGround({ site, view, pen, theme, sizes }: G
       {site.covers.map((cover) => (
         <CoverMark key={cover.id} cover={cover} view={view} pen={pen} />
       ))}
-      <SizeTags site={site} view={view} pen={pen} all={sizes} />
+      <SizeTags site={site} view={view} pen={pen} all={sizes} beside={[patch(view.width - 70, 28, 140, 56)]} />
     </>
   )
 })
