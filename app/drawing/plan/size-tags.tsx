@@ -26,6 +26,8 @@ interface Tag {
 }
 
 const most = 340
+/** More sizes than these keep clear of each other alone: there is no room left, and looking for it takes long. */
+const mostKeptClear = 60
 
 /** The size in words of at most a width: its name is cut, its figure and source never. */
 function fittingText(size: Dimension, units: Site['displayUnits'], pen: Pen): string {
@@ -62,24 +64,26 @@ export function placeSizeTags(
 ): Tag[] {
   const { x, y } = extentOf(site.floor)
   const onLine = new Set([floorDimension(site, 0, x[1] - x[0])?.id, floorDimension(site, 1, y[1] - y[0])?.id])
-  const said = [...takenByWords(site, view, pen), ...beside]
+  const sizes = site.dimensions.flatMap((size) => {
+    const place = placeOf(site, size)
+    const about = place && toScreen(view, place)
+    const told = isAssumed(size) || (all && !onLine.has(size.id))
+    return told && (!about || isWithin(about, view)) ? [{ size, about }] : []
+  })
+  const few = sizes.length > 0 && sizes.length <= mostKeptClear
+  const said = few ? [...takenByWords(site, view, pen), ...beside] : beside
   const taken: Patch[] = []
-  return site.dimensions
-    .filter((size) => (all ? !onLine.has(size.id) || isAssumed(size) : isAssumed(size)))
-    .flatMap((size, i): Tag[] => {
-      const text = fittingText(size, site.displayUnits, pen)
-      const place = placeOf(site, size)
-      const about = place && toScreen(view, place)
-      if (about && !isWithin(about, view)) return []
-      const width = textWidth(text, pen.text, 500)
-      const spots = spotsAround(about ?? [7, 18 + 16 * i], width, view, pen)
-      const clear = (spot: Vec2, others: readonly Patch[]) => isClear(patchOf(spot, width, pen), others, 1)
-      const spot =
-        spots.find((one) => clear(one, taken) && clear(one, said)) ?? spots.find((one) => clear(one, taken)) ?? spots[0]
-      if (!spot) return []
-      taken.push(patchOf(spot, width, pen))
-      return [{ id: size.id, text, x: spot[0], y: spot[1], about }]
-    })
+  return sizes.flatMap(({ size, about }, i): Tag[] => {
+    const text = fittingText(size, site.displayUnits, pen)
+    const width = textWidth(text, pen.text, 500)
+    const spots = spotsAround(about ?? [7, 18 + 16 * i], width, view, pen)
+    const clear = (spot: Vec2, others: readonly Patch[]) => isClear(patchOf(spot, width, pen), others, 1)
+    const spot =
+      spots.find((one) => clear(one, taken) && clear(one, said)) ?? spots.find((one) => clear(one, taken)) ?? spots[0]
+    if (!spot) return []
+    taken.push(patchOf(spot, width, pen))
+    return [{ id: size.id, text, x: spot[0], y: spot[1], about }]
+  })
 }
 
 const isWithin = ([x, y]: Vec2, { width, height }: PlanView): boolean => x >= 0 && x <= width && y >= 0 && y <= height
