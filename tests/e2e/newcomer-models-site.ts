@@ -32,9 +32,9 @@ class Hand {
   press = (name: string) => this.click(this.page.getByRole('button', { name, exact: true }))
 }
 
-async function openEmptyJob(page: Page): Promise<void> {
+async function openEmptyJob(page: Page, name: string): Promise<void> {
   await page.goto('/jobs/new')
-  await page.getByLabel('Job', { exact: true }).fill('Newcomer veranda')
+  await page.getByLabel('Job', { exact: true }).fill(name)
   await page.getByLabel('Place', { exact: true }).fill('Sallow Lane again')
   for (const unknown of await page.getByRole('checkbox').all()) await unknown.check()
   await page.getByRole('button', { name: 'Open the job' }).click()
@@ -43,7 +43,7 @@ async function openEmptyJob(page: Page): Promise<void> {
 
 test('a newcomer models the veranda of site C from its listed sizes', async ({ page }) => {
   await signIn(page, 'designer')
-  await openEmptyJob(page)
+  await openEmptyJob(page, 'Newcomer veranda')
   const hand = new Hand(page)
 
   // The kind of place, with the sizes that were listed.
@@ -226,4 +226,45 @@ test('what cannot be is refused beside its field and nothing typed is lost; a co
   await expect.poll(async () => (await readJob(page.request, /^Sallow Lane/)).site.seats.at(-1)!.y).toBeGreaterThan(1.8)
   await undo.click()
   await expect.poll(async () => (await readJob(page.request, /^Sallow Lane/)).site).toEqual(before)
+})
+
+test('the site of another job is copied whole, and some kinds of things of a third beside it', async ({ page }) => {
+  await signIn(page, 'designer')
+  await openEmptyJob(page, 'Copied veranda')
+  const [veranda, umbrellas] = [
+    await readJob(page.request, /^Sallow Lane/),
+    await readJob(page.request, /^Hotel Quillfinch/),
+  ]
+  const read = async () => (await readJob(page.request, /^Copied veranda/)).site
+  const bare = await read()
+  await page.getByRole('button', { name: 'From another job' }).click()
+  await page.getByLabel('Job', { exact: true }).selectOption(veranda.id)
+  await page.getByRole('button', { name: 'Copy', exact: true }).click()
+  await expect(page.getByRole('heading', { name: 'Copy the site of another job' })).toHaveCount(0)
+  await expect(page.locator('[data-seat="D2"]')).toBeVisible()
+  await expect.poll(async () => (await read()).seats.length).toBe(10)
+  // The photo that a size was measured in stays with its own job.
+  const dimensions = veranda.site.dimensions.map((size) => ({ ...size, photo: undefined }))
+  expect(veranda.site.dimensions.some(({ photo }) => photo)).toBe(true)
+  expect(await read()).toEqual({ ...veranda.site, name: bare.name, displayUnits: bare.displayUnits, dimensions })
+
+  await page.getByRole('button', { name: 'From another job' }).click()
+  await page.getByLabel('Job', { exact: true }).selectOption(umbrellas.id)
+  await page
+    .getByRole('button', { name: 'Some kinds' })
+    .or(page.getByRole('radio', { name: 'Some kinds' }))
+    .click()
+  for (const kind of ['covers', 'members']) await page.getByRole('checkbox', { name: kind }).uncheck()
+  for (const kind of ['obstacles', 'walls']) await page.getByRole('checkbox', { name: kind }).check()
+  await page.getByRole('button', { name: 'Copy', exact: true }).click()
+  const more = veranda.site.obstacles.length + umbrellas.site.obstacles.length
+  await expect.poll(async () => (await read()).obstacles.length).toBe(more)
+  const both = await read()
+  expect(both.walls).toHaveLength(veranda.site.walls.length + umbrellas.site.walls.length)
+  expect(both.seats).toEqual(veranda.site.seats)
+  expect(new Set(both.dimensions.map(({ label }) => label))).toContain('umbrella rim height')
+  const undo = page.getByRole('button', { name: 'Undo' }).first()
+  await undo.click()
+  await undo.click()
+  await expect.poll(read).toEqual(bare)
 })
