@@ -2,7 +2,7 @@ import { expect, test, type Locator, type Page } from '@playwright/test'
 import { PNG } from 'pngjs'
 import { z } from 'zod'
 import { photoMarksSchema } from '#app/domain/photo/measurements.ts'
-import { readJob, signIn, type JourneyJob } from '#tests/support/journey.ts'
+import { openJob, readJob, signIn, type JourneyJob } from '#tests/support/journey.ts'
 
 test.use({ hasTouch: true, viewport: { width: 1024, height: 768 } })
 
@@ -32,16 +32,6 @@ async function fingers(page: Page, ...ways: readonly (readonly [from: Place, to:
   await cdp.send('Input.dispatchTouchEvent', { type: 'touchEnd', touchPoints: [] })
   await cdp.detach()
   expect(await scrolled()).toEqual(still)
-}
-
-/** A job of this test alone. */
-async function openJob(page: Page, name: string): Promise<void> {
-  await page.goto('/jobs/new')
-  await page.getByLabel('Job', { exact: true }).fill(name)
-  await page.getByLabel('Place', { exact: true }).fill('Touch')
-  for (const unknown of await page.getByRole('checkbox').all()) await unknown.check()
-  await page.getByRole('button', { name: 'Open the job' }).tap()
-  await page.waitForURL(/\/site$/)
 }
 
 test('a site is changed by finger: a seat, an umbrella and a corner move; two fingers enlarge and shift', async ({

@@ -1,7 +1,7 @@
 import { expect, test, type Locator, type Page } from '@playwright/test'
 import { coverPlane, planeHeightAt } from '#app/domain/site/cover.ts'
 import type { Obstacle, Site } from '#app/domain/site/site.ts'
-import { readJob, signIn } from '#tests/support/journey.ts'
+import { openJob, readJob, signIn } from '#tests/support/journey.ts'
 
 /** The most that a newcomer may need for the veranda of demo site C. */
 const mostActions = 60
@@ -32,18 +32,9 @@ class Hand {
   press = (name: string) => this.click(this.page.getByRole('button', { name, exact: true }))
 }
 
-async function openEmptyJob(page: Page, name: string): Promise<void> {
-  await page.goto('/jobs/new')
-  await page.getByLabel('Job', { exact: true }).fill(name)
-  await page.getByLabel('Place', { exact: true }).fill('Sallow Lane again')
-  for (const unknown of await page.getByRole('checkbox').all()) await unknown.check()
-  await page.getByRole('button', { name: 'Open the job' }).click()
-  await page.waitForURL(/\/site$/)
-}
-
 test('a newcomer models the veranda of site C from its listed sizes', async ({ page }) => {
   await signIn(page, 'designer')
-  await openEmptyJob(page, 'Newcomer veranda')
+  await openJob(page, 'Newcomer veranda')
   const hand = new Hand(page)
 
   // The kind of place, with the sizes that were listed.
@@ -230,7 +221,7 @@ test('what cannot be is refused beside its field and nothing typed is lost; a co
 
 test('the site of another job is copied whole, and some kinds of things of a third beside it', async ({ page }) => {
   await signIn(page, 'designer')
-  await openEmptyJob(page, 'Copied veranda')
+  await openJob(page, 'Copied veranda')
   const [veranda, umbrellas] = [
     await readJob(page.request, /^Sallow Lane/),
     await readJob(page.request, /^Hotel Quillfinch/),

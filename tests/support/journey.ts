@@ -15,6 +15,16 @@ export async function signIn(page: Page, role: Role): Promise<void> {
   await page.waitForURL('**/jobs')
 }
 
+/** A job of a test's own, of which nothing is known; lands on its empty site. */
+export async function openJob(page: Page, name: string): Promise<void> {
+  await page.goto('/jobs/new')
+  await page.getByLabel('Job', { exact: true }).fill(name)
+  await page.getByLabel('Place', { exact: true }).fill('Somewhere')
+  for (const unknown of await page.getByRole('checkbox').all()) await unknown.check()
+  await page.getByRole('button', { name: 'Open the job' }).click()
+  await page.waitForURL(/\/site$/)
+}
+
 /** Violations of the content security policy and errors of the page, as they come. */
 export async function watchPage(page: Page): Promise<{ readonly violations: string[]; readonly errors: string[] }> {
   const seen = { violations: [] as string[], errors: [] as string[] }
