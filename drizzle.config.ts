@@ -3,9 +3,10 @@ import { defineConfig } from 'drizzle-kit'
 export default defineConfig({
   dialect: 'postgresql',
   schema: [
+    './drizzle/accounts-schema.ts',
     './drizzle/schema.ts',
     './drizzle/photo-schema.ts',
-    './drizzle/hanging-schema.ts',
+    './drizzle/house-schema.ts',
     './drizzle/rules-schema.ts',
   ],
   out: './drizzle/migrations',

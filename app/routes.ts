@@ -21,6 +21,7 @@ export default [
   route('jobs/:jobId/variants/:variantId/hang', 'routes/job/hang.tsx'),
   route('heaters', 'routes/heaters/list.tsx'),
   route('rules', 'routes/rules/list.tsx'),
+  route('rules/house', 'routes/rules/house.tsx'),
   route('rules/hanging', 'routes/rules/hanging.tsx'),
   route('rules/sets/new', 'routes/rules/new-set.tsx'),
   route('rules/sets/:setId', 'routes/rules/set.tsx'),

@@ -1,7 +1,7 @@
-import { foreignKey, index, integer, jsonb, pgTable, primaryKey, text, timestamp, uuid } from 'drizzle-orm/pg-core'
-import { jobs, organization, user } from '#drizzle/schema.ts'
-
-const at = () => timestamp({ withTimezone: true })
+import { foreignKey, index, integer, jsonb, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core'
+import { organisationId, ownId, personId } from '#drizzle/columns.ts'
+import { at, now } from '#drizzle/moments.ts'
+import { jobs } from '#drizzle/schema.ts'
 
 /**
  * A photo of a job; its picture is a file kept under `fileKey`, `width` × `height` px. `marks` is a PhotoMarks. A
@@ -10,10 +10,8 @@ const at = () => timestamp({ withTimezone: true })
 export const photos = pgTable(
   'photos',
   {
-    organisationId: uuid()
-      .notNull()
-      .references(() => organization.id),
-    id: uuid().notNull().defaultRandom(),
+    organisationId: organisationId(),
+    id: ownId(),
     jobId: uuid().notNull(),
     name: text().notNull(),
     width: integer().notNull(),
@@ -22,11 +20,9 @@ export const photos = pgTable(
     revision: integer().notNull(),
     marks: jsonb().notNull(),
     deletedAt: at(),
-    createdAt: at().notNull().defaultNow(),
-    updatedAt: at().notNull().defaultNow(),
-    updatedBy: uuid()
-      .notNull()
-      .references(() => user.id),
+    createdAt: now(),
+    updatedAt: now(),
+    updatedBy: personId(),
   },
   (table) => [
     primaryKey({ columns: [table.organisationId, table.id] }),

@@ -1,22 +1,13 @@
-import { foreignKey, integer, jsonb, pgTable, primaryKey, text, timestamp, uuid } from 'drizzle-orm/pg-core'
-import { organization, user } from '#drizzle/schema.ts'
-
-const organisationId = () =>
-  uuid()
-    .notNull()
-    .references(() => organization.id)
-const personId = () =>
-  uuid()
-    .notNull()
-    .references(() => user.id)
-const now = () => timestamp({ withTimezone: true }).notNull().defaultNow()
+import { foreignKey, integer, jsonb, pgTable, primaryKey, text, uuid } from 'drizzle-orm/pg-core'
+import { organisationId, ownId, personId } from '#drizzle/columns.ts'
+import { now } from '#drizzle/moments.ts'
 
 /** The rules of a place in one edition as they are now; `articles` is a list of Article. */
 export const ruleSets = pgTable(
   'rule_sets',
   {
     organisationId: organisationId(),
-    id: uuid().notNull().defaultRandom(),
+    id: ownId(),
     name: text().notNull(),
     place: text().notNull(),
     edition: text().notNull(),

@@ -141,16 +141,13 @@ export const comfortMutations: readonly Mutation[] = [
   ...within(
     'comfort/cautions.ts',
     cautions,
-    ['stayMinutes >= houseRules', 'stayMinutes > houseRules'],
+    ['stayMinutes >= rules', 'stayMinutes > rules'],
     ['air: 0, limit: 400', 'air: 0, limit: 200'],
     ['(to.limit - from.limit) * share', '(from.limit - to.limit) * share'],
     ['airTemperature <= cool.air ?', 'airTemperature <= 25 ?'],
     ['relaxed ? inAir : published', 'inAir'],
   ),
-  ...within('comfort/cautions.ts', seatRules, [
-    'houseRules.headCautionLongStay : houseRules',
-    'houseRules.headCautionShortStay : houseRules',
-  ]),
+  ...within('comfort/cautions.ts', seatRules, ["'headCautionLongStay' : ", "'headCautionShortStay' : "]),
   ...within(
     'rules/near-infrared.ts',
     seatRules,

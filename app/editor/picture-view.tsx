@@ -2,6 +2,7 @@ import { useMemo, useRef, useState } from 'react'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength } from '#app/domain/units.ts'
 import { buttonClass } from '#app/components/button.tsx'
@@ -21,6 +22,7 @@ interface PictureViewProps {
   readonly brief: Brief
   readonly layout: Layout
   readonly models: ReadonlyMap<string, HeaterModel>
+  readonly rules: HouseRules
   readonly choice: ViewChoice
   /** The map as it is chosen; null without heat and while it is computed. */
   readonly picture: HeatPicture | null
@@ -31,7 +33,16 @@ interface PictureViewProps {
 const isCorner = (text: string): text is Corner => corners.some((corner) => corner === text)
 
 /** Site, heaters and map in space, from a corner to choose. */
-export default function PictureView({ site, brief, layout, models, choice, picture, exports }: PictureViewProps) {
+export default function PictureView({
+  site,
+  brief,
+  layout,
+  models,
+  rules,
+  choice,
+  picture,
+  exports,
+}: PictureViewProps) {
   const [corner, setCorner] = useState<Corner>('lower left')
   const [theme, setTheme] = useState<Theme>('dusk')
   const box = useRef<HTMLDivElement>(null)
@@ -83,7 +94,7 @@ export default function PictureView({ site, brief, layout, models, choice, pictu
         <AxonometricDrawing
           name="picture"
           label={`Picture of ${site.name} from the ${corner} of the plan, ${layout.heaters.length} heaters, ${quantity.name} laid on the floor`}
-          {...{ site, layout, models, picture, quantity, corner, pen, width, height }}
+          {...{ site, layout, models, rules, picture, quantity, corner, pen, width, height }}
         />
       </div>
       <p className="border-t border-rule bg-paper px-4 py-1.5 text-xs text-ink-2">

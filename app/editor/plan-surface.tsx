@@ -13,6 +13,7 @@ import type { SeatFigures } from '#app/domain/comfort/seat-warmth.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { PlanCaution } from '#app/domain/rules/cautions-on-plan.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength } from '#app/domain/units.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
@@ -40,6 +41,7 @@ interface PlanSurfaceProps {
   readonly dispatch: Dispatch<EditorAction>
   readonly site: Site
   readonly models: ReadonlyMap<string, HeaterModel>
+  readonly rules: HouseRules
   readonly warmth: readonly SeatFigures[]
   readonly choice: ViewChoice
   readonly scale: QuantityScale
@@ -69,7 +71,7 @@ const narrowMargins: PlanMargins = { top: 26, right: 28, bottom: 46, left: 28 }
 
 /** The plan to work on: pointer, wheel, fingers and keys; the map below, handles and the tag above. */
 export function PlanSurface(props: PlanSurfaceProps) {
-  const { state, dispatch, site, models, choice, scale, flux, readOnly, hold, touch, pointed } = props
+  const { state, dispatch, site, models, rules, choice, scale, flux, readOnly, hold, touch, pointed } = props
   const box = useRef<HTMLDivElement>(null)
   const svg = useRef<SVGSVGElement>(null)
   const moving = useRef<HTMLDivElement>(null)
@@ -84,7 +86,7 @@ export function PlanSurface(props: PlanSurfaceProps) {
   const selected = useMemo(() => new Set(state.selected), [state.selected])
   const say = (metres: number) => formatLength(metres, site.displayUnits)
   const gestures = usePlanGestures(box, svg, {
-    start: { site, models, layout: kept, plane, say },
+    start: { site, models, rules, layout: kept, plane, say },
     selected: state.selected,
     readOnly,
     hold,
@@ -103,6 +105,7 @@ export function PlanSurface(props: PlanSurfaceProps) {
     selected: state.selected,
     site,
     models,
+    rules,
     readOnly,
     dispatch,
     onLetGo: gestures.dropGesture,

@@ -20,6 +20,6 @@ export function statusOf<T>(state: SaveState<T>, readOnly: boolean): SaveStatus 
 }
 
 /** Who saved the other copy of a conflict, and when: "by A. Name", " at 18:40". */
-export function changedWords<T>({ by, at }: SaveConflict<T>): { who: string; when: string } {
+export function changedWords({ by, at }: Pick<SaveConflict<unknown>, 'by' | 'at'>): { who: string; when: string } {
   return { who: by ? `by ${by}` : 'elsewhere', when: at ? ` at ${clockOf(at)}` : '' }
 }

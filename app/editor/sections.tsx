@@ -1,6 +1,7 @@
 import { memo, useMemo, useRef, type ReactNode } from 'react'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
 import type { NearestPair } from '#app/drawing/nearest/nearest-dimension.tsx'
@@ -29,6 +30,7 @@ interface SectionsProps {
   readonly site: Site
   readonly layout: Layout
   readonly models: ReadonlyMap<string, HeaterModel>
+  readonly rules: HouseRules
   readonly cuts: readonly SectionCut[]
   readonly scale: QuantityScale
   readonly sections: SectionsView | null
@@ -42,7 +44,7 @@ const pen = screenPen('dusk')
 
 /** Two sections beside each other at one scale. */
 export const Sections = memo(function Sections(props: SectionsProps) {
-  const { site, layout, models, cuts, scale, sections, selected } = props
+  const { site, layout, models, rules, cuts, scale, sections, selected } = props
   const box = useRef<HTMLDivElement>(null)
   const { width, height } = useSize(box, { width: 1000, height: 220 })
   const chosen = useMemo(() => new Set(selected), [selected])
@@ -69,7 +71,7 @@ export const Sections = memo(function Sections(props: SectionsProps) {
             <SectionDrawing
               name={`section-${view.cut.letter}`}
               label={sectionTitle(layout, view.cut)}
-              {...{ site, layout, models, view, pen }}
+              {...{ site, layout, models, rules, view, pen }}
               quantity={scale}
               picture={same ? (sections?.pictures[i] ?? null) : null}
               selected={chosen}

@@ -95,6 +95,7 @@ export function Explained({ subject }: PartProps) {
   return (
     <ExplainPanel
       input={input}
+      rules={editor.house.rules}
       seatId={explained}
       units={site.displayUnits}
       fluxUnit={choice.fluxUnit}
@@ -123,6 +124,7 @@ export function Chosen({ subject }: PartProps) {
           site={site}
           brief={brief}
           models={models}
+          rules={editor.house.rules}
           onEdit={editor.edit}
           onDuplicate={() => editor.dispatch({ type: 'duplicate' })}
         />

@@ -7,6 +7,7 @@ import { holdMovement } from '#app/domain/layout/holding.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { listModelChoices, type ModelChoice } from '#app/domain/layout/model-choice.ts'
 import { findSupports } from '#app/domain/layout/support-near.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import { areaOf } from '#app/domain/site/geometry.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength } from '#app/domain/units.ts'
@@ -19,6 +20,7 @@ export interface EditorSubject {
   readonly site: Site
   readonly brief: Brief
   readonly catalogue: readonly HeaterModel[]
+  readonly house: House
   readonly initial: Layout
 }
 
@@ -27,6 +29,7 @@ export interface Editor {
   readonly state: EditorState
   readonly dispatch: Dispatch<EditorAction>
   readonly models: ReadonlyMap<string, HeaterModel>
+  readonly house: House
   edit: (layout: Layout, selected: readonly string[], said: string) => void
   set: (ids: readonly string[], change: HeaterChange) => void
   remove: (ids: readonly string[]) => void
@@ -41,7 +44,8 @@ export interface Editor {
 const pull = 0.25
 
 /** The state of one variant's editor. */
-export function useEditor({ site, brief, catalogue, initial }: EditorSubject): Editor {
+export function useEditor({ site, brief, catalogue, house, initial }: EditorSubject): Editor {
+  const { rules } = house
   const [state, dispatch] = useReducer(editorReducer, initial, editorStateOf)
   const models = useMemo(() => new Map(catalogue.map((model) => [model.code, model])), [catalogue])
   const layout = state.history.present
@@ -54,18 +58,18 @@ export function useEditor({ site, brief, catalogue, initial }: EditorSubject): E
       const keeps = values.memberId !== undefined || !moves
       const change = (before: Layout) => {
         const next = setHeaters(before, ids, values)
-        return keeps ? next : findSupports(next, ids, site, models)
+        return keeps ? next : findSupports(next, ids, site, models, rules)
       }
       dispatch({ type: 'change', change, said: `${named(ids)} changed` })
     },
-    [site, models],
+    [site, models, rules],
   )
   const remove = useCallback((ids: readonly string[]) => {
     dispatch({ type: 'change', change: (before) => removeHeaters(before, ids), said: `${named(ids)} removed` })
   }, [])
 
   const place = (choice: ModelChoice, at: Vec2, free: boolean) => {
-    const first = firstPlace(choice, site, layout, at)
+    const first = firstPlace(choice, site, layout, at, rules)
     if (!first) return dispatch({ type: 'say', said: choice.whyNot[0] ?? 'It cannot be placed here.' })
     const placed = placeHeater(layout, first)
     const id = placed.ids[0] ?? ''
@@ -74,18 +78,19 @@ export function useEditor({ site, brief, catalogue, initial }: EditorSubject): E
       ? { dx: 0, dy: 0 }
       : holdMovement({ site, layout: placed.layout, ids: [id], leadId: id, dx: 0, dy: 0, pull, say })
     const moved = setHeaters(placed.layout, [id], { x: at[0] + held.dx, y: at[1] + held.dy })
-    edit(findSupports(moved, [id], site, models), [id], `${named([id])} placed`)
+    edit(findSupports(moved, [id], site, models, rules), [id], `${named([id])} placed`)
   }
 
   return {
     state,
     dispatch,
     models,
+    house,
     edit,
     set,
     remove,
     nudge: (nudge) => {
-      const change = (before: Layout) => nudged(before, state.selected, nudge, site, models)
+      const change = (before: Layout) => nudged(before, state.selected, nudge, site, models, rules)
       dispatch({ type: 'change', change, said: '' })
     },
     placeAt(at, free) {

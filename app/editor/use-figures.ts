@@ -9,10 +9,10 @@ import {
 } from '#app/domain/comfort/seat-warmth.ts'
 import { obstructionsOf } from '#app/domain/flux/shading.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
-import type { HangingData } from '#app/domain/layout/hanging-data.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { checkLayout } from '#app/domain/rules/check-layout.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { useAlive } from '#app/editor/use-media.ts'
 import { usePaced } from '#app/editor/use-paced.ts'
@@ -23,7 +23,7 @@ export interface FiguresInput {
   readonly brief: Brief
   readonly layout: Layout
   readonly models: ReadonlyMap<string, HeaterModel>
-  readonly hanging: HangingData
+  readonly house: House
   readonly shade: boolean
   /** Whether a heater is being moved, and the beat of what comes after the frame. */
   readonly moving: boolean
@@ -62,7 +62,7 @@ const notYet: ShownFigures = {
  * something moves at each beat, so that a frame of a drag does not wait for them. Findings are of the plain figures,
  * without shade.
  */
-export function useFigures({ site, brief, layout, models, hanging, shade, moving, beat }: FiguresInput): ShownFigures {
+export function useFigures({ site, brief, layout, models, house, shade, moving, beat }: FiguresInput): ShownFigures {
   const alive = useAlive()
   const shown = useMemo(() => {
     if (!alive) return notYet
@@ -74,7 +74,7 @@ export function useFigures({ site, brief, layout, models, hanging, shade, moving
   const findings = useMemo(() => {
     if (!alive) return notYet.findings
     const input = { site, brief, layout: late, models }
-    return checkLayout({ ...input, hanging, warmth: seatWarmth(input) })
-  }, [alive, site, brief, models, hanging, late])
+    return checkLayout({ ...input, house, warmth: seatWarmth(input) })
+  }, [alive, site, brief, models, house, late])
   return useMemo(() => ({ ...shown, findings }), [shown, findings])
 }

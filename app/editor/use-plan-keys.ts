@@ -2,6 +2,7 @@ import { useEffect, useRef, type Dispatch, type KeyboardEvent } from 'react'
 import { flushSync } from 'react-dom'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { EditorAction } from '#app/editor/editor-state.ts'
 import { keyActionOf, type KeyAction } from '#app/editor/tools/keys.ts'
@@ -12,6 +13,7 @@ interface PlanKeys {
   readonly selected: readonly string[]
   readonly site: Site
   readonly models: ReadonlyMap<string, HeaterModel>
+  readonly rules: HouseRules
   readonly readOnly: boolean
   readonly dispatch: Dispatch<EditorAction>
   /** Drops what the pointer does; whether it did something. */
@@ -39,14 +41,14 @@ export function usePlanKeys(keys: PlanKeys) {
   }
 
   function nudge(action: Nudge, key: string, focused: string | null) {
-    const { layout, selected, site, models, dispatch } = latest.current
+    const { layout, selected, site, models, rules, dispatch } = latest.current
     const ids = focused && !selected.includes(focused) ? [focused] : selected
     if (ids.length === 0) return false
     if (ids !== selected) dispatch({ type: 'select', ids })
     if (held.current !== key) keep()
     const from = held.current === key && draft.current ? draft.current : layout
     held.current = key
-    draft.current = nudged(from, ids, action, site, models)
+    draft.current = nudged(from, ids, action, site, models, rules)
     const step = { layout: draft.current, reason: null, lines: [] }
     flushSync(() => dispatch({ type: 'show', step }))
     return true

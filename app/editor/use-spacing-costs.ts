@@ -7,7 +7,7 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { memberSpacings } from '#app/domain/layout/member-spacings.ts'
 import { repeatAtSpacing, type Repeat } from '#app/domain/layout/repeat.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { planesOf } from '#app/domain/site/planes.ts'
 import { cellOf, emittersOf } from '#app/editor/map-questions.ts'
@@ -19,6 +19,7 @@ export interface SpacingSubject {
   readonly brief: Brief
   readonly layout: Layout
   readonly models: ReadonlyMap<string, HeaterModel>
+  readonly rules: HouseRules
   readonly selected: readonly string[]
   readonly repeat: Repeat
 }
@@ -37,9 +38,9 @@ interface Candidate extends Omit<SpacingCost, 'overlap'> {
 }
 
 /** The wanted spacing and those that members allow below and above it, rising, with what each comes to. */
-function candidatesOf({ site, brief, layout, models, selected, repeat }: SpacingSubject): Candidate[] {
+function candidatesOf({ site, brief, layout, models, rules, selected, repeat }: SpacingSubject): Candidate[] {
   const heaters = layout.heaters.filter(({ id }) => selected.includes(id))
-  const allowed = memberSpacings(site, heaters, models, repeat)
+  const allowed = memberSpacings(site, heaters, models, repeat, rules)
   if (!allowed) return []
   const { below, above, fits } = allowed
   const wanted = fits ? 'as wanted, under members' : 'as wanted, between members'
@@ -58,12 +59,13 @@ function candidatesOf({ site, brief, layout, models, selected, repeat }: Spacing
 
 /** What each spacing that members allow costs: seats at once, the overlap as the worker answers. */
 export function useSpacingCosts(subject: SpacingSubject): readonly SpacingCost[] {
-  const { site, brief, layout, models, selected, repeat } = subject
+  const { site, brief, layout, models, rules, selected, repeat } = subject
   const candidates = useMemo(
-    () => candidatesOf({ site, brief, layout, models, selected, repeat }),
-    [site, brief, layout, models, selected, repeat],
+    () => candidatesOf({ site, brief, layout, models, rules, selected, repeat }),
+    [site, brief, layout, models, rules, selected, repeat],
   )
   const [known, setKnown] = useState<{ of: readonly Candidate[]; areas: readonly number[] }>({ of: [], areas: [] })
+  const threshold = rules.overlapThreshold
   useEffect(() => {
     if (candidates.length === 0) return
     let current = true
@@ -74,7 +76,6 @@ export function useSpacingCosts(subject: SpacingSubject): readonly SpacingCost[]
       for (const { layout: made } of candidates) {
         const emitters = emittersOf(made, models)
         const question = { emitters, floor: site.floor, z: planesOf(site).body, cell: cellOf(site, 'sharp') }
-        const threshold = houseRules.overlapThreshold.value
         const answer = await remote.answerMap({ ...question, quantity: { kind: 'overlap', threshold }, levels: [] })
         areas.push(areaAtLeast(answer.values, answer.grid, 2))
         if (current) setKnown({ of: candidates, areas: [...areas] })
@@ -85,7 +86,7 @@ export function useSpacingCosts(subject: SpacingSubject): readonly SpacingCost[]
       current = false
       worker.terminate()
     }
-  }, [candidates, models, site])
+  }, [candidates, models, site, threshold])
   return candidates.map(({ spacing, place, totals }, i) => ({
     ...{ spacing, place, totals },
     overlap: known.of === candidates ? (known.areas[i] ?? null) : null,

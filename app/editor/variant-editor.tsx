@@ -1,8 +1,8 @@
 import { lazy, Suspense, useCallback, useMemo, useState } from 'react'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
-import type { HangingData } from '#app/domain/layout/hanging-data.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { largestTolerance } from '#app/domain/site/tolerance.ts'
 import { irradianceScale } from '#app/drawing/heat/quantity.ts'
@@ -51,7 +51,7 @@ export interface VariantEditorProps {
   readonly site: Site
   readonly brief: Brief
   readonly catalogue: readonly HeaterModel[]
-  readonly hanging: HangingData
+  readonly house: House
   readonly readOnly: boolean
   readonly keeping: Keeping<Layout>
   /** The page about which rough size matters most. */
@@ -75,11 +75,12 @@ const noPairs: readonly NearestPair[] = []
 
 /** The variant page: figures, plan, findings and seats of one layout, and the hand that changes it. */
 export function VariantEditor(props: VariantEditorProps) {
-  const { site, brief, catalogue, initial, newest, keeping } = props
+  const { site, brief, catalogue, house, initial, newest, keeping } = props
+  const { rules } = house
   const room = useRoom()
   const touch = useMedia('(pointer: coarse)')
   const readOnly = props.readOnly || room === 'phone'
-  const editor = useEditor({ site, brief, catalogue, initial: initial.body })
+  const editor = useEditor({ site, brief, catalogue, house, initial: initial.body })
   const { state, dispatch, models } = editor
   const kept = state.history.present
   const layout = shownLayout(state)
@@ -106,10 +107,10 @@ export function VariantEditor(props: VariantEditorProps) {
 
   const moving = state.draft !== null
   const beat = useBeat(moving)
-  const figures = useFigures({ site, brief, layout, models, hanging: props.hanging, shade: choice.shade, moving, beat })
+  const figures = useFigures({ site, brief, layout, models, house, shade: choice.shade, moving, beat })
   const findingMarks = useFindingMarks(state, dispatch, figures, site.displayUnits)
   const scale = useMemo(() => scaleOf(choice, brief, site.displayUnits), [choice, brief, site])
-  const coverTolerance = useMemo(() => toleranceOfCovers(site), [site])
+  const coverTolerance = useMemo(() => toleranceOfCovers(site, rules.toleranceUnstated), [site, rules])
   const question = useMemo(
     () => mapQuestion({ site, brief, layout, models, choice }, scale, moving ? 'coarse' : 'sharp'),
     [site, brief, layout, models, choice, scale, moving],
@@ -176,6 +177,7 @@ export function VariantEditor(props: VariantEditorProps) {
   }
   const tools = {
     ...{ site, layout, choice, readOnly, legend, placing },
+    threshold: rules.overlapThreshold,
     selected: state.selected,
     onChoice: setChoice,
     onPlacing: () => {
@@ -265,7 +267,7 @@ export function VariantEditor(props: VariantEditorProps) {
           {seen === 'picture' ? (
             <Suspense fallback={<p className="p-4 text-ink-2">Drawing the picture</p>}>
               <PictureView
-                {...{ site, brief, layout, models, choice }}
+                {...{ site, brief, layout, models, rules, choice }}
                 picture={flux.answer?.picture ?? null}
                 exports={props.pictureHref}
               />
@@ -274,7 +276,7 @@ export function VariantEditor(props: VariantEditorProps) {
             <>
               {room !== 'tablet' && <ToolRow {...tools} />}
               <PlanSurface
-                {...{ state, dispatch, site, models, choice, scale, flux, readOnly, hold, touch, pointed }}
+                {...{ state, dispatch, site, models, rules, choice, scale, flux, readOnly, hold, touch, pointed }}
                 warmth={figures.warmth}
                 cuts={withSections ? cuts : noCuts}
                 words={room === 'desk'}
@@ -287,7 +289,7 @@ export function VariantEditor(props: VariantEditorProps) {
               {withSections && (
                 <div className="h-[clamp(9rem,24dvh,13.75rem)] flex-none border-t border-[#26324c]">
                   <Sections
-                    {...{ site, models, cuts }}
+                    {...{ site, models, rules, cuts }}
                     layout={kept}
                     scale={heat}
                     sections={flux.sections}
@@ -311,7 +313,7 @@ export function VariantEditor(props: VariantEditorProps) {
 }
 
 /** The largest ± of the heights of a site's covers, m; null without a cover. */
-function toleranceOfCovers(site: Site): number | null {
-  const each = site.covers.map(({ id }) => largestTolerance(site, { of: 'cover', id }))
+function toleranceOfCovers(site: Site, bareTolerance: number): number | null {
+  const each = site.covers.map(({ id }) => largestTolerance(site, { of: 'cover', id }, bareTolerance))
   return each.length > 0 ? Math.max(...each) : null
 }

@@ -1,7 +1,7 @@
 import { createHash } from 'node:crypto'
 import { eq, sql } from 'drizzle-orm'
 import { authDatabase } from '#app/server/db.server.ts'
-import { signInAttempts } from '#drizzle/schema.ts'
+import { signInAttempts } from '#drizzle/accounts-schema.ts'
 
 /** How often an account may be tried in a quarter of an hour: wrong passwords, and letters asked for. */
 const mostAttempts = { password: 10, letter: 5 }

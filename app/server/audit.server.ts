@@ -2,7 +2,8 @@ import { eq } from 'drizzle-orm'
 import { authDatabase } from '#app/server/db.server.ts'
 import { asOrganisation, type Transaction } from '#app/server/organisation.server.ts'
 import type { Member } from '#app/server/session.server.ts'
-import { auditEvents, member as memberships, user } from '#drizzle/schema.ts'
+import { member as memberships, user } from '#drizzle/accounts-schema.ts'
+import { auditEvents } from '#drizzle/schema.ts'
 
 /** What an organisation can look up later. */
 export type AuditedAction =
@@ -25,6 +26,7 @@ export type AuditedAction =
   | 'rule set saved'
   | 'picture exported'
   | 'hanging data saved'
+  | 'house rules saved'
 
 /** Something that happened: `subject` is the thing's path (`variants/<id>`), `detail` figures and never a secret. */
 export interface AuditedEvent {

@@ -9,7 +9,7 @@ import { authDatabase } from '#app/server/db.server.ts'
 import { env } from '#app/server/env.server.ts'
 import { queueMail } from '#app/server/jobs/queue.server.ts'
 import { passwordLimits } from '#app/server/password-limits.server.ts'
-import * as schema from '#drizzle/schema.ts'
+import * as schema from '#drizzle/accounts-schema.ts'
 
 /** Seconds for which a link to a new password is good. */
 const resetSeconds = 30 * 60

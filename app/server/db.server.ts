@@ -1,6 +1,5 @@
 import { drizzle } from 'drizzle-orm/node-postgres'
 import { Pool } from 'pg'
-import * as schema from '#drizzle/schema.ts'
 import { env } from '#app/server/env.server.ts'
 
 /**
@@ -26,10 +25,10 @@ const appPool = poolOf(env.DATABASE_URL, 'inglefield app')
 const authPool = poolOf(env.DATABASE_AUTH_URL, 'inglefield auth')
 
 /** Organisation data; asked through asOrganisation only. */
-export const appDatabase = drizzle(appPool, { schema, casing: 'snake_case' })
+export const appDatabase = drizzle(appPool, { casing: 'snake_case' })
 
 /** Accounts, sessions, membership and the sign-in limiter; this role sees no organisation's rows. */
-export const authDatabase = drizzle(authPool, { schema, casing: 'snake_case' })
+export const authDatabase = drizzle(authPool, { casing: 'snake_case' })
 
 /** Closes every connection, for the end of a process or of a test file. */
 export async function closeDatabase(): Promise<void> {

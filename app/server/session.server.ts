@@ -7,7 +7,7 @@ import { type Action, type Role, can, roles } from '#app/domain/access/roles.ts'
 import { authDatabase } from '#app/server/db.server.ts'
 import { isRefusedDemo } from '#app/server/demo-address.server.ts'
 import { env } from '#app/server/env.server.ts'
-import { member, organization, session, user } from '#drizzle/schema.ts'
+import { member, organization, session, user } from '#drizzle/accounts-schema.ts'
 
 /** A signed-in person in one organisation. */
 export interface Member {

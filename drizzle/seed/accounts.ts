@@ -4,7 +4,7 @@ import { type NodePgDatabase, drizzle } from 'drizzle-orm/node-postgres'
 import { Client } from 'pg'
 import type { roles } from '#app/domain/access/roles.ts'
 import { type Role } from '#app/domain/access/roles.ts'
-import { account, member, organization, user } from '#drizzle/schema.ts'
+import { account, member, organization, user } from '#drizzle/accounts-schema.ts'
 
 /** The password of every demonstration account; known to everybody, so served on loopback only. */
 export const demoPassword = 'warm-terrace-demo'

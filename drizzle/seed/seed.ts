@@ -5,15 +5,14 @@ import { Client } from 'pg'
 import type { Stage } from '#app/domain/job/stage.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
 import { photos } from '#drizzle/photo-schema.ts'
+import { organization, user } from '#drizzle/accounts-schema.ts'
 import {
   briefRevisions,
   briefs,
   heaterModels,
   jobs,
-  organization,
   siteRevisions,
   sites,
-  user,
   variantRevisions,
   variants,
 } from '#drizzle/schema.ts'
@@ -21,7 +20,7 @@ import { ruleSetRevisions, ruleSets } from '#drizzle/rules-schema.ts'
 import { demoRuleSet } from '#drizzle/seed/demo-rule-set.ts'
 import { demoAddress, hasNoAccounts, seedAccounts } from '#drizzle/seed/accounts.ts'
 import { demoMarks, demoPhotoKey, demoPhotoSize, withDemoPhoto } from '#drizzle/seed/demo-photo.ts'
-import { hangingData } from '#drizzle/hanging-schema.ts'
+import { hangingData } from '#drizzle/house-schema.ts'
 import { demoHanging } from '#drizzle/seed/demo-models.ts'
 import { demoModels, demoSites, type DemoSite } from '#drizzle/seed/demo-sites.ts'
 

@@ -1,7 +1,7 @@
 import type { Obstacle } from '#app/domain/site/site.ts'
 import { checkLayout } from '#app/domain/rules/check-layout.ts'
 import { chance } from '#tests/support/chance.ts'
-import { plainBrief, plainHeater, plainModel, plainSite } from '#tests/support/plain-site.ts'
+import { plainBrief, plainHeater, plainModel, plainSite, plainHouse } from '#tests/support/plain-site.ts'
 
 // Time of the findings on a crowded site: 200 obstacles, 40 members and 40 heaters on 40 × 20 m; run with
 // `node --import tsx tests/bench/findings.ts`. The fixed loop of the same run says how fast the machine is just then.
@@ -32,10 +32,11 @@ const heaters = Array.from({ length: 40 }, (_, i) =>
   plainHeater({ id: `H${i}`, x: i, y: 2 + ((i * 7) % 16), memberId: `m${i}`, turnDeg: 90 }),
 )
 const brief = plainBrief()
+const house = plainHouse()
 
 function findings(moved: number, by: number): number {
   const layout = { heaters: heaters.map((heater, i) => (i < moved ? { ...heater, x: heater.x + by } : heater)) }
-  return checkLayout({ site, brief, layout, models: new Map([[model.code, model]]), warmth: [] }).length
+  return checkLayout({ site, brief, layout, models: new Map([[model.code, model]]), warmth: [], house }).length
 }
 
 function loop(): number {

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { renderToStaticMarkup } from 'react-dom/server'
 import { describe, expect, it } from 'vitest'
 import { emitterOf } from '#app/domain/flux/emitter.ts'
@@ -24,6 +25,7 @@ const drawn = (cut = diagonal, layout = smallLayout()) =>
       site={smallTerrace}
       layout={layout}
       models={smallModels}
+      rules={plainHouseRules}
       view={sectionViewOf(smallTerrace, cut, { width: 640, height: 400 })}
       pen={screenPen('dusk')}
       quantity={irradianceScale('dusk', { low: 150, high: 350 })}

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { renderToStaticMarkup } from 'react-dom/server'
 import { describe, expect, it } from 'vitest'
 import { emitterOf } from '#app/domain/flux/emitter.ts'
@@ -71,6 +72,7 @@ describe('a drawn section', () => {
       site={smallTerrace}
       layout={smallLayout()}
       models={smallModels}
+      rules={plainHouseRules}
       view={view}
       pen={screenPen('dusk')}
       quantity={quantity}

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { renderToStaticMarkup } from 'react-dom/server'
 import { describe, expect, it } from 'vitest'
 import { siteTemplates } from '#app/domain/site/templates/site-templates.ts'
@@ -58,7 +59,12 @@ describe('sizes on the plan', () => {
   it.each(siteTemplates.map((template) => [template.key, template] as const))(
     'keep clear of every word of the plan of a fresh %s, where all sizes are guessed',
     (_, template) => {
-      const made = template.start(new Map(), 'tape', { name: 'new', displayUnits: 'metric', trace: null })
+      const made = template.start(
+        new Map(),
+        'tape',
+        { name: 'new', displayUnits: 'metric', trace: null },
+        plainHouseRules,
+      )
       if ('error' in made) throw new Error(made.error)
       const view = planViewOf(made, 768, 512)
       const plan = renderToStaticMarkup(

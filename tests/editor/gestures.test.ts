@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { GestureStart } from '#app/editor/tools/gesture.ts'
@@ -13,6 +14,7 @@ const layout = layoutOf(heaterAt('H1', 3, 2), heaterAt('H2', 6, 2, { memberId: '
 const start: GestureStart = {
   site: beamedSite,
   models,
+  rules: plainHouseRules,
   layout,
   ids: ['H1'],
   leadId: 'H1',

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { demoMarks } from '#drizzle/seed/demo-photo.ts'
 import { photoMarksSchema } from '#app/domain/photo/measurements.ts'
@@ -33,29 +34,33 @@ describe('marking one after the other', () => {
 })
 
 describe('what a photo gives', () => {
-  const measured = measuredIn({ id: 'one', marks }, [])
+  const measured = measuredIn({ id: 'one', marks }, [], plainHouseRules)
   const figure = (label: string) => measured.find(({ measurement }) => measurement.label === label)!
 
   it('is said with the tolerance that is used and the error behind it', () => {
     const { own, mean } = figure('joist spacing')
     expect('value' in own && figureWords(own, 'metric')).toBe('0.60 m ± 0.05 m')
-    expect('value' in own && errorWords(own, 'metric')).toMatch(
+    expect('value' in own && errorWords(own, 'metric', plainHouseRules)).toMatch(
       /^± is 0\.05 m, the least for photos by house rule\. Standard error 12 mm: marks 12 mm, reference/,
     )
     expect(mean).toBeNull()
   })
 
   it('is refused in words where it cannot be', () => {
-    const without = measuredIn({ id: 'one', marks: changePlane(marks, 'deck', { vertical: null }) }, [])
+    const without = measuredIn(
+      { id: 'one', marks: changePlane(marks, 'deck', { vertical: null }) },
+      [],
+      plainHouseRules,
+    )
     expect(without.find(({ measurement }) => measurement.id === 'height')?.own).toMatchObject({ refused: 'no upright' })
   })
 
   it('is a mean over photos, with a warning when they do not fit', () => {
     const far = changePlane(marks, 'ceiling', { name: 'Other ceiling', width: 9, depth: 3.9 })
-    const both = measuredIn({ id: 'one', marks }, [{ id: 'two', marks: far }])
+    const both = measuredIn({ id: 'one', marks }, [{ id: 'two', marks: far }], plainHouseRules)
     const joists = both.find(({ measurement }) => measurement.id === 'joists')!
     expect(joists).toMatchObject({ photos: 2, mean: { count: 2, warning: expect.stringContaining('standard errors') } })
-    const fits = measuredIn({ id: 'one', marks }, [{ id: 'two', marks }])
+    const fits = measuredIn({ id: 'one', marks }, [{ id: 'two', marks }], plainHouseRules)
     expect(fits.find(({ measurement }) => measurement.id === 'joists')?.mean?.warning).toBeNull()
   })
 })

@@ -74,12 +74,18 @@ describe('hanging data', () => {
     expect(text).toContain('in whole lengths of 5.00 m')
   })
 
-  it('are not overwritten by one who saw an older revision', async () => {
+  it('are not overwritten by one who saw an older revision: both values, by whom, and from where it goes on', async () => {
     const { status, html } = await post('owner', { ...asked, linkPitch: '40 mm', revision: '1' })
-    expect([status, html.includes('Somebody changed the hanging data meanwhile')]).toEqual([409, true])
-    expect(html).toContain('value="40 mm"')
+    expect(status).toBe(412)
+    const { rows: found } = await application.admin.query(`select name from "user" where email = 'engineer@inglefield.test'`) // prettier-ignore
+    expect(html).toContain(`Saved by ${found[0].name}`)
+    for (const value of ['Use <!-- -->0.032 m', 'Use <!-- -->0.04 m']) expect(html).toContain(value)
+    expect(html.match(/>Use <!-- -->/g)).toHaveLength(2)
+    expect(html).toContain('name="revision" value="1"')
     expect((await rows())[0].body.linkPitch).toBe(0.032)
     expect((await post('owner', { ...asked, revision: 'x' })).status).toBe(400)
+    const settled = await post('owner', { ...asked, linkPitch: '40 mm', revision: '2' })
+    expect([settled.status, (await rows())[0].body.linkPitch]).toEqual([200, 0.04])
   })
 
   it('are read by designers and sales, changed by neither', async () => {
@@ -87,8 +93,8 @@ describe('hanging data', () => {
       const page = await application.handle(requestOf('GET', '/rules/hanging', { cookie: cookies.get(person) }))
       expect(page.status).toBe(200)
       expect(await page.text()).toContain('An engineer or the owner changes them.')
-      expect((await post(person, { ...asked, revision: '2' })).status).toBe(403)
+      expect((await post(person, { ...asked, revision: '3' })).status).toBe(403)
     }
-    expect((await post('installer', { ...asked, revision: '2' })).status).toBe(403)
+    expect((await post('installer', { ...asked, revision: '3' })).status).toBe(403)
   })
 })

@@ -28,6 +28,7 @@ export const reachOf: Record<string, Reach> = {
   '/jobs/:jobId/compare.svg': { GET: 'export' },
   '/heaters': { GET: 'view' },
   '/rules': { GET: 'view' },
+  '/rules/house': { GET: 'view', POST: 'edit-rules' },
   '/rules/hanging': { GET: 'view', POST: 'edit-rules' },
   '/rules/sets/new': { GET: 'edit-rules', POST: 'edit-rules' },
   '/rules/sets/:setId': { GET: 'view', POST: 'edit-rules' },

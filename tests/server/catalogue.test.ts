@@ -120,6 +120,7 @@ describe('the catalogue of the database', () => {
       briefs: 'INSERT SELECT UPDATE',
       hanging_data: 'INSERT SELECT UPDATE',
       heater_models: 'DELETE INSERT SELECT UPDATE',
+      house_rules: 'INSERT SELECT UPDATE',
       jobs: 'INSERT SELECT UPDATE',
       offer_links: 'INSERT SELECT UPDATE',
       photos: 'INSERT SELECT UPDATE',

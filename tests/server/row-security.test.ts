@@ -34,6 +34,10 @@ beforeAll(async () => {
       `insert into saved_answers (organisation_id, person_id, resource, key, body_hash) values ($1, $2, 'r', 'k', 'h')`,
       [organisation, person],
     )
+    await admin.query(
+      `insert into house_rules (organisation_id, revision, body, updated_by) values ($1, 1, '{}', $2)`,
+      [organisation, person],
+    )
     await admin.query(`insert into audit_events (organisation_id, action, subject) values ($1, 'a', 's')`, [
       organisation,
     ])

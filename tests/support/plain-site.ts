@@ -1,6 +1,10 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
+import { plainHanging } from '#app/domain/layout/plain-hanging.ts'
+import type { House } from '#app/domain/rules/house.ts'
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { demoModels, demoSites } from '#drizzle/seed/demo-sites.ts'
 
@@ -77,6 +81,12 @@ export const plainHeater = (changes: Partial<MountedHeater> = {}): MountedHeater
   mount: 'chain',
   memberId: 'beam',
   ...changes,
+})
+
+/** A house that has decided nothing itself but these rules. */
+export const plainHouse = (rules: Partial<HouseRules> = {}): House => ({
+  rules: { ...plainHouseRules, ...rules },
+  hanging: plainHanging,
 })
 
 /** The demo catalogue's model of that heater, with some facts replaced. */

@@ -2,7 +2,8 @@ import type { Brief } from '#app/domain/brief/brief.ts'
 import type { BriefField } from '#app/domain/brief/brief-field.ts'
 import { eveningFields, guestFields } from '#app/domain/brief/brief-fields.ts'
 import { supplyFields } from '#app/domain/brief/supply-fields.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { houseFigure } from '#app/domain/rules/house-rules.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { JobRequest } from '#app/domain/job/job-request.ts'
 import { parseLength, type DisplayUnits } from '#app/domain/units.ts'
 
@@ -15,8 +16,8 @@ export const unknownName = (field: string): string => `unknown-${field}`
 /** Whether a field is answered with "don't know". */
 export const isUnknown = (answers: EnquiryAnswers, field: string): boolean => Boolean(answers[unknownName(field)])
 
-/** What is assumed where nobody knows. House rules, no published source. */
-export const assumedBrief: Omit<Brief, 'place'> = {
+/** What is assumed where nobody knows. No published source; the target is the house's. */
+export const assumedBrief = (rules: HouseRules): Omit<Brief, 'place'> => ({
   story: '',
   season: '',
   airTemperature: 8,
@@ -38,9 +39,9 @@ export const assumedBrief: Omit<Brief, 'place'> = {
     note: '',
   },
   energy: null,
-  target: { low: houseRules.targetLow.value, high: houseRules.targetHigh.value, source: houseRules.targetLow.source },
+  target: { low: rules.targetLow, high: rules.targetHigh, source: houseFigure(rules, 'targetLow').source },
   assumed: ['relativeHumidity', 'windGust', 'surroundingsTemperature', 'activity', 'stayMinutes'],
-}
+})
 
 const pick = (fields: readonly BriefField[], ...names: readonly string[]) =>
   names.flatMap((name) => fields.filter((field) => field.name === name))
@@ -73,6 +74,7 @@ export function fieldAt(path: string): string {
 /** The enquiry that the answers make, or what is wrong with them, by field name. */
 export function readEnquiry(
   answers: EnquiryAnswers,
+  rules: HouseRules,
 ): { readonly asked: JobRequest } | { readonly errors: Record<string, string> } {
   const errors: Record<string, string> = {}
   const answer = (name: string) => (answers[name] ?? '').trim()
@@ -92,7 +94,7 @@ export function readEnquiry(
   const customer = named('customer', 'the customer', 120, 0)
   const place = named('place', 'the place', 120)
   const floor = isUnknown(answers, 'floor') ? null : { length: length('along', 100), depth: length('deep', 60) }
-  const brief = withAnswers({ ...assumedBrief, place }, answers, units, errors)
+  const brief = withAnswers({ ...assumedBrief(rules), place }, answers, units, errors)
   if (brief.target.low >= brief.target.high) errors['targetHigh'] ??= 'The target ends above where it starts.'
   if (Object.keys(errors).length > 0) return { errors }
   return { asked: { name, customer, displayUnits: units, floor, brief } }

@@ -1,5 +1,7 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { fixedRules } from '#app/domain/rules/fixed-rules.ts'
+import { houseFigure } from '#app/domain/rules/house-rules.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { figureOfRuleSet } from '#app/domain/rules/sourced-figure.ts'
 
 /** A limit on what falls on a guest, with where it comes from. */
@@ -47,29 +49,27 @@ export const eyeLimit = (seconds: number): number =>
  * straight down to the published 100 at 25 °C (house rule), so that no degree more or less makes a step.
  */
 export function eyeLimitInAir(airTemperature: number): number {
-  const warm = { air: houseRules.eyeRelaxedBelow.value, limit: continuousLimit }
+  const warm = { air: fixedRules.eyeRelaxedBelow.value, limit: continuousLimit }
   const [from, to] = airTemperature <= cool.air ? [cold, cool] : [cool, warm]
   const share = Math.min(1, Math.max(0, (airTemperature - from.air) / (to.air - from.air)))
   return from.limit + (to.limit - from.limit) * share
 }
 
-/** The house caution at the head by length of stay, W/m². */
-export const headCaution = (stayMinutes: number): number => headRule(stayMinutes).value
+/** The house caution at the head by length of stay. */
+const headRule = (stayMinutes: number, rules: HouseRules) =>
+  houseFigure(rules, stayMinutes >= rules.longStayMinutes ? 'headCautionLongStay' : 'headCautionShortStay')
 
-const headRule = (stayMinutes: number) =>
-  stayMinutes >= houseRules.longStayMinutes.value ? houseRules.headCautionLongStay : houseRules.headCautionShortStay
-
-/** The limits that hold for a brief: the one source of every caution on what falls on a guest. */
-export function cautionLimits({ stayMinutes, airTemperature, ruleSet }: Brief): CautionLimits {
+/** The limits that hold for a brief in a house: the one source of every caution on what falls on a guest. */
+export function cautionLimits({ stayMinutes, airTemperature, ruleSet }: Brief, rules: HouseRules): CautionLimits {
   return {
     stop: {
-      ...houseRules.irradianceStop,
+      ...fixedRules.irradianceStop,
       relaxedFrom: null,
       fromMemory: true,
       note: 'Workers, suitably clothed, continuous. It is not a comfort limit and not one for the public.',
     },
     head: {
-      ...(figureOfRuleSet(ruleSet, 'head-caution') ?? headRule(stayMinutes)),
+      ...(figureOfRuleSet(ruleSet, 'head-caution') ?? headRule(stayMinutes, rules)),
       relaxedFrom: null,
       fromMemory: false,
       note: 'Covers children and bare skin. An engineer may set another figure.',
@@ -89,7 +89,7 @@ function eyeCaution(seconds: number, airTemperature: number): CautionLimit {
     source: [
       'ICNIRP guidelines on incoherent infrared radiation: 100 W/m² beyond 1,000 s; 18 t^−0.75 kW/m² below (from memory)',
       ...(relaxed ? ['relaxed in the cold to about 400 W/m² at 0 °C and 300 at 10 °C (from memory)'] : []),
-      ...(relaxed && airTemperature > cool.air ? [houseRules.eyeRelaxedBelow.source] : []),
+      ...(relaxed && airTemperature > cool.air ? [fixedRules.eyeRelaxedBelow.source] : []),
     ].join('; '),
     fromMemory: true,
     note: 'Share of 0.78–3 µm by Planck’s law at the element’s temperature, on a vertical plane: a guest looks level.',

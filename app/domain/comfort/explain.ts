@@ -8,12 +8,14 @@ import { sourcesOf, type Source } from '#app/domain/comfort/sources.ts'
 import {
   figureOf,
   figureParts,
+  fluxTolerances,
   seatTolerance,
   type FigureTolerance,
   type SeatFigure,
 } from '#app/domain/comfort/uncertainty.ts'
 import { electricalPower } from '#app/domain/heaters/power.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { lengthOf, subtract } from '#app/domain/vector.ts'
 
 /** One figure that went in, in SI and °C. */
@@ -88,7 +90,12 @@ const notModelled =
  * Any figure of a seat with its inputs, formula, source, tolerance and the share of every element. The parts come from
  * the call that makes the figure everywhere else. Null for a seat that the site does not have.
  */
-export function explainSeat(input: WarmthInput, seatId: string, figure: SeatFigure): Explanation | null {
+export function explainSeat(
+  input: WarmthInput,
+  seatId: string,
+  figure: SeatFigure,
+  rules: HouseRules,
+): Explanation | null {
   const seat = input.site.seats.find(({ id }) => id === seatId)
   if (!seat) return null
   const all = sourcesOf(input.layout, input.models)
@@ -104,7 +111,7 @@ export function explainSeat(input: WarmthInput, seatId: string, figure: SeatFigu
     base: feelsLike ? warmth.feelsLike[figure.wind].before : 0,
     ...formulas[figure.quantity],
     notModelled,
-    indoors: feelsLike ? indoorsAt(warmth, input.brief, figure.wind).sentence : null,
+    indoors: feelsLike ? indoorsAt(warmth, input.brief, figure.wind, rules).sentence : null,
     inputs: [
       ...seatInputs(warmth, figure),
       ...(feelsLike ? feelingInputs(warmth, input.brief, figure) : []),
@@ -112,7 +119,7 @@ export function explainSeat(input: WarmthInput, seatId: string, figure: SeatFigu
     ],
     parts,
     byHeater: heaterShares(parts),
-    tolerance: seatTolerance(input, seat, figure, 'everything'),
+    tolerance: seatTolerance(input, seat, figure, 'everything', fluxTolerances(rules)),
     cannotTell: all.cannotTell,
   }
 }

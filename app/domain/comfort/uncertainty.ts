@@ -6,7 +6,7 @@ import { surroundingsAt } from '#app/domain/comfort/surroundings.ts'
 import { irradianceAt } from '#app/domain/flux/irradiance.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Seat, Site } from '#app/domain/site/site.ts'
 import { shiftsOf } from '#app/domain/site/tolerance.ts'
 import type { Vec3 } from '#app/domain/vector.ts'
@@ -39,14 +39,16 @@ export interface FluxTolerances {
   readonly voltage: number
 }
 
-/** Where nothing else is known. Voltage: service range A of ANSI C84.1, ± 5 % (from memory); the rest house rules. */
-export const defaultFluxTolerances: FluxTolerances = {
-  heaterPosition: houseRules.tolerance.value,
-  heaterHeight: houseRules.tolerance.value,
-  seat: houseRules.tolerance.value,
-  efficiency: 0.05,
-  voltage: 0.05,
-}
+/** Of the supply where nothing else is known. Voltage: service range A of ANSI C84.1, ± 5 % (from memory). */
+export const supplyTolerances = { efficiency: 0.05, voltage: 0.05 } as const
+
+/** Where nothing else is known: lengths by house rule. */
+export const fluxTolerances = ({ toleranceUnstated }: Pick<HouseRules, 'toleranceUnstated'>): FluxTolerances => ({
+  heaterPosition: toleranceUnstated,
+  heaterHeight: toleranceUnstated,
+  seat: toleranceUnstated,
+  ...supplyTolerances,
+})
 
 /** What one uncertain thing does to the figure: change per unit × its tolerance, in the figure's unit. */
 interface ToleranceShare {
@@ -98,7 +100,7 @@ export function seatTolerance(
   seat: Seat,
   figure: TolerancedFigure,
   uncertain: Uncertain,
-  tolerances: FluxTolerances = defaultFluxTolerances,
+  tolerances: FluxTolerances,
 ): FigureTolerance | null {
   const { sources } = sourcesOf(input.layout, input.models)
   if (sources.length === 0) return null

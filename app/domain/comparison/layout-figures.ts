@@ -4,6 +4,7 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { checkLayout } from '#app/domain/rules/check-layout.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import type { Site } from '#app/domain/site/site.ts'
 
 /** What the figures of a layout rest on; plain data. */
@@ -12,6 +13,8 @@ export interface FiguresQuestion {
   readonly brief: Brief
   readonly layout: Layout
   readonly models: ReadonlyMap<string, HeaterModel>
+  /** That of the organisation whose layout it is. */
+  readonly house: House
 }
 
 /** Every seat, what the layout comes to, and its findings. */
@@ -22,11 +25,11 @@ export interface LayoutFigures {
 }
 
 /** The figures of a layout by the same functions as on its own page, without shade. */
-export function layoutFigures({ site, brief, layout, models }: FiguresQuestion): LayoutFigures {
+export function layoutFigures({ site, brief, layout, models, house }: FiguresQuestion): LayoutFigures {
   const warmth = seatWarmth({ site, brief, layout, models })
   return {
     warmth,
     totals: layoutTotals(warmth, layout, models, brief),
-    findings: checkLayout({ site, brief, layout, models, warmth }),
+    findings: checkLayout({ site, brief, layout, models, warmth, house }),
   }
 }

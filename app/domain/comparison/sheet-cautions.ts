@@ -1,11 +1,12 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
 import { assumptionOf } from '#app/domain/brief/brief-fields.ts'
 import type { LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
-import { headCaution } from '#app/domain/comfort/cautions.ts'
+import { cautionLimits } from '#app/domain/comfort/cautions.ts'
 import { indoorsAt } from '#app/domain/comfort/indoors.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { isStopped } from '#app/domain/rules/check-layout.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { assumedInWords } from '#app/domain/site/size-source.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength, formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
@@ -18,6 +19,7 @@ interface CautionedVariant extends LayoutFigures {
 
 interface Told {
   readonly brief: Brief
+  readonly rules: HouseRules
   readonly models: ReadonlyMap<string, HeaterModel>
   readonly units: DisplayUnits
   readonly site: Pick<Site, 'dimensions'>
@@ -47,8 +49,8 @@ function stopped({ variants }: Told): string[] {
   })
 }
 
-function heads({ variants, brief }: Told): string[] {
-  const caution = headCaution(brief.stayMinutes)
+function heads({ variants, brief, rules }: Told): string[] {
+  const caution = cautionLimits(brief, rules).head.value
   return variants.flatMap(({ number, totals: { headMaximum } }) => {
     if (!headMaximum || headMaximum.irradiance <= caution) return []
     const figure = formatQuantity(headMaximum.irradiance, 'irradiance', 'metric')
@@ -91,7 +93,7 @@ function assumptions({ brief, units, site }: Told): string[] {
   return all.length === 0 ? [] : [`Assumed: ${all.join('; ')}.`]
 }
 
-function withoutHeat({ variants, units, brief }: Told): string {
+function withoutHeat({ variants, units, brief, rules }: Told): string {
   const seat = variants[0]?.warmth[0]
   const base = 'Heaters warm people, not the air.'
   if (!seat) return base
@@ -100,6 +102,6 @@ function withoutHeat({ variants, units, brief }: Told): string {
   )
   const feel = `${base} Without heat it feels like ${calm} out of the wind, ${windy} in it.`
   const heated = variants.flatMap(({ warmth }) => warmth.filter(({ seat }) => seat.priority !== 'not heated'))
-  const indoors = heated.some((each) => indoorsAt(each, brief, 'design').answer === 'it does')
+  const indoors = heated.some((each) => indoorsAt(each, brief, 'design', rules).answer === 'it does')
   return indoors || heated.length === 0 ? feel : `${feel} In that wind no seat here feels like indoors.`
 }

@@ -1,8 +1,7 @@
-import { defaultFluxTolerances, efficiencyTolerance } from '#app/domain/comfort/uncertainty.ts'
+import { efficiencyTolerance, supplyTolerances } from '#app/domain/comfort/uncertainty.ts'
 import type { FiguresQuestion } from '#app/domain/comparison/layout-figures.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { electricalPower } from '#app/domain/heaters/power.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
 import { moveCoordinate, moveDimension, type ThingOf } from '#app/domain/site/dimension.ts'
 import type { Dimension, Site, SizeSource } from '#app/domain/site/site.ts'
 import { bareSizesOf, thingsOf } from '#app/domain/site/tolerance.ts'
@@ -58,10 +57,10 @@ function dimensionDoubt(question: FiguresQuestion, dimension: Dimension): Doubt 
   }
 }
 
-/** Doubts of the sizes that no dimension moves, together by their thing, each at ± 25 mm. */
+/** Doubts of the sizes that no dimension moves, together by their thing, each by the house's rule for such sizes. */
 export function unstatedDoubts(question: FiguresQuestion): Doubt[] {
-  const { site } = question
-  const tolerance = houseRules.tolerance.value
+  const { site, house } = question
+  const tolerance = house.rules.toleranceUnstated
   return thingsOf(site).flatMap((about): Doubt[] => {
     const coordinates = bareSizesOf(site, about)
     if (coordinates.length === 0) return []
@@ -100,13 +99,13 @@ function supplyDoubts(question: FiguresQuestion): Doubt[] {
   const { layout, models } = question
   const used = new Set(layout.heaters.map(({ model }) => model))
   const known = [...used].sort().flatMap((code) => models.get(code) ?? [])
-  const voltage = defaultFluxTolerances.voltage
+  const voltage = supplyTolerances.voltage
   const heated = (change: Partial<MovedQuestion['heated']>): MovedQuestion => ({
     question,
     heated: { layout, models, ...change },
   })
   const efficiencies = known.map((model): Doubt => {
-    const tolerance = efficiencyTolerance(model) ?? defaultFluxTolerances.efficiency
+    const tolerance = efficiencyTolerance(model) ?? supplyTolerances.efficiency
     const moved = (share: number) => heated({ models: withEfficiency(models, model, share) })
     return {
       size: {

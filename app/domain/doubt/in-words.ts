@@ -1,9 +1,10 @@
 import type { DoubtfulSize } from '#app/domain/doubt/doubtful-size.ts'
 import { largestChange, rankEffects, relativeEffect } from '#app/domain/doubt/ranking.ts'
-import { measuredTolerance, type Settling } from '#app/domain/doubt/settling.ts'
+import type { Settling } from '#app/domain/doubt/settling.ts'
 import type { SizeEffect } from '#app/domain/doubt/size-effects.ts'
 import type { Figures } from '#app/domain/doubt/weighed.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { formatLength, formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
 
 const sources: Record<DoubtfulSize['source'], string> = {
@@ -34,7 +35,7 @@ export function sizeText({ value, tolerance, unit, kind }: DoubtfulSize, units: 
   return `${formatLength(value, units)} ± ${smallLength(tolerance, units)}`
 }
 
-const rules: Record<string, string> = {
+const ruleWords: Record<string, string> = {
   'head-flux': 'heat at the head',
   'seat-target': 'seat in its target band',
   supported: 'hold by its member',
@@ -43,7 +44,7 @@ const rules: Record<string, string> = {
 }
 
 /** A check in plain words: "clearance above". */
-export const checkWords = ({ rule }: Finding): string => rules[rule] ?? rule.replaceAll('-', ' ')
+export const checkWords = ({ rule }: Finding): string => ruleWords[rule] ?? rule.replaceAll('-', ' ')
 
 /** "H2", "seat R3-4", nothing for a whole layout. */
 export const subjectWords = ({ subject }: Finding): string =>
@@ -75,18 +76,24 @@ export interface MeasureLine {
 const mostLines = 8
 const leastEffect = 0.01
 
-/** The sizes to measure next in plain words, the one that matters most first; those measured to 5 mm are left out. */
+/** In whose units, and by whose rules. */
+interface Told {
+  readonly units: DisplayUnits
+  readonly rules: HouseRules
+}
+
+/** The sizes to measure next in plain words, the one that matters most first; those as exact as a laser's are left out. */
 export function measureLines(
   effects: readonly SizeEffect[],
   nominal: Figures,
   settled: readonly Settling[],
-  units: DisplayUnits,
+  { units, rules }: Told,
 ): MeasureLine[] {
   const labels = new Map(effects.map(({ size }) => [size.key, size.label]))
-  return rankEffects(effects, nominal, 'overall')
-    .filter(({ size }) => size.kind === 'dimension' && size.tolerance > measuredTolerance)
+  return rankEffects(effects, nominal, 'overall', rules)
+    .filter(({ size }) => size.kind === 'dimension' && size.tolerance > rules.toleranceLaser)
     .flatMap((effect): MeasureLine[] => {
-      const why = reasons(effect, nominal, settled, labels, units)
+      const why = reasons(effect, nominal, settled, labels, { units, rules })
       if (why === null) return []
       const now = `now ${sizeText(effect.size, units)}, ${sourceWords(effect.size)}`
       return [{ key: effect.size.key, label: capital(effect.size.label), now, why }]
@@ -99,7 +106,7 @@ function reasons(
   nominal: Figures,
   settled: readonly Settling[],
   labels: ReadonlyMap<string, string>,
-  units: DisplayUnits,
+  { units, rules }: Told,
 ): string | null {
   const { key } = effect.size
   const alone = settled.filter((each) => each.alone.includes(key))
@@ -108,12 +115,12 @@ function reasons(
   const named = [...others].map((other) => labels.get(other) ?? other)
   const said = new Set([...alone, ...together].map(({ check }) => check))
   const turned = effect.turns.filter((check) => !said.has(check)).flatMap((check) => nominal.checks.get(check) ?? [])
-  const exact = `± ${smallLength(measuredTolerance, units)}`
+  const exact = `± ${smallLength(rules.toleranceLaser, units)}`
   const parts = [
     alone.length > 0 && `Measured to ${exact} it would settle: ${checksInWords(alone.map(({ finding }) => finding))}.`,
     together.length > 0 && `Together with ${named.join(' and ')} it would settle: ${checksInWords(together.map(({ finding }) => finding))}.`, // prettier-ignore
     turned.length > 0 && `Within it these may come out otherwise: ${checksInWords(turned)}.`,
-    relativeEffect(effect, nominal) >= leastEffect && figuresMoved(effect, nominal, units),
+    relativeEffect(effect, nominal, rules) >= leastEffect && figuresMoved(effect, nominal, units),
   ].filter((part) => part !== false && part !== null)
   return parts.length > 0 ? parts.join(' ') : null
 }

@@ -1,9 +1,6 @@
 import type { SizeEffect } from '#app/domain/doubt/size-effects.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 
-/** How exact a size is once it was measured with a laser, m (house default). */
-export const measuredTolerance = 0.005
-
 /** Which sizes would settle a check that is to be measured first. */
 export interface Settling {
   readonly check: string
@@ -15,17 +12,24 @@ export interface Settling {
 }
 
 /**
- * For each check to be measured first: measured to ± 5 mm and found as written, a size leaves the tolerance
- * √(τ² − Δ² + (Δ · 5 mm / its tolerance)²), Δ being what it changes the margin by; it settles the check when the margin
+ * For each check to be measured first: measured with a laser, to ± `laser` m, and found as written, a size
+ * leaves the tolerance √(τ² − Δ² + (Δ · laser / its tolerance)²), Δ being what it changes the margin by; it settles the check when the margin
  * is no less than that. To first order; a size that is found otherwise moves the margin by as much.
  */
-export function settlings(checks: ReadonlyMap<string, Finding>, effects: readonly SizeEffect[]): Settling[] {
+export function settlings(
+  checks: ReadonlyMap<string, Finding>,
+  effects: readonly SizeEffect[],
+  laser: number,
+): Settling[] {
   return [...checks].flatMap(([check, finding]): Settling[] => {
     const { outcome, margin, tolerance } = finding
     if (outcome !== 'measure first' || margin === null || tolerance === null) return []
     const gains = effects
       .filter(({ size }) => size.kind === 'dimension')
-      .map(({ size, shares }) => ({ key: size.key, gain: gainOf(shares[check] ?? 0, size.tolerance) }))
+      .map(({ size, shares }) => ({
+        key: size.key,
+        gain: gainOf(shares[check] ?? 0, Math.min(1, laser / size.tolerance)),
+      }))
       .filter(({ gain }) => gain > 0)
       .sort((a, b) => b.gain - a.gain || (a.key < b.key ? -1 : 1))
     const settled = (gain: number) => margin >= Math.sqrt(Math.max(0, tolerance ** 2 - gain)) - 1e-9
@@ -34,11 +38,8 @@ export function settlings(checks: ReadonlyMap<string, Finding>, effects: readonl
   })
 }
 
-/** By how much measuring a size lowers the square of a tolerance. */
-function gainOf(share: number, tolerance: number): number {
-  const left = Math.min(1, measuredTolerance / tolerance)
-  return share ** 2 * (1 - left ** 2)
-}
+/** By how much measuring a size lowers the square of a tolerance: `left` of its own tolerance is left. */
+const gainOf = (share: number, left: number): number => share ** 2 * (1 - left ** 2)
 
 /** The largest gains add up soonest, so the fewest are the first of them. */
 function fewest(

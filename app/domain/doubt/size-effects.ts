@@ -45,7 +45,7 @@ const mostUnstated = 600
 
 /**
  * Every doubtful size moved both ways by its tolerance, the layout weighed each time by the exact engine. `unstated` also
- * moves the sizes that no dimension moves, at ± 25 mm, no more than `most` of them. Throws on a page's main thread. Tells its progress after each size.
+ * moves the sizes that no dimension moves, by the house's rule, no more than `most` of them. Throws on a page's main thread. Tells its progress after each size.
  */
 export function* sizeEffects(
   question: FiguresQuestion,

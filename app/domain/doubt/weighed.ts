@@ -38,10 +38,10 @@ const checkKey = ({ rule, weight, subject, condition }: Finding): string =>
 
 /** Figures and checks of a layout by the functions of its own page, without shade. */
 export function weigh({ question, heated }: MovedQuestion): Weighed {
-  const { site, brief, layout, models } = question
+  const { site, brief, layout, models, house } = question
   const warmth = seatWarmth({ site, brief, ...heated })
   const totals = layoutTotals(warmth, layout, models, brief)
-  const findings = checkLayout({ site, brief, layout, models, warmth })
+  const findings = checkLayout({ site, brief, layout, models, warmth, house })
   const tightest = tightestMargin(findings)
   const bySeat = new Map(warmth.map((each) => [each.seat.id, each]))
   const { coldest } = totals

@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { briefSchema } from '#app/domain/brief/brief.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { usualTolerance } from '#app/domain/site/size-source.ts'
 import type { Dimension, Site } from '#app/domain/site/site.ts'
 
@@ -22,21 +23,28 @@ export const jobRequestSchema = z.strictObject({
 export type JobRequest = z.infer<typeof jobRequestSchema>
 
 /** A length or depth of the floor that moves the two corners on its far side. */
-function floorSize(label: string, value: number, axis: 0 | 1, told: boolean): Dimension {
+function floorSize(
+  label: string,
+  value: number,
+  axis: 0 | 1,
+  source: 'told' | 'guessed',
+  rules: HouseRules,
+): Dimension {
   const corners = axis === 0 ? [1, 2] : [2, 3]
   return {
     id: axis === 0 ? 'size-length' : 'size-depth',
     label,
     value,
-    tolerance: usualTolerance(told ? 'told' : 'guessed', value),
-    source: told ? 'told' : 'guessed',
-    note: told ? null : 'assumed until measured',
+    tolerance: usualTolerance(source, value, rules),
+    source,
+    note: source === 'told' ? null : 'assumed until measured',
     moves: corners.map((corner) => ({ of: 'floor', id: 'floor', coordinate: `${corner}.${axis}`, by: 1 })),
   }
 }
 
-/** The site of a new job: a bare rectangular floor under open sky. Sizes nobody gave are guesses, within 10 %. */
-export function startingSite({ name, displayUnits, floor }: JobRequest): Site {
+/** The site of a new job: a bare rectangular floor under open sky. Sizes nobody gave are guesses. */
+export function startingSite({ name, displayUnits, floor }: JobRequest, rules: HouseRules): Site {
+  const source = floor ? 'told' : 'guessed'
   const { length, depth } = floor ?? assumedFloor
   return {
     name,
@@ -59,8 +67,8 @@ export function startingSite({ name, displayUnits, floor }: JobRequest): Site {
     tables: [],
     seats: [],
     dimensions: [
-      floorSize('floor length, x', length, 0, floor !== null),
-      floorSize('floor depth, y', depth, 1, floor !== null),
+      floorSize('floor length, x', length, 0, source, rules),
+      floorSize('floor depth, y', depth, 1, source, rules),
     ],
     trace: null,
   }

@@ -2,6 +2,7 @@ import type { HeaterPlace } from '#app/domain/layout/edits.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { ModelChoice } from '#app/domain/layout/model-choice.ts'
 import { supportNear } from '#app/domain/layout/support-near.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { coverHeightAt } from '#app/domain/site/cover.ts'
 import { nearestMember } from '#app/domain/site/member.ts'
 import type { Site } from '#app/domain/site/site.ts'
@@ -13,12 +14,18 @@ import { degrees, type Vec2 } from '#app/domain/vector.ts'
  * its first fitting mount, in the middle of the manual's heights but under the cover, along the member it hangs from.
  * A model that cannot be placed: null.
  */
-export function firstPlace(choice: ModelChoice, site: Site, layout: Layout, [x, y]: Vec2): HeaterPlace | null {
+export function firstPlace(
+  choice: ModelChoice,
+  site: Site,
+  layout: Layout,
+  [x, y]: Vec2,
+  rules: HouseRules,
+): HeaterPlace | null {
   const { model, supplyVoltage, mounts } = choice
   const alike = layout.heaters.findLast((heater) => heater.model === model.code)
   if (alike) {
     const tiltDeg = alike.mount === 'wall bracket' ? alike.tiltDeg : 0
-    return withSupport({ ...alike, x, y, tiltDeg, memberId: null }, choice, site)
+    return withSupport({ ...alike, x, y, tiltDeg, memberId: null }, choice, site, rules)
   }
   const mount = preferredMount(mounts, site, [x, y])
   if (choice.whyNot.length > 0 || supplyVoltage === null || !mount) return null
@@ -33,12 +40,12 @@ export function firstPlace(choice: ModelChoice, site: Site, layout: Layout, [x, 
     mount,
     memberId: null,
   }
-  return withSupport(place, choice, site)
+  return withSupport(place, choice, site, rules)
 }
 
-const withSupport = (place: HeaterPlace, { model }: ModelChoice, site: Site): HeaterPlace => ({
+const withSupport = (place: HeaterPlace, { model }: ModelChoice, site: Site, rules: HouseRules): HeaterPlace => ({
   ...place,
-  memberId: supportNear(site, { ...place, id: 'new' }, model),
+  memberId: supportNear(site, { ...place, id: 'new' }, model, rules),
 })
 
 /** Hanging is the plainest where there is a member; near a wall the bracket. */

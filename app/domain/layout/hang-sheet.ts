@@ -1,10 +1,10 @@
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { bodyOf } from '#app/domain/layout/body.ts'
 import { chainToOrder, hangScheduleOf, type HangSchedule } from '#app/domain/layout/hanging.ts'
-import type { HangingData } from '#app/domain/layout/hanging-data.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { pointLoads, railKind, railReactions, railRests, type PointLoad } from '#app/domain/layout/support-loads.ts'
 import { supportOf, type Support } from '#app/domain/layout/supports.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import type { Member, Site } from '#app/domain/site/site.ts'
 
 /** One heater as it is hung; without a model in the catalogue nothing of it can be told. */
@@ -58,9 +58,9 @@ export function hangSheet(
   site: Site,
   heaters: readonly MountedHeater[],
   models: ReadonlyMap<string, HeaterModel>,
-  data: HangingData,
+  house: House,
 ): HangSheet {
-  const hung = heaters.map((heater) => hungHeater(site, heater, models.get(heater.model) ?? null, data))
+  const hung = heaters.map((heater) => hungHeater(site, heater, models.get(heater.model) ?? null, house))
   const schedules = hung.flatMap(({ schedule }) => schedule ?? [])
   const hangers = schedules.flatMap((schedule) => schedule.hangers)
   const rods = hangers.filter(({ links }) => links === null).map(({ cutLength }) => cutLength)
@@ -68,7 +68,7 @@ export function hangSheet(
     heaters: hung,
     carried: carriedBy(site, hung),
     order: {
-      chain: chainToOrder(schedules, data),
+      chain: chainToOrder(schedules, house.hanging),
       rods: rods.toSorted((a, b) => b - a),
       turnbuckles: hangers.length,
       safetyLines: schedules.length,
@@ -76,15 +76,15 @@ export function hangSheet(
   }
 }
 
-function hungHeater(site: Site, heater: MountedHeater, model: HeaterModel | null, data: HangingData): HungHeater {
+function hungHeater(site: Site, heater: MountedHeater, model: HeaterModel | null, house: House): HungHeater {
   if (!model) return { heater, model, support: null, schedule: null, loads: [] }
-  const support = supportOf(site, heater, model)
+  const support = supportOf(site, heater, model, house.rules)
   const held = support.outcome === 'held'
   return {
     heater,
     model,
     support,
-    schedule: held ? hangScheduleOf(site, heater, model, data) : null,
+    schedule: held ? hangScheduleOf(site, heater, model, house) : null,
     loads: pointLoads(site, model, bodyOf(heater, model), support),
   }
 }

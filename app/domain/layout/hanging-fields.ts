@@ -40,7 +40,7 @@ export const hangingValues = (data: HangingData, units: DisplayUnits): Record<st
 export function readHanging(
   values: Readonly<Record<string, string>>,
   units: DisplayUnits,
-): { readonly data: HangingData } | { readonly errors: Record<string, string> } {
+): { readonly body: HangingData } | { readonly errors: Record<string, string> } {
   const errors: Record<string, string> = {}
   const read: Record<string, number> = {}
   for (const { name, min, max } of hangingFields) {
@@ -49,5 +49,5 @@ export function readHanging(
     else read[name] = reading.metres
   }
   if (Object.keys(errors).length > 0) return { errors }
-  return { data: hangingDataSchema.parse(read) }
+  return { body: hangingDataSchema.parse(read) }
 }

@@ -1,10 +1,11 @@
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { HangingData } from '#app/domain/layout/hanging-data.ts'
-import { plainHanging } from '#app/domain/layout/plain-hanging.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { splayedPair } from '#app/domain/layout/splayed-pair.ts'
 import { supportOf, type Support } from '#app/domain/layout/supports.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { fixedRules } from '#app/domain/rules/fixed-rules.ts'
+import type { House } from '#app/domain/rules/house.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { degrees, type Vec3 } from '#app/domain/vector.ts'
 
@@ -68,13 +69,12 @@ export function hangScheduleOf(
   site: Site,
   heater: MountedHeater,
   model: HeaterModel,
-  data: HangingData = plainHanging,
+  { rules, hanging }: House,
 ): HangSchedule | null {
-  if (heater.mount !== 'chain' && heater.mount !== 'drop rods') return null
   const pitch = model.suspensionEyePitch
-  const hung = hungFrom(supportOf(site, heater, model), (model.body.mass * houseRules.gravity.value) / 2)
+  const hung = hungPlaces(site, heater, model, rules)
   if (!hung || pitch === null) return null
-  const hangers = hung.map((place) => hangerOf(place, heater.mount === 'chain', data))
+  const hangers = hung.map((place) => hangerOf(place, heater.mount === 'chain', hanging))
   const tilt = (of: (hanger: Hanger) => number) =>
     degrees(Math.atan2(eyeRise(hangers, 0, of) - eyeRise(hangers, 1, of), pitch))
   return {
@@ -122,12 +122,24 @@ function lowestBelow(a: Strand, b: Strand): number {
   return a.z + (along * dz - aside * Math.abs(dy)) / apart
 }
 
-type HungFrom = Pick<Hanger, 'end' | 'eye' | 'anchor' | 'memberId' | 'underside' | 'sideways' | 'length' | 'tension'>
+/** From where to where a hanger goes and what pulls in it, whatever it is made of. */
+type HungPlace = Pick<Hanger, 'end' | 'eye' | 'anchor' | 'memberId' | 'underside' | 'sideways' | 'length' | 'tension'>
+
+/** Where each hanger of a heater on chain or drop rods goes; null for other mounts and without something to hang from. */
+export function hungPlaces(
+  site: Site,
+  heater: MountedHeater,
+  model: HeaterModel,
+  rules: HouseRules,
+): readonly HungPlace[] | null {
+  if (heater.mount !== 'chain' && heater.mount !== 'drop rods') return null
+  return hungFrom(supportOf(site, heater, model, rules), (model.body.mass * fixedRules.gravity.value) / 2)
+}
 
 /** Every hanger's two ends and its tension under `weight` N at each eye; null without something above or beside an eye. */
-function hungFrom({ eyes }: Support, weight: number): HungFrom[] | null {
+function hungFrom({ eyes }: Support, weight: number): HungPlace[] | null {
   if (eyes.length === 0) return null
-  const hung = eyes.flatMap(({ eye, place, legs }, i): (HungFrom | null)[] => {
+  const hung = eyes.flatMap(({ eye, place, legs }, i): (HungPlace | null)[] => {
     const end = i === 0 ? 0 : 1
     if (legs) {
       const [a, b] = legs
@@ -152,7 +164,7 @@ function hungFrom({ eyes }: Support, weight: number): HungFrom[] | null {
   return known.length === hung.length ? known : null
 }
 
-function hangerOf(place: HungFrom, chain: boolean, data: HangingData): Hanger {
+function hangerOf(place: HungPlace, chain: boolean, data: HangingData): Hanger {
   const net = settled(place.length - data.hardwareAllowance)
   const step = chain ? data.linkPitch : data.rodStep
   const count = Math.max(0, Math.round(net / step))
@@ -175,7 +187,7 @@ function hangerOf(place: HungFrom, chain: boolean, data: HangingData): Hanger {
 }
 
 /** Chain to order for some hang schedules, m: all that is cut, rounded up to whole order lengths. */
-export function chainToOrder(schedules: readonly HangSchedule[], data: HangingData = plainHanging): number {
+export function chainToOrder(schedules: readonly HangSchedule[], data: HangingData): number {
   const cut = schedules.flatMap(({ hangers }) => hangers.filter(({ links }) => links !== null))
   const length = cut.reduce((sum, { cutLength }) => sum + cutLength, 0)
   return Math.ceil(settled(length / data.orderStep)) * data.orderStep

@@ -2,6 +2,7 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import type { Repeat } from '#app/domain/layout/repeat.ts'
 import { supportOf } from '#app/domain/layout/supports.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { roundLength } from '#app/domain/units.ts'
 import { radians, type Vec2 } from '#app/domain/vector.ts'
@@ -27,6 +28,7 @@ export function memberSpacings(
   heaters: readonly MountedHeater[],
   models: ReadonlyMap<string, HeaterModel>,
   repeat: Repeat,
+  rules: HouseRules,
 ): MemberSpacings | null {
   const [lead] = heaters
   if (!lead || heaters.some(({ mount }) => !hangsFromMembers.has(mount))) return null
@@ -37,7 +39,15 @@ export function memberSpacings(
   const holds = (spacing: number) =>
     heaters.every((heater) => {
       const model = models.get(heater.model)
-      return model && copiesHeld(site, heater, model, along, { ...repeat, spacing })
+      return (
+        model &&
+        copiesHeld(
+          heater,
+          along,
+          { ...repeat, spacing },
+          (copy) => supportOf(site, copy, model, rules).outcome !== 'not held',
+        )
+      )
     })
   const fitting = crossed.filter(holds)
   return {
@@ -63,11 +73,16 @@ function crossings(site: Site, [x, y]: Vec2, [ux, uy]: Vec2): number[] {
   return met.toSorted((a, b) => a - b)
 }
 
-function copiesHeld(site: Site, heater: MountedHeater, model: HeaterModel, [ux, uy]: Vec2, repeat: Repeat): boolean {
+function copiesHeld(
+  heater: MountedHeater,
+  [ux, uy]: Vec2,
+  repeat: Repeat,
+  isHeld: (copy: MountedHeater) => boolean,
+): boolean {
   for (let step = 1; step <= repeat.count; step += 1) {
     const shift = step * repeat.spacing
     const copy = { ...heater, x: heater.x + ux * shift, y: heater.y + uy * shift, memberId: null }
-    if (supportOf(site, copy, model).outcome === 'not held') return false
+    if (!isHeld(copy)) return false
   }
   return true
 }

@@ -2,6 +2,7 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { movedToSupport, railsFor } from '#app/domain/layout/support-remedies.ts'
 import { supportOf } from '#app/domain/layout/supports.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { removeThings } from '#app/domain/site/edits.ts'
 import type { Member, Site } from '#app/domain/site/site.ts'
 
@@ -26,24 +27,24 @@ export interface RailedHeater {
 }
 
 /** The remedies of a heater that nothing holds; both are tried, so that what is offered does hold it. */
-export function remediesOf(site: Site, heater: MountedHeater, model: HeaterModel): Remedies {
-  return { move: moveOf(site, heater, model), rails: railsOf(site, heater, model) }
+export function remediesOf(site: Site, heater: MountedHeater, model: HeaterModel, rules: HouseRules): Remedies {
+  return { move: moveOf(site, heater, model, rules), rails: railsOf(site, heater, model, rules) }
 }
 
-function moveOf(site: Site, heater: MountedHeater, model: HeaterModel): MovedHeater | null {
-  const moved = movedToSupport(site, heater, model)
-  if (!moved || supportOf(site, moved, model).outcome === 'not held') return null
+function moveOf(site: Site, heater: MountedHeater, model: HeaterModel, rules: HouseRules): MovedHeater | null {
+  const moved = movedToSupport(site, heater, model, rules)
+  if (!moved || supportOf(site, moved, model, rules).outcome === 'not held') return null
   const supports = [...site.members, ...site.walls, ...site.poles]
   const supportName = supports.find(({ id }) => id === moved.memberId)?.name ?? ''
   return { heater: moved, distance: Math.hypot(moved.x - heater.x, moved.y - heater.y), supportName }
 }
 
-function railsOf(site: Site, heater: MountedHeater, model: HeaterModel): RailedHeater | null {
+function railsOf(site: Site, heater: MountedHeater, model: HeaterModel, rules: HouseRules): RailedHeater | null {
   const rails = railsFor(site, heater, model)
   const [first] = rails ?? []
   if (!rails || !first) return null
   const railed = { ...heater, memberId: first.id, ...(heater.splayed ? { splayed: false } : {}) }
-  return supportOf(withRails(site, rails), railed, model).outcome === 'held' ? { heater: railed, rails } : null
+  return supportOf(withRails(site, rails), railed, model, rules).outcome === 'held' ? { heater: railed, rails } : null
 }
 
 /** The site with rails added. */

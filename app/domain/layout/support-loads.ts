@@ -3,7 +3,7 @@ import { bayOf } from '#app/domain/layout/bay.ts'
 import type { Body } from '#app/domain/layout/body.ts'
 import { splayedPair } from '#app/domain/layout/splayed-pair.ts'
 import type { Support } from '#app/domain/layout/supports.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { fixedRules } from '#app/domain/rules/fixed-rules.ts'
 import { nearestOnSegment } from '#app/domain/site/geometry.ts'
 import type { Member, Site } from '#app/domain/site/site.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
@@ -20,7 +20,7 @@ export interface PointLoad {
 }
 
 /** Weight of a heater, N. */
-export const weightOf = (model: HeaterModel): number => model.body.mass * houseRules.gravity.value
+export const weightOf = (model: HeaterModel): number => model.body.mass * fixedRules.gravity.value
 
 /**
  * The load at each point that carries a heater, by statics: half its weight at each of two eyes (their tensions where

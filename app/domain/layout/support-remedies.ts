@@ -6,6 +6,7 @@ import { facingMembers, firstMet, type FacingMember } from '#app/domain/layout/f
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { railKind } from '#app/domain/layout/support-loads.ts'
 import { reachOf, supportPlaces, type SupportPlace } from '#app/domain/layout/supports.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { unusedId } from '#app/domain/site/edits.ts'
 import { memberDirectionDeg, undersideAt } from '#app/domain/site/member.ts'
 import type { Member, Site } from '#app/domain/site/site.ts'
@@ -22,13 +23,18 @@ const shareOfReach = 0.75
  * along it (level, when the mount cannot hold a tilt), in the middle of a bay, or beside a wall or pole at three quarters
  * of the reach. Null when the site has no such thing. Height stays.
  */
-export function movedToSupport(site: Site, heater: MountedHeater, model: HeaterModel): MountedHeater | null {
+export function movedToSupport(
+  site: Site,
+  heater: MountedHeater,
+  model: HeaterModel,
+  rules: HouseRules,
+): MountedHeater | null {
   const [place] = supportPlaces(site, heater.mount, [heater.x, heater.y])
   if (!place) return null
   const tiltDeg = model.mountsThatHoldTilt.includes(heater.mount) ? heater.tiltDeg : 0
   const moved = { ...heater, memberId: place.id, tiltDeg, ...(heater.splayed ? { splayed: false } : {}) }
   if (heater.mount === 'recess box') return movedIntoBay(site, moved, model)
-  if (place.kind !== 'member') return movedBeside(site, moved, place, reachOf(model, heater.mount) ?? 0)
+  if (place.kind !== 'member') return movedBeside(site, moved, place, reachOf(model, heater.mount, rules) ?? 0)
   const member = site.members.find(({ id }) => id === place.id)
   const turnDeg = member ? parallelTurn(memberDirectionDeg(member), heater.turnDeg) : heater.turnDeg
   return { ...moved, x: rounded(place.point[0]), y: rounded(place.point[1]), turnDeg }

@@ -3,7 +3,7 @@ import { bayOf } from '#app/domain/layout/bay.ts'
 import { bodyOf, type Body } from '#app/domain/layout/body.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { splayAngleDeg, splayedLegs, type SplayedLeg } from '#app/domain/layout/splayed-pair.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { coverHeightAt } from '#app/domain/site/cover.ts'
 import { nearestOnSegment } from '#app/domain/site/geometry.ts'
 import { undersideAt } from '#app/domain/site/member.ts'
@@ -117,33 +117,33 @@ function suspensionEyes(body: Body, model: HeaterModel): readonly [Vec3, Vec3] |
 }
 
 /** How far a mount of this model may hold it from its support, m; null when its manual does not say. */
-export function reachOf(model: HeaterModel, mount: Mount): number | null {
-  return model.mountReach[mount] ?? (mount === 'chain' ? houseRules.chainSidewaysLimit.value : null)
+export function reachOf(model: HeaterModel, mount: Mount, { chainSideways }: HouseRules): number | null {
+  return model.mountReach[mount] ?? (mount === 'chain' ? chainSideways : null)
 }
 
 /**
  * How a heater is carried where it is. Chains on one member hang plumb, so each eye of a chain pair must be under a
- * member (within the sideways limit); rods, brackets and clamps reach as far as the model's manual says; a recess box
+ * member (within the house's sideways limit); rods, brackets and clamps reach as far as the model's manual says; a recess box
  * lies in a bay under a cover. The support it names is taken when in reach; a heater that names none takes the nearest.
  */
-export function supportOf(site: Site, heater: MountedHeater, model: HeaterModel): Support {
+export function supportOf(site: Site, heater: MountedHeater, model: HeaterModel, rules: HouseRules): Support {
   const body = bodyOf(heater, model)
-  const support = carried(site, heater, model, body)
+  const support = carried(site, heater, model, body, rules)
   if (support.outcome !== 'held' || Math.abs(heater.tiltDeg) < levelDeg) return support
   if (model.mountsThatHoldTilt.includes(heater.mount)) return support
   return { ...support, outcome: 'not held', reason: 'tilt not held' }
 }
 
-function carried(site: Site, heater: MountedHeater, model: HeaterModel, body: Body): Support {
+function carried(site: Site, heater: MountedHeater, model: HeaterModel, body: Body, rules: HouseRules): Support {
   const places = supportPlaces(site, heater.mount, [heater.x, heater.y])
-  const reach = reachOf(model, heater.mount)
+  const reach = reachOf(model, heater.mount, rules)
   const none = { ids: [], distance: places[0]?.distance ?? null, reach, nearest: places[0] ?? null, eyes: [] }
   if (!places[0]) return { ...none, outcome: 'not held', reason: 'nothing to fix to' }
   switch (heater.mount) {
     case 'chain':
     case 'drop rods':
       return heater.splayed
-        ? carriedBySplayedPairs(site, suspensionEyes(body, model), none)
+        ? carriedBySplayedPairs(site, suspensionEyes(body, model), none, rules)
         : carriedByEyes(site, heater, suspensionEyes(body, model), none)
     case 'recess box':
       return carriedInBay(site, body, none)
@@ -204,9 +204,13 @@ interface PlumbEye {
 }
 
 /** Each eye between two members, both within reach and steep enough. */
-function carriedBySplayedPairs(site: Site, eyes: readonly [Vec3, Vec3] | null, none: Uncarried): Support {
+function carriedBySplayedPairs(
+  site: Site,
+  eyes: readonly [Vec3, Vec3] | null,
+  none: Uncarried,
+  { splayReach: reach, splayAngleDeg: most }: HouseRules,
+): Support {
   if (!eyes) return { ...none, outcome: 'cannot tell', reason: 'eyes not stated' }
-  const reach = houseRules.splayReach.value
   const pairs = eyes.map((eye): EyeSupport => ({ eye, place: null, legs: splayedLegs(site, eye) }))
   const legs = pairs.flatMap((pair) => (pair.legs ?? []).map((leg) => ({ ...leg, rise: riseOf(leg, pair.eye) })))
   const distance = legs.length > 0 ? Math.max(...legs.map(({ sideways }) => sideways)) : none.distance
@@ -221,9 +225,7 @@ function carriedBySplayedPairs(site: Site, eyes: readonly [Vec3, Vec3] | null, n
   if (legs.some(({ rise }) => (rise ?? 0) < closeEnough)) {
     return { ...carriedBy, outcome: 'not held', reason: 'support too low' }
   }
-  const flat = legs.some(
-    ({ sideways, rise }) => splayAngleDeg(sideways, rise ?? 0) > houseRules.splayAngleDeg.value + levelDeg,
-  )
+  const flat = legs.some(({ sideways, rise }) => splayAngleDeg(sideways, rise ?? 0) > most + levelDeg)
   return flat
     ? { ...carriedBy, outcome: 'not held', reason: 'splayed too flat' }
     : { ...carriedBy, outcome: 'held', reason: 'held' }

@@ -1,5 +1,6 @@
 import { bodyCorners, boundsFromBody } from '#app/domain/layout/clear-space.ts'
 import type { HeaterCheck } from '#app/domain/rules/check.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import { coverOutline } from '#app/domain/site/cover.ts'
 import { convexOutlinesMeet } from '#app/domain/site/geometry.ts'
 import type { Cover, Site } from '#app/domain/site/site.ts'
@@ -47,7 +48,7 @@ export function thingsAbout(check: HeaterCheck): readonly Solid[] {
   const things = siteSolids(site).filter((solid) => {
     if (support.ids.includes(solid.id)) return false
     const apart = Math.min(...solid.parts.map((part) => boundsFromBody(body, part)))
-    if (apart > reach && apart > reach + mostTolerance(site, solid)) return false
+    if (apart > reach && apart > reach + mostTolerance(check, solid)) return false
     if (solid.of === 'member') return !recess && !behind(solid)
     return !recess || !over.some(({ id }) => id === solid.id)
   })
@@ -66,11 +67,14 @@ function greatestClearance({ model, brief }: HeaterCheck): number {
   )
 }
 
-const tolerances = new WeakMap<Solid, number>()
+const tolerances = new WeakMap<Solid, { readonly house: House; readonly most: number }>()
 
 /** The most by which the sizes that a thing rests on may bring it nearer, m. */
-export function mostTolerance(site: Site, solid: Solid): number {
-  const known = tolerances.get(solid) ?? Math.hypot(...solid.rests.map((thing) => largestTolerance(site, thing)))
-  tolerances.set(solid, known)
-  return known
+export function mostTolerance({ site, house }: Pick<HeaterCheck, 'site' | 'house'>, solid: Solid): number {
+  const known = tolerances.get(solid)
+  if (known?.house === house) return known.most
+  const { toleranceUnstated } = house.rules
+  const most = Math.hypot(...solid.rests.map((thing) => largestTolerance(site, thing, toleranceUnstated)))
+  tolerances.set(solid, { house, most })
+  return most
 }

@@ -1,8 +1,6 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { bodyOf } from '#app/domain/layout/body.ts'
-import type { HangingData } from '#app/domain/layout/hanging-data.ts'
-import { plainHanging } from '#app/domain/layout/plain-hanging.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import { supportOf } from '#app/domain/layout/supports.ts'
 import { beamData } from '#app/domain/rules/beam-data.ts'
@@ -17,6 +15,7 @@ import type { Finding } from '#app/domain/rules/finding.ts'
 import { hangerLength } from '#app/domain/rules/hanger-length.ts'
 import { glowNearStep } from '#app/domain/rules/glow-near-step.ts'
 import { headFlux } from '#app/domain/rules/head-flux.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import { ingressProtection } from '#app/domain/rules/ingress-protection.ts'
 import { levelAxis } from '#app/domain/rules/level-axis.ts'
 import { plainWhereNoStatePasses } from '#app/domain/rules/movable-states.ts'
@@ -90,14 +89,14 @@ const inOrder = (findings: readonly Finding[]): Finding[] => findings.toSorted((
 interface Checked {
   readonly brief: Brief
   readonly model: HeaterModel
-  readonly hanging: HangingData
+  readonly house: House
   readonly findings: readonly Finding[]
 }
 
 const checked = new WeakMap<Site, WeakMap<MountedHeater, Checked>>()
 
 function heaterFindings(
-  { site, brief, hanging = plainHanging }: LayoutCheck,
+  { site, brief, house }: LayoutCheck,
   heater: MountedHeater,
   model: HeaterModel | undefined,
 ): readonly Finding[] {
@@ -105,11 +104,11 @@ function heaterFindings(
   const ofSite = checked.get(site) ?? new WeakMap<MountedHeater, Checked>()
   checked.set(site, ofSite)
   const known = ofSite.get(heater)
-  if (known && known.brief === brief && known.model === model && known.hanging === hanging) return known.findings
-  const [body, support] = [bodyOf(heater, model), supportOf(site, heater, model)]
-  const check = { site, brief, heater, model, body, support, hanging }
+  if (known && known.brief === brief && known.model === model && known.house === house) return known.findings
+  const [body, support] = [bodyOf(heater, model), supportOf(site, heater, model, house.rules)]
+  const check = { site, brief, heater, model, body, support, house }
   const found = heaterRules.flatMap((rule) => rule(check) ?? [])
   const findings = [withdrawnModel(heater, model), ...plainWhereNoStatePasses(site, found)]
-  ofSite.set(heater, { brief, model, hanging, findings })
+  ofSite.set(heater, { brief, model, house, findings })
   return findings
 }

@@ -2,10 +2,10 @@ import type { Brief } from '#app/domain/brief/brief.ts'
 import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Body } from '#app/domain/layout/body.ts'
-import type { HangingData } from '#app/domain/layout/hanging-data.ts'
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
 import type { Support } from '#app/domain/layout/supports.ts'
 import { outcomeOf, type Finding, type Outcome } from '#app/domain/rules/finding.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import type { Site } from '#app/domain/site/site.ts'
 
 /** What a layout is checked with. `warmth` is that of this very layout. */
@@ -15,8 +15,8 @@ export interface LayoutCheck {
   readonly layout: Pick<Layout, 'heaters'>
   readonly models: ReadonlyMap<string, HeaterModel>
   readonly warmth: readonly SeatWarmth[]
-  /** Absent: the defaults. */
-  readonly hanging?: HangingData | undefined
+  /** That of the organisation whose layout it is. */
+  readonly house: House
 }
 
 /** What a rule about one heater looks at. */
@@ -27,7 +27,7 @@ export interface HeaterCheck {
   readonly model: HeaterModel
   readonly body: Body
   readonly support: Support
-  readonly hanging: HangingData
+  readonly house: House
 }
 
 /** What a rule is about, so that its findings share it. */

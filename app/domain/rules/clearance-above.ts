@@ -65,7 +65,7 @@ function toCover(check: HeaterCheck, cover: Cover, rule: Rule, limit: number, sw
     value: gap,
     limit,
     margin: gap === null ? null : gap - limit,
-    tolerance: toleranceOf(value, check.site, [{ of: 'cover', id: cover.id }]),
+    tolerance: toleranceOf(value, check.site, check.house.rules.toleranceUnstated, [{ of: 'cover', id: cover.id }]),
     condition: swung ? `${cover.name}: swung below the underside` : null,
     remedy: swung ? 'Heater off while the blades move; or lower it.' : remedy,
     nearest: plane && nearestWith(check, plane, swung ? cover.swing : 0),

@@ -53,7 +53,7 @@ export function clearanceAround(check: HeaterCheck, around: Around, without: (so
     ]
   })
   const known = things.filter(({ combustible }) => clearanceFor(check, combustible))
-  const found = findingsNear(check.site, known, {
+  const found = findingsNear(check, known, {
     rule,
     left: (solid) => leftAround(check, solid, around.faces),
     quickly: (part, solid) => boundsFromBody(check.body, part) - mostAround(check, solid),

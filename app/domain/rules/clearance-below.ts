@@ -40,7 +40,7 @@ export function clearanceBelow(check: HeaterCheck): Finding[] {
   const things = thingsAbout(check).filter((thing) => thing.combustible && !thing.furniture && thing.state === null)
   const marginOf = (part: Convex) => (boundsApart(boundsOf(under), boundsOf(part)) > 0 ? Infinity : -Infinity)
   const left = (solid: Solid): Left | null => leftBelow(solid, under, lowestPoint, limit)
-  const found = findingsNear(check.site, things, {
+  const found = findingsNear(check, things, {
     rule,
     left,
     ...{ quickly: marginOf, closely: marginOf },

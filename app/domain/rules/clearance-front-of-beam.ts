@@ -31,7 +31,7 @@ export function clearanceFrontOfBeam(check: HeaterCheck): Finding[] {
     ]
   }
   const things = thingsAbout(check).filter(({ combustible }) => combustible)
-  return findingsNear(check.site, things, {
+  return findingsNear(check, things, {
     rule,
     left: (solid) => leftInBeam(check, solid, limit),
     quickly: (part) => boundsFromBody(check.body, part) - limit,

@@ -36,7 +36,7 @@ export const lampDistance = (check: HeaterCheck): Finding | null =>
   })
 
 function distanceTo(check: HeaterCheck, { rule, kind, name, ask }: DistanceRule): Finding | null {
-  const { site, brief } = check
+  const { site, brief, house } = check
   let nearest: { readonly obstacle: Obstacle; readonly gap: Gap } | null = null
   for (const obstacle of site.obstacles) {
     if (obstacle.kind !== kind) continue
@@ -70,7 +70,7 @@ function distanceTo(check: HeaterCheck, { rule, kind, name, ask }: DistanceRule)
       value: gap.distance,
       limit: article.value,
       margin: gap.distance - article.value,
-      tolerance: toleranceOf((moved) => gapOf(check, moved, obstacle.id)?.distance ?? null, site, [{ of: 'obstacle', id: obstacle.id }]), // prettier-ignore
+      tolerance: toleranceOf((moved) => gapOf(check, moved, obstacle.id)?.distance ?? null, site, house.rules.toleranceUnstated, [{ of: 'obstacle', id: obstacle.id }]), // prettier-ignore
       remedy: `Move the heater, or have the ${name} moved.`,
       nearest: pair,
     },

@@ -1,6 +1,6 @@
 import { heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { houseFigure } from '#app/domain/rules/house-rules.ts'
 import { distanceToOutline } from '#app/domain/site/geometry.ts'
 
 /** A step of less than this is level ground, m. */
@@ -11,16 +11,16 @@ const leastStep = 0.01
  * nearest edge where the level changes. Null without levels and for heaters that hardly glow.
  */
 export function glowNearStep(check: HeaterCheck): Finding | null {
-  const { site, heater, model } = check
+  const { site, heater, model, house } = check
   if (!/bright/.test(model.visibleGlow)) return null
   const steps = site.levels.filter(({ height }) => Math.abs(height) >= leastStep)
   const nearest = steps
     .map(({ name, outline }) => ({ name, distance: distanceToOutline(outline, heater.x, heater.y) }))
     .reduce<{ name: string; distance: number } | null>((a, b) => (a && a.distance <= b.distance ? a : b), null)
   if (!nearest) return null
-  const limit = houseRules.glowNearStep.value
+  const { value: limit, source } = houseFigure(house.rules, 'glowNearStep')
   return judgedBy(
-    heaterRule(check, 'glow-near-step', 'advice', 'm', houseRules.glowNearStep.source),
+    heaterRule(check, 'glow-near-step', 'advice', 'm', source),
     {
       fails: `Bright glow near the step of ${nearest.name}`,
       'measure first': `Bright glow near the step of ${nearest.name}`,

@@ -1,5 +1,6 @@
 import { hangerTolerance } from '#app/domain/layout/hanger-tolerance.ts'
 import { hangScheduleOf, type Hanger } from '#app/domain/layout/hanging.ts'
+import type { HangingData } from '#app/domain/layout/hanging-data.ts'
 import { heaterRule, judgedBy, type HeaterCheck, type Rule } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { formatLength } from '#app/domain/units.ts'
@@ -9,8 +10,9 @@ import { formatLength } from '#app/domain/units.ts'
  * whole links leave. Too short: a short bracket of that length. Null for other mounts and without anything above an eye.
  */
 export function hangerLength(check: HeaterCheck): Finding | null {
-  const { site, heater, model, hanging } = check
-  const schedule = hangScheduleOf(site, heater, model, hanging)
+  const { site, heater, model, house } = check
+  const { hanging, rules } = house
+  const schedule = hangScheduleOf(site, heater, model, house)
   const [first] = schedule?.hangers ?? []
   if (!schedule || !first) return null
   const rule = heaterRule(check, 'hanger-length', 'soft', 'm', 'Hanging data in Rules')
@@ -32,13 +34,13 @@ export function hangerLength(check: HeaterCheck): Finding | null {
       value: shortest.length,
       limit: least,
       margin: shortest.length - least,
-      tolerance: hangerTolerance(site, shortest),
+      tolerance: hangerTolerance(site, shortest, rules.toleranceUnstated),
       remedy: `A bracket of ${bracket} from underside to eye${others.length > 0 ? ` (offered: ${others.join(', ')})` : ', by the maker'}, or hang it lower.`,
     },
   )
 }
 
-const beyondTurnbuckle = (rule: Rule, { residual, left }: Hanger, { lengthens, shortens }: HeaterCheck['hanging']) =>
+const beyondTurnbuckle = (rule: Rule, { residual, left }: Hanger, { lengthens, shortens }: HangingData) =>
   judgedBy(
     rule,
     {

@@ -16,7 +16,7 @@ interface Judged {
  * body against the stop line (hard stop). One finding for each seat that does not pass, and one pass for the hottest.
  */
 export function headFlux(check: LayoutCheck): Finding[] {
-  const { stop, head } = cautionLimits(check.brief)
+  const { stop, head } = cautionLimits(check.brief, check.house.rules)
   return [...againstLimit(check, 'soft', head, atHead), ...againstLimit(check, 'hard stop', stop, atHeadOrBody)]
 }
 

@@ -2,7 +2,7 @@ import { allowsRain, waterNumeral } from '#app/domain/heaters/ingress.ts'
 import { bodyCorners } from '#app/domain/layout/clear-space.ts'
 import { findingOf, heaterRule, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { houseFigure } from '#app/domain/rules/house-rules.ts'
 import { coverHeightAt } from '#app/domain/site/cover.ts'
 
 /** What is over a heater: every corner of it under one closed cover, else rain comes to it. */
@@ -14,14 +14,15 @@ function shelterOf({ site, body }: HeaterCheck): 'closed cover' | 'opening roof'
 }
 
 /**
- * The ingress protection suits the place (house rule): under open sky or an opening roof the second numeral is 5 or
- * more and the location note allows rain; under a closed cover it is 4 or more; a recess box only under a closed cover.
+ * The ingress protection suits the place (house rule): under open sky or an opening roof the second numeral is at least
+ * the house's, 5 by default, and the location note allows rain; under a closed cover 4; a recess box only under a closed
+ * cover.
  */
 export function ingressProtection(check: HeaterCheck): Finding {
-  const { heater, model } = check
+  const { heater, model, house } = check
   const shelter = shelterOf(check)
   const closed = shelter === 'closed cover'
-  const need = closed ? houseRules.ingressUnderCover : houseRules.ingressOpenSky
+  const need = houseFigure(house.rules, closed ? 'ingressUnderCover' : 'ingressOpenSky')
   const rule = heaterRule(check, 'ingress-protection', 'hard stop', 'none', need.source)
   const remedy = closed ? 'Choose a model for the weather under a cover.' : 'Choose a model that may stand in the rain.'
   if (heater.mount === 'recess box' && !closed) {

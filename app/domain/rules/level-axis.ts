@@ -7,9 +7,9 @@ import type { Finding } from '#app/domain/rules/finding.ts'
  * turnbuckles cannot take up is left.
  */
 export function levelAxis(check: HeaterCheck): Finding {
-  const { site, heater, model, hanging } = check
+  const { site, heater, model, house } = check
   const limit = model.elementAxisLevelWithinDeg
-  const schedule = hangScheduleOf(site, heater, model, hanging)
+  const schedule = hangScheduleOf(site, heater, model, house)
   const value = Math.abs(schedule?.tiltLeftDeg ?? 0)
   const short = schedule?.hangers.some(({ outcome }) => outcome === 'too short') ?? false
   return judgedBy(

@@ -6,9 +6,9 @@ import type { Finding } from '#app/domain/rules/finding.ts'
  * The near infrared at the eye of each guest, looking level to where it is most, stays under the limit for the stay and
  * the air; advice, as guests look away.
  */
-export function nearInfrared({ brief, layout, warmth }: LayoutCheck): Finding[] {
+export function nearInfrared({ brief, layout, warmth, house }: LayoutCheck): Finding[] {
   if (layout.heaters.length === 0) return []
-  const { value: limit, source } = cautionLimits(brief).eye
+  const { value: limit, source } = cautionLimits(brief, house.rules).eye
   const rule: Rule = { rule: 'near-infrared', weight: 'advice', subject: { kind: 'layout', id: 'layout' }, source, unit: 'W/m²' } // prettier-ignore
   const known = warmth.flatMap(({ nearInfraredAtEye, cannotTell }) => (cannotTell.length > 0 ? [] : (nearInfraredAtEye ?? []))) // prettier-ignore
   if (known.length < warmth.length || known.length === 0) {

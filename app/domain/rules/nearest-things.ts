@@ -1,5 +1,5 @@
 import { mostTolerance } from '#app/domain/rules/about-heater.ts'
-import { findingOf, judgedBy, type Found, type Rule } from '#app/domain/rules/check.ts'
+import { findingOf, judgedBy, type Found, type HeaterCheck, type Rule } from '#app/domain/rules/check.ts'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
 import type { Convex } from '#app/domain/site/convex.ts'
 import type { Site } from '#app/domain/site/site.ts'
@@ -34,27 +34,27 @@ export interface NearRule {
  * Findings of a rule over all things: one for each that does not pass, and one pass with the tightest of the things that
  * are always there. A movable thing that fails does so in one of its states: a named condition of use, not a hard stop.
  */
-export function findingsNear(site: Site, solids: readonly Solid[], near: NearRule): Finding[] {
-  const left = leftBy(site, solids, near)
-  const doubtful = left.filter(({ solid, found }) => found.margin < mostTolerance(site, solid))
-  const findings = doubtful.map(({ solid, found }) => findingAbout(site, solid, found, near))
+export function findingsNear(check: HeaterCheck, solids: readonly Solid[], near: NearRule): Finding[] {
+  const left = leftBy(check, solids, near)
+  const doubtful = left.filter(({ solid, found }) => found.margin < mostTolerance(check, solid))
+  const findings = doubtful.map(({ solid, found }) => findingAbout(check, solid, found, near))
   const failing = findings.filter(({ outcome }) => outcome !== 'pass')
   if (failing.some(({ condition }) => condition === null)) return failing
   const standing = left.find(({ solid }) => solid.state === null) ?? left.find(({ solid }) => !doubtful.some((d) => d.solid === solid)) // prettier-ignore
   const tightest = standing
-    ? findingAbout(site, standing.solid, standing.found, near)
+    ? findingAbout(check, standing.solid, standing.found, near)
     : findingOf(near.rule, 'pass', { title: near.clear })
   return [...failing, tightest]
 }
 
 /** What each thing leaves, tightest first; a thing that can neither be in doubt nor the tightest is passed over. */
-function leftBy(site: Site, solids: readonly Solid[], near: NearRule): { solid: Solid; found: Left }[] {
+function leftBy(check: HeaterCheck, solids: readonly Solid[], near: NearRule): { solid: Solid; found: Left }[] {
   const quick = solids.map((solid) => ({ solid, atLeast: leastOver(solid, near.quickly) }))
   quick.sort((a, b) => a.atLeast - b.atLeast)
   const left: { solid: Solid; found: Left }[] = []
   let tightest = Infinity
   for (const { solid, atLeast } of quick) {
-    const ofNoAccount = (margin: number) => margin > tightest && margin > mostTolerance(site, solid)
+    const ofNoAccount = (margin: number) => margin > tightest && margin > mostTolerance(check, solid)
     if (ofNoAccount(atLeast) || ofNoAccount(leastOver(solid, near.closely))) continue
     const found = near.left(solid)
     if (!found) continue
@@ -70,14 +70,14 @@ function leastOver(solid: Solid, marginOf: NearRule['quickly']): number {
   return least
 }
 
-function findingAbout(site: Site, solid: Solid, found: Left, near: NearRule): Finding {
+function findingAbout({ site, house }: HeaterCheck, solid: Solid, found: Left, near: NearRule): Finding {
   const margin = (moved: Site) => {
     const there = solidOf(moved, solid)
     return there && (near.left(there)?.margin ?? null)
   }
   const rest: Omit<Found, 'title'> = {
     ...found,
-    tolerance: toleranceOf(margin, site, solid.rests),
+    tolerance: toleranceOf(margin, site, house.rules.toleranceUnstated, solid.rests),
     remedy: solid.state === null ? near.remedy : conditionRemedy,
     condition: solid.state,
   }

@@ -36,7 +36,7 @@ export function recessBay(check: HeaterCheck): Finding | null {
       value: tight.clear,
       limit,
       margin: limit === null ? null : tight.clear - limit,
-      tolerance: toleranceOf((site) => halfWidth(site, bay), check.site, sides.map(({ member }) => ({ of: 'member', id: member.id }))), // prettier-ignore
+      tolerance: toleranceOf((site) => halfWidth(site, bay), check.site, check.house.rules.toleranceUnstated, sides.map(({ member }) => ({ of: 'member', id: member.id }))), // prettier-ignore
       remedy: 'Move it to the middle of a bay between members.',
     },
   )

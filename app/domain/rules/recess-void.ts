@@ -5,7 +5,7 @@ import { toleranceOf } from '#app/domain/site/tolerance.ts'
 
 /** The void above the ceiling is as deep as the model's recess box needs. Null for other mounts. */
 export function recessVoid(check: HeaterCheck): Finding | null {
-  const { heater, model, site } = check
+  const { heater, model, site, house } = check
   if (heater.mount !== 'recess box') return null
   const cover = coversOver(check)[0]
   const depth = cover?.voidDepth ?? null
@@ -24,7 +24,7 @@ export function recessVoid(check: HeaterCheck): Finding | null {
       limit: need,
       margin: depth === null || need === null ? null : depth - need,
       tolerance: known
-        ? toleranceOf((moved) => moved.covers.find(({ id }) => id === cover.id)?.voidDepth ?? null, site, [{ of: 'cover', id: cover.id }]) // prettier-ignore
+        ? toleranceOf((moved) => moved.covers.find(({ id }) => id === cover.id)?.voidDepth ?? null, site, house.rules.toleranceUnstated, [{ of: 'cover', id: cover.id }]) // prettier-ignore
         : null,
       remedy: 'Measure the clear depth of the void.',
     },

@@ -1,5 +1,7 @@
 import { eyeLimit, eyeLimitInAir } from '#app/domain/comfort/cautions.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { fixedRules } from '#app/domain/rules/fixed-rules.ts'
+import { houseRuleGroups, houseRuleRow } from '#app/domain/rules/house-rule-fields.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { tradePractice } from '#app/domain/rules/trade-practice.ts'
 import { formatLength, formatQuantity } from '#app/domain/units.ts'
 
@@ -11,42 +13,33 @@ export interface RuleRow {
   readonly meaning: string
 }
 
+/** What an organisation decides for itself, by group. */
+export const houseRuleRows = (
+  rules: HouseRules,
+): readonly { readonly group: string; readonly rows: readonly RuleRow[] }[] =>
+  Object.entries(houseRuleGroups).map(([group, fields]) => ({
+    group,
+    rows: fields.map((field) => houseRuleRow(field, rules)),
+  }))
+
 const flux = (value: number) =>
   `${formatQuantity(value, 'irradiance', 'metric')} (${formatQuantity(value, 'irradiance', 'imperial')})`
 
 const both = (metres: number) => `${formatLength(metres, 'metric')} (${formatLength(metres, 'imperial')})`
 
-/** What falls on a guest. */
-export const warmthRules: readonly RuleRow[] = [
-  {
-    name: 'Target',
-    figure: `${houseRules.targetLow.value} to ${flux(houseRules.targetHigh.value)}`,
-    source: houseRules.targetLow.source,
-    meaning: 'Irradiance on the horizontal body plane of every seat that counts. A brief may set its own band.',
-  },
-  {
-    name: 'Head caution, long stay',
-    figure: flux(houseRules.headCautionLongStay.value),
-    source: houseRules.headCautionLongStay.source,
-    meaning: `Largest irradiance in any direction at the head, for a stay of ${houseRules.longStayMinutes.value} minutes or more.`,
-  },
-  {
-    name: 'Head caution, short stay',
-    figure: flux(houseRules.headCautionShortStay.value),
-    source: houseRules.headCautionShortStay.source,
-    meaning: 'The same for a shorter stay.',
-  },
+/** What no house changes: published figures, and what follows from them. */
+export const fixedRuleRows: readonly RuleRow[] = [
   {
     name: 'Stop',
-    figure: flux(houseRules.irradianceStop.value),
-    source: houseRules.irradianceStop.source,
+    figure: flux(fixedRules.irradianceStop.value),
+    source: fixedRules.irradianceStop.source,
     meaning: 'A layout that reaches it at body, head or eye height cannot be submitted.',
   },
   {
     name: 'Eyes, long stay',
     figure: `${flux(eyeLimit(3600))}, in the cold up to ${eyeLimitInAir(0)} W/m²`,
-    source: `ICNIRP, 100 W/m² beyond 1,000 s; about 400 W/m² at 0 °C and 300 at 10 °C (from memory); ${houseRules.eyeRelaxedBelow.source}`,
-    meaning: `Near infrared, 0.78 to 3 µm, at the eye of a guest who looks level. At 15 °C: ${Math.round(eyeLimitInAir(15))} W/m², at ${houseRules.eyeRelaxedBelow.value} °C and warmer the published figure. Advice.`,
+    source: `ICNIRP, 100 W/m² beyond 1,000 s; about 400 W/m² at 0 °C and 300 at 10 °C (from memory); ${fixedRules.eyeRelaxedBelow.source}`,
+    meaning: `Near infrared, 0.78 to 3 µm, at the eye of a guest who looks level. At 15 °C: ${Math.round(eyeLimitInAir(15))} W/m², at ${fixedRules.eyeRelaxedBelow.value} °C and warmer the published figure. Advice.`,
   },
   {
     name: 'Eyes, short stay',
@@ -55,81 +48,10 @@ export const warmthRules: readonly RuleRow[] = [
     meaning: 'The same for a stay of t seconds, up to 1,000; the relaxed figure where that is greater.',
   },
   {
-    name: 'Spread and overlap',
-    figure: flux(houseRules.overlapThreshold.value),
-    source: houseRules.overlapThreshold.source,
-    meaning: 'Spread: the area where one heater alone gives it. Overlap: where two or more each alone do.',
-  },
-]
-
-/** How heaters hang, what they are fed with and what weather they stand. */
-export const hangingRules: readonly RuleRow[] = [
-  {
-    name: 'Tolerance of a size nobody named',
-    figure: `± ${formatLength(houseRules.tolerance.value, 'metric')}`,
-    source: houseRules.tolerance.source,
-    meaning: 'Counts for every coordinate that no measured size decides. Placed heights have none.',
-  },
-  {
-    name: 'Tolerance of a size by its source',
-    figure: [
-      `laser ± ${formatLength(houseRules.toleranceLaser.value, 'metric')}`,
-      `tape ± ${formatLength(houseRules.toleranceTape.value, 'metric')}`,
-      `drawing ± ${formatLength(houseRules.toleranceDrawing.value, 'metric')}`,
-      `photo ${100 * houseRules.tolerancePhotoShare.value} %, at least ± ${formatLength(houseRules.tolerancePhotoLeast.value, 'metric')}`,
-      `told or guessed ± ${100 * houseRules.toleranceGuessShare.value} %`,
-    ].join(', '),
-    source: houseRules.toleranceLaser.source,
-    meaning:
-      'Taken when a source is named, until somebody says better. Told and guessed sizes stay visible as assumed.',
-  },
-  {
-    name: 'Chain beside its member',
-    figure: formatLength(houseRules.chainSidewaysLimit.value, 'metric'),
-    source: houseRules.chainSidewaysLimit.source,
-    meaning: 'How far sideways of the member an eye may be for a chain to hang plumb.',
-  },
-  {
-    name: 'Splayed hanger, reach',
-    figure: formatLength(houseRules.splayReach.value, 'metric'),
-    source: houseRules.splayReach.source,
-    meaning: 'How far in plan each member of a splayed pair may be from its eye.',
-  },
-  {
-    name: 'Splayed hanger, angle',
-    figure: `${houseRules.splayAngleDeg.value}° from plumb`,
-    source: houseRules.splayAngleDeg.source,
-    meaning: 'The flattest that a splayed hanger may lie.',
-  },
-  {
     name: 'One point alone',
     figure: 'a whole heater',
-    source: houseRules.safetyLine.source,
+    source: fixedRules.safetyLine.source,
     meaning: 'What a suspension point should hold where its load is known, should the other hanger let go.',
-  },
-  {
-    name: 'Supply above rated voltage',
-    figure: `× ${houseRules.supplyOverRated.value}`,
-    source: houseRules.supplyOverRated.source,
-    meaning: 'An option whose rated voltage the supply passes by more than this may not be used.',
-  },
-  {
-    name: 'Ingress protection, open sky',
-    figure: `second numeral ≥ ${houseRules.ingressOpenSky.value}`,
-    source: houseRules.ingressOpenSky.source,
-    meaning: 'And a location note that allows rain. The same under a roof that opens.',
-  },
-  {
-    name: 'Ingress protection, closed cover',
-    figure: `second numeral ≥ ${houseRules.ingressUnderCover.value}`,
-    source: houseRules.ingressUnderCover.source,
-    meaning: 'A recess box hangs under a closed cover only. Without data: cannot tell.',
-  },
-  {
-    name: 'Bright glow near a step',
-    figure: formatLength(houseRules.glowNearStep.value, 'metric'),
-    source: houseRules.glowNearStep.source,
-    meaning: 'In plan, from a model of bright glow to where the level changes. Advice.',
   },
   {
     name: 'Wind on a heater at a pole',

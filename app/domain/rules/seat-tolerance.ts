@@ -1,6 +1,5 @@
-import { seatTolerance, type TolerancedFigure } from '#app/domain/comfort/uncertainty.ts'
+import { fluxTolerances, seatTolerance, type TolerancedFigure } from '#app/domain/comfort/uncertainty.ts'
 import type { LayoutCheck } from '#app/domain/rules/check.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
 import type { Seat } from '#app/domain/site/site.ts'
 import { shiftsOf } from '#app/domain/site/tolerance.ts'
 
@@ -12,18 +11,18 @@ const steepest = 4
 
 /** Tolerance of a seat's figure from the sizes that place the seat, W/m²; null when it cannot be told. */
 export const toleranceOfSeat = (check: LayoutCheck, seat: Seat, figure: TolerancedFigure): number | null =>
-  seatTolerance(check, seat, figure, 'seat')?.total ?? null
+  seatTolerance(check, seat, figure, 'seat', fluxTolerances(check.house.rules))?.total ?? null
 
 /** Whether the sizes that place the seat could bring a figure to the limit: else its tolerance need not be found. */
 export function mayReach(
-  { site }: LayoutCheck,
+  { site, house }: LayoutCheck,
   seat: Seat,
   { quantity }: TolerancedFigure,
   value: number,
   limit: number,
 ): boolean {
   const height = quantity === 'head' ? 'headHeight' : 'bodyHeight'
-  const shifts = shiftsOf(site, { of: 'seat', id: seat.id }, ['x', 'y', height], houseRules.tolerance.value)
+  const shifts = shiftsOf(site, { of: 'seat', id: seat.id }, ['x', 'y', height], house.rules.toleranceUnstated)
   const most = steepest * Math.hypot(...shifts.flatMap(({ by }) => by))
   return Math.abs(limit - value) <= most * Math.max(limit, value)
 }

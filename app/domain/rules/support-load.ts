@@ -1,7 +1,7 @@
 import { pointLoads, type PointLoad } from '#app/domain/layout/support-loads.ts'
 import { findingOf, heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { fixedRules } from '#app/domain/rules/fixed-rules.ts'
 
 /**
  * The load at each suspension point is not over what its support allows. What a support allows is often not known, and
@@ -47,7 +47,7 @@ type Judged = PointLoad & Carrier
 function aloneTooMuch(check: HeaterCheck, judged: readonly Judged[]): Finding | null {
   const over = judged.find(({ alone, allowed }) => allowed !== null && alone > allowed + 1e-9)
   if (!over || over.allowed === null) return null
-  const rule = heaterRule(check, 'support-load-alone', 'soft', 'N', houseRules.safetyLine.source)
+  const rule = heaterRule(check, 'support-load-alone', 'soft', 'N', fixedRules.safetyLine.source)
   return findingOf(rule, 'fails', {
     title: `${over.name} does not allow all of it at one point`,
     value: over.alone,

@@ -2,8 +2,9 @@ import { splayAngleDeg } from '#app/domain/layout/splayed-pair.ts'
 import type { Support, SupportReason } from '#app/domain/layout/supports.ts'
 import { findingOf, heaterRule, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
-import { formatLength } from '#app/domain/units.ts'
+import { houseFigure } from '#app/domain/rules/house-rules.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
+import { formatLength, type DisplayUnits } from '#app/domain/units.ts'
 
 /** A splayed hanger for one that is unsupported because of its angle; reasons whose figure is a distance. */
 const byDistance: readonly SupportReason[] = ['out of reach', 'an eye has no member', 'held']
@@ -14,14 +15,14 @@ const byDistance: readonly SupportReason[] = ['out of reach', 'an eye has no mem
  * is, so the support's place has no tolerance here.
  */
 export function supported(check: HeaterCheck): Finding {
-  const { support, site, heater } = check
+  const { support, site, heater, house } = check
   const { outcome, reason, nearest, distance, reach } = support
   const flat = reason === 'splayed too flat'
   const rule = heaterRule(check, 'supported', 'hard stop', flat ? '°' : 'm', sourceOf(check))
   const outcomes = { held: 'pass', 'not held': 'fails', 'cannot tell': 'cannot tell' } as const
   const beyond = byDistance.includes(reason)
   const far = nearest && reason !== 'held' ? [[heater.x, heater.y, heater.lowestPoint], [...nearest.point, heater.lowestPoint]] as const : null // prettier-ignore
-  const [value, limit] = flat ? [flattestOf(support), houseRules.splayAngleDeg.value] : [distance, reach]
+  const [value, limit] = flat ? [flattestOf(support), house.rules.splayAngleDeg] : [distance, reach]
   const margin = (flat || beyond) && limit !== null && value !== null ? limit - value : null
   return findingOf(rule, outcomes[outcome], {
     title: titleOf(support, heater.mount),
@@ -29,14 +30,16 @@ export function supported(check: HeaterCheck): Finding {
     limit,
     margin,
     tolerance: flat || beyond ? 0 : null,
-    remedy: reason === 'held' ? null : remedyOf(support, site.displayUnits),
+    remedy: reason === 'held' ? null : remedyOf(support, site.displayUnits, house.rules),
     nearest: far && { from: far[0], to: far[1] },
   })
 }
 
-function sourceOf({ support, heater, model }: HeaterCheck): string | undefined {
-  if (heater.splayed && support.eyes.length > 0) return houseRules.splayReach.source
-  return model.mountReach[heater.mount] === undefined ? houseRules.chainSidewaysLimit.source : undefined
+function sourceOf({ support, heater, model, house: { rules } }: HeaterCheck): string | undefined {
+  if (heater.splayed && support.eyes.length > 0) {
+    return houseFigure(rules, support.reason === 'splayed too flat' ? 'splayAngleDeg' : 'splayReach').source
+  }
+  return model.mountReach[heater.mount] === undefined ? houseFigure(rules, 'chainSideways').source : undefined
 }
 
 /** The largest angle of its splayed hangers from plumb, degrees. */
@@ -73,7 +76,7 @@ function titleOf({ reason, nearest, ids, eyes }: Support, mount: string): string
   return titles[reason]
 }
 
-function remedyOf({ reason, nearest, eyes }: Support, units: 'metric' | 'imperial'): string {
+function remedyOf({ reason, nearest, eyes }: Support, units: DisplayUnits, { chainSideways }: HouseRules): string {
   if (reason === 'tilt not held') return 'Set the tilt to 0°, or choose a mount that holds it.'
   if (reason === 'reach not stated' || reason === 'eyes not stated') return 'Enter it from the manual.'
   if (reason === 'height not known') return 'Enter the height of its underside.'
@@ -81,7 +84,7 @@ function remedyOf({ reason, nearest, eyes }: Support, units: 'metric' | 'imperia
   if (!nearest) return 'Add a support to the site, or choose another mount.'
   const away = formatLength(nearest.distance, units)
   const splayed = eyes.some(({ legs }) => legs) || reason === 'not between members'
-  if (splayed && nearest.distance <= houseRules.chainSidewaysLimit.value) {
+  if (splayed && nearest.distance <= chainSideways) {
     return `It is under ${nearest.name}: hang it plumb, not splayed.`
   }
   if (reason === 'support too low') return `Lower the heater. Nearest is ${nearest.name}, ${away} away.`

@@ -1,16 +1,16 @@
 import { electricalPower } from '#app/domain/heaters/power.ts'
 import { findingOf, heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import { houseFigure } from '#app/domain/rules/house-rules.ts'
 import { figureOfRuleSet } from '#app/domain/rules/sourced-figure.ts'
 
 /**
- * The option ordered is listed for the model, and the supply is not more than 1.1 times its rated voltage (hard stops,
- * house rule); a supply below the rated voltage is soft, with the power that is left.
+ * The option ordered is listed for the model, and the supply is not more above its rated voltage than the house
+ * allows, 1.1 times by default (hard stops); a supply below the rated voltage is soft, with the power that is left.
  */
 export function voltageOffered(check: HeaterCheck): Finding {
-  const { heater, model, brief } = check
-  const overRated = figureOfRuleSet(brief.ruleSet, 'supply-over-rated') ?? houseRules.supplyOverRated
+  const { heater, model, brief, house } = check
+  const overRated = figureOfRuleSet(brief.ruleSet, 'supply-over-rated') ?? houseFigure(house.rules, 'supplyOverRated')
   const rule = heaterRule(check, 'voltage-offered', 'hard stop', 'V', overRated.source)
   if (model.supplyOptions.length === 0) {
     return findingOf(rule, 'cannot tell', { title: 'The manual lists no supply voltage' })

@@ -1,4 +1,4 @@
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { findThing, numberAt, type ThingOf } from '#app/domain/site/dimension.ts'
 import type { Dimension, Site } from '#app/domain/site/site.ts'
 import { usualTolerance } from '#app/domain/site/size-source.ts'
@@ -35,7 +35,7 @@ const keyOf = ({ of, id, coordinate }: Move): string => `${of} ${id} ${coordinat
  * coordinate without a size. Where two sizes could follow, the less known one does. An edit of the sizes themselves is
  * left as it is.
  */
-export function placedByHand(before: Site, after: Site): PlacedByHand {
+export function placedByHand(before: Site, after: Site, rules: HouseRules): PlacedByHand {
   if (after.dimensions !== before.dimensions) return { site: after, followed: [], released: [] }
   const touched = before.dimensions
     .map((dimension) => ({ dimension, decided: decidedBy(dimension, before, after) }))
@@ -51,7 +51,7 @@ export function placedByHand(before: Site, after: Site): PlacedByHand {
   }
   const moved = touched.flatMap(({ decided }) => decided.filter(({ by }) => by !== 0).map(({ move }) => keyOf(move)))
   const wrong = new Set(moved.filter((key) => !explained.has(key)))
-  return withSizesChanged(after, grown, wrong)
+  return withSizesChanged(after, grown, wrong, rules)
 }
 
 /** The coordinates that a size decides and that are still there; none when none of its things was changed. */
@@ -77,7 +77,12 @@ function changeOf(named: readonly Decided[]): number | null {
   return change !== 0 && others.every((other) => Math.abs(other - change) < same) ? change : null
 }
 
-function withSizesChanged(site: Site, grown: ReadonlyMap<string, number>, wrong: ReadonlySet<string>): PlacedByHand {
+function withSizesChanged(
+  site: Site,
+  grown: ReadonlyMap<string, number>,
+  wrong: ReadonlySet<string>,
+  rules: HouseRules,
+): PlacedByHand {
   const followed: { before: Dimension; now: Dimension }[] = []
   const released: Dimension[] = []
   const dimensions = site.dimensions.map((before): Dimension => {
@@ -85,7 +90,7 @@ function withSizesChanged(site: Site, grown: ReadonlyMap<string, number>, wrong:
     const moves = before.moves.filter((move) => move.by === 0 || !wrong.has(keyOf(move)))
     if (moves.length < before.moves.length) released.push(before)
     if (by === undefined) return moves.length < before.moves.length ? { ...before, moves } : before
-    const now = { ...guessed(before, roundLength(before.value + by), site.displayUnits), moves }
+    const now = { ...guessed(before, roundLength(before.value + by), site.displayUnits, rules), moves }
     followed.push({ before, now })
     return now
   })
@@ -93,14 +98,14 @@ function withSizesChanged(site: Site, grown: ReadonlyMap<string, number>, wrong:
 }
 
 /** A size of a value that nobody measured; what was known before stays in its note. */
-function guessed(size: Dimension, value: number, units: DisplayUnits): Omit<Dimension, 'moves'> {
+function guessed(size: Dimension, value: number, units: DisplayUnits, rules: HouseRules): Omit<Dimension, 'moves'> {
   const { id, label, source, note } = size
   const was = `placed by hand; before ${sizeWords(size, units)}`
   return {
     id,
     label,
     value,
-    tolerance: Math.max(size.tolerance, usualTolerance('guessed', value), houseRules.tolerance.value),
+    tolerance: Math.max(size.tolerance, usualTolerance('guessed', value, rules), rules.toleranceUnstated),
     source: 'guessed',
     note: source === 'guessed' ? note : [was, ...(note ? [note] : [])].join('; ').slice(0, longestNote),
   }
@@ -110,7 +115,11 @@ const sizeWords = ({ value, tolerance, source }: Dimension, units: DisplayUnits)
   `${formatLength(value, units)} ± ${formatLength(tolerance, units)}, ${source}`
 
 /** What became of the sizes, in one or two short sentences; null when none was touched. */
-export function placedInWords({ followed, released }: PlacedByHand, units: DisplayUnits): string | null {
+export function placedInWords(
+  { followed, released }: PlacedByHand,
+  units: DisplayUnits,
+  { toleranceUnstated }: HouseRules,
+): string | null {
   const sentences = [
     ...followed.slice(0, 1).map(({ before, now }) => {
       const more = followed.length > 1 ? `, and ${followed.length - 1} more like it` : ''
@@ -119,7 +128,7 @@ export function placedInWords({ followed, released }: PlacedByHand, units: Displ
     ...released.slice(0, 1).map(({ label }) => {
       const more = released.length - 1
       const who = more > 0 ? `${label} and ${more} more ${more === 1 ? 'size' : 'sizes'}` : label
-      const counts = formatLength(houseRules.tolerance.value, units)
+      const counts = formatLength(toleranceUnstated, units)
       return `Placed by hand, counts as ± ${counts}: ${who} no longer ${more > 0 ? 'decide' : 'decides'} it.`
     }),
   ]

@@ -1,22 +1,22 @@
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Dimension, Site, SizeSource } from '#app/domain/site/site.ts'
 import { formatLength, roundLength, type DisplayUnits } from '#app/domain/units.ts'
 
 /** The tolerance of a size by where it comes from, m, until a better one is known (house rules). */
-export function usualTolerance(source: SizeSource, value: number): number {
+export function usualTolerance(source: SizeSource, value: number, rules: HouseRules): number {
   const size = Math.abs(value)
   switch (source) {
     case 'laser':
-      return houseRules.toleranceLaser.value
+      return rules.toleranceLaser
     case 'tape':
-      return houseRules.toleranceTape.value
+      return rules.toleranceTape
     case 'drawing':
-      return houseRules.toleranceDrawing.value
+      return rules.toleranceDrawing
     case 'photo':
-      return roundLength(Math.max(houseRules.tolerancePhotoShare.value * size, houseRules.tolerancePhotoLeast.value))
+      return roundLength(Math.max(rules.tolerancePhotoShare * size, rules.tolerancePhotoLeast))
     case 'told':
     case 'guessed':
-      return roundLength(houseRules.toleranceGuessShare.value * size)
+      return roundLength(rules.toleranceGuessShare * size)
   }
 }
 

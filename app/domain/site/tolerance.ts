@@ -1,4 +1,3 @@
-import { houseRules } from '#app/domain/rules/house-rules.ts'
 import { findThing, moveCoordinate, moveDimension, type Coordinate, type ThingOf } from '#app/domain/site/dimension.ts'
 import { listOf } from '#app/domain/site/edits.ts'
 import type { Dimension, Site } from '#app/domain/site/site.ts'
@@ -100,9 +99,9 @@ export function bareSizesOf(site: Site, about: ThingOf): string[] {
 const doubtsOfThing = new WeakMap<Site, Map<string, readonly Doubt[]>>()
 
 /** The doubts that touch one thing: its dimensions, and each of its sizes that no dimension moves. Kept per site. */
-function doubtsAbout(site: Site, about: ThingOf): readonly Doubt[] {
+function doubtsAbout(site: Site, about: ThingOf, bareTolerance: number): readonly Doubt[] {
   const known = keptFor(doubtsOfThing, site)
-  const key = keyOf(about)
+  const key = `${keyOf(about)} ± ${bareTolerance}`
   const found = known.get(key)
   if (found) return found
   const doubts = [
@@ -110,7 +109,7 @@ function doubtsAbout(site: Site, about: ThingOf): readonly Doubt[] {
       const lever = Math.hypot(...moves.map(({ by }) => by))
       return { ...dimensionDoubt(site, dimension), most: lever * dimension.tolerance }
     }),
-    ...bareSizesOf(site, about).map((coordinate) => coordinateDoubt(site, { ...about, coordinate })),
+    ...bareSizesOf(site, about).map((coordinate) => coordinateDoubt(site, { ...about, coordinate }, bareTolerance)),
   ]
   known.set(key, doubts)
   return doubts
@@ -131,8 +130,7 @@ function dimensionDoubt(site: Site, dimension: Dimension): Omit<Doubt, 'most'> {
   return doubt
 }
 
-function coordinateDoubt(site: Site, coordinate: Coordinate): Doubt {
-  const tolerance = houseRules.tolerance.value
+function coordinateDoubt(site: Site, coordinate: Coordinate, tolerance: number): Doubt {
   return {
     key: `${coordinate.of} ${coordinate.id} ${coordinate.coordinate}`,
     most: tolerance,
@@ -156,14 +154,15 @@ export function thingsOf(site: Site): ThingOf[] {
 
 /**
  * Combined tolerance of a figure: the root of the sum of squares of its change for each uncertain size moved by its
- * tolerance (the larger change of the two ways). Sizes are the site's dimensions and, at ± 25 mm, each coordinate that
- * no dimension moves; placed heights have none. `things` names what the figure rests on: without it every thing of
- * the site is moved, which takes long on a large one. A way in which the figure is null does not count; null when it is
+ * tolerance (the larger change of the two ways). Sizes are the site's dimensions and, at ± `bareTolerance`, each
+ * coordinate that no dimension moves; placed heights have none. `things` names what the figure rests on: without it
+ * every thing of the site is moved, which takes long on a large one. A way in which the figure is null does not count; null when it is
  * null on the site as it is.
  */
 export function toleranceOf(
   figure: (site: Site) => number | null,
   site: Site,
+  bareTolerance: number,
   things: readonly ThingOf[] = thingsOf(site),
 ): number | null {
   const nominal = figure(site)
@@ -171,7 +170,7 @@ export function toleranceOf(
   const counted = new Set<string>()
   let squares = 0
   for (const about of things) {
-    for (const doubt of doubtsAbout(site, about)) {
+    for (const doubt of doubtsAbout(site, about, bareTolerance)) {
       if (counted.has(doubt.key)) continue
       counted.add(doubt.key)
       const sites = doubt.sites()
@@ -184,6 +183,6 @@ export function toleranceOf(
 }
 
 /** The most that any figure of unit slope on a thing's points could change: a bound of `toleranceOf`, m. */
-export function largestTolerance(site: Site, about: ThingOf): number {
-  return Math.hypot(...doubtsAbout(site, about).map(({ most }) => most))
+export function largestTolerance(site: Site, about: ThingOf, bareTolerance: number): number {
+  return Math.hypot(...doubtsAbout(site, about, bareTolerance).map(({ most }) => most))
 }

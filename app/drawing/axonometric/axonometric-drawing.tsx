@@ -1,6 +1,7 @@
 import { memo, useMemo } from 'react'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { Vec2, Vec3 } from '#app/domain/vector.ts'
 import { PieceDrawing } from '#app/drawing/axonometric/piece-drawing.tsx'
@@ -32,6 +33,7 @@ export interface AxonometricProps {
   readonly site: Site
   readonly layout: Pick<Layout, 'heaters'>
   readonly models: ReadonlyMap<string, HeaterModel>
+  readonly rules: HouseRules
   /** The map, laid on the floor; null without heat and while it is computed. */
   readonly picture: HeatPicture | null
   readonly quantity: QuantityScale
@@ -43,10 +45,10 @@ export interface AxonometricProps {
 
 /** The drawing as a group: floor with its heat, then everything from the back to the front, then what is see-through. */
 export const Axonometric = memo(function Axonometric(props: AxonometricProps) {
-  const { site, layout, models, corner, pen, width, height } = props
+  const { site, layout, models, rules, corner, pen, width, height } = props
   const { pieces, front, order, view, withoutGuests } = useMemo(() => {
     const projection = projectionFrom(corner)
-    const all = piecesOf(site, layout, models, projection.toEye)
+    const all = piecesOf(site, layout, models, rules, projection.toEye)
     const withoutGuests = all.pieces.length > mostPieces
     const kept = withoutGuests ? all.pieces.filter(({ look }) => look !== 'seat') : all.pieces
     const painted = paintingOrder(kept.map(({ solid }) => solid), projection) // prettier-ignore
@@ -61,7 +63,7 @@ export const Axonometric = memo(function Axonometric(props: AxonometricProps) {
       order: painted.flatMap((i) => kept[i] ?? []),
       view: axonometricView(points, corner, { width, height, margin: 14 }),
     }
-  }, [site, layout, models, corner, width, height])
+  }, [site, layout, models, rules, corner, width, height])
   return (
     <g fontFamily={fontFamily} strokeLinejoin="round">
       <Floor {...props} view={view} />

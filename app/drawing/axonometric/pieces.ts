@@ -2,6 +2,7 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { bodyOf } from '#app/domain/layout/body.ts'
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
 import { coverHeightAt } from '#app/domain/site/cover.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { convexPieces } from '#app/domain/site/geometry.ts'
 import { undersideAt } from '#app/domain/site/member.ts'
 import type { Seat, Shape, Site, Table, Wall } from '#app/domain/site/site.ts'
@@ -89,9 +90,9 @@ function seatSolid({ x, y, headHeight }: Seat): DrawnSolid {
   return prismOf([[x - guest, y - guest], [x + guest, y - guest], [x + guest, y + guest], [x - guest, y + guest]], 0, headHeight + 0.1) // prettier-ignore
 }
 
-function heaterPieces(site: Site, heater: MountedHeater, model: HeaterModel): Piece[] {
+function heaterPieces(site: Site, heater: MountedHeater, model: HeaterModel, rules: HouseRules): Piece[] {
   const { centre, u, v, w, half } = bodyOf(heater, model)
-  const hangers = hangersOf({ heater, model, site }).map(({ from, to }, i): Piece => ({
+  const hangers = hangersOf({ heater, model, site, rules }).map(({ from, to }, i): Piece => ({
     key: `hanger ${heater.id} ${i}`,
     look: 'hanger',
     heater,
@@ -106,6 +107,7 @@ export function piecesOf(
   site: Site,
   layout: Pick<Layout, 'heaters'>,
   models: ReadonlyMap<string, HeaterModel>,
+  rules: HouseRules,
   toEye: Vec3,
 ): { readonly pieces: Piece[]; readonly front: DrawnSolid[] } {
   const pieces: Piece[] = [
@@ -140,7 +142,7 @@ export function piecesOf(
     ...site.seats.map((seat): Piece => ({ key: `seat ${seat.id}`, look: 'seat', seat, solid: seatSolid(seat) })),
     ...layout.heaters.flatMap((heater) => {
       const model = models.get(heater.model)
-      return model ? heaterPieces(site, heater, model) : []
+      return model ? heaterPieces(site, heater, model, rules) : []
     }),
   ] // prettier-ignore
   const front = site.walls.filter((wall) => isInFront(wall, toEye)).map((wall) => wallSolid(site, wall))

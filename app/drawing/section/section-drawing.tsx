@@ -1,6 +1,7 @@
 import { Fragment, memo } from 'react'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout, MountedHeater } from '#app/domain/layout/layout.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 import { HeatFill, Isolines } from '#app/drawing/heat/heat-fill.tsx'
@@ -52,6 +53,8 @@ export interface SectionProps {
   readonly layout: Layout
   readonly models: ReadonlyMap<string, HeaterModel>
   readonly view: SectionView
+  /** Of the house: what hangs from what, and how exact unstated sizes are. */
+  readonly rules: HouseRules
   readonly pen: Pen
   readonly quantity: QuantityScale
   /** From `sectionPicture`; null while it is computed and without heaters. */
@@ -90,7 +93,7 @@ const asRange = (ids: readonly string[]): string => (ids.length > 2 ? `${ids[0]}
 
 /** The section as a group, fill first, figures last. */
 function Section(props: SectionProps) {
-  const { name, site, layout, models, view, pen, selected = new Set<string>() } = props
+  const { name, site, layout, models, rules, view, pen, selected = new Set<string>() } = props
   const covers = cutCovers(site, view)
   const known = (heater: MountedHeater) => {
     const model = models.get(heater.model)
@@ -135,19 +138,19 @@ function Section(props: SectionProps) {
       <g opacity={0.55}>
         {behind.map(({ heater, model }) => (
           <Fragment key={heater.id}>
-            <SectionHangers {...{ heater, model, site, view, pen }} />
+            <SectionHangers {...{ heater, model, site, rules, view, pen }} />
             <SectionHeater {...{ heater, model, site, view, pen }} selected={selected.has(heater.id)} />
           </Fragment>
         ))}
       </g>
       {heaters.map(({ heater, model }) => (
-        <SectionHangers key={heater.id} {...{ heater, model, site, view, pen }} />
+        <SectionHangers key={heater.id} {...{ heater, model, site, rules, view, pen }} />
       ))}
       {heaters.map(({ heater, model }) => (
         <SectionHeater key={heater.id} {...{ heater, model, site, view, pen }} selected={selected.has(heater.id)} />
       ))}
       {shownHeight ? <HeightOf heater={shownHeight.heater} site={site} view={view} pen={pen} /> : null}
-      <SectionHeights {...{ site, covers, view, pen }} />
+      <SectionHeights {...{ site, covers, view, pen }} bareTolerance={rules.toleranceUnstated} />
       {props.nearest ? <SectionNearest pairs={props.nearest} {...{ site, layout, view, pen }} /> : null}
     </g>
   )

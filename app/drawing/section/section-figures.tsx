@@ -77,11 +77,13 @@ export function SectionHeights({
   covers,
   view,
   pen,
+  bareTolerance,
 }: {
   site: Site
   covers: readonly CutCover[]
   view: SectionView
   pen: Pen
+  bareTolerance: number
 }) {
   return covers.map((cut) => {
     const ends = [cut.from, cut.to].map((end) => ({ ...end, x: onSection(view, end.along, 0)[0] }))
@@ -92,7 +94,7 @@ export function SectionHeights({
     const [mx, my] = onSection(view, (a.along + b.along) / 2, (a.z + b.z) / 2)
     const textOf = (end: { along: number; z: number }): string => {
       const inner = end.along + (end === left ? 1 : -1) * 1e-4
-      const tolerance = coverTolerance(site, cut, view, inner)
+      const tolerance = coverTolerance(site, cut, view, inner, bareTolerance)
       const size = dimensionText(end.z, site.displayUnits)
       if (tolerance === null || tolerance === 0) return size
       return `${size} ± ${site.displayUnits === 'metric' ? tolerance.toFixed(2) : `${Math.round(tolerance / 0.0127) / 2}″`}`

@@ -1,7 +1,8 @@
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { bodyOf, elementCentres, type Body } from '#app/domain/layout/body.ts'
-import { hangScheduleOf } from '#app/domain/layout/hanging.ts'
+import { hungPlaces } from '#app/domain/layout/hanging.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { coverHeightAt } from '#app/domain/site/cover.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { add, scale, type Vec2, type Vec3 } from '#app/domain/vector.ts'
@@ -55,6 +56,7 @@ interface HeaterProps {
   readonly heater: MountedHeater
   readonly model: HeaterModel
   readonly site: Site
+  readonly rules: HouseRules
   readonly view: SectionView
   readonly pen: Pen
 }
@@ -67,13 +69,18 @@ interface HangerLine {
 }
 
 /** What holds a heater: hangers up to its member or the cover, or an arm to its wall or pole. */
-export function hangersOf({ heater, model, site }: Pick<HeaterProps, 'heater' | 'model' | 'site'>): HangerLine[] {
-  const schedule = hangScheduleOf(site, heater, model)
-  if (schedule)
-    return schedule.hangers.map(({ eye, anchor, drop, sideways }) => ({
+export function hangersOf({
+  heater,
+  model,
+  site,
+  rules,
+}: Pick<HeaterProps, 'heater' | 'model' | 'site' | 'rules'>): HangerLine[] {
+  const hung = hungPlaces(site, heater, model, rules)
+  if (hung)
+    return hung.map(({ eye, anchor, underside, sideways }) => ({
       from: eye,
       to: anchor,
-      drop: sideways > 0 ? null : drop,
+      drop: sideways > 0 ? null : underside - eye[2],
     }))
   if (heater.mount === 'recess box') return []
   const body = bodyOf(heater, model)
@@ -136,7 +143,13 @@ export function SectionHangers(props: HeaterProps) {
 }
 
 /** A heater's body as it looks along the direction of view, its elements as ember lines or dots, its tilt in degrees. */
-export function SectionHeater({ heater, model, view, pen, selected }: HeaterProps & { selected: boolean }) {
+export function SectionHeater({
+  heater,
+  model,
+  view,
+  pen,
+  selected,
+}: Omit<HeaterProps, 'rules'> & { selected: boolean }) {
   const body = bodyOf(heater, model)
   const outline = hull(cornersOf(body).map((corner) => projected(view, corner)))
   const xs = outline.map((p) => p[0])

@@ -39,13 +39,20 @@ export function cutCovers(site: Site, { cut }: SectionView): CutCover[] {
 }
 
 /** Tolerance of a cover's height over a place of the section, m; null when it cannot be told. */
-export const coverTolerance = (site: Site, { cover }: CutCover, view: SectionView, along: number): number | null =>
+export const coverTolerance = (
+  site: Site,
+  { cover }: CutCover,
+  view: SectionView,
+  along: number,
+  bareTolerance: number,
+): number | null =>
   toleranceOf(
     (moved) => {
       const same = moved.covers.find(({ id }) => id === cover.id)
       return same ? coverHeightAt(same, ...pointOfCut(view.cut, along)) : null
     },
     site,
+    bareTolerance,
     [{ of: 'cover', id: cover.id }],
   )
 

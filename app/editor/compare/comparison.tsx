@@ -5,7 +5,8 @@ import { listPriceOf } from '#app/domain/comparison/list-price.ts'
 import { comparisonRows, type ComparisonTerms } from '#app/domain/comparison/what-differs.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import type { House } from '#app/domain/rules/house.ts'
+import { houseFigure } from '#app/domain/rules/house-rules.ts'
 import { planesOf } from '#app/domain/site/planes.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength, formatQuantity } from '#app/domain/units.ts'
@@ -39,6 +40,7 @@ interface ComparisonProps {
   readonly brief: Brief
   /** Those that the variants use. */
   readonly models: readonly HeaterModel[]
+  readonly house: House
   /** Two to four; the same array for the same variants. */
   readonly chosen: readonly ChosenVariant[]
   /** The way to compare others. */
@@ -58,7 +60,7 @@ const sideBySide = (site: Site, width: number): boolean =>
 type Show = 'irradiance' | 'overlap' | 'difference'
 
 /** Variants side by side on one scale: maps under one view and pointer, seat by seat, and what differs. */
-export function Comparison({ site, brief, models: list, chosen, picker }: ComparisonProps) {
+export function Comparison({ site, brief, models: list, house, chosen, picker }: ComparisonProps) {
   const [head, setHead] = useState(false)
   const [show, setShow] = useState<Show>('irradiance')
   const [attempt, setAttempt] = useState(0)
@@ -74,10 +76,10 @@ export function Comparison({ site, brief, models: list, chosen, picker }: Compar
   const layouts = useMemo(() => chosen.map(({ title, heaters }) => ({ title, heaters })), [chosen])
   const planes = useMemo(() => planesOf(site), [site])
   const plane = head ? planes.head : planes.body
-  const threshold = houseRules.overlapThreshold.value
+  const { value: threshold, source } = houseFigure(house.rules, 'overlapThreshold')
   const subject = useMemo(
-    () => ({ site, brief, models, layouts, plane, threshold }),
-    [site, brief, models, layouts, plane, threshold],
+    () => ({ site, brief, models, house, layouts, plane }),
+    [site, brief, models, house, layouts, plane],
   )
   const { variants: maps, state } = useComparison(subject, attempt)
   const terms: ComparisonTerms = { units: site.displayUnits, target: brief.target, overlapThreshold: threshold }
@@ -185,7 +187,7 @@ export function Comparison({ site, brief, models: list, chosen, picker }: Compar
       <MapState state={state} maps={maps} onRetry={() => setAttempt((before) => before + 1)} />
       <p className="pb-4 text-xs text-ink-3">
         Calculated, not a thermal photograph. Overlap: the area where two or more heaters each alone give{' '}
-        {formatQuantity(threshold, 'irradiance', 'metric')} or more, {houseRules.overlapThreshold.source}.
+        {formatQuantity(threshold, 'irradiance', 'metric')} or more, {source}.
       </p>
       <div className="grid items-start gap-x-7 gap-y-6 desk:grid-cols-[minmax(0,1.6fr)_minmax(0,1fr)]">
         <div className="min-w-0 space-y-5">

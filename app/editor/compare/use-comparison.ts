@@ -6,6 +6,7 @@ import type { Brief } from '#app/domain/brief/brief.ts'
 import type { MapQuantity } from '#app/domain/flux/map-question.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { MapAnswer } from '#app/drawing/heat/map-picture.ts'
 import { differenceScale, irradianceScale, overlapScale, type QuantityScale } from '#app/drawing/heat/quantity.ts'
@@ -17,10 +18,10 @@ export interface ComparisonSubject {
   readonly site: Site
   readonly brief: Brief
   readonly models: ReadonlyMap<string, HeaterModel>
+  readonly house: House
   readonly layouts: readonly Layout[]
-  /** Height of the plane, m, and the threshold of overlap, W/m². */
+  /** Height of the plane, m. */
   readonly plane: number
-  readonly threshold: number
 }
 
 /** What is known of one variant so far; null: still being worked out. `flux` stays null without heat to map. */
@@ -83,13 +84,14 @@ type Update = (more: Partial<ComparedMaps>) => void
 /** Irradiance and overlap of one variant; the second is made of the first's kept parts. */
 async function answerMaps(
   remote: Remote<FluxWorker>,
-  { site, brief, models, layouts, plane, threshold }: ComparisonSubject,
+  { site, brief, models, layouts, plane, house }: ComparisonSubject,
   i: number,
   update: Update,
 ): Promise<void> {
   const layout = layouts[i]
   const emitters = layout ? emittersOf(layout, models) : []
   if (emitters.length === 0) return update({ overlapArea: 0 })
+  const threshold = house.rules.overlapThreshold
   const shared = { emitters, floor: site.floor, z: plane, cell: cellOf(site, 'sharp') }
   const asked = (quantity: MapQuantity, { levels, edges, labelled }: QuantityScale) =>
     remote.answerMap({ ...shared, quantity, levels, edges, written: labelled })
@@ -100,12 +102,12 @@ async function answerMaps(
 
 async function answerFigures(
   remote: Remote<FluxWorker>,
-  { site, brief, models, layouts }: ComparisonSubject,
+  { site, brief, models, layouts, house }: ComparisonSubject,
   i: number,
   update: Update,
 ): Promise<void> {
   const layout = layouts[i]
-  if (layout) update({ figures: await remote.answerFigures({ site, brief, layout, models }) })
+  if (layout) update({ figures: await remote.answerFigures({ site, brief, layout, models, house }) })
 }
 
 async function answerDifferences(

@@ -1,9 +1,10 @@
 import { useMemo, useState, type ReactNode } from 'react'
 import type { FiguresQuestion } from '#app/domain/comparison/layout-figures.ts'
-import { measureLines } from '#app/domain/doubt/in-words.ts'
+import { measureLines, smallLength } from '#app/domain/doubt/in-words.ts'
 import { rankEffects, type RankedBy } from '#app/domain/doubt/ranking.ts'
 import { settlings } from '#app/domain/doubt/settling.ts'
 import type { SizeEffects } from '#app/domain/doubt/size-effects.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { SizeSource } from '#app/domain/site/site.ts'
 import { Choice } from '#app/components/choice.tsx'
 import { CheckField } from '#app/components/field.tsx'
@@ -41,6 +42,7 @@ export function DoubtfulSizes({ question, variant, listTitle, photoLink }: Doubt
   const [range, setRange] = useState<keyof typeof ranges>('photo')
   const [error, setError] = useState(0)
   const units = question.site.displayUnits
+  const { rules } = question.house
   const sources = ranges[range]
   const doubt = useDoubt({ question, unstated, sources, error })
   const found = doubt.effects.made
@@ -68,9 +70,9 @@ export function DoubtfulSizes({ question, variant, listTitle, photoLink }: Doubt
             onStop={() => doubt.stop('effects')}
             onRetry={doubt.retry}
           />
-          {found && <Effects found={found} {...{ by, units, photoLink }} />}
+          {found && <Effects found={found} {...{ by, units, rules, photoLink }} />}
           <CheckField
-            label="Also what nobody stated, at ± 25 mm; this takes longer"
+            label={`Also what nobody stated, at ± ${smallLength(rules.toleranceUnstated, units)}; this takes longer`}
             checked={unstated}
             onChange={(event) => setUnstated(event.target.checked)}
             className="mt-2"
@@ -80,7 +82,7 @@ export function DoubtfulSizes({ question, variant, listTitle, photoLink }: Doubt
           )}
         </section>
         <div className="border-t border-ink pt-2 print:border-0">
-          {found && <List found={found} {...{ units, listTitle }} />}
+          {found && <List found={found} {...{ units, rules, listTitle }} />}
         </div>
         <section aria-labelledby="wrong-title" className="border-t border-ink pt-2 desk:col-span-2 print:hidden">
           <div className="mb-2 flex flex-wrap items-center gap-x-4 gap-y-2">
@@ -136,16 +138,18 @@ function Effects({
   found,
   by,
   units,
+  rules,
   photoLink,
 }: {
   found: SizeEffects
   by: RankedBy
   units: FiguresQuestion['site']['displayUnits']
+  rules: HouseRules
   photoLink: PhotoLink
 }) {
   // prettier-ignore
-  const ranked = useMemo(() => rankEffects(found.effects, found.nominal, by), [found, by])
-  const settled = useMemo(() => settlings(found.nominal.checks, found.effects), [found])
+  const ranked = useMemo(() => rankEffects(found.effects, found.nominal, by, rules), [found, by, rules])
+  const settled = useMemo(() => settlings(found.nominal.checks, found.effects, rules.toleranceLaser), [found, rules])
   if (ranked.length === 0)
     return <p className="text-ink-2">No size of this site has a tolerance yet. Give them on the Site page.</p>
   return <EffectsList {...{ found, ranked, settled, units, photoLink }} />
@@ -154,16 +158,21 @@ function Effects({
 function List({
   found,
   units,
+  rules,
   listTitle,
 }: {
   found: SizeEffects
   units: FiguresQuestion['site']['displayUnits']
+  rules: HouseRules
   listTitle: string
 }) {
   // prettier-ignore
   const lines = useMemo(
-    () => measureLines(found.effects, found.nominal, settlings(found.nominal.checks, found.effects), units),
-    [found, units],
+    () => {
+      const settled = settlings(found.nominal.checks, found.effects, rules.toleranceLaser)
+      return measureLines(found.effects, found.nominal, settled, { units, rules })
+    },
+    [found, units, rules],
   )
   return <MeasureList lines={lines} title={listTitle} />
 }

@@ -2,7 +2,7 @@ import type { HungHeater } from '#app/domain/layout/hang-sheet.ts'
 import { hangerTolerance } from '#app/domain/layout/hanger-tolerance.ts'
 import type { Hanger, HangSchedule } from '#app/domain/layout/hanging.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
-import type { HangingData } from '#app/domain/layout/hanging-data.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength } from '#app/domain/units.ts'
 import { HangDrawings } from '#app/drawing/hang/hang-drawing.tsx'
@@ -23,13 +23,13 @@ import {
 interface HungHeaterProps {
   readonly hung: HungHeater
   readonly site: Site
-  readonly data: HangingData
+  readonly house: House
   /** Why it may not be hung as drawn: the title of its finding. */
   readonly unsupported: string | null
 }
 
 /** One heater as it is hung: its drawing, its hangers and how level they leave it. */
-export function HungHeaterSection({ hung, site, data, unsupported }: HungHeaterProps) {
+export function HungHeaterSection({ hung, site, house, unsupported }: HungHeaterProps) {
   const { heater, model, support, schedule } = hung
   const units = site.displayUnits
   return (
@@ -65,7 +65,7 @@ export function HungHeaterSection({ hung, site, data, unsupported }: HungHeaterP
             />
           </div>
           <div className="min-w-0 flex-1 basis-120 print:basis-0 print:text-2xs print:[&_td]:px-0.5 print:[&_th]:px-0.5">
-            <Hangers {...{ hung, site, data, schedule }} />
+            <Hangers {...{ hung, site, house, schedule }} />
             <Levelness {...{ schedule, model, mount: heater.mount }} />
             {asideText(hung, units) && <p className="mt-1 text-ink-2">{asideText(hung, units)}</p>}
             {schedule.hangers.map((hanger, i) => {
@@ -86,11 +86,11 @@ export function HungHeaterSection({ hung, site, data, unsupported }: HungHeaterP
 interface HangersProps {
   readonly hung: HungHeater
   readonly site: Site
-  readonly data: HangingData
+  readonly house: House
   readonly schedule: HangSchedule
 }
 
-function Hangers({ hung: { heater }, site, data, schedule }: HangersProps) {
+function Hangers({ hung: { heater }, site, house, schedule }: HangersProps) {
   const units = site.displayUnits
   const cut = (of: (hanger: Hanger) => number) => (hanger: Hanger) => cutText(of(hanger), units)
   const splayed = schedule.hangers.some(({ sideways }) => sideways > 0)
@@ -109,7 +109,7 @@ function Hangers({ hung: { heater }, site, data, schedule }: HangersProps) {
       heading: 'Underside',
       numeric: true,
       cell: (hanger) => {
-        const tolerance = hangerTolerance(site, hanger)
+        const tolerance = hangerTolerance(site, hanger, house.rules.toleranceUnstated)
         return `${formatLength(hanger.underside, units)}${tolerance ? ` ± ${cutText(tolerance, units)}` : ''}`
       },
     },
@@ -120,7 +120,7 @@ function Hangers({ hung: { heater }, site, data, schedule }: HangersProps) {
           { key: 'length', heading: 'Length', numeric: true, cell: cut(({ length }) => length) },
         ]
       : []),
-    { key: 'less', heading: 'Fittings', numeric: true, cell: () => cutText(data.hardwareAllowance, units) },
+    { key: 'less', heading: 'Fittings', numeric: true, cell: () => cutText(house.hanging.hardwareAllowance, units) },
     { key: 'net', heading: 'Net', numeric: true, cell: cut(({ net }) => net) },
     ...(chain ? [{ key: 'links', heading: 'Links', numeric: true, cell: ({ links }: Hanger) => links ?? '–' }] : []),
     {

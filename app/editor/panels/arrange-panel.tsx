@@ -4,6 +4,7 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { alignHeaters } from '#app/domain/layout/edits.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { repeatAtSpacing, spaceEqually } from '#app/domain/layout/repeat.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { parseLength } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
@@ -18,6 +19,7 @@ interface ArrangePanelProps {
   readonly site: Site
   readonly brief: Brief
   readonly models: ReadonlyMap<string, HeaterModel>
+  readonly rules: HouseRules
   readonly onEdit: (layout: Layout, selected: readonly string[], said: string) => void
   readonly onDuplicate: () => void
 }
@@ -30,7 +32,8 @@ const directions = [
 ]
 
 /** Repeats the chosen heaters at a spacing; brings several into line or to equal spacing. */
-export function ArrangePanel({ layout, selected, site, brief, models, onEdit, onDuplicate }: ArrangePanelProps) {
+export function ArrangePanel({ onDuplicate, ...repeated }: ArrangePanelProps) {
+  const { layout, selected, site, onEdit } = repeated
   const [open, setOpen] = useState(false)
   const several = selected.length > 1
   const align = (along: 'x' | 'y') =>
@@ -64,12 +67,13 @@ export function ArrangePanel({ layout, selected, site, brief, models, onEdit, on
           </Button>
         )}
       </div>
-      {open && <RepeatForm {...{ layout, selected, site, brief, models, onEdit }} />}
+      {open && <RepeatForm {...repeated} />}
     </section>
   )
 }
 
-function RepeatForm({ layout, selected, site, brief, models, onEdit }: Omit<ArrangePanelProps, 'onDuplicate'>) {
+function RepeatForm({ onEdit, ...subject }: Omit<ArrangePanelProps, 'onDuplicate'>) {
+  const { layout, selected, site } = subject
   const units = site.displayUnits
   const [spacing, setSpacing] = useState(firstSpacing(site))
   const [count, setCount] = useState('1')
@@ -120,7 +124,7 @@ function RepeatForm({ layout, selected, site, brief, models, onEdit }: Omit<Arra
           Repeat
         </Button>
       </form>
-      <SpacingCosts {...{ site, brief, layout, models, selected }} repeat={asked} onTake={repeat} />
+      <SpacingCosts {...subject} repeat={asked} onTake={repeat} />
     </>
   )
 }

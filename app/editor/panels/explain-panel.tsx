@@ -2,6 +2,7 @@ import { useMemo, useState } from 'react'
 import { explainSeat, type ExplainedInput, type Explanation } from '#app/domain/comfort/explain.ts'
 import type { WarmthInput } from '#app/domain/comfort/seat-warmth.ts'
 import type { SeatFigure } from '#app/domain/comfort/uncertainty.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { formatLength, formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
 import { SelectField } from '#app/components/field.tsx'
@@ -20,6 +21,7 @@ const isFigure = (name: string): name is FigureName => name in figures
 
 interface ExplainPanelProps {
   readonly input: WarmthInput
+  readonly rules: HouseRules
   readonly seatId: string
   readonly units: DisplayUnits
   readonly fluxUnit: FluxUnit
@@ -27,9 +29,9 @@ interface ExplainPanelProps {
 }
 
 /** Any figure of a seat taken apart: what went in, the formula, each heater's share, the tolerance, the sources. */
-export function ExplainPanel({ input, seatId, units, fluxUnit, onClose }: ExplainPanelProps) {
+export function ExplainPanel({ input, rules, seatId, units, fluxUnit, onClose }: ExplainPanelProps) {
   const [name, setName] = useState<FigureName>('body')
-  const explained = useMemo(() => explainSeat(input, seatId, figures[name].of), [input, seatId, name])
+  const explained = useMemo(() => explainSeat(input, seatId, figures[name].of, rules), [input, seatId, name, rules])
   return (
     <section aria-labelledby="explain-title" className="px-4.5 py-3.5">
       <header className="mb-2 flex items-baseline justify-between gap-2">

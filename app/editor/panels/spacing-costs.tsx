@@ -1,4 +1,3 @@
-import { houseRules } from '#app/domain/rules/house-rules.ts'
 import { formatLength } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
 import { fluxFigure, noFigure } from '#app/editor/figures.ts'
@@ -8,7 +7,7 @@ import { useSpacingCosts, type SpacingSubject } from '#app/editor/use-spacing-co
 export function SpacingCosts({ onTake, ...subject }: SpacingSubject & { onTake: (spacing: number) => void }) {
   const costs = useSpacingCosts(subject)
   if (costs.length === 0) return null
-  const { site } = subject
+  const { site, rules } = subject
   const area = (overlap: number | null) => (overlap === null ? noFigure : `${overlap.toFixed(1)} m²`)
   return (
     <section aria-labelledby="spacings-title" className="mb-2 overflow-x-auto">
@@ -18,13 +17,11 @@ export function SpacingCosts({ onTake, ...subject }: SpacingSubject & { onTake: 
         </caption>
         <thead className="text-2xs text-ink-3">
           <tr>
-            {['Spacing', 'Coldest seat, W/m²', 'Evenness', `Overlap ≥ ${houseRules.overlapThreshold.value} W/m²`].map(
-              (head) => (
-                <th key={head} scope="col" className="px-1.5 text-left align-bottom font-medium first:pl-0">
-                  {head}
-                </th>
-              ),
-            )}
+            {['Spacing', 'Coldest seat, W/m²', 'Evenness', `Overlap ≥ ${rules.overlapThreshold} W/m²`].map((head) => (
+              <th key={head} scope="col" className="px-1.5 text-left align-bottom font-medium first:pl-0">
+                {head}
+              </th>
+            ))}
             <th scope="col">
               <span className="sr-only">Take it</span>
             </th>

@@ -1,6 +1,5 @@
 import { memo, useState } from 'react'
 import type { Layout } from '#app/domain/layout/layout.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
 import { planesOf } from '#app/domain/site/planes.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { parseLength } from '#app/domain/units.ts'
@@ -20,6 +19,8 @@ interface ToolRowProps {
   readonly layout: Layout
   readonly selected: readonly string[]
   readonly choice: ViewChoice
+  /** Threshold of overlap, W/m². */
+  readonly threshold: number
   readonly onChoice: (choice: ViewChoice) => void
   readonly placing: boolean
   readonly onPlacing: () => void
@@ -66,12 +67,12 @@ const mapChoices = {
 type MapName = keyof typeof mapChoices
 
 /** What the map shows; one heater's share follows the chosen heater. */
-function MapSelect({ layout, selected, choice, onChoice }: ToolRowProps) {
+function MapSelect({ layout, selected, choice, threshold, onChoice }: ToolRowProps) {
   const { map } = choice
   const value: MapName = map.kind === 'feels-like' ? map.wind : map.kind
   const heaterId = selected[0] ?? layout.heaters[0]?.id ?? ''
   const choose = (name: string) => {
-    const next = mapOf(name, heaterId)
+    const next = mapOf(name, heaterId, threshold)
     if (next) onChoice({ ...choice, map: next })
   }
   return (
@@ -113,14 +114,14 @@ function MapSelect({ layout, selected, choice, onChoice }: ToolRowProps) {
   )
 }
 
-function mapOf(name: string, heaterId: string): MapChoice | null {
+function mapOf(name: string, heaterId: string, threshold: number): MapChoice | null {
   switch (name) {
     case 'flux':
       return { kind: 'flux' }
     case 'share':
       return heaterId ? { kind: 'share', heaterId } : null
     case 'overlap':
-      return { kind: 'overlap', threshold: houseRules.overlapThreshold.value }
+      return { kind: 'overlap', threshold }
     case 'calm':
     case 'design':
     case 'gust':

@@ -49,7 +49,7 @@ export function UnheldHeater({ heater, editor, site, brief, choice, onSite }: Un
   const model = editor.models.get(heater.model)
   if (!model) return null
   const layout = editor.state.history.present
-  const remedies = remediesOf(site, heater, model)
+  const remedies = remediesOf(site, heater, model, editor.house.rules)
   const { move } = remedies
   const changeOf = () => {
     const shade = choice.shade ? { obstructions: obstructionsOf(site, layout, editor.models) } : {}

@@ -6,7 +6,7 @@ import type { Measurement } from '#app/domain/photo/measurements.ts'
 import { photoTolerance, type PhotoTolerance } from '#app/domain/photo/photo-tolerance.ts'
 import { isClick } from '#app/domain/photo/plane-inputs.ts'
 import { isRefused, type Refusal } from '#app/domain/photo/refusal.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { formatLength, type DisplayUnits } from '#app/domain/units.ts'
 
 /** A figure of a photo, m: its standard error, what of it comes from clicks and from references, and its tolerance. */
@@ -27,19 +27,19 @@ export interface Measured {
   readonly photos: number
 }
 
-function figureOf(estimate: Estimate): Figure {
+function figureOf(estimate: Estimate, rules: HouseRules): Figure {
   const sigma = sigmaOf(estimate)
   return {
     value: estimate.value,
     sigma,
     clicks: sigmaFrom(estimate, isClick),
     references: sigmaFrom(estimate, (name) => !isClick(name)),
-    ...photoTolerance(estimate.value, sigma),
+    ...photoTolerance(estimate.value, sigma, rules),
   }
 }
 
 /** Every measurement of a photo with its figure, and its mean over all photos of the job. */
-export function measuredIn(photo: MarkedPhoto, others: readonly MarkedPhoto[]): Measured[] {
+export function measuredIn(photo: MarkedPhoto, others: readonly MarkedPhoto[], rules: HouseRules): Measured[] {
   const photos = [photo, ...others]
   return photo.marks.measurements.map((measurement) => {
     const estimate = measure(photo, measurement)
@@ -47,8 +47,8 @@ export function measuredIn(photo: MarkedPhoto, others: readonly MarkedPhoto[]): 
     const combined = readings.length > 1 ? combineReadings(readings.map((reading) => reading.estimate)) : null
     return {
       measurement,
-      own: isRefused(estimate) ? estimate : figureOf(estimate),
-      mean: combined && { ...figureOf(combined.estimate), count: combined.count, warning: combined.warning },
+      own: isRefused(estimate) ? estimate : figureOf(estimate, rules),
+      mean: combined && { ...figureOf(combined.estimate, rules), count: combined.count, warning: combined.warning },
       photos: new Set(readings.map(({ photoId }) => photoId)).size,
     }
   })
@@ -66,11 +66,15 @@ function smallWords(metres: number, units: DisplayUnits): string {
 }
 
 /** Where the tolerance comes from, with the standard error that the marks give. */
-export function errorWords({ sigma, clicks, references, by }: Figure, units: DisplayUnits): string {
+export function errorWords(
+  { sigma, clicks, references, by }: Figure,
+  units: DisplayUnits,
+  { tolerancePhotoShare, tolerancePhotoLeast }: HouseRules,
+): string {
   const say = (metres: number) => smallWords(metres, units)
   const rule = {
-    share: `${100 * houseRules.tolerancePhotoShare.value} % of it, the house rule for photos`,
-    least: `${formatLength(houseRules.tolerancePhotoLeast.value, units)}, the least for photos by house rule`,
+    share: `${Math.round(1000 * tolerancePhotoShare) / 10} % of it, the house rule for photos`,
+    least: `${formatLength(tolerancePhotoLeast, units)}, the least for photos by house rule`,
     marks: 'twice the standard error',
   }
   return `± is ${rule[by]}. Standard error ${say(sigma)}: marks ${say(clicks)}, reference sizes ${say(references)}.`

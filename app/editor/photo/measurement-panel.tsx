@@ -2,6 +2,7 @@ import { useState } from 'react'
 import { changeMeasurement, removeMeasurement } from '#app/domain/photo/edits.ts'
 import { mostMeasurements, type Measurement, type PhotoPlane } from '#app/domain/photo/measurements.ts'
 import { isRefused } from '#app/domain/photo/refusal.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { DisplayUnits } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
 import { SelectField, TextField } from '#app/components/field.tsx'
@@ -53,7 +54,7 @@ interface ResultProps extends PhotoPanelProps, SizeUse {
   readonly onStrong: (id: string) => void
 }
 
-function Result({ each, here, onStrong, marks, units, readOnly, onChange, sizes, onUse }: ResultProps) {
+function Result({ each, here, onStrong, marks, units, rules, readOnly, onChange, sizes, onUse }: ResultProps) {
   const { measurement, own, mean, photos } = each
   const { id, label, kind } = measurement
   return (
@@ -70,8 +71,12 @@ function Result({ each, here, onStrong, marks, units, readOnly, onChange, sizes,
         </button>
         {!isRefused(own) && <b className="text-base font-strong">{figureWords(own, units)}</b>}
       </p>
-      {isRefused(own) ? <Refused words={own.words} /> : <p className="text-xs text-ink-3">{errorWords(own, units)}</p>}
-      {mean && <Mean figure={mean} photos={photos} units={units} />}
+      {isRefused(own) ? (
+        <Refused words={own.words} />
+      ) : (
+        <p className="text-xs text-ink-3">{errorWords(own, units, rules)}</p>
+      )}
+      {mean && <Mean figure={mean} {...{ photos, units, rules }} />}
       <Planes
         {...{ measurement, readOnly }}
         planes={marks.planes}
@@ -99,15 +104,16 @@ interface MeanProps {
   readonly figure: Figure & { readonly count: number; readonly warning: string | null }
   readonly photos: number
   readonly units: DisplayUnits
+  readonly rules: HouseRules
 }
 
-function Mean({ figure, photos, units }: MeanProps) {
+function Mean({ figure, photos, units, rules }: MeanProps) {
   const { count, warning } = figure
   return (
     <p className="mt-1 text-xs">
       Mean of {count} readings in {photos} {photos === 1 ? 'photo' : 'photos'}, weighed by 1/σ²:{' '}
       <b className="font-medium">{figureWords(figure, units)}</b>{' '}
-      <span className="text-ink-3">{errorWords(figure, units)}</span>
+      <span className="text-ink-3">{errorWords(figure, units, rules)}</span>
       {warning && (
         <span role="status" className="mt-0.5 block text-amber">
           <span className="mr-1.5 inline-block align-[-1px]">

@@ -3,6 +3,7 @@ import { moveMark } from '#app/domain/photo/mark-places.ts'
 import type { PhotoMarks } from '#app/domain/photo/measurements.ts'
 import type { MarkedPhoto } from '#app/domain/photo/length-in-plane.ts'
 import { isRefused } from '#app/domain/photo/refusal.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
@@ -23,6 +24,7 @@ interface PhotoEditorProps extends Pick<SizeUse, 'onUse'> {
   /** The job's other photos, for further readings of the same lengths. */
   readonly others: readonly MarkedPhoto[]
   readonly site: Site
+  readonly rules: HouseRules
   readonly readOnly: boolean
   /** Id of the measurement that the page was opened at. */
   readonly opened: string | null
@@ -35,13 +37,13 @@ interface PhotoEditorProps extends Pick<SizeUse, 'onUse'> {
 
 /** A photo to measure in: the picture with its marks, and beside it planes, lengths, heights and what becomes of them. */
 export function PhotoEditor(props: PhotoEditorProps) {
-  const { photo, marks, others, site, readOnly, onChange } = props
+  const { photo, marks, others, site, rules, readOnly, onChange } = props
   const units = site.displayUnits
   const [chosen, setChosen] = useState<string | null>(null)
   const [strong, setStrong] = useState(props.opened)
   const [wish, setWish] = useState<TraceWish | null>(null)
   const placing = usePlacing(onChange, (points) => wish && props.onTrace(wish, points))
-  const measured = useMemo(() => measuredIn({ id: photo.id, marks }, others), [photo.id, marks, others])
+  const measured = useMemo(() => measuredIn({ id: photo.id, marks }, others, rules), [photo.id, marks, others, rules])
   const figures = useMemo(
     () =>
       new Map(
@@ -58,7 +60,7 @@ export function PhotoEditor(props: PhotoEditorProps) {
     const things = list === 'planes' ? marks.planes : marks.measurements
     if (path) setStrong(things[Number(index)]?.id ?? null)
   }
-  const panel = { marks, units, readOnly, onChange, onPlacing: placing.start }
+  const panel = { marks, units, rules, readOnly, onChange, onPlacing: placing.start }
   return (
     <div className="grid items-start gap-x-6 gap-y-4 *:min-w-0 wide-tablet:grid-cols-[minmax(0,1fr)_22rem] wide:grid-cols-[minmax(0,1fr)_29rem]">
       <div className="z-10 wide-tablet:sticky wide-tablet:top-3">

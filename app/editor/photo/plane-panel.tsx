@@ -2,7 +2,7 @@ import { useState } from 'react'
 import { changePlane, removePlane } from '#app/domain/photo/edits.ts'
 import { mostPlanes, type PhotoMarks, type PhotoPlane } from '#app/domain/photo/measurements.ts'
 import { refusePlane } from '#app/domain/photo/plane-inputs.ts'
-import { houseRules } from '#app/domain/rules/house-rules.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { DisplayUnits } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
 import { TextField } from '#app/components/field.tsx'
@@ -13,13 +13,11 @@ import { LengthInput } from '#app/editor/site/length-input.tsx'
 export interface PhotoPanelProps {
   readonly marks: PhotoMarks
   readonly units: DisplayUnits
+  readonly rules: HouseRules
   readonly readOnly: boolean
   readonly onChange: (edit: (marks: PhotoMarks) => PhotoMarks) => void
   readonly onPlacing: (placing: Placing) => void
 }
-
-/** Sizes of a reference are taped unless something else is said. */
-const usualTolerance = houseRules.toleranceTape.value
 
 const smallest = 0.01
 const largest = 100
@@ -48,7 +46,7 @@ export function PlanePanel({ marks, ...props }: PhotoPanelProps) {
   )
 }
 
-function Plane({ plane, units, readOnly, onChange, onPlacing }: PhotoPanelProps & { plane: PhotoPlane }) {
+function Plane({ plane, units, rules, readOnly, onChange, onPlacing }: PhotoPanelProps & { plane: PhotoPlane }) {
   const { id, name, vertical } = plane
   const refused = refusePlane(plane)
   const set = (facts: Partial<Omit<PhotoPlane, 'id'>>) => onChange((old) => changePlane(old, id, facts))
@@ -116,7 +114,7 @@ function Plane({ plane, units, readOnly, onChange, onPlacing }: PhotoPanelProps 
       {!readOnly && !vertical && (
         <NewUprights
           units={units}
-          onStart={(height) => onPlacing({ kind: 'uprights', planeId: id, height, tolerance: usualTolerance })}
+          onStart={(height) => onPlacing({ kind: 'uprights', planeId: id, height, tolerance: rules.toleranceTape })}
         />
       )}
       {!readOnly && vertical && (
@@ -138,11 +136,12 @@ export const Refused = ({ words }: { words: string }) => (
   </p>
 )
 
-function NewPlane({ units, onPlacing }: Pick<PhotoPanelProps, 'units' | 'onPlacing'>) {
+/** Sizes of a reference are taped unless something else is said. */
+function NewPlane({ units, rules, onPlacing }: Pick<PhotoPanelProps, 'units' | 'rules' | 'onPlacing'>) {
   const [name, setName] = useState('')
   const [width, setWidth] = useState<number | null>(null)
   const [depth, setDepth] = useState<number | null>(null)
-  const [tolerance, setTolerance] = useState(usualTolerance)
+  const [tolerance, setTolerance] = useState(rules.toleranceTape)
   const [asked, setAsked] = useState(false)
   const missing = (value: unknown) => (asked && !value ? 'Needed before the corners are marked.' : null)
   const start = () => {

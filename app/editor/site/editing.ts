@@ -1,9 +1,12 @@
 import { createContext, useContext } from 'react'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 
 /** The site that is edited and the one way to change it: every change is a step that can be undone. */
 export interface SiteEditing {
   readonly site: Site
+  /** Of the house: what a size is worth by where it comes from. */
+  readonly rules: HouseRules
   readonly readOnly: boolean
   readonly change: (edit: (site: Site) => Site) => void
 }

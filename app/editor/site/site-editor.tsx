@@ -1,4 +1,5 @@
 import { useCallback, useMemo, useState } from 'react'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { placedByHand, placedInWords } from '#app/domain/site/placed-by-hand.ts'
 import { refusalOf, siteFaults } from '#app/domain/site/site-faults.ts'
 import type { Site } from '#app/domain/site/site.ts'
@@ -16,6 +17,7 @@ import type { KeyAction } from '#app/editor/tools/keys.ts'
 
 interface SiteEditorProps {
   readonly site: Site
+  readonly rules: HouseRules
   readonly document: Pick<OpenDocument<Site>, 'change' | 'undo' | 'redo'>
   readonly readOnly: boolean
   readonly theme: 'dusk' | 'day'
@@ -24,15 +26,15 @@ interface SiteEditorProps {
 }
 
 /** The plan of the site beside everything that is on it. */
-export function SiteEditor({ site, document, readOnly, theme, sizes }: SiteEditorProps) {
+export function SiteEditor({ site, rules, document, readOnly, theme, sizes }: SiteEditorProps) {
   const [wanted, setWanted] = useState<Chosen | null>(null)
   const [kind, setKind] = useState<ListedKind>('floor')
   const [adding, setAdding] = useState<NewThing | null>(null)
   const toast = useToast()
   const chosen = stillThere(site, wanted)
   const { undo } = document
-  const change = useChangeByHand(document)
-  const editing = useMemo(() => ({ site, readOnly, change }), [site, readOnly, change])
+  const change = useChangeByHand(document, rules)
+  const editing = useMemo(() => ({ site, rules, readOnly, change }), [site, rules, readOnly, change])
 
   const choose = (next: Chosen | null) => {
     setWanted(next)
@@ -102,18 +104,18 @@ export function SiteEditor({ site, document, readOnly, theme, sizes }: SiteEdito
 }
 
 /** The way to change the site by hand: sizes that decided what was changed go along in the same step, and it is said. */
-function useChangeByHand(document: SiteEditorProps['document']): SiteEditing['change'] {
+function useChangeByHand(document: SiteEditorProps['document'], rules: HouseRules): SiteEditing['change'] {
   const toast = useToast()
   const { change, undo } = document
   return useCallback(
     (edit) =>
       change((old) => {
-        const placed = placedByHand(old, edit(old))
-        const text = placedInWords(placed, placed.site.displayUnits)
+        const placed = placedByHand(old, edit(old), rules)
+        const text = placedInWords(placed, placed.site.displayUnits, rules)
         if (text) toast({ text, action: { label: 'Undo', run: undo } })
         return placed.site
       }),
-    [change, undo, toast],
+    [change, undo, toast, rules],
   )
 }
 

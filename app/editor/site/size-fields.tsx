@@ -28,7 +28,7 @@ function withMeasured(site: Site, size: Dimension, value: number): Site {
 
 /** A size of the site: its value moves everything that it decides; its tolerance goes into every margin. */
 export function SizeFields({ size, onClose }: SizeFieldsProps) {
-  const { readOnly, change } = useSiteEditing()
+  const { readOnly, rules, change } = useSiteEditing()
   const { id } = size
   return (
     <section aria-labelledby="size-title" className="border-b border-rule pb-4">
@@ -63,7 +63,7 @@ export function SizeFields({ size, onClose }: SizeFieldsProps) {
           label="Source"
           value={size.source}
           options={sizeSourceSchema.options.map((value) => ({ value, label: value }))}
-          edit={(old, source) => withSize(old, id, { source, tolerance: usualTolerance(source, size.value) })}
+          edit={(old, source) => withSize(old, id, { source, tolerance: usualTolerance(source, size.value, rules) })}
         />
         <TextInput
           label="Note"

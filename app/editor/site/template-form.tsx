@@ -9,13 +9,13 @@ import { LengthInput } from '#app/editor/site/length-input.tsx'
 
 /** Starts the site from a kind of place, with the sizes that are known; the others count as guessed. */
 export function TemplateForm({ onDone }: { onDone: () => void }) {
-  const { site, change } = useSiteEditing()
+  const { site, rules, change } = useSiteEditing()
   const [key, setKey] = useState(siteTemplates[0]?.key ?? '')
   const [source, setSource] = useState<SizeSource>('tape')
   const [given, setGiven] = useState<ReadonlyMap<string, number>>(new Map())
   const template = siteTemplates.find((each) => each.key === key)
   if (!template) return null
-  const made = template.start(given, source, site)
+  const made = template.start(given, source, site, rules)
   const refused = 'error' in made ? made.error : null
   return (
     <section

@@ -1,5 +1,6 @@
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 
@@ -7,6 +8,7 @@ import type { Vec2 } from '#app/domain/vector.ts'
 export interface GestureStart {
   readonly site: Site
   readonly models: ReadonlyMap<string, HeaterModel>
+  readonly rules: HouseRules
   /** As it was; Escape goes back to it. */
   readonly layout: Layout
   /** The heaters that follow. */

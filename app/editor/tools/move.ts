@@ -11,7 +11,11 @@ export const moveGesture: Gesture = (start, to, free) => {
     ? { dx: millimetres(dx), dy: millimetres(dy), reason: null, lines: [] }
     : holdMovement({ ...start, dx, dy })
   const moved = moveHeaters(start.layout, start.ids, held.dx, held.dy)
-  return { layout: findSupports(moved, start.ids, start.site, start.models), reason: held.reason, lines: held.lines }
+  return {
+    layout: findSupports(moved, start.ids, start.site, start.models, start.rules),
+    reason: held.reason,
+    lines: held.lines,
+  }
 }
 
 const millimetres = (metres: number) => Math.round(metres * 1000) / 1000

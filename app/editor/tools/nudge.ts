@@ -2,6 +2,7 @@ import { moveHeaters, raiseHeaters, tiltHeaters, turnHeaters } from '#app/domain
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { findSupports } from '#app/domain/layout/support-near.ts'
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { KeyAction } from '#app/editor/tools/keys.ts'
 
@@ -19,10 +20,11 @@ export function nudged(
   nudge: Nudge,
   site: Site,
   models: ReadonlyMap<string, HeaterModel>,
+  rules: HouseRules,
 ): Layout {
   switch (nudge.kind) {
     case 'nudge':
-      return findSupports(moveHeaters(layout, ids, nudge.dx, nudge.dy), ids, site, models)
+      return findSupports(moveHeaters(layout, ids, nudge.dx, nudge.dy), ids, site, models, rules)
     case 'raise':
       return raiseHeaters(layout, ids, nudge.by)
     case 'turn':

@@ -1,14 +1,14 @@
 import { etagOf, isRefusal, refuseMethod, respond } from '#app/server/answers.server.ts'
 import { requireJob } from '#app/server/data/jobs.server.ts'
-import { findSite, saveSite, savedSiteSchema } from '#app/server/data/sites.server.ts'
+import { findHousedSite, saveSite, savedSiteSchema } from '#app/server/data/sites.server.ts'
 import { readSave } from '#app/server/saving.server.ts'
 import type { Route } from './+types/job-site'
 
 /** GET /api/jobs/:jobId/site: `{ revision, site }`. */
 export async function loader({ request, params }: Route.LoaderArgs) {
   const job = await requireJob(request, params.jobId, 'view')
-  const kept = await findSite(job)
-  return Response.json(kept, { headers: { ETag: etagOf(kept.revision) } })
+  const { revision, site } = await findHousedSite(job)
+  return Response.json({ revision, site }, { headers: { ETag: etagOf(revision) } })
 }
 
 /** PUT /api/jobs/:jobId/site: a whole Site, by the one rule for saving. */

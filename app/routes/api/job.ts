@@ -1,6 +1,6 @@
 import { findBrief } from '#app/server/data/briefs.server.ts'
 import { requireJob } from '#app/server/data/jobs.server.ts'
-import { findSite } from '#app/server/data/sites.server.ts'
+import { findHousedSite } from '#app/server/data/sites.server.ts'
 import { listVariants } from '#app/server/data/variants.server.ts'
 import type { Route } from './+types/job'
 
@@ -10,7 +10,7 @@ export { readOnly as action } from '#app/server/other-methods.server.ts'
 export async function loader({ request, params }: Route.LoaderArgs) {
   const job = await requireJob(request, params.jobId, 'view')
   const { member, ...shown } = job
-  const [kept, asked, variants] = await Promise.all([findSite(job), findBrief(job), listVariants(job)])
+  const [kept, asked, variants] = await Promise.all([findHousedSite(job), findBrief(job), listVariants(job)])
   return Response.json({
     ...shown,
     organisation: member.organisationName,

@@ -28,11 +28,12 @@ export async function loader({ request, params }: Route.LoaderArgs) {
   if (isRefusal(figure)) return respond(figure)
   const laid = await findLaidOut(open)
   if (!laid) throw missing(request, 'variant')
-  const { site, brief, models, variant } = laid
+  const { site, brief, models, variant, house } = laid
   const explanation = await explainSeatOffThread(
     { site, brief, models, layout: variant },
     params.seatId,
     figure.value,
+    house.rules,
   ).catch(refuseComputation)
   if (explanation instanceof Response) return explanation
   if (!explanation) throw missing(request, 'seat')

@@ -28,7 +28,7 @@ export async function loader({ request, params, url }: Route.LoaderArgs) {
 type Loaded = Route.ComponentProps['loaderData']
 
 export default function ComparePage({ loaderData }: Route.ComponentProps) {
-  const { viewer, job, site, brief, models, chosen, all, mayExport } = loaderData
+  const { viewer, job, site, brief, models, house, chosen, all, mayExport } = loaderData
   const linked = useMemo(
     () =>
       chosen.map((variant) => ({
@@ -62,6 +62,7 @@ export default function ComparePage({ loaderData }: Route.ComponentProps) {
         site={site}
         brief={brief}
         models={models}
+        house={house}
         chosen={linked}
         picker={<VariantPicker job={job} chosen={chosen} all={all} />}
       />

@@ -25,9 +25,9 @@ export async function loader({ request, params }: Route.LoaderArgs) {
   const { variantId } = params
   const laidOut = isId(variantId) ? await findLaidOut({ id: variantId, member: job.member }) : null
   if (laidOut?.variant.jobId !== job.id) throw data('No such variant', 404)
-  const { variant, site, siteRevision, brief, models, hanging } = laidOut
+  const { variant, site, siteRevision, brief, models, house } = laidOut
   const { heaters, number, title, revision, id } = variant
-  const findings = checkLayout({ site, brief, layout: { heaters }, models, warmth: [], hanging })
+  const findings = checkLayout({ site, brief, layout: { heaters }, models, warmth: [], house })
   const unsupported = findings.flatMap(({ rule, outcome, subject, title: why }) =>
     (rule === 'supported' || rule === 'mount-offered') && outcome === 'fails' ? [{ id: subject.id, why }] : [],
   )
@@ -37,16 +37,16 @@ export async function loader({ request, params }: Route.LoaderArgs) {
     variant: { id, number, title, revision },
     site,
     siteRevision,
-    sheet: hangSheet(site, heaters, models, hanging),
+    sheet: hangSheet(site, heaters, models, house),
     unsupported,
-    hanging,
+    house,
     assumed: brief.assumed.map((name) => assumptionOf(brief, name, site.displayUnits)),
     date: new Date().toISOString().slice(0, 10),
   }
 }
 
 export default function HangPage({ loaderData }: Route.ComponentProps) {
-  const { viewer, job, variant, site, sheet, unsupported, hanging } = loaderData
+  const { viewer, job, variant, site, sheet, unsupported, house } = loaderData
   const tools = (
     <>
       <ButtonLink to={`/jobs/${job.id}/variants/${variant.id}`}>Layout</ButtonLink>
@@ -77,7 +77,7 @@ export default function HangPage({ loaderData }: Route.ComponentProps) {
           </Row>
           {sheet.heaters.map((hung) => (
             <Row key={hung.heater.id}>
-              <HungHeaterSection {...{ hung, site }} data={hanging} unsupported={whyNot(hung.heater.id)} />
+              <HungHeaterSection {...{ hung, site, house }} unsupported={whyNot(hung.heater.id)} />
             </Row>
           ))}
           {sheet.heaters.length === 0 && (
@@ -96,7 +96,7 @@ export default function HangPage({ loaderData }: Route.ComponentProps) {
             </section>
           </Row>
           <Row>
-            <Order sheet={sheet} site={site} hanging={hanging} />
+            <Order sheet={sheet} site={site} hanging={house.hanging} />
           </Row>
         </tbody>
       </table>

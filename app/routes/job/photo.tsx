@@ -36,6 +36,7 @@ export async function loader({ request, params }: Route.LoaderArgs) {
     photo: { id, name, width, height },
     kept: { revision: found.revision, body: found.marks },
     others: photos.filter((photo) => photo.id !== id).map((photo) => ({ id: photo.id, marks: photo.marks })),
+    rules: kept.house.rules,
     keptSite: { revision: kept.revision, body: kept.site },
     readOnly: !can(job.member.role, 'edit-site'),
   }
@@ -48,7 +49,16 @@ export default function PhotoPage({ loaderData }: Route.ComponentProps) {
   return <Measuring key={loaderData.photo.id} {...loaderData} />
 }
 
-function Measuring({ viewer, job, photo, kept, others, keptSite, readOnly }: Route.ComponentProps['loaderData']) {
+function Measuring({
+  viewer,
+  job,
+  photo,
+  kept,
+  others,
+  rules,
+  keptSite,
+  readOnly,
+}: Route.ComponentProps['loaderData']) {
   const [marking, marks] = useDocument<PhotoMarks>(kept, {
     url: `/api/photos/${photo.id}`,
     name: 'marks',
@@ -122,6 +132,7 @@ function Measuring({ viewer, job, photo, kept, others, keptSite, readOnly }: Rou
         marks={history.present}
         others={others}
         site={site}
+        rules={rules}
         readOnly={readOnly}
         opened={search.get('at')}
         onChange={marks.change}

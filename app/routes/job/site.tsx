@@ -17,7 +17,7 @@ import { SiteEditor } from '#app/editor/site/site-editor.tsx'
 import { TemplateForm } from '#app/editor/site/template-form.tsx'
 import { useDocument } from '#app/editor/use-document.ts'
 import { requireJob } from '#app/server/data/jobs.server.ts'
-import { findSite } from '#app/server/data/sites.server.ts'
+import { findHousedSite } from '#app/server/data/sites.server.ts'
 import { viewerOf } from '#app/server/viewer.server.ts'
 import type { Route } from './+types/site'
 
@@ -27,11 +27,12 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 
 export async function loader({ request, params }: Route.LoaderArgs) {
   const job = await requireJob(request, params.jobId, 'view')
-  const { revision, site } = await findSite(job)
+  const { revision, site, house } = await findHousedSite(job)
   return {
     viewer: viewerOf(job.member),
     job: { id: job.id, name: job.name },
     kept: { revision, body: site },
+    rules: house.rules,
     readOnly: !can(job.member.role, 'edit-site'),
   }
 }
@@ -67,7 +68,7 @@ const isBare = (site: Site): boolean =>
 type Loaded = Route.ComponentProps['loaderData']
 type Opened = { kind: 'template' } | { kind: 'copy'; jobs: readonly OtherJob[] } | null
 
-function SiteOfJob({ viewer, job, kept, readOnly }: Loaded) {
+function SiteOfJob({ viewer, job, kept, rules, readOnly }: Loaded) {
   const [{ history, save }, document] = useDocument<Site>(kept, {
     url: `/api/jobs/${job.id}/site`,
     name: 'site',
@@ -137,7 +138,7 @@ function SiteOfJob({ viewer, job, kept, readOnly }: Loaded) {
         />
       )}
       {opened && (
-        <SiteEditingProvider value={{ site, readOnly, change: document.change }}>
+        <SiteEditingProvider value={{ site, rules, readOnly, change: document.change }}>
           {opened.kind === 'template' ? (
             <TemplateForm onDone={() => setOpened(null)} />
           ) : (
@@ -145,7 +146,7 @@ function SiteOfJob({ viewer, job, kept, readOnly }: Loaded) {
           )}
         </SiteEditingProvider>
       )}
-      <SiteEditor {...{ site, document, readOnly, sizes }} theme={dark ? 'dusk' : 'day'} />
+      <SiteEditor {...{ site, rules, document, readOnly, sizes }} theme={dark ? 'dusk' : 'day'} />
     </JobFrame>
   )
 }

@@ -17,7 +17,7 @@ export async function loader({ request, params }: Route.LoaderArgs) {
   const { variantId } = params
   const laidOut = isId(variantId) ? await findLaidOut({ id: variantId, member: job.member }) : null
   if (laidOut?.variant.jobId !== job.id) throw data('No such variant', 404)
-  const { variant, site, brief, models } = laidOut
+  const { variant, site, brief, models, house } = laidOut
   const used = new Set(variant.heaters.map(({ model }) => model))
   return {
     viewer: viewerOf(job.member),
@@ -25,20 +25,22 @@ export async function loader({ request, params }: Route.LoaderArgs) {
     variant: { id: variant.id, number: variant.number, title: variant.title, heaters: variant.heaters },
     site,
     brief,
+    house,
     models: [...models.values()].filter(({ code }) => used.has(code)),
   }
 }
 
 export default function SizesPage({ loaderData }: Route.ComponentProps) {
-  const { viewer, job, variant, site, brief, models } = loaderData
+  const { viewer, job, variant, site, brief, models, house } = loaderData
   const question = useMemo(
     () => ({
       site,
       brief,
+      house,
       layout: { title: variant.title, heaters: variant.heaters },
       models: new Map(models.map((model) => [model.code, model])),
     }),
-    [site, brief, variant, models],
+    [site, brief, variant, models, house],
   )
   const back = `/jobs/${job.id}/variants/${variant.id}`
   return (

@@ -23,7 +23,7 @@ export async function loader({ request, params }: Route.LoaderArgs) {
   const { variantId } = params
   const laidOut = isId(variantId) ? await findLaidOut({ id: variantId, member: job.member }) : null
   if (laidOut?.variant.jobId !== job.id) throw data('No such variant', 404)
-  const { variant, site, siteRevision, brief, models, hanging, ofJob } = laidOut
+  const { variant, site, siteRevision, brief, models, house, ofJob } = laidOut
   return {
     viewer: viewerOf(job.member),
     job: { id: job.id, name: job.name },
@@ -32,7 +32,7 @@ export async function loader({ request, params }: Route.LoaderArgs) {
     kept: { revision: siteRevision, body: site },
     brief,
     catalogue: [...models.values()],
-    hanging,
+    house,
     readOnly: !can(job.member.role, 'edit-layout'),
     mayExport: can(job.member.role, 'export'),
   }

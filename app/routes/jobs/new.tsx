@@ -4,12 +4,14 @@ import { data, Form, redirect, useNavigation } from 'react-router'
 import { z } from 'zod'
 import type { BriefField } from '#app/domain/brief/brief-field.ts'
 import { assumedBrief, enquiryFields, fieldAt, isUnknown, readEnquiry, unknownName } from '#app/domain/brief/enquiry.ts'
+import { houseFigure } from '#app/domain/rules/house-rules.ts'
 import type { DisplayUnits } from '#app/domain/units.ts'
 import { Button, ButtonLink } from '#app/components/button.tsx'
 import { ErrorSummary } from '#app/components/error-summary.tsx'
 import { CheckField, SelectField, TextField } from '#app/components/field.tsx'
 import { PageFrame } from '#app/components/page-frame.tsx'
 import { isRefusal, type Refusal } from '#app/server/answers.server.ts'
+import { findHouse } from '#app/server/data/house.server.ts'
 import { createJob } from '#app/server/data/job-creation.server.ts'
 import { readFields } from '#app/server/form-fields.server.ts'
 import { requireMay } from '#app/server/session.server.ts'
@@ -20,7 +22,8 @@ export const meta: Route.MetaFunction = () => [{ title: 'New enquiry · Inglefie
 
 export async function loader({ request }: Route.LoaderArgs) {
   const member = await requireMay(request, 'create-job')
-  return { viewer: viewerOf(member), key: randomUUID() }
+  const { rules } = await findHouse(member)
+  return { viewer: viewerOf(member), key: randomUUID(), rules }
 }
 
 const createdSchema = z.object({ id: z.string() })
@@ -35,7 +38,7 @@ export async function action({ request }: Route.ActionArgs) {
   )
   const values = Object.fromEntries(fields.map(([name, value]) => [name, value.slice(0, longest)]))
   const refused = (errors: Record<string, string>) => data({ errors, values }, 400)
-  const read = readEnquiry(values)
+  const read = readEnquiry(values, (await findHouse(member)).rules)
   if ('errors' in read) return refused(read.errors)
   const key = values['key'] ?? ''
   if (!/^[\w-]{8,100}$/.test(key)) return refused({ name: 'The form is not complete. Open it again.' })
@@ -67,6 +70,8 @@ export default function NewEnquiryPage({ loaderData, actionData }: Route.Compone
   const errors: Record<string, string> = actionData?.errors ?? {}
   const values: Record<string, string> = actionData?.values ?? {}
   const [units, setUnits] = useState<DisplayUnits>(values['units'] === 'imperial' ? 'imperial' : 'metric')
+  const { rules } = loaderData
+  const assumed = { ...assumedBrief(rules), place: '' }
   const problems = Object.entries(errors).map(([id, error]) => ({ id, error, label: labels[id] ?? id }))
   const text = (name: string) => ({
     id: name,
@@ -79,6 +84,7 @@ export default function NewEnquiryPage({ loaderData, actionData }: Route.Compone
     <Question
       key={field.name}
       field={field}
+      usual={field.show(assumed, units)}
       units={units}
       typed={values[field.name]}
       unknown={isUnknown(values, field.name)}
@@ -125,7 +131,7 @@ export default function NewEnquiryPage({ loaderData, actionData }: Route.Compone
         <Group title="The supply">{fields('supply', 'sparePerPhase')}</Group>
         <Group
           title="The target"
-          note="Irradiance on the body plane. 150 to 350 W/m² is a house rule, no published source."
+          note={`Irradiance on the body plane. ${rules.targetLow} to ${rules.targetHigh} W/m²: ${houseFigure(rules, 'targetLow').source}.`}
         >
           {fields('targetLow', 'targetHigh')}
         </Group>
@@ -154,16 +160,15 @@ function Group({ title, note, children }: { title: string; note?: string; childr
 
 interface QuestionProps {
   field: BriefField
+  /** What would be assumed, as it would be typed. */
+  usual: string
   units: DisplayUnits
   typed: string | undefined
   unknown: boolean
   error: string | undefined
 }
 
-const template = { ...assumedBrief, place: '' }
-
-function Question({ field, units, typed, unknown, error }: QuestionProps) {
-  const usual = field.show(template, units)
+function Question({ field, usual, units, typed, unknown, error }: QuestionProps) {
   const shared = { id: field.name, name: field.name, label: field.label, hint: field.hint, error }
   const [text, setText] = useState(typed ?? null)
   const value = text ?? (prefilled.has(field.name) ? usual : '')

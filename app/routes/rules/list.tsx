@@ -1,11 +1,11 @@
 import { bearings } from '#app/domain/rules/bearings.ts'
 import type { ChosenRuleSet } from '#app/domain/rules/rule-set.ts'
-import { hangingRules, tradeRules, warmthRules, type RuleRow } from '#app/domain/rules/rules-in-words.ts'
+import { fixedRuleRows, houseRuleRows, tradeRules, type RuleRow } from '#app/domain/rules/rules-in-words.ts'
 import { can } from '#app/domain/access/roles.ts'
 import { ButtonLink } from '#app/components/button.tsx'
 import { PageFrame } from '#app/components/page-frame.tsx'
 import { DataTable, type Column } from '#app/components/table.tsx'
-import { listRuleSets } from '#app/server/data/rule-sets.server.ts'
+import { findRules } from '#app/server/data/rule-sets.server.ts'
 import { requireMay } from '#app/server/session.server.ts'
 import { viewerOf } from '#app/server/viewer.server.ts'
 import type { Route } from './+types/list'
@@ -16,7 +16,7 @@ export async function loader({ request }: Route.LoaderArgs) {
   const member = await requireMay(request, 'view')
   return {
     viewer: viewerOf(member),
-    ruleSets: await listRuleSets(member),
+    ...(await findRules(member)),
     mayEdit: can(member.role, 'edit-rules'),
   }
 }
@@ -70,7 +70,7 @@ const setColumns: readonly Column<ChosenRuleSet>[] = [
   { key: 'revision', heading: 'Revision', cell: ({ revision }) => revision },
 ]
 
-export default function RulesPage({ loaderData: { viewer, ruleSets, mayEdit } }: Route.ComponentProps) {
+export default function RulesPage({ loaderData: { viewer, ruleSets, house, mayEdit } }: Route.ComponentProps) {
   return (
     <PageFrame viewer={viewer}>
       <h1 className="pt-1 text-xl font-strong">Rules</h1>
@@ -103,11 +103,23 @@ export default function RulesPage({ loaderData: { viewer, ruleSets, mayEdit } }:
           />
         )}
       </section>
-      <Rules caption="Warmth and cautions" rows={warmthRules} />
-      <Rules caption="Hanging, supply and weather" rows={hangingRules} />
-      <p className="mt-3">
-        <ButtonLink to="/rules/hanging">Hanging data: chain, rods and fittings</ButtonLink>
+      <div className="mt-8 flex flex-wrap items-baseline gap-x-4 gap-y-1">
+        <h2 className="flex-1 text-lg font-strong">House rules</h2>
+        <ButtonLink to="/rules/house" size="small">
+          {mayEdit ? 'Change house rules' : 'Ranges and defaults'}
+        </ButtonLink>
+        <ButtonLink to="/rules/hanging" size="small">
+          Hanging data: chain, rods and fittings
+        </ButtonLink>
+      </div>
+      {houseRuleRows(house.rules).map(({ group, rows }) => (
+        <Rules key={group} caption={group} rows={rows} />
+      ))}
+      <h2 className="mt-8 text-lg font-strong">Fixed</h2>
+      <p className="max-w-2xl text-ink-2">
+        Published figures, and rules without a figure to choose: no organisation changes these here.
       </p>
+      <Rules caption="Not for a house to change" rows={fixedRuleRows} />
       <Rules caption="Practice of the trade" rows={tradeRules} />
     </PageFrame>
   )

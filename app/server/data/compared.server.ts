@@ -4,8 +4,10 @@ import { briefSchema, type Brief } from '#app/domain/brief/brief.ts'
 import { chosenVariants } from '#app/domain/comparison/chosen-variants.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { mountedHeaterSchema, type MountedHeater } from '#app/domain/layout/layout.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
 import { recordAnswer } from '#app/server/audit.server.ts'
+import { houseColumn, houseOf } from '#app/server/data/house.server.ts'
 import { modelsByCode } from '#app/server/data/heaters.server.ts'
 import type { OpenJob } from '#app/server/data/jobs.server.ts'
 import { variantList } from '#app/server/data/variants.server.ts'
@@ -27,6 +29,7 @@ export interface Compared {
   readonly brief: Brief
   /** The models that the chosen variants use. */
   readonly models: HeaterModel[]
+  readonly house: House
   /** None when the job has fewer than two variants. */
   readonly chosen: ComparedLayout[]
   /** Every variant of the job. */
@@ -38,13 +41,14 @@ const listSchema = z.array(
   z.object({ id: z.string(), number: z.number(), title: z.string(), revision: z.number(), heaters: z.unknown() }),
 )
 
-/** The variants that an address asks to compare, `1,3`, with site, brief and catalogue. */
+/** The variants that an address asks to compare, `1,3`, with site, brief, catalogue and house. */
 export function findCompared(job: OpenJob, asked: string | null): Promise<Compared> {
   return asOrganisation(job.member.organisationId, async (tx) => {
     const [place] = await tx
       .select({
         site: sites.body,
         brief: briefs.body,
+        house: houseColumn(tx),
         variants: variantList(tx, sites.jobId, ['id', 'number', 'title', 'revision', 'heaters']),
       })
       .from(sites)
@@ -67,6 +71,7 @@ export function findCompared(job: OpenJob, asked: string | null): Promise<Compar
       site: siteSchema.parse(place.site),
       brief: briefSchema.parse(place.brief),
       models: models.filter(({ code }) => used.has(code)),
+      house: houseOf(place.house),
       chosen,
       all: all.map(({ number, title }) => ({ number, title })),
     }

@@ -2,6 +2,7 @@ import { jobRequestSchema, startingSite, type JobRequest } from '#app/domain/job
 import { isRefusal, type Answer, type Refusal } from '#app/server/answers.server.ts'
 import { recordEvent } from '#app/server/audit.server.ts'
 import { insertBrief } from '#app/server/data/briefs.server.ts'
+import { readHouse } from '#app/server/data/house.server.ts'
 import { insertSite } from '#app/server/data/sites.server.ts'
 import { insertVariant } from '#app/server/data/variant-creation.server.ts'
 import { checked, findFault } from '#app/server/json-body.server.ts'
@@ -17,12 +18,13 @@ async function insertJob(
   asked: JobRequest,
 ): Promise<{ id: string; variantId: string }> {
   const { name, customer, brief } = asked
+  const { rules } = await readHouse(tx)
   const [job] = await tx
     .insert(jobs)
     .values({ organisationId: member.organisationId, name, customer, place: brief.place })
     .returning({ id: jobs.id })
   if (!job) throw new Error('The new job was not returned.')
-  await insertSite(tx, member, job.id, startingSite(asked))
+  await insertSite(tx, member, job.id, startingSite(asked, rules))
   await insertBrief(tx, member, job.id, brief)
   const variant = await insertVariant(tx, member, job.id, { title: 'First layout', heaters: [] })
   const detail = { variantId: variant.id }

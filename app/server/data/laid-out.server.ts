@@ -2,14 +2,13 @@ import { and, eq } from 'drizzle-orm'
 import { z } from 'zod'
 import { briefSchema, type Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
-import type { HangingData } from '#app/domain/layout/hanging-data.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
-import { hangingOf } from '#app/server/data/hanging.server.ts'
+import { houseColumn, houseOf } from '#app/server/data/house.server.ts'
 import { modelsByCode } from '#app/server/data/heaters.server.ts'
 import { present, variantColumns, variantList, variantOf, type Variant } from '#app/server/data/variants.server.ts'
 import { asOrganisation, own } from '#app/server/organisation.server.ts'
 import type { Member } from '#app/server/session.server.ts'
-import { hangingData } from '#drizzle/hanging-schema.ts'
 import { briefs, sites, variants } from '#drizzle/schema.ts'
 
 const neighbourSchema = z.object({ id: z.string(), number: z.number(), title: z.string() })
@@ -22,12 +21,12 @@ export interface LaidOut {
   readonly brief: Brief
   readonly briefRevision: number
   readonly models: ReadonlyMap<string, HeaterModel>
-  readonly hanging: HangingData
+  readonly house: House
   /** Every variant of the job by number, this one too. */
   readonly ofJob: readonly z.infer<typeof neighbourSchema>[]
 }
 
-/** A variant of the organisation with its site, brief and catalogue; null when it was deleted. */
+/** A variant of the organisation with its site, brief, catalogue and house; null when it was deleted. */
 export function findLaidOut(of: { readonly id: string; readonly member: Member }): Promise<LaidOut | null> {
   return asOrganisation(of.member.organisationId, async (tx) => {
     const [row] = await tx
@@ -35,13 +34,12 @@ export function findLaidOut(of: { readonly id: string; readonly member: Member }
         variant: variantColumns,
         site: { revision: sites.revision, body: sites.body },
         brief: { revision: briefs.revision, body: briefs.body },
-        hanging: { revision: hangingData.revision, body: hangingData.body },
+        house: houseColumn(tx),
         ofJob: variantList(tx, variants.jobId, ['id', 'number', 'title']),
       })
       .from(variants)
       .innerJoin(sites, and(own(sites), eq(sites.jobId, variants.jobId)))
       .innerJoin(briefs, and(own(briefs), eq(briefs.jobId, variants.jobId)))
-      .leftJoin(hangingData, own(hangingData))
       .where(and(own(variants), eq(variants.id, of.id), present))
     if (!row) return null
     return {
@@ -51,7 +49,7 @@ export function findLaidOut(of: { readonly id: string; readonly member: Member }
       brief: briefSchema.parse(row.brief.body),
       briefRevision: row.brief.revision,
       models: await modelsByCode(tx),
-      hanging: hangingOf(row.hanging).data,
+      house: houseOf(row.house),
       ofJob: neighbourSchema.array().parse(row.ofJob),
     }
   })

@@ -3,7 +3,7 @@ import { z } from 'zod'
 import { can, roles, type Role } from '#app/domain/access/roles.ts'
 import { authDatabase } from '#app/server/db.server.ts'
 import type { Member } from '#app/server/session.server.ts'
-import { member as memberships, user } from '#drizzle/schema.ts'
+import { member as memberships, user } from '#drizzle/accounts-schema.ts'
 
 /** Somebody of the organisation; the address only for those who manage people. */
 export interface Person {

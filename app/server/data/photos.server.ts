@@ -2,7 +2,7 @@ import { and, asc, eq, isNull } from 'drizzle-orm'
 import type { Action } from '#app/domain/access/roles.ts'
 import { photoMarksSchema, type PhotoMarks } from '#app/domain/photo/measurements.ts'
 import type { OpenJob } from '#app/server/data/jobs.server.ts'
-import { readSite, type KeptSite } from '#app/server/data/sites.server.ts'
+import { readHousedSite, type HousedSite } from '#app/server/data/sites.server.ts'
 import { isId, missing } from '#app/server/missing.server.ts'
 import { asOrganisation, own, type Transaction } from '#app/server/organisation.server.ts'
 import type { Locked } from '#app/server/saving.server.ts'
@@ -51,13 +51,12 @@ export const photoOf = (row: Omit<Photo, 'marks'> & { marks: unknown }): Photo =
 export const listPhotos = (job: OpenJob): Promise<Photo[]> =>
   asOrganisation(job.member.organisationId, (tx) => readPhotos(tx, job.id))
 
-/** The photos of a job, and the site that is measured in them. Throws when a job has no site: every job starts with one. */
-export const listPhotosWithSite = (job: OpenJob): Promise<{ photos: Photo[]; kept: KeptSite }> =>
-  asOrganisation(job.member.organisationId, async (tx) => {
-    const kept = await readSite(tx, job.id)
-    if (!kept) throw new Error(`Job ${job.id} has no site.`)
-    return { photos: await readPhotos(tx, job.id), kept }
-  })
+/** The photos of a job, and the site that is measured in them with what the house decided. */
+export const listPhotosWithSite = (job: OpenJob): Promise<{ photos: Photo[]; kept: HousedSite }> =>
+  asOrganisation(job.member.organisationId, async (tx) => ({
+    photos: await readPhotos(tx, job.id),
+    kept: await readHousedSite(tx, job.id),
+  }))
 
 async function readPhotos(tx: Transaction, jobId: string): Promise<Photo[]> {
   const rows = await tx

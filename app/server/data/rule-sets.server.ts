@@ -1,6 +1,8 @@
 import { and, asc, desc, eq } from 'drizzle-orm'
 import { ruleSetSchema, type ChosenRuleSet, type RuleSet } from '#app/domain/rules/rule-set.ts'
+import type { House } from '#app/domain/rules/house.ts'
 import { recordEvent } from '#app/server/audit.server.ts'
+import { readHouse } from '#app/server/data/house.server.ts'
 import { isId } from '#app/server/missing.server.ts'
 import { asOrganisation, own, type Transaction } from '#app/server/organisation.server.ts'
 import type { Member } from '#app/server/session.server.ts'
@@ -22,11 +24,16 @@ interface Row extends Omit<ChosenRuleSet, 'articles'> {
 
 const ruleSetOf = ({ id, revision, ...body }: Row): ChosenRuleSet => ({ id, revision, ...ruleSetSchema.parse(body) })
 
-/** The organisation's rule sets by name and edition. */
-export const listRuleSets = (member: Member): Promise<ChosenRuleSet[]> =>
-  asOrganisation(member.organisationId, readRuleSets)
+/** The organisation's rule sets and what it decided for itself. */
+export const findRules = (
+  member: Member,
+): Promise<{ readonly ruleSets: readonly ChosenRuleSet[]; readonly house: House }> =>
+  asOrganisation(member.organisationId, async (tx) => ({
+    ruleSets: await readRuleSets(tx),
+    house: await readHouse(tx),
+  }))
 
-/** The same within a transaction that asks for other things too. */
+/** The organisation's rule sets by name and edition. */
 export async function readRuleSets(tx: Transaction): Promise<ChosenRuleSet[]> {
   const order = [asc(ruleSets.name), asc(ruleSets.edition)]
   const rows = await tx

@@ -1,9 +1,11 @@
 import { and, eq } from 'drizzle-orm'
+import type { House } from '#app/domain/rules/house.ts'
 import { siteFaults } from '#app/domain/site/site-faults.ts'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
 import { roundLength } from '#app/domain/units.ts'
 import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
+import { houseColumn, houseOf } from '#app/server/data/house.server.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
 import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import { saveRevision, type Locked, type Revisioned, type Save } from '#app/server/saving.server.ts'
@@ -31,19 +33,24 @@ export const savedSiteSchema = siteSchema
   .transform((site) => rounded(site))
   .pipe(siteSchema)
 
-/** A job's site and the revision it has. */
-export interface KeptSite {
+/** A job's site, the revision it has, and what the house decided. */
+export interface HousedSite {
   readonly revision: number
   readonly site: Site
+  readonly house: House
 }
 
-/** The site of a job within a transaction that reads other things of the job too; null when there is none. */
-export async function readSite(tx: Transaction, jobId: string): Promise<KeptSite | null> {
+/**
+ * The site of a job with what the house decided, within a transaction that may read other things of the job too. Throws
+ * when a job has no site: every job starts with one.
+ */
+export async function readHousedSite(tx: Transaction, jobId: string): Promise<HousedSite> {
   const [row] = await tx
-    .select({ revision: sites.revision, body: sites.body })
+    .select({ revision: sites.revision, body: sites.body, house: houseColumn(tx) })
     .from(sites)
     .where(and(own(sites), eq(sites.jobId, jobId)))
-  return row ? { revision: row.revision, site: siteSchema.parse(row.body) } : null
+  if (!row) throw new Error(`Job ${jobId} has no site.`)
+  return { revision: row.revision, site: siteSchema.parse(row.body), house: houseOf(row.house) }
 }
 
 async function lockSite(tx: Transaction, jobId: string): Promise<Locked | null> {
@@ -56,12 +63,9 @@ async function lockSite(tx: Transaction, jobId: string): Promise<Locked | null> 
   return row ? { ...row, shown: { revision: row.revision, site: siteSchema.parse(row.body) } } : null
 }
 
-/** The site of a job as it is now. Throws when a job has none: every job starts with one. */
-export async function findSite(job: OpenJob): Promise<KeptSite> {
-  const kept = await asOrganisation(job.member.organisationId, (tx) => readSite(tx, job.id))
-  if (!kept) throw new Error(`Job ${job.id} has no site.`)
-  return kept
-}
+/** The site of a job as it is now, with what the house decided. */
+export const findHousedSite = (job: OpenJob): Promise<HousedSite> =>
+  asOrganisation(job.member.organisationId, (tx) => readHousedSite(tx, job.id))
 
 /** The first revision of a new job's site. */
 export async function insertSite(tx: Transaction, member: Member, jobId: string, site: Site): Promise<void> {

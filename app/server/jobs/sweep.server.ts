@@ -1,7 +1,7 @@
 import { lt, sql } from 'drizzle-orm'
 import type { Pool } from 'pg'
 import { authDatabase } from '#app/server/db.server.ts'
-import { session, signInAttempts, verification } from '#drizzle/schema.ts'
+import { session, signInAttempts, verification } from '#drizzle/accounts-schema.ts'
 
 /**
  * Removes what nobody needs any more: first answers older than a week (as the owner role, whose policy allows just

@@ -28,7 +28,7 @@ export async function axonometricSheet(
   { corner, theme }: z.infer<typeof lookSchema>,
   { job, organisation, day }: { readonly job: string; readonly organisation: string; readonly day: Date },
 ): Promise<ReactElement> {
-  const { site, brief, variant, models } = laid
+  const { site, brief, variant, models, house } = laid
   const quantity = irradianceScale(theme, brief.target)
   const plane = planesOf(site).body
   const emitters = variant.heaters.flatMap((heater) => {
@@ -44,6 +44,7 @@ export async function axonometricSheet(
     <AxonometricSheet
       {...{ job, variant, organisation, site, models, quantity, corner, plane }}
       layout={variant}
+      rules={house.rules}
       picture={map?.picture ?? null}
       pen={screenPen(theme)}
       date={dayInWords(day)}

@@ -27,7 +27,7 @@ function pictureOf({ site, brief }: Compared, models: Models, { heaters }: Compa
 
 /** The customer's sheet of a comparison; everything heavy is worked out off the event loop. */
 export async function comparisonSheet(compared: Compared, organisation: string, day: Date): Promise<ReactElement> {
-  const { site, brief } = compared
+  const { site, brief, house } = compared
   const models = new Map(compared.models.map((model) => [model.code, model]))
   const plane = planesOf(site).body
   const variants = await Promise.all(
@@ -36,7 +36,7 @@ export async function comparisonSheet(compared: Compared, organisation: string, 
       const layout = { title, heaters }
       const [map, figures] = await Promise.all([
         pictureOf(compared, models, variant, plane),
-        layoutFiguresOffThread({ site, brief, layout, models }),
+        layoutFiguresOffThread({ site, brief, layout, models, house }),
       ])
       return { number, title, revision, layout, picture: map?.picture ?? null, ...figures }
     }),
@@ -46,7 +46,7 @@ export async function comparisonSheet(compared: Compared, organisation: string, 
       {...{ site, brief, models, variants, organisation }}
       planeHeight={plane}
       date={dayInWords(day)}
-      cautions={sheetCautions({ brief, models, units: site.displayUnits, site, variants })}
+      cautions={sheetCautions({ brief, rules: house.rules, models, units: site.displayUnits, site, variants })}
     />
   )
 }

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { briefSchema } from '#app/domain/brief/brief.ts'
 import { assumptionOf, briefFields } from '#app/domain/brief/brief-fields.ts'
@@ -22,13 +23,13 @@ const answers = {
 }
 
 function asked(changes: Record<string, string>) {
-  const read = readEnquiry({ ...answers, ...changes })
+  const read = readEnquiry({ ...answers, ...changes }, plainHouseRules)
   if ('errors' in read) throw new Error(JSON.stringify(read.errors))
   return read.asked
 }
 
 function errorsOf(changes: Record<string, string>) {
-  const read = readEnquiry({ ...answers, ...changes })
+  const read = readEnquiry({ ...answers, ...changes }, plainHouseRules)
   return 'errors' in read ? read.errors : {}
 }
 
@@ -62,7 +63,7 @@ describe('an enquiry', () => {
       const { brief } = asked({ [name]: 'nonsense', [unknownName(name)]: 'on' })
       expect(brief.assumed).toContain(name)
       const field = enquiryFields.find((each) => each.name === name)
-      expect(field?.show(brief, 'metric')).toBe(field?.show({ ...assumedBrief, place: '' }, 'metric'))
+      expect(field?.show(brief, 'metric')).toBe(field?.show({ ...assumedBrief(plainHouseRules), place: '' }, 'metric'))
     },
   )
 

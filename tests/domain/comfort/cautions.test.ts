@@ -1,10 +1,11 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
-import { cautionLimits, eyeLimit, eyeLimitInAir, headCaution } from '#app/domain/comfort/cautions.ts'
+import { cautionLimits, eyeLimit, eyeLimitInAir } from '#app/domain/comfort/cautions.ts'
 import { brief } from '#tests/domain/comfort/terrace.ts'
 
 describe('limits on what falls on a guest', () => {
   it('are data with a source, and say what is from memory', () => {
-    const { stop, head, eye } = cautionLimits(brief({ stayMinutes: 90, airTemperature: 8 }))
+    const { stop, head, eye } = cautionLimits(brief({ stayMinutes: 90, airTemperature: 8 }), plainHouseRules)
     expect([stop, head, eye].map(({ value, relaxedFrom }) => [value, relaxedFrom])).toEqual([
       [1580, null],
       [600, null],
@@ -20,8 +21,7 @@ describe('limits on what falls on a guest', () => {
     [30, 600],
     [31, 600],
   ])('a stay of %d minutes has %d W/m² at the head', (stayMinutes, limit) => {
-    expect(headCaution(stayMinutes)).toBe(limit)
-    expect(cautionLimits(brief({ stayMinutes })).head.value).toBe(limit)
+    expect(cautionLimits(brief({ stayMinutes }), plainHouseRules).head.value).toBe(limit)
   })
 })
 
@@ -37,7 +37,7 @@ describe('the eye’s limit in the cold', () => {
     [35, 100],
   ])('at %d °C is %d W/m² for a continuous exposure', (airTemperature, limit) => {
     expect(eyeLimitInAir(airTemperature)).toBeCloseTo(limit, 9)
-    expect(cautionLimits(brief({ airTemperature })).eye.value).toBeCloseTo(limit, 9)
+    expect(cautionLimits(brief({ airTemperature }), plainHouseRules).eye.value).toBeCloseTo(limit, 9)
   })
 
   it('never steps: a tenth of a degree is at most 1.4 W/m², and warmer air never allows more', () => {
@@ -49,7 +49,7 @@ describe('the eye’s limit in the cold', () => {
   })
 
   it('names memory and house rule only where they hold', () => {
-    const sourceAt = (airTemperature: number) => cautionLimits(brief({ airTemperature })).eye.source
+    const sourceAt = (airTemperature: number) => cautionLimits(brief({ airTemperature }), plainHouseRules).eye.source
     expect(sourceAt(30)).not.toMatch(/relaxed|house rule/)
     expect(sourceAt(5)).toMatch(/relaxed in the cold.*from memory/)
     expect(sourceAt(5)).not.toMatch(/house rule/)
@@ -60,13 +60,13 @@ describe('the eye’s limit in the cold', () => {
     for (const airTemperature of [-5, 8, 16, 30]) {
       const limits = Array.from(
         { length: 60 },
-        (_, i) => cautionLimits(brief({ airTemperature, stayMinutes: i + 1 })).eye,
+        (_, i) => cautionLimits(brief({ airTemperature, stayMinutes: i + 1 }), plainHouseRules).eye,
       )
       limits.slice(1).forEach(({ value }, i) => expect(value).toBeLessThanOrEqual(limits[i]!.value))
     }
-    const short = cautionLimits(brief({ stayMinutes: 2, airTemperature: 0 })).eye
+    const short = cautionLimits(brief({ stayMinutes: 2, airTemperature: 0 }), plainHouseRules).eye
     expect(short).toMatchObject({ value: eyeLimit(120), relaxedFrom: null })
-    const longer = cautionLimits(brief({ stayMinutes: 10, airTemperature: 0 })).eye
+    const longer = cautionLimits(brief({ stayMinutes: 10, airTemperature: 0 }), plainHouseRules).eye
     expect(longer).toMatchObject({ value: 400, relaxedFrom: eyeLimit(600) })
   })
 })

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { explainSeat } from '#app/domain/comfort/explain.ts'
 import { seatWarmth, windNames, type WarmthInput } from '#app/domain/comfort/seat-warmth.ts'
@@ -21,7 +22,7 @@ const input = (change: Partial<WarmthInput> = {}): WarmthInput => ({
 })
 
 const explained = (given: WarmthInput, figure: SeatFigure) => {
-  const explanation = explainSeat(given, 'S1', figure)
+  const explanation = explainSeat(given, 'S1', figure, plainHouseRules)
   if (!explanation) throw new Error('no such seat')
   return explanation
 }
@@ -116,7 +117,7 @@ describe('what it would take to feel like indoors', () => {
 
 describe('what cannot be explained', () => {
   it('has no seat, no heater or no beam data', () => {
-    expect(explainSeat(input(), 'nobody', { quantity: 'body' })).toBeNull()
+    expect(explainSeat(input(), 'nobody', { quantity: 'body' }, plainHouseRules)).toBeNull()
     const bare = explained(input({ layout: { heaters: [] } }), { quantity: 'body' })
     expect(bare).toMatchObject({ value: null, base: 0, parts: [], byHeater: [], tolerance: null })
     const models: ReadonlyMap<string, HeaterModel> = modelsOf(model({ beam: null }))

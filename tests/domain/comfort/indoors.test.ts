@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { indoorsAt } from '#app/domain/comfort/indoors.ts'
 import { seatWarmth } from '#app/domain/comfort/seat-warmth.ts'
@@ -16,7 +17,7 @@ const at = (
   change: Parameters<typeof brief>[0],
   heaters = [heater('H1')],
   wind: 'calm' | 'design' | 'gust' = 'design',
-) => indoorsAt(seatWarmth(input(change, heaters))[0]!, brief(change), wind)
+) => indoorsAt(seatWarmth(input(change, heaters))[0]!, brief(change), wind, plainHouseRules)
 
 describe('what it would take to feel like indoors', () => {
   it('is so many times the heat, and with that heat it does', () => {
@@ -27,7 +28,12 @@ describe('what it would take to feel like indoors', () => {
     expect(stronger.feelsLike.design.after).toBeCloseTo(20, 6)
     expect(stronger.head).toBeCloseTo(head, 6)
     expect(
-      indoorsAt(seatWarmth(input(evening, [heater('H1')], 2001 * times!))[0]!, brief(evening), 'design'),
+      indoorsAt(
+        seatWarmth(input(evening, [heater('H1')], 2001 * times!))[0]!,
+        brief(evening),
+        'design',
+        plainHouseRules,
+      ),
     ).toMatchObject({
       answer: 'it does',
       sentence: 'It feels like indoors at 0.4 m/s of wind.',

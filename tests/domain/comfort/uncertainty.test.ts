@@ -1,8 +1,9 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { seatWarmth, warmthOfSeat, type WarmthInput } from '#app/domain/comfort/seat-warmth.ts'
 import { sourcesOf } from '#app/domain/comfort/sources.ts'
 import {
-  defaultFluxTolerances,
+  fluxTolerances,
   figureOf,
   seatTolerance,
   type FluxTolerances,
@@ -87,9 +88,9 @@ describe('first-order tolerance against a seeded Monte Carlo', () => {
   it.each(cases)('site $key variant $number, seat $index: body, head and feels-like', ({ key, number, index }) => {
     const input = demo(key, number)
     const at = input.site.seats[index]!
-    const sampled = bySampling(input, at, figures, defaultFluxTolerances, 3000)
+    const sampled = bySampling(input, at, figures, fluxTolerances(plainHouseRules), 3000)
     figures.forEach((figure, i) => {
-      const first = seatTolerance(input, at, figure, 'everything')!
+      const first = seatTolerance(input, at, figure, 'everything', fluxTolerances(plainHouseRules))!
       expect(Math.abs(first.total / sampled[i]! - 1), figure.quantity).toBeLessThan(0.05)
     })
   })
@@ -101,7 +102,7 @@ describe('first-order tolerance against a seeded Monte Carlo', () => {
     const at = input.site.seats[index]!
     const sampled = bySampling(input, at, atPlace, seatAlone, 2000)
     atPlace.forEach((figure, i) => {
-      const first = seatTolerance(input, at, figure, 'seat')!
+      const first = seatTolerance(input, at, figure, 'seat', fluxTolerances(plainHouseRules))!
       expect(Math.abs(first.total / sampled[i]! - 1), figure.quantity).toBeLessThan(0.06)
       expect(first.total).toBeCloseTo(seatTolerance(input, at, figure, 'everything', seatAlone)!.total, 9)
     })
@@ -128,7 +129,7 @@ describe('tolerance of a seat’s figure', () => {
     models: modelsOf(model()),
     ...change,
   })
-  const of = (given: WarmthInput, tolerances?: FluxTolerances) =>
+  const of = (given: WarmthInput, tolerances: FluxTolerances = fluxTolerances(plainHouseRules)) =>
     seatTolerance(given, given.site.seats[0]!, { quantity: 'body' }, 'everything', tolerances)!
   const share = (given: WarmthInput, name: RegExp) => of(given).shares.find((each) => name.test(each.of))!
 
@@ -199,7 +200,11 @@ describe('tolerance of a seat’s figure', () => {
 
   it('is null without heaters that can be told', () => {
     const bare = input({ layout: { heaters: [] } })
-    expect(seatTolerance(bare, bare.site.seats[0]!, { quantity: 'body' }, 'everything')).toBeNull()
-    expect(seatTolerance(bare, bare.site.seats[0]!, { quantity: 'head' }, 'seat')).toBeNull()
+    expect(
+      seatTolerance(bare, bare.site.seats[0]!, { quantity: 'body' }, 'everything', fluxTolerances(plainHouseRules)),
+    ).toBeNull()
+    expect(
+      seatTolerance(bare, bare.site.seats[0]!, { quantity: 'head' }, 'seat', fluxTolerances(plainHouseRules)),
+    ).toBeNull()
   })
 })

@@ -1,3 +1,4 @@
+import { plainHouse } from '#tests/support/plain-site.ts'
 import { describe, expect, it } from 'vitest'
 import { layoutFigures } from '#app/domain/comparison/layout-figures.ts'
 import { sheetCautions } from '#app/domain/comparison/sheet-cautions.ts'
@@ -5,10 +6,17 @@ import { brief, heater, model, modelsOf, seat, site } from '#tests/domain/comfor
 
 const models = modelsOf(model())
 const said = (change: Parameters<typeof brief>[0]) => {
-  const place = { site: site([seat('S1')]), brief: brief(change), models }
+  const place = { site: site([seat('S1')]), brief: brief(change), models, house: plainHouse() }
   const layout = { title: 'One', heaters: [heater('H1')] }
   const variants = [{ number: 1, layout, ...layoutFigures({ ...place, layout }) }]
-  return sheetCautions({ brief: place.brief, site: place.site, models, units: 'metric', variants }).join(' ')
+  return sheetCautions({
+    brief: place.brief,
+    site: place.site,
+    models,
+    rules: place.house.rules,
+    units: 'metric',
+    variants,
+  }).join(' ')
 }
 
 describe('what a sheet says of the heat', () => {

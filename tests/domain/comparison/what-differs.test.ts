@@ -1,3 +1,5 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
+import { plainHouse } from '#tests/support/plain-site.ts'
 import { describe, expect, it } from 'vitest'
 import { askFor, chosenVariants } from '#app/domain/comparison/chosen-variants.ts'
 import { countByModel, tightestMargin, type ComparedVariant } from '#app/domain/comparison/compared-variant.ts'
@@ -16,7 +18,7 @@ const { site, brief } = demo
 const terms = { units: 'metric' as const, target: brief.target, overlapThreshold: 80 }
 
 function variantOf(number: number, layout: Layout, overlap: number | null = null): ComparedVariant {
-  const figures = layoutFigures({ site, brief, layout, models })
+  const figures = layoutFigures({ site, brief, layout, models, house: plainHouse() })
   return { number, title: layout.title, layout, models, ...figures, price: listPriceOf(layout, models, 'EUR'), overlap }
 }
 
@@ -157,7 +159,14 @@ describe('the variants that an address asks for', () => {
 })
 
 describe('the cautions of a sheet', () => {
-  const cautions = sheetCautions({ brief, models, units: 'metric', site, variants: [second, third] }).join('\n')
+  const cautions = sheetCautions({
+    brief,
+    rules: plainHouseRules,
+    models,
+    units: 'metric',
+    site,
+    variants: [second, third],
+  }).join('\n')
   it('name the clearances of the manuals, what is assumed, what it feels like without heat and who approves', () => {
     expect(cautions).toContain('variant 2, 0.45 m at the ends, 0.45 m above, 1.30 m in front')
     expect(cautions).toContain('variant 3, 0.40 m at the ends, 0.35 m above, 1.10 m in front')

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { measureLines, measureText, sizeText } from '#app/domain/doubt/in-words.ts'
 import { settlings } from '#app/domain/doubt/settling.ts'
@@ -6,7 +7,12 @@ import { coverMoves, dimension, finish, oneHeater } from '#tests/domain/doubt/sm
 
 const linesOf = (...dimensions: ReturnType<typeof dimension>[]) => {
   const { made } = finish(sizeEffects(oneHeater(dimensions), false))
-  return measureLines(made.effects, made.nominal, settlings(made.nominal.checks, made.effects), 'metric')
+  return measureLines(
+    made.effects,
+    made.nominal,
+    settlings(made.nominal.checks, made.effects, plainHouseRules.toleranceLaser),
+    { units: 'metric', rules: plainHouseRules },
+  )
 }
 const roof = dimension('roof', 3, 0.25, coverMoves, { label: 'height of the roof at the house wall' })
 

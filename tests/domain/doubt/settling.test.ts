@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { settlings } from '#app/domain/doubt/settling.ts'
 import { sizeEffects } from '#app/domain/doubt/size-effects.ts'
@@ -7,7 +8,9 @@ import { coverMoves, dimension, finish, oneHeater } from '#tests/domain/doubt/sm
 const settled = (...tolerances: number[]) => {
   const dimensions = tolerances.map((tolerance, i) => dimension(`d${i}`, 3, tolerance, coverMoves))
   const { made } = finish(sizeEffects(oneHeater(dimensions), false))
-  return settlings(made.nominal.checks, made.effects).find(({ finding }) => finding.rule === 'clearance-above')
+  return settlings(made.nominal.checks, made.effects, plainHouseRules.toleranceLaser).find(
+    ({ finding }) => finding.rule === 'clearance-above',
+  )
 }
 /** The tolerance left when those of `at` are measured to 5 mm, by hand. */
 const left = (tolerances: readonly number[], at: readonly number[]) =>

@@ -1,5 +1,6 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
-import { seatTolerance } from '#app/domain/comfort/uncertainty.ts'
+import { seatTolerance, fluxTolerances } from '#app/domain/comfort/uncertainty.ts'
 import { seatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import { rankEffects } from '#app/domain/doubt/ranking.ts'
 import { sizeEffects } from '#app/domain/doubt/size-effects.ts'
@@ -89,7 +90,7 @@ describe('effects of all sizes', () => {
     const changes = effects
       .filter(({ size }) => size.kind === 'dimension')
       .map(({ coldest }) => (coldest.higher! - coldest.lower!) / 2)
-    const { total } = seatTolerance(question, aside, { quantity: 'body' }, 'seat')!
+    const { total } = seatTolerance(question, aside, { quantity: 'body' }, 'seat', fluxTolerances(plainHouseRules))!
     expect(Math.hypot(...changes) / total).toBeCloseTo(1, 4)
   })
   it('take sizes that nobody stated together by their thing, each by 25 mm', () => {
@@ -131,7 +132,7 @@ describe('the ranking of sizes', () => {
   ]
   const ranked = (of: typeof dimensions, by: Parameters<typeof rankEffects>[2]) => {
     const { effects, nominal } = effectsOf(oneHeater(of), false)
-    return rankEffects(effects, nominal, by).filter(({ size }) => size.kind === 'dimension').map(({ size }) => size.label.slice(-1)).join('') // prettier-ignore
+    return rankEffects(effects, nominal, by, plainHouseRules).filter(({ size }) => size.kind === 'dimension').map(({ size }) => size.label.slice(-1)).join('') // prettier-ignore
   }
   it.each([
     ['coldest', 'bacdef'],

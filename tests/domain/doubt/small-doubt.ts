@@ -1,3 +1,4 @@
+import { plainHouse } from '#tests/support/plain-site.ts'
 import type { FiguresQuestion } from '#app/domain/comparison/layout-figures.ts'
 import type { Dimension, Site } from '#app/domain/site/site.ts'
 import { brief, heater, model, modelsOf, seat, site } from '#tests/domain/comfort/terrace.ts'
@@ -49,6 +50,7 @@ export function oneHeater(dimensions: readonly Dimension[], change: Partial<Figu
     brief: brief(),
     layout: { title: 'One', heaters: [heater('H1')] },
     models: modelsOf(pointModel),
+    house: plainHouse(),
     ...change,
   }
 }

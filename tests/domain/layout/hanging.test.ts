@@ -3,7 +3,7 @@ import { chainToOrder, hangScheduleOf } from '#app/domain/layout/hanging.ts'
 import { plainHanging } from '#app/domain/layout/plain-hanging.ts'
 import { demoModels, demoSites } from '#drizzle/seed/demo-sites.ts'
 import { chance as seededChance } from '#tests/support/chance.ts'
-import { plainHeater, plainModel, plainSite } from '#tests/support/plain-site.ts'
+import { plainHeater, plainModel, plainSite, plainHouse } from '#tests/support/plain-site.ts'
 
 const models = new Map(demoModels().map((model) => [model.code, model]))
 const siteA = demoSites().find(({ key }) => key === 'A')!
@@ -11,7 +11,7 @@ const siteA = demoSites().find(({ key }) => key === 'A')!
 function schedule(number: number, id: string) {
   const { layout } = siteA.variants.find((variant) => variant.number === number)!
   const heater = layout.heaters.find((found) => found.id === id)!
-  return hangScheduleOf(siteA.site, heater, models.get(heater.model)!)!
+  return hangScheduleOf(siteA.site, heater, models.get(heater.model)!, plainHouse())!
 }
 
 // The hang schedules of the demonstration: drop, chain net, links and residual of the wall and the river end, mm.
@@ -52,7 +52,7 @@ describe('hangers under a slope', () => {
     const model = plainModel({ suspensionEyePitch: 0.8 })
     const short = 3 + 2.6 * Math.tan(slope) - 0.3
     const heater = plainHeater({ x: 3, lowestPoint: short - model.body.depth })
-    const { hangers } = hangScheduleOf(site, heater, model)!
+    const { hangers } = hangScheduleOf(site, heater, model, plainHouse())!
     expect(hangers[0]!.drop).toBeCloseTo(0.3, 9)
     expect(hangers[1]!.drop).toBeCloseTo(0.5144, 4)
   })
@@ -60,7 +60,7 @@ describe('hangers under a slope', () => {
   it('says when the fittings alone are too long for a chain, and what tilt that leaves', () => {
     const model = plainModel({ suspensionEyePitch: 0.8 })
     const heater = plainHeater({ x: 3, lowestPoint: 3 + 2.6 * Math.tan(slope) - 0.03 - model.body.depth })
-    const { hangers, tiltLeftDeg } = hangScheduleOf(site, heater, model)!
+    const { hangers, tiltLeftDeg } = hangScheduleOf(site, heater, model, plainHouse())!
     expect(hangers.map(({ outcome }) => outcome)).toEqual(['too short', 'can be made'])
     // Drop 30 mm, fittings 95 mm, taken up 40 mm: 25 mm are left over 800 mm.
     expect(hangers[0]!.left).toBeCloseTo(-0.025, 9)
@@ -69,7 +69,7 @@ describe('hangers under a slope', () => {
 
   it('are cut to length for rods, with nothing left over', () => {
     const rods = plainHeater({ mount: 'drop rods', lowestPoint: 2.2 })
-    const { hangers } = hangScheduleOf(plainSite(), rods, plainModel())!
+    const { hangers } = hangScheduleOf(plainSite(), rods, plainModel(), plainHouse())!
     // 3.000 − 2.200 − 0.105 body − 0.095 fittings.
     expect(hangers[0]!.links).toBeNull()
     expect(hangers[0]!.cutLength).toBeCloseTo(0.6, 9)
@@ -77,14 +77,17 @@ describe('hangers under a slope', () => {
   })
 
   it('are not scheduled for brackets or without a member above', () => {
-    expect(hangScheduleOf(plainSite(), plainHeater({ mount: 'wall bracket' }), plainModel())).toBeNull()
-    expect(hangScheduleOf(plainSite(), plainHeater({ y: 3 }), plainModel())).toBeNull()
+    expect(hangScheduleOf(plainSite(), plainHeater({ mount: 'wall bracket' }), plainModel(), plainHouse())).toBeNull()
+    expect(hangScheduleOf(plainSite(), plainHeater({ y: 3 }), plainModel(), plainHouse())).toBeNull()
   })
 })
 
 describe('hangers by an engineer’s own data', () => {
   const hung = (data: Partial<typeof plainHanging>, changes: Parameters<typeof plainHeater>[0] = {}) =>
-    hangScheduleOf(plainSite(), plainHeater(changes), plainModel(), { ...plainHanging, ...data })!.hangers[0]!
+    hangScheduleOf(plainSite(), plainHeater(changes), plainModel(), {
+      ...plainHouse(),
+      hanging: { ...plainHanging, ...data },
+    })!.hangers[0]!
 
   it('have links of its pitch, its allowance, and a safety line longer by its slack', () => {
     // 3.000 − 2.300 − 0.105 = 0.595 m; less 0.120 leaves 0.475 m: 14 links of 35 mm are 0.490, 15 mm too long.
@@ -123,13 +126,13 @@ describe('hangers by an engineer’s own data', () => {
 
   it('take chain in whole metres per order', () => {
     // Net 0.500: 18 links of 28 mm are 0.504 m, two hangers 1.008 m.
-    const one = hangScheduleOf(plainSite(), plainHeater(), plainModel())!
+    const one = hangScheduleOf(plainSite(), plainHeater(), plainModel(), plainHouse())!
     expect(one.hangers.map(({ links }) => links)).toEqual([18, 18])
-    expect(chainToOrder([one])).toBe(2)
+    expect(chainToOrder([one], plainHanging)).toBe(2)
     expect(chainToOrder([one], { ...plainHanging, orderStep: 0.5 })).toBe(1.5)
-    expect(chainToOrder([])).toBe(0)
-    const rods = hangScheduleOf(plainSite(), plainHeater({ mount: 'drop rods' }), plainModel())!
-    expect(chainToOrder([rods])).toBe(0)
+    expect(chainToOrder([], plainHanging)).toBe(0)
+    const rods = hangScheduleOf(plainSite(), plainHeater({ mount: 'drop rods' }), plainModel(), plainHouse())!
+    expect(chainToOrder([rods], plainHanging)).toBe(0)
   })
 })
 
@@ -145,7 +148,7 @@ it('differs by the slope along the element for 200 random covers and turns (inde
       members: [{ ...plainSite().members[0]!, from: [3 - 2 * dx, 2 - 2 * dy], to: [3 + 2 * dx, 2 + 2 * dy] }],
     })
     const turnDeg = (((turn * 180) / Math.PI + 180) % 360) - 180
-    const { hangers } = hangScheduleOf(site, plainHeater({ turnDeg, lowestPoint: 2.4 }), plainModel())!
+    const { hangers } = hangScheduleOf(site, plainHeater({ turnDeg, lowestPoint: 2.4 }), plainModel(), plainHouse())!
     expect(hangers[0]!.drop - hangers[1]!.drop).toBeCloseTo(0.448 * Math.tan(steep) * Math.cos(turn - downhill), 7)
   }
 })

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { memberSpacings } from '#app/domain/layout/member-spacings.ts'
 import type { Member } from '#app/domain/site/site.ts'
@@ -10,11 +11,17 @@ const membersAt = (...places: number[]): Member[] =>
 const model = plainModel()
 const models = new Map([[model.code, model]])
 const spacings = (members: Member[], spacing: number, count = 1, changes = {}) =>
-  memberSpacings(plainSite({ members }), [plainHeater({ y: 0, memberId: null, ...changes })], models, {
-    spacing,
-    count,
-    directionDeg: 90,
-  })
+  memberSpacings(
+    plainSite({ members }),
+    [plainHeater({ y: 0, memberId: null, ...changes })],
+    models,
+    {
+      spacing,
+      count,
+      directionDeg: 90,
+    },
+    plainHouseRules,
+  )
 
 describe('the spacings that members allow', () => {
   // The rule of the trade: members 0.90 m apart offer 1.80 or 2.70 m where 2.10 m was wanted (common practice, no source).
@@ -38,7 +45,9 @@ describe('the spacings that members allow', () => {
 
   it('are none along a member, for walls, and where nothing is crossed', () => {
     const along = { spacing: 2, count: 1, directionDeg: 0 }
-    expect(memberSpacings(plainSite({ members: membersAt(0) }), [plainHeater({ y: 0 })], models, along)).toBeNull()
+    expect(
+      memberSpacings(plainSite({ members: membersAt(0) }), [plainHeater({ y: 0 })], models, along, plainHouseRules),
+    ).toBeNull()
     expect(spacings(apart, 2.1, 1, { mount: 'wall bracket' })).toBeNull()
     expect(spacings(membersAt(0), 2.1)).toBeNull()
   })

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { layoutChange } from '#app/domain/comparison/changed-seats.ts'
 import { electricalPower } from '#app/domain/heaters/power.ts'
@@ -45,14 +46,14 @@ function integrated(heater: MountedHeater, point: [number, number, number]): num
 
 describe('moving to the nearest member', () => {
   const heater = variant1.heaters[1]!
-  const { move } = remediesOf(siteA.site, heater, models.get(heater.model)!)
+  const { move } = remediesOf(siteA.site, heater, models.get(heater.model)!, plainHouseRules)
   const moved = { ...variant1, heaters: variant1.heaters.map((each) => (each.id === heater.id ? move!.heater : each)) }
 
   it('goes half a bay to a beam, along which the element lies', () => {
     expect(move!.distance).toBeCloseTo(1.32, 9)
     expect(move!.supportName).toMatch(/^beam [12]$/)
     expect(move!.heater.turnDeg % 180).toBe(90)
-    expect(supportOf(siteA.site, move!.heater, models.get(heater.model)!).outcome).toBe('held')
+    expect(supportOf(siteA.site, move!.heater, models.get(heater.model)!, plainHouseRules).outcome).toBe('held')
   })
 
   it('shows the figures of seats before and after as an integrator of its own has them', () => {
@@ -85,10 +86,11 @@ describe('what is offered', () => {
     for (const { layout } of variants)
       for (const heater of layout.heaters) {
         const model = models.get(heater.model)!
-        if (supportOf(site, heater, model).outcome !== 'not held') continue
-        const { move, rails } = remediesOf(site, heater, model)
-        if (move) expect(supportOf(site, move.heater, model).outcome).toBe('held')
-        if (rails) expect(supportOf(withRails(site, rails.rails), rails.heater, model).outcome).toBe('held')
+        if (supportOf(site, heater, model, plainHouseRules).outcome !== 'not held') continue
+        const { move, rails } = remediesOf(site, heater, model, plainHouseRules)
+        if (move) expect(supportOf(site, move.heater, model, plainHouseRules).outcome).toBe('held')
+        if (rails)
+          expect(supportOf(withRails(site, rails.rails), rails.heater, model, plainHouseRules).outcome).toBe('held')
         offered += move || rails ? 1 : 0
         expect(move ?? rails).not.toBeNull()
       }
@@ -97,7 +99,7 @@ describe('what is offered', () => {
 
   it('is a rail over a heater that stays, taken away again without a trace', () => {
     const heater = variant1.heaters[0]!
-    const { rails } = remediesOf(siteA.site, heater, models.get(heater.model)!)
+    const { rails } = remediesOf(siteA.site, heater, models.get(heater.model)!, plainHouseRules)
     expect({ ...rails!.heater, memberId: null }).toEqual({ ...heater, memberId: null })
     expect(rails!.rails.map(({ kind }) => kind)).toEqual(['rail'])
     expect(withoutRails(withRails(siteA.site, rails!.rails), rails!.rails)).toEqual(siteA.site)
@@ -105,10 +107,13 @@ describe('what is offered', () => {
 
   it('sets a splayed heater plumb, and offers nothing where nothing holds', () => {
     const model = plainModel()
-    const { move } = remediesOf(plainSite(), plainHeater({ y: 3, splayed: true }), model)
+    const { move } = remediesOf(plainSite(), plainHeater({ y: 3, splayed: true }), model, plainHouseRules)
     expect(move!.heater).toMatchObject({ y: 2, splayed: false, memberId: 'beam' })
-    expect(remediesOf(plainSite({ members: [] }), plainHeater(), model)).toEqual({ move: null, rails: null })
+    expect(remediesOf(plainSite({ members: [] }), plainHeater(), model, plainHouseRules)).toEqual({
+      move: null,
+      rails: null,
+    })
     // Higher than the member: moving does not help.
-    expect(remediesOf(plainSite(), plainHeater({ y: 3, lowestPoint: 2.95 }), model).move).toBeNull()
+    expect(remediesOf(plainSite(), plainHeater({ y: 3, lowestPoint: 2.95 }), model, plainHouseRules).move).toBeNull()
   })
 })

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { facingMembers, firstMet } from '#app/domain/layout/facing-members.ts'
 import { hangScheduleOf } from '#app/domain/layout/hanging.ts'
@@ -6,7 +7,7 @@ import { splayedPair } from '#app/domain/layout/splayed-pair.ts'
 import { supportOf } from '#app/domain/layout/supports.ts'
 import type { Member, Site } from '#app/domain/site/site.ts'
 import { chance as seededChance } from '#tests/support/chance.ts'
-import { plainHeater, plainModel, plainSite } from '#tests/support/plain-site.ts'
+import { plainHeater, plainModel, plainSite, plainHouse } from '#tests/support/plain-site.ts'
 
 const beam = plainSite().members[0]!
 const beamAt = (id: string, y: number, underside: number, more: Partial<Member> = {}): Member => ({
@@ -83,7 +84,8 @@ describe('members on either side', () => {
 })
 
 describe('a heater on splayed pairs', () => {
-  const reasonAt = (members: Member[], changes = {}) => supportOf(between(members), splayed(changes), model).reason
+  const reasonAt = (members: Member[], changes = {}) =>
+    supportOf(between(members), splayed(changes), model, plainHouseRules).reason
 
   it('is held between two members within a metre of its eyes, no farther', () => {
     // Undersides 1.2 m over the eyes, so that the angle decides nothing.
@@ -92,7 +94,7 @@ describe('a heater on splayed pairs', () => {
     expect(reasonAt(pair(0.9999))).toBe('held')
     expect(reasonAt(pair(1))).toBe('held')
     expect(reasonAt(pair(1.0001))).toBe('out of reach')
-    expect(supportOf(between(pair(0.9)), splayed(), model).ids).toEqual(['a', 'b'])
+    expect(supportOf(between(pair(0.9)), splayed(), model, plainHouseRules).ids).toEqual(['a', 'b'])
   })
 
   it('is held up to 45° from plumb, no flatter', () => {
@@ -108,7 +110,7 @@ describe('a heater on splayed pairs', () => {
     expect(reasonAt([beamAt('a', 2, 3), beamAt('b', 2.6, 3, { to: [2, 2.6] })])).toBe('out of reach')
     const unknown = beamAt('b', 2.6, 3, { underside: { follows: 'no cover' } })
     expect(reasonAt([beamAt('a', 2, 3), unknown])).toBe('height not known')
-    expect(supportOf(between([beamAt('a', 2, 3)]), splayed(), plainModel({ suspensionEyePitch: null })).reason).toBe('eyes not stated') // prettier-ignore
+    expect(supportOf(between([beamAt('a', 2, 3)]), splayed(), plainModel({ suspensionEyePitch: null }), plainHouseRules).reason).toBe('eyes not stated') // prettier-ignore
   })
 
   it('does not hold a tilt about its own axis on chain, and says nothing of it on a wall bracket', () => {
@@ -129,7 +131,7 @@ describe('the hang schedule of splayed pairs', () => {
         members: [2, 2.7].map((y, k) => ({ ...beamAt(`m${k}`, y, 3), underside: { follows: 'roof' } })),
       })
       const heater = splayed({ x: 3, y: 2.1 + 0.5 * chance(), lowestPoint: 2.35 })
-      const { hangers } = hangScheduleOf(site, heater, model)!
+      const { hangers } = hangScheduleOf(site, heater, model, plainHouse())!
       expect(hangers.map(({ end }) => end)).toEqual([0, 0, 1, 1])
       for (const { end, memberId, length, tension, net } of hangers) {
         const [x, y] = [3 + (end === 0 ? -0.224 : 0.224), memberId === 'm0' ? 2 : 2.7]
@@ -150,7 +152,10 @@ describe('the hang schedule of splayed pairs', () => {
     const site = between([beamAt('a', 2, eyeHeight(2.3) + rise), beamAt('b', 2.75, eyeHeight(2.3) + rise + 0.06)])
     const data = { ...plainHanging, shortens: 0, lengthens: 0 }
     const heater = splayed({ y: 2.3 })
-    const { hangers, residualTiltDeg, tiltLeftDeg } = hangScheduleOf(site, heater, model, data)!
+    const { hangers, residualTiltDeg, tiltLeftDeg } = hangScheduleOf(site, heater, model, {
+      ...plainHouse(),
+      hanging: data,
+    })!
     expect(tiltLeftDeg).toBeCloseTo(residualTiltDeg, 12)
     // Both ends are alike: no tilt whatever the residuals.
     expect(residualTiltDeg).toBeCloseTo(0, 9)
@@ -159,7 +164,7 @@ describe('the hang schedule of splayed pairs', () => {
       ...site,
       members: [site.members[0]!, { ...site.members[1]!, underside: { from: 3.0, to: 3.09 } }],
     }
-    const schedule = hangScheduleOf(sloping, heater, model, data)!
+    const schedule = hangScheduleOf(sloping, heater, model, { ...plainHouse(), hanging: data })!
     const eyeZ = (end: 0 | 1) => {
       const [a, b] = schedule.hangers.filter((hanger) => hanger.end === end)
       const [ra, rb] = [a!.length - a!.residual, b!.length - b!.residual]
@@ -179,7 +184,7 @@ it('hangs plumb from one of a steep pair where the other would be slack', () => 
   const sloping = (id: string, y: number, rise: number) =>
     beamAt(id, y, 0, { underside: { from: eyeHeight(2.3) + rise, to: eyeHeight(2.3) + rise - 0.06 } })
   const site = between([sloping('a', 2.28, 0.54), sloping('b', 2.32, 0.51)])
-  const { hangers, residualTiltDeg } = hangScheduleOf(site, splayed(), model, data)!
+  const { hangers, residualTiltDeg } = hangScheduleOf(site, splayed(), model, { ...plainHouse(), hanging: data })!
   const restOf = (end: 0 | 1) => {
     const [a, b] = hangers.filter((hanger) => hanger.end === end)
     // The lowest point within both lengths, by trying 400,000 of them.

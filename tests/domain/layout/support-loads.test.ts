@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { bodyOf } from '#app/domain/layout/body.ts'
 import { pointLoads, railReactions, railRests, weightOf } from '#app/domain/layout/support-loads.ts'
@@ -13,7 +14,7 @@ function loadsIn(key: 'A' | 'B' | 'C', number: number, id: string, changes: Part
   const heater = { ...variant.layout.heaters.find((found) => found.id === id)!, ...changes }
   const model = models.get(heater.model)!
   return {
-    loads: pointLoads(demo.site, model, bodyOf(heater, model), supportOf(demo.site, heater, model)),
+    loads: pointLoads(demo.site, model, bodyOf(heater, model), supportOf(demo.site, heater, model, plainHouseRules)),
     weight: model.body.mass * 9.80665,
   }
 }

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import type { Mount } from '#app/domain/heaters/heater-model.ts'
 import { movedToSupport, railsFor } from '#app/domain/layout/support-remedies.ts'
@@ -10,7 +11,7 @@ const site = plainSite()
 const model = plainModel()
 const beam = site.members[0]!
 const reasonOf = (changes: Parameters<typeof plainHeater>[0], on: Site = site, of = model) =>
-  supportOf(on, plainHeater(changes), of).reason
+  supportOf(on, plainHeater(changes), of, plainHouseRules).reason
 const second: Member = { ...beam, id: 'second', name: 'second', from: [0, 2.448], to: [6, 2.448] }
 
 describe('chain', () => {
@@ -24,7 +25,7 @@ describe('chain', () => {
     expect(reasonOf({ turnDeg: 90 })).toBe('an eye has no member')
     // The eyes are 448 mm apart: a second member that far away carries the other one.
     const both = plainSite({ members: [beam, second] })
-    const support = supportOf(both, plainHeater({ turnDeg: 90, y: 2.224 }), model)
+    const support = supportOf(both, plainHeater({ turnDeg: 90, y: 2.224 }), model, plainHouseRules)
     expect([support.reason, support.ids]).toEqual(['held', ['beam', 'second']])
   })
 
@@ -73,14 +74,14 @@ describe('rigid mounts', () => {
 describe('the two remedies', () => {
   it('moves a heater under the nearest member, along it and level, and it is then held', () => {
     const heater = plainHeater({ x: 2.5, y: 3.1, turnDeg: 100, tiltDeg: 15, memberId: null })
-    const moved = movedToSupport(site, heater, model)!
+    const moved = movedToSupport(site, heater, model, plainHouseRules)!
     expect(moved).toMatchObject({ x: 2.5, y: 2, turnDeg: 180, tiltDeg: 0, memberId: 'beam', lowestPoint: 2.3 })
-    expect(supportOf(site, moved, model).outcome).toBe('held')
+    expect(supportOf(site, moved, model, plainHouseRules).outcome).toBe('held')
   })
 
   it('keeps the tilt that a mount can hold', () => {
     const rods = plainHeater({ y: 3, tiltDeg: 15, turnDeg: 20, mount: 'drop rods' })
-    expect(movedToSupport(site, rods, model)).toMatchObject({ tiltDeg: 15, turnDeg: 0 })
+    expect(movedToSupport(site, rods, model, plainHouseRules)).toMatchObject({ tiltDeg: 15, turnDeg: 0 })
   })
 
   it.each(['A', 'B', 'C'] as const)('gives every unsupported heater of site %s a place that holds it', (key) => {
@@ -89,14 +90,14 @@ describe('the two remedies', () => {
     for (const { layout } of demo.variants)
       for (const heater of layout.heaters) {
         const of = models.get(heater.model)!
-        if (supportOf(demo.site, heater, of).outcome !== 'not held') continue
-        const moved = movedToSupport(demo.site, heater, of)!
-        expect(supportOf(demo.site, moved, of)).toMatchObject({ outcome: 'held', reason: 'held' })
+        if (supportOf(demo.site, heater, of, plainHouseRules).outcome !== 'not held') continue
+        const moved = movedToSupport(demo.site, heater, of, plainHouseRules)!
+        expect(supportOf(demo.site, moved, of, plainHouseRules)).toMatchObject({ outcome: 'held', reason: 'held' })
       }
   })
 
   it('has nowhere to move to on a site without members', () => {
-    expect(movedToSupport(plainSite({ members: [] }), plainHeater(), model)).toBeNull()
+    expect(movedToSupport(plainSite({ members: [] }), plainHeater(), model, plainHouseRules)).toBeNull()
     expect(railsFor(site, plainHeater({ y: 3 }), model)).toBeNull()
   })
 
@@ -112,7 +113,7 @@ describe('the two remedies', () => {
     expect(rail).toMatchObject({ kind: 'rail', underside: { from: 3.025, to: 3.025 }, allowedPointLoad: null })
     expect(rail!.loadStatus).toContain('to be confirmed')
     const railed = { ...terrace, members: [...terrace.members, rail!] }
-    expect(supportOf(railed, { ...drawn, lowestPoint: 2.4 }, of).outcome).toBe('held')
+    expect(supportOf(railed, { ...drawn, lowestPoint: 2.4 }, of, plainHouseRules).outcome).toBe('held')
   })
 
   it('proposes two rails, one over each eye, where the element runs along the members', () => {
@@ -128,7 +129,7 @@ describe('the two remedies', () => {
       expect(rails[i]!.underside).toEqual({ from: expect.closeTo(underside, 3), to: expect.closeTo(underside, 3) })
     }
     const railed = { ...terrace, members: [...terrace.members, ...rails] }
-    expect(supportOf(railed, drawn, of)).toMatchObject({ outcome: 'held', ids: ['rail-1', 'rail-2'] })
+    expect(supportOf(railed, drawn, of, plainHouseRules)).toMatchObject({ outcome: 'held', ids: ['rail-1', 'rail-2'] })
   })
 
   it('proposes none for walls, poles and bays, nor where it would lie below the eyes', () => {

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { combineReadings } from '#app/domain/photo/combine.ts'
 import { combined, sigmaOf, type Estimate } from '#app/domain/photo/estimate.ts'
@@ -130,7 +131,7 @@ describe('tolerance of a length from a photo (house rule: 3 %, at least 50 mm, a
     [-4, 0.001, 0.12, 'share'],
     [0.3, 0.026, 0.052, 'marks'],
   ])('%f m with σ %f m: ± %f m, %s', (value, sigma, tolerance, by) => {
-    const found = photoTolerance(value, sigma)
+    const found = photoTolerance(value, sigma, plainHouseRules)
     expect(found.tolerance).toBeCloseTo(tolerance, 12)
     expect(found.by).toBe(by)
   })

@@ -1,3 +1,4 @@
+import { plainHouse } from '#tests/support/plain-site.ts'
 import { describe, expect, it } from 'vitest'
 import { seatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import { cautionSentences, cautionsOnPlan, conditionsOfUse } from '#app/domain/rules/cautions-on-plan.ts'
@@ -10,7 +11,7 @@ function demo(key: 'A' | 'B' | 'C', number: number) {
   const { site, brief, variants } = demoSites().find((found) => found.key === key)!
   const { layout } = variants.find((variant) => variant.number === number)!
   const warmth = seatWarmth({ site, brief, layout, models })
-  return { layout, warmth, findings: checkLayout({ site, brief, layout, models, warmth }) }
+  return { layout, warmth, findings: checkLayout({ site, brief, layout, models, warmth, house: plainHouse() }) }
 }
 
 describe('cautions on the plan', () => {

@@ -1,3 +1,4 @@
+import { plainHouse } from '#tests/support/plain-site.ts'
 import { describe, expect, it } from 'vitest'
 import { seatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import { checkLayout, isStopped } from '#app/domain/rules/check-layout.ts'
@@ -14,7 +15,10 @@ function findingsOf(key: 'A' | 'B' | 'C', number: number): Finding[] {
   const demo = demoSites().find((site) => site.key === key)!
   const layout = demo.variants.find((variant) => variant.number === number)!.layout
   const { site, brief } = demo
-  return checkLayout({ site, brief, layout, models, warmth: seatWarmth({ site, brief, layout, models }) })
+  return checkLayout({
+    ...{ site, brief, layout, models, house: plainHouse() },
+    warmth: seatWarmth({ site, brief, layout, models }),
+  })
 }
 
 const about = (findings: Finding[], rule: string, id?: string) =>
@@ -159,7 +163,7 @@ describe('site A, variant 3: all six beams, ends tilted in', () => {
     const { site, brief, variants } = demoSites().find(({ key }) => key === 'A')!
     const { layout } = variants.find(({ number }) => number === 3)!
     const chained = { ...layout, heaters: layout.heaters.map((heater) => ({ ...heater, mount: 'chain' as const })) }
-    const found = checkLayout({ site, brief, layout: chained, models, warmth: [] })
+    const found = checkLayout({ site, brief, layout: chained, models, warmth: [], house: plainHouse() })
     expect(ids(open(about(found, 'supported')))).toEqual(['H1', 'H2', 'H11', 'H12'])
   })
 

@@ -3,11 +3,10 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { checkLayout, isStopped } from '#app/domain/rules/check-layout.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import type { Brief } from '#app/domain/brief/brief.ts'
-import type { HangingData } from '#app/domain/layout/hanging-data.ts'
 import { plainHanging } from '#app/domain/layout/plain-hanging.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import type { Obstacle, Site } from '#app/domain/site/site.ts'
-import { plainBrief, plainHeater, plainModel, plainSite } from '#tests/support/plain-site.ts'
+import { plainBrief, plainHeater, plainModel, plainSite, plainHouse } from '#tests/support/plain-site.ts'
 
 const epsilon = 1e-4
 
@@ -18,12 +17,12 @@ interface Case {
   readonly brief?: Partial<Brief>
 }
 
-function found(rule: string, { site, heater, model, brief }: Case = {}, hanging?: HangingData): Finding[] {
+function found(rule: string, { site, heater, model, brief }: Case = {}, house = plainHouse()): Finding[] {
   const made = plainModel(model)
   const layout = { heaters: [plainHeater(heater)] }
   const models = new Map([[made.code, made]])
   const rests = { site: plainSite(site), brief: plainBrief(brief), layout, models, warmth: [] }
-  const findings = checkLayout({ ...rests, hanging })
+  const findings = checkLayout({ ...rests, house })
   return findings.filter((finding) => finding.rule === rule && finding.subject.kind === 'heater')
 }
 
@@ -478,7 +477,7 @@ describe('hanger-length', () => {
     expect(short?.remedy).toContain('0.035 m')
     const wide = { ...plainHanging, linkPitch: 0.2, shortens: 0.02, lengthens: 0.02 }
     // Net 0.500: two links of 0.200 leave 0.100, three lack as much.
-    const [beyond] = found('hanger-length', {}, wide)
+    const [beyond] = found('hanger-length', {}, { ...plainHouse(), hanging: wide })
     expect([beyond?.outcome, beyond?.title]).toEqual(['fails', "More than the turnbuckle's range: another hanger"])
     expect(beyond?.margin).toBeCloseTo(-0.08, 9)
   })

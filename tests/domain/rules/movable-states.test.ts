@@ -5,7 +5,7 @@ import { checkLayout } from '#app/domain/rules/check-layout.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import type { Obstacle, Site } from '#app/domain/site/site.ts'
 import { solidsOf } from '#app/domain/site/solids.ts'
-import { plainBrief, plainHeater, plainModel, plainSite } from '#tests/support/plain-site.ts'
+import { plainBrief, plainHeater, plainModel, plainSite, plainHouse } from '#tests/support/plain-site.ts'
 
 // The plain heater's end is at x = 3.28; the manual asks 0.4 m to a combustible thing beyond it, 0.3 m beside it.
 const endClear = 3.28 + 0.4
@@ -49,7 +49,14 @@ function checked(obstacle: Obstacle, exactly = true): Finding[] {
   const model = plainModel()
   const site = plainSite({ obstacles: [obstacle], dimensions: exactly ? sureOf(obstacle) : [] })
   const layout = { heaters: [plainHeater()] }
-  return checkLayout({ site, brief: plainBrief(), layout, models: new Map([[model.code, model]]), warmth: [] })
+  return checkLayout({
+    site,
+    brief: plainBrief(),
+    layout,
+    models: new Map([[model.code, model]]),
+    warmth: [],
+    house: plainHouse(),
+  })
 }
 
 const aboutDoor = (findings: Finding[]) =>

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { cautionLimits } from '#app/domain/comfort/cautions.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
@@ -11,7 +12,7 @@ import type { Brief } from '#app/domain/brief/brief.ts'
 import { bodyOf } from '#app/domain/layout/body.ts'
 import type { Obstacle, Site } from '#app/domain/site/site.ts'
 import { axesOfBox } from '#tests/support/brute-distance.ts'
-import { plainBrief, plainHeater, plainModel, plainSite } from '#tests/support/plain-site.ts'
+import { plainBrief, plainHeater, plainModel, plainSite, plainHouse } from '#tests/support/plain-site.ts'
 
 const epsilon = 1e-4
 
@@ -44,9 +45,14 @@ function found(rule: string, { site, heater, model, brief }: Case = {}): Finding
   const made = plainModel(model)
   const layout = { heaters: [plainHeater(heater)] }
   const models = new Map([[made.code, made]])
-  return checkLayout({ site: plainSite(site), brief: plainBrief(brief), layout, models, warmth: [] }).filter(
-    (finding) => finding.rule === rule,
-  )
+  return checkLayout({
+    site: plainSite(site),
+    brief: plainBrief(brief),
+    layout,
+    models,
+    warmth: [],
+    house: plainHouse(),
+  }).filter((finding) => finding.rule === rule)
 }
 
 /** A combustible block over the heater's back, its underside that far over it, every size sure. */
@@ -131,7 +137,10 @@ describe('findings by a rule set', () => {
 
   it('set the caution at the head and the greatest supply', () => {
     const brief = plainBrief({ ruleSet: ruleSet(article('head-caution', 450), article('supply-over-rated', 1.05)) })
-    expect(cautionLimits(brief).head).toMatchObject({ value: 450, source: 'Test district, edition 1, article 4.2' })
+    expect(cautionLimits(brief, plainHouseRules).head).toMatchObject({
+      value: 450,
+      source: 'Test district, edition 1, article 4.2',
+    })
     const supply = (supplyVoltage: number) => found('voltage-offered', { brief, heater: { supplyVoltage, ratedVoltage: 230 } })[0] // prettier-ignore
     expect([supply(241.4)?.outcome, supply(241.5)?.outcome, supply(241.6)?.outcome]).toEqual(['pass', 'pass', 'fails'])
   })

@@ -3,7 +3,7 @@ import { seatWarmth, type SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import { checkLayout } from '#app/domain/rules/check-layout.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import type { Brief } from '#app/domain/brief/brief.ts'
-import { plainBrief, plainHeater, plainModel, plainSite } from '#tests/support/plain-site.ts'
+import { plainBrief, plainHeater, plainModel, plainSite, plainHouse } from '#tests/support/plain-site.ts'
 
 const epsilon = 1e-3
 const site = plainSite()
@@ -26,7 +26,9 @@ const exact = plainSite({
 function found(rule: string, seat: Partial<SeatWarmth>, brief: Partial<Brief> = {}, on = exact): Finding[] {
   const full = plainBrief(brief)
   const warmth = seatWarmth({ site: on, brief: full, layout, models }).map((warm) => ({ ...warm, ...seat }))
-  return checkLayout({ site: on, brief: full, layout, models, warmth }).filter((finding) => finding.rule === rule)
+  return checkLayout({ site: on, brief: full, layout, models, warmth, house: plainHouse() }).filter(
+    (finding) => finding.rule === rule,
+  )
 }
 
 describe('head-flux', () => {
@@ -61,7 +63,7 @@ describe('head-flux', () => {
   it('wants measuring within what 25 mm of the seat’s place change', () => {
     const [warm] = seatWarmth({ site, brief: plainBrief(), layout, models })
     const near = { ...warm!, head: 599.9 }
-    const findings = checkLayout({ site, brief: plainBrief(), layout, models, warmth: [near] })
+    const findings = checkLayout({ site, brief: plainBrief(), layout, models, warmth: [near], house: plainHouse() })
     const finding = findings.find(({ rule, weight }) => rule === 'head-flux' && weight === 'soft')
     expect(finding?.outcome).toBe('measure first')
     expect(finding?.tolerance).toBeGreaterThan(0.1)
@@ -76,7 +78,14 @@ describe('head-flux', () => {
   })
 
   it('says nothing without heaters', () => {
-    const none = checkLayout({ site, brief: plainBrief(), layout: { heaters: [] }, models, warmth: [] })
+    const none = checkLayout({
+      site,
+      brief: plainBrief(),
+      layout: { heaters: [] },
+      models,
+      warmth: [],
+      house: plainHouse(),
+    })
     expect(none.map(({ rule }) => rule)).toEqual(['site-given'])
   })
 })
@@ -121,7 +130,7 @@ describe('seat-target', () => {
     const low = nominal - expected / 2
     const warmth = seatWarmth({ site, brief, layout, models })
     const tight = { ...brief, target: { low, high: 1000, source: 'brief' } }
-    const [finding] = checkLayout({ site, brief: tight, layout, models, warmth }).filter(
+    const [finding] = checkLayout({ site, brief: tight, layout, models, warmth, house: plainHouse() }).filter(
       ({ rule }) => rule === 'seat-target',
     )
     expect(finding?.outcome).toBe('measure first')
@@ -156,7 +165,7 @@ describe('near-infrared', () => {
 
 describe('site-given', () => {
   const check = (on: ReturnType<typeof plainSite>) =>
-    checkLayout({ site: on, brief: plainBrief(), layout, models, warmth: seatWarmth({ site: on, brief: plainBrief(), layout, models }) }) // prettier-ignore
+    checkLayout({ site: on, brief: plainBrief(), layout, models, house: plainHouse(), warmth: seatWarmth({ site: on, brief: plainBrief(), layout, models }) }) // prettier-ignore
 
   it('stops blank geometry', () => {
     const flat = plainSite({ floor: [[0, 0], [6, 0], [3, 0]] }) // prettier-ignore

@@ -8,6 +8,9 @@ import { largestTolerance, toleranceOf } from '#app/domain/site/tolerance.ts'
 
 const roofHeights = (site: Site) => coverHeightAt(site.covers[0]!, 6.6, 4.05)
 
+/** What a size nobody named may be wrong by, m. */
+const bare = 0.025
+
 describe('moving a dimension', () => {
   const { site } = demoSites().find(({ key }) => key === 'A')!
   const dimension = (label: string): Dimension => site.dimensions.find((found) => found.label === label)!
@@ -45,7 +48,7 @@ describe('the combined tolerance', () => {
     // each; depth ± 30 mm tips the plane by 0.55 · 4.05/5.4² · 0.03 = 2.3 mm; the corners' bare x and y count ± 25 mm
     // each, which through the slope of 0.102 moves at most 2.5 mm apiece.
     const two = Math.hypot(0.25 * 0.06, 0.75 * 0.06)
-    const tolerance = toleranceOf(roofHeights, site, [{ of: 'cover', id: 'cover' }])!
+    const tolerance = toleranceOf(roofHeights, site, bare, [{ of: 'cover', id: 'cover' }])!
     expect(tolerance).toBeGreaterThan(two)
     expect(tolerance).toBeLessThan(Math.hypot(two, 0.0024, 0.0026, 0.0026, 0.0026))
   })
@@ -53,7 +56,7 @@ describe('the combined tolerance', () => {
   it('is 25 mm for a coordinate that no dimension moves, and its dimension where one does', () => {
     const height = (site: Site) => site.covers[0]?.corners[0]?.[2] ?? null
     const site = plainSite()
-    expect(toleranceOf(height, site, [{ of: 'cover', id: 'roof' }])).toBeCloseTo(0.025, 12)
+    expect(toleranceOf(height, site, bare, [{ of: 'cover', id: 'roof' }])).toBeCloseTo(0.025, 12)
     const measured = plainSite({
       dimensions: [
         {
@@ -67,8 +70,8 @@ describe('the combined tolerance', () => {
         },
       ],
     })
-    expect(toleranceOf(height, measured, [{ of: 'cover', id: 'roof' }])).toBeCloseTo(0.004, 12)
-    expect(toleranceOf(height, measured)).toBeCloseTo(0.004, 12)
+    expect(toleranceOf(height, measured, bare, [{ of: 'cover', id: 'roof' }])).toBeCloseTo(0.004, 12)
+    expect(toleranceOf(height, measured, bare)).toBeCloseTo(0.004, 12)
   })
 
   it('counts a dimension once though it moves several things', () => {
@@ -79,21 +82,21 @@ describe('the combined tolerance', () => {
     }
     const things = [{ of: 'cover' as const, id: 'cover' }, { of: 'obstacle' as const, id: 'fan' }] // prettier-ignore
     // Ceiling and fan go up together, so their distance has no tolerance at all.
-    expect(toleranceOf(fan, site, things)).toBeCloseTo(0, 12)
+    expect(toleranceOf(fan, site, bare, things)).toBeCloseTo(0, 12)
     // Their sum moves twice as far, once: 2 · 8 mm.
     const sum = (of: Site) => {
       const shape = of.obstacles.find(({ id }) => id === 'fan')!.shape
       return shape.z[1] + (of.covers[0]?.corners[0]?.[2] ?? 0)
     }
-    expect(toleranceOf(sum, site, things)).toBeCloseTo(0.016, 9)
+    expect(toleranceOf(sum, site, bare, things)).toBeCloseTo(0.016, 9)
   })
 
   it('is null when the figure is, and at most the largest tolerance of the thing', () => {
     const site = plainSite()
-    expect(toleranceOf(() => null, site)).toBeNull()
+    expect(toleranceOf(() => null, site, bare)).toBeNull()
     const things = [{ of: 'cover' as const, id: 'roof' }]
-    expect(toleranceOf((of) => of.covers[0]?.corners[1]?.[2] ?? null, site, things)!).toBeLessThanOrEqual(
-      largestTolerance(site, things[0]!),
+    expect(toleranceOf((of) => of.covers[0]?.corners[1]?.[2] ?? null, site, bare, things)!).toBeLessThanOrEqual(
+      largestTolerance(site, things[0]!, bare),
     )
   })
 })

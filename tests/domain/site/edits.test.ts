@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import {
   addThing,
@@ -155,7 +156,7 @@ describe('sizes by source', () => {
     ['guessed', 2.5, 0.25],
     ['told', 2.5, 0.25],
   ] as const)('%s of %d m: ± %d m', (source, value, tolerance) => {
-    expect(usualTolerance(source, value)).toBeCloseTo(tolerance, 9)
+    expect(usualTolerance(source, value, plainHouseRules)).toBeCloseTo(tolerance, 9)
   })
   it('assumed ones in words: three by name, the rest by number', () => {
     const sizes = ['a', 'b', 'c', 'd', 'e'].map((label) => ({ ...c.dimensions[3]!, id: label, label }))

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { changeCover, changeObstacle, moveThings, removeThings } from '#app/domain/site/edits.ts'
 import { addFloorCorner, moveFloorCorner } from '#app/domain/site/floor-edits.ts'
@@ -35,7 +36,7 @@ const shaped = (site: Site, z: [number, number]) =>
 
 describe('a thing placed by hand that one size decides alone', () => {
   const site = boxSite({ label: 'from the corner', value: 1, moves: [of('shape.x.0'), of('shape.x.1')] })
-  const placed = placedByHand(site, moveThings(site, 'obstacle', ['box'], 0.35, 0.1))
+  const placed = placedByHand(site, moveThings(site, 'obstacle', ['box'], 0.35, 0.1), plainHouseRules)
 
   it('takes the value along, as a guess with a tenth of it for a tolerance, and keeps what was known in words', () => {
     expect(placed.site.dimensions).toEqual([
@@ -52,31 +53,31 @@ describe('a thing placed by hand that one size decides alone', () => {
       const shape = of.obstacles[0]!.shape
       return shape.kind === 'box' ? shape.x[0] : null
     }
-    expect(toleranceOf(left, placed.site)).toBeCloseTo(0.135, 9)
+    expect(toleranceOf(left, placed.site, 0.025)).toBeCloseTo(0.135, 9)
   })
   it('says so', () => {
-    expect(placedInWords(placed, 'metric')).toBe(
+    expect(placedInWords(placed, 'metric', plainHouseRules)).toBe(
       'Placed by hand: from the corner is 1.35 m ± 0.135 m, guessed; it was 1.00 m ± 0.005 m, laser.',
     )
   })
   it('does not repeat itself when it is moved again, and is no better known for it', () => {
-    const again = placedByHand(placed.site, moveThings(placed.site, 'obstacle', ['box'], -1, 0))
+    const again = placedByHand(placed.site, moveThings(placed.site, 'obstacle', ['box'], -1, 0), plainHouseRules)
     expect(again.site.dimensions[0]).toMatchObject({ value: 0.35, source: 'guessed', tolerance: 0.135 })
     expect(again.site.dimensions[0]!.note).toBe(placed.site.dimensions[0]!.note)
   })
   it('leaves the size alone where the thing moves another way, or not at all', () => {
     const aside = moveThings(site, 'obstacle', ['box'], 0, 0.2)
-    expect(placedByHand(site, aside)).toEqual({ site: aside, followed: [], released: [] })
-    expect(placedInWords(placedByHand(site, aside), 'metric')).toBeNull()
+    expect(placedByHand(site, aside, plainHouseRules)).toEqual({ site: aside, followed: [], released: [] })
+    expect(placedInWords(placedByHand(site, aside, plainHouseRules), 'metric', plainHouseRules)).toBeNull()
   })
   it('counts at least ± 25 mm, however short the size', () => {
-    const near = placedByHand(site, moveThings(site, 'obstacle', ['box'], -0.95, 0))
+    const near = placedByHand(site, moveThings(site, 'obstacle', ['box'], -0.95, 0), plainHouseRules)
     expect(near.site.dimensions[0]).toMatchObject({ value: 0.05, tolerance: 0.025 })
   })
   it('forgets the photo that the value is not of any more', () => {
     const photo = { photoId: '00000000-0000-4000-8000-000000000001', measurementId: 'm' }
     const seen = boxSite({ value: 1, photo, moves: [of('shape.x.0'), of('shape.x.1')] })
-    const moved = placedByHand(seen, moveThings(seen, 'obstacle', ['box'], 0.1, 0))
+    const moved = placedByHand(seen, moveThings(seen, 'obstacle', ['box'], 0.1, 0), plainHouseRules)
     expect(moved.site.dimensions[0]).not.toHaveProperty('photo')
   })
 })
@@ -86,9 +87,9 @@ describe('which coordinates a size is told by', () => {
 
   it('follows the coordinate that equals it; the rest of the thing is as it was typed', () => {
     const site = boxSite(foot)
-    const lower = placedByHand(site, shaped(site, [2.1, 2.5]))
+    const lower = placedByHand(site, shaped(site, [2.1, 2.5]), plainHouseRules)
     expect(lower.site.dimensions[0]).toMatchObject({ value: 2.1, source: 'guessed', moves: foot.moves })
-    const taller = placedByHand(site, shaped(site, [2.2, 2.7]))
+    const taller = placedByHand(site, shaped(site, [2.2, 2.7]), plainHouseRules)
     expect(taller.site.dimensions[0]).toMatchObject({ value: 2.2, source: 'laser', moves: [of('shape.z.0')] })
     expect(taller.released.map(({ label }) => label)).toEqual(['foot'])
   })
@@ -102,21 +103,24 @@ describe('which coordinates a size is told by', () => {
         ),
       site,
     )
-    const now = labelled(placedByHand(site, wider).site, diameter.label)
+    const now = labelled(placedByHand(site, wider, plainHouseRules).site, diameter.label)
     expect(now.value).toBeCloseTo(diameter.value + 0.2, 9)
     expect(now.source).toBe('guessed')
   })
   it('is told by a half of it too', () => {
     const site = boxSite({ value: 2, moves: [of('shape.x.0', 0.5), of('shape.x.1', 0.5)] })
     const wider = changeObstacle(site, 'box', ({ shape }) => (shape.kind === 'box' ? { shape: { ...shape, x: [0.9, 1.4] } } : {})) // prettier-ignore
-    expect(placedByHand(site, wider).site.dimensions[0]).toMatchObject({ value: 1.8, source: 'guessed' })
+    expect(placedByHand(site, wider, plainHouseRules).site.dimensions[0]).toMatchObject({
+      value: 1.8,
+      source: 'guessed',
+    })
   })
   it('lets the less known of two sizes follow, and the other decide what it did', () => {
     const site = boxSite(
       { label: 'ceiling', value: 2.7, tolerance: 0.01, moves: [of('shape.z.0')] },
       { label: 'drop', value: 0.5, tolerance: 0.05, source: 'told', moves: [of('shape.z.0', -1)] },
     )
-    const { site: now } = placedByHand(site, shaped(site, [2, 2.5]))
+    const { site: now } = placedByHand(site, shaped(site, [2, 2.5]), plainHouseRules)
     expect(labelled(now, 'ceiling')).toEqual(labelled(site, 'ceiling'))
     expect(labelled(now, 'drop')).toMatchObject({ value: 0.7, source: 'guessed', moves: [of('shape.z.0', -1)] })
   })
@@ -126,30 +130,32 @@ describe('a size that decides more than what was placed by hand', () => {
   it('stays, and decides the one beam no longer: it counts ± 25 mm', () => {
     const site = demo('A')
     const spacing = labelled(site, 'beam spacing')
-    const placed = placedByHand(site, moveThings(site, 'member', ['beam-2'], 0.15, 0))
+    const placed = placedByHand(site, moveThings(site, 'member', ['beam-2'], 0.15, 0), plainHouseRules)
     const now = labelled(placed.site, 'beam spacing')
     expect(now).toEqual({ ...spacing, moves: spacing.moves.filter(({ id }) => id !== 'beam-2') })
     expect(spacing.moves.length - now.moves.length).toBe(2)
     const at = (id: string) => (of: Site) => of.members.find((member) => member.id === id)?.from[0] ?? null
-    expect(toleranceOf(at('beam-2'), placed.site)).toBeCloseTo(0.025, 9)
-    expect(toleranceOf(at('beam-3'), placed.site)).toBeCloseTo(3 * spacing.tolerance, 9)
-    expect(placedInWords(placed, 'metric')).toBe(
+    expect(toleranceOf(at('beam-2'), placed.site, 0.025)).toBeCloseTo(0.025, 9)
+    expect(toleranceOf(at('beam-3'), placed.site, 0.025)).toBeCloseTo(3 * spacing.tolerance, 9)
+    expect(placedInWords(placed, 'metric', plainHouseRules)).toBe(
       'Placed by hand, counts as ± 0.025 m: beam spacing no longer decides it.',
     )
   })
   it('follows when all its beams are moved by their share', () => {
     const site = demo('A')
     const spread = site.members.reduce((made, { id }, k) => moveThings(made, 'member', [id], 0.05 * k, 0), site)
-    const now = labelled(placedByHand(site, spread).site, 'beam spacing')
+    const now = labelled(placedByHand(site, spread, plainHouseRules).site, 'beam spacing')
     expect(now.value).toBeCloseTo(labelled(site, 'beam spacing').value + 0.05, 9)
   })
   it('lets go of one corner of a floor and of a cover, and of nothing else', () => {
     const site = demo('C')
     const [x, y] = site.floor[2]!
-    const moved = placedByHand(site, moveFloorCorner(site, 2, [x + 0.3, y + 0.2]))
+    const moved = placedByHand(site, moveFloorCorner(site, 2, [x + 0.3, y + 0.2]), plainHouseRules)
     expect(moved.followed).toEqual([])
     expect(moved.released.map(({ label }) => label)).toEqual(['veranda length, x', 'veranda depth, y'])
-    expect(placedInWords(moved, 'metric')).toMatch(/: veranda length, x and 1 more size no longer decide it\.$/)
+    expect(placedInWords(moved, 'metric', plainHouseRules)).toMatch(
+      /: veranda length, x and 1 more size no longer decide it\.$/,
+    )
     const length = labelled(moved.site, 'veranda length, x')
     expect(length.moves).toEqual(
       labelled(site, 'veranda length, x').moves.filter(({ coordinate }) => coordinate !== '2.0'),
@@ -157,7 +163,7 @@ describe('a size that decides more than what was placed by hand', () => {
     const lower = changeCover(site, 'cover', ({ corners }) => ({
       corners: corners.map(([cx, cy, cz], i): [number, number, number] => [cx, cy, i === 0 ? cz - 0.1 : cz]),
     }))
-    const ceiling = labelled(placedByHand(site, lower).site, 'ceiling height')
+    const ceiling = labelled(placedByHand(site, lower, plainHouseRules).site, 'ceiling height')
     expect(ceiling.moves.length).toBe(labelled(site, 'ceiling height').moves.length - 1)
     expect(ceiling.value).toBe(labelled(site, 'ceiling height').value)
   })
@@ -178,6 +184,6 @@ describe('edits that are about the sizes themselves, or about nothing that they 
       moveThings(site, 'seat', ['T1'], 0.2, 0),
       { ...site, name: 'another' },
     ])
-      expect(placedByHand(site, after)).toEqual({ site: after, followed: [], released: [] })
+      expect(placedByHand(site, after, plainHouseRules)).toEqual({ site: after, followed: [], released: [] })
   })
 })

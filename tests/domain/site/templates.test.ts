@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { moveDimension } from '#app/domain/site/dimension.ts'
 import { siteFaults } from '#app/domain/site/site-faults.ts'
@@ -9,7 +10,7 @@ import { chance } from '#tests/support/chance.ts'
 
 const base = { name: 'Somewhere', displayUnits: 'metric', trace: null } as const
 const start = (template: SiteTemplate, given: Record<string, number> = {}): Site => {
-  const made = template.start(new Map(Object.entries(given)), 'tape', base)
+  const made = template.start(new Map(Object.entries(given)), 'tape', base, plainHouseRules)
   if ('error' in made) throw new Error(made.error)
   return made
 }
@@ -51,7 +52,7 @@ describe.each(siteTemplates)('$name', (template) => {
     const random = chance(23)
     for (let round = 0; round < 150; round++) {
       const given = new Map(template.sizes.map(({ key, min, max }) => [key, min + random() ** 2 * (max - min)]))
-      const made = template.start(given, 'laser', base)
+      const made = template.start(given, 'laser', base, plainHouseRules)
       if ('error' in made) expect(made.error).toMatch(/\.$/)
       else expect(siteFaults(made)).toEqual([])
     }

@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { renderToStaticMarkup } from 'react-dom/server'
 import { describe, expect, it } from 'vitest'
 import { AxonometricDrawing } from '#app/drawing/axonometric/axonometric-drawing.tsx'
@@ -15,6 +16,7 @@ const drawn = (corner: (typeof corners)[number], theme: 'dusk' | 'day' = 'dusk',
       site={site}
       layout={smallLayout()}
       models={smallModels}
+      rules={plainHouseRules}
       picture={null}
       quantity={irradianceScale(theme, { low: 150, high: 350 })}
       pen={screenPen(theme)}
@@ -24,7 +26,7 @@ const drawn = (corner: (typeof corners)[number], theme: 'dusk' | 'day' = 'dusk',
     />,
   )
 const pieces = (corner: (typeof corners)[number] = 'lower left') =>
-  piecesOf(smallTerrace, smallLayout(), smallModels, projectionFrom(corner).toEye)
+  piecesOf(smallTerrace, smallLayout(), smallModels, plainHouseRules, projectionFrom(corner).toEye)
 
 describe('the pieces of a picture', () => {
   it('are everything that stands on the site, hangs over it or sits there', () => {

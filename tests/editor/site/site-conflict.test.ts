@@ -1,3 +1,4 @@
+import { plainHouseRules } from '#app/domain/rules/house-rules.ts'
 import { describe, expect, it } from 'vitest'
 import { changeCover, changeObstacle, changeTable, changeWall } from '#app/domain/site/edits.ts'
 import { addFloorCorner, moveFloorCorner } from '#app/domain/site/floor-edits.ts'
@@ -152,7 +153,7 @@ describe('one site out of two', () => {
     const every = new Set(site.dimensions.map(({ id }) => `size ${id}`))
     expect(floorMoves(mergedSite(site, theirs, new Set(['floor'])))).toEqual(floorMoves(theirs))
     expect(floorMoves(mergedSite(site, theirs, every))).toEqual(floorMoves(site))
-    const dragged = placedByHand(site, moveFloorCorner(site, 2, [13, 5.2])).site
+    const dragged = placedByHand(site, moveFloorCorner(site, 2, [13, 5.2]), plainHouseRules).site
     expect(floorMoves(mergedSite(dragged, site, new Set(['floor'])))).toEqual(floorMoves(site))
   })
 })

@@ -1,3 +1,4 @@
+import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { siteFaults } from '#app/domain/site/site-faults.ts'
 import { usualTolerance } from '#app/domain/site/size-source.ts'
 import { siteSchema, type Dimension, type Site, type SizeSource } from '#app/domain/site/site.ts'
@@ -35,6 +36,7 @@ export interface SiteTemplate {
     given: ReadonlyMap<string, number>,
     source: SizeSource,
     base: Base,
+    rules: HouseRules,
   ) => Site | { readonly error: string }
 }
 
@@ -50,14 +52,14 @@ export function templateOf<Key extends string>(
   return {
     ...about,
     sizes,
-    start: (given, source, { name, displayUnits, trace }) => {
+    start: (given, source, { name, displayUnits, trace }, rules) => {
       const valueOf = (key: string) => given.get(key) ?? sizes.find((size) => size.key === key)?.usual ?? 0
       const { site, moves } = make(valueOf)
       const dimensions = sizes.map(({ key, label }): Dimension => {
         const from = given.has(key) ? source : 'guessed'
         const value = valueOf(key)
         const note = given.has(key) ? null : 'assumed until measured'
-        const tolerance = usualTolerance(from, value)
+        const tolerance = usualTolerance(from, value, rules)
         return { id: `size-${key}`, label, value, tolerance, source: from, note, moves: moves[key] }
       })
       const made = siteSchema.safeParse({ ...site, name, displayUnits, trace, dimensions })
