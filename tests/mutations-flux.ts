@@ -156,7 +156,7 @@ export const fluxMutations: readonly Mutation[] = [
   ]),
   ...within('domain/flux/directed-map.ts', picture, ['read(weights, -dz / r, last)', 'read(weights, dz / r, last)']),
   ...within('drawing/heat/map-picture.ts', picture, [
-    '>= quantity.threshold ? 1 : 0',
-    '> 2 * quantity.threshold ? 1 : 0',
+    'layerValue(grid, layer, at) >= threshold',
+    'layerValue(grid, layer, at) > 2 * threshold',
   ]),
 ]

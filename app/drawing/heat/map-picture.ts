@@ -97,21 +97,50 @@ function layerValue(grid: Grid, { window, values }: Layer, at: number): number {
   return values[row * window.columns + column] ?? 0
 }
 
-/** The question's quantity at a cell, from the maps in the cache. */
-function quantityOf(question: MapQuestion, grid: Grid, cache: MapCache): (at: number) => number {
+/** Writes a quantity into the cells on the floor, NaN elsewhere; the greatest of them, −∞ when no cell lies on it. */
+function writeCells(values: Float32Array, { inside }: Grid, valueAt: (at: number) => number): number {
+  let peak = -Infinity
+  for (let at = 0; at < values.length; at++) {
+    values[at] = inside[at] === 1 ? valueAt(at) : NaN
+    const value = values[at] ?? NaN
+    if (value > peak) peak = value
+  }
+  return peak
+}
+
+/** The same for the sum of the layers, without a call per cell: a drag asks for it again and again. */
+function writeSum(values: Float32Array, { inside }: Grid, total: Float64Array): number {
+  let peak = -Infinity
+  for (let at = 0; at < values.length; at++) {
+    if (inside[at] !== 1) {
+      values[at] = NaN
+      continue
+    }
+    const sum = total[at] ?? 0
+    const value = Math.fround(sum > 0 ? sum : 0)
+    values[at] = value
+    if (value > peak) peak = value
+  }
+  return peak
+}
+
+/** Writes the question's quantity from the maps in the cache; its greatest value on the floor. */
+function writeQuantity(values: Float32Array, question: MapQuestion, grid: Grid, cache: MapCache): number {
   const { quantity, emitters } = question
   if (quantity.kind === 'feels-like') {
     const field = fieldMap(cache.field, grid, question, quantity.conditions.posture)
     cache.field = field
-    return feelsLikeValues(field, quantity.conditions)
+    return writeCells(values, grid, feelsLikeValues(field, quantity.conditions))
   }
   const { total, layers } = fluxMapFor(question, grid, cache)
-  if (quantity.kind === 'flux') return (at) => Math.max(0, total[at] ?? 0)
+  if (quantity.kind === 'flux') return writeSum(values, grid, total)
   if (quantity.kind === 'share') {
     const own = layers.filter((_, i) => emitters[i]?.id === quantity.emitterId)
-    return (at) => own.reduce((sum, layer) => sum + layerValue(grid, layer, at), 0)
+    return writeCells(values, grid, (at) => own.reduce((sum, layer) => sum + layerValue(grid, layer, at), 0))
   }
-  return (at) => layers.reduce((count, layer) => count + (layerValue(grid, layer, at) >= quantity.threshold ? 1 : 0), 0)
+  const { threshold } = quantity
+  const hasEnough = (layer: Layer, at: number) => layerValue(grid, layer, at) >= threshold
+  return writeCells(values, grid, (at) => layers.reduce((count, layer) => count + (hasEnough(layer, at) ? 1 : 0), 0))
 }
 
 function fluxMapFor(question: MapQuestion, grid: Grid, cache: MapCache): FluxMap {
@@ -128,14 +157,8 @@ function fluxMapFor(question: MapQuestion, grid: Grid, cache: MapCache): FluxMap
 export function answerMap(question: MapQuestion, cache: MapCache): MapAnswer {
   if ('document' in globalThis) throw new Error('the map is computed in a worker')
   const grid = gridFor(question, cache)
-  const valueAt = quantityOf(question, grid, cache)
   const values = new Float32Array(grid.columns * grid.rows)
-  let peak = -Infinity
-  for (let at = 0; at < values.length; at++) {
-    values[at] = grid.inside[at] === 1 ? valueAt(at) : NaN
-    const value = values[at] ?? NaN
-    if (value > peak) peak = value
-  }
+  const peak = writeQuantity(values, question, grid, cache)
   const errorBound = question.quantity.kind === 'feels-like' ? 0 : (cache.map?.errorBound ?? 0)
   const isPlain = question.levels.length === 0 && question.edges?.length === 0
   const picture = isPlain
