@@ -6,7 +6,7 @@ const cookies = new Map<Person, string>()
 
 beforeAll(async () => {
   application = await openApplication()
-  for (const person of ['designer', 'engineer', 'outsider'] as const) {
+  for (const person of ['designer', 'engineer', 'owner', 'outsider'] as const) {
     cookies.set(person, await application.signInAs(person))
   }
 })
@@ -63,9 +63,6 @@ describe('rule sets', () => {
     expect(kept).toMatchObject({ revision: 1, articles: [{ figure: 0.4572, unit: 'm' }] })
 
     expect((await post('engineer', path, form({ revision: '1', name: 'Renamed' }))).status).toBe(302)
-    const stale = await post('engineer', path, form({ revision: '1', name: 'Stale' }))
-    expect(stale.status).toBe(412)
-    expect(await stale.text()).toContain('value="Stale"')
     const revisions = await rowsOf('select revision, body from rule_set_revisions where rule_set_id = $1 order by 1', [id]) // prettier-ignore
     expect(revisions.map(({ revision, body }) => [revision, body.name])).toEqual([
       [1, 'Test district'],
@@ -73,6 +70,36 @@ describe('rule sets', () => {
     ])
     const events = await rowsOf(`select detail from audit_events where subject = $1 order by at`, [`rules/sets/${id}`])
     expect(events.map(({ detail }) => detail.revision)).toEqual([1, 2])
+  })
+
+  it('are not overwritten by one who saw an older revision: both values, by whom, and from where it goes on', async () => {
+    const [{ id }] = await rowsOf(`select id from rule_sets where name = 'Renamed'`)
+    const path = `/rules/sets/${id}`
+    const stale = await post('owner', path, form({ revision: '1', name: 'Stale', 'articles.0.figure': '20 in' }))
+    expect(stale.status).toBe(412)
+    const html = await stale.text()
+    const [{ name }] = await rowsOf(`select name from "user" where email = 'engineer@inglefield.test'`)
+    expect(html).toContain(`Saved by ${name}`)
+    // 18 in and 20 in are 457.2 and 508 mm. The article is theirs as it was at first, so that only mine is another.
+    for (const value of ['Renamed', 'Stale', '0.4572 m, read', '0.508 m, read']) expect(html).toContain(`Use <!-- -->${value}`) // prettier-ignore
+    for (const kept of ['name="revision" value="1"', 'name="name" value="Stale"']) expect(html).toContain(kept)
+    expect((await rowsOf('select name from rule_sets where id = $1', [id]))[0].name).toBe('Renamed')
+    const settled = await post('owner', path, form({ revision: '2', name: 'Renamed', 'articles.0.figure': '20 in' }))
+    expect([settled.status, (await rowsOf('select revision from rule_sets where id = $1', [id]))[0].revision]).toEqual([302, 3]) // prettier-ignore
+    expect((await post('owner', path, form({ revision: 'none' }))).status).toBe(412)
+    expect((await post('outsider', path, form({ revision: '3' }))).status).toBe(404)
+  })
+
+  it('name who wrote each revision', async () => {
+    const [{ id }] = await rowsOf(`select id from rule_sets where name = 'Renamed'`)
+    const people = await rowsOf(`select email, name from "user"`)
+    const named = (role: string) => people.find(({ email }) => email === `${role}@inglefield.test`).name
+    const { html } = await open('designer', `/rules/sets/${id}`)
+    const table = /<caption[^>]*>Revisions<.*?<\/table>/s.exec(html)![0].replace(/<[^>]*>/g, ' ')
+    expect(table).toMatch(
+      new RegExp(`3 .*${named('owner')}.* 2 .*${named('engineer')}.* 1 .*${named('engineer')}`, 's'),
+    )
+    expect(html).not.toContain('A colleague')
   })
 
   it('keep what was typed when a figure is refused, with the reason beside it', async () => {

@@ -1,11 +1,9 @@
-import { useEffect, useRef } from 'react'
 import { Form, useNavigation, useSubmit } from 'react-router'
 import { Button, ButtonLink } from '#app/components/button.tsx'
-import { ConflictPanel } from '#app/components/conflict-panel.tsx'
 import { ErrorSummary } from '#app/components/error-summary.tsx'
 import { TextField } from '#app/components/field.tsx'
 import { When } from '#app/components/when.tsx'
-import { changedWords } from '#app/editor/save-status.ts'
+import { Meanwhile } from '#app/editor/rules/meanwhile.tsx'
 
 /** One figure that is asked for. */
 interface AskedFigure {
@@ -63,7 +61,7 @@ export function DecisionForm({ title, lead, savedWords, groups, kept, mayEdit, a
         <LastChange {...kept} />
       </p>
       {answer?.meanwhile && (
-        <Meanwhile
+        <Overlaid
           key={answer.meanwhile.revision}
           mine={values}
           base={kept.values}
@@ -125,34 +123,23 @@ function LastChange({ revision, changed }: Pick<KeptFigures, 'revision' | 'chang
   )
 }
 
-interface MeanwhileProps {
+interface OverlaidProps {
   readonly mine: Values
   readonly base: Values
   readonly theirs: KeptFigures
   readonly labels: ReadonlyMap<string, string>
 }
 
-/** What somebody kept while the form was open, beside what was typed; the choice is sent on from their revision. */
-function Meanwhile({ mine, base, theirs, labels }: MeanwhileProps) {
+/** Figures that somebody kept meanwhile beside those that were typed; the choice is sent on from their revision. */
+function Overlaid({ mine, base, theirs, labels }: OverlaidProps) {
   const submit = useSubmit()
-  const ref = useRef<HTMLDivElement>(null)
-  useEffect(() => ref.current?.focus(), [theirs])
   const rows = [...labels].flatMap(([key, label]) => {
     const [own, other] = [mine[key] ?? '', theirs.values[key] ?? '']
     return own === other ? [] : [{ key, label, mine: own, theirs: other, theirsAlone: own === base[key] }]
   })
-  const { by = null, at } = theirs.changed ?? {}
   const settle = (taken: ReadonlySet<string>) => {
     const chosen = [...labels.keys()].map((key) => [key, (taken.has(key) ? theirs.values : mine)[key] ?? ''])
     void submit({ ...Object.fromEntries(chosen), revision: String(theirs.revision) }, { method: 'post' })
   }
-  return (
-    <div ref={ref} tabIndex={-1} role="alert" className="scroll-mt-4 outline-none">
-      <ConflictPanel
-        {...changedWords({ by, at: at === undefined ? null : new Date(at) })}
-        {...{ rows }}
-        onSettle={settle}
-      />
-    </div>
-  )
+  return <Meanwhile changed={theirs.changed} {...{ rows }} onSettle={settle} />
 }

@@ -10,8 +10,8 @@ import { SelectField, TextField } from '#app/components/field.tsx'
 interface RuleSetFormProps {
   /** As it was when the form opened. */
   readonly typed: TypedRuleSet
-  /** 0 for a new one. */
-  readonly revision: number
+  /** That it is changed from; null for a new one. */
+  readonly revision: string | null
   readonly errors: Readonly<Record<string, string>>
   readonly sending: boolean
 }
@@ -33,7 +33,7 @@ export function RuleSetForm({ typed, revision, errors, sending }: RuleSetFormPro
   return (
     <Form method="post" noValidate className="max-w-5xl">
       <ErrorSummary errors={problems} />
-      <input type="hidden" name="revision" value={revision} />
+      <input type="hidden" name="revision" value={revision ?? ''} />
       <input type="hidden" name="count" value={rows.length} />
       <div className="grid gap-x-5 gap-y-3 tablet:grid-cols-3">
         {text('name', 'Name')}
@@ -64,7 +64,7 @@ export function RuleSetForm({ typed, revision, errors, sending }: RuleSetFormPro
           Article
         </Button>
         <Button type="submit" kind="primary" disabled={sending}>
-          {revision === 0 ? 'Keep rule set' : 'Keep as a new revision'}
+          {revision === null ? 'Keep rule set' : 'Keep as a new revision'}
         </Button>
       </div>
     </Form>

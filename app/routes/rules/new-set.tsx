@@ -39,7 +39,7 @@ export default function NewRuleSetPage({ loaderData, actionData }: Route.Compone
       </p>
       <RuleSetForm
         typed={actionData?.typed ?? loaderData.typed}
-        revision={0}
+        revision={null}
         errors={actionData?.errors ?? {}}
         sending={sending}
       />

@@ -8,10 +8,11 @@ import { ButtonLink } from '#app/components/button.tsx'
 import { PageFrame } from '#app/components/page-frame.tsx'
 import { DataTable, type Column } from '#app/components/table.tsx'
 import { When } from '#app/components/when.tsx'
+import { RuleSetConflict } from '#app/editor/rules/rule-set-conflict.tsx'
 import { RuleSetForm } from '#app/editor/rules/rule-set-form.tsx'
 import { findRuleSet, saveRuleSet, type RuleSetRevision } from '#app/server/data/rule-sets.server.ts'
 import { readFields } from '#app/server/form-fields.server.ts'
-import { missing } from '#app/server/missing.server.ts'
+import { isId, missing } from '#app/server/missing.server.ts'
 import { typedFromFields } from '#app/server/rule-set-form.server.ts'
 import { requireMay } from '#app/server/session.server.ts'
 import { viewerOf } from '#app/server/viewer.server.ts'
@@ -30,18 +31,21 @@ export async function loader({ request, params }: Route.LoaderArgs) {
 
 export async function action({ request, params }: Route.ActionArgs) {
   const member = await requireMay(request, 'edit-rules')
-  const found = await findRuleSet(member, params.setId)
-  if (!found) throw missing(request, 'rule set')
-  const fields = await readFields(request)
+  const { revision = '', ...fields } = await readFields(request)
   const typed = typedFromFields(fields)
+  const answer = { errors: {}, typed, revision: revision.slice(0, 9), meanwhile: null }
   const read = readRuleSet(typed)
-  if ('errors' in read) return data({ errors: read.errors, typed }, 400)
-  const from = Number(fields['revision'])
-  const saved = Number.isInteger(from) ? await saveRuleSet(member, params.setId, from, read.ruleSet) : null
-  if (saved !== null) return redirect(`/rules/sets/${params.setId}`)
-  const error = `Somebody kept revision ${found.ruleSet.revision} meanwhile. Open it in a second window, then keep yours again there.` // prettier-ignore
-  return data({ errors: { name: error }, typed }, 412)
+  if ('errors' in read) return data({ ...answer, errors: read.errors }, 400)
+  const kept = isId(params.setId) && (await saveRuleSet(member, params.setId, revisionOf(revision), read.ruleSet))
+  if (!kept) throw missing(request, 'rule set')
+  if (!('meanwhile' in kept)) return redirect(`/rules/sets/${params.setId}`)
+  const { theirs, base, ...meanwhile } = kept.meanwhile
+  const shown = { ...meanwhile, theirs: typedRuleSet(theirs), base: base && typedRuleSet(base) }
+  return data({ ...answer, typed: typedRuleSet(read.ruleSet), meanwhile: shown }, 412)
 }
+
+/** The revision that a form was sent from; what is none is older than any. */
+const revisionOf = (text: string): number => (/^\d{1,9}$/.test(text) ? Number(text) : 0)
 
 const articleColumns: readonly Column<Article>[] = [
   { key: 'article', heading: 'Article', names: true, cell: ({ article }) => article },
@@ -57,8 +61,8 @@ const articleColumns: readonly Column<Article>[] = [
 
 const revisionColumns: readonly Column<RuleSetRevision>[] = [
   { key: 'revision', heading: 'Revision', names: true, cell: ({ revision }) => revision },
-  { key: 'when', heading: 'Kept', cell: ({ createdAt }) => <When at={createdAt.toISOString()} /> },
-  { key: 'who', heading: 'By', cell: ({ author }) => author },
+  { key: 'when', heading: 'Kept', cell: ({ createdAt }) => <When at={createdAt} /> },
+  { key: 'who', heading: 'By', cell: ({ author }) => author ?? 'An account that is gone' },
   { key: 'articles', heading: 'Articles', cell: ({ articles }) => articles },
 ]
 
@@ -84,13 +88,22 @@ export default function RuleSetPage({ loaderData, actionData }: Route.ComponentP
         again.
       </p>
       {mayEdit ? (
-        <RuleSetForm
-          key={ruleSet.revision}
-          typed={actionData?.typed ?? typedRuleSet(ruleSet)}
-          revision={ruleSet.revision}
-          errors={actionData?.errors ?? {}}
-          sending={sending}
-        />
+        <>
+          {actionData?.meanwhile && (
+            <RuleSetConflict
+              key={actionData.meanwhile.revision}
+              mine={actionData.typed}
+              meanwhile={actionData.meanwhile}
+            />
+          )}
+          <RuleSetForm
+            key={ruleSet.revision}
+            typed={actionData?.typed ?? typedRuleSet(ruleSet)}
+            revision={actionData?.revision ?? String(ruleSet.revision)}
+            errors={actionData?.errors ?? {}}
+            sending={sending}
+          />
+        </>
       ) : (
         <section className="overflow-x-auto" tabIndex={0} aria-label="Articles">
           <DataTable

@@ -1,4 +1,4 @@
-import { asc, eq } from 'drizzle-orm'
+import { asc, eq, inArray } from 'drizzle-orm'
 import { z } from 'zod'
 import { can, roles, type Role } from '#app/domain/access/roles.ts'
 import { authDatabase } from '#app/server/db.server.ts'
@@ -13,11 +13,16 @@ export interface Person {
   readonly email: string | null
 }
 
-/** The name of an account; null when it is gone. */
-export async function findName(userId: string): Promise<string | null> {
-  const [row] = await authDatabase.select({ name: user.name }).from(user).where(eq(user.id, userId))
-  return row?.name ?? null
+/** The names of accounts by their ids; those that are gone are missing. */
+export async function findNames(userIds: readonly string[]): Promise<ReadonlyMap<string, string>> {
+  const ids = [...new Set(userIds)]
+  const rows = await authDatabase.select({ id: user.id, name: user.name }).from(user).where(inArray(user.id, ids))
+  return new Map(rows.map(({ id, name }) => [id, name]))
 }
+
+/** The name of an account; null when it is gone. */
+export const findName = async (userId: string): Promise<string | null> =>
+  (await findNames([userId])).get(userId) ?? null
 
 /** The people of the member's organisation by name. */
 export async function listPeople(member: Member): Promise<Person[]> {

@@ -1,8 +1,10 @@
-import { and, asc, desc, eq } from 'drizzle-orm'
+import { and, asc, eq, sql } from 'drizzle-orm'
+import { z } from 'zod'
 import { ruleSetSchema, type ChosenRuleSet, type RuleSet } from '#app/domain/rules/rule-set.ts'
 import type { House } from '#app/domain/rules/house.ts'
 import { recordEvent } from '#app/server/audit.server.ts'
 import { readHouse } from '#app/server/data/house.server.ts'
+import { findName, findNames } from '#app/server/data/people.server.ts'
 import { isId } from '#app/server/missing.server.ts'
 import { asOrganisation, own, type Transaction } from '#app/server/organisation.server.ts'
 import type { Member } from '#app/server/session.server.ts'
@@ -44,12 +46,26 @@ export async function readRuleSets(tx: Transaction): Promise<ChosenRuleSet[]> {
   return rows.map(ruleSetOf)
 }
 
-/** One revision of a rule set: who wrote it and when. */
+/** One revision of a rule set: who wrote it, by name while there is one, and when, ISO 8601. */
 export interface RuleSetRevision {
   readonly revision: number
-  readonly author: string
-  readonly createdAt: Date
+  readonly author: string | null
+  readonly createdAt: string
   readonly articles: number
+}
+
+const revisionsSchema = z.array(
+  z.object({ revision: z.number(), authorId: z.string(), createdAt: z.string(), articles: z.number() }),
+)
+
+/** A column with the revisions of a rule set, newest first, as a JSON list. */
+function revisionList(tx: Transaction) {
+  const { revision, authorId, createdAt, body } = ruleSetRevisions
+  const entry = sql`json_build_object('revision', ${revision}, 'authorId', ${authorId}, 'createdAt', ${createdAt}, 'articles', jsonb_array_length(${body} -> 'articles'))` // prettier-ignore
+  return tx
+    .select({ list: sql`json_agg(${entry} order by ${revision} desc)` })
+    .from(ruleSetRevisions)
+    .where(and(own(ruleSetRevisions), eq(ruleSetRevisions.ruleSetId, ruleSets.id)))
 }
 
 /** A rule set with its revisions, newest first; null when the organisation has it not. */
@@ -58,29 +74,20 @@ export async function findRuleSet(
   id: string,
 ): Promise<{ readonly ruleSet: ChosenRuleSet; readonly revisions: RuleSetRevision[] } | null> {
   if (!isId(id)) return null
-  return asOrganisation(member.organisationId, async (tx) => {
-    const [row] = await tx
-      .select(columns)
+  const [row] = await asOrganisation(member.organisationId, (tx) =>
+    tx
+      .select({ ...columns, revisions: sql`(${revisionList(tx)})` })
       .from(ruleSets)
-      .where(and(own(ruleSets), eq(ruleSets.id, id)))
-    if (!row) return null
-    const rows = await tx
-      .select({
-        revision: ruleSetRevisions.revision,
-        body: ruleSetRevisions.body,
-        createdAt: ruleSetRevisions.createdAt,
-        authorId: ruleSetRevisions.authorId,
-      })
-      .from(ruleSetRevisions)
-      .where(and(own(ruleSetRevisions), eq(ruleSetRevisions.ruleSetId, id)))
-      .orderBy(desc(ruleSetRevisions.revision))
-    const revisions = rows.map(({ body, authorId, ...rest }) => ({
-      ...rest,
-      author: authorId === member.userId ? 'You' : 'A colleague',
-      articles: ruleSetSchema.parse(body).articles.length,
-    }))
-    return { ruleSet: ruleSetOf(row), revisions }
-  })
+      .where(and(own(ruleSets), eq(ruleSets.id, id))),
+  )
+  if (!row) return null
+  const { revisions, ...ruleSet } = row
+  const listed = revisionsSchema.parse(revisions)
+  const names = await findNames(listed.map(({ authorId }) => authorId))
+  return {
+    ruleSet: ruleSetOf(ruleSet),
+    revisions: listed.map(({ authorId, ...rest }) => ({ ...rest, author: names.get(authorId) ?? null })),
+  }
 }
 
 async function keepRevision(tx: Transaction, member: Member, id: string, revision: number, body: RuleSet) {
@@ -103,8 +110,24 @@ export function createRuleSet(member: Member, body: RuleSet): Promise<string> {
   })
 }
 
-/** Keeps a rule set that was changed from a revision; null, and nothing is changed, when somebody kept another meanwhile. */
-export function saveRuleSet(member: Member, id: string, from: number, body: RuleSet): Promise<number | null> {
+/** What somebody kept while a rule set was being changed: theirs, who and when, and what both came from. */
+export interface RuleSetMeanwhile {
+  readonly revision: number
+  readonly theirs: RuleSet
+  readonly base: RuleSet | null
+  readonly changed: { readonly by: string | null; readonly at: string }
+}
+
+/**
+ * Keeps a rule set that was changed from a revision and gives the new one; or, and then nothing is changed, what somebody
+ * kept meanwhile. Null when the organisation has it not.
+ */
+export function saveRuleSet(
+  member: Member,
+  id: string,
+  from: number,
+  body: RuleSet,
+): Promise<{ readonly revision: number } | { readonly meanwhile: RuleSetMeanwhile } | null> {
   return asOrganisation(member.organisationId, async (tx) => {
     const revision = from + 1
     const written = await tx
@@ -112,10 +135,29 @@ export function saveRuleSet(member: Member, id: string, from: number, body: Rule
       .set({ ...body, revision, updatedAt: new Date(), updatedBy: member.userId })
       .where(and(own(ruleSets), eq(ruleSets.id, id), eq(ruleSets.revision, from)))
       .returning({ id: ruleSets.id })
-    if (written.length === 0) return null
+    if (written.length === 0) return readMeanwhile(tx, id, from)
     await keepRevision(tx, member, id, revision, body)
-    return revision
+    return { revision }
   })
+}
+
+async function readMeanwhile(
+  tx: Transaction,
+  id: string,
+  from: number,
+): Promise<{ meanwhile: RuleSetMeanwhile } | null> {
+  const { updatedAt, updatedBy } = ruleSets
+  const before = and(own(ruleSetRevisions), eq(ruleSetRevisions.ruleSetId, id), eq(ruleSetRevisions.revision, from))
+  const [kept] = await tx
+    .select({ ...columns, updatedAt, updatedBy })
+    .from(ruleSets)
+    .where(and(own(ruleSets), eq(ruleSets.id, id)))
+  if (!kept) return null
+  const [base] = await tx.select({ body: ruleSetRevisions.body }).from(ruleSetRevisions).where(before)
+  const { name, place, edition, articles, revision } = kept
+  const changed = { by: await findName(kept.updatedBy), at: kept.updatedAt.toISOString() }
+  const theirs = ruleSetSchema.parse({ name, place, edition, articles })
+  return { meanwhile: { revision, theirs, base: base ? ruleSetSchema.parse(base.body) : null, changed } }
 }
 
 /** Whether a job's copy of a rule set is what the organisation keeps of that revision, to the letter. */
