@@ -75,7 +75,10 @@ export function JobFrame({ viewer, job, current, tools, below, bare = false, chi
     <div className="flex min-h-dvh flex-col">
       <SkipLink />
       <header className="flex flex-wrap items-center gap-x-3.5 border-b border-rule bg-paper-raised px-4 wide-tablet:h-13 wide-tablet:flex-nowrap">
-        <nav aria-label="Where this is" className="flex h-13 min-w-0 items-center gap-2 text-ink-3">
+        <nav
+          aria-label="Where this is"
+          className="flex h-13 min-w-24 flex-1 items-center gap-2 text-ink-3 wide-tablet:min-w-0 wide-tablet:flex-initial"
+        >
           <Link to="/jobs" aria-label="Inglefield, all jobs" className="flex h-full flex-none items-center text-ink">
             <span className="hidden desk:inline">
               <Wordmark />
@@ -87,10 +90,10 @@ export function JobFrame({ viewer, job, current, tools, below, bare = false, chi
           <span aria-hidden="true" className="text-rule-strong">
             /
           </span>
-          <Link to="/jobs" className="flex-none hover:text-ink pointer-coarse:py-3">
+          <Link to="/jobs" className="hidden flex-none hover:text-ink tablet:inline pointer-coarse:py-3">
             Jobs
           </Link>
-          <span aria-hidden="true" className="text-rule-strong">
+          <span aria-hidden="true" className="hidden text-rule-strong tablet:inline">
             /
           </span>
           <Link to={base} className="truncate font-medium text-ink pointer-coarse:py-3">

@@ -210,13 +210,13 @@ export function PlanSurface(props: PlanSurfaceProps) {
   )
 }
 
-/** Ways to change the size without a wheel, over the plan's lower left corner. */
+/** Ways to change the size without a wheel: over the plan's lower left corner, on small screens, without names, over the upper. */
 function SizeButtons({ viewing }: { viewing: PlanViewing }) {
   return (
     <div
       role="group"
       aria-label="Size of the plan"
-      className="absolute bottom-2 left-2 flex items-center rounded-md border border-rule bg-paper-raised/90 print:hidden"
+      className="absolute bottom-2 left-2 flex items-center rounded-md border border-rule bg-paper-raised/90 max-desk:top-2 max-desk:bottom-auto print:hidden"
     >
       <IconButton icon="fit" label="Whole plan" onClick={viewing.showAll} />
       <IconButton icon="minus" label="Smaller" onClick={() => viewing.enlargeAt(0.8)} />

@@ -1,4 +1,5 @@
 import { useState, type ReactNode } from 'react'
+import { groupFindings } from '#app/domain/rules/finding-groups.ts'
 import { Tabs } from '#app/components/tabs.tsx'
 import { HeaterSteppers } from '#app/editor/panels/heater-steppers.tsx'
 import { Chosen, Explained, Findings, Heaters, Placing, Seats, type PartProps } from '#app/editor/side-parts.tsx'
@@ -9,7 +10,7 @@ type SheetTab = 'heater' | 'findings' | 'seats' | 'heaters' | 'map' | 'add'
 export function TouchSheet({ subject, tools }: PartProps & { tools: ReactNode }) {
   const { editor, figures, layout, site, readOnly } = subject
   const [tab, setTab] = useState<SheetTab>('heater')
-  const open = figures.findings.filter(({ outcome }) => outcome !== 'pass').length
+  const open = groupFindings(figures.findings).filter(({ worst }) => worst.outcome !== 'pass').length
   const lead = layout.heaters.find(({ id }) => id === editor.state.selected[0])
   const pad = (panel: ReactNode) => <div className="h-47 overflow-y-auto">{panel}</div>
   const tabs: { value: SheetTab; label: ReactNode; panel: ReactNode }[] = [
