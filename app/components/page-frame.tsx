@@ -103,7 +103,7 @@ export function JobFrame({ viewer, job, current, tools, below, bare = false, chi
         <div className="order-last -ml-3 h-11 w-full overflow-x-auto wide-tablet:order-none wide-tablet:ml-0 wide-tablet:h-13 wide-tablet:w-auto print:hidden">
           <TabNav label={`Pages of ${job.name}`} tabs={tabs} />
         </div>
-        <span className="flex-1" />
+        <span className="hidden flex-1 wide-tablet:inline" />
         <span className="contents print:hidden">{tools}</span>
         <ViewerMenu viewer={viewer} />
       </header>
