@@ -1,7 +1,8 @@
 import { createServer } from 'node:http'
 import type { AddressInfo } from 'node:net'
 import sharp from 'sharp'
-import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { Pool } from 'pg'
+import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest'
 import { z } from 'zod'
 import { noMarks } from '#app/domain/photo/measurements.ts'
 import { type Application, openApplication, type Person, requestOf, ownOrigin } from '#tests/support/application.ts'
@@ -101,6 +102,8 @@ const added = async (response: Response) => {
   expect(response.status).toBe(201)
   return photoSchema.parse(await response.json())
 }
+/** Room for more photos in the job, which an earlier test filled. */
+const emptyJob = () => application.admin.query('delete from photos where job_id = $1', [jobId])
 const countPhotos = async () =>
   Number((await application.admin.query('select count(*) from photos where job_id = $1', [jobId])).rows[0].count)
 
@@ -268,6 +271,68 @@ describe('a photo that is removed', () => {
   })
 })
 
+describe('a photo that was deleted', () => {
+  beforeAll(emptyJob)
+  const filesOf = async (id: string) => {
+    const { rows } = await application.admin.query('select file_key from photos where id = $1', [id])
+    return rows[0]?.file_key ?? null
+  }
+  const deletedFor = async (id: string, ago: string) => {
+    expect((await ask('DELETE', `/api/photos/${id}`, { headers: { 'If-Match': '"1"' } })).status).toBe(200)
+    await application.admin.query(`update photos set deleted_at = now() - $2::interval where id = $1`, [id, ago])
+  }
+  const restore = (id: string) =>
+    ask('POST', `/api/photos/${id}/restore`, { body: { deleted: true }, headers: { 'Idempotency-Key': key() } })
+  const swept = async () => {
+    const { sweepPhotos } = await import('#app/server/jobs/sweep-photos.server.ts')
+    const owner = new Pool({ connectionString: application.database.urls.owner })
+    try {
+      await sweepPhotos(owner)
+    } finally {
+      await owner.end()
+    }
+  }
+
+  it('loses its files and its row once it cannot be brought back, and not before', async () => {
+    const { files } = await import('#app/server/outside/storage.server.ts')
+    const { smallKey } = await import('#app/server/photo-files.server.ts')
+    const made = await Promise.all([1, 2, 3, 4].map(async () => added(await send(await picture(200, 150)))))
+    const [kept, young, late, old] = made.map(({ id }) => id) as [string, string, string, string]
+    const keys = new Map<string, string>()
+    for (const id of [kept, young, late, old]) keys.set(id, await filesOf(id))
+    await deletedFor(young, '6 days 23 hours')
+    await deletedFor(late, '7 days 1 minute')
+    await deletedFor(old, '7 days 2 hours')
+    const there = async (id: string) =>
+      [await files.find(keys.get(id)!), await files.find(smallKey(keys.get(id)!))].map((file) => file !== null)
+
+    expect((await restore(late)).status).toBe(404)
+    expect((await restore(old)).status).toBe(404)
+    await swept()
+    expect(await there(old)).toEqual([false, false])
+    expect(await filesOf(old)).toBeNull()
+    for (const id of [kept, young, late]) expect([id, ...(await there(id))]).toEqual([id, true, true])
+    expect((await restore(young)).status).toBe(200)
+    expect((await ask('GET', `/api/photos/${young}/picture.jpg`)).status).toBe(200)
+    await swept()
+    expect(await there(young)).toEqual([true, true])
+  })
+
+  it('stays for the next time when the store fails', async () => {
+    const { files } = await import('#app/server/outside/storage.server.ts')
+    const { id } = await added(await send(await picture(200, 150)))
+    await deletedFor(id, '8 days')
+    const told = vi.spyOn(console, 'error').mockImplementation(() => undefined)
+    const away = vi.spyOn(files, 'remove').mockRejectedValue(new Error('away'))
+    await swept()
+    expect([await filesOf(id), told.mock.calls.length]).toEqual([expect.any(String), 1])
+    away.mockRestore()
+    told.mockRestore()
+    await swept()
+    expect(await filesOf(id)).toBeNull()
+  })
+})
+
 describe('the picture of a photo', () => {
   it('is of its own organisation only', async () => {
     expect((await ask('GET', `/api/photos/${foreignPhoto}/picture.jpg`)).status).toBe(404)
@@ -277,15 +342,63 @@ describe('the picture of a photo', () => {
   })
 })
 
+const siteSchema = z.object({ revision: z.number(), site: z.looseObject({ dimensions: z.array(z.looseObject({})) }) })
+const readSite = async () => siteSchema.parse(await (await ask('GET', `/api/jobs/${jobId}/site`)).json())
+const saveSite = (body: unknown, revision: number) =>
+  ask('PUT', `/api/jobs/${jobId}/site`, {
+    body,
+    headers: { 'If-Match': `"${revision}"`, 'Idempotency-Key': key() },
+  })
+const traceOf = (photoId: string) => ({ photoId, at: [-2.00004, 0], metresPerPixel: 0.00561337, turnDeg: 0 })
+
 describe('a picture under the plan', () => {
+  beforeAll(emptyJob)
   it('keeps its scale to the last digit', async () => {
-    const { revision, site } = z
-      .object({ revision: z.number(), site: z.looseObject({}) })
-      .parse(await (await ask('GET', `/api/jobs/${jobId}/site`)).json())
-    const trace = { photoId: foreignPhoto, at: [-2.00004, 0], metresPerPixel: 0.00561337, turnDeg: 0 }
-    const headers = { 'If-Match': `"${revision}"`, 'Idempotency-Key': key() }
-    const saved = await ask('PUT', `/api/jobs/${jobId}/site`, { body: { ...site, trace }, headers })
+    const { id } = await added(await send(await picture(200, 150)))
+    const { revision, site } = await readSite()
+    const saved = await saveSite({ ...site, trace: traceOf(id) }, revision)
     expect(await saved.json()).toMatchObject({ site: { trace: { at: [-2, 0], metresPerPixel: 0.00561337 } } })
+  })
+})
+
+describe('a site that refers to photos', () => {
+  beforeAll(emptyJob)
+  it('takes those of its own job only: under the plan and with a size', async () => {
+    const { rows } = await application.admin.query(
+      `select id from jobs where id <> $1 and organisation_id = (select organisation_id from jobs where id = $1) limit 1`,
+      [jobId],
+    )
+    const ofAnotherJob = await added(await send(await picture(200, 150), { to: rows[0].id }))
+    const own = await added(await send(await picture(200, 150)))
+    const { revision, site } = await readSite()
+    const withSize = (photoId: string) => ({
+      ...site,
+      dimensions: site.dimensions.map((size, i) =>
+        i === 1 ? { ...size, photo: { photoId, measurementId: 'm' } } : size,
+      ),
+    })
+    const before = (await readSite()).site
+    for (const strange of [ofAnotherJob.id, foreignPhoto, key()]) {
+      const traced = await refused(await saveSite({ ...site, trace: traceOf(strange) }, revision))
+      expect(traced).toEqual({ status: 400, error: 'No such photo of this job.', path: 'trace.photoId' })
+      const sized = await refused(await saveSite(withSize(strange), revision))
+      expect(sized).toMatchObject({ status: 400, path: 'dimensions.1.photo.photoId' })
+    }
+    expect((await readSite()).site).toEqual(before)
+    expect((await saveSite(withSize(own.id), revision)).status).toBe(200)
+  })
+
+  it('is saved further when its photo was deleted, even for good', async () => {
+    const { id } = await added(await send(await picture(200, 150)))
+    const first = await readSite()
+    expect((await saveSite({ ...first.site, trace: traceOf(id) }, first.revision)).status).toBe(200)
+    await application.admin.query('delete from photos where id = $1', [id])
+    const { revision, site } = await readSite()
+    expect((await saveSite({ ...site, name: 'Another name' }, revision)).status).toBe(200)
+    const last = await readSite()
+    expect((await saveSite({ ...last.site, trace: null }, last.revision)).status).toBe(200)
+    const back = await saveSite({ ...last.site, trace: traceOf(id) }, last.revision + 1)
+    expect(await refused(back)).toMatchObject({ status: 400, path: 'trace.photoId' })
   })
 })
 
@@ -300,6 +413,10 @@ describe('a store of the S3 kind', () => {
         if (request.method === 'PUT') {
           const { authorization = '', 'content-type': type = '' } = request.headers
           kept.set(path, { bytes: Buffer.concat(parts), type, signed: authorization })
+          return response.end()
+        }
+        if (request.method === 'DELETE') {
+          response.statusCode = kept.delete(path) ? 204 : 404
           return response.end()
         }
         const found = kept.get(path)
@@ -323,7 +440,11 @@ describe('a store of the S3 kind', () => {
       3,
     ])
     expect(await store.find('photos/none.jpg')).toBeNull()
+    await store.remove('photos/one.jpg')
+    expect([...kept.keys()]).toEqual([])
+    await expect(store.remove('photos/one.jpg')).resolves.toBeUndefined()
     await new Promise((resolve) => server.close(resolve))
     await expect(store.keep('photos/two.jpg', new Uint8Array([1]), 'image/jpeg')).rejects.toThrow()
+    await expect(store.remove('photos/two.jpg')).rejects.toThrow()
   })
 })

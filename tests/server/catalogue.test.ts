@@ -73,7 +73,7 @@ describe('the catalogue of the database', () => {
     }
   })
 
-  it('has the one policy, for reading and writing, and the three named exceptions of the owner role', async () => {
+  it('has the one policy, for reading and writing, and the named exceptions of the owner role', async () => {
     const policies = await rows(
       `select tablename, policyname, cmd, roles::text, qual, with_check from pg_policies order by tablename, policyname`,
     )
@@ -87,6 +87,8 @@ describe('the catalogue of the database', () => {
     const others = policies.filter(({ policyname }) => policyname !== 'own_organisation')
     expect(others.map(({ tablename, policyname, cmd, roles }) => [tablename, policyname, cmd, roles])).toEqual([
       ['offer_links', 'token_lookup', 'SELECT', '{inglefield_owner}'],
+      ['photos', 'sweep_look', 'SELECT', '{inglefield_owner}'],
+      ['photos', 'sweep_old', 'DELETE', '{inglefield_owner}'],
       ['saved_answers', 'sweep_look', 'SELECT', '{inglefield_owner}'],
       ['saved_answers', 'sweep_old', 'DELETE', '{inglefield_owner}'],
     ])

@@ -11,6 +11,7 @@ import {
   photoColumns,
   photoOf,
   presentPhoto,
+  restorablePhoto,
   type OpenPhoto,
   type Photo,
 } from '#app/server/data/photos.server.ts'
@@ -101,7 +102,7 @@ export const saveMarks = (photo: OpenPhoto, save: Save<PhotoMarks>): Promise<Ans
     return Promise.resolve({ status: 400, ...outside })
   })
 
-/** Deletes a photo that still is at the expected revision. It can be brought back. */
+/** Deletes a photo that still is at the expected revision. It can be brought back for a week. */
 export function deletePhoto({ id, jobId, member }: OpenPhoto, expected: number | null): Promise<Answer | Refusal> {
   return asOrganisation(member.organisationId, async (tx) => {
     const kept = await lockPhoto(tx, id)
@@ -126,7 +127,7 @@ async function bringBack(tx: Transaction, { id, jobId, member }: OpenPhoto): Pro
   const [row] = await tx
     .update(photos)
     .set({ deletedAt: null })
-    .where(and(own(photos), eq(photos.id, id)))
+    .where(and(own(photos), eq(photos.id, id), restorablePhoto))
     .returning(photoColumns)
   if (!row) return gone('photo')
   await touchJob(tx, jobId)
@@ -134,7 +135,7 @@ async function bringBack(tx: Transaction, { id, jobId, member }: OpenPhoto): Pro
   return answer(photoOf(row))
 }
 
-/** Brings a deleted photo back as it was, once per key. */
+/** Brings a photo that was deleted within the week back as it was, once per key. */
 export const undeletePhoto = (photo: OpenPhoto, { key, bodyHash }: Save<unknown>): Promise<Answer | Refusal> =>
   asOrganisation(photo.member.organisationId, (tx) =>
     answerOnce(tx, { member: photo.member, resource: `photos/${photo.id}`, key, bodyHash }, () => bringBack(tx, photo)),

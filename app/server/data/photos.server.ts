@@ -1,4 +1,4 @@
-import { and, asc, eq, isNull } from 'drizzle-orm'
+import { and, asc, eq, gt, isNull, or, sql } from 'drizzle-orm'
 import type { Action } from '#app/domain/access/roles.ts'
 import { photoMarksSchema, type PhotoMarks } from '#app/domain/photo/measurements.ts'
 import type { OpenJob } from '#app/server/data/jobs.server.ts'
@@ -38,8 +38,9 @@ export const photoColumns = {
   marks: photos.marks,
 }
 
-/** A deleted photo keeps its row so that it can be brought back. */
+/** A deleted photo keeps its row for a week so that it can be brought back; then it is as if it never was. */
 export const presentPhoto = isNull(photos.deletedAt)
+export const restorablePhoto = or(presentPhoto, gt(photos.deletedAt, sql`now() - interval '7 days'`))
 
 /** A row as the rest of the program knows it. */
 export const photoOf = (row: Omit<Photo, 'marks'> & { marks: unknown }): Photo => ({
@@ -69,7 +70,8 @@ async function readPhotos(tx: Transaction, jobId: string): Promise<Photo[]> {
 
 /**
  * The photo that a URL names, for a person who may do that to it. Throws 401, 403, or 404 when it is not a photo of the
- * person's organisation or was deleted; `deleted` lets deleted ones through.
+ * person's organisation or was deleted; `deleted` lets those through that can be
+ * brought back.
  */
 export async function requirePhoto(
   request: Request,
@@ -83,7 +85,7 @@ export async function requirePhoto(
     tx
       .select({ ...photoColumns, fileKey: photos.fileKey })
       .from(photos)
-      .where(and(own(photos), eq(photos.id, photoId), deleted === 'refused' ? presentPhoto : undefined)),
+      .where(and(own(photos), eq(photos.id, photoId), deleted === 'refused' ? presentPhoto : restorablePhoto)),
   )
   if (!row) throw missing(request, 'photo')
   const { fileKey, ...photo } = row

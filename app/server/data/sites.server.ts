@@ -7,6 +7,7 @@ import type { Answer, Refusal } from '#app/server/answers.server.ts'
 import { contentHash } from '#drizzle/content-hash.ts'
 import { houseColumn, houseOf } from '#app/server/data/house.server.ts'
 import { touchJob, type OpenJob } from '#app/server/data/jobs.server.ts'
+import { strangePhoto } from '#app/server/data/site-photos.server.ts'
 import { asOrganisation, type Transaction, own } from '#app/server/organisation.server.ts'
 import { saveRevision, type Locked, type Revisioned, type Save } from '#app/server/saving.server.ts'
 import type { Member } from '#app/server/session.server.ts'
@@ -92,6 +93,6 @@ const siteOf = ({ id: jobId, member }: OpenJob): Revisioned<Site> => ({
   },
 })
 
-/** Saves a job's site by the one rule for saving. */
+/** Saves a job's site by the one rule for saving; what refers to a photo that is none of the job's is refused (400). */
 export const saveSite = (job: OpenJob, save: Save<Site>): Promise<Answer | Refusal> =>
-  saveRevision(job.member, siteOf(job), save, () => Promise.resolve(save.body))
+  saveRevision(job.member, siteOf(job), save, async (tx) => (await strangePhoto(tx, job.id, save.body)) ?? save.body)

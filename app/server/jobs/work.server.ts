@@ -1,6 +1,7 @@
 import PgBoss from 'pg-boss'
 import { z } from 'zod'
 import { poolOf } from '#app/server/db.server.ts'
+import { sweepPhotos } from '#app/server/jobs/sweep-photos.server.ts'
 import { sweep } from '#app/server/jobs/sweep.server.ts'
 import { mailSchema, post } from '#app/server/outside/mail.server.ts'
 import { mailQueue, sweepQueue } from '#drizzle/queue.ts'
@@ -30,7 +31,10 @@ export async function startWork(): Promise<{ stop(): Promise<void> }> {
   boss.on('error', (problem) => console.error(`Queue: ${problem.message}`))
   await boss.start()
   await boss.work(mailQueue, { pollingIntervalSeconds: 1 }, deliverMail)
-  await boss.work(sweepQueue, () => sweep(pool))
+  await boss.work(sweepQueue, async () => {
+    await sweep(pool)
+    await sweepPhotos(pool)
+  })
   await boss.schedule(sweepQueue, '17 * * * *')
   return {
     stop: async () => {
