@@ -1,4 +1,3 @@
-import { data } from 'react-router'
 import { assumptionOf } from '#app/domain/brief/brief-fields.ts'
 import { hangSheet, type HangSheet } from '#app/domain/layout/hang-sheet.ts'
 import type { HangingData } from '#app/domain/layout/hanging-data.ts'
@@ -11,8 +10,7 @@ import { CarriedTable } from '#app/editor/hang/carried-table.tsx'
 import { cutTextWithUnit } from '#app/editor/hang/hang-words.ts'
 import { HungHeaterSection } from '#app/editor/hang/hung-heater.tsx'
 import { requireJob } from '#app/server/data/jobs.server.ts'
-import { findLaidOut } from '#app/server/data/laid-out.server.ts'
-import { isId } from '#app/server/missing.server.ts'
+import { requireLaidOut } from '#app/server/data/laid-out.server.ts'
 import { viewerOf } from '#app/server/viewer.server.ts'
 import type { Route } from './+types/hang'
 
@@ -22,10 +20,7 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 
 export async function loader({ request, params }: Route.LoaderArgs) {
   const job = await requireJob(request, params.jobId, 'view')
-  const { variantId } = params
-  const laidOut = isId(variantId) ? await findLaidOut({ id: variantId, member: job.member }) : null
-  if (laidOut?.variant.jobId !== job.id) throw data('No such variant', 404)
-  const { variant, site, siteRevision, brief, models, house } = laidOut
+  const { variant, site, siteRevision, brief, models, house } = await requireLaidOut(job, params.variantId)
   const { heaters, number, title, revision, id } = variant
   const findings = checkLayout({ site, brief, layout: { heaters }, models, warmth: [], house })
   const unsupported = findings.flatMap(({ rule, outcome, subject, title: why }) =>

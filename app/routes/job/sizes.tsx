@@ -1,10 +1,9 @@
 import { useMemo } from 'react'
-import { data, Link } from 'react-router'
+import { Link } from 'react-router'
 import { JobFrame } from '#app/components/page-frame.tsx'
 import { DoubtfulSizes } from '#app/editor/doubt/doubtful-sizes.tsx'
 import { requireJob } from '#app/server/data/jobs.server.ts'
-import { findLaidOut } from '#app/server/data/laid-out.server.ts'
-import { isId } from '#app/server/missing.server.ts'
+import { requireLaidOut } from '#app/server/data/laid-out.server.ts'
 import { viewerOf } from '#app/server/viewer.server.ts'
 import type { Route } from './+types/sizes'
 
@@ -14,10 +13,7 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 
 export async function loader({ request, params }: Route.LoaderArgs) {
   const job = await requireJob(request, params.jobId, 'view')
-  const { variantId } = params
-  const laidOut = isId(variantId) ? await findLaidOut({ id: variantId, member: job.member }) : null
-  if (laidOut?.variant.jobId !== job.id) throw data('No such variant', 404)
-  const { variant, site, brief, models, house } = laidOut
+  const { variant, site, brief, models, house } = await requireLaidOut(job, params.variantId)
   const used = new Set(variant.heaters.map(({ model }) => model))
   return {
     viewer: viewerOf(job.member),

@@ -1,5 +1,5 @@
 import { useMemo } from 'react'
-import { data, useNavigate, type ShouldRevalidateFunctionArgs } from 'react-router'
+import { useNavigate, type ShouldRevalidateFunctionArgs } from 'react-router'
 import useSWR from 'swr'
 import { can } from '#app/domain/access/roles.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
@@ -9,8 +9,7 @@ import { keptAt } from '#app/editor/kept-at.ts'
 import { useSiteChange } from '#app/editor/use-site-change.ts'
 import { VariantEditor } from '#app/editor/variant-editor.tsx'
 import { requireJob } from '#app/server/data/jobs.server.ts'
-import { findLaidOut } from '#app/server/data/laid-out.server.ts'
-import { isId } from '#app/server/missing.server.ts'
+import { requireLaidOut } from '#app/server/data/laid-out.server.ts'
 import { viewerOf } from '#app/server/viewer.server.ts'
 import type { Route } from './+types/variant'
 
@@ -20,10 +19,7 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 
 export async function loader({ request, params }: Route.LoaderArgs) {
   const job = await requireJob(request, params.jobId, 'view')
-  const { variantId } = params
-  const laidOut = isId(variantId) ? await findLaidOut({ id: variantId, member: job.member }) : null
-  if (laidOut?.variant.jobId !== job.id) throw data('No such variant', 404)
-  const { variant, site, siteRevision, brief, models, house, ofJob } = laidOut
+  const { variant, site, siteRevision, brief, models, house, ofJob } = await requireLaidOut(job, params.variantId)
   return {
     viewer: viewerOf(job.member),
     job: { id: job.id, name: job.name },

@@ -6,7 +6,6 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { mountedHeaterSchema, type MountedHeater } from '#app/domain/layout/layout.ts'
 import type { House } from '#app/domain/rules/house.ts'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
-import { recordAnswer } from '#app/server/audit.server.ts'
 import { houseColumn, houseOf } from '#app/server/data/house.server.ts'
 import { modelsByCode } from '#app/server/data/heaters.server.ts'
 import type { OpenJob } from '#app/server/data/jobs.server.ts'
@@ -75,15 +74,5 @@ export function findCompared(job: OpenJob, asked: string | null): Promise<Compar
       chosen,
       all: all.map(({ number, title }) => ({ number, title })),
     }
-  })
-}
-
-/** Writes down which revisions leave the house as a picture, before it is handed out. */
-export function recordExport(job: OpenJob, format: 'png' | 'svg', chosen: readonly ComparedLayout[]): Promise<void> {
-  const variants = chosen.map(({ number, revision }) => ({ number, revision }))
-  return recordAnswer(job.member, {
-    action: 'comparison exported',
-    subject: `jobs/${job.id}`,
-    detail: { format, variants },
   })
 }

@@ -1,4 +1,5 @@
 import { and, eq } from 'drizzle-orm'
+import { data } from 'react-router'
 import { z } from 'zod'
 import { briefSchema, type Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
@@ -6,7 +7,9 @@ import type { House } from '#app/domain/rules/house.ts'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
 import { houseColumn, houseOf } from '#app/server/data/house.server.ts'
 import { modelsByCode } from '#app/server/data/heaters.server.ts'
+import type { OpenJob } from '#app/server/data/jobs.server.ts'
 import { present, variantColumns, variantList, variantOf, type Variant } from '#app/server/data/variants.server.ts'
+import { isId } from '#app/server/missing.server.ts'
 import { asOrganisation, own } from '#app/server/organisation.server.ts'
 import type { Member } from '#app/server/session.server.ts'
 import { briefs, sites, variants } from '#drizzle/schema.ts'
@@ -53,4 +56,11 @@ export function findLaidOut(of: { readonly id: string; readonly member: Member }
       ofJob: neighbourSchema.array().parse(row.ofJob),
     }
   })
+}
+
+/** A variant of a job with everything its figures rest on. Throws 404 for one that is not the job's or was deleted. */
+export async function requireLaidOut(job: OpenJob, variantId: string): Promise<LaidOut> {
+  const laid = isId(variantId) ? await findLaidOut({ id: variantId, member: job.member }) : null
+  if (laid?.variant.jobId !== job.id) throw data('No such variant', 404)
+  return laid
 }
