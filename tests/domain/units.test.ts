@@ -1,10 +1,10 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
+import { parseLength } from '#app/domain/length-parser.ts'
 import {
   formatLength,
   formatQuantity,
   fromSi,
-  parseLength,
   parseQuantity,
   roundLength,
   toSi,

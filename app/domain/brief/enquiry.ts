@@ -5,7 +5,8 @@ import { supplyFields } from '#app/domain/brief/supply-fields.ts'
 import { houseFigure } from '#app/domain/rules/house-rules.ts'
 import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { JobRequest } from '#app/domain/job/job-request.ts'
-import { parseLength, type DisplayUnits } from '#app/domain/units.ts'
+import { parseLength } from '#app/domain/length-parser.ts'
+import { type DisplayUnits } from '#app/domain/units.ts'
 
 /** The answers of the enquiry form by field name; a field answered with "don't know" has a second name beside it. */
 export type EnquiryAnswers = Readonly<Record<string, string>>

@@ -1,6 +1,7 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
 import { noUnit, readNumber, words, type BriefField } from '#app/domain/brief/brief-field.ts'
-import { formatLength, parseLength } from '#app/domain/units.ts'
+import { parseLength } from '#app/domain/length-parser.ts'
+import { formatLength } from '#app/domain/units.ts'
 
 const supplyOf = (brief: Brief, change: Partial<Brief['supply']>): Brief => ({
   ...brief,

@@ -1,5 +1,6 @@
 import { hangingDataSchema, type HangingData } from '#app/domain/layout/hanging-data.ts'
-import { formatLength, parseLength, type DisplayUnits } from '#app/domain/units.ts'
+import { parseLength } from '#app/domain/length-parser.ts'
+import { formatLength, type DisplayUnits } from '#app/domain/units.ts'
 
 /** One figure of the hanging data as a form asks for it. Lengths m. */
 export interface HangingField {

@@ -1,7 +1,8 @@
 import { readNumber } from '#app/domain/brief/brief-field.ts'
 import { houseFigure } from '#app/domain/rules/house-rules.ts'
 import { houseRulesSchema, type HouseRules } from '#app/domain/rules/house-rules-schema.ts'
-import { formatLength, formatQuantity, parseLength, parseQuantity } from '#app/domain/units.ts'
+import { parseLength } from '#app/domain/length-parser.ts'
+import { formatLength, formatQuantity, parseQuantity } from '#app/domain/units.ts'
 
 type Name = keyof HouseRules
 type Reading = { readonly value: number } | { readonly error: string }

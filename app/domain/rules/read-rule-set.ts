@@ -1,6 +1,7 @@
 import { bearings } from '#app/domain/rules/bearings.ts'
 import { bearingSchema, ruleSetSchema, type Article, type RuleSet } from '#app/domain/rules/rule-set.ts'
-import { formatLength, parseLength } from '#app/domain/units.ts'
+import { parseLength } from '#app/domain/length-parser.ts'
+import { formatLength } from '#app/domain/units.ts'
 
 /** An article as it is typed: every part a text. */
 export interface TypedArticle {

@@ -1,5 +1,6 @@
 import { areaOf, crossingEdges, nearestOnSegment } from '#app/domain/site/geometry.ts'
-import { parseLength, roundLength, type DisplayUnits } from '#app/domain/units.ts'
+import { parseLength } from '#app/domain/length-parser.ts'
+import { roundLength, type DisplayUnits } from '#app/domain/units.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 
 /** Corners of an outline, at least and at most. */

@@ -1,4 +1,5 @@
-import { formatLength, parseLength, type DisplayUnits } from '#app/domain/units.ts'
+import { parseLength } from '#app/domain/length-parser.ts'
+import { formatLength, type DisplayUnits } from '#app/domain/units.ts'
 import { LengthField } from '#app/components/length-field.tsx'
 
 interface LengthInputProps {

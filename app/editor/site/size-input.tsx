@@ -1,6 +1,7 @@
 import { refusalOf } from '#app/domain/site/site-faults.ts'
 import type { Site } from '#app/domain/site/site.ts'
-import { formatLength, parseLength } from '#app/domain/units.ts'
+import { parseLength } from '#app/domain/length-parser.ts'
+import { formatLength } from '#app/domain/units.ts'
 import { LengthField } from '#app/components/length-field.tsx'
 import { useSiteEditing } from '#app/editor/site/editing.ts'
 
