@@ -1,5 +1,6 @@
 import { randomBytes } from 'node:crypto'
 import { type MiddlewareFunction, createContext } from 'react-router'
+import { compress } from '#app/server/compression.server.ts'
 import { env } from '#app/server/env.server.ts'
 import { comesFromOurselves } from '#app/server/origin.server.ts'
 import { protectEveryAnswer, protectResponse } from '#app/server/response-headers.server.ts'
@@ -61,4 +62,4 @@ const checkMember: MiddlewareFunction<Response> = async ({ request, pattern }) =
 if (env.NODE_ENV !== 'development') protectEveryAnswer()
 
 /** What the root route puts before every loader and action, outermost first. */
-export const middleware = [protect, checkOrigin, limitBody, checkMember]
+export const middleware = [compress, protect, checkOrigin, limitBody, checkMember]
