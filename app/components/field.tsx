@@ -128,7 +128,7 @@ export function SelectField({ label, aside, hint, error, options, className, id,
     <Field label={label} aside={aside} hint={hint} error={error} id={id} className={className}>
       {(control) => (
         <FieldBox error={Boolean(error)}>
-          <select {...select} {...control} className={`${inputClass} -ml-1 cursor-pointer pr-0`}>
+          <select {...select} {...control} className={`${inputClass} -ml-1 cursor-pointer truncate pr-5`}>
             {options.map((option) => (
               <option key={option.value} value={option.value} disabled={option.disabled}>
                 {option.label}

@@ -92,7 +92,9 @@ export function PlanMarks(props: PlanMarksProps) {
       <g aria-hidden="true" pointerEvents="none">
         <PlanDimensions heaters={layout.heaters} overall={words} {...{ selected, site, view, pen }} />
         {words && <PlanNames {...{ site, models, view, pen, withFigure, cuts }} layout={kept} />}
-        {words && cuts.map((cut) => <SectionCutMark key={cut.letter} {...{ cut, site, view, pen }} />)}
+        {cuts.map((cut) => (
+          <SectionCutMark key={cut.letter} {...{ cut, site, view, pen }} />
+        ))}
       </g>
     </>
   )

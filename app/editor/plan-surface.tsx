@@ -68,6 +68,11 @@ const pen = screenPen('dusk')
 /** A pointer anywhere in the frame is on the plan, wherever the drawing is shifted to. */
 const far = { x: -20_000, y: -20_000, width: 40_000, height: 40_000 }
 const narrowMargins: PlanMargins = { top: 26, right: 28, bottom: 46, left: 28 }
+/** The same with room for the marks of sections. */
+const cutMargins: PlanMargins = { top: 60, right: 28, bottom: 60, left: 54 }
+
+const marginsOf = ({ words, cuts }: Pick<PlanSurfaceProps, 'words' | 'cuts'>): PlanMargins =>
+  words ? workingMargins : cuts.length > 0 ? cutMargins : narrowMargins
 
 /** The plan to work on: pointer, wheel, fingers and keys; the map below, handles and the tag above. */
 export function PlanSurface(props: PlanSurfaceProps) {
@@ -77,7 +82,7 @@ export function PlanSurface(props: PlanSurfaceProps) {
   const moving = useRef<HTMLDivElement>(null)
   const [marquee, setMarquee] = useState<readonly [Vec2, Vec2] | null>(null)
   const size = useSize(box, { width: 1000, height: 528 })
-  const viewing = usePlanView(site, size, props.words ? workingMargins : narrowMargins, moving)
+  const viewing = usePlanView(site, size, marginsOf(props), moving)
   const { view } = viewing
   const layout = shownLayout(state)
   const kept = state.history.present

@@ -1,6 +1,6 @@
 import { memo, useEffect, useRef, type ReactNode } from 'react'
 import { Explained, Findings, Heaters, Seats, Top, type SideSubject } from '#app/editor/side-parts.tsx'
-import { TouchSheet } from '#app/editor/touch-sheet.tsx'
+import { TouchSheet, type SheetSections } from '#app/editor/touch-sheet.tsx'
 import type { Room } from '#app/editor/use-media.ts'
 
 interface SidePanelsProps {
@@ -8,14 +8,15 @@ interface SidePanelsProps {
   readonly room: Room
   /** What the map shows, for the sheet of a tablet. */
   readonly tools: ReactNode
+  readonly sections: SheetSections | null
 }
 
 /**
  * Beside the plan on a desk, a sheet with tabs below it on a tablet, one list on a phone. Drawn after the plan: a frame
  * of a drag does not wait for it.
  */
-export const SidePanels = memo(function SidePanels({ subject, room, tools }: SidePanelsProps) {
-  if (room === 'tablet') return <TouchSheet subject={subject} tools={tools} />
+export const SidePanels = memo(function SidePanels({ subject, room, tools, sections }: SidePanelsProps) {
+  if (sections) return <TouchSheet {...{ subject, tools, sections }} />
   if (room === 'phone')
     return (
       <div className="bg-paper-raised">

@@ -4,10 +4,21 @@ import { Tabs } from '#app/components/tabs.tsx'
 import { HeaterSteppers } from '#app/editor/panels/heater-steppers.tsx'
 import { Chosen, Explained, Findings, Heaters, Placing, Seats, type PartProps } from '#app/editor/side-parts.tsx'
 
-type SheetTab = 'heater' | 'findings' | 'seats' | 'heaters' | 'map' | 'add'
+type SheetTab = 'heater' | 'findings' | 'seats' | 'heaters' | 'section' | 'map' | 'add'
+
+/** The sections for the sheet, drawn while their tab is open. */
+export interface SheetSections {
+  readonly drawn: ReactNode
+  readonly onWanted: (wanted: boolean) => void
+}
+
+interface TouchSheetProps extends PartProps {
+  readonly tools: ReactNode
+  readonly sections: SheetSections
+}
 
 /** The sheet below the plan on a tablet: words as tabs, steppers for fingers. */
-export function TouchSheet({ subject, tools }: PartProps & { tools: ReactNode }) {
+export function TouchSheet({ subject, tools, sections }: TouchSheetProps) {
   const { editor, figures, layout, site, readOnly } = subject
   const [tab, setTab] = useState<SheetTab>('heater')
   const open = groupFindings(figures.findings).filter(({ worst }) => worst.outcome !== 'pass').length
@@ -45,6 +56,7 @@ export function TouchSheet({ subject, tools }: PartProps & { tools: ReactNode })
     },
     { value: 'seats', label: 'Seats', panel: pad(<Seats subject={subject} />) },
     { value: 'heaters', label: 'List', panel: pad(<Heaters subject={subject} />) },
+    { value: 'section', label: 'Section', panel: <div className="h-47">{sections.drawn}</div> },
     { value: 'map', label: 'Map', panel: pad(tools) },
     ...(readOnly ? [] : [{ value: 'add' as const, label: 'Add', panel: pad(<Placing subject={subject} />) }]),
   ]
@@ -57,6 +69,7 @@ export function TouchSheet({ subject, tools }: PartProps & { tools: ReactNode })
         value={shown}
         onChange={(next) => {
           subject.onPlacing(next === 'add')
+          sections.onWanted(next === 'section')
           setTab(next)
         }}
       />

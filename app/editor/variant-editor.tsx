@@ -90,6 +90,7 @@ export function VariantEditor(props: VariantEditorProps) {
   const [placing, setPlacing] = useState(false)
   const [pointed] = useState(pointedStore)
   const [seen, setSeen] = useState<SeenAs>('plan')
+  const [cutsWanted, setCutsWanted] = useState(false)
   const alive = useAlive()
 
   const onTaken = useCallback(
@@ -122,7 +123,7 @@ export function VariantEditor(props: VariantEditorProps) {
     () => ({ emitters: emittersOf(kept, models), site, cuts, levels: heat.levels, edges: heat.edges }),
     [kept, models, site, cuts, heat],
   )
-  const withSections = room === 'desk' && cuts.length > 0
+  const withSections = (room === 'desk' || cutsWanted) && cuts.length > 0
   const flux = useFlux(question, withSections ? about : null, state.dropped)
   const line = useMemo(
     () => <SectionLinePanel cut={placedCut} site={site} onChange={setPlacedCut} />,
@@ -136,6 +137,18 @@ export function VariantEditor(props: VariantEditorProps) {
           </Suspense>
         )
       : null
+  const sections = withSections ? (
+    <Sections
+      {...{ site, models, rules, cuts, line }}
+      layout={kept}
+      scale={heat}
+      sections={flux.sections}
+      selected={state.selected}
+      nearest={moving ? noPairs : findingMarks.nearest}
+    />
+  ) : (
+    <p className="px-4.5 py-3.5 text-ink-2">Place a heater to see the section through it.</p>
+  )
   const emitters = useMemo(() => emittersOf(layout, models), [layout, models])
   const onSeat = useCallback((id: string | null) => dispatch({ type: 'seat', id }), [dispatch])
   const explain = useCallback(
@@ -286,17 +299,20 @@ export function VariantEditor(props: VariantEditorProps) {
                 {...findingMarks}
                 over={overPlan}
               />
-              {withSections && (
-                <div className="h-[clamp(9rem,24dvh,13.75rem)] flex-none border-t border-[#26324c]">
-                  <Sections
-                    {...{ site, models, rules, cuts }}
-                    layout={kept}
-                    scale={heat}
-                    sections={flux.sections}
-                    selected={state.selected}
-                    nearest={moving ? noPairs : findingMarks.nearest}
-                    line={line}
-                  />
+              {room === 'desk' && withSections && (
+                <div className="h-[clamp(9rem,24dvh,13.75rem)] flex-none border-t border-[#26324c]">{sections}</div>
+              )}
+              {room === 'phone' && cuts.length > 0 && (
+                <div className="border-t border-[#26324c] bg-dusk-ground">
+                  <button
+                    type="button"
+                    aria-expanded={cutsWanted}
+                    onClick={() => setCutsWanted(!cutsWanted)}
+                    className="min-h-11 w-full px-4.5 text-left font-medium text-dusk-line underline"
+                  >
+                    {cutsWanted ? 'Without the sections' : 'Sections'}
+                  </button>
+                  {withSections && sections}
                 </div>
               )}
             </>
@@ -306,6 +322,7 @@ export function VariantEditor(props: VariantEditorProps) {
           subject={usePaced(subject, moving, beat)}
           room={room}
           tools={room === 'tablet' ? <ToolRow {...tools} bare /> : null}
+          sections={room === 'tablet' ? { drawn: sections, onWanted: setCutsWanted } : null}
         />
       </div>
     </JobFrame>

@@ -59,6 +59,8 @@ export interface PlanProps {
   readonly cuts?: readonly SectionCut[]
 }
 
+/** A scale bar is at most this share of a narrow drawing, so that there is room beside it. */
+const shareOfScaleBar = 0.36
 const nothing: ReadonlySet<string> = new Set()
 const noCuts: readonly SectionCut[] = []
 
@@ -117,6 +119,7 @@ export function Plan(props: PlanProps) {
           scale={view.scale}
           displayUnits={site.displayUnits}
           pen={pen}
+          most={Math.min(224, shareOfScaleBar * view.width)}
         />
       ) : null}
     </g>

@@ -7,6 +7,7 @@ import { HeatFill, Isolines } from '#app/drawing/heat/heat-fill.tsx'
 import { patternIds, ZonePatterns } from '#app/drawing/heat/patterns.tsx'
 import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
 import { Beyond } from '#app/drawing/plan/beyond.tsx'
+import { takenByOverall } from '#app/drawing/plan/dimensions.tsx'
 import { PoleMark, TableMark } from '#app/drawing/plan/furniture.tsx'
 import { LineLabels, placeLineLabels, placePeaks } from '#app/drawing/plan/line-labels.tsx'
 import { MemberLines, MemberNames, takenByMemberNames } from '#app/drawing/plan/members.tsx'
@@ -167,7 +168,11 @@ export const PlanStructure = memo(function PlanStructure({
 /** Names of members and obstacles. */
 export const PlanNames = memo(function PlanNames(props: FigureProps & { cuts: readonly SectionCut[] }) {
   const { site, layout, models, view, pen, withFigure, cuts } = props
-  const taken = [...takenBySite(site, view, pen, withFigure), ...takenByHeaters(layout, models, view, pen)]
+  const taken = [
+    ...takenBySite(site, view, pen, withFigure),
+    ...takenByHeaters(layout, models, view, pen),
+    ...takenByOverall(site, view, pen),
+  ]
   const notes = placeNotes(site, view, pen, taken)
   const across = cutsAcross(cuts, view)
   const members = takenByMemberNames(site.members, view, pen, across)

@@ -41,7 +41,10 @@ export function takenBySmallThings(site: Site, view: PlanView, pen: Pen, withFig
 
 /** The room that everything said on a plan of the site without heaters takes, px: names, figures and dimension lines. */
 export function takenByWords(site: Site, view: PlanView, pen: Pen): Patch[] {
-  const things = takenBySite(site, view, pen, seatsCarryFigures(site.seats, view, pen))
+  const things = [
+    ...takenBySite(site, view, pen, seatsCarryFigures(site.seats, view, pen)),
+    ...takenByOverall(site, view, pen),
+  ]
   const notes = placeNotes(site, view, pen, things).map((note) => notePatch(note, pen))
   const members = takenByMemberNames(site.members, view, pen, [])
   const poles = placePoleNames(site, view, pen, [...things, ...notes, ...members]).map((note) => notePatch(note, pen))
@@ -53,7 +56,6 @@ export function takenByWords(site: Site, view: PlanView, pen: Pen): Patch[] {
     ...walls,
     ...members,
     ...site.floor.map((from, i) => lineRoom(toScreen(view, from), toScreen(view, site.floor[i + 1] ?? site.floor[0] ?? from))), // prettier-ignore
-    ...takenByOverall(site, view, pen),
   ]
 }
 

@@ -53,7 +53,7 @@ export function DoubtfulSizes({ question, variant, listTitle, photoLink }: Doubt
         <h1 className="text-xl font-strong">Measure these next</h1>
         <p className="text-ink-2">{variant}</p>
       </header>
-      <div className="grid items-start gap-x-10 gap-y-6 desk:grid-cols-[minmax(0,1fr)_24rem]">
+      <div className="grid items-start gap-x-10 gap-y-6 *:min-w-0 desk:grid-cols-[minmax(0,1fr)_24rem]">
         <section aria-labelledby="effects-title" className="border-t border-ink pt-2 print:hidden">
           <div className="mb-2 flex flex-wrap items-center gap-x-4 gap-y-2">
             <h2 id="effects-title" className="flex-1 text-base font-strong whitespace-nowrap">
@@ -100,7 +100,7 @@ export function DoubtfulSizes({ question, variant, listTitle, photoLink }: Doubt
               onChange={setRange}
             />
           </div>
-          <div className="grid gap-x-10 gap-y-4 desk:grid-cols-2">
+          <div className="grid gap-x-10 gap-y-4 *:min-w-0 desk:grid-cols-2">
             <div>
               <TurningStrip points={doubt.turns.made} error={error} />
               <ErrorSlider error={error} onError={setError} />

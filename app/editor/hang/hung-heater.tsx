@@ -133,20 +133,37 @@ function Hangers({ hung: { heater }, site, house, schedule }: HangersProps) {
     { key: 'safety', heading: 'Safety line', numeric: true, cell: cut(({ safetyLine }) => safetyLine) },
     { key: 'pull', heading: 'Pull', numeric: true, cell: ({ tension }) => forceText(tension, units) },
   ]
+  const keyOf = ({ end, memberId }: Hanger) => `${end} ${memberId}`
   return (
-    <div
-      className="overflow-x-auto print:overflow-visible"
-      tabIndex={0}
-      role="region"
-      aria-label={`Hangers of ${heater.id}`}
-    >
-      <DataTable
-        caption={`Hangers of ${heater.id}${units === 'metric' ? ', mm' : ''}`}
-        columns={columns}
-        rows={schedule.hangers}
-        rowKey={({ end, memberId }) => `${end} ${memberId}`}
-      />
-    </div>
+    <>
+      <div
+        className="overflow-x-auto max-tablet:hidden print:block print:overflow-visible"
+        tabIndex={0}
+        role="region"
+        aria-label={`Hangers of ${heater.id}`}
+      >
+        <DataTable
+          caption={`Hangers of ${heater.id}${units === 'metric' ? ', mm' : ''}`}
+          columns={columns}
+          rows={schedule.hangers}
+          rowKey={keyOf}
+        />
+      </div>
+      <ul aria-label={`Hangers of ${heater.id}`} className="tablet:hidden print:hidden">
+        {schedule.hangers.map((hanger) => (
+          <li key={keyOf(hanger)} className="border-t border-rule py-2 first:border-t-0">
+            <dl className="grid grid-cols-3 gap-x-3 gap-y-1.5">
+              {columns.map(({ key, heading, cell }) => (
+                <div key={key} className={key === 'at' ? 'col-span-2' : ''}>
+                  <dt className="text-2xs text-ink-3">{heading}</dt>
+                  <dd>{cell(hanger)}</dd>
+                </div>
+              ))}
+            </dl>
+          </li>
+        ))}
+      </ul>
+    </>
   )
 }
 

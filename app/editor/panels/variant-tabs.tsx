@@ -44,7 +44,7 @@ export function VariantTabs(props: VariantTabsProps) {
     here: variant.id === currentId,
   }))
   return (
-    <div className="flex min-h-10 flex-wrap items-center gap-x-2 border-b border-rule bg-paper-raised px-2 wide-tablet:h-10 wide-tablet:flex-nowrap print:hidden">
+    <div className="flex min-h-10 flex-wrap items-center gap-x-2 border-b border-rule bg-paper-raised px-2 wide-tablet:h-10 wide-tablet:flex-nowrap print:hidden pointer-coarse:wide-tablet:max-desk:h-12">
       <div ref={list} className="h-10 min-w-0 overflow-x-auto pointer-coarse:h-11">
         <TabNav label="Variants" tabs={tabs} />
       </div>

@@ -117,7 +117,7 @@ export function SitePlan({ theme, chosen, adding, sizes, onChoose, onAdd, onKey 
           {note}
         </p>
       )}
-      <p className="absolute top-2 right-2 flex rounded-md bg-paper-raised/90 print:hidden">
+      <p className="absolute bottom-2 left-2 flex rounded-md bg-paper-raised/90 print:hidden">
         <IconButton icon="minus" label="Smaller" onClick={() => viewing.enlargeAt(0.8)} />
         <IconButton icon="plus" label="Larger" onClick={() => viewing.enlargeAt(1.25)} />
         <IconButton icon="fit" label="Whole plan" onClick={viewing.showAll} />
@@ -153,7 +153,7 @@ const SiteGround = memo(function SiteGround({ site, view, pen, theme, sizes }: G
       {site.covers.map((cover) => (
         <CoverMark key={cover.id} cover={cover} view={view} pen={pen} />
       ))}
-      <SizeTags site={site} view={view} pen={pen} all={sizes} beside={[patch(view.width - 70, 28, 140, 56)]} />
+      <SizeTags site={site} view={view} pen={pen} all={sizes} beside={[patch(70, view.height - 28, 140, 56)]} />
     </>
   )
 })
