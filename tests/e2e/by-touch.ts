@@ -1,38 +1,11 @@
-import { expect, test, type Locator, type Page } from '@playwright/test'
+import { expect, test } from '@playwright/test'
 import { PNG } from 'pngjs'
 import { z } from 'zod'
 import { photoMarksSchema } from '#app/domain/photo/measurements.ts'
-import { openJob, readJob, signIn, variantOf, type JourneyJob } from '#tests/support/journey.ts'
+import { apart, fingers, middleOf, type Place } from '#tests/support/fingers.ts'
+import { openJob, readJob, signIn, type JourneyJob } from '#tests/support/journey.ts'
 
 test.use({ hasTouch: true, viewport: { width: 1024, height: 768 } })
-
-type Place = readonly [x: number, y: number]
-
-const middleOf = async (what: Locator): Promise<Place> => {
-  const box = (await what.boundingBox())!
-  return [box.x + box.width / 2, box.y + box.height / 2]
-}
-const apart = (a: Place, b: Place): number => Math.hypot(a[0] - b[0], a[1] - b[1])
-
-/**
- * Fingers on the screen, as the browser's own touch events: each goes straight from one place to another. The page itself
- * neither scrolls nor grows under them.
- */
-async function fingers(page: Page, ...ways: readonly (readonly [from: Place, to: Place])[]): Promise<void> {
-  const steps = 8
-  const scrolled = () => page.evaluate(() => [window.scrollX, window.scrollY, window.visualViewport?.scale])
-  const still = await scrolled()
-  const cdp = await page.context().newCDPSession(page)
-  for (let step = 0; step <= steps; step++) {
-    const touchPoints = ways.map(([[ax, ay], [bx, by]], id) => {
-      return { id, x: ax + ((bx - ax) * step) / steps, y: ay + ((by - ay) * step) / steps }
-    })
-    await cdp.send('Input.dispatchTouchEvent', { type: step === 0 ? 'touchStart' : 'touchMove', touchPoints })
-  }
-  await cdp.send('Input.dispatchTouchEvent', { type: 'touchEnd', touchPoints: [] })
-  await cdp.detach()
-  expect(await scrolled()).toEqual(still)
-}
 
 test('a site is changed by finger: a seat, an umbrella and a corner move; two fingers enlarge and shift', async ({
   page,
@@ -161,28 +134,4 @@ test('four corners are marked in a photo by finger, one is moved, and all are ke
   await page.reload()
   await expect(photo.locator('[data-mark]')).toHaveCount(4)
   await within(after)
-})
-
-test('sections and a line of one’s own are reached by finger, on a tablet and on a phone', async ({ page }) => {
-  await signIn(page, 'designer')
-  const job = await readJob(page.request, /Tansy Weir/)
-  await page.goto(`/jobs/${job.id}/variants/${variantOf(job, 3).id}`)
-  await page.getByRole('tab', { name: 'Section' }).tap()
-  await expect(page.getByText('Section A–A through H4 and H3')).toBeVisible()
-  await page.getByRole('button', { name: 'Section along a line' }).tap()
-  const end = page.getByRole('button', { name: /^Left end of section C/ })
-  const before = await end.getAttribute('aria-label')
-  const at = await middleOf(end)
-  await fingers(page, [at, [at[0] + 40, at[1] - 60]])
-  await expect(end).not.toHaveAttribute('aria-label', before ?? '')
-  await expect(page.getByText(/^Section C–C/)).toBeVisible()
-
-  await page.setViewportSize({ width: 390, height: 844 })
-  await page.reload()
-  await page.getByRole('button', { name: 'Sections' }).tap()
-  for (const letter of ['A', 'C']) await expect(page.getByText(`Section ${letter}–${letter}`).first()).toBeVisible()
-  expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBe(390)
-  await page.goto(`/jobs/${job.id}/variants/${variantOf(job, 3).id}/sizes`)
-  await expect(page.getByRole('heading', { name: 'For the customer' })).toBeVisible()
-  expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBe(390)
 })
