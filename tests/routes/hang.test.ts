@@ -53,7 +53,21 @@ describe('the hang schedule of a variant', () => {
     const { text } = await open('engineer', sheet(2))
     // 4.9 kg: 48 N, half at each of two eyes, two heaters to a beam.
     expect(text).toContain('beam 1, aluminium box beam 120 x 60 H1, H2 4 24 N 48 N 96 N – not known')
-    expect(text).toContain('Structure: beam 1, beam 2, beam 3, beam 4 must not carry a heater')
+  })
+
+  it('says beside each heater what concerns it alone, and above them what concerns all', async () => {
+    const { html } = await open('engineer', sheet(2))
+    const heaters = [...html.matchAll(/<section aria-label="Heater (H\d+)".*?<\/section>/gs)].map(([section, id]) => [id, section.replace(/<!-- -->/g, '').replace(/<[^>]*>/g, '')] as const) // prettier-ignore
+    expect(heaters.map(([id]) => id)).toEqual(['H1', 'H2', 'H3', 'H4', 'H5', 'H6', 'H7', 'H8'])
+    // Two heaters to a beam: H1 and H2 on the first, H3 and H4 on the second, …
+    for (const [i, [id, section]] of heaters.entries()) {
+      const beam = Math.floor(i / 2) + 1
+      expect(section, id).toContain(`structure: Load on beam ${beam} is not known. It must not carry the heater`)
+      for (const other of [1, 2, 3, 4].filter((each) => each !== beam)) expect(section).not.toContain(`Load on beam ${other}`) // prettier-ignore
+    }
+    const all = /aria-labelledby="cautions".*?<\/section>/s.exec(html)![0]
+    expect(all).toContain('Falling heater: each has its secondary safety line')
+    expect(all).not.toMatch(/beam \d/)
   })
 
   it('shows what is not held as not to be hung', async () => {

@@ -5,7 +5,7 @@ import type { Finding } from '#app/domain/rules/finding.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 
 /** What a caution is about. */
-type CautionKind = 'burn' | 'fire' | 'shock' | 'falling heater' | 'eyes' | 'structure' | 'work at height'
+export type CautionKind = 'burn' | 'fire' | 'shock' | 'falling heater' | 'eyes' | 'structure' | 'work at height'
 
 /** A caution where it changes placement: a mark on the plan with one sentence. */
 export interface PlanCaution {
@@ -18,7 +18,7 @@ export interface PlanCaution {
 }
 
 /** The kind of caution that each rule's finding stands for; rules that are about nothing dangerous have none. */
-const kinds: Readonly<Record<string, CautionKind>> = {
+export const cautionKinds: Readonly<Record<string, CautionKind>> = {
   'head-flux': 'burn',
   'mounting-height': 'burn',
   'clearance-above': 'fire',
@@ -42,7 +42,7 @@ export function cautionsOnPlan(
   findings: readonly Finding[],
 ): PlanCaution[] {
   return findings.flatMap((finding): PlanCaution[] => {
-    const kind = kinds[finding.rule]
+    const kind = cautionKinds[finding.rule]
     if (!kind || kind === 'structure' || finding.weight === 'advice') return []
     if (finding.outcome !== 'fails' && finding.outcome !== 'measure first') return []
     const at = placeOf(finding.subject, layout, warmth)
@@ -83,7 +83,9 @@ export function cautionSentences(
 ): string[] {
   if (layout.heaters.length === 0) return [...pictureCautions]
   const open = (kind: CautionKind) =>
-    findings.filter(({ rule, outcome, weight }) => kinds[rule] === kind && outcome !== 'pass' && weight !== 'advice')
+    findings.filter(
+      ({ rule, outcome, weight }) => cautionKinds[rule] === kind && outcome !== 'pass' && weight !== 'advice',
+    )
   const heads = findings.filter(({ rule, outcome }) => rule === 'head-flux' && outcome === 'fails').length
   const glows = layout.heaters.some(({ model }) => models.get(model)?.wave === 'short-wave')
   return [

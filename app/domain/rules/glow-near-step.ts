@@ -1,3 +1,4 @@
+import { glowsBright } from '#app/domain/heaters/glow.ts'
 import { heaterRule, judgedBy, type HeaterCheck } from '#app/domain/rules/check.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { houseFigure } from '#app/domain/rules/house-rules.ts'
@@ -12,7 +13,7 @@ const leastStep = 0.01
  */
 export function glowNearStep(check: HeaterCheck): Finding | null {
   const { site, heater, model, house } = check
-  if (!/bright/.test(model.visibleGlow)) return null
+  if (!glowsBright(model)) return null
   const steps = site.levels.filter(({ height }) => Math.abs(height) >= leastStep)
   const nearest = steps
     .map(({ name, outline }) => ({ name, distance: distanceToOutline(outline, heater.x, heater.y) }))

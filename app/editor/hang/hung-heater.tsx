@@ -2,6 +2,7 @@ import type { HungHeater } from '#app/domain/layout/hang-sheet.ts'
 import { hangerTolerance } from '#app/domain/layout/hanger-tolerance.ts'
 import type { Hanger, HangSchedule } from '#app/domain/layout/hanging.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
+import type { HeaterCaution } from '#app/domain/rules/cautions-of-heater.ts'
 import type { House } from '#app/domain/rules/house.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength } from '#app/domain/units.ts'
@@ -26,10 +27,11 @@ interface HungHeaterProps {
   readonly house: House
   /** Why it may not be hung as drawn: the title of its finding. */
   readonly unsupported: string | null
+  readonly cautions: readonly HeaterCaution[]
 }
 
 /** One heater as it is hung: its drawing, its hangers and how level they leave it. */
-export function HungHeaterSection({ hung, site, house, unsupported }: HungHeaterProps) {
+export function HungHeaterSection({ hung, site, house, unsupported, cautions }: HungHeaterProps) {
   const { heater, model, support, schedule } = hung
   const units = site.displayUnits
   return (
@@ -50,6 +52,7 @@ export function HungHeaterSection({ hung, site, house, unsupported }: HungHeater
           {unsupported}. Not to be hung as drawn.
         </p>
       )}
+      <Cautions cautions={cautions} heaterId={heater.id} />
       {!schedule && !unsupported && support && (
         <p className="mt-1 text-ink-2">
           {support.outcome === 'cannot tell' ? 'How it is held cannot be told. ' : ''}Fixed to{' '}
@@ -80,6 +83,23 @@ export function HungHeaterSection({ hung, site, house, unsupported }: HungHeater
         </div>
       )}
     </section>
+  )
+}
+
+/** What concerns this heater alone, beside it; nothing when nothing does. */
+function Cautions({ cautions, heaterId }: { cautions: readonly HeaterCaution[]; heaterId: string }) {
+  if (cautions.length === 0) return null
+  return (
+    <ul aria-label={`Cautions of ${heaterId}`} className="mt-1 space-y-0.5">
+      {cautions.map(({ kind, outcome, sentence }) => (
+        <li key={`${kind} ${sentence}`} className="flex gap-1.5">
+          <span className="mt-0.5 w-3 flex-none">{outcome && <OutcomeMark outcome={outcome} />}</span>
+          <span>
+            <b className="inline-block font-medium first-letter:uppercase">{kind}</b>: {sentence}
+          </span>
+        </li>
+      ))}
+    </ul>
   )
 }
 

@@ -1,6 +1,7 @@
 import { assumptionOf } from '#app/domain/brief/brief-fields.ts'
 import { hangSheet, type HangSheet } from '#app/domain/layout/hang-sheet.ts'
 import type { HangingData } from '#app/domain/layout/hanging-data.ts'
+import { cautionsOfHeater } from '#app/domain/rules/cautions-of-heater.ts'
 import { checkLayout } from '#app/domain/rules/check-layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength } from '#app/domain/units.ts'
@@ -34,6 +35,10 @@ export async function loader({ request, params }: Route.LoaderArgs) {
     siteRevision,
     sheet: hangSheet(site, heaters, models, house),
     unsupported,
+    cautions: heaters.map(({ id: heaterId, model }) => ({
+      heaterId,
+      cautions: cautionsOfHeater(heaterId, models.get(model), findings),
+    })),
     house,
     assumed: brief.assumed.map((name) => assumptionOf(brief, name, site.displayUnits)),
     date: new Date().toISOString().slice(0, 10),
@@ -41,7 +46,7 @@ export async function loader({ request, params }: Route.LoaderArgs) {
 }
 
 export default function HangPage({ loaderData }: Route.ComponentProps) {
-  const { viewer, job, variant, site, sheet, unsupported, house } = loaderData
+  const { viewer, job, variant, site, sheet, unsupported, cautions, house } = loaderData
   const tools = (
     <>
       <ButtonLink to={`/jobs/${job.id}/variants/${variant.id}`}>Layout</ButtonLink>
@@ -72,7 +77,11 @@ export default function HangPage({ loaderData }: Route.ComponentProps) {
           </Row>
           {sheet.heaters.map((hung) => (
             <Row key={hung.heater.id}>
-              <HungHeaterSection {...{ hung, site, house }} unsupported={whyNot(hung.heater.id)} />
+              <HungHeaterSection
+                {...{ hung, site, house }}
+                unsupported={whyNot(hung.heater.id)}
+                cautions={cautions.find(({ heaterId }) => heaterId === hung.heater.id)?.cautions ?? []}
+              />
             </Row>
           ))}
           {sheet.heaters.length === 0 && (
@@ -120,8 +129,7 @@ function Head({ variant, siteRevision, date }: Loaded) {
 
 const months = ['January', 'February', 'March', 'April', 'May', 'June', 'July', 'August', 'September', 'October', 'November', 'December'] // prettier-ignore
 
-function Cautions({ variant, siteRevision, sheet, assumed }: Loaded) {
-  const notKnown = sheet.carried.filter(({ outcome }) => outcome !== 'allowed').map(({ name }) => name)
+function Cautions({ variant, siteRevision, assumed }: Loaded) {
   return (
     <section aria-labelledby="cautions" className="border-t border-rule py-3">
       <h2 id="cautions" className="text-sm font-strong">
@@ -134,12 +142,8 @@ function Cautions({ variant, siteRevision, sheet, assumed }: Loaded) {
         </li>
         <li>Work at height: two people on a platform or tower, nobody below.</li>
         <li>
-          Structure:{' '}
-          {notKnown.length > 0
-            ? `${notKnown.join(', ')} must not carry a heater until its maker or the structure’s engineer confirms the load.`
-            : sheet.carried.length === 0
-              ? 'nothing holds a heater yet; what will is to be confirmed by the structure’s engineer.'
-              : 'loads are within what is stated for each support; the structure’s engineer confirms it.'}
+          Structure: nothing is hung from a support before its maker or the structure’s engineer confirms the load; what
+          is not confirmed yet stands at its heater.
         </li>
         <li>Shock and burn: supply off and locked before a heater is touched; wait until it is cold.</li>
         <li>Measure each underside before cutting: heights carry the tolerances shown.</li>
