@@ -36,6 +36,13 @@ const otherUnits: Readonly<Record<string, (value: number) => string>> = {
   metresPerPixel: (value) => `${value}`,
 }
 
+/** What it says that a fact is not there. */
+const absences: Readonly<Record<string, string>> = {
+  top: 'past the cover',
+  voidDepth: 'not known',
+  allowedPointLoad: 'not known',
+}
+
 /** More facts than these are counted. */
 const mostFacts = 5
 
@@ -87,7 +94,7 @@ function partsOf(fact: string, own: readonly unknown[], other: unknown, units: D
 }
 
 function valueWords(fact: string, value: unknown, units: DisplayUnits): string {
-  if (value === null || value === undefined || value === '') return 'none'
+  if (value === null || value === undefined || value === '') return absences[fact] ?? 'none'
   if (typeof value === 'boolean') return value ? 'yes' : 'no'
   if (typeof value === 'number') return otherUnits[fact]?.(value) ?? formatLength(value, units)
   if (Array.isArray(value)) {

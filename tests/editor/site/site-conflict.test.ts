@@ -63,12 +63,12 @@ describe('what two copies of a site say of one thing', () => {
     expect(told((old) => changeCover(old, cover.id, { voidDepth: 0.2, material: 'unknown' }))).toEqual([
       cover.name,
       'unknown, void above 0.20 m',
-      `${cover.material}, void above none`,
+      `${cover.material}, void above not known`,
     ])
     expect(told((old) => changeWall(old, wall.id, { top: 2.6, loadStatus: 'anchors tested' }))).toEqual([
       wall.name,
       'top 2.60 m, load anchors tested',
-      `top none, load ${wall.loadStatus}`,
+      `top past the cover, load ${wall.loadStatus}`,
     ])
     expect(told((old) => changeObstacle(old, 'trim', { shape: { ...trim.shape, z: [2.8, 3.05] } }))).toEqual([
       trim.name,
