@@ -4,14 +4,11 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { House } from '#app/domain/rules/house.ts'
 import type { Site } from '#app/domain/site/site.ts'
-import { largestTolerance } from '#app/domain/site/tolerance.ts'
-import { irradianceScale } from '#app/drawing/heat/quantity.ts'
+import { toleranceOfCovers } from '#app/domain/site/tolerance.ts'
 import type { NearestPair } from '#app/drawing/nearest/nearest-dimension.tsx'
-import type { PlanView } from '#app/drawing/plan/plan-view.ts'
 import type { SectionCut } from '#app/drawing/plan/section-cut.tsx'
-import { ButtonLink, IconButton } from '#app/components/button.tsx'
+import { ButtonLink } from '#app/components/button.tsx'
 import { JobFrame, type Viewer } from '#app/components/page-frame.tsx'
-import { SaveState } from '#app/components/status.tsx'
 import { shownLayout } from '#app/editor/editor-state.ts'
 import type { Kept, Keeping } from '#app/editor/keeping.ts'
 import { emittersOf, mapQuestion, scaleOf } from '#app/editor/map-questions.ts'
@@ -19,15 +16,16 @@ import { FiguresRow } from '#app/editor/panels/figures-row.tsx'
 import { ConflictPanel } from '#app/editor/panels/conflict-panel.tsx'
 import { MapLegend, ToolRow } from '#app/editor/panels/tool-row.tsx'
 import { VariantTabs, type VariantTab } from '#app/editor/panels/variant-tabs.tsx'
+import { PhoneSections } from '#app/editor/phone-sections.tsx'
 import { PlanSurface } from '#app/editor/plan-surface.tsx'
-import { SectionLinePanel } from '#app/editor/section-line/section-line-panel.tsx'
-import { usePlacedCut } from '#app/editor/section-line/use-placed-cut.ts'
+import { useCutting } from '#app/editor/section-line/use-cutting.tsx'
 import { pointedStore } from '#app/editor/pointed.ts'
 import { SeenAsChoice, type SeenAs } from '#app/editor/seen-as.tsx'
 import { SidePanels } from '#app/editor/side-panels.tsx'
 import type { SideSubject } from '#app/editor/side-parts.tsx'
+import { SaveAndUndo } from '#app/components/save-and-undo.tsx'
 import { statusOf } from '#app/editor/save-status.ts'
-import { cutsOf, Sections } from '#app/editor/sections.tsx'
+import { Sections } from '#app/editor/sections.tsx'
 import type { ChangeSite } from '#app/editor/site-change.ts'
 import { useAutosave } from '#app/editor/use-autosave.ts'
 import { useEditor } from '#app/editor/use-editor.ts'
@@ -69,7 +67,6 @@ export interface VariantEditorProps {
 }
 
 const PictureView = lazy(() => import('#app/editor/picture-view.tsx'))
-const CutHandles = lazy(() => import('#app/editor/section-line/cut-handles.tsx'))
 const noCuts: readonly SectionCut[] = []
 const noPairs: readonly NearestPair[] = []
 
@@ -90,7 +87,6 @@ export function VariantEditor(props: VariantEditorProps) {
   const [placing, setPlacing] = useState(false)
   const [pointed] = useState(pointedStore)
   const [seen, setSeen] = useState<SeenAs>('plan')
-  const [cutsWanted, setCutsWanted] = useState(false)
   const alive = useAlive()
 
   const onTaken = useCallback(
@@ -116,30 +112,16 @@ export function VariantEditor(props: VariantEditorProps) {
     () => mapQuestion({ site, brief, layout, models, choice }, scale, moving ? 'coarse' : 'sharp'),
     [site, brief, layout, models, choice, scale, moving],
   )
-  const [placedCut, setPlacedCut] = usePlacedCut(props.variantId)
-  const cuts = useMemo(() => cutsOf(site, kept, state.selected, placedCut), [site, kept, state.selected, placedCut])
-  const heat = useMemo(() => irradianceScale('dusk', brief.target), [brief])
-  const about = useMemo(
-    () => ({ emitters: emittersOf(kept, models), site, cuts, levels: heat.levels, edges: heat.edges }),
-    [kept, models, site, cuts, heat],
+  const cutting = useCutting(
+    { site, brief, layout: kept, models, selected: state.selected, room, touch },
+    props.variantId,
   )
-  const withSections = (room === 'desk' || cutsWanted) && cuts.length > 0
-  const flux = useFlux(question, withSections ? about : null, state.dropped)
-  const line = useMemo(
-    () => <SectionLinePanel cut={placedCut} site={site} onChange={setPlacedCut} />,
-    [placedCut, site, setPlacedCut],
-  )
-  const overPlan =
-    placedCut && withSections
-      ? (view: PlanView) => (
-          <Suspense>
-            <CutHandles cut={placedCut} onChange={setPlacedCut} {...{ view, site, touch }} />
-          </Suspense>
-        )
-      : null
-  const sections = withSections ? (
+  const { cuts, heat } = cutting
+  const flux = useFlux(question, cutting.about, state.dropped)
+  const sections = cutting.about ? (
     <Sections
-      {...{ site, models, rules, cuts, line }}
+      {...{ site, models, rules, cuts }}
+      line={cutting.line}
       layout={kept}
       scale={heat}
       sections={flux.sections}
@@ -222,25 +204,13 @@ export function VariantEditor(props: VariantEditorProps) {
         </VariantTabs>
       }
       tools={
-        <>
-          <SaveState status={statusOf(save, props.readOnly)} onRetry={autosave.retry} />
-          {!readOnly && (
-            <span className="flex">
-              <IconButton
-                icon="undo"
-                label="Undo"
-                disabled={state.history.past.length === 0}
-                onClick={() => dispatch({ type: 'undo' })}
-              />
-              <IconButton
-                icon="redo"
-                label="Redo"
-                disabled={state.history.future.length === 0}
-                onClick={() => dispatch({ type: 'redo' })}
-              />
-            </span>
-          )}
-        </>
+        <SaveAndUndo
+          status={statusOf(save, props.readOnly)}
+          onRetry={autosave.retry}
+          history={readOnly ? null : state.history}
+          onUndo={() => dispatch({ type: 'undo' })}
+          onRedo={() => dispatch({ type: 'redo' })}
+        />
       }
     >
       <h1 className="sr-only">
@@ -291,29 +261,19 @@ export function VariantEditor(props: VariantEditorProps) {
               <PlanSurface
                 {...{ state, dispatch, site, models, rules, choice, scale, flux, readOnly, hold, touch, pointed }}
                 warmth={figures.warmth}
-                cuts={withSections ? cuts : noCuts}
+                cuts={cutting.about ? cuts : noCuts}
                 words={room === 'desk'}
                 coverTolerance={coverTolerance}
                 onPlace={editor.placeAt}
                 onSeat={explain}
                 {...findingMarks}
-                over={overPlan}
+                over={cutting.overPlan}
               />
-              {room === 'desk' && withSections && (
+              {room === 'desk' && cutting.about && (
                 <div className="h-[clamp(9rem,24dvh,13.75rem)] flex-none border-t border-[#26324c]">{sections}</div>
               )}
               {room === 'phone' && cuts.length > 0 && (
-                <div className="border-t border-[#26324c] bg-dusk-ground">
-                  <button
-                    type="button"
-                    aria-expanded={cutsWanted}
-                    onClick={() => setCutsWanted(!cutsWanted)}
-                    className="min-h-11 w-full px-4.5 text-left font-medium text-dusk-line underline"
-                  >
-                    {cutsWanted ? 'Without the sections' : 'Sections'}
-                  </button>
-                  {withSections && sections}
-                </div>
+                <PhoneSections wanted={cutting.wanted} onWanted={cutting.onWanted} drawn={sections} />
               )}
             </>
           )}
@@ -322,15 +282,9 @@ export function VariantEditor(props: VariantEditorProps) {
           subject={usePaced(subject, moving, beat)}
           room={room}
           tools={room === 'tablet' ? <ToolRow {...tools} bare /> : null}
-          sections={room === 'tablet' ? { drawn: sections, onWanted: setCutsWanted } : null}
+          sections={room === 'tablet' ? { drawn: sections, onWanted: cutting.onWanted } : null}
         />
       </div>
     </JobFrame>
   )
-}
-
-/** The largest ± of the heights of a site's covers, m; null without a cover. */
-function toleranceOfCovers(site: Site, bareTolerance: number): number | null {
-  const each = site.covers.map(({ id }) => largestTolerance(site, { of: 'cover', id }, bareTolerance))
-  return each.length > 0 ? Math.max(...each) : null
 }

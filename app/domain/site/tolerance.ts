@@ -186,3 +186,9 @@ export function toleranceOf(
 export function largestTolerance(site: Site, about: ThingOf, bareTolerance: number): number {
   return Math.hypot(...doubtsAbout(site, about, bareTolerance).map(({ most }) => most))
 }
+
+/** The largest ± of the heights of a site's covers, m; null without a cover. */
+export function toleranceOfCovers(site: Site, bareTolerance: number): number | null {
+  const each = site.covers.map(({ id }) => largestTolerance(site, { of: 'cover', id }, bareTolerance))
+  return each.length > 0 ? Math.max(...each) : null
+}

@@ -7,11 +7,11 @@ import { energyFields } from '#app/domain/brief/energy-fields.ts'
 import { supplyFields } from '#app/domain/brief/supply-fields.ts'
 import type { ChosenRuleSet } from '#app/domain/rules/rule-set.ts'
 import type { DisplayUnits } from '#app/domain/units.ts'
-import { Button, IconButton } from '#app/components/button.tsx'
+import { Button } from '#app/components/button.tsx'
 import { ConflictPanel } from '#app/components/conflict-panel.tsx'
 import { CheckField, SelectField, TextAreaField, TextField } from '#app/components/field.tsx'
 import { JobFrame } from '#app/components/page-frame.tsx'
-import { SaveState } from '#app/components/status.tsx'
+import { SaveAndUndo } from '#app/components/save-and-undo.tsx'
 import { changedWords, statusOf } from '#app/editor/save-status.ts'
 import { RuleSetChoice } from '#app/editor/rules/rule-set-choice.tsx'
 import { useDocument } from '#app/editor/use-document.ts'
@@ -77,18 +77,13 @@ function BriefForm({ viewer, job, kept, units, ruleSets, readOnly }: Loaded) {
     return null
   }
   const tools = (
-    <>
-      <SaveState
-        status={readOnly ? { kind: 'read-only', why: 'You read this brief' } : statusOf(save, false)}
-        onRetry={document.retry}
-      />
-      {!readOnly && (
-        <span className="flex">
-          <IconButton icon="undo" label="Undo" disabled={history.past.length === 0} onClick={document.undo} />
-          <IconButton icon="redo" label="Redo" disabled={history.future.length === 0} onClick={document.redo} />
-        </span>
-      )}
-    </>
+    <SaveAndUndo
+      status={readOnly ? { kind: 'read-only', why: 'You read this brief' } : statusOf(save, false)}
+      onRetry={document.retry}
+      history={readOnly ? null : history}
+      onUndo={document.undo}
+      onRedo={document.redo}
+    />
   )
   return (
     <JobFrame viewer={viewer} job={job} current="brief" tools={tools}>

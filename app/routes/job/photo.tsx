@@ -3,10 +3,9 @@ import { can } from '#app/domain/access/roles.ts'
 import { addPhotoSize, replaceByPhotoSize, traceOf } from '#app/domain/photo/into-site.ts'
 import { photoMarksSchema, type PhotoMarks } from '#app/domain/photo/measurements.ts'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
-import { IconButton } from '#app/components/button.tsx'
 import { ConflictPanel } from '#app/components/conflict-panel.tsx'
 import { JobFrame } from '#app/components/page-frame.tsx'
-import { SaveState } from '#app/components/status.tsx'
+import { SaveAndUndo } from '#app/components/save-and-undo.tsx'
 import { useToast } from '#app/components/toast.tsx'
 import type { DocumentState } from '#app/editor/document.ts'
 import { PhotoEditor } from '#app/editor/photo/photo-editor.tsx'
@@ -84,24 +83,19 @@ function Measuring({
   const { history, save } = marking
   const siteSaved = siting.save.kind === 'saved'
   const tools = (
-    <>
-      <SaveState
-        status={
-          readOnly
-            ? { kind: 'read-only', why: 'You read this photo' }
-            : siteSaved
-              ? statusOf(save, false)
-              : statusOf(siting.save, false)
-        }
-        onRetry={siteSaved ? marks.retry : siteDocument.retry}
-      />
-      {!readOnly && (
-        <span className="flex">
-          <IconButton icon="undo" label="Undo" disabled={history.past.length === 0} onClick={marks.undo} />
-          <IconButton icon="redo" label="Redo" disabled={history.future.length === 0} onClick={marks.redo} />
-        </span>
-      )}
-    </>
+    <SaveAndUndo
+      status={
+        readOnly
+          ? { kind: 'read-only', why: 'You read this photo' }
+          : siteSaved
+            ? statusOf(save, false)
+            : statusOf(siting.save, false)
+      }
+      onRetry={siteSaved ? marks.retry : siteDocument.retry}
+      history={readOnly ? null : history}
+      onUndo={marks.undo}
+      onRedo={marks.redo}
+    />
   )
   return (
     <JobFrame viewer={viewer} job={job} current="site" tools={tools}>

@@ -3,11 +3,11 @@ import { z } from 'zod'
 import { Link } from 'react-router'
 import { can } from '#app/domain/access/roles.ts'
 import { siteSchema, type Site } from '#app/domain/site/site.ts'
-import { Button, IconButton } from '#app/components/button.tsx'
+import { Button } from '#app/components/button.tsx'
 import { Choice } from '#app/components/choice.tsx'
 import { ConflictPanel } from '#app/components/conflict-panel.tsx'
 import { JobFrame } from '#app/components/page-frame.tsx'
-import { SaveState } from '#app/components/status.tsx'
+import { SaveAndUndo } from '#app/components/save-and-undo.tsx'
 import { useDark } from '#app/components/use-dark.ts'
 import { changedWords, statusOf } from '#app/editor/save-status.ts'
 import { CopyForm, type OtherJob } from '#app/editor/site/copy-form.tsx'
@@ -84,18 +84,13 @@ function SiteOfJob({ viewer, job, kept, rules, readOnly }: Loaded) {
   }
 
   const tools = (
-    <>
-      <SaveState
-        status={readOnly ? { kind: 'read-only', why: 'You read this site' } : statusOf(save, false)}
-        onRetry={document.retry}
-      />
-      {!readOnly && (
-        <span className="flex">
-          <IconButton icon="undo" label="Undo" disabled={history.past.length === 0} onClick={document.undo} />
-          <IconButton icon="redo" label="Redo" disabled={history.future.length === 0} onClick={document.redo} />
-        </span>
-      )}
-    </>
+    <SaveAndUndo
+      status={readOnly ? { kind: 'read-only', why: 'You read this site' } : statusOf(save, false)}
+      onRetry={document.retry}
+      history={readOnly ? null : history}
+      onUndo={document.undo}
+      onRedo={document.redo}
+    />
   )
   return (
     <JobFrame viewer={viewer} job={job} current="site" tools={tools}>
