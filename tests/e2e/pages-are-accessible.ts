@@ -30,7 +30,16 @@ for (const width of widths)
     await check('/reset-password')
     await signIn(page, 'designer')
     const job = await readJob(page.request, /Tansy Weir/)
-    for (const path of ['/jobs', '/jobs/new', '/heaters', '/rules', '/rules/hanging', '/team', '/no-such-page'])
+    for (const path of [
+      '/jobs',
+      '/jobs/new',
+      '/heaters',
+      '/rules',
+      '/rules/house',
+      '/rules/hanging',
+      '/team',
+      '/no-such-page',
+    ])
       await check(path)
     await page.goto('/rules')
     await check((await page.locator('a[href^="/rules/sets/"]').first().getAttribute('href')) ?? '')

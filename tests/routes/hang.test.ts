@@ -55,6 +55,16 @@ describe('the hang schedule of a variant', () => {
     expect(text).toContain('beam 1, aluminium box beam 120 x 60 H1, H2 4 24 N 48 N 96 N – not known')
   })
 
+  it('names the conditions of use: what must not stand open while a heater is on', async () => {
+    const { rows } = await application.admin.query(
+      `select v.job_id, v.id from variants v join jobs j on j.id = v.job_id where j.name like 'Sallow Lane%' and v.number = 2`,
+    )
+    const { text } = await open('engineer', `/jobs/${rows[0].job_id}/variants/${rows[0].id}/hang`)
+    // The demonstration expects of H2 that the open door leaf is in its beam.
+    expect(text).toContain('Condition of use: H2 off while outward-opening door leaf, 2.04 m high: open.')
+    expect((await open('engineer', sheet(3))).text).not.toContain('Condition of use')
+  })
+
   it('says beside each heater what concerns it alone, and above them what concerns all', async () => {
     const { html } = await open('engineer', sheet(2))
     const heaters = [...html.matchAll(/<section aria-label="Heater (H\d+)".*?<\/section>/gs)].map(([section, id]) => [id, section.replace(/<!-- -->/g, '').replace(/<[^>]*>/g, '')] as const) // prettier-ignore

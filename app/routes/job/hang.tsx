@@ -2,6 +2,7 @@ import { assumptionOf } from '#app/domain/brief/brief-fields.ts'
 import { hangSheet, type HangSheet } from '#app/domain/layout/hang-sheet.ts'
 import type { HangingData } from '#app/domain/layout/hanging-data.ts'
 import { cautionsOfHeater } from '#app/domain/rules/cautions-of-heater.ts'
+import { conditionsOfUse } from '#app/domain/rules/conditions-of-use.ts'
 import { checkLayout } from '#app/domain/rules/check-layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength } from '#app/domain/units.ts'
@@ -39,6 +40,7 @@ export async function loader({ request, params }: Route.LoaderArgs) {
       heaterId,
       cautions: cautionsOfHeater(heaterId, models.get(model), findings),
     })),
+    conditions: conditionsOfUse(findings),
     house,
     assumed: brief.assumed.map((name) => assumptionOf(brief, name, site.displayUnits)),
     date: new Date().toISOString().slice(0, 10),
@@ -129,7 +131,7 @@ function Head({ variant, siteRevision, date }: Loaded) {
 
 const months = ['January', 'February', 'March', 'April', 'May', 'June', 'July', 'August', 'September', 'October', 'November', 'December'] // prettier-ignore
 
-function Cautions({ variant, siteRevision, assumed }: Loaded) {
+function Cautions({ variant, siteRevision, assumed, conditions }: Loaded) {
   return (
     <section aria-labelledby="cautions" className="border-t border-rule py-3">
       <h2 id="cautions" className="text-sm font-strong">
@@ -147,6 +149,9 @@ function Cautions({ variant, siteRevision, assumed }: Loaded) {
         </li>
         <li>Shock and burn: supply off and locked before a heater is touched; wait until it is cold.</li>
         <li>Measure each underside before cutting: heights carry the tolerances shown.</li>
+        {conditions.map((condition) => (
+          <li key={condition}>Condition of use: {condition}.</li>
+        ))}
         {assumed.length > 0 && <li>Assumed: {assumed.join('; ')}.</li>}
       </ul>
       <p className="mt-1.5 text-ink-2">

@@ -38,7 +38,7 @@ export async function startWork(): Promise<{ stop(): Promise<void> }> {
   await boss.schedule(sweepQueue, '17 * * * *')
   return {
     stop: async () => {
-      await boss.stop({ graceful: true, timeout: 4000 })
+      await boss.stop({ graceful: true, timeout: 8000 })
       await pool.end()
     },
   }

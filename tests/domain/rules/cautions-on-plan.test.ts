@@ -1,7 +1,8 @@
 import { plainHouse } from '#tests/support/plain-site.ts'
 import { describe, expect, it } from 'vitest'
 import { seatWarmth } from '#app/domain/comfort/seat-warmth.ts'
-import { cautionSentences, cautionsOnPlan, conditionsOfUse } from '#app/domain/rules/cautions-on-plan.ts'
+import { cautionsOnPlan } from '#app/domain/rules/cautions-on-plan.ts'
+import { conditionsOfUse } from '#app/domain/rules/conditions-of-use.ts'
 import { checkLayout } from '#app/domain/rules/check-layout.ts'
 import { demoModels, demoSites } from '#drizzle/seed/demo-sites.ts'
 
@@ -38,22 +39,9 @@ describe('cautions on the plan', () => {
   })
 })
 
-describe('caution sentences', () => {
-  it('name heaters once and never promise', () => {
-    const { layout, findings } = demo('A', 1)
-    const sentences = cautionSentences(layout, models, findings)
-    expect(sentences).toContain('10 seats are over the caution for heat at the head.')
-    expect(sentences).toContain('No sound support yet for H1, H2 and 3 more.')
-    expect(sentences.join(' ')).not.toMatch(/guarantee|safe\b|!/)
-    expect(new Set(sentences).size).toBe(sentences.length)
-  })
-
-  it('give each state once as a condition of use', () => {
+describe('conditions of use', () => {
+  it('name each state once, with the heaters that it concerns', () => {
     const { findings } = demo('C', 2)
     expect(conditionsOfUse(findings)).toEqual(['H2 off while outward-opening door leaf, 2.04 m high: open'])
-  })
-
-  it('keep to what every picture says while no heater is placed', () => {
-    expect(cautionSentences({ heaters: [] }, models, [])[0]).toBe('Calculated, not a thermal photograph.')
   })
 })

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { obstructionsOf } from '#app/domain/flux/shading.ts'
-import { conditionsOfUse } from '#app/domain/rules/cautions-on-plan.ts'
+import { conditionsOfUse } from '#app/domain/rules/conditions-of-use.ts'
 import { checkLayout } from '#app/domain/rules/check-layout.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import type { Obstacle, Site } from '#app/domain/site/site.ts'
