@@ -1,5 +1,5 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
-import { assumptionOf } from '#app/domain/brief/brief-fields.ts'
+import { assumptionsOf } from '#app/domain/brief/assumptions.ts'
 import type { LayoutFigures } from '#app/domain/comparison/layout-figures.ts'
 import { cautionLimits } from '#app/domain/comfort/cautions.ts'
 import { indoorsAt } from '#app/domain/comfort/indoors.ts'
@@ -7,7 +7,6 @@ import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { isStopped } from '#app/domain/rules/check-layout.ts'
 import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
-import { assumedInWords } from '#app/domain/site/size-source.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength, formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
 
@@ -22,7 +21,7 @@ interface Told {
   readonly rules: HouseRules
   readonly models: ReadonlyMap<string, HeaterModel>
   readonly units: DisplayUnits
-  readonly site: Pick<Site, 'dimensions'>
+  readonly site: Pick<Site, 'dimensions' | 'displayUnits'>
   readonly variants: readonly CautionedVariant[]
 }
 
@@ -88,8 +87,8 @@ function measureFirst({ variants }: Told): string[] {
   })
 }
 
-function assumptions({ brief, units, site }: Told): string[] {
-  const all = [...brief.assumed.map((name) => assumptionOf(brief, name, units)), ...assumedInWords(site, units)]
+function assumptions({ brief, site }: Told): string[] {
+  const all = assumptionsOf(brief, site)
   return all.length === 0 ? [] : [`Assumed: ${all.join('; ')}.`]
 }
 

@@ -15,13 +15,15 @@ interface AxonometricSheetProps extends Omit<AxonometricProps, 'name' | 'width' 
   readonly variant: { readonly number: number; readonly title: string; readonly revision: number }
   readonly date: string
   readonly organisation: string
+  /** What nobody has confirmed yet. */
+  readonly assumed: readonly string[]
   /** Height of the map's plane, m. */
   readonly plane: number
 }
 
 /** The drawing as a picture to send: whose and which variant, the scale of the heat, how it is projected, its caution. */
 export function AxonometricSheet(props: AxonometricSheetProps) {
-  const { job, variant, date, organisation, site, quantity, corner, plane, pen, ...drawing } = props
+  const { job, variant, date, organisation, assumed, site, quantity, corner, plane, pen, ...drawing } = props
   const { width, height, head, foot } = size
   const { line, secondLine, ground } = pen.colours
   const room = { width, height: height - head - foot }
@@ -33,6 +35,11 @@ export function AxonometricSheet(props: AxonometricSheetProps) {
         <Words x={24} y={34} size={18} weight={600} colour={line}>
           {shortened(title, 560, 18)}
         </Words>
+        {assumed.length > 0 && (
+          <Words x={24} y={52} size={11} colour={secondLine}>
+            {shortened(`Assumed: ${assumed.join('; ')}.`, 600, 11)}
+          </Words>
+        )}
         <Words x={width - 24} y={26} anchor="end" size={11} colour={line}>
           {shortened(`${job} · ${organisation}`, 380, 11)}
         </Words>

@@ -1,4 +1,4 @@
-import { assumptionOf } from '#app/domain/brief/brief-fields.ts'
+import { assumptionsOf } from '#app/domain/brief/assumptions.ts'
 import { hangSheet, type HangSheet } from '#app/domain/layout/hang-sheet.ts'
 import type { HangingData } from '#app/domain/layout/hanging-data.ts'
 import { cautionsOfHeater } from '#app/domain/rules/cautions-of-heater.ts'
@@ -42,7 +42,7 @@ export async function loader({ request, params }: Route.LoaderArgs) {
     })),
     conditions: conditionsOfUse(findings),
     house,
-    assumed: brief.assumed.map((name) => assumptionOf(brief, name, site.displayUnits)),
+    assumed: assumptionsOf(brief, site),
     date: new Date().toISOString().slice(0, 10),
   }
 }

@@ -1,5 +1,6 @@
 import type { ReactElement } from 'react'
 import { z } from 'zod'
+import { assumptionsOf } from '#app/domain/brief/assumptions.ts'
 import { emitterOf } from '#app/domain/flux/emitter.ts'
 import { areaOf } from '#app/domain/site/geometry.ts'
 import { planesOf } from '#app/domain/site/planes.ts'
@@ -48,6 +49,7 @@ export async function axonometricSheet(
       picture={map?.picture ?? null}
       pen={screenPen(theme)}
       date={dayInWords(day)}
+      assumed={assumptionsOf(brief, site)}
     />
   )
 }
