@@ -13,8 +13,10 @@ const fill = (grid: Grid, f: (x: number, y: number) => number): Float32Array =>
   Float32Array.from({ length: grid.columns * grid.rows }, (_, k) =>
     f(grid.x0 + ((k % grid.columns) + 0.5) * grid.cell, grid.y0 + (Math.floor(k / grid.columns) + 0.5) * grid.cell),
   )
+/** The points of each ring; of curves where they touch. */
 const ringsOf = (path: string): Vec2[][] =>
   path
+    .replaceAll(/Q\S+ \S+ /g, 'L')
     .split('Z')
     .filter(Boolean)
     .map((ring) =>

@@ -47,14 +47,31 @@ function figure(metres: number): string {
   return `${sign}${Math.floor(millimetres / 1000)}${decimals[millimetres % 1000] ?? ''}`
 }
 
+/** Rings no longer or wider than this, m, are drawn round: a peak that a few points trace has no corners. */
+const small = 0.8
+
+const isSmall = (ring: Ring): boolean =>
+  [0, 1].every((k) => {
+    const places = ring.map((point) => point[k] ?? 0)
+    return Math.max(...places) - Math.min(...places) <= small
+  })
+
+const place = ([x, y]: Vec2): string => `${figure(x)} ${figure(y)}`
+
+const middle = (a: Vec2, b: Vec2): Vec2 => [(a[0] + b[0]) / 2, (a[1] + b[1]) / 2]
+
+/** A small ring as curves that touch the middle of each of its sides. */
+function roundPath(points: readonly Vec2[]): string {
+  const curves = points.map((point, i) => `Q${place(point)} ${place(middle(point, points[(i + 1) % points.length] ?? point))}`) // prettier-ignore
+  const [first, last] = [points[0], points.at(-1)]
+  return first && last ? `M${place(middle(last, first))}${curves.join('')}Z` : ''
+}
+
 /** SVG path of closed rings, to the millimetre. */
 export const pathOfRings = (rings: readonly Ring[]): string =>
   rings
-    .map(
-      (ring) =>
-        `M${ring
-          .slice(0, -1)
-          .map(([x, y]) => `${figure(x)} ${figure(y)}`)
-          .join('L')}Z`,
-    )
+    .map((ring) => {
+      const points = ring.slice(0, -1)
+      return isSmall(points) ? roundPath(points) : `M${points.map(place).join('L')}Z`
+    })
     .join('')
