@@ -12,7 +12,7 @@ interface NavTab {
 
 const tabClass = (here: boolean) =>
   `relative flex flex-none items-center gap-1.5 px-3 whitespace-nowrap transition-colors duration-120 hover:text-ink ${
-    here ? 'text-ink after:absolute after:inset-x-2.5 after:-bottom-px after:h-[3px] after:bg-ember' : 'text-ink-2'
+    here ? 'text-ink after:absolute after:inset-x-2.5 after:bottom-0 after:h-0.5 after:bg-ember' : 'text-ink-2'
   }`
 
 /** Pages beside each other, as links with the ember line under the one that is open. */

@@ -42,7 +42,7 @@ function Beside({ subject }: { subject: SideSubject }) {
     <aside
       ref={column}
       aria-label="Heater, findings and seats"
-      className="w-95 flex-none overflow-y-auto border-l border-rule bg-paper-raised wide:w-110"
+      className="relative w-95 flex-none overflow-y-auto border-l border-rule bg-paper-raised wide:w-110"
     >
       <Top subject={subject} />
       <Findings subject={subject} />
