@@ -31,8 +31,8 @@ const keyOf = ({ of, id, coordinate }: Move): string => `${of} ${id} ${coordinat
 /**
  * The site after things were placed by hand or by typed figures, with its sizes in agreement. A size is told by the
  * coordinates that equal it; when all of them move alike, its value goes with them and is guessed from then on. When
- * only some do, as one beam of several at a spacing, the size stays and decides those no longer: they count as every
- * coordinate without a size. Where two sizes could follow, the less known one does. An edit of the sizes themselves is
+ * only some do, as one beam of several at a spacing, or none of the size would be left, it stays and decides those no
+ * longer: they count as every coordinate without a size. Where two sizes could follow, the less known one does. An edit of the sizes themselves is
  * left as it is.
  */
 export function placedByHand(before: Site, after: Site, rules: HouseRules): PlacedByHand {
@@ -45,7 +45,8 @@ export function placedByHand(before: Site, after: Site, rules: HouseRules): Plac
   for (const { dimension, decided } of touched.toSorted((a, b) => b.dimension.tolerance - a.dimension.tolerance)) {
     const named = namedBy(dimension, decided)
     const by = changeOf(named)
-    if (by === null || named.some(({ move }) => explained.has(keyOf(move)))) continue
+    if (by === null || isTurnedOver(dimension.value, by) || named.some(({ move }) => explained.has(keyOf(move))))
+      continue
     grown.set(dimension.id, by)
     for (const each of decided) explained.add(keyOf(each.move))
   }
@@ -76,6 +77,9 @@ function changeOf(named: readonly Decided[]): number | null {
   const [change = 0, ...others] = named.map(({ move, by }) => by / move.by)
   return change !== 0 && others.every((other) => Math.abs(other - change) < same) ? change : null
 }
+
+/** Whether a length would become less than nothing, as one from a wall to a thing that is dragged through the wall. */
+const isTurnedOver = (value: number, by: number): boolean => value > 0 && value + by < same
 
 function withSizesChanged(
   site: Site,

@@ -74,6 +74,11 @@ describe('a thing placed by hand that one size decides alone', () => {
     const near = placedByHand(site, moveThings(site, 'obstacle', ['box'], -0.95, 0), plainHouseRules)
     expect(near.site.dimensions[0]).toMatchObject({ value: 0.05, tolerance: 0.025 })
   })
+  it('lets go of it rather than make it less than nothing, on the far side of what the size is from', () => {
+    const beyond = placedByHand(site, moveThings(site, 'obstacle', ['box'], -1.2, 0), plainHouseRules)
+    expect(beyond.site.dimensions).toEqual([{ ...site.dimensions[0], moves: [] }])
+    expect([beyond.followed.length, beyond.released.length]).toEqual([0, 1])
+  })
   it('forgets the photo that the value is not of any more', () => {
     const photo = { photoId: '00000000-0000-4000-8000-000000000001', measurementId: 'm' }
     const seen = boxSite({ value: 1, photo, moves: [of('shape.x.0'), of('shape.x.1')] })
