@@ -35,6 +35,14 @@ describe('sizes on the plan', () => {
     expect(said).toContain('beam spacing 2.64 ± 0.03, told, assumed')
   })
 
+  it('say a small one to the millimetre or the eighth of an inch', () => {
+    const [joist] = a!.dimensions
+    const size = { ...joist!, label: 'joist width', value: 0.045, tolerance: 0.006, source: 'tape' as const }
+    expect(sizeText(size, 'metric')).toBe('joist width 0.045 ± 0.006, tape')
+    expect(sizeText({ ...size, value: 0.14 }, 'metric')).toBe('joist width 0.14 ± 0.006, tape')
+    expect(sizeText(size, 'imperial')).toBe('joist width 1 3/4″ ± 0.25″, tape')
+  })
+
   it('show assumed ones alone until all are asked for; lengths of the floor stand on its own lines', () => {
     const view = planViewOf(c!, 900, 560)
     expect(placeSizeTags(c!, view, pen, false).map(({ text }) => text)).toEqual([
