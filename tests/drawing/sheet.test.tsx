@@ -11,7 +11,7 @@ import { ComparisonSheet } from '#app/drawing/sheet/comparison-sheet.tsx'
 import { fitCautions } from '#app/drawing/sheet/sheet-cautions.tsx'
 import { sheetScale, type ComparisonSheetProps, type SheetVariant } from '#app/drawing/sheet/sheet-facts.ts'
 import { perMillimetre, sheetLayoutOf, sheetSize } from '#app/drawing/sheet/sheet-layout.ts'
-import { moneyText } from '#app/drawing/sheet/sheet-words.ts'
+import { moneyText, sheetFigures } from '#app/drawing/sheet/sheet-words.ts'
 import { pngOf, svgDocument, svgOf } from '#app/server/render/picture.server.ts'
 
 const demo = demoSites()[0]!
@@ -181,5 +181,19 @@ describe('the sheet as a document', () => {
     expect(document).toContain('data:font/woff2;base64,')
     expect(document).not.toMatch(/href="http|url\(http/)
     expect(document.startsWith('<?xml')).toBe(true)
+  })
+})
+
+describe('the irradiance below a plan', () => {
+  const { warmth, totals } = variantAt(2)
+  const named = (of: SheetVariant['warmth']) =>
+    sheetFigures(of, totals, demo.brief, 'metric', null).map(({ name }) => name)
+
+  it('says so when it is of the primary seats alone', () => {
+    expect(named(warmth)).toContain('Seats')
+    const [first, ...rest] = warmth
+    const mixed = [{ ...first!, seat: { ...first!.seat, priority: 'secondary' as const } }, ...rest]
+    expect(named(mixed)).toContain('Primary seats')
+    expect(named(mixed)).not.toContain('Seats')
   })
 })
