@@ -47,6 +47,7 @@ export function DecisionForm({ title, lead, savedWords, groups, kept, mayEdit, a
   const sending = useNavigation().state === 'submitting'
   const errors = answer?.errors ?? {}
   const values = { ...kept.values, ...answer?.values }
+  const from = answer && !answer.saved ? answer.revision : String(kept.revision)
   const labels = new Map(
     Object.values(groups)
       .flat()
@@ -69,15 +70,15 @@ export function DecisionForm({ title, lead, savedWords, groups, kept, mayEdit, a
           labels={labels}
         />
       )}
-      <Form id="form" method="post" noValidate key={kept.revision}>
+      <Form id="form" method="post" noValidate key={from}>
         <ErrorSummary errors={problems} />
         {answer?.saved && (
           <p role="status" className="mb-3 text-moss">
             Saved. {savedWords}
           </p>
         )}
-        <input type="hidden" name="revision" value={answer && !answer.saved ? answer.revision : kept.revision} />
-        <fieldset disabled={!mayEdit} className="m-0 border-0 p-0">
+        <input type="hidden" name="revision" value={from} />
+        <fieldset disabled={!mayEdit || Boolean(answer?.meanwhile)} className="m-0 border-0 p-0">
           <legend className="sr-only">{title}</legend>
           {Object.entries(groups).map(([group, figures]) => (
             <section key={group} aria-label={group} className="mb-5">
@@ -98,7 +99,7 @@ export function DecisionForm({ title, lead, savedWords, groups, kept, mayEdit, a
         </fieldset>
         <p className="flex gap-3 border-t border-rule pt-4">
           {mayEdit ? (
-            <Button kind="primary" type="submit" disabled={sending}>
+            <Button kind="primary" type="submit" disabled={sending || Boolean(answer?.meanwhile)}>
               {sending ? 'Saving' : 'Save'}
             </Button>
           ) : (

@@ -71,6 +71,7 @@ const rowProps = () => ({ className: 'border-t border-rule [&>*]:py-2 [&>*]:alig
 export default function RuleSetPage({ loaderData, actionData }: Route.ComponentProps) {
   const { viewer, ruleSet, revisions, mayEdit } = loaderData
   const sending = useNavigation().state === 'submitting'
+  const from = actionData?.revision ?? String(ruleSet.revision)
   return (
     <PageFrame viewer={viewer}>
       <div className="flex flex-wrap items-baseline gap-x-4 gap-y-1 pt-1">
@@ -96,13 +97,15 @@ export default function RuleSetPage({ loaderData, actionData }: Route.ComponentP
               meanwhile={actionData.meanwhile}
             />
           )}
-          <RuleSetForm
-            key={ruleSet.revision}
-            typed={actionData?.typed ?? typedRuleSet(ruleSet)}
-            revision={actionData?.revision ?? String(ruleSet.revision)}
-            errors={actionData?.errors ?? {}}
-            sending={sending}
-          />
+          <fieldset disabled={Boolean(actionData?.meanwhile)} className="m-0 min-w-0 border-0 p-0">
+            <RuleSetForm
+              key={from}
+              typed={actionData?.typed ?? typedRuleSet(ruleSet)}
+              revision={from}
+              errors={actionData?.errors ?? {}}
+              sending={sending}
+            />
+          </fieldset>
         </>
       ) : (
         <section className="overflow-x-auto" tabIndex={0} aria-label="Articles">
