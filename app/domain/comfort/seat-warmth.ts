@@ -209,6 +209,10 @@ function targetOutcome(seat: Seat, body: number | null, { target }: Brief): Targ
   return body > target.high ? 'above' : 'in target'
 }
 
+/** Whether seats on the floor count that are not primary: figures of the primary ones alone then say so. */
+export const hasOthersThanPrimary = (warmth: readonly Pick<SeatWarmth, 'seat' | 'onFloor'>[]): boolean =>
+  warmth.some(({ seat, onFloor }) => onFloor && seat.priority === 'secondary')
+
 /** What a layout comes to over the seats on the floor: statistics over the primary seats, the head over every seat. */
 export function layoutTotals(
   warmth: readonly SeatFigures[],

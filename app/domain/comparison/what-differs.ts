@@ -4,6 +4,7 @@ import {
   tightestMargin,
   type ComparedVariant,
 } from '#app/domain/comparison/compared-variant.ts'
+import { hasOthersThanPrimary } from '#app/domain/comfort/seat-warmth.ts'
 import { formatMoney } from '#app/domain/comparison/list-price.ts'
 import { spacingsOf } from '#app/domain/comparison/spacings.ts'
 import type { Outcome } from '#app/domain/rules/finding.ts'
@@ -177,14 +178,14 @@ function evening({ totals }: ComparedVariant): Value {
   return { text: formatMoney(amount, currency, true), cost: amount }
 }
 
-const rows = (terms: ComparisonTerms): readonly Row[] => [
+const rows = (terms: ComparisonTerms, seat: 'seat' | 'primary seat'): readonly Row[] => [
   ['Heaters', heaters],
   ['Lowest point', lowestPoint],
   ['Spacing', spacing],
   ['Tilted', tilt],
   ['Seats in target', inTarget],
-  ['Coldest seat', coldest],
-  ['Hottest seat', hottest],
+  [`Coldest ${seat}`, coldest],
+  [`Hottest ${seat}`, hottest],
   ['Evenness, min ÷ mean', evenness],
   ['Hottest head', headMaximum],
   ['Feels like, design wind', feelsLike],
@@ -199,7 +200,8 @@ const rows = (terms: ComparisonTerms): readonly Row[] => [
 
 /** Every figure of the variants side by side. Better means: of the figures as they are written, not of hidden digits. */
 export function comparisonRows(variants: readonly ComparedVariant[], terms: ComparisonTerms): readonly ComparisonRow[] {
-  return rows(terms).map(([name, valueOf]) => {
+  const seat = variants.some(({ warmth }) => hasOthersThanPrimary(warmth)) ? 'primary seat' : 'seat'
+  return rows(terms, seat).map(([name, valueOf]) => {
     const values = variants.map((variant) => valueOf(variant, terms))
     const same = values.every(({ text }) => text === values[0]?.text)
     const costs = values.flatMap(({ cost }) => (cost === null ? [] : [cost]))

@@ -22,6 +22,12 @@ export const usualHeights = {
 /** From the edge of a table to the middle of a person at it, m (common practice, no source). */
 export const usualSetback = 0.25
 
+/** Along the edge of a table, for each person, m (common practice, no source). */
+const usualWidth = 0.6
+
+/** How many people sit along an edge of so many m: at least one. */
+export const seatsAlong = (edge: number): number => Math.max(1, Math.floor(edge / usualWidth + 1e-9))
+
 const turned = ([x, y]: Vec2, turnDeg: number): Vec2 => {
   const turn = radians(turnDeg)
   return [x * Math.cos(turn) - y * Math.sin(turn), x * Math.sin(turn) + y * Math.cos(turn)]

@@ -28,12 +28,13 @@ export function AxonometricSheet(props: AxonometricSheetProps) {
   const { line, secondLine, ground } = pen.colours
   const room = { width, height: height - head - foot }
   const title = `${variant.number} ${variant.title}`
+  const titleSize = [18, 14].find((each) => textWidth(title, each, 600) <= 560) ?? 12
   return (
     <svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="img" aria-label={`${job}, ${title}, as a picture`}>
       <g fontFamily={fontFamily}>
         <rect width={width} height={height} fill={ground} />
-        <Words x={24} y={34} size={18} weight={600} colour={line}>
-          {shortened(title, 560, 18)}
+        <Words x={24} y={34} size={titleSize} weight={600} colour={line}>
+          {shortened(title, 560, titleSize)}
         </Words>
         {assumed.length > 0 && (
           <Words x={24} y={52} size={11} colour={secondLine}>

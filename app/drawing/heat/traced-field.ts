@@ -26,7 +26,7 @@ const farthestApart = 0.2
 /**
  * The field of a grid. Of cells up to 0.1 m every second one is taken: between points h apart a line that turns with
  * radius R lies within h²/4R of its place, 5 mm at h = 0.1 m and R = 0.5 m. Every fourth one is taken, not over 0.2 m
- * apart, where the straight lines between those taken miss none of the others by more than `mayMiss`, in the values' unit.
+ * apart, where straight lines between those taken miss the cells halfway by no more than `mayMiss`, in the values' unit.
  * Outside the floor values are continued over one point, of coarse grids over two.
  */
 export function tracedField(values: Float32Array, grid: Grid, mayMiss: number): TracedField {

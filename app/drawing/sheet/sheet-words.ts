@@ -1,5 +1,10 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
-import type { LayoutTotals, SeatWarmth, WindName } from '#app/domain/comfort/seat-warmth.ts'
+import {
+  hasOthersThanPrimary,
+  type LayoutTotals,
+  type SeatWarmth,
+  type WindName,
+} from '#app/domain/comfort/seat-warmth.ts'
 import { warmthWords } from '#app/drawing/plan/seat.tsx'
 import { fromSi, type DisplayUnits } from '#app/domain/units.ts'
 
@@ -69,7 +74,6 @@ export function sheetFigures(
   const { coldest, hottest, costPerEvening } = totals
   const flux = coldest && hottest ? `${Math.round(coldest.irradiance)} to ${Math.round(hottest.irradiance)} W/m²` : '–'
   const inTarget = totals.heaters === 0 ? '–' : `${totals.seatsInTarget} of ${totals.seatsCounted} in target`
-  const hasOthers = warmth.some(({ seat, onFloor }) => onFloor && seat.priority === 'secondary')
   const feels = [
     `${feelsLikeText(warmth, 'calm', units)} calm`,
     `${feelsLikeText(warmth, 'design', units)} in the wind`,
@@ -77,7 +81,7 @@ export function sheetFigures(
   return [
     { name: 'Seats, out of the wind', lines: [seatsInWords(warmth), inTarget] },
     { name: `Feels like, ${dressedText(brief.clothing)}, off → on`, lines: feels },
-    { name: hasOthers ? 'Primary seats' : 'Seats', lines: [flux] },
+    { name: hasOthersThanPrimary(warmth) ? 'Primary seats' : 'Seats', lines: [flux] },
     { name: 'Power', lines: [`${(totals.power / 1000).toFixed(1)} kW`] },
     ...(costPerEvening
       ? [{ name: 'An evening', lines: [moneyText(costPerEvening.amount, costPerEvening.currency)] }]

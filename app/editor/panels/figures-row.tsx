@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react'
-import type { LayoutTotals, SeatFigures } from '#app/domain/comfort/seat-warmth.ts'
+import { hasOthersThanPrimary, type LayoutTotals, type SeatFigures } from '#app/domain/comfort/seat-warmth.ts'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import { formatMoney } from '#app/domain/comparison/list-price.ts'
 import { formatQuantity, unitSymbol, type DisplayUnits } from '#app/domain/units.ts'
@@ -22,6 +22,7 @@ interface FiguresRowProps {
 export function FiguresRow(props: FiguresRowProps) {
   const { totals, warmth, brief, units, fluxUnit, onExplain, children } = props
   const { coldest, headMaximum, costPerEvening } = totals
+  const coolest = hasOthersThanPrimary(warmth) ? 'Coolest primary seat' : 'Coolest seat'
   const seat = (figure: { seatId: string } | null) => (figure ? () => onExplain(figure.seatId) : undefined)
   return (
     <div className="flex flex-none items-center overflow-x-auto border-b border-rule">
@@ -30,7 +31,7 @@ export function FiguresRow(props: FiguresRowProps) {
           of {totals.seatsCounted}
         </Figure>
         <Figure
-          label={coldest ? `Coolest seat, ${coldest.seatId}` : 'Coolest seat'}
+          label={coldest ? `${coolest}, ${coldest.seatId}` : coolest}
           value={fluxFigure(coldest?.irradiance ?? null, fluxUnit)}
           onExplain={seat(coldest)}
         >

@@ -79,7 +79,7 @@ export function SeatsTable({ warmth, brief, units, fluxUnit, seatId, onSeat, onE
           ))}
         </tbody>
       </table>
-      {warmth.length === 0 && <p className="py-2 text-ink-3">No seats yet. They are entered on the site's page.</p>}
+      {warmth.length === 0 && <p className="py-2 text-ink-3">No seats yet. They are entered on the page Site.</p>}
     </section>
   )
 }

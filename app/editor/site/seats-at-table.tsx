@@ -1,5 +1,12 @@
 import { useState } from 'react'
-import { addSeats, seatsAround, seatsAtSides, usualHeights, usualSetback } from '#app/domain/site/seating.ts'
+import {
+  addSeats,
+  seatsAlong,
+  seatsAround,
+  seatsAtSides,
+  usualHeights,
+  usualSetback,
+} from '#app/domain/site/seating.ts'
 import { refusalOf } from '#app/domain/site/site-faults.ts'
 import type { Site, Table } from '#app/domain/site/site.ts'
 import { Button } from '#app/components/button.tsx'
@@ -17,7 +24,8 @@ export function SeatsAtTable({ table, onChoose }: { table: Table; onChoose: (cho
   const round = table.form === 'round'
   const [group, setGroup] = useState(table.id)
   const [setback, setSetback] = useState<number>(usualSetback)
-  const [counts, setCounts] = useState({ below: '2', above: '2', left: '0', right: '0', around: '4' })
+  const along = String(seatsAlong(table.size[0]))
+  const [counts, setCounts] = useState({ below: along, above: along, left: '0', right: '0', around: '4' })
   const read = {
     below: countOf(counts.below, 0, most),
     above: countOf(counts.above, 0, most),

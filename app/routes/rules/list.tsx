@@ -1,3 +1,4 @@
+import { Link } from 'react-router'
 import { bearings } from '#app/domain/rules/bearings.ts'
 import type { ChosenRuleSet } from '#app/domain/rules/rule-set.ts'
 import { fixedRuleRows, houseRuleRows, tradeRules, type RuleRow } from '#app/domain/rules/rules-in-words.ts'
@@ -51,9 +52,12 @@ const setColumns: readonly Column<ChosenRuleSet>[] = [
     heading: 'Rule set',
     names: true,
     cell: ({ id, name }) => (
-      <ButtonLink to={`/rules/sets/${id}`} kind="text" size="small">
+      <Link
+        to={`/rules/sets/${id}`}
+        className="inline-flex min-h-6 items-center font-medium underline pointer-coarse:min-h-11"
+      >
         {name}
-      </ButtonLink>
+      </Link>
     ),
   },
   { key: 'edition', heading: 'Edition', cell: ({ edition }) => edition },

@@ -29,6 +29,11 @@ const rowsOf = (...variants: ComparedVariant[]) =>
   new Map(comparisonRows(variants, terms).map((row) => [row.name, row]))
 
 describe('the figures side by side', () => {
+  it('say so where the coldest and the hottest seat are of the primary ones alone', () => {
+    const others = { ...third, warmth: third.warmth.map((each, i) => (i > 0 ? each : { ...each, seat: { ...each.seat, priority: 'secondary' as const } })) } // prettier-ignore
+    expect([...rowsOf(second, third).keys()]).toEqual(expect.arrayContaining(['Coldest seat', 'Hottest seat']))
+    expect([...rowsOf(second, others).keys()]).toEqual(expect.arrayContaining(['Coldest primary seat', 'Hottest primary seat'])) // prettier-ignore
+  })
   const rows = rowsOf(second, third)
   const texts = (name: string) => rows.get(name)?.cells.map(({ text }) => text)
   const better = (name: string) => rows.get(name)?.cells.map((cell) => cell.better)

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest'
 import {
   addSeats,
   facingTowards,
+  seatsAlong,
   seatsAround,
   seatsAtSides,
   seatsInRows,
@@ -15,6 +16,15 @@ const demoC = demoSites().find(({ key }) => key === 'C')!.site
 const table = { centre: [2.6, 1.55] as Vec2, size: [2.4, 0.9] as [number, number], turnDeg: 0 }
 
 describe('seats around a table', () => {
+  it.each([
+    [0.4, 1],
+    [0.8, 1],
+    [1.2, 2],
+    [2.4, 4],
+  ])('an edge of %s m has %i, 0.60 m each (common practice, no source)', (edge, count) => {
+    expect(seatsAlong(edge)).toBe(count)
+  })
+
   it('are the eight of demo site C: four at each long side, 0.27 m from the edge', () => {
     const places = seatsAtSides(table as never, { below: 4, above: 4, left: 0, right: 0 }, 0.27)
     const wanted = demoC.seats.slice(0, 8).map(({ x, y, facingDeg }) => ({ x, y, facingDeg }))
