@@ -11,9 +11,9 @@ export interface ShadeMarks {
   /** Number of each cell's pattern; all 0 between heaters. */
   readonly pattern: Uint32Array
   patterns: ShadePatterns
-  /** The rows that hold patterns other than 0; first > last when none does. */
-  firstRow: number
-  lastRow: number
+  /** The first and the last column of each row that may hold patterns other than 0; first > last when none does. */
+  readonly firstColumn: Int32Array
+  readonly lastColumn: Int32Array
   /** The shadows of the thing under way, one or more a caster, each with the pieces it stands for. */
   readonly shadows: Shadow[]
   /** The pieces hidden from each cell of the row under way, and where they change: bits, all 0 between rows. */
@@ -31,8 +31,8 @@ export function emptyMarks(columns: number, rows: number): ShadeMarks {
   return {
     pattern: new Uint32Array(columns * rows),
     patterns: emptyPatterns(1, 1),
-    firstRow: rows,
-    lastRow: -1,
+    firstColumn: new Int32Array(rows).fill(columns),
+    lastColumn: new Int32Array(rows).fill(-1),
     shadows: [],
     hidden: new Uint32Array(columns),
     changes: new Uint32Array(columns + 1),
@@ -175,7 +175,7 @@ export function markShadow(
   for (let row = firstRow; row <= lastRow; row++) {
     const [first, last] = gatherRow(marks, cells, row, count)
     hideRow(marks, row * cells.columns, first, last, transmittance)
+    marks.firstColumn[row] = Math.min(marks.firstColumn[row] ?? first, first)
+    marks.lastColumn[row] = Math.max(marks.lastColumn[row] ?? last, last)
   }
-  marks.firstRow = Math.min(marks.firstRow, firstRow)
-  marks.lastRow = Math.max(marks.lastRow, lastRow)
 }

@@ -124,9 +124,7 @@ export function shadeEmitter(
   }
   const isQuick = Math.abs(emitter.frame.u[2]) < 1e-9 && emitter.beam.kind === 'cosine'
   const takeAway = (isQuick ? quickly : exactly)(values, cells, over, marks.patterns.perElement)
-  for (let row = marks.firstRow; row <= marks.lastRow; row++) takeFromRow(values, cells, row, marks, takeAway)
-  marks.firstRow = cells.rows
-  marks.lastRow = -1
+  for (let row = 0; row < cells.rows; row++) takeFromRow(values, cells, row, marks, takeAway)
 }
 
 /** Takes the hidden shares from a row's cells, those of the same pattern together, and clears the row's marks. */
@@ -134,20 +132,23 @@ function takeFromRow(
   values: Float32Array,
   { columns }: Cells,
   row: number,
-  { pattern, patterns }: ShadeMarks,
+  { pattern, patterns, firstColumn, lastColumn }: ShadeMarks,
   takeAway: TakeAway,
 ): void {
   const start = row * columns
-  for (let column = 0; column < columns;) {
+  const [from, end] = [firstColumn[row] ?? 0, (lastColumn[row] ?? -1) + 1]
+  for (let column = from; column < end;) {
     const first = column
     const number = pattern[start + first] ?? 0
-    while (column < columns && pattern[start + column] === number) column++
+    while (column < end && pattern[start + column] === number) column++
     const alike = patterns.list[number]
     if (number === 0 || !alike) continue
     if (alike.whole >= 0) dim(values, start + first, start + column, 1 - alike.whole)
     else takeAway(alike, row, first, column - first)
   }
-  pattern.fill(0, start, start + columns)
+  pattern.fill(0, start + from, start + Math.max(from, end))
+  firstColumn[row] = columns
+  lastColumn[row] = -1
 }
 
 function dim(values: Float32Array, from: number, to: number, share: number): void {
