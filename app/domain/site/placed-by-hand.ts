@@ -133,7 +133,7 @@ export function placedInWords(
       const more = released.length - 1
       const who = more > 0 ? `${label} and ${more} more ${more === 1 ? 'size' : 'sizes'}` : label
       const counts = formatLength(toleranceUnstated, units)
-      return `Placed by hand, counts as ± ${counts}: ${who} no longer ${more > 0 ? 'decide' : 'decides'} it.`
+      return `Placed by hand, ± ${counts} from now on: ${who} no longer ${more > 0 ? 'decide' : 'decides'} what was moved.`
     }),
   ]
   return sentences.length > 0 ? sentences.join(' ') : null

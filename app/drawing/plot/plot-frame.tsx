@@ -152,7 +152,7 @@ export function PlotColumns({
           ))
         : null}
       {groups.map((group) =>
-        textWidth(group.name, pen.text, 600) + 4 < group.count * column ? (
+        textWidth(group.name, pen.text, 600) + 1 < group.count * column ? (
           <Words
             key={group.name}
             x={left + (group.from + group.count / 2) * column}

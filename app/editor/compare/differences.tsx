@@ -61,7 +61,9 @@ export function Differences({ variants, rows }: { variants: readonly Named[]; ro
         <h2 id="differs" className="text-sm font-strong">
           What differs
         </h2>
-        <p className="text-ink-2">{same > 0 ? `${same} rows the same, better in bold` : 'Better in bold'}</p>
+        <p className="text-ink-2">
+          {same > 0 ? `${same} ${same === 1 ? 'row' : 'rows'} the same, better in bold` : 'Better in bold'}
+        </p>
       </header>
       <div className="overflow-x-auto" tabIndex={0} role="region" aria-label="Figures side by side">
         <table className="w-full border-collapse">

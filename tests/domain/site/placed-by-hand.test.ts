@@ -143,7 +143,7 @@ describe('a size that decides more than what was placed by hand', () => {
     expect(toleranceOf(at('beam-2'), placed.site, 0.025)).toBeCloseTo(0.025, 9)
     expect(toleranceOf(at('beam-3'), placed.site, 0.025)).toBeCloseTo(3 * spacing.tolerance, 9)
     expect(placedInWords(placed, 'metric', plainHouseRules)).toBe(
-      'Placed by hand, counts as ± 0.025 m: beam spacing no longer decides it.',
+      'Placed by hand, ± 0.025 m from now on: beam spacing no longer decides what was moved.',
     )
   })
   it('follows when all its beams are moved by their share', () => {
@@ -159,7 +159,7 @@ describe('a size that decides more than what was placed by hand', () => {
     expect(moved.followed).toEqual([])
     expect(moved.released.map(({ label }) => label)).toEqual(['veranda length, x', 'veranda depth, y'])
     expect(placedInWords(moved, 'metric', plainHouseRules)).toMatch(
-      /: veranda length, x and 1 more size no longer decide it\.$/,
+      /: veranda length, x and 1 more size no longer decide what was moved\.$/,
     )
     const length = labelled(moved.site, 'veranda length, x')
     expect(length.moves).toEqual(
