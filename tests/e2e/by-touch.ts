@@ -33,7 +33,7 @@ test('a site is changed by finger: a seat, an umbrella and a corner move; two fi
   const moved = position(await read(), 'U1-1')
   expect(moved.x - position(before, 'U1-1').x).toBeCloseTo(70 / px, 1)
   expect(moved.y - position(before, 'U1-1').y).toBeCloseTo(20 / px, 1)
-  await expect(page.getByText(/^Placed by hand, counts as ± 0\.025 m: length, x and 2 more sizes/)).toBeVisible()
+  await expect(page.getByText(/^Placed by hand, ± 0\.025 m from now on: length, x and 2 more sizes/)).toBeVisible()
   expect((await read()).seats.filter((each) => each.id !== 'U1-1')).toEqual(
     before.seats.filter((each) => each.id !== 'U1-1'),
   )

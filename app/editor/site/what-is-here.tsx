@@ -91,7 +91,7 @@ function Things({ kind, chosen, adding, onChoose, onAdding, onAdd }: WhatIsHereP
 
 /** Every named size with its tolerance, as it goes into the margins, and where it came from. */
 function Sizes() {
-  const { site } = useSiteEditing()
+  const { site, rules } = useSiteEditing()
   const [chosen, setChosen] = useState<string | null>(null)
   const size = site.dimensions.find(({ id }) => id === chosen)
   const length = (metres: number) => formatLength(metres, site.displayUnits)
@@ -108,7 +108,7 @@ function Sizes() {
         label="All sizes"
         rows={rows}
         chosen={chosen === null ? [] : [chosen]}
-        empty="No named sizes: every coordinate counts as ± 25 mm."
+        empty={`No named sizes: every coordinate counts as ± ${length(rules.toleranceUnstated)}.`}
         onChoose={setChosen}
       />
     </section>
