@@ -8,7 +8,6 @@ import {
   type ReactNode,
   type RefObject,
 } from 'react'
-import { Button, IconButton } from '#app/components/button.tsx'
 import type { SeatFigures } from '#app/domain/comfort/seat-warmth.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { PlanCaution } from '#app/domain/rules/cautions-on-plan.ts'
@@ -32,6 +31,7 @@ import { ReadOut } from '#app/editor/read-out.tsx'
 import type { FluxView } from '#app/editor/use-flux.ts'
 import { usePlanGestures } from '#app/editor/use-plan-gestures.ts'
 import { usePlanKeys } from '#app/editor/use-plan-keys.ts'
+import { SizeButtons } from '#app/editor/size-buttons.tsx'
 import { usePlanView, type PlanViewing } from '#app/editor/use-plan-view.ts'
 import { useSize } from '#app/editor/use-size.ts'
 import { planeHeight, type ViewChoice } from '#app/editor/view-choice.ts'
@@ -211,24 +211,6 @@ export function PlanSurface(props: PlanSurfaceProps) {
       />
       <PlanNotes {...{ state, site, flux, touch }} />
       <SizeButtons viewing={viewing} />
-    </div>
-  )
-}
-
-/** Ways to change the size without a wheel: over the plan's lower left corner, on small screens, without names, over the upper. */
-function SizeButtons({ viewing }: { viewing: PlanViewing }) {
-  return (
-    <div
-      role="group"
-      aria-label="Size of the plan"
-      className="absolute bottom-2 left-2 flex items-center rounded-md border border-rule bg-paper-raised/90 max-desk:top-2 max-desk:bottom-auto print:hidden"
-    >
-      <IconButton icon="fit" label="Whole plan" onClick={viewing.showAll} />
-      <IconButton icon="minus" label="Smaller" onClick={() => viewing.enlargeAt(0.8)} />
-      <IconButton icon="plus" label="Larger" onClick={() => viewing.enlargeAt(1.25)} />
-      <Button kind="text" size="small" title="1 : 50 on the screen" onClick={viewing.showTrueSize}>
-        100 %
-      </Button>
     </div>
   )
 }

@@ -47,14 +47,14 @@ function stateIn(title: string, condition: string): string {
 }
 
 function sentenceOf({ rule, title, outcome, condition, remedy }: Finding): string {
-  const todo =
+  const advice =
     rule === 'support-load'
       ? 'It must not carry the heater until its maker or the structure’s engineer confirms the load.'
       : remedy
   const parts = [
     `${title}${condition === null ? '' : `, while ${stateIn(title, condition)}`}.`,
     outcome === 'measure first' ? 'Measure first.' : null,
-    todo,
+    advice,
   ]
   return parts.filter((part) => part !== null).join(' ')
 }
