@@ -105,9 +105,20 @@ export const fluxMutations: readonly Mutation[] = [
     map,
     ['frame.w[1] * ux - frame.w[0] * uy', 'frame.w[1] * ux + frame.w[0] * uy'],
     ['(s.strength * f) / (h * h)', '(s.strength * f) / h'],
-    ['rows ? off * s.ux : -off * s.uy', 'rows ? off * s.ux : off * s.uy'],
+    ['(x - x0 - 0.5 * cell) * uy', '(x0 + 0.5 * cell - x) * uy'],
+    ['const low = (start + (0.5', 'const low = (start - (0.5'],
+    ['const low = (place + (0.5', 'const low = (place - (0.5'],
+  ),
+  ...within(
+    'domain/flux/kernel.ts',
+    shading,
+    ['const high = (0.5 - (figures[k + 3]', 'const high = (0.5 - (figures[k + 4]'],
+    ['(factor[i] ?? 0) * share', '(factor[i] ?? 0)'],
+    ['radiantPower: element.radiantPower * part', 'radiantPower: element.radiantPower'],
+    ['((from + to) / 2 - 0.5) * element.length', '(0.5 - (from + to) / 2) * element.length'],
   ),
   ...within('domain/flux/table-kernel.ts', map, ['side * w[2] + height * lean', 'side * w[2] - height * lean']),
+  ...within('domain/flux/table-kernel.ts', shading, ['(0.5 - to) * length', '(0.5 - from) * length']),
   ...within('domain/flux/map.ts', map, [
     'addLayer(total, grid.columns, layer, -1)',
     'addLayer(total, grid.columns, layer, 1)',
@@ -130,9 +141,9 @@ export const fluxMutations: readonly Mutation[] = [
   ...within(
     'domain/flux/shaded-cells.ts',
     shading,
-    ['(place + high) * scaled', '(place - high) * scaled'],
-    ['0.5 - end / pieces', '0.5 + end / pieces'],
-    ['1 - alike.whole', 'alike.whole'],
+    ['opaque |= mask', 'opaque &= mask'],
+    ['first = Math.max(first, column)', 'first = column'],
+    ['before ^ mask', 'before | mask'],
   ),
   ...within(
     'domain/flux/shade-marks.ts',
@@ -140,7 +151,12 @@ export const fluxMutations: readonly Mutation[] = [
     ['(part + 0.5) / parts - 0.5', '(part + 0.5) / parts'],
     ['(length * (top - z)) / (height - top)', '(length * (top - z)) / height'],
   ),
-  ...within('domain/flux/shade-patterns.ts', shading, ['1 - (1 - share) * transmittance', '1 - share * transmittance']),
+  ...within(
+    'domain/flux/shade-patterns.ts',
+    shading,
+    ['1 - (1 - share) * transmittance', '1 - share * transmittance'],
+    ['const share = 1 - (hidden[from] ?? 0)', 'const share = 1 + (hidden[from] ?? 0)'],
+  ),
   ...within(
     'drawing/heat/traced-field.ts',
     contours,
@@ -149,7 +165,13 @@ export const fluxMutations: readonly Mutation[] = [
     ['2 * near - far', 'near + far'],
   ),
   ...within('domain/flux/nodes.ts', nodes, ['const eta = 2 * heightByLength', 'const eta = 4 * heightByLength']),
-  ...within('domain/flux/cut-off.ts', cutOff, ['y + r * (along * uy + left * ux)', 'y + r * (along * uy - left * ux)']),
+  ...within(
+    'domain/flux/cut-off.ts',
+    cutOff,
+    ['y + r * (along * uy + left * ux)', 'y + r * (along * uy - left * ux)'],
+    ['b[1] > a[1] ? x + side : x', 'b[1] > a[1] ? x : x + side'],
+    ['leftOf(a, b, point[0], point[1]) > 0', 'leftOf(a, b, point[0], point[1]) < 0'],
+  ),
   ...within('domain/flux/many-points.ts', points, [
     '(side * lean + height * down) * inverse',
     '(side * lean - height * down) * inverse',

@@ -71,22 +71,17 @@ export function terrace(emitters: readonly Emitter[], cells = 24_000, more: Part
 }
 
 /** 100 × 60 m with 100 heaters, one over each 10 × 6 m. */
-export const largeSite: MapQuestion = {
-  emitters: Array.from({ length: 100 }, (_, i) =>
+export function largeSite(turnOf: (i: number) => number = ownTurn): MapQuestion {
+  const emitters = Array.from({ length: 100 }, (_, i) =>
     hung(`h${i}`, {
       x: 5 + (i % 10) * 10,
       y: 3 + Math.floor(i / 10) * 6,
-      turnDeg: ownTurn(i),
+      turnDeg: turnOf(i),
       tiltDeg: (i % 3) * 15,
       model: twoElements[i % 4] ?? 'betony-3-0',
     }),
-  ),
-  floor: rectangle(100, 60),
-  z: 0.6,
-  cell: 0.25,
-  quantity: { kind: 'flux' },
-  levels: [],
-  edges: [],
+  )
+  return { ...terrace(emitters), floor: rectangle(100, 60), cell: 0.25 }
 }
 
 /** Things of a terrace in turn: table, post, table, umbrella. */

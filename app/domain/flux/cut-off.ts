@@ -2,25 +2,28 @@ import type { Extent } from '#app/domain/flux/cells.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { Grid } from '#app/domain/flux/grid.ts'
 import { irradianceAt } from '#app/domain/flux/irradiance.ts'
-import type { Vec3 } from '#app/domain/vector.ts'
+import type { Vec2, Vec3 } from '#app/domain/vector.ts'
 
-/** Where each emitter is reckoned on a map, in their order, and the most that is left out at any cell, W/m². */
+/** Where an emitter is reckoned on a map: a convex outline in plan, counter-clockwise, and the box round it. */
+export interface Area extends Extent {
+  readonly outline: readonly Vec2[]
+}
+
+/** The areas of the emitters in their order, null where every cell counts, and the most left out at any cell, W/m². */
 export interface CutOff {
-  readonly extents: readonly Extent[]
+  readonly areas: readonly (Area | null)[]
   readonly errorBound: number
 }
 
 /** Cells times elements above which a map is cut; below it every cell knows every heater. */
 const uncutWork = 4_000_000
-/** What one heater gives outside its extent at most, W/m². */
+/** What one heater gives outside its area at most, W/m². */
 export const leastKept = 0.5
 /** Side of the blocks of floor over which the bound is taken, m. */
 const block = 4
 
-/** No cut. */
-export const everywhere: Extent = { left: -Infinity, right: Infinity, low: -Infinity, high: Infinity }
 const up: Vec3 = [0, 0, 1]
-const directions = 32
+const directions = 64
 const farthest = 80
 const ratio = 0.92
 /** Allowance for what lies between the directions and distances looked along. */
@@ -28,8 +31,8 @@ const allowance = 1.1
 
 /** How far an emitter of one kind and height reaches, in its own directions. */
 interface Reach {
-  /** Places along u and to the left of u beyond which it gives less than is kept, m. */
-  readonly outline: readonly (readonly [along: number, left: number])[]
+  /** Convex outline, places along u and to the left of u, outside of which it gives less than is kept, m. */
+  readonly outline: readonly Vec2[]
   /** The most it gives in any direction at so many whole metres or more, W/m². */
   readonly beyond: Float64Array
 }
@@ -55,7 +58,28 @@ function reachOf({ beam, frame, elements }: Emitter, z: number): Reach {
     }
     return [kept * along, kept * left] as const
   })
-  return { outline, beyond }
+  return { outline: hullOf(outline), beyond }
+}
+
+/** Twice the area of the triangle a, b, c: positive when c lies to the left of the way from a to b. */
+const leftOf = (a: Vec2, b: Vec2, x: number, y: number) => (b[0] - a[0]) * (y - a[1]) - (b[1] - a[1]) * (x - a[0])
+
+/** The corners of the convex hull of points, counter-clockwise. */
+function hullOf(points: readonly Vec2[]): Vec2[] {
+  const sorted = points.toSorted((a, b) => a[0] - b[0] || a[1] - b[1])
+  const half = (way: readonly Vec2[]) => {
+    const corners: Vec2[] = []
+    for (const point of way) {
+      for (let n = corners.length; n >= 2; n--) {
+        const [a, b] = [corners[n - 2], corners[n - 1]]
+        if (a && b && leftOf(a, b, point[0], point[1]) > 0) break
+        corners.pop()
+      }
+      corners.push(point)
+    }
+    return corners.slice(0, -1)
+  }
+  return [...half(sorted), ...half(sorted.toReversed())]
 }
 
 const reaches = new Map<string, Reach>()
@@ -75,33 +99,46 @@ function knownReach(emitter: Emitter, z: number): Reach {
   return known
 }
 
-/** The rectangle outside of which an emitter gives a plane at z less than `leastKept`. */
-export function extentOf(emitter: Emitter, z: number): Extent {
-  const [x, y] = emitter.elements[0]?.centre ?? [0, 0]
-  const [ux, uy] = emitter.frame.u
-  const places = knownReach(emitter, z).outline.map(
-    ([along, left]) => [x + along * ux - left * uy, y + along * uy + left * ux] as const,
-  )
-  const xs = places.map((place) => place[0])
-  const ys = places.map((place) => place[1])
-  return { left: Math.min(...xs), right: Math.max(...xs), low: Math.min(...ys), high: Math.max(...ys) }
+/** The area outside of which an emitter gives a plane at z less than `leastKept`. */
+export function areaOf(emitter: Emitter, z: number): Area {
+  return areaFrom(emitter, knownReach(emitter, z))
 }
 
-/** An emitter's extent, its place and what it gives from afar. */
-interface FarSource extends Extent {
+function areaFrom({ elements, frame }: Emitter, reach: Reach): Area {
+  const [x, y] = elements[0]?.centre ?? [0, 0]
+  const [ux, uy] = frame.u
+  const outline = reach.outline.map(([along, left]): Vec2 => [x + along * ux - left * uy, y + along * uy + left * ux])
+  const xs = outline.map((place) => place[0])
+  const ys = outline.map((place) => place[1])
+  return { outline, left: Math.min(...xs), right: Math.max(...xs), low: Math.min(...ys), high: Math.max(...ys) }
+}
+
+/** Whether an area holds the whole square whose least corner is (x, y): all corners lie to the left of every side. */
+export function holdsSquare({ outline, left, right, low, high }: Area, x: number, y: number, side: number): boolean {
+  if (left > x || right < x + side || low > y || high < y + side) return false
+  return outline.every((a, i) => {
+    const b = outline[(i + 1) % outline.length] ?? a
+    // The corner that lies farthest to the right of the way from a to b.
+    return leftOf(a, b, b[1] > a[1] ? x + side : x, b[0] > a[0] ? y : y + side) >= 0
+  })
+}
+
+/** An emitter's area, its place and what it gives from afar. */
+interface FarSource {
+  readonly area: Area
   readonly x: number
   readonly y: number
   readonly beyond: Float64Array
 }
 
 /**
- * The most that all sources together leave out at a cell of the block from (x, y): of each whose extent does not hold
- * the whole block, the least kept or what it gives at most from so far away, whichever is less.
+ * The most that all sources together leave out at a cell of the block from (x, y): of each whose area does not hold the
+ * whole block, the least kept or what it gives at most from so far away, whichever is less.
  */
 function leftOut(sources: readonly FarSource[], x: number, y: number): number {
   let sum = 0
   for (const s of sources) {
-    if (s.left <= x && s.right >= x + block && s.low <= y && s.high >= y + block) continue
+    if (holdsSquare(s.area, x, y, block)) continue
     const gapX = Math.max(0, s.x - x - block, x - s.x)
     const gapY = Math.max(0, s.y - y - block, y - s.y)
     const metres = Math.min(farthest, Math.sqrt(gapX * gapX + gapY * gapY) | 0)
@@ -123,13 +160,11 @@ function boundOver(sources: readonly FarSource[], grid: Grid): number {
 /** The cut-off for a map: none while the work is small, else each emitter where it gives at least 0.5 W/m². */
 export function cutOffFor(emitters: readonly Emitter[], grid: Grid): CutOff {
   const elements = emitters.reduce((sum, emitter) => sum + emitter.elements.length, 0)
-  if (grid.columns * grid.rows * elements <= uncutWork) {
-    return { extents: emitters.map(() => everywhere), errorBound: 0 }
-  }
-  const extents = emitters.map((emitter) => extentOf(emitter, grid.z))
-  const sources = emitters.map((emitter, i) => {
+  if (grid.columns * grid.rows * elements <= uncutWork) return { areas: emitters.map(() => null), errorBound: 0 }
+  const sources = emitters.map((emitter): FarSource => {
+    const reach = knownReach(emitter, grid.z)
     const [x, y] = emitter.elements[0]?.centre ?? [0, 0]
-    return { ...(extents[i] ?? everywhere), x, y, beyond: knownReach(emitter, grid.z).beyond }
+    return { area: areaFrom(emitter, reach), x, y, beyond: reach.beyond }
   })
-  return { extents, errorBound: boundOver(sources, grid) }
+  return { areas: sources.map(({ area }) => area), errorBound: boundOver(sources, grid) }
 }

@@ -1,9 +1,10 @@
 import { windowOf, type Extent, type Window } from '#app/domain/flux/cells.ts'
-import { cutOffFor, everywhere } from '#app/domain/flux/cut-off.ts'
+import { cutOffFor, type Area } from '#app/domain/flux/cut-off.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { Grid } from '#app/domain/flux/grid.ts'
 import { addElement } from '#app/domain/flux/kernel.ts'
-import { shadeEmitter } from '#app/domain/flux/shaded-cells.ts'
+import { seenOf } from '#app/domain/flux/shaded-cells.ts'
+import { emptySpans } from '#app/domain/flux/spans.ts'
 import { maxHeaters } from '#app/domain/layout/limits.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
 import { sameData } from '#app/domain/same-data.ts'
@@ -28,12 +29,15 @@ export interface FluxMap {
   readonly computed: number
 }
 
-function layerOf(grid: Grid, emitter: Emitter, extent: Extent, obstructions: readonly Obstruction[]): Layer {
-  const window = emitter.elements.length === 0 ? null : windowOf(grid, extent)
+const everywhere: Extent = { left: -Infinity, right: Infinity, low: -Infinity, high: Infinity }
+
+function layerOf(grid: Grid, emitter: Emitter, area: Area | null, obstructions: readonly Obstruction[]): Layer {
+  const window = emitter.elements.length === 0 ? null : windowOf(grid, area ?? everywhere)
   const values = new Float32Array(window ? window.columns * window.rows : 0)
   if (!window) return { emitter, window, values }
-  for (const element of emitter.elements) addElement(values, window, emitter, element)
-  if (obstructions.length > 0) shadeEmitter(values, window, emitter, obstructions)
+  const over = { ...emitter, elements: emitter.elements.filter(({ centre }) => centre[2] > window.z) }
+  const spans = seenOf(window, over, obstructions, area?.outline)
+  over.elements.forEach((element, i) => addElement(values, window, emitter, element, spans[i] ?? emptySpans()))
   return { emitter, window, values }
 }
 
@@ -77,7 +81,7 @@ export function irradianceMap(
 ): FluxMap {
   requireAnswerable(emitters)
   if ('document' in globalThis) throw new Error('the map is computed in a worker')
-  const { extents, errorBound } = cutOffFor(emitters, grid)
+  const { areas, errorBound } = cutOffFor(emitters, grid)
   const kept =
     before &&
     isSameGrid(before.grid, grid) &&
@@ -93,7 +97,7 @@ export function irradianceMap(
       unused.delete(known)
       return known
     }
-    const layer = layerOf(grid, emitter, extents[i] ?? everywhere, obstructions)
+    const layer = layerOf(grid, emitter, areas[i] ?? null, obstructions)
     fresh.push(layer)
     return layer
   })

@@ -1,68 +1,74 @@
 /**
- * What the things of a site hide of one heater from a cell: the hidden share of each piece of its elements. Cells hold
- * the number of a pattern; number 0 hides nothing.
+ * What the things of a site hide of an element from a cell: the hidden share of each of the equal pieces along it. Cells
+ * hold the number of a pattern; number 0 hides nothing.
  */
 export interface ShadePattern {
-  /** Hidden share of each piece, 0 … 1: the pieces of the first element, of the second … */
-  readonly shares: readonly number[]
-  /** The share when it is the same for all pieces, else NaN. */
-  readonly whole: number
-  /** Neighbouring pieces of an element that are hidden alike, flat: element, first piece, end, share. */
-  readonly runs: readonly number[]
+  /** Hidden share of each piece along u, 0 … 1. */
+  readonly hidden: readonly number[]
+  /**
+   * What is seen all the same: stretches, flat, each as where on the element it begins and ends (shares of its length
+   * along u) and the share of its radiation that arrives.
+   */
+  readonly seen: readonly number[]
+  /** Number of the pattern behind an opaque thing besides, by the pieces that this hides (a bit each); −1: not met yet. */
+  readonly opaque: Int32Array
 }
 
 /** The patterns met so far and which follows from which behind another thing. */
 export interface ShadePatterns {
-  /** How many pieces each element is taken as. */
-  readonly perElement: number
+  /** How many pieces the element is taken as. */
+  readonly pieces: number
   readonly list: ShadePattern[]
-  /** By number · masks + mask (a bit per hidden piece), for each transmittance. */
+  /** For what is not opaque: by number · masks + mask, for each transmittance. */
   readonly following: Map<number, Map<number, number>>
   readonly numbers: Map<string, number>
 }
 
-function patternOf(shares: readonly number[], perElement: number): ShadePattern {
-  const [whole = 0] = shares
-  const runs: number[] = []
-  for (let from = 0, piece = 1; piece <= shares.length; piece++) {
-    const share = shares[from] ?? 0
-    if (piece % perElement !== 0 && shares[piece] === share) continue
-    const first = from % perElement
-    if (share > 0) runs.push(Math.floor(from / perElement), first, first + piece - from, share)
+function patternOf(hidden: readonly number[]): ShadePattern {
+  const pieces = hidden.length
+  const seen: number[] = []
+  for (let from = 0, piece = 1; piece <= pieces; piece++) {
+    if (piece < pieces && hidden[piece] === hidden[from]) continue
+    const share = 1 - (hidden[from] ?? 0)
+    if (share > 0) seen.push(from / pieces, piece / pieces, share)
     from = piece
   }
-  return { shares, whole: shares.every((share) => share === whole) ? whole : NaN, runs }
+  return { hidden, seen, opaque: new Int32Array(1 << pieces).fill(-1) }
 }
 
-/** Patterns of so many elements, with only number 0. */
-export function emptyPatterns(elements: number, perElement: number): ShadePatterns {
-  const shares = Array.from({ length: elements * perElement }, () => 0)
-  return {
-    perElement,
-    list: [patternOf(shares, perElement)],
-    following: new Map(),
-    numbers: new Map([[shares.join(), 0]]),
-  }
+/** Patterns of an element of so many pieces, with only number 0. */
+export function emptyPatterns(pieces: number): ShadePatterns {
+  const hidden = Array.from({ length: pieces }, () => 0)
+  return { pieces, list: [patternOf(hidden)], following: new Map(), numbers: new Map([[hidden.join(), 0]]) }
 }
 
-function numberOf({ list, numbers, perElement }: ShadePatterns, shares: readonly number[]): number {
-  const key = shares.join()
+function numberOf({ list, numbers }: ShadePatterns, hidden: readonly number[]): number {
+  const key = hidden.join()
   const known = numbers.get(key)
   if (known !== undefined) return known
   numbers.set(key, list.length)
-  return list.push(patternOf(shares, perElement)) - 1
+  return list.push(patternOf(hidden)) - 1
+}
+
+function behind(patterns: ShadePatterns, { hidden }: ShadePattern, mask: number, transmittance: number): number {
+  return numberOf(
+    patterns,
+    hidden.map((share, piece) => (mask & (1 << piece) ? 1 - (1 - share) * transmittance : share)),
+  )
 }
 
 /** Number of the pattern that a cell of pattern `number` has when a thing hides the pieces of `mask` besides. */
 export function patternBehind(patterns: ShadePatterns, number: number, mask: number, transmittance: number): number {
-  const shares = patterns.list[number]?.shares ?? []
+  const pattern = patterns.list[number]
+  if (!pattern) return number
+  if (transmittance === 0) {
+    const found = pattern.opaque[mask] ?? -1
+    return found >= 0 ? found : (pattern.opaque[mask] = behind(patterns, pattern, mask, 0))
+  }
   let following = patterns.following.get(transmittance)
   if (!following) patterns.following.set(transmittance, (following = new Map<number, number>()))
-  const key = number * (1 << shares.length) + mask
-  const known = following.get(key)
-  if (known !== undefined) return known
-  const behind = shares.map((share, piece) => (mask & (1 << piece) ? 1 - (1 - share) * transmittance : share))
-  const found = numberOf(patterns, behind)
-  following.set(key, found)
-  return found
+  const key = number * pattern.opaque.length + mask
+  const known = following.get(key) ?? behind(patterns, pattern, mask, transmittance)
+  following.set(key, known)
+  return known
 }

@@ -1,6 +1,6 @@
 import type { Cells } from '#app/domain/flux/cells.ts'
 import type { Edge, Solid } from '#app/domain/flux/solid.ts'
-import type { Vec3 } from '#app/domain/vector.ts'
+import type { Vec2, Vec3 } from '#app/domain/vector.ts'
 
 /** The outline that a solid throws from a point source onto a horizontal plane, as the extent of each row of cells. */
 export interface Silhouette {
@@ -31,6 +31,8 @@ export type Caster =
       readonly bottom: number
       readonly top: number
     }
+
+type Cylinder = Extract<Caster, { kind: 'cylinder' }>
 
 /** Kept free below the source, as a share of its height over the plane: a shadow from there would run to infinity. */
 const headroom = 0.01
@@ -139,25 +141,31 @@ function extendByDiscs(rows: Rows, a: readonly [number, number, number], b: read
   }
 }
 
+/** First column of a silhouette in one of its rows, 0 … `columns`. */
+export function firstIn({ least }: Silhouette, { x0, cell, columns }: Cells, row: number): number {
+  return Math.min(Math.max(Math.ceil(((least[row] ?? 0) - x0) / cell - 0.5), 0), columns)
+}
+
+/** Column after the last of a silhouette in one of its rows, 0 … `columns`; not beyond the first when it holds none. */
+export function endIn({ greatest }: Silhouette, { x0, cell, columns }: Cells, row: number): number {
+  return Math.min(Math.max(Math.floor(((greatest[row] ?? 0) - x0) / cell + 0.5), 0), columns)
+}
+
 /** Writes the silhouette of a caster from a source into the extents of the rows of cells. */
 export function drawSilhouette(into: Silhouette, cells: Cells, caster: Caster, source: Vec3): void {
   if (caster.kind === 'cylinder') drawCylinder(into, cells, caster, source)
   else drawEdges(into, cells, caster.edges, source)
 }
 
-function drawCylinder(
-  into: Silhouette,
-  cells: Cells,
-  caster: Extract<Caster, { kind: 'cylinder' }>,
-  source: Vec3,
-): void {
-  const gap = source[2] - cells.z
-  const disc = (z: number) => {
-    const k = gap / (source[2] - z)
-    const [x, y] = [source[0] + (caster.x - source[0]) * k, source[1] + (caster.y - source[1]) * k]
-    return [x, y, caster.radius * k] as const
-  }
-  const [low, high] = [disc(caster.bottom), disc(caster.top)]
+/** The disc, x, y and radius, that a cylinder's section at a height throws onto the plane at z. */
+function discOf(caster: Cylinder, height: number, z: number, [x, y, top]: Vec3): readonly [number, number, number] {
+  const k = (top - z) / (top - height)
+  return [x + (caster.x - x) * k, y + (caster.y - y) * k, caster.radius * k]
+}
+
+function drawCylinder(into: Silhouette, cells: Cells, caster: Cylinder, source: Vec3): void {
+  const low = discOf(caster, caster.bottom, cells.z, source)
+  const high = discOf(caster, caster.top, cells.z, source)
   const rows = openRows(
     into,
     cells,
@@ -165,6 +173,16 @@ function drawCylinder(
     Math.max(low[1] + low[2], high[1] + high[2]),
   )
   if (into.lastRow >= into.firstRow) extendByDiscs(rows, low, high)
+}
+
+/** Writes an outline in plan into the extents of the rows of cells. */
+export function drawOutline(into: Silhouette, cells: Cells, outline: readonly Vec2[]): void {
+  const ys = outline.map(([, y]) => y)
+  const rows = openRows(into, cells, Math.min(...ys), Math.max(...ys))
+  outline.forEach(([x, y], i) => {
+    const next = outline[(i + 1) % outline.length]
+    if (next) extendBySegment(rows, x, y, next[0], next[1])
+  })
 }
 
 function drawEdges(into: Silhouette, cells: Cells, edges: readonly Edge[], source: Vec3): void {

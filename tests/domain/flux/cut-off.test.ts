@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { cutOffFor, extentOf, leastKept } from '#app/domain/flux/cut-off.ts'
+import { areaOf, cutOffFor, holdsSquare, leastKept } from '#app/domain/flux/cut-off.ts'
 import { emitterOf, type Emitter } from '#app/domain/flux/emitter.ts'
 import { gridOf } from '#app/domain/flux/grid.ts'
 import { irradianceAt } from '#app/domain/flux/irradiance.ts'
@@ -44,7 +44,7 @@ describe('where a heater is reckoned', () => {
     [-80, 90],
   ])('tilted %d°, turned %d°: outside its rectangle it gives less than 0.5 W/m² anywhere', (tiltDeg, turnDeg) => {
     const emitter = line(cosine(1.9, 1.3), { at: [3, -2, 2.5], tiltDeg, turnDeg, length: 1.1, power: 2500 })
-    const { left, right, low, high } = extentOf(emitter, 0.6)
+    const { left, right, low, high } = areaOf(emitter, 0.6)
     const at = (x: number, y: number) => irradianceAt(emitter, [x, y, 0.6], [0, 0, 1])
     for (let i = 0; i <= 400; i++) {
       for (const further of [0, 0.3, 2, 8, 40]) {
@@ -57,9 +57,54 @@ describe('where a heater is reckoned', () => {
     }
   })
 
+  it.each([
+    [0, 0],
+    [25, 20],
+    [60, -40],
+    [-80, 90],
+  ])('tilted %d°, turned %d°: nor outside its convex outline', (tiltDeg, turnDeg) => {
+    const emitter = line(cosine(1.9, 1.3), { at: [3, -2, 2.5], tiltDeg, turnDeg, length: 1.1, power: 2500 })
+    const { outline, left, right, low, high } = areaOf(emitter, 0.6)
+    let [outside, inside] = [0, 0]
+    for (let x = left; x <= right; x += 0.1) {
+      for (let y = low; y <= high; y += 0.1) {
+        const isInside = outline.every(([ax, ay], i) => {
+          const [bx, by] = outline[(i + 1) % outline.length]!
+          return (bx - ax) * (y - ay) - (by - ay) * (x - ax) >= 0
+        })
+        if (isInside) inside++
+        else expect(irradianceAt(emitter, [x, y, 0.6], [0, 0, 1])).toBeLessThanOrEqual(leastKept)
+        if (!isInside) outside++
+      }
+    }
+    expect(inside).toBeGreaterThan(outside)
+    expect(outside).toBeGreaterThan(0)
+  })
+
+  it('holds a square when it holds its four corners', () => {
+    const outline: Vec2[] = [
+      [4, 0],
+      [7, 3],
+      [4, 8],
+      [0, 3],
+    ]
+    const area = { outline, left: 0, right: 7, low: 0, high: 8 }
+    const isIn = (x: number, y: number) =>
+      3 * x + 4 * y >= 12 && x - y <= 4 && 5 * x + 3 * y <= 44 && 5 * x - 4 * y >= -12
+    let held = 0
+    for (let x = -1; x <= 8; x += 0.37) {
+      for (let y = -1; y <= 8; y += 0.41) {
+        const corners = isIn(x, y) && isIn(x + 2, y) && isIn(x, y + 2) && isIn(x + 2, y + 2)
+        expect(holdsSquare(area, x, y, 2)).toBe(corners)
+        if (corners) held++
+      }
+    }
+    expect(held).toBeGreaterThan(10)
+  })
+
   it('is not much more than it has to be', () => {
     const emitter = line(cosine(1.9, 1.3), { at: [3, -2, 2.5], length: 1.1, power: 2500 })
-    const { left, right, high } = extentOf(emitter, 0.6)
+    const { left, right, high } = areaOf(emitter, 0.6)
     expect(irradianceAt(emitter, [3, high - 2, 0.6], [0, 0, 1])).toBeGreaterThan(leastKept)
     expect(irradianceAt(emitter, [right - 2, -2, 0.6], [0, 0, 1])).toBeGreaterThan(leastKept)
     expect((left + right) / 2).toBeCloseTo(3, 6)
@@ -78,9 +123,10 @@ describe('the cut-off', () => {
       0.6,
       0.05,
     )
-    const { extents, errorBound } = cutOffFor(heaters.slice(0, 12), grid)
+    const { areas, errorBound } = cutOffFor(heaters.slice(0, 12), grid)
     expect(errorBound).toBe(0)
-    expect(extents.every(({ left, right }) => left === -Infinity && right === Infinity)).toBe(true)
+    expect(areas).toHaveLength(12)
+    expect(areas.every((area) => area === null)).toBe(true)
   })
 
   it('on 100 × 60 m states a bound that the map keeps, at every 97th cell', () => {

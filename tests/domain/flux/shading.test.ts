@@ -1,5 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
+import type { Emitter } from '#app/domain/flux/emitter.ts'
 import { gridOf } from '#app/domain/flux/grid.ts'
 import { irradianceAt, largestIrradianceAt, scalarIrradianceAt } from '#app/domain/flux/irradiance.ts'
 import { irradianceMap } from '#app/domain/flux/map.ts'
@@ -7,7 +8,7 @@ import { clearStretches, obstructionsOf, seenShare, type Obstruction } from '#ap
 import { boxSolid, cylinderSolid, slabSolid, solidsOf } from '#app/domain/flux/solid.ts'
 import { heaterFrame } from '#app/domain/layout/body.ts'
 import type { Shape } from '#app/domain/site/site.ts'
-import type { Vec2, Vec3 } from '#app/domain/vector.ts'
+import { cross, normalise, type Vec2, type Vec3 } from '#app/domain/vector.ts'
 import { demoModels, demoSites } from '#drizzle/seed/demo-sites.ts'
 import { cosine, line } from '#tests/support/emitters.ts'
 
@@ -265,7 +266,96 @@ describe('shade on a map', () => {
     expect(halved).toBeGreaterThan(20)
   })
 
-  it('a shadow for elements out of level and tabulated beams too', () => {
+  const flatTable = {
+    kind: 'table',
+    across: [-1.5, 0, 1.5],
+    along: [-1.5, 0, 1.5],
+    intensity: [
+      [0.2, 0.3, 0.2],
+      [0.6, 1, 0.6],
+      [0.2, 0.3, 0.2],
+    ],
+  } as const
+  it.each([
+    ['turned 0°', cosine(1.7, 1.2), { turnDeg: 0, tiltDeg: 20 }],
+    ['turned 90°', cosine(1.7, 1.2), { turnDeg: 90, tiltDeg: 20 }],
+    ['turned 180°', cosine(1.7, 1.2), { turnDeg: 180, tiltDeg: 20 }],
+    ['turned 270°', cosine(1.7, 1.2), { turnDeg: 270, tiltDeg: 20 }],
+    ['turned 33°', cosine(1.7, 1.2), { turnDeg: 33, tiltDeg: 20 }],
+    ['of a tabulated beam', flatTable, { turnDeg: 33 }],
+  ] as const)('an element half hidden lengthwise, %s', (_, beam, how) => {
+    const heater = { ...line(beam, { at: [2, 2, 2.4], length: 1.2, ...how }), id: 'a' }
+    expectHalfShadows(heater, 0)
+    expectHalfShadows(heater, 0.4)
+  })
+
+  it('an element half hidden lengthwise, out of level', () => {
+    const { frame, ...level } = line(cosine(1.7, 1.2), { at: [2, 2, 2.4], length: 1.2 })
+    const u = normalise([1, 0.3, 0.15])
+    const v = normalise(cross([0, 0, -1], u))
+    expectHalfShadows({ ...level, id: 'a', frame: { ...frame, u, v, w: cross(u, v) } }, 0.4)
+  })
+
+  /**
+   * Under a board that ends below the element's middle and across it, cells agree with the closed form to half a piece
+   * of six, and many of them see only a part of the element.
+   */
+  function expectHalfShadows(heater: Emitter, transmittance: number): void {
+    const [ux, uy] = heater.frame.u
+    const turnDeg = (Math.atan2(uy, ux) * 180) / Math.PI
+    const solids = [slabSolid([2 - 4.5 * ux, 2 - 4.5 * uy], [9, 18], turnDeg, 1.95, 2)]
+    const board = { id: 'board', heaterId: null, transmittance, solids }
+    const grid = gridOf(floor, 0.6, 0.1)
+    const { total } = irradianceMap(null, grid, [heater], [board])
+    const open = irradianceMap(null, grid, [heater]).total
+    let halved = 0
+    total.forEach((value, at) => {
+      const x = grid.x0 + ((at % grid.columns) + 0.5) * grid.cell
+      const y = grid.y0 + (Math.floor(at / grid.columns) + 0.5) * grid.cell
+      const exact = irradianceAt(heater, [x, y, 0.6], [0, 0, 1], [board])
+      if (exact > (transmittance + 0.1) * open[at]! && exact < 0.9 * open[at]!) halved++
+      expect(Math.abs(value - exact)).toBeLessThan(open[at]! / 6 + 0.05)
+    })
+    expect(halved).toBeGreaterThan(20)
+  }
+
+  it('on a large site, too, where heaters are reckoned only so far', () => {
+    const far: Vec2[] = [
+      [-50, -30],
+      [50, -30],
+      [50, 30],
+      [-50, 30],
+    ]
+    const many = Array.from({ length: 12 }, (_, i) => ({
+      ...line(cosine(1.7, 1.2), { at: [-44 + 8 * i, (i % 3) - 1, 2.4], turnDeg: 29 * i, length: 1.2, power: 2000 }),
+      id: `h${i}`,
+    }))
+    const posts = many.flatMap(({ id, elements: [element] }) => {
+      const [x, y] = element!.centre
+      return [2, 4, 6].map((off) => ({
+        ...obstruction({ kind: 'cylinder', centre: [x + off / 3, y + off], radius: 0.3, z: [0, 2.2] }),
+        id: `${id} ${off}`,
+      }))
+    })
+    const grid = gridOf(far, 0.6, 0.1)
+    const { total, errorBound } = irradianceMap(null, grid, many, posts)
+    const open = irradianceMap(null, grid, many).total
+    expect(errorBound).toBeGreaterThan(0)
+    let [right, shaded] = [0, 0]
+    for (let at = 0; at < total.length; at += 31) {
+      const x = grid.x0 + ((at % grid.columns) + 0.5) * grid.cell
+      const y = grid.y0 + (Math.floor(at / grid.columns) + 0.5) * grid.cell
+      expect(total[at]).toBeLessThanOrEqual(open[at]! + 1e-3)
+      if (open[at]! - total[at]! < 2) continue
+      shaded++
+      const exact = many.reduce((sum, each) => sum + irradianceAt(each, [x, y, 0.6], [0, 0, 1], posts), 0)
+      if (Math.abs(total[at]! - exact) < errorBound + open[at]! / 12) right++
+    }
+    expect(shaded).toBeGreaterThan(60)
+    expect(right / shaded).toBeGreaterThan(0.98)
+  })
+
+  it('a shadow for tabulated beams, the same share everywhere', () => {
     const flat = {
       kind: 'table',
       across: [-1.5, 1.5],
