@@ -177,6 +177,13 @@ export const fluxMutations: readonly Mutation[] = [
     '(side * lean - height * down) * inverse',
   ]),
   ...within('domain/flux/directed-map.ts', picture, ['read(weights, -dz / r, last)', 'read(weights, dz / r, last)']),
+  ...within(
+    'domain/flux/directed-map.ts',
+    shading,
+    ['((from + to) / 2 - 0.5) * element.length', '(0.5 - (from + to) / 2) * element.length'],
+    ['share * part', 'share'],
+    ['strength * through * sum', 'strength * sum'],
+  ),
   ...within('drawing/heat/map-picture.ts', picture, [
     'layerValue(grid, layer, at) >= threshold',
     'layerValue(grid, layer, at) > 2 * threshold',

@@ -2,8 +2,8 @@ import { relativeIntensity, solidAngleOf } from '#app/domain/flux/beam.ts'
 import type { Element, Emitter } from '#app/domain/flux/emitter.ts'
 import type { Grid } from '#app/domain/flux/grid.ts'
 import { nodeCount, nodesOf } from '#app/domain/flux/nodes.ts'
-import { clearStretches, type Obstruction } from '#app/domain/flux/shading.ts'
-import { dot, subtract, type Vec3 } from '#app/domain/vector.ts'
+import { spanSize, type Spans } from '#app/domain/flux/spans.ts'
+import { add, scale } from '#app/domain/vector.ts'
 
 /** Weight of radiation by the sine of its altitude above the horizontal, at 0 … 1 in equal steps; below: the first. */
 export type AltitudeWeights = Float64Array
@@ -40,15 +40,20 @@ function intensityOf({ beam }: Emitter): (u: number, v: number, w: number, r: nu
   }
 }
 
-/** Share of an element that reaches a point past the obstructions near a node, 1 where nothing is in the way. */
-function shareAt(stretches: readonly { from: number; to: number; transmittance: number }[], place: number): number {
-  return stretches.find(({ from, to }) => from <= place && place <= to)?.transmittance ?? 1
+/** The nodes of a stretch of an element, as x, y, z and share of the element's power, flat. */
+function nodesOfStretch(emitter: Emitter, element: Element, from: number, to: number, height: number): Float64Array {
+  const part = to - from
+  const centre = add(element.centre, scale(emitter.frame.u, ((from + to) / 2 - 0.5) * element.length))
+  const stretch = { ...element, centre, length: element.length * part }
+  const along = emitter.beam.kind === 'cosine' ? emitter.beam.along : 2
+  const nodes = nodesOf(emitter, stretch, nodeCount(height / stretch.length, along))
+  return Float64Array.from(nodes.flatMap(({ at, share }) => [...at, share * part]))
 }
 
 /**
- * Adds to each cell of the floor Σ weight(altitude) · E_n over the nodes of one element, W/m², E_n on a plane that faces
- * the node: what a body takes up whose area against radiation depends on its altitude only. As many nodes as the
- * height asks for, to 0.1 %; with obstructions each node counts by what is let through towards it.
+ * Adds to each cell of the floor Σ weight(altitude) · E_n over the nodes of what it sees of one element, W/m², E_n on a
+ * plane that faces the node: what a body takes up whose area against radiation depends on its altitude only. As many
+ * nodes as the height asks for, to 0.1 %.
  */
 export function addDirected(
   values: Float64Array,
@@ -56,36 +61,37 @@ export function addDirected(
   emitter: Emitter,
   element: Element,
   weights: AltitudeWeights,
-  obstructions: readonly Obstruction[],
+  { count, figures }: Spans,
 ): void {
   const { u, v, w } = emitter.frame
   const height = Math.abs(element.centre[2] - grid.z)
-  const along = emitter.beam.kind === 'cosine' ? emitter.beam.along : 2
-  const nodes = nodesOf(emitter, element, nodeCount(height / element.length, along))
   const strength = element.radiantPower / solidAngleOf(emitter.beam)
   const intensityTowards = intensityOf(emitter)
   const last = weights.length - 1
-  for (let at = 0; at < grid.inside.length; at++) {
-    if (grid.inside[at] !== 1) continue
-    const row = Math.floor(at / grid.columns)
-    const x = grid.x0 + (at - row * grid.columns + 0.5) * grid.cell
+  const stretches = new Map<string, Float64Array>()
+  for (let k = 0; k < spanSize * count; k += spanSize) {
+    const [row = 0, first = 0, end = 0, from = 0, to = 1, through = 1] = figures.subarray(k, k + spanSize)
+    const key = `${from} ${to}`
+    const nodes = stretches.get(key) ?? nodesOfStretch(emitter, element, from, to, height)
+    stretches.set(key, nodes)
     const y = grid.y0 + (row + 0.5) * grid.cell
-    const point: Vec3 = [x, y, grid.z]
-    const stretches = obstructions.length > 0 ? clearStretches(obstructions, emitter, element, point) : []
-    let sum = 0
-    for (const node of nodes) {
-      const dx = x - node.at[0]
-      const dy = y - node.at[1]
-      const dz = grid.z - node.at[2]
-      const alongBeam = dx * w[0] + dy * w[1] + dz * w[2]
-      if (!(alongBeam > 0)) continue
-      const acrossBeam = dx * v[0] + dy * v[1] + dz * v[2]
-      const square = dx * dx + dy * dy + dz * dz
-      const r = Math.sqrt(square)
-      const through = stretches.length > 0 ? shareAt(stretches, dot(subtract(node.at, element.centre), u)) : 1
-      const intensity = intensityTowards(dx * u[0] + dy * u[1] + dz * u[2], acrossBeam, alongBeam, r)
-      sum += (node.share * through * intensity * read(weights, -dz / r, last)) / square
+    for (let column = first, at = row * grid.columns + first; column < end; column++, at++) {
+      if (grid.inside[at] !== 1) continue
+      const x = grid.x0 + (column + 0.5) * grid.cell
+      let sum = 0
+      for (let n = 0; n < nodes.length; n += 4) {
+        const dx = x - (nodes[n] ?? 0)
+        const dy = y - (nodes[n + 1] ?? 0)
+        const dz = grid.z - (nodes[n + 2] ?? 0)
+        const alongBeam = dx * w[0] + dy * w[1] + dz * w[2]
+        if (!(alongBeam > 0)) continue
+        const acrossBeam = dx * v[0] + dy * v[1] + dz * v[2]
+        const square = dx * dx + dy * dy + dz * dz
+        const r = Math.sqrt(square)
+        const intensity = intensityTowards(dx * u[0] + dy * u[1] + dz * u[2], acrossBeam, alongBeam, r)
+        sum += ((nodes[n + 3] ?? 0) * intensity * read(weights, -dz / r, last)) / square
+      }
+      values[at] = (values[at] ?? 0) + strength * through * sum
     }
-    values[at] = (values[at] ?? 0) + strength * sum
   }
 }

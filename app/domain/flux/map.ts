@@ -4,7 +4,6 @@ import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { Grid } from '#app/domain/flux/grid.ts'
 import { addElement } from '#app/domain/flux/kernel.ts'
 import { seenOf } from '#app/domain/flux/shaded-cells.ts'
-import { emptySpans } from '#app/domain/flux/spans.ts'
 import { maxHeaters } from '#app/domain/layout/limits.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
 import { sameData } from '#app/domain/same-data.ts'
@@ -35,9 +34,11 @@ function layerOf(grid: Grid, emitter: Emitter, area: Area | null, obstructions: 
   const window = emitter.elements.length === 0 ? null : windowOf(grid, area ?? everywhere)
   const values = new Float32Array(window ? window.columns * window.rows : 0)
   if (!window) return { emitter, window, values }
-  const over = { ...emitter, elements: emitter.elements.filter(({ centre }) => centre[2] > window.z) }
-  const spans = seenOf(window, over, obstructions, area?.outline)
-  over.elements.forEach((element, i) => addElement(values, window, emitter, element, spans[i] ?? emptySpans()))
+  const seen = seenOf(window, emitter, obstructions, area?.outline)
+  emitter.elements.forEach((element, i) => {
+    const spans = seen[i]
+    if (spans) addElement(values, window, emitter, element, spans)
+  })
   return { emitter, window, values }
 }
 

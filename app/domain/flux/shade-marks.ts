@@ -124,6 +124,7 @@ export function markShadow(
   { solids, transmittance }: Obstruction,
   thing: number,
 ): void {
+  if (elements.length === 0) return
   const [width, length] = [widthOf(elements), Math.max(...elements.map((element) => element.length))]
   const height = Math.min(...elements.map(({ centre }) => centre[2]))
   const { silhouette, shadows } = marks

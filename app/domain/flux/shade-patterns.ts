@@ -2,7 +2,7 @@
  * What the things of a site hide of an element from a cell: the hidden share of each of the equal pieces along it. Cells
  * hold the number of a pattern; number 0 hides nothing.
  */
-export interface ShadePattern {
+interface ShadePattern {
   /** Hidden share of each piece along u, 0 … 1. */
   readonly hidden: readonly number[]
   /**

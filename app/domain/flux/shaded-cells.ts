@@ -37,9 +37,12 @@ function patternsOf(pieces: number): ShadePatterns {
   return made
 }
 
+/** A row without shadows. */
+const clear: RowMarks = { count: 0, columns: new Int32Array(), shadows: new Int32Array() }
+
 /**
- * What the cells see of each element of an emitter past the obstructions; its elements are all over the plane. Cells
- * whose centres lie outside the outline, when one is given, are left out.
+ * What the cells see of each element of an emitter past the obstructions. Cells whose centres lie outside the outline,
+ * when one is given, are left out. Elements that are not over the plane of the cells are seen whole.
  */
 export function seenOf(
   cells: Cells,
@@ -47,22 +50,23 @@ export function seenOf(
   obstructions: readonly Obstruction[],
   outline: readonly Vec2[] | null = null,
 ): readonly Spans[] {
-  const patterns = patternsOf(piecesOf(emitter.elements.length))
-  clearMarks(marks, emitter.elements.length, cells.rows)
+  const over = emitter.elements.filter(({ centre }) => centre[2] > cells.z)
+  const patterns = patternsOf(piecesOf(over.length))
+  clearMarks(marks, over.length, cells.rows)
   obstructions.forEach((obstruction, thing) => {
     const isOther = obstruction.heaterId !== emitter.id && obstruction.transmittance < 1
-    if (isOther) markShadow(marks, cells, emitter, patterns.pieces, obstruction, thing)
+    if (isOther) markShadow(marks, cells, { ...emitter, elements: over }, patterns.pieces, obstruction, thing)
   })
   const { silhouette } = marks
   if (outline) drawOutline(silhouette, cells, outline)
   const [firstRow, lastRow] = outline ? [silhouette.firstRow, silhouette.lastRow] : [0, cells.rows - 1]
-  return emitter.elements.map((_, i) => {
+  return emitter.elements.map((element) => {
+    const rows = marks.elements[over.indexOf(element)]
     const spans = emptySpans()
     for (let row = firstRow; row <= lastRow; row++) {
-      const places = marks.elements[i]?.[row]
       const first = outline ? firstIn(silhouette, cells, row) : 0
       const end = outline ? endIn(silhouette, cells, row) : cells.columns
-      if (places) sweepRow(patterns, places, row, first, end, spans)
+      sweepRow(patterns, rows?.[row] ?? clear, row, first, end, spans)
     }
     return spans
   })

@@ -5,6 +5,7 @@ import type { Emitter } from '#app/domain/flux/emitter.ts'
 import { gridOf, type Grid } from '#app/domain/flux/grid.ts'
 import { irradianceMap, type FluxMap, type Layer } from '#app/domain/flux/map.ts'
 import type { MapConditions, MapQuestion } from '#app/domain/flux/map-question.ts'
+import { seenOf } from '#app/domain/flux/shaded-cells.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
 import { sameData } from '#app/domain/same-data.ts'
 import { contoursOf, type HeatPicture } from '#app/drawing/heat/contours.ts'
@@ -73,7 +74,11 @@ function fieldMap(before: FieldMap | null, grid: Grid, question: MapQuestion, po
     const same = known.find((layer) => layer.emitter.id === emitter.id && sameData(layer.emitter, emitter))
     if (same) return same
     const values = new Float64Array(grid.columns * grid.rows)
-    for (const element of emitter.elements) addDirected(values, grid, emitter, element, weights, obstructions)
+    const seen = seenOf(grid, emitter, obstructions)
+    emitter.elements.forEach((element, i) => {
+      const spans = seen[i]
+      if (spans) addDirected(values, grid, emitter, element, weights, spans)
+    })
     return { emitter, values }
   })
   return { grid, posture, obstructions, layers }

@@ -1,9 +1,11 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
+import { addDirected } from '#app/domain/flux/directed-map.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import { gridOf } from '#app/domain/flux/grid.ts'
 import { irradianceAt, largestIrradianceAt, scalarIrradianceAt } from '#app/domain/flux/irradiance.ts'
 import { irradianceMap } from '#app/domain/flux/map.ts'
+import { seenOf } from '#app/domain/flux/shaded-cells.ts'
 import { clearStretches, obstructionsOf, seenShare, type Obstruction } from '#app/domain/flux/shading.ts'
 import { boxSolid, cylinderSolid, slabSolid, solidsOf } from '#app/domain/flux/solid.ts'
 import { heaterFrame } from '#app/domain/layout/body.ts'
@@ -247,6 +249,32 @@ describe('shade on a map', () => {
         return heaters.reduce((sum, each) => sum + irradianceAt(each, point, [0, 0, 1], things), 0)
       }).reduce((sum, value) => sum + value, 0) / total.length
     expect(Math.abs(mean / exactMean - 1)).toBeLessThan(0.005)
+  })
+
+  it('of what comes from all sides, too: a body whose area is the same from everywhere takes the scalar irradiance', () => {
+    const grid = gridOf(floor, 0.6, 0.1)
+    const evenly = new Float64Array(513).fill(1)
+    const fieldOf = (obstructions: readonly Obstruction[]) => {
+      const values = new Float64Array(grid.columns * grid.rows)
+      for (const heater of heaters) {
+        const spans = seenOf(grid, heater, obstructions)
+        heater.elements.forEach((element, i) => addDirected(values, grid, heater, element, evenly, spans[i]!))
+      }
+      return values
+    }
+    const [shaded, open] = [fieldOf(things), fieldOf([])]
+    let [same, near, changed] = [0, 0, 0]
+    shaded.forEach((value, at) => {
+      const point: Vec3 = [((at % grid.columns) + 0.5) * 0.1, (Math.floor(at / grid.columns) + 0.5) * 0.1, 0.6]
+      const exact = scalarIrradianceAt(heaters, point, things)
+      expect(Math.abs(open[at]! / scalarIrradianceAt(heaters, point) - 1)).toBeLessThan(0.002)
+      if (exact < open[at]! * 0.99) changed++
+      if (Math.abs(value - exact) < 0.02 * open[at]! + 0.05) same++
+      if (Math.abs(value - exact) < open[at]! / 12 + 0.05) near++
+    })
+    expect(changed / shaded.length).toBeGreaterThan(0.1)
+    expect(same / shaded.length).toBeGreaterThan(0.9)
+    expect(near / shaded.length).toBeGreaterThan(0.98)
   })
 
   it('so even on wide cells, behind a thing close under the element', () => {
