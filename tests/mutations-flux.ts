@@ -103,8 +103,8 @@ export const fluxMutations: readonly Mutation[] = [
   ...within(
     'domain/flux/kernel.ts',
     map,
-    ['frame.w[1] * ux - frame.w[0] * uy', 'frame.w[1] * ux + frame.w[0] * uy'],
-    ['(s.strength * f) / (h * h)', '(s.strength * f) / h'],
+    ['wy * ux - wx * uy', 'wy * ux + wx * uy'],
+    ['(strength * f) / (h * h)', '(strength * f) / h'],
     ['(x - x0 - 0.5 * cell) * uy', '(x0 + 0.5 * cell - x) * uy'],
     ['const low = (start + (0.5', 'const low = (start - (0.5'],
     ['const low = (place + (0.5', 'const low = (place - (0.5'],

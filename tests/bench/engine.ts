@@ -10,8 +10,9 @@ import { alongWalls, hung, largeSite, row, seats, terrace, things, variants } fr
 import { growthPlot, type Growth } from '#tests/bench/growth-plot.ts'
 
 /**
- * Speed of the engine as multiples of a limit that every machine has: 1,152,000 times one square root and one division,
- * measured between the cases. Median of the ratios of 15 rounds; time itself is shown beside it.
+ * Speed of the engine as multiples of a limit that every machine has, 1,152,000 times one square root and one division,
+ * or of a plain map; what a case is compared with runs before and after it each time. Median of the ratios of 15 rounds;
+ * time itself is shown beside it.
  */
 const rounds = 15
 let checksum = 0
@@ -41,17 +42,17 @@ interface Timing {
 /** Milliseconds that every case runs before it is measured: until the compiler has settled, as in a drag's second moment. */
 const warmUp = 400
 
-/** Median time of `work(round)` and its ratio to the limit, each round beside a limit of its own. */
-function measure(work: (round: number) => unknown, count = rounds): Timing {
+/** Median time of `work(round)` and its ratio to the reference, which runs before and after it in each round. */
+function measure(work: (round: number) => unknown, reference: () => unknown = limitLoop, count = rounds): Timing {
   const start = performance.now()
   for (let i = 0; i < 4 || performance.now() - start < warmUp; i++) {
-    limitLoop()
+    reference()
     work(-1 - (i % 50))
   }
   const pairs = Array.from({ length: count }, (_, i) => {
-    const before = timed(limitLoop)
+    const before = timed(reference)
     const ms = timed(() => work(i))
-    return { ms, ratio: ms / ((before + timed(limitLoop)) / 2) }
+    return { ms, ratio: ms / ((before + timed(reference)) / 2) }
   })
   return { ms: median(pairs.map(({ ms }) => ms)), ratio: median(pairs.map(({ ratio }) => ratio)) }
 }
@@ -107,10 +108,13 @@ interface Row {
 }
 
 function listRows(): Row[] {
-  const map = measure(whole(terrace(row(8))))
-  const walls = measure(whole(terrace(row(8, alongWalls))))
-  const ofMap = ({ ms, ratio }: Timing, unshaded = map) => ({ ms, ratio: ratio / unshaded.ratio, of: 'map' as const })
-  const ofLimit = (timing: Timing) => ({ ...timing, of: 'limit' as const })
+  const map = whole(terrace(row(8)))
+  const walls = whole(terrace(row(8, alongWalls)))
+  const ofLimit = (work: () => unknown) => ({ ...measure(work), of: 'limit' as const })
+  const ofMap = (work: (round: number) => unknown, reference = map) => ({
+    ...measure(work, reference),
+    of: 'map' as const,
+  })
   const obstructions = things(20)
   const layouts = variants(1000)
   const points = packedPoints(seats)
@@ -123,37 +127,35 @@ function listRows(): Row[] {
       must: 2.5,
       aim: 1.2,
     },
-    { name: 'drag: one of eight again, and the sum', ...ofMap(measure(dragging())), must: 1 / 4, aim: 1 / 6 },
+    { name: 'drag: one of eight again, and the sum', ...ofMap(dragging()), must: 1 / 4, aim: 1 / 6 },
     {
       name: '1,000 layouts × 60 seats × 16 elements, to 1e-4',
-      ...ofLimit(
-        measure(() => layouts.forEach((emitters) => (checksum += horizontalAtPoints(emitters, points)[0] ?? 0))),
-      ),
+      ...ofLimit(() => layouts.forEach((emitters) => (checksum += horizontalAtPoints(emitters, points)[0] ?? 0))),
       must: 6,
       aim: 3,
     },
-    { name: '100 × 60 m, 100 heaters, 0.25 m', ...ofMap(measure(whole(largeSite()))), must: 4, aim: 2 },
+    { name: '100 × 60 m, 100 heaters, 0.25 m', ...ofMap(whole(largeSite())), must: 4, aim: 2 },
     {
       name: 'the same, turned 0 and 90°, to that map',
-      ...ofMap(measure(whole(largeSite(alongWalls))), walls),
+      ...ofMap(whole(largeSite(alongWalls)), walls),
       must: 4,
       aim: 2,
     },
     {
       name: '20 obstacles',
-      ...ofMap(measure(whole(terrace(row(8), 24_000, { obstructions })))),
+      ...ofMap(whole(terrace(row(8), 24_000, { obstructions }))),
       must: 2,
       aim: 1.3,
     },
     {
       name: 'the same, turned 0 and 90°, to that map',
-      ...ofMap(measure(whole(terrace(row(8, alongWalls), 24_000, { obstructions }))), walls),
+      ...ofMap(whole(terrace(row(8, alongWalls), 24_000, { obstructions })), walls),
       must: 2,
       aim: 1.3,
     },
     {
       name: 'isolines and fill of 24,000 cells',
-      ...ofMap(measure(() => contoursOf(traced.values, traced.grid, isolineLevels, bandEdges, labelledLevels))),
+      ...ofMap(() => contoursOf(traced.values, traced.grid, isolineLevels, bandEdges, labelledLevels)),
       must: 1,
       aim: 1,
     },
@@ -163,7 +165,7 @@ function listRows(): Row[] {
 function listGrowths(): Growth[] {
   const over = (name: string, sizes: readonly number[], questionOf: (size: number) => MapQuestion): Growth => ({
     name,
-    points: sizes.map((size) => ({ size, ratio: measure(whole(questionOf(size)), 9).ratio })),
+    points: sizes.map((size) => ({ size, ratio: measure(whole(questionOf(size)), limitLoop, 9).ratio })),
   })
   const withElements = (count: number) =>
     row(8).map((emitter) => {

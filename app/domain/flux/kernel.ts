@@ -14,41 +14,25 @@ import { add, scale, type Vec3 } from '#app/domain/vector.ts'
  * f and G come from tables: within 0.02 % of the peak for elements at least a tenth as long as they are high. The loops
  * read them in place, and their constants from variables of their own: through a function they take half as long again.
  */
-interface Setting {
-  readonly cells: Cells
-  readonly ux: number
-  readonly uy: number
-  /** Horizontal part of the beam axis, across the element: w · (left of u); and its part downwards. */
-  readonly lean: number
-  readonly down: number
-  readonly x: number
-  readonly y: number
-  readonly height: number
-  readonly length: number
-  /** S·H, W/sr. */
-  readonly strength: number
-}
+type Setting = Float64Array
 
 const up: Vec3 = [0, 0, 1]
 const middle = farthest * entriesPerUnit
 const level = 1e-9
 
+/**
+ * An element and the cells in numbers, in the order in which the loops below take them apart. `lean` and `down`: the beam
+ * axis' part across the element, w · (left of u), and downwards; `strength`: S·H, W/sr. The loops are handed typed arrays
+ * alone: objects whose numbers are now whole, now not, make the compiler give up what it has made of a loop.
+ */
 function settingOf(cells: Cells, emitter: Emitter, solidAngle: number, element: Element): Setting {
-  const { frame } = emitter
-  const [ux, uy] = frame.u
-  const height = element.centre[2] - cells.z
-  return {
-    cells,
-    ux,
-    uy,
-    lean: frame.w[1] * ux - frame.w[0] * uy,
-    down: -frame.w[2],
-    x: element.centre[0],
-    y: element.centre[1],
-    height,
-    length: element.length,
-    strength: (element.radiantPower * height) / (solidAngle * element.length),
-  }
+  const { x0, y0, cell, columns, rows } = cells
+  const [[ux, uy], [wx, wy, wz]] = [emitter.frame.u, emitter.frame.w]
+  const [x, y, z] = element.centre
+  const height = z - cells.z
+  const [lean, down] = [wy * ux - wx * uy, -wz]
+  const strength = (element.radiantPower * height) / (solidAngle * element.length)
+  return Float64Array.of(x0, y0, cell, columns, rows, ux, uy, lean, down, x, y, height, element.length, strength)
 }
 
 /** G(b) − G(a) in closed form; a and b in entries of the table. */
@@ -64,25 +48,25 @@ interface Lines {
 
 /** So many lines, the first `left` of the element, the next each by `step` more. */
 function linesOf(s: Setting, across: Float64Array, count: number, left: number, step: number): Lines {
+  const [lean = 0, down = 0, , , height = 0, , strength = 0] = s.subarray(7)
   const inverse = new Float64Array(count)
   const factor = new Float64Array(count)
   for (let line = 0; line < count; line++) {
     const side = left + line * step
-    const h = Math.sqrt(side * side + s.height * s.height)
-    const c = ((side * s.lean + s.height * s.down) / h) * acrossEntries
+    const h = Math.sqrt(side * side + height * height)
+    const c = ((side * lean + height * down) / h) * acrossEntries
     if (!(c > 0)) continue
     const ci = Math.min(c | 0, acrossEntries)
     const f = (across[2 * ci] ?? 0) + (c - ci) * (across[2 * ci + 1] ?? 0)
     inverse[line] = 1 / h
-    factor[line] = (s.strength * f) / (h * h)
+    factor[line] = (strength * f) / (h * h)
   }
   return { inverse, factor }
 }
 
 /** Rows parallel to the element: along a span only G is read. */
 function addAlong(values: Float32Array, s: Setting, spans: Spans, tables: CosineTables, exponent: number): void {
-  const { x0, y0, cell, columns, rows } = s.cells
-  const { x, y, ux, length } = s
+  const [x0 = 0, y0 = 0, cell = 0, columns = 0, rows = 0, ux = 0, , , , x = 0, y = 0, , length = 0] = s
   const { along } = tables
   const { figures } = spans
   const { inverse, factor } = linesOf(s, tables.across, rows, (y0 + 0.5 * cell - y) * ux, cell * ux)
@@ -96,7 +80,7 @@ function addAlong(values: Float32Array, s: Setting, spans: Spans, tables: Cosine
     const kept = (factor[row] ?? 0) * (figures[k + 5] ?? 0)
     if (kept === 0) continue
     const end = (figures[k + 2] ?? 0) | 0
-    for (let i = (figures[k + 1] ?? 0) | 0, at = row * columns + i; i < end; i++, at++) {
+    for (let i = (figures[k + 1] ?? 0) | 0, at = (row * columns + i) | 0; i < end; i++, at++) {
       const a = low + i * step
       const b = high + i * step
       if (a >= 0 && b < lastEntry) {
@@ -114,8 +98,7 @@ function addAlong(values: Float32Array, s: Setting, spans: Spans, tables: Cosine
 
 /** Columns parallel to the element: along a span h and α change, and not the place along the element. */
 function addAcross(values: Float32Array, s: Setting, spans: Spans, tables: CosineTables, exponent: number): void {
-  const { x0, y0, cell, columns } = s.cells
-  const { x, y, uy, length } = s
+  const [x0 = 0, y0 = 0, cell = 0, columns = 0, , , uy = 0, , , x = 0, y = 0, , length = 0] = s
   const { along } = tables
   const { figures } = spans
   const { inverse, factor } = linesOf(s, tables.across, columns, (x - x0 - 0.5 * cell) * uy, -cell * uy)
@@ -126,7 +109,7 @@ function addAcross(values: Float32Array, s: Setting, spans: Spans, tables: Cosin
     const high = (place + (0.5 - (figures[k + 3] ?? 0)) * length) * entriesPerUnit
     const share = figures[k + 5] ?? 0
     const end = (figures[k + 2] ?? 0) | 0
-    for (let i = (figures[k + 1] ?? 0) | 0, at = row * columns + i; i < end; i++, at++) {
+    for (let i = (figures[k + 1] ?? 0) | 0, at = (row * columns + i) | 0; i < end; i++, at++) {
       const scale = inverse[i] ?? 0
       const a = low * scale + middle
       const b = high * scale + middle
@@ -146,13 +129,14 @@ function addAcross(values: Float32Array, s: Setting, spans: Spans, tables: Cosin
 
 /** Any turn: h, α and q anew for each cell. */
 function addTurned(values: Float32Array, s: Setting, spans: Spans, tables: CosineTables, exponent: number): void {
-  const { ux, uy, x, y, height, length, strength } = s
-  const { x0, y0, cell, columns } = s.cells
+  const [x0 = 0, y0 = 0, cell = 0, columns = 0, , ux = 0, uy = 0] = s
+  const [leaning = 0, down = 0, x = 0, y = 0, height = 0, length = 0, strength = 0] = s.subarray(7)
   const { across, along } = tables
   const { figures } = spans
   const square = height * height
-  const lean = s.lean * acrossEntries
-  const below = height * s.down * acrossEntries
+  const start = x0 + 0.5 * cell - x
+  const lean = leaning * acrossEntries
+  const below = height * down * acrossEntries
   for (let k = 0; k < spanSize * spans.count; k += spanSize) {
     const row = (figures[k] ?? 0) | 0
     const low = (0.5 - (figures[k + 4] ?? 0)) * length * entriesPerUnit
@@ -160,8 +144,8 @@ function addTurned(values: Float32Array, s: Setting, spans: Spans, tables: Cosin
     const kept = strength * (figures[k + 5] ?? 0)
     const end = (figures[k + 2] ?? 0) | 0
     const dy = y0 + (row + 0.5) * cell - y
-    for (let i = (figures[k + 1] ?? 0) | 0, at = row * columns + i; i < end; i++, at++) {
-      const dx = x0 + (i + 0.5) * cell - x
+    for (let i = (figures[k + 1] ?? 0) | 0, at = (row * columns + i) | 0; i < end; i++, at++) {
+      const dx = start + i * cell
       const side = dy * ux - dx * uy
       const inverse = 1 / Math.sqrt(side * side + square)
       const c = (side * lean + below) * inverse
@@ -214,7 +198,8 @@ export function addElement(values: Float32Array, cells: Cells, emitter: Emitter,
   } else {
     const tables = cosineTablesOf(beam)
     const setting = settingOf(cells, emitter, tables.solidAngle, element)
-    const fill = Math.abs(setting.uy) < level ? addAlong : Math.abs(setting.ux) < level ? addAcross : addTurned
+    const [ux, uy] = frame.u
+    const fill = Math.abs(uy) < level ? addAlong : Math.abs(ux) < level ? addAcross : addTurned
     fill(values, setting, spans, tables, beam.along)
   }
 }
