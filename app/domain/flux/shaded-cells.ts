@@ -27,6 +27,10 @@ const piecesOf = (elements: number): number => [6, 3, 2][elements - 1] ?? 2
 const mostPatterns = 4096
 
 const marks = emptyMarks()
+/** What hides something from the cell that a sweep has come to, the first so many in the order of the things. */
+const active: Hider[] = []
+let actives = 0
+
 const known = new Map<number, ShadePatterns>()
 
 function patternsOf(pieces: number): ShadePatterns {
@@ -50,18 +54,18 @@ export function seenOf(
   obstructions: readonly Obstruction[],
   outline: readonly Vec2[] | null = null,
 ): readonly Spans[] {
-  const over = emitter.elements.filter(({ centre }) => centre[2] > cells.z)
-  const patterns = patternsOf(piecesOf(over.length))
-  clearMarks(marks, over.length, cells.rows)
+  const over = { ...emitter, elements: emitter.elements.filter(({ centre }) => centre[2] > cells.z) }
+  const patterns = patternsOf(piecesOf(over.elements.length))
+  clearMarks(marks, over.elements.length, cells.rows)
   obstructions.forEach((obstruction, thing) => {
     const isOther = obstruction.heaterId !== emitter.id && obstruction.transmittance < 1
-    if (isOther) markShadow(marks, cells, { ...emitter, elements: over }, patterns.pieces, obstruction, thing)
+    if (isOther) markShadow(marks, cells, over, patterns.pieces, obstruction, thing)
   })
   const { silhouette } = marks
   if (outline) drawOutline(silhouette, cells, outline)
   const [firstRow, lastRow] = outline ? [silhouette.firstRow, silhouette.lastRow] : [0, cells.rows - 1]
   return emitter.elements.map((element) => {
-    const rows = marks.elements[over.indexOf(element)]
+    const rows = marks.elements[over.elements.indexOf(element)]
     const spans = emptySpans()
     for (let row = firstRow; row <= lastRow; row++) {
       const first = outline ? firstIn(silhouette, cells, row) : 0
@@ -98,10 +102,6 @@ function sweepRow(
   }
   if (end > first) addSeen(patterns, number, row, first, end, spans)
 }
-
-/** What hides something from the cell that the sweep has come to, the first so many in the order of the things. */
-const active: Hider[] = []
-let actives = 0
 
 /** Begins a shadow, or ends it. */
 function toggle({ hider, mask }: Shadow): void {
