@@ -333,6 +333,28 @@ describe('a photo that was deleted', () => {
   })
 })
 
+describe('a photo that could not be added', () => {
+  it('leaves no file behind', async () => {
+    const { files } = await import('#app/server/outside/storage.server.ts')
+    const keep = files.keep.bind(files)
+    const kept: string[] = []
+    const told = vi.spyOn(console, 'error').mockImplementation(() => undefined)
+    const failing = vi.spyOn(files, 'keep').mockImplementation(async (fileKey, bytes, type) => {
+      if (kept.length === 1) throw new Error('away')
+      kept.push(fileKey)
+      await keep(fileKey, bytes, type)
+    })
+    const before = await countPhotos()
+    const { status } = await send(await picture(200, 150))
+    failing.mockRestore()
+    told.mockRestore()
+    expect(status).toBe(503)
+    expect(kept).toHaveLength(1)
+    expect(await files.find(kept[0]!)).toBeNull()
+    expect(await countPhotos()).toBe(before)
+  })
+})
+
 describe('the picture of a photo', () => {
   it('is of its own organisation only', async () => {
     expect((await ask('GET', `/api/photos/${foreignPhoto}/picture.jpg`)).status).toBe(404)

@@ -53,29 +53,40 @@ export function addPhoto({ id: jobId, member }: OpenJob, sent: SentPhoto): Promi
       const { width, height, bytes, small } = sent.picture
       const id = randomUUID()
       const fileKey = `photos/${organisationId}/${id}.jpg`
-      await files.keep(fileKey, bytes, 'image/jpeg')
-      await files.keep(smallKey(fileKey), small, 'image/jpeg')
-      const [row] = await tx
-        .insert(photos)
-        .values({
-          organisationId,
-          id,
-          jobId,
-          name: sent.name,
-          width,
-          height,
-          fileKey,
-          revision: 1,
-          marks: noMarks,
-          updatedBy,
-        })
-        .returning(photoColumns)
-      if (!row) throw new Error('The new photo was not returned.')
-      await touchJob(tx, jobId)
-      await recordEvent(tx, member, { action: 'photo added', subject: `photos/${id}`, detail: { width, height } })
-      return { status: 201, body: photoOf(row), revision: 1 }
+      try {
+        await files.keep(fileKey, bytes, 'image/jpeg')
+        await files.keep(smallKey(fileKey), small, 'image/jpeg')
+        const [row] = await tx
+          .insert(photos)
+          .values({
+            organisationId,
+            id,
+            jobId,
+            name: sent.name,
+            width,
+            height,
+            fileKey,
+            revision: 1,
+            marks: noMarks,
+            updatedBy,
+          })
+          .returning(photoColumns)
+        if (!row) throw new Error('The new photo was not returned.')
+        await touchJob(tx, jobId)
+        await recordEvent(tx, member, { action: 'photo added', subject: `photos/${id}`, detail: { width, height } })
+        return { status: 201, body: photoOf(row), revision: 1 }
+      } catch (problem) {
+        await dropFiles(fileKey)
+        throw problem
+      }
     }),
   )
+}
+
+/** Takes away the files of a photo that was not added after all; what the store does not take away stays. */
+async function dropFiles(fileKey: string): Promise<void> {
+  const removed = await Promise.allSettled([fileKey, smallKey(fileKey)].map((key) => files.remove(key)))
+  for (const each of removed) if (each.status === 'rejected') console.error(`${fileKey} is still kept:`, each.reason)
 }
 
 const marksOf = ({ id, jobId, member }: OpenPhoto): Revisioned<PhotoMarks> => ({
