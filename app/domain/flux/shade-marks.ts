@@ -1,9 +1,10 @@
 import type { Cells } from '#app/domain/flux/cells.ts'
-import type { Element, Emitter } from '#app/domain/flux/emitter.ts'
+import type { Element } from '#app/domain/flux/emitter.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
 import { casterOf, drawSilhouette, emptySilhouette, endIn, firstIn, topOf } from '#app/domain/flux/silhouette.ts'
 import type { Caster, Silhouette } from '#app/domain/flux/silhouette.ts'
-import { add, scale } from '#app/domain/vector.ts'
+import type { Solid } from '#app/domain/flux/solid.ts'
+import { add, lengthOf, scale, subtract, type Vec3 } from '#app/domain/vector.ts'
 
 /** Where the shadows from a heater's elements begin and end in each row of cells. Room for as much as ever was asked. */
 export interface ShadeMarks {
@@ -50,32 +51,34 @@ export function clearMarks(marks: ShadeMarks, elements: number, rows: number): v
   marks.shadows.length = 0
 }
 
-/** How far a caster's shadow moves on the plane while its source moves by a length, m. */
-function travelOf(caster: Caster, z: number, height: number, length: number): number {
+/** How far a caster's shadow moves on the plane at z when a source at `height` moves by 1 m, m. */
+function travelOf(caster: Caster, z: number, height: number): number {
   const top = topOf(caster)
-  return (length * (top - z)) / (height - top)
+  return (top - z) / (height - top)
 }
 
 /** Distance between the first and the last element's centres, m. */
 function widthOf(elements: readonly Element[]): number {
-  const [first, last] = [elements[0]?.centre, elements.at(-1)?.centre]
-  return first && last ? Math.hypot(last[0] - first[0], last[1] - first[1], last[2] - first[2]) : 0
+  return lengthOf(subtract(elements.at(-1)?.centre ?? none, elements[0]?.centre ?? none))
 }
 
 /** A shadow that moves by no more than so many cells is taken as standing still. */
 const still = 1.5
 
-/** Into how many equal parts an element of so many pieces is cut for a shadow that moves by so many cells along it. */
-function partsFor(travel: number, pieces: number): number {
-  for (let parts = 1; parts < pieces; parts++) if (pieces % parts === 0 && travel <= parts * still) return parts
-  return pieces
+/** From piece `first` on as many as together are no longer than `most`, at least one; the piece after them. */
+function endOfPart(cuts: readonly number[], first: number, most: number): number {
+  let end = first + 1
+  while (end < cuts.length - 1 && (cuts[end + 1] ?? 1) - (cuts[first] ?? 0) <= most) end++
+  return end
 }
 
-/** An element halfway between the first and the last. */
-function middleOf(elements: readonly Element[]): Element[] {
-  const [first, last] = [elements[0], elements.at(-1)]
-  return first && last ? [{ ...first, centre: scale(add(first.centre, last.centre), 0.5) }] : []
+/** Halfway between the first and the last element's centres. */
+function middleOf(elements: readonly Element[]): Vec3 {
+  const [first, last] = [elements[0]?.centre ?? none, elements.at(-1)?.centre ?? none]
+  return scale(add(first, last), 0.5)
 }
+
+const none: Vec3 = [0, 0, 0]
 
 /** The same figures with as much room again. */
 function twice(figures: Int32Array): Int32Array {
@@ -100,48 +103,72 @@ function insert(row: RowMarks, column: number, shadow: number): void {
   shadows[i] = shadow
 }
 
-/** Marks the cells whose centres lie in a silhouette as those of a shadow. */
-function markCells(rows: RowMarks[], silhouette: Silhouette, cells: Cells, shadow: number): void {
+/** Marks the cells whose centres lie in the silhouette as hidden, by a solid, from the pieces of an element. */
+function markCells(marks: ShadeMarks, element: number, cells: Cells, shadow: Shadow): void {
+  const { silhouette, shadows } = marks
+  const rows = marks.elements[element]
   for (let row = silhouette.firstRow; row <= silhouette.lastRow; row++) {
     const first = firstIn(silhouette, cells, row)
     const end = endIn(silhouette, cells, row)
-    const marks = rows[row]
-    if (!marks || end <= first) continue
-    insert(marks, first, shadow)
-    insert(marks, end, shadow)
+    const places = rows?.[row]
+    if (!places || end <= first) continue
+    insert(places, first, shadows.length)
+    insert(places, end, shadows.length)
   }
+  shadows.push(shadow)
 }
 
-/**
- * Marks the cells that one thing shades from the elements of an emitter, all of which are over the plane and are taken as
- * so many pieces each. Things are marked in the order of their numbers.
- */
+/** Whether a solid throws the same shadow from all places on the elements, to the cell. */
+function standsStill(solid: Solid, cells: Cells, elements: readonly Element[]): boolean {
+  const lowest = Math.min(...elements.map(({ centre }) => centre[2]))
+  const longest = Math.max(...elements.map(({ length }) => length))
+  const caster = casterOf(solid, cells.z, lowest)
+  return !caster || travelOf(caster, cells.z, lowest) * Math.max(longest, widthOf(elements)) <= still * cells.cell
+}
+
+/** Marks the shadow that a solid throws from all elements as from the middle between them. */
+function markStanding(marks: ShadeMarks, cells: Cells, { elements, cuts }: Source, solid: Solid, hider: Hider): void {
+  const middle = middleOf(elements)
+  const caster = casterOf(solid, cells.z, middle[2])
+  if (!caster) return
+  drawSilhouette(marks.silhouette, cells, caster, middle)
+  cuts.forEach((own, i) => markCells(marks, i, cells, { hider, mask: (1 << (own.length - 1)) - 1 }))
+}
+
+/** Marks a solid's shadows from each element, from parts of it at a time from which they stand still. */
+function markMoving(marks: ShadeMarks, cells: Cells, { elements, cuts, u }: Source, solid: Solid, hider: Hider): void {
+  elements.forEach(({ centre, length }, i) => {
+    const caster = casterOf(solid, cells.z, centre[2])
+    if (!caster) return
+    const own = cuts[i] ?? []
+    const most = (still * cells.cell) / (travelOf(caster, cells.z, centre[2]) * length)
+    for (let first = 0, end = 0; first < own.length - 1; first = end) {
+      end = endOfPart(own, first, most)
+      const along = ((own[first] ?? 0) + (own[end] ?? 1)) / 2 - 0.5
+      drawSilhouette(marks.silhouette, cells, caster, add(centre, scale(u, along * length)))
+      markCells(marks, i, cells, { hider, mask: (1 << end) - (1 << first) })
+    }
+  })
+}
+
+/** A heater's elements, all over the plane of the cells, along u; each is cut into pieces: shares of its length, 0 … 1. */
+export interface Source {
+  readonly elements: readonly Element[]
+  readonly cuts: readonly (readonly number[])[]
+  readonly u: Vec3
+}
+
+/** Marks the cells that one thing shades from a source. Things are marked in the order of their numbers. */
 export function markShadow(
   marks: ShadeMarks,
   cells: Cells,
-  { elements, frame }: Emitter,
-  pieces: number,
+  source: Source,
   { solids, transmittance }: Obstruction,
   thing: number,
 ): void {
-  if (elements.length === 0) return
-  const [width, length] = [widthOf(elements), Math.max(...elements.map((element) => element.length))]
-  const height = Math.min(...elements.map(({ centre }) => centre[2]))
-  const { silhouette, shadows } = marks
+  if (source.elements.length === 0) return
   for (const solid of solids) {
-    const caster = casterOf(solid, cells.z, height)
-    if (!caster) continue
-    const hider: Hider = { thing, transmittance, hidden: 0 }
-    const parts = partsFor(travelOf(caster, cells.z, height, length) / cells.cell, pieces)
-    const isOne = parts === 1 && travelOf(caster, cells.z, height, width) <= still * cells.cell
-    const drawn = isOne ? middleOf(elements) : elements
-    drawn.forEach(({ centre, length: long }, i) => {
-      const rows = isOne ? marks.elements : marks.elements.slice(i, i + 1)
-      for (let part = 0; part < parts; part++) {
-        drawSilhouette(silhouette, cells, caster, add(centre, scale(frame.u, ((part + 0.5) / parts - 0.5) * long)))
-        for (const own of rows) markCells(own, silhouette, cells, shadows.length)
-        shadows.push({ hider, mask: ((1 << (pieces / parts)) - 1) << (part * (pieces / parts)) })
-      }
-    })
+    const mark = standsStill(solid, cells, source.elements) ? markStanding : markMoving
+    mark(marks, cells, source, solid, { thing, transmittance, hidden: 0 })
   }
 }

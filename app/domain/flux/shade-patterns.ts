@@ -1,6 +1,6 @@
 /**
- * What the things of a site hide of an element from a cell: the hidden share of each of the equal pieces along it. Cells
- * hold the number of a pattern; number 0 hides nothing.
+ * What the things of a site hide of an element from a cell: the hidden share of each of the pieces along it. Cells hold
+ * the number of a pattern; number 0 hides nothing.
  */
 interface ShadePattern {
   /** Hidden share of each piece along u, 0 … 1. */
@@ -16,38 +16,38 @@ interface ShadePattern {
 
 /** The patterns met so far and which follows from which behind another thing. */
 export interface ShadePatterns {
-  /** How many pieces the element is taken as. */
-  readonly pieces: number
+  /** Where the element is cut into pieces, with its ends: 0 … 1 along u. */
+  readonly cuts: readonly number[]
   readonly list: ShadePattern[]
   /** For what is not opaque: by number · masks + mask, for each transmittance. */
   readonly following: Map<number, Map<number, number>>
   readonly numbers: Map<string, number>
 }
 
-function patternOf(hidden: readonly number[]): ShadePattern {
+function patternOf(hidden: readonly number[], cuts: readonly number[]): ShadePattern {
   const pieces = hidden.length
   const seen: number[] = []
   for (let from = 0, piece = 1; piece <= pieces; piece++) {
     if (piece < pieces && hidden[piece] === hidden[from]) continue
     const share = 1 - (hidden[from] ?? 0)
-    if (share > 0) seen.push(from / pieces, piece / pieces, share)
+    if (share > 0) seen.push(cuts[from] ?? 0, cuts[piece] ?? 1, share)
     from = piece
   }
   return { hidden, seen, opaque: new Int32Array(1 << pieces).fill(-1) }
 }
 
-/** Patterns of an element of so many pieces, with only number 0. */
-export function emptyPatterns(pieces: number): ShadePatterns {
-  const hidden = Array.from({ length: pieces }, () => 0)
-  return { pieces, list: [patternOf(hidden)], following: new Map(), numbers: new Map([[hidden.join(), 0]]) }
+/** Patterns of an element that is cut there, with only number 0. */
+export function emptyPatterns(cuts: readonly number[]): ShadePatterns {
+  const hidden = cuts.slice(1).map(() => 0)
+  return { cuts, list: [patternOf(hidden, cuts)], following: new Map(), numbers: new Map([[hidden.join(), 0]]) }
 }
 
-function numberOf({ list, numbers }: ShadePatterns, hidden: readonly number[]): number {
+function numberOf({ list, numbers, cuts }: ShadePatterns, hidden: readonly number[]): number {
   const key = hidden.join()
   const known = numbers.get(key)
   if (known !== undefined) return known
   numbers.set(key, list.length)
-  return list.push(patternOf(hidden)) - 1
+  return list.push(patternOf(hidden, cuts)) - 1
 }
 
 function behind(patterns: ShadePatterns, { hidden }: ShadePattern, mask: number, transmittance: number): number {

@@ -16,12 +16,20 @@ import type { Vec2 } from '#app/domain/vector.ts'
 
 /**
  * Shade on a map. Each obstruction's silhouettes from a heater mark the cells in its shade. Where the shadow moves along
- * the elements these are taken in pieces, six for a heater of up to three elements. Each cell is then given only what
- * it sees: cells behind a thing from all pieces cost nothing, those at its rim the stretches that are left.
+ * the elements these are taken in pieces, about six for a whole heater: those of several elements are cut at places
+ * between one another's, so that together they tell sixths. Each cell is then given only what it sees: cells behind a
+ * thing from all pieces cost nothing, those at its rim the stretches that are left.
  */
 
 /** Pieces of each element, by how many there are. */
 const piecesOf = (elements: number): number => [6, 3, 2][elements - 1] ?? 2
+
+/** Where element `i` of so many is cut, with its ends: 0 … 1. */
+function cutsOf(i: number, elements: number): number[] {
+  const pieces = piecesOf(elements)
+  const places = Array.from({ length: pieces }, (_, k) => (k + i / elements) / pieces)
+  return [0, ...places.filter((place) => place > 0), 1]
+}
 
 /** Patterns above which they are begun anew. */
 const mostPatterns = 4096
@@ -31,16 +39,18 @@ const marks = emptyMarks()
 const active: Hider[] = []
 let actives = 0
 
-const known = new Map<number, ShadePatterns>()
+/** The patterns of each element, by how many there are. */
+const known = new Map<number, ShadePatterns[]>()
 
-function patternsOf(pieces: number): ShadePatterns {
-  const found = known.get(pieces)
-  if (found && found.list.length < mostPatterns) return found
-  const made = emptyPatterns(pieces)
-  known.set(pieces, made)
+function patternsOf(elements: number): readonly ShadePatterns[] {
+  const found = known.get(elements)
+  if (found?.every(({ list }) => list.length < mostPatterns)) return found
+  const made = Array.from({ length: elements }, (_, i) => emptyPatterns(cutsOf(i, elements)))
+  known.set(elements, made)
   return made
 }
 
+const whole = emptyPatterns([0, 1])
 /** A row without shadows. */
 const clear: RowMarks = { count: 0, columns: new Int32Array(), shadows: new Int32Array() }
 
@@ -54,23 +64,25 @@ export function seenOf(
   obstructions: readonly Obstruction[],
   outline: readonly Vec2[] | null = null,
 ): readonly Spans[] {
-  const over = { ...emitter, elements: emitter.elements.filter(({ centre }) => centre[2] > cells.z) }
-  const patterns = patternsOf(piecesOf(over.elements.length))
-  clearMarks(marks, over.elements.length, cells.rows)
+  const elements = emitter.elements.filter(({ centre }) => centre[2] > cells.z)
+  const patterns = patternsOf(elements.length)
+  const source = { elements, cuts: patterns.map(({ cuts }) => cuts), u: emitter.frame.u }
+  clearMarks(marks, elements.length, cells.rows)
   obstructions.forEach((obstruction, thing) => {
     const isOther = obstruction.heaterId !== emitter.id && obstruction.transmittance < 1
-    if (isOther) markShadow(marks, cells, over, patterns.pieces, obstruction, thing)
+    if (isOther) markShadow(marks, cells, source, obstruction, thing)
   })
   const { silhouette } = marks
   if (outline) drawOutline(silhouette, cells, outline)
   const [firstRow, lastRow] = outline ? [silhouette.firstRow, silhouette.lastRow] : [0, cells.rows - 1]
   return emitter.elements.map((element) => {
-    const rows = marks.elements[over.elements.indexOf(element)]
     const spans = emptySpans()
+    const own = elements.indexOf(element)
+    const rows = marks.elements[own]
     for (let row = firstRow; row <= lastRow; row++) {
       const first = outline ? firstIn(silhouette, cells, row) : 0
       const end = outline ? endIn(silhouette, cells, row) : cells.columns
-      sweepRow(patterns, rows?.[row] ?? clear, row, first, end, spans)
+      sweepRow(patterns[own] ?? whole, rows?.[row] ?? clear, row, first, end, spans)
     }
     return spans
   })

@@ -34,6 +34,9 @@ export type Caster =
 
 type Cylinder = Extract<Caster, { kind: 'cylinder' }>
 
+/** What reaches less far over the plane throws no shadow, m. */
+const thinnest = 1e-9
+
 /** Kept free below the source, as a share of its height over the plane: a shadow from there would run to infinity. */
 const headroom = 0.01
 
@@ -65,7 +68,7 @@ const pairs = (points: readonly Vec3[]): Edge[] =>
 export function casterOf(solid: Solid, z: number, height: number): Caster | null {
   const bottom = Math.max(solid.low[2], z)
   const top = Math.min(solid.high[2], height - headroom * (height - z))
-  if (top <= bottom) return null
+  if (top - bottom < thinnest) return null
   if (solid.kind === 'cylinder') {
     return { kind: 'cylinder', x: solid.centre[0], y: solid.centre[1], radius: solid.radius, bottom, top }
   }

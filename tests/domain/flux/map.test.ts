@@ -166,6 +166,20 @@ describe('what has no meaning', () => {
   const grid = gridOf(floor, 0.6, 0.5)
   const heater = line(cosine(2, 1), { at: [1, 1, 2] })
 
+  it.each([
+    ['at', 0.6],
+    ['under', 0.5],
+  ])('an element %s the plane adds nothing to what one over it gives, whichever way it is tilted', (_, height) => {
+    const grid = gridOf(floor, 0.6, 0.2)
+    const over = line(cosine(2, 1.4), { at: [3, 2, 2.4], length: 0.6 })
+    for (const tiltDeg of [0, 120, 180]) {
+      for (const turnDeg of [0, 90, 37]) {
+        const low = { ...line(cosine(2, 1.4), { at: [2, 3, height], length: 0.6, tiltDeg, turnDeg }), id: 'low' }
+        expect(irradianceMap(null, grid, [over, low]).total).toEqual(irradianceMap(null, grid, [over]).total)
+      }
+    }
+  })
+
   it('more than 200 heaters are refused with the limit', () => {
     expect(() =>
       irradianceMap(

@@ -347,6 +347,141 @@ describe('shade on a map', () => {
     expect(halved).toBeGreaterThan(20)
   }
 
+  /** A heater of so many like elements side by side at (2.5, 2), `apart` from one another and each `higher` by so much. */
+  function sideBySide(count: number, apart: number, { length = 0.62, higher = 0 } = {}): Emitter {
+    const one = line(cosine(1.7, 1.2), { at: [2.5, 2, 2.4], length, power: 3000 })
+    const elements = Array.from({ length: count }, (_, i) => {
+      const off = i - (count - 1) / 2
+      return { length, radiantPower: 3000 / count, centre: [2.5, 2 + off * apart, 2.4 + off * higher] as Vec3 }
+    })
+    return { ...one, id: 'a', elements }
+  }
+
+  /** Of the cells over 20 W/m²: how many are shaded, and how many differ by more than a twelfth and 1 % of the open value. */
+  function compareShade(heater: Emitter, thing: Obstruction) {
+    const grid = gridOf(floor, 0.6, 0.05)
+    const { total } = irradianceMap(null, grid, [heater], [thing])
+    const open = irradianceMap(null, grid, [heater]).total
+    const sums = { cells: 0, shaded: 0, off: 0, worst: 0 }
+    /** What is taken away, and where its centre is, m. */
+    const taken = { map: [0, 0, 0], exact: [0, 0, 0] }
+    total.forEach((value, at) => {
+      if (open[at]! < 20) return
+      const [column, row] = [at % grid.columns, Math.floor(at / grid.columns)]
+      const point: Vec3 = [(column + 0.5) * 0.05, (row + 0.5) * 0.05, 0.6]
+      const exact = irradianceAt(heater, point, [0, 0, 1], [thing])
+      const error = Math.abs(value - exact) / open[at]!
+      sums.cells++
+      if (exact < 0.95 * open[at]!) sums.shaded++
+      if (error > 1 / 12 + 0.01) sums.off++
+      sums.worst = Math.max(sums.worst, error)
+      for (const [into, left] of [
+        [taken.map, open[at]! - value],
+        [taken.exact, open[at]! - exact],
+      ] as const) {
+        into[0]! += left
+        into[1]! += left * point[0]
+        into[2]! += left * point[1]
+      }
+    })
+    const centreOf = ([sum, x, y]: number[]) => [x! / sum!, y! / sum!] as const
+    return { ...sums, map: centreOf(taken.map), exact: centreOf(taken.exact) }
+  }
+
+  const whole = (solid: Obstruction['solids'][number], transmittance = 0): Obstruction => ({
+    id: 'thing',
+    heaterId: null,
+    transmittance,
+    solids: [solid],
+  })
+  const boardSolid = slabSolid([-2, 2], [9, 18], 0, 1.95, 2)
+
+  it.each([
+    [1, 0.06],
+    [2, 0.06],
+    [3, 0.06],
+    [4, 0.06],
+    [2, 0.3],
+    [3, 0.2],
+  ])('of %d elements %f m apart, to half a sixth of them all', (count, apart) => {
+    const heater = sideBySide(count, apart)
+    for (const [thing, offMost, worstMost] of [
+      [whole(boardSolid), 0.02, 0.11],
+      [whole(cylinderSolid([3.8, 2.4], 1.2, 1.9, 2.1), 0.2), 0.03, 0.2],
+      // Narrower than a piece: both its edges fall somewhere within one.
+      [whole(cylinderSolid([3, 2.2], 0.2, 1.5, 1.8)), 0.03, 0.3],
+      [whole(cylinderSolid([3.2, 2.2], 0.05, 0, 2.6)), 0.03, 0.2],
+    ] as const) {
+      const { cells, shaded, off, worst } = compareShade(heater, thing)
+      expect(shaded / cells).toBeGreaterThan(0.05)
+      expect(off / cells).toBeLessThan(offMost)
+      expect(worst).toBeLessThan(worstMost)
+    }
+  })
+
+  const apart = { length: 0.1 }
+  const beside = [[3.2, 2.5], [1, 0.6], 25] as const
+  it.each([
+    [
+      'still lengthwise, moving from element to element',
+      sideBySide(2, 0.5, apart),
+      slabSolid(...beside, 1.2, 1.25),
+      [0.03, 0.01],
+    ],
+    [
+      'still: from the middle of the elements',
+      sideBySide(2, 0.5, apart),
+      slabSolid(...beside, 0.7, 0.74),
+      [0.03, 0.01],
+    ],
+    // Close to the element a piece's shadow moves by metres: the bounds are as wide.
+    ['close under the elements', sideBySide(2, 0.06), slabSolid([2.5, 2], [0.3, 0.3], 25, 2.28, 2.33), [0.25, 0.06]],
+    [
+      'of a thing between two elements’ heights',
+      sideBySide(2, 0.2, { higher: 0.14 }),
+      slabSolid(...beside, 2.3, 2.39),
+      [0.03, 0.08],
+    ],
+  ] as const)('a shadow lies where it has to: %s', (_, heater, solid, [offMost, centreMost]) => {
+    const { cells, shaded, off, map, exact } = compareShade(heater, whole(solid))
+    expect(shaded / cells).toBeGreaterThan(0.03)
+    expect(off / cells).toBeLessThan(offMost)
+    expect(Math.hypot(map[0] - exact[0], map[1] - exact[1])).toBeLessThan(centreMost)
+  })
+
+  it('the pieces of one thing count once, its own body not at all', () => {
+    const grid = gridOf(floor, 0.6, 0.1)
+    const heater = sideBySide(2, 0.06)
+    const outline: Vec2[] = [
+      [1, 0.5],
+      [4, 0.5],
+      [4, 3.5],
+      [1, 3.5],
+    ]
+    const cloth = obstruction({ kind: 'prism', outline: outline as [number, number][], z: [2, 2.1] }, 0.4)
+    expect(cloth.solids.length).toBe(2)
+    const totalOf = (things: Obstruction[]) => irradianceMap(null, grid, [heater], things).total
+    const [open, under] = [totalOf([]), totalOf([cloth])]
+    let covered = 0
+    under.forEach((value, at) => {
+      expect(value).toBeGreaterThan(0.4 * open[at]! - 0.01)
+      if (value < 0.41 * open[at]!) covered++
+    })
+    expect(covered / under.length).toBeGreaterThan(0.5)
+    const body = whole(slabSolid([2.5, 2], [0.7, 0.3], 0, 2.3, 2.38))
+    expect(totalOf([{ ...body, heaterId: 'a' }])).toEqual(open)
+    expect(Math.max(...totalOf([{ ...body, heaterId: 'b' }]))).toBeLessThan(0.8 * Math.max(...open))
+  })
+
+  it('a thing that ends in the plane throws none', () => {
+    const grid = gridOf(floor, 0.41, 0.1)
+    const heater = sideBySide(1, 0)
+    // 0.37 m + 0.04 m is a little more than 0.41 m in binary figures.
+    const table = whole(slabSolid([2.5, 2], [1, 1], 0, 0.37, 0.37 + 0.04))
+    expect(table.solids[0]!.high[2]).toBeGreaterThan(0.41)
+    expect(irradianceMap(null, grid, [heater], [table]).total).toEqual(irradianceMap(null, grid, [heater]).total)
+  })
+
   it('on a large site, too, where heaters are reckoned only so far', () => {
     const far: Vec2[] = [
       [-50, -30],
