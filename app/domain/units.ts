@@ -85,6 +85,7 @@ const quantities = {
     metric: unit('W/m²', 1, 0, ['w/m2', 'w/m^2']),
     imperial: unit('W/ft²', 1 / (foot * foot), 1, ['w/ft2', 'w/ft^2', 'w/sq ft']),
   },
+  area: { metric: unit('m²', 1, 1, ['m2']), imperial: unit('ft²', foot * foot, 0, ['ft2', 'sq ft']) },
   speed: { metric: unit('m/s', 1, 1, ['mps']), imperial: unit('mph', 0.44704, 1, ['mi/h']) },
   mass: { metric: unit('kg', 1, 1), imperial: unit('lb', 0.45359237, 1, ['lbs']) },
   force: { metric: unit('N', 1, 0), imperial: unit('lbf', 4.4482216152605, 0, ['lb']) },
@@ -98,7 +99,7 @@ const quantities = {
   },
 } as const satisfies Record<string, Record<DisplayUnits, Unit>>
 
-/** Quantities other than length; SI side: °C, K, W/m², m/s, kg, N, and rad for a slope. */
+/** Quantities other than length; SI side: °C, K, W/m², m², m/s, kg, N, and rad for a slope. */
 export type Quantity = keyof typeof quantities
 
 /** A figure of the domain in the person's unit. */

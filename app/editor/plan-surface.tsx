@@ -67,7 +67,8 @@ interface PlanSurfaceProps {
 const pen = screenPen('dusk')
 /** A pointer anywhere in the frame is on the plan, wherever the drawing is shifted to. */
 const far = { x: -20_000, y: -20_000, width: 40_000, height: 40_000 }
-const narrowMargins: PlanMargins = { top: 26, right: 28, bottom: 46, left: 28 }
+/** On small screens, without names, with the buttons for the size at the left. */
+const narrowMargins: PlanMargins = { top: 26, right: 28, bottom: 46, left: 54 }
 /** The same with room for the marks of sections. */
 const cutMargins: PlanMargins = { top: 60, right: 28, bottom: 60, left: 54 }
 

@@ -17,19 +17,30 @@ interface SidePanelsProps {
  */
 export const SidePanels = memo(function SidePanels({ subject, room, tools, sections }: SidePanelsProps) {
   if (sections) return <TouchSheet {...{ subject, tools, sections }} />
-  if (room === 'phone')
-    return (
-      <div className="bg-paper-raised">
-        <p className="border-b border-rule bg-amber-wash px-4.5 py-2.5 text-amber">
-          Placing needs a tablet. Here the layout can be read.
-        </p>
-        <Explained subject={subject} />
-        <Findings subject={subject} />
-        <Seats subject={subject} />
-      </div>
-    )
+  if (room === 'phone') return <Below subject={subject} />
   return <Beside subject={subject} />
 })
+
+/** The list of a phone; a seat's explanation comes into view when it opens. */
+function Below({ subject }: { subject: SideSubject }) {
+  const opened = useRef<HTMLDivElement>(null)
+  const { explained } = subject
+  useEffect(() => {
+    if (explained) opened.current?.scrollIntoView({ block: 'start' })
+  }, [explained])
+  return (
+    <div className="bg-paper-raised">
+      <p className="border-b border-rule bg-amber-wash px-4.5 py-2.5 text-amber">
+        Placing needs a tablet. Here the layout can be read.
+      </p>
+      <div ref={opened}>
+        <Explained subject={subject} />
+      </div>
+      <Findings subject={subject} />
+      <Seats subject={subject} />
+    </div>
+  )
+}
 
 /** The column of a desk; what opens at its top comes into view. */
 function Beside({ subject }: { subject: SideSubject }) {

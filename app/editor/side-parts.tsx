@@ -141,9 +141,14 @@ function NothingChosen({ subject }: PartProps) {
         {layout.heaters.length === 0 ? 'No heaters yet' : 'No heater chosen'}
       </h2>
       <p className="mt-1 text-ink-2">
-        {layout.heaters.length === 0
-          ? 'Place one on a beam to see the map.'
-          : 'Choose one on the plan or in the list below; Shift adds another, a rectangle takes several.'}
+        {layout.heaters.length === 0 ? (
+          'Place one on a beam to see the map.'
+        ) : (
+          <>
+            Choose one on the plan or in the list
+            <span className="pointer-coarse:hidden">; Shift adds another, a rectangle takes several</span>.
+          </>
+        )}
       </p>
       {!readOnly && (
         <details className="mt-1">

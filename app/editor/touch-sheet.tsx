@@ -27,7 +27,7 @@ export function TouchSheet({ subject, tools, sections }: TouchSheetProps) {
   const tabs: { value: SheetTab; label: ReactNode; panel: ReactNode }[] = [
     {
       value: 'heater',
-      label: lead ? `Heater ${lead.id}` : 'Heater',
+      label: subject.explained ? `Seat ${subject.explained}` : lead ? `Heater ${lead.id}` : 'Heater',
       panel: pad(
         <>
           {lead && editor.state.selected.length === 1 && (
@@ -60,7 +60,7 @@ export function TouchSheet({ subject, tools, sections }: TouchSheetProps) {
     { value: 'map', label: 'Map', panel: pad(tools) },
     ...(readOnly ? [] : [{ value: 'add' as const, label: 'Add', panel: pad(<Placing subject={subject} />) }]),
   ]
-  const shown: SheetTab = subject.placing ? 'add' : tab
+  const shown: SheetTab = subject.placing ? 'add' : subject.explained ? 'heater' : tab
   return (
     <div className="flex-none border-t border-rule bg-paper-raised">
       <Tabs
@@ -69,6 +69,7 @@ export function TouchSheet({ subject, tools, sections }: TouchSheetProps) {
         value={shown}
         onChange={(next) => {
           subject.onPlacing(next === 'add')
+          if (next !== 'heater') subject.onExplain(null)
           sections.onWanted(next === 'section')
           setTab(next)
         }}

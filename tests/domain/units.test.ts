@@ -221,6 +221,7 @@ describe('other quantities', () => {
     ['temperature', -40, -40],
     ['temperature difference', 10, 18],
     ['irradiance', 1000, 92.90304],
+    ['area', 0.09290304, 1],
     ['speed', 0.44704, 1],
     ['mass', 0.45359237, 1],
     ['force', 4.4482216152605, 1],
@@ -237,6 +238,8 @@ describe('other quantities', () => {
     expect(formatQuantity(8, 'temperature', 'imperial')).toBe('46.4 °F')
     expect(formatQuantity(305, 'irradiance', 'metric')).toBe('305 W/m²')
     expect(formatQuantity(305, 'irradiance', 'imperial')).toBe('28.3 W/ft²')
+    expect(formatQuantity(5.58, 'area', 'metric')).toBe('5.6 m²')
+    expect(formatQuantity(92.90304, 'area', 'imperial')).toBe('1000 ft²')
     expect(formatQuantity(Math.PI / 36, 'slope', 'metric')).toBe('5.0°')
     expect(formatQuantity(Math.atan(0.1), 'slope', 'imperial')).toBe('1.20 in/ft')
     expect(formatQuantity(Number.NaN, 'mass', 'metric')).toBe('–')

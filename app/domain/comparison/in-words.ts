@@ -2,7 +2,7 @@ import { countByModel, type ComparedVariant } from '#app/domain/comparison/compa
 import { spacingsOf } from '#app/domain/comparison/spacings.ts'
 import type { ComparisonTerms } from '#app/domain/comparison/what-differs.ts'
 import { countOutcome, groupFindings } from '#app/domain/rules/finding-groups.ts'
-import { formatLength } from '#app/domain/units.ts'
+import { formatLength, formatQuantity } from '#app/domain/units.ts'
 
 /** What differs between two variants in short sentences; `other` is told by how it departs from `from`. */
 export function differencesInWords(from: ComparedVariant, other: ComparedVariant, terms: ComparisonTerms): string[] {
@@ -71,9 +71,7 @@ function overlap(from: ComparedVariant, other: ComparedVariant, terms: Compariso
   if (from.overlap === null || other.overlap === null) return null
   const more = other.overlap - from.overlap
   if (Math.abs(more) < 0.05) return null
-  const size =
-    terms.units === 'metric' ? `${Math.abs(more).toFixed(1)} m²` : `${Math.abs(more / 0.3048 ** 2).toFixed(0)} ft²`
-  return `Overlap ${size} ${more > 0 ? 'larger' : 'smaller'}.`
+  return `Overlap ${formatQuantity(Math.abs(more), 'area', terms.units)} ${more > 0 ? 'larger' : 'smaller'}.`
 }
 
 function power({ totals: before }: ComparedVariant, { totals: after }: ComparedVariant): string | null {

@@ -120,7 +120,7 @@ function headMaximum({ totals }: ComparedVariant): Value {
 
 function overlap({ overlap: area }: ComparedVariant, { units }: ComparisonTerms): Value {
   if (area === null) return missing
-  return said(units === 'metric' ? `${area.toFixed(1)} m²` : `${(area / 0.3048 ** 2).toFixed(0)} ft²`)
+  return said(formatQuantity(area, 'area', units))
 }
 
 function feelsLike({ warmth }: ComparedVariant, { units }: ComparisonTerms): Value {

@@ -1,13 +1,7 @@
 import type { Vec2 } from '#app/domain/vector.ts'
 import type { Pen } from '#app/drawing/pen.ts'
-import { textWidth } from '#app/drawing/text/widths.ts'
+import { chainFigures, type ChainFigure, type ChainStop } from '#app/drawing/plan/chain-figures.ts'
 import { Words } from '#app/drawing/text/words.tsx'
-
-/** A place on a chain of dimensions: where it is on the drawing, px along the chain, and the site's coordinate, m. */
-export interface ChainStop {
-  readonly px: number
-  readonly metres: number
-}
 
 /** A chain of dimensions, level (at = y px) or upright (at = x px), its stops in rising px. */
 export interface DimensionChainProps {
@@ -16,12 +10,14 @@ export interface DimensionChainProps {
   readonly stops: readonly ChainStop[]
   readonly text: (metres: number) => string
   readonly pen: Pen
+  /** The drawing's size along the chain, px; figures stay within it. */
+  readonly length?: number
 }
 
 const rounded = (value: number): number => Math.round(value * 10) / 10
 
-/** Dimensions one after another: a line, 45° ticks, the figure above each, beside the chain where it is too short. */
-export function DimensionChain({ direction, at, stops, text, pen }: DimensionChainProps) {
+/** Dimensions one after another: a line, 45° ticks, the figure above each, elsewhere where it is too short. */
+export function DimensionChain({ direction, at, stops, text, pen, length }: DimensionChainProps) {
   const point = (px: number, aside: number): Vec2 => (direction === 'level' ? [px, at + aside] : [at + aside, px])
   const first = stops[0]
   const last = stops.at(-1)
@@ -42,17 +38,9 @@ export function DimensionChain({ direction, at, stops, text, pen }: DimensionCha
       {stops.map((stop) => (
         <Tick key={stop.px} at={point(stop.px, 0)} direction={direction} pen={pen} />
       ))}
-      {stops.slice(1).map((stop, i) => {
-        const before = stops[i] ?? stop
-        const isEnd = i === 0 ? 'first' : i === stops.length - 2 ? 'last' : null
-        return (
-          <Figure
-            key={stop.px}
-            {...{ direction, at, before, stop, isEnd, pen }}
-            figure={text(Math.abs(stop.metres - before.metres))}
-          />
-        )
-      })}
+      {chainFigures(stops, text, pen, length).map((figure) => (
+        <Figure key={`${figure.place} ${figure.at}`} {...{ direction, at, figure, pen }} />
+      ))}
     </g>
   )
 }
@@ -85,46 +73,27 @@ function Tick({ at: [x, y], direction, pen }: { at: Vec2; direction: 'level' | '
 interface FigureProps {
   readonly direction: 'level' | 'upright'
   readonly at: number
-  readonly before: ChainStop
-  readonly stop: ChainStop
-  readonly isEnd: 'first' | 'last' | null
-  readonly figure: string
+  readonly figure: ChainFigure
   readonly pen: Pen
 }
 
-/** The figure of one dimension: above its line; outside an end or below the line where the dimension is too short. */
-function Figure({ direction, at, before, stop, isEnd, figure, pen }: FigureProps) {
-  const room = stop.px - before.px
-  const width = textWidth(figure, pen.text, 500)
-  const fits = width + 6 * pen.k <= room
+function Figure({ direction, at, figure: { text, place, at: along }, pen }: FigureProps) {
   const level = direction === 'level'
-  const style = { size: pen.text, colour: pen.colours.line, halo: pen.colours.halo, haloWidth: 3 * pen.k }
-  const middle = (before.px + stop.px) / 2
-  if (fits || isEnd === null) {
-    const aside = fits ? -4 * pen.k : pen.text + 1.5 * pen.k
-    return (
-      <Words
-        x={level ? middle : at + aside}
-        y={level ? at + aside : middle}
-        turn={level ? 0 : -90}
-        anchor="middle"
-        {...style}
-      >
-        {figure}
-      </Words>
-    )
-  }
-  const outside = isEnd === 'first' ? before.px - 8 * pen.k : stop.px + 8 * pen.k
-  const anchor = (isEnd === 'first') === level ? 'end' : 'start'
+  const aside = { above: -4 * pen.k, below: pen.text + 1.5 * pen.k, before: pen.text * 0.35, after: pen.text * 0.35 }
+  const across = at + aside[place]
+  const anchor = place === 'before' || place === 'after' ? ((place === 'before') === level ? 'end' : 'start') : 'middle'
   return (
     <Words
-      x={level ? outside : at + pen.text * 0.35}
-      y={level ? at + pen.text * 0.35 : outside}
+      x={level ? along : across}
+      y={level ? across : along}
       turn={level ? 0 : -90}
       anchor={anchor}
-      {...style}
+      size={pen.text}
+      colour={pen.colours.line}
+      halo={pen.colours.halo}
+      haloWidth={3 * pen.k}
     >
-      {figure}
+      {text}
     </Words>
   )
 }

@@ -1,6 +1,7 @@
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
-import { DimensionChain, type ChainStop } from '#app/drawing/plan/dimension-line.tsx'
+import type { ChainStop } from '#app/drawing/plan/chain-figures.ts'
+import { DimensionChain } from '#app/drawing/plan/dimension-line.tsx'
 import { dimensionText, floorDimension, toleratedText } from '#app/drawing/plan/dimension-text.ts'
 import { patch, type Patch } from '#app/drawing/plan/occupied.ts'
 import { extentOf, type PlanView } from '#app/drawing/plan/plan-view.ts'
@@ -80,7 +81,13 @@ export function PlanDimensions({
   return (
     <g>
       {hasChainX ? (
-        <DimensionChain direction="level" at={below + 17 * pen.k} stops={stopsX} text={text} pen={pen} />
+        <DimensionChain
+          direction="level"
+          at={below + 17 * pen.k}
+          stops={stopsX}
+          length={view.width}
+          {...{ text, pen }}
+        />
       ) : null}
       {overall ? (
         <DimensionChain
@@ -92,7 +99,13 @@ export function PlanDimensions({
         />
       ) : null}
       {upright && hasChainY ? (
-        <DimensionChain direction="upright" at={right + 19 * pen.k} stops={stopsY} text={text} pen={pen} />
+        <DimensionChain
+          direction="upright"
+          at={right + 19 * pen.k}
+          stops={stopsY}
+          length={view.height}
+          {...{ text, pen }}
+        />
       ) : null}
       {upright && overall ? (
         <DimensionChain

@@ -48,7 +48,7 @@ interface ComparisonProps {
 }
 
 const pen = screenPen('dusk')
-const margins = { top: 28, right: 44, bottom: 40, left: 40 }
+const margins = { top: 28, right: 44, bottom: 46, left: 40 }
 const gap = 18
 /** Below this many px to a metre seats' figures have no room; the maps then stand one below the other. */
 const leastScale = 32
@@ -148,6 +148,7 @@ export function Comparison({ site, brief, models: list, house, chosen, picker }:
                   warmth={figures?.warmth ?? null}
                   overlapArea={show === 'overlap' ? (compared[i]?.overlap ?? null) : null}
                   threshold={threshold}
+                  units={site.displayUnits}
                 />
                 <ComparedMap
                   name={`map-${variant.number}`}

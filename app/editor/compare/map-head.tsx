@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react'
+import { formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
 import { Mark } from '#app/editor/compare/differences.tsx'
 
 interface MapHeadProps {
@@ -8,12 +9,14 @@ interface MapHeadProps {
   title: ReactNode
   less: number | null
   warmth: readonly { readonly target: string }[] | null
+  /** m². */
   overlapArea: number | null
   threshold: number
+  units: DisplayUnits
 }
 
 /** Above a map: which variant, how many seats stand where, or how large the overlap is. */
-export function MapHead({ i, number, title, less, warmth, overlapArea, threshold }: MapHeadProps) {
+export function MapHead({ i, number, title, less, warmth, overlapArea, threshold, units }: MapHeadProps) {
   const count = (target: string) => warmth?.filter((seat) => seat.target === target).length ?? '–'
   return (
     <header className="flex flex-wrap items-center gap-x-2.5 gap-y-1 border-t border-ink py-2">
@@ -24,8 +27,8 @@ export function MapHead({ i, number, title, less, warmth, overlapArea, threshold
       </h2>
       {overlapArea !== null ? (
         <p className="text-ink-2">
-          <span className="font-strong text-ink">{overlapArea.toFixed(1)} m²</span> where two or more each give ≥{' '}
-          {threshold} W/m²
+          <span className="font-strong text-ink">{formatQuantity(overlapArea, 'area', units)}</span> where two or more
+          each give ≥ {threshold} W/m²
         </p>
       ) : (
         <p className="flex gap-4 text-ink-2">

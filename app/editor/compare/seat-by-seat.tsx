@@ -1,4 +1,5 @@
 import { useState } from 'react'
+import { Link } from 'react-router'
 import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { Target } from '#app/drawing/heat/scale.ts'
@@ -69,7 +70,14 @@ export function SeatBySeat(props: SeatBySeatProps) {
           ]}
         />
       </header>
-      {seats.length === 0 && <p className="text-ink-2">No seats yet. They are placed on the site.</p>}
+      {seats.length === 0 && (
+        <p className="text-ink-2">
+          No seats yet.{' '}
+          <Link relative="path" to="../site" className="underline pointer-coarse:py-3">
+            Enter them on the site
+          </Link>
+        </p>
+      )}
       {as === 'dots' && seats.length > 0 && (
         <div className="overflow-x-auto" tabIndex={0} role="region" aria-label="Dots of every seat">
           <svg

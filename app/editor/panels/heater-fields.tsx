@@ -57,7 +57,9 @@ export function HeaterFields(props: HeaterFieldsProps) {
       </header>
       <fieldset disabled={readOnly} className="m-0 border-0 p-0">
         <legend className="sr-only">Place and aim</legend>
-        <div className="grid grid-cols-2 gap-2 tablet:grid-cols-4 desk:grid-cols-2 wide:grid-cols-4">
+        <div
+          className={`grid grid-cols-2 gap-2 tablet:grid-cols-4 desk:grid-cols-2 ${units === 'metric' ? 'wide:grid-cols-4' : ''}`}
+        >
           <PlaceField label={alongLabel(site)} of="x" {...{ heaters, site, set }} />
           <PlaceField label={fromLabel(site)} of="y" {...{ heaters, site, set }} />
           <LengthField

@@ -1,4 +1,5 @@
 import { memo, useState } from 'react'
+import { Link } from 'react-router'
 import type { SeatFigures, TargetOutcome } from '#app/domain/comfort/seat-warmth.ts'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import { fromSi, unitSymbol, type DisplayUnits } from '#app/domain/units.ts'
@@ -47,13 +48,13 @@ export function SeatsTable({ warmth, brief, units, fluxUnit, seatId, onSeat, onE
             <th scope="col" className="text-left">
               Flux, target {fluxFigure(low, fluxUnit)}–{fluxFigure(high, fluxUnit)}
             </th>
-            <th scope="col" className="text-right">
+            <th scope="col" className="pl-2 text-right">
               {fluxUnit}
             </th>
-            <th scope="col" className="text-right">
+            <th scope="col" className="pl-2 text-right">
               Head
             </th>
-            <th scope="col" className="text-right">
+            <th scope="col" className="pl-2 text-right">
               Feels like {unitSymbol('temperature', units)}
             </th>
           </tr>
@@ -79,7 +80,14 @@ export function SeatsTable({ warmth, brief, units, fluxUnit, seatId, onSeat, onE
           ))}
         </tbody>
       </table>
-      {warmth.length === 0 && <p className="py-2 text-ink-3">No seats yet. They are entered on the page Site.</p>}
+      {warmth.length === 0 && (
+        <p className="py-2 text-ink-2">
+          No seats yet.{' '}
+          <Link relative="path" to="../../site" className="underline pointer-coarse:py-3">
+            Enter them on the site
+          </Link>
+        </p>
+      )}
     </section>
   )
 }
@@ -140,9 +148,9 @@ const SeatRow = memo(function SeatRow(row: SeatRowProps) {
       <td className="py-0.5">
         <FluxBar part={row.part} low={row.low} high={row.high} within={row.target === 'in target'} />
       </td>
-      <td className="py-0.5 text-right font-strong">{row.body}</td>
-      <td className="py-0.5 text-right text-ink-2">{row.head}</td>
-      <td className="py-0.5 text-right whitespace-nowrap text-ink-2">
+      <td className="py-0.5 pl-2 text-right font-strong">{row.body}</td>
+      <td className="py-0.5 pl-2 text-right text-ink-2">{row.head}</td>
+      <td className="py-0.5 pl-2 text-right whitespace-nowrap text-ink-2">
         {row.before} → <span className="text-ink">{row.after}</span>
       </td>
     </tr>

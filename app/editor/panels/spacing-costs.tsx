@@ -1,4 +1,4 @@
-import { formatLength } from '#app/domain/units.ts'
+import { formatLength, formatQuantity } from '#app/domain/units.ts'
 import { Button } from '#app/components/button.tsx'
 import { fluxFigure, noFigure } from '#app/editor/figures.ts'
 import { useSpacingCosts, type SpacingSubject } from '#app/editor/use-spacing-costs.ts'
@@ -8,7 +8,8 @@ export function SpacingCosts({ onTake, ...subject }: SpacingSubject & { onTake: 
   const costs = useSpacingCosts(subject)
   if (costs.length === 0) return null
   const { site, rules } = subject
-  const area = (overlap: number | null) => (overlap === null ? noFigure : `${overlap.toFixed(1)} m²`)
+  const area = (overlap: number | null) =>
+    overlap === null ? noFigure : formatQuantity(overlap, 'area', site.displayUnits)
   return (
     <section aria-labelledby="spacings-title" className="mb-2 overflow-x-auto">
       <table className="w-full">

@@ -20,6 +20,9 @@ interface SupportRemediesProps {
   readonly onRails: () => Promise<string | null>
 }
 
+/** A verb that names a support may be longer than its column. */
+const wrapping = 'h-auto! min-h-7 flex-initial! py-1 text-left whitespace-normal! pointer-coarse:min-h-11'
+
 type Open = 'move' | 'rails' | null
 
 /** What may be done about a heater that nothing holds: two remedies, each shown with what it does before it is done. */
@@ -33,7 +36,7 @@ export function SupportRemedies(props: SupportRemediesProps) {
     <div className="pb-2 pl-5.5">
       <div className="flex flex-wrap gap-1.5">
         {move && (
-          <Button size="small" aria-expanded={open === 'move'} onClick={toggle('move')}>
+          <Button size="small" aria-expanded={open === 'move'} onClick={toggle('move')} className={wrapping}>
             Move {heaterId} to {move.supportName}
           </Button>
         )}
@@ -126,7 +129,7 @@ function MoveFirst({
         {move.heater.tiltDeg === 0 ? '' : ' It keeps its tilt.'} Its height stays.
       </p>
       <div className="mt-2 flex flex-wrap gap-1.5">
-        <Button size="small" onClick={onMove}>
+        <Button size="small" onClick={onMove} className={wrapping}>
           Move {heaterId} {distance} to {move.supportName}
         </Button>
         <Button size="small" kind="text" onClick={onLeave}>
@@ -176,7 +179,7 @@ function RailsFirst({ heaterId, rails, site, onRails, onLeave }: PanelProps & { 
         </p>
       )}
       <div className="mt-2 flex flex-wrap gap-1.5">
-        <Button size="small" disabled={busy} onClick={() => void add()}>
+        <Button size="small" disabled={busy} onClick={() => void add()} className={wrapping}>
           Add {names} to the site
         </Button>
         <Button size="small" kind="text" onClick={onLeave}>

@@ -3,6 +3,7 @@ import type { Layout } from '#app/domain/layout/layout.ts'
 import { planesOf } from '#app/domain/site/planes.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { parseLength } from '#app/domain/length-parser.ts'
+import { formatLength, type DisplayUnits } from '#app/domain/units.ts'
 import { LegendDrawing } from '#app/drawing/heat/legend.tsx'
 import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
 import { screenPen } from '#app/drawing/pen.ts'
@@ -45,7 +46,7 @@ export function ToolRow(props: ToolRowProps) {
       <MapSelect {...props} />
       <PlaneChooser {...{ site, choice, onChoice }} />
       <span className="flex-1" />
-      <span className="flex min-w-0 flex-wrap items-center gap-1">
+      <span className="flex min-w-0 flex-wrap items-center gap-1 max-tablet:contents">
         {!bare && <MapLegend {...legend} />}
         <UnitChooser choice={choice} onChoice={onChoice} scale={legend.scale} />
       </span>
@@ -54,7 +55,7 @@ export function ToolRow(props: ToolRowProps) {
 }
 
 const selectClass =
-  'h-7 max-w-40 rounded-md border border-rule-strong bg-paper-raised px-1.5 text-ink focus-visible:outline-2 focus-visible:outline-offset-1 focus-visible:outline-focus pointer-coarse:h-11'
+  'h-7 max-w-44 rounded-md border border-rule-strong bg-paper-raised px-1.5 text-ink focus-visible:outline-2 focus-visible:outline-offset-1 focus-visible:outline-focus pointer-coarse:h-11'
 
 const mapChoices = {
   flux: 'Irradiance',
@@ -131,11 +132,15 @@ function mapOf(name: string, heaterId: string, threshold: number): MapChoice | n
   }
 }
 
+/** Short, because the row is crowded: metres to the centimetre without a unit, or whole inches. */
+const planeText = (metres: number, units: DisplayUnits): string =>
+  units === 'metric' ? metres.toFixed(2) : `${Math.round(metres / 0.0254)}″`
+
 /** Body plane, head plane, or a height that is typed. */
 function PlaneChooser({ site, choice, onChoice }: Pick<ToolRowProps, 'site' | 'choice' | 'onChoice'>) {
   const planes = planesOf(site)
   const { plane } = choice
-  const figure = (metres: number) => metres.toFixed(2)
+  const figure = (metres: number) => planeText(metres, site.displayUnits)
   const [typed, setTyped] = useState<string | null>(null)
   const reading = typed === null ? null : parseLength(typed, site.displayUnits, { min: 0, max: 6 })
   const wrong = reading && 'error' in reading ? reading.error : null
@@ -167,11 +172,11 @@ function PlaneChooser({ site, choice, onChoice }: Pick<ToolRowProps, 'site' | 'c
           aria-label="Height of the plane"
           aria-invalid={wrong ? true : undefined}
           title={wrong ?? 'Above the finished floor'}
-          value={typed ?? `${figure(plane.height)} m`}
+          value={typed ?? formatLength(plane.height, site.displayUnits)}
           onChange={(event) => setTyped(event.target.value)}
           onBlur={commit}
           onKeyDown={(event) => event.key === 'Enter' && commit()}
-          className={`${selectClass} w-20 aria-invalid:border-clay`}
+          className={`${selectClass} w-24 aria-invalid:border-clay`}
         />
       )}
       {wrong && <span className="text-2xs text-clay">{wrong}</span>}
@@ -225,7 +230,7 @@ export function MapLegend({ scale, store, site, emitters, plane, answer, isFlux 
   const flux = pointed && isFlux ? (readingAt(site, emitters, plane, pointed.at)?.irradiance ?? null) : null
   const reading = pointed && !isFlux && answer ? mapValueAt(answer, pointed.at) : flux
   return (
-    <span className="inline-block h-10 w-78 flex-none overflow-hidden">
+    <span className="inline-block h-10 w-78 flex-none overflow-hidden max-tablet:order-last">
       <StillLegend
         name="scale"
         quantity={scale}

@@ -2,6 +2,7 @@ import { changeLevel } from '#app/domain/site/edits.ts'
 import { replaceFloor, setBeyond } from '#app/domain/site/floor-edits.ts'
 import { areaOf } from '#app/domain/site/geometry.ts'
 import type { Level, Site } from '#app/domain/site/site.ts'
+import { formatQuantity } from '#app/domain/units.ts'
 import type { Chosen } from '#app/editor/site/choice.ts'
 import { useSiteEditing } from '#app/editor/site/editing.ts'
 import { PickInput, TextInput } from '#app/editor/site/fact-inputs.tsx'
@@ -20,7 +21,7 @@ export function FloorFields({ chosen, onChoose }: FloorFieldsProps) {
   return (
     <FieldsFrame
       title={chosen.part === null ? 'Floor' : `Floor, corner ${chosen.part + 1}`}
-      note={`${site.floor.length} corners, ${Math.abs(areaOf(site.floor)).toFixed(1)} m². Drag a corner or the middle of an edge; the arrows move the chosen corner.`}
+      note={`${site.floor.length} corners, ${formatQuantity(Math.abs(areaOf(site.floor)), 'area', site.displayUnits)}. Drag a corner or the middle of an edge; the arrows move the chosen corner.`}
     >
       <OutlineFields {...{ chosen, onChoose }} replace={withFloor} />
       {chosen.part !== null && <BeyondFields key={chosen.part} edge={chosen.part} />}

@@ -1,7 +1,7 @@
 import { memberLength, undersideAt } from '#app/domain/site/member.ts'
 import { areaOf } from '#app/domain/site/geometry.ts'
 import type { Cover, Level, Member, Obstacle, Pole, Seat, Site, Table, Wall } from '#app/domain/site/site.ts'
-import { formatLength } from '#app/domain/units.ts'
+import { formatLength, formatQuantity } from '#app/domain/units.ts'
 import { slopeText } from '#app/drawing/plan/cover-mark.tsx'
 import type { ThingKind } from '#app/domain/site/edits.ts'
 
@@ -62,7 +62,8 @@ const wordsWith = (length: (metres: number) => string, site: Site) => ({
   },
   table: ({ form, size, height, centre }: Table) =>
     `${form === 'round' ? `${length(size[0])} across` : `${length(size[0])} × ${length(size[1])}`}, ${length(height)} high, at ${length(centre[0])}, ${length(centre[1])}`,
-  level: ({ height, outline }: Level) => `${length(height)}, ${Math.abs(areaOf(outline)).toFixed(1)} m²`,
+  level: ({ height, outline }: Level) =>
+    `${length(height)}, ${formatQuantity(Math.abs(areaOf(outline)), 'area', site.displayUnits)}`,
   seat: ({ x, y, group, facingDeg, priority }: Seat) =>
     `${[group, `${length(x)}, ${length(y)}`, `looks ${String(facingDeg).replace('-', '−')}°`, priority].filter(Boolean).join(', ')}`,
 })
