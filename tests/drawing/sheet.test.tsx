@@ -110,6 +110,18 @@ describe('the sheet', () => {
     expect(left).toBeGreaterThan(0)
     expect(lines.length).toBeGreaterThan(3)
   })
+  it('writes the cautions smaller rather than leave one out', () => {
+    const few = Array.from(
+      { length: 8 },
+      (_, i) => `Caution number ${i}, which is long enough to take two lines of this box.`,
+    )
+    const roomy = fitCautions(few, 250, 400)
+    const narrow = fitCautions(few, 250, 200)
+    expect([roomy.left, narrow.left]).toEqual([0, 0])
+    expect(narrow.size).toBeLessThan(roomy.size)
+    const height = narrow.lines.reduce((sum, one) => sum + one.length * narrow.size * 1.2, 0)
+    expect(height).toBeLessThanOrEqual(200)
+  })
 })
 
 describe('the picture of the sheet', () => {

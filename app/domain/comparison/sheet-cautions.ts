@@ -6,6 +6,7 @@ import { indoorsAt } from '#app/domain/comfort/indoors.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { isStopped } from '#app/domain/rules/check-layout.ts'
+import type { Finding } from '#app/domain/rules/finding.ts'
 import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength, formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
@@ -39,12 +40,18 @@ export function sheetCautions(told: Told): string[] {
   ]
 }
 
+/** What was found, each once, to stand within a sentence. */
+const titlesOf = (findings: readonly Finding[]): string[] => [
+  ...new Set(findings.map(({ title }) => `${title.charAt(0).toLowerCase()}${title.slice(1)}`)),
+]
+
 function stopped({ variants }: Told): string[] {
   return variants.flatMap(({ number, findings }) => {
     const stops = findings.filter((finding) => isStopped(finding) && finding.outcome === 'fails')
     if (stops.length === 0) return []
-    const titles = [...new Set(stops.map(({ title }) => title))].slice(0, 2).join('; ')
-    return [`Variant ${number} may not be installed as it stands: ${titles}${stops.length > 2 ? ' and more' : ''}.`]
+    const titles = titlesOf(stops)
+    const others = titles.length > 2 ? `; and ${titles.length - 2} more` : ''
+    return [`Variant ${number} may not be installed as it stands: ${titles.slice(0, 2).join('; ')}${others}.`]
   })
 }
 
@@ -81,9 +88,9 @@ function measureFirst({ variants }: Told): string[] {
   return variants.flatMap(({ number, findings }) => {
     const rules = findings.filter(({ outcome }) => outcome === 'measure first')
     if (rules.length === 0) return []
-    const [first = '', ...more] = [...new Set(rules.map(({ title }) => title))]
+    const [first = '', ...more] = titlesOf(rules)
     const others = more.length === 0 ? '' : ` and ${more.length} more`
-    return [`Measure first, variant ${number}: ${first.charAt(0).toLowerCase()}${first.slice(1)}${others}.`]
+    return [`Measure first, variant ${number}: ${first}${others}.`]
   })
 }
 

@@ -1,6 +1,6 @@
-import type { ReactNode } from 'react'
-import type { Measurement, PhotoMarks, PhotoPlane } from '#app/domain/photo/measurements.ts'
+import type { PhotoMarks, PhotoPlane } from '#app/domain/photo/measurements.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
+import { endsOf, photoTextSize, placePhotoLabels } from '#app/drawing/photo/photo-labels.ts'
 
 interface PhotoMarksProps {
   readonly marks: PhotoMarks
@@ -27,30 +27,6 @@ function Line({ points, ink, broken = false }: { points: readonly Vec2[]; ink: s
   )
 }
 
-function Words({ at, ink = pale, children }: { at: Vec2; ink?: string; children: ReactNode }) {
-  return (
-    <text
-      x={at[0]}
-      y={at[1]}
-      fontSize="12"
-      fontWeight="500"
-      textAnchor="middle"
-      fill={ink}
-      stroke={dark}
-      strokeWidth="3.5"
-      strokeLinejoin="round"
-      paintOrder="stroke"
-    >
-      {children}
-    </text>
-  )
-}
-
-const middle = (...points: readonly Vec2[]): Vec2 => [
-  points.reduce((sum, [x]) => sum + x, 0) / points.length,
-  points.reduce((sum, [, y]) => sum + y, 0) / points.length,
-]
-
 interface PlaneProps {
   readonly plane: PhotoPlane
   readonly toScreen: PhotoMarksProps['toScreen']
@@ -67,22 +43,11 @@ function Plane({ plane, toScreen, chosen }: PlaneProps) {
     <g>
       <Line points={[...corners, ...corners.slice(0, 1)]} ink={ink} broken />
       {chosen && first && second && <Line points={[first, second]} ink={ink} />}
-      <Words at={middle(...corners)} ink={ink}>
-        {plane.name}
-      </Words>
-      {chosen && first && second && (
-        <Words at={middle(first, second)} ink={ink}>
-          first side
-        </Words>
-      )}
       {vertical && <Line points={[toScreen(vertical.known.foot), toScreen(vertical.known.top)]} ink={ink} />}
       {vertical && <Line points={[toScreen(vertical.other.foot), toScreen(vertical.other.top)]} ink={ink} broken />}
     </g>
   )
 }
-
-const endsOf = (measurement: Measurement): readonly [Vec2, Vec2] =>
-  measurement.kind === 'length' ? [measurement.from.at, measurement.to.at] : [measurement.foot.at, measurement.top]
 
 /** Everything that is marked in a photo, over its picture: rectangles broken, lengths and heights whole, their figures. */
 export function PhotoMarksDrawing({ marks, toScreen, figures, chosen }: PhotoMarksProps) {
@@ -93,18 +58,26 @@ export function PhotoMarksDrawing({ marks, toScreen, figures, chosen }: PhotoMar
         <Plane key={plane.id} plane={plane} toScreen={toScreen} chosen={plane.id === chosen} />
       ))}
       {marks.measurements.map((measurement) => {
-        const [a, b] = endsOf(measurement)
-        const [from, to] = [toScreen(a), toScreen(b)]
-        const at = middle(from, to)
-        return (
-          <g key={measurement.id}>
-            <Line points={[from, to]} ink={ink(measurement.id)} />
-            <Words at={[at[0], at[1] - 7]} ink={ink(measurement.id)}>
-              {figures.get(measurement.id) ?? measurement.label}
-            </Words>
-          </g>
-        )
+        const [from, to] = endsOf(measurement)
+        return <Line key={measurement.id} points={[toScreen(from), toScreen(to)]} ink={ink(measurement.id)} />
       })}
+      {placePhotoLabels(marks, toScreen, figures, chosen).map(({ of, text, at: [x, y] }) => (
+        <text
+          key={`${of} ${text}`}
+          x={x}
+          y={y}
+          fontSize={photoTextSize}
+          fontWeight="500"
+          textAnchor="middle"
+          fill={ink(of)}
+          stroke={dark}
+          strokeWidth="3.5"
+          strokeLinejoin="round"
+          paintOrder="stroke"
+        >
+          {text}
+        </text>
+      ))}
     </g>
   )
 }

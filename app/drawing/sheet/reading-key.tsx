@@ -7,12 +7,13 @@ import { SeatRing, WarmthDisc, warmthWords, type SeatOutcome } from '#app/drawin
 import { sheetInk } from '#app/drawing/plot/plot-ink.ts'
 import type { SheetVariant } from '#app/drawing/sheet/sheet-facts.ts'
 import type { Box } from '#app/drawing/sheet/sheet-layout.ts'
+import { hasWarmthRows } from '#app/drawing/sheet/sheet-plot.tsx'
 import { Words } from '#app/drawing/text/words.tsx'
 
 interface Entry {
   readonly word: string
-  /** The mark about (x, y). */
-  readonly mark: (x: number, y: number) => ReactElement
+  /** The mark about (x, y); without one the word heads what follows. */
+  readonly mark?: (x: number, y: number) => ReactElement
 }
 
 const pen = printPen
@@ -78,8 +79,9 @@ function entriesOf(site: Site, variants: readonly SheetVariant[]): Entry[] {
           },
         ]
       : []),
+    ...(hasWarmthRows(site) && words.size > 0 ? [{ word: 'Rows below the plot, out of the wind' }] : []),
     ...warmthWords
-      .filter((word) => words.has(word))
+      .filter((word) => hasWarmthRows(site) && words.has(word))
       .map((word) => ({
         word: `Feels ${word}`,
         mark: (x: number, y: number) => <WarmthDisc x={x} y={y} r={5.4} word={word} pen={pen} />,
@@ -100,8 +102,8 @@ export function ReadingKey({ box, site, variants }: { box: Box; site: Site; vari
         const y = box.y + 25 + i * pitch
         return (
           <g key={word}>
-            {mark(box.x + 14, y - 3)}
-            <Words x={box.x + 36} y={y} size={8.2} weight={400} colour={sheetInk.ink}>
+            {mark?.(box.x + 14, y - 3)}
+            <Words x={mark ? box.x + 36 : box.x} y={y} size={8.2} weight={mark ? 400 : 500} colour={sheetInk.ink}>
               {word}
             </Words>
           </g>

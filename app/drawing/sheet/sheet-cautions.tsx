@@ -3,16 +3,28 @@ import type { Box } from '#app/drawing/sheet/sheet-layout.ts'
 import { wrapText } from '#app/drawing/text/widths.ts'
 import { Words } from '#app/drawing/text/words.tsx'
 
-const size = 8.8
-const lineHeight = 12.2
+/** Sizes the words may have, px: the largest at which all cautions fit is taken. */
+const sizes = [8.8, 8.2, 7.6, 7]
 const indent = 12
+const between = 2.5
+const lineHeightOf = (size: number): number => 1.386 * size
 
-/** The cautions that fit in a height, each as lines, and how many are left out. */
-export function fitCautions(
-  cautions: readonly string[],
-  width: number,
-  height: number,
-): { lines: string[][]; left: number } {
+interface FittedCautions {
+  readonly size: number
+  readonly lines: string[][]
+  /** How many are left out. */
+  readonly left: number
+}
+
+/** The cautions that fit in a height, each as lines, in the largest words at which the fewest are left out. */
+export function fitCautions(cautions: readonly string[], width: number, height: number): FittedCautions {
+  const all = sizes.map((size) => fitAt(size, cautions, width, height))
+  const fewest = Math.min(...all.map(({ left }) => left))
+  return all.find(({ left }) => left === fewest) ?? { size: 7, lines: [], left: cautions.length }
+}
+
+function fitAt(size: number, cautions: readonly string[], width: number, height: number): FittedCautions {
+  const lineHeight = lineHeightOf(size)
   const lines: string[][] = []
   let used = 0
   for (const caution of cautions) {
@@ -21,18 +33,19 @@ export function fitCautions(
     const rest = isLast ? 0 : lineHeight
     if (used + wrapped.length * lineHeight + rest > height) break
     lines.push(wrapped)
-    used += wrapped.length * lineHeight + 2.5
+    used += wrapped.length * lineHeight + between
   }
-  return { lines, left: cautions.length - lines.length }
+  return { size, lines, left: cautions.length - lines.length }
 }
 
 /** Numbered cautions; what has no room is counted, never silently dropped. */
 export function SheetCautions({ box, cautions }: { box: Box; cautions: readonly string[] }) {
-  const { lines, left } = fitCautions(cautions, box.width, box.height - 18)
+  const { size, lines, left } = fitCautions(cautions, box.width, box.height - 18)
+  const lineHeight = lineHeightOf(size)
   const starts = lines.map((_, i) =>
-    lines.slice(0, i).reduce((sum, one) => sum + one.length * lineHeight + 2.5, box.y + 24),
+    lines.slice(0, i).reduce((sum, one) => sum + one.length * lineHeight + between, box.y + 24),
   )
-  const end = (starts.at(-1) ?? box.y + 24 - lineHeight) + (lines.at(-1)?.length ?? 1) * lineHeight + 2.5
+  const end = (starts.at(-1) ?? box.y + 24 - lineHeight) + (lines.at(-1)?.length ?? 1) * lineHeight + between
   return (
     <g>
       <Words x={box.x} y={box.y + 9} size={10.2} weight={600} colour={sheetInk.ink}>

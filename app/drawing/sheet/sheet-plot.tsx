@@ -13,6 +13,11 @@ import { Words } from '#app/drawing/text/words.tsx'
 /** Above this many seats a row of strokes would be a smear: the plot is drawn without the words. */
 const mostWorded = 60
 
+const heatedSeats = ({ seats }: Site) => seats.filter(({ priority }) => priority !== 'not heated')
+
+/** Whether the plot has rows of discs that say how each seat feels. */
+export const hasWarmthRows = (site: Site): boolean => heatedSeats(site).length <= mostWorded
+
 /** Seat by seat: the irradiance of each variant at every seat that is to be heated, and its warmth in strokes below. */
 export function SheetPlot({
   box,
@@ -25,7 +30,7 @@ export function SheetPlot({
   brief: Brief
   variants: readonly SheetVariant[]
 }) {
-  const seats = plotSeats(site.seats.filter(({ priority }) => priority !== 'not heated'))
+  const seats = plotSeats(heatedSeats(site))
   const series = variants.map((variant, i): PlotSeries => {
     const bySeat = new Map(variant.warmth.map((one) => [one.seat.id, one]))
     const at = seats.map(({ id }) => bySeat.get(id))
@@ -34,7 +39,7 @@ export function SheetPlot({
       mark: markOf(i),
       label: variant.title,
       values: at.map((one) => one?.body ?? null),
-      ...(seats.length <= mostWorded ? { words } : {}),
+      ...(hasWarmthRows(site) ? { words } : {}),
     }
   })
   return (
