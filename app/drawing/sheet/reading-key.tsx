@@ -79,7 +79,7 @@ function entriesOf(site: Site, variants: readonly SheetVariant[]): Entry[] {
           },
         ]
       : []),
-    ...(hasWarmthRows(site) && words.size > 0 ? [{ word: 'Rows below the plot, out of the wind' }] : []),
+    ...(hasWarmthRows(site) && words.size > 0 ? [{ word: 'Rows below, out of the wind' }] : []),
     ...warmthWords
       .filter((word) => hasWarmthRows(site) && words.has(word))
       .map((word) => ({

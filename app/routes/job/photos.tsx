@@ -122,7 +122,7 @@ function PhotoCard({ jobId, photo, readOnly, onChanged }: CardProps) {
         <span className="py-1">
           {planes === 0
             ? 'Nothing is marked yet'
-            : `${planes} ${planes === 1 ? 'plane' : 'planes'}${measurements.length > 0 ? `: ${measurements.join(', ')}` : ''}`}
+            : `${planes} ${planes === 1 ? 'plane' : 'planes'}${measurements.length > 0 ? `; measured: ${measurements.join(', ')}` : ''}`}
         </span>
         {!readOnly && <IconButton icon="remove" label={`Remove ${name}`} onClick={() => void remove()} />}
       </p>
