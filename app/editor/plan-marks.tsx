@@ -29,16 +29,20 @@ interface PlanUnderProps {
   readonly figures: boolean
   /** Names, left out where the plan is small. */
   readonly words: boolean
+  /** What names keep clear of. */
+  readonly cuts: readonly SectionCut[]
   readonly label: string
 }
 
-interface PlanMarksProps extends Pick<PlanUnderProps, 'site' | 'layout' | 'models' | 'view' | 'pen' | 'words'> {
+interface PlanMarksProps extends Pick<
+  PlanUnderProps,
+  'site' | 'layout' | 'models' | 'view' | 'pen' | 'words' | 'cuts'
+> {
   /** As kept: what names keep clear of, so that they stand still during a gesture. */
   readonly kept: Layout
   readonly warmth: readonly SeatFigures[]
   readonly selected: ReadonlySet<string>
   readonly seatId: string | null
-  readonly cuts: readonly SectionCut[]
   readonly fluxUnit: FluxUnit
   readonly readOnly: boolean
 }
@@ -48,11 +52,11 @@ const name = 'plan'
 
 /** What lies under the hand: ground, map and structure; a picture of its own, so that it rests while heaters move. */
 export const PlanUnder = memo(function PlanUnder(props: PlanUnderProps) {
-  const { site, layout, models, view, pen, scale, picture, words } = props
+  const { site, layout, models, view, pen, scale, picture, words, cuts } = props
   const withFigure = seatsCarryFigures(site.seats, view, pen)
   return (
     <g role="img" aria-label={props.label}>
-      <PlanGround {...{ name, site, view, pen }} named={words} />
+      <PlanGround {...{ name, site, view, pen, cuts }} named={words} />
       {picture && <PlanHeat {...{ name, site, view, pen, picture }} quantity={scale} />}
       {picture && props.figures && (
         <PlanHeatFigures {...{ site, layout, models, view, pen, picture, withFigure }} quantity={scale} />

@@ -145,6 +145,7 @@ export function PlanSurface(props: PlanSurfaceProps) {
             picture={flux.answer?.picture ?? null}
             figures={state.draft === null}
             words={props.words}
+            cuts={props.cuts}
             label={`${scale.name} at ${say(plane)} above the floor`}
           />
         </svg>

@@ -43,12 +43,12 @@ export function idsOf(site: Site): Set<string> {
   return new Set([...named, ...site.dimensions.map(({ id }) => id)])
 }
 
-/** An id that nothing on the site has: the stem with the lowest free number. */
-export function unusedId(site: Site, stem: string): string {
+/** An id that nothing on the site has: the stem and the lowest free number, with what stands between them. */
+export function unusedId(site: Site, stem: string, between = '-'): string {
   const taken = idsOf(site)
   let number = 1
-  while (taken.has(`${stem}-${number}`)) number++
-  return `${stem}-${number}`
+  while (taken.has(`${stem}${between}${number}`)) number++
+  return `${stem}${between}${number}`
 }
 
 /** The site with one more thing; its id must be unused (`unusedId`). */

@@ -107,10 +107,10 @@ function Section(props: SectionProps) {
   return (
     <g fontFamily={fontFamily}>
       <SectionAir {...props} covers={covers} />
-      <PlaneLines site={site} view={view} pen={pen} />
       {site.walls.map((wall) => (
         <CutWall key={wall.id} {...{ wall, site, view, pen }} hatch={patternIds(name).wall} />
       ))}
+      <PlaneLines site={site} view={view} pen={pen} />
       {site.obstacles.map((obstacle) => (
         <CutObstacle key={obstacle.id} {...{ obstacle, view, pen }} />
       ))}

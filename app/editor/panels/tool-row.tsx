@@ -55,7 +55,7 @@ export function ToolRow(props: ToolRowProps) {
 }
 
 const selectClass =
-  'h-7 max-w-44 rounded-md border border-rule-strong bg-paper-raised px-1.5 text-ink focus-visible:outline-2 focus-visible:outline-offset-1 focus-visible:outline-focus pointer-coarse:h-11'
+  'h-7 max-w-40 rounded-md border border-rule-strong bg-paper-raised px-1.5 text-ink focus-visible:outline-2 focus-visible:outline-offset-1 focus-visible:outline-focus pointer-coarse:h-11'
 
 const mapChoices = {
   flux: 'Irradiance',
@@ -82,7 +82,7 @@ function MapSelect({ layout, selected, choice, threshold, onChoice }: ToolRowPro
         aria-label="The map shows"
         value={value}
         onChange={(event) => choose(event.target.value)}
-        className={selectClass}
+        className={`${selectClass} ${map.kind === 'feels-like' ? 'max-w-44!' : ''}`}
       >
         {Object.entries(mapChoices).map(([name, label]) => (
           <option key={name} value={name}>

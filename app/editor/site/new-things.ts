@@ -30,7 +30,8 @@ const unknownStuff = { material: 'unknown', loadStatus: 'not known' } as const
 
 /** The site with a new thing at a place, of sizes to start from, and its id. */
 export function withThingAt(site: Site, what: NewThing, at: Vec2): { site: Site; id: string } {
-  const id = unusedId(site, what)
+  // A table's name stands on the plan and begins the names of its seats: T1, T1-1.
+  const id = what === 'table' ? unusedId(site, 'T', '') : unusedId(site, what)
   const name = nameFrom(id)
   if (isObstacle(what)) return { site: addThing(site, 'obstacle', newObstacle(site, what, id, at)), id }
   switch (what) {

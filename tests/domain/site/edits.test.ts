@@ -73,6 +73,7 @@ describe('moving and removing', () => {
   it('a new id is free whatever has the name', () => {
     const site = addThing(plainSite(), 'pole', { id: 'wall-1', name: '', at: [0, 0], top: 2, diameter: 0.1, material: 'unknown', loadStatus: '' }) // prettier-ignore
     expect(unusedId(site, 'wall')).toBe('wall-2')
+    expect(unusedId(site, 'T', '')).toBe('T1')
   })
 })
 
