@@ -1,3 +1,4 @@
+import { beamOf, fullAngleOfExponent, type Beam, type TableBeam } from '#app/domain/flux/beam.ts'
 import type { BeamData, HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { elementCentres, type Body } from '#app/domain/layout/body.ts'
 import { distanceFromBody, gapToBody, nearestOfBody } from '#app/domain/layout/clear-space.ts'
@@ -12,47 +13,50 @@ export interface HalfAngles {
 
 const halves = new WeakMap<BeamData, HalfAngles>()
 
-/** Directions of half the peak intensity: half the full angles, or read from the table through its peak. */
+/**
+ * Directions of half the peak intensity: half the full angles, or read from the table through its peak, as it is radiated:
+ * within ±90°, to both sides where the table gives one.
+ */
 export function halfAnglesOf(beam: BeamData): HalfAngles {
   const known = halves.get(beam)
   if (known) return known
-  const found = beam.kind === 'angles' ? fromFullAngles(beam) : fromTable(beam)
+  const radiated = beamOf(beam)
+  const found = radiated.kind === 'table' ? fromTable(radiated) : fromExponents(radiated)
   halves.set(beam, found)
   return found
 }
 
-function fromFullAngles(beam: { acrossFullAngleDeg: number; alongFullAngleDeg: number }): HalfAngles {
-  const across = radians(beam.acrossFullAngleDeg / 2)
-  const along = radians(beam.alongFullAngleDeg / 2)
-  return { across: [-across, across], along: [-along, along] }
+const bothSides = (exponent: number): [number, number] => {
+  const half = radians(fullAngleOfExponent(exponent) / 2)
+  return [-half, half]
 }
 
-function fromTable({ acrossDeg, alongDeg, intensity }: Extract<BeamData, { kind: 'table' }>): HalfAngles {
-  const peak = Math.max(...intensity.flat())
+const fromExponents = ({ across, along }: Extract<Beam, { kind: 'cosine' }>): HalfAngles => ({
+  across: bothSides(across),
+  along: bothSides(along),
+})
+
+function fromTable({ across, along, intensity }: TableBeam): HalfAngles {
+  const peak = Math.max(...intensity.map((values) => Math.max(...values)))
   const row = intensity.findIndex((values) => values.includes(peak))
   const column = intensity[row]?.indexOf(peak) ?? 0
   const acrossProfile = intensity.map((values) => values[column] ?? 0)
   return {
-    across: halfWidth(acrossDeg, acrossProfile, row, peak / 2),
-    along: halfWidth(alongDeg, intensity[row] ?? [], column, peak / 2),
+    across: halfWidth(across, acrossProfile, row, peak / 2),
+    along: halfWidth(along, intensity[row] ?? [], column, peak / 2),
   }
 }
 
 /** The outermost angles at which a profile passes through half its peak, straight between its entries, rad. */
-function halfWidth(
-  anglesDeg: readonly number[],
-  profile: readonly number[],
-  at: number,
-  half: number,
-): [number, number] {
+function halfWidth(angles: readonly number[], profile: readonly number[], at: number, half: number): [number, number] {
   const outward = (step: 1 | -1): number => {
     let edge = at
     for (let i = at; i >= 0 && i < profile.length; i += step) if ((profile[i] ?? 0) >= half) edge = i
     const inside = profile[edge] ?? 0
     const outside = profile[edge + step]
     const share = outside === undefined || inside === outside ? 0 : (inside - half) / (inside - outside)
-    const from = anglesDeg[edge] ?? 0
-    return radians(from + share * ((anglesDeg[edge + step] ?? from) - from))
+    const from = angles[edge] ?? 0
+    return from + share * ((angles[edge + step] ?? from) - from)
   }
   const ends = [outward(-1), outward(1)].sort((a, b) => a - b)
   return [ends[0] ?? 0, ends[1] ?? 0]

@@ -138,7 +138,54 @@ describe('beam tables as CSV', () => {
     ['darkness', csv.replace('1,0.2', '0,0'), 2, 2],
     ['one row', 'deg,0,90\n0,1,0\n', 2, 1],
     ['nothing', '', 1, 1],
+    ['a figure of another base', csv.replace('0.2', '0x10'), 3, 4],
+    ['a comma for a point', csv.replaceAll(',', ';').replace('0.2', '0,2'), 3, 4],
+    ['an empty line in the middle', csv.replace('\n0,', '\n\n0,'), 3, 1],
+    ['an empty row of a spreadsheet', csv.replace('\n0,', '\n , ,,\n0,'), 3, 1],
+    ['angles that are one', csv.replace('deg,-90,0,90', 'deg,-90,0,0.001'), 1, 4],
+    ['an intensity beyond any scale', csv.replace('0.2', '1e300'), 3, 4],
+    ['a table behind the element across', 'deg,-90,0,90\n100,1,1,1\n120,1,1,1\n', 2, 1],
+    ['a table that only touches 90° across', 'deg,-90,0,90\n90,1,1,1\n120,1,1,1\n', 2, 1],
+    ['a table beyond the ends of the element', 'deg,-180,-90\n-30,1,1\n30,1,1\n', 1, 2],
+    ['heat to the back alone', 'deg,-180,-120,-90,0\n-30,1,1,0,0\n30,1,1,0,0\n', 2, 2],
   ])('names row and column of %s', (_, text, row, column) => {
-    expect(beamTableOf(text, 'x')).toMatchObject({ row, column })
+    expect(beamTableOf(text, 'x')).toMatchObject({ faults: [{ row, column }] })
+  })
+
+  it('names every place that is wrong, and an empty line as such and not as missing figures', () => {
+    const wrong = 'deg,-90,x,90\n-90,0,0,0\n\n0,1,-1,0x1\n90,0,0,0\n'
+    const { faults } = beamTableOf(wrong, 'x') as { faults: { row: number; column: number; error: string }[] }
+    expect(faults.map(({ row, column }) => [row, column])).toEqual([
+      [1, 3],
+      [3, 1],
+      [4, 3],
+      [4, 4],
+    ])
+    expect(faults[1]?.error).toBe('this line is empty')
+  })
+
+  it('stops naming places after the first fifty', () => {
+    const many = `deg${',x'.repeat(100)}\n${`0${',x'.repeat(100)}\n`.repeat(3)}`
+    expect(beamTableOf(many, 'x')).toMatchObject({ faults: { length: 50 } })
+  })
+
+  it('reads figures with a sign, an exponent or a typeset minus, and passes over what a sheet leaves empty at its end', () => {
+    const written = '\uFEFF,\u221290,+30\r\n-90,1E-1,.5\r\n90,2.,0\r\n,,\r\n\r\n'
+    expect(beamTableOf(written, 'x')).toEqual({
+      beam: {
+        kind: 'table',
+        acrossDeg: [-90, 90],
+        alongDeg: [-90, 30],
+        intensity: [
+          [0.1, 0.5],
+          [2, 0],
+        ],
+        source: 'x',
+      },
+    })
+  })
+
+  it('takes a table that reaches the front only in part', () => {
+    expect(beamTableOf('deg,-90,90\n80,1,1\n100,1,1\n', 'x')).toHaveProperty('beam')
   })
 })

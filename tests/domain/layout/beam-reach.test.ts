@@ -122,4 +122,15 @@ describe('half-intensity angles of a table', () => {
       expect.closeTo((40 * 5) / 6, 9),
     ])
   })
+
+  it('reads a table that starts at 0 to both sides, and takes the peak from the front alone', () => {
+    const source = 'test'
+    const half = halfAnglesOf({ kind: 'table', acrossDeg: [0, 40, 80], alongDeg: [0, 60], intensity: [[8, 0], [6, 0], [2, 0]], source }) // prettier-ignore
+    // Across: 6 → 2 passes 4 half-way between 40 and 80; along: 8 → 0 passes 4 half-way to 60.
+    expect(half.across.map((angle) => (angle * 180) / Math.PI)).toEqual([expect.closeTo(-60, 9), expect.closeTo(60, 9)])
+    expect(half.along.map((angle) => (angle * 180) / Math.PI)).toEqual([expect.closeTo(-30, 9), expect.closeTo(30, 9)])
+    const back = [[100, 100], [0, 0], [4, 4], [0, 0]] // prettier-ignore
+    const front = halfAnglesOf({ kind: 'table', acrossDeg: [-170, -90, 0, 90], alongDeg: [-20, 20], intensity: back, source }) // prettier-ignore
+    expect(front.across.map((angle) => (angle * 180) / Math.PI)).toEqual([expect.closeTo(-45, 9), expect.closeTo(45, 9)]) // prettier-ignore
+  })
 })
