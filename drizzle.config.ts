@@ -8,6 +8,7 @@ export default defineConfig({
     './drizzle/photo-schema.ts',
     './drizzle/house-schema.ts',
     './drizzle/rules-schema.ts',
+    './drizzle/beam-schema.ts',
   ],
   out: './drizzle/migrations',
   casing: 'snake_case',

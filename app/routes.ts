@@ -49,6 +49,8 @@ export default [
   route('api/variants/:variantId/seats.csv', 'routes/api/seats-csv.ts'),
   route('api/variants/:variantId/seats/:seatId/explain', 'routes/api/seat-explanation.ts'),
   route('api/heaters', 'routes/api/heaters.ts'),
+  route('api/heaters/:code/beam', 'routes/api/heater-beam.ts'),
+  route('api/heaters/:code/beam.csv', 'routes/api/heater-beam-csv.ts'),
   route('api/flux', 'routes/api/flux.ts'),
   route('api/*', 'routes/api/not-found.ts'),
   route('*', 'routes/not-found.tsx'),

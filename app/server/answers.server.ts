@@ -5,6 +5,8 @@ export interface Refusal {
   readonly status: 400 | 403 | 404 | 405 | 409 | 412 | 413 | 422 | 428
   readonly error: string
   readonly path: string
+  /** Each place that is wrong in a table, 1-based, when there may be several. */
+  readonly faults?: readonly { readonly row: number; readonly column: number; readonly error: string }[]
   /** The server's copy, when the refusal is about a newer one. */
   readonly current?: unknown
   /** Who saved that copy, by name, and when, ISO 8601. */

@@ -27,6 +27,8 @@ export type AuditedAction =
   | 'picture exported'
   | 'hanging data saved'
   | 'house rules saved'
+  | 'beam saved'
+  | 'beam taken back'
 
 /** Something that happened: `subject` is the thing's path (`variants/<id>`), `detail` figures and never a secret. */
 export interface AuditedEvent {

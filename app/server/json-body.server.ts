@@ -10,7 +10,7 @@ const refusal = (error: string, path: string, status: 400 | 413 = 400): Refusal 
 const tooLarge = refusal('The body is larger than 1 MB.', 'body', 413)
 
 /** The body as text, given up as soon as it grows past the limit, whatever Content-Length says. */
-async function readText(request: Request): Promise<string | Refusal> {
+export async function readText(request: Request): Promise<string | Refusal> {
   if (Number(request.headers.get('Content-Length') ?? 0) > maxBytes) return tooLarge
   const chunks: Uint8Array[] = []
   let size = 0

@@ -31,7 +31,8 @@ export interface Save<Body> {
 export interface Locked {
   readonly revision: number
   readonly shown: object
-  readonly updatedBy: string
+  /** Null while nobody has written a revision of their own. */
+  readonly updatedBy: string | null
   readonly updatedAt: Date
 }
 
@@ -125,7 +126,7 @@ export async function staleness(expected: number | null, kept: Locked): Promise<
     return { status: 428, error: 'If-Match is needed: the revision you changed.', path: 'If-Match' }
   if (expected === kept.revision) return null
   const error = `Somebody saved revision ${kept.revision} meanwhile.`
-  const changed = { by: await findName(kept.updatedBy), at: kept.updatedAt.toISOString() }
+  const changed = { by: kept.updatedBy && (await findName(kept.updatedBy)), at: kept.updatedAt.toISOString() }
   return { status: 412, error, path: 'If-Match', current: kept.shown, changed }
 }
 

@@ -16,6 +16,7 @@ const nowhere = {
   variantId: '00000000-0000-4000-8000-000000000001',
   photoId: '00000000-0000-4000-8000-000000000002',
   setId: '00000000-0000-4000-8000-000000000003',
+  code: 'never-was',
 }
 type Ids = typeof nowhere
 
@@ -43,13 +44,18 @@ async function plantCanary(slug: string, text: string): Promise<Ids> {
     `update heater_models set body = jsonb_set(body, '{note}', to_jsonb($2::text)) where organisation_id = $1`,
     of,
   )
+  await admin.query(
+    `insert into heater_models (organisation_id, code, body) select organisation_id, 'only-' || $2, jsonb_set(body, '{code}', to_jsonb('only-' || $2))
+      from heater_models where organisation_id = $1 and code = 'betony-3-0'`,
+    of,
+  )
   await admin.query('update photos set name = $2 where organisation_id = $1', of)
   await admin.query('update rule_sets set name = $2, place = $2 where organisation_id = $1', of)
   const found = await admin.query(
-    `select v.job_id as "jobId", v.id as "variantId", p.id as "photoId", r.id as "setId" from variants v
+    `select v.job_id as "jobId", v.id as "variantId", p.id as "photoId", r.id as "setId", 'only-' || $2 as code from variants v
      join rule_sets r on r.organisation_id = v.organisation_id join photos p
      on p.organisation_id = v.organisation_id and p.job_id = v.job_id where v.organisation_id = $1 order by v.id limit 1`,
-    [of[0]],
+    of,
   )
   return found.rows[0]
 }
@@ -85,12 +91,13 @@ beforeAll(async () => {
 })
 afterAll(() => application.close())
 
-const filled = (pattern: string, { jobId, variantId, photoId, setId }: Ids) =>
+const filled = (pattern: string, { jobId, variantId, photoId, setId, code }: Ids) =>
   pattern
     .replace(':jobId', jobId)
     .replace(':variantId', variantId)
     .replace(':photoId', photoId)
     .replace(':setId', setId)
+    .replace(':code', code)
     .replace(/:[^/]+/g, 'none')
     .replace('*', 'no/such')
 
@@ -136,6 +143,7 @@ function comparable({ status, body, location }: Answered, of: Ids): string {
     .replaceAll(of.variantId, 'VARIANT')
     .replaceAll(of.photoId, 'PHOTO')
     .replaceAll(of.setId, 'SET')
+    .replaceAll(of.code, 'CODE')
     .replace(/nonce="[^"]*"/g, '')
 }
 
@@ -146,7 +154,7 @@ const named = lines.map((line) => ({
   reach: reachOf[line.pattern] ?? ('missing' as const),
 }))
 const closed = named.filter(({ reach }) => reach !== 'open')
-const withIds = closed.filter(({ pattern }) => /:(jobId|variantId|photoId|setId)/.test(pattern))
+const withIds = closed.filter(({ pattern }) => /:(jobId|variantId|photoId|setId|code)/.test(pattern))
 
 /** What a method of a line asks of a role; undefined where the line does not know the method. */
 function needOf(reach: (typeof named)[number]['reach'], method: Method) {
@@ -207,7 +215,7 @@ describe.each(withIds)('$pattern', ({ line, reach }) => {
       const { status } = await ask(
         'designer',
         'GET',
-        filled(line.pattern, { jobId: id, variantId: id, photoId: id, setId: id }),
+        filled(line.pattern, { jobId: id, variantId: id, photoId: id, setId: id, code: id }),
       )
       expect(needOf(reach, 'GET') ? [404] : [400, 405], id).toContain(status)
     }

@@ -56,6 +56,8 @@ export const reachOf: Record<string, Reach> = {
   '/api/variants/:variantId/seats.csv': { GET: 'export' },
   '/api/variants/:variantId/seats/:seatId/explain': { GET: 'view' },
   '/api/heaters': { GET: 'view' },
+  '/api/heaters/:code/beam': { GET: 'view', PUT: 'edit-beams', DELETE: 'edit-beams' },
+  '/api/heaters/:code/beam.csv': { GET: 'export' },
   '/api/flux': { POST: 'any member' },
   '/api/*': 'any member',
   '/*': 'open',

@@ -121,6 +121,8 @@ describe('the catalogue of the database', () => {
       brief_revisions: 'INSERT SELECT',
       briefs: 'INSERT SELECT UPDATE',
       hanging_data: 'INSERT SELECT UPDATE',
+      heater_beam_revisions: 'INSERT SELECT',
+      heater_beams: 'INSERT SELECT UPDATE',
       heater_models: 'DELETE INSERT SELECT UPDATE',
       house_rules: 'INSERT SELECT UPDATE',
       jobs: 'INSERT SELECT UPDATE',

@@ -38,6 +38,18 @@ beforeAll(async () => {
       `insert into house_rules (organisation_id, revision, body, updated_by) values ($1, 1, '{}', $2)`,
       [organisation, person],
     )
+    const [{ code }] = (
+      await admin.query('select code from heater_models where organisation_id = $1 limit 1', [organisation])
+    ).rows
+    await admin.query(`insert into heater_beams (organisation_id, code, revision, updated_by) values ($1, $2, 1, $3)`, [
+      organisation,
+      code,
+      person,
+    ])
+    await admin.query(
+      `insert into heater_beam_revisions (organisation_id, code, revision, content_hash, author_id) values ($1, $2, 1, 'h', $3)`,
+      [organisation, code, person],
+    )
     await admin.query(`insert into audit_events (organisation_id, action, subject) values ($1, 'a', 's')`, [
       organisation,
     ])
@@ -90,7 +102,16 @@ describe('row-level security alone, without any filter of the application', () =
       "select md5(string_agg(j::text, '' order by id)) as sum from jobs j where organisation_id = $1",
       [other],
     )
-    for (const table of ['jobs', 'sites', 'briefs', 'variants', 'heater_models', 'offer_links', 'saved_answers']) {
+    for (const table of [
+      'jobs',
+      'sites',
+      'briefs',
+      'variants',
+      'heater_models',
+      'heater_beams',
+      'offer_links',
+      'saved_answers',
+    ]) {
       const changed = await as(
         own,
         `update ${table} set organisation_id = organisation_id where organisation_id = $1`,
@@ -134,7 +155,14 @@ describe('row-level security alone, without any filter of the application', () =
 })
 
 describe('what is kept for good', () => {
-  const kept = ['site_revisions', 'brief_revisions', 'variant_revisions', 'rule_set_revisions', 'audit_events']
+  const kept = [
+    'site_revisions',
+    'brief_revisions',
+    'variant_revisions',
+    'rule_set_revisions',
+    'heater_beam_revisions',
+    'audit_events',
+  ]
 
   it.each(kept)('%s is neither changed nor removed by the application', async (table) => {
     await expect(as(own, `update ${table} set organisation_id = organisation_id`)).rejects.toThrow(/permission denied/)

@@ -4,7 +4,7 @@ export type Role = (typeof roles)[number]
 
 /**
  * Who may do what. `view` reads jobs, sites, variants and comparisons; `view-installation` reads the installation set
- * only; `export` takes pictures and tables away; `submit` asks for a review, `review` answers it and gives exceptions.
+ * only; `edit-beams` gives a model a beam that was measured; `export` takes pictures and tables away; `submit` asks for a review, `review` answers it and gives exceptions.
  */
 const allowed = {
   view: ['owner', 'designer', 'engineer', 'sales'],
@@ -17,6 +17,7 @@ const allowed = {
   review: ['owner', 'engineer'],
   'edit-rules': ['owner', 'engineer'],
   'edit-catalogue': ['owner'],
+  'edit-beams': ['owner', 'engineer'],
   'edit-prices': ['owner'],
   'send-offer': ['owner', 'sales'],
   export: ['owner', 'designer', 'engineer', 'sales'],
@@ -39,6 +40,7 @@ export const actions: readonly Action[] = [
   'review',
   'edit-rules',
   'edit-catalogue',
+  'edit-beams',
   'edit-prices',
   'send-offer',
   'export',

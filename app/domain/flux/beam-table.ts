@@ -1,11 +1,8 @@
 import { beamOf, solidAngleOf } from '#app/domain/flux/beam.ts'
-import type { BeamData } from '#app/domain/heaters/heater-model.ts'
-
-/** A beam given as a table, as a data sheet or a measurement writes it. */
-type BeamTableData = Extract<BeamData, { kind: 'table' }>
+import type { BeamTableData } from '#app/domain/heaters/heater-model.ts'
 
 /** A place in a table that is not right: 1-based, as a sheet shows it. */
-interface CellFault {
+export interface CellFault {
   readonly row: number
   readonly column: number
   readonly error: string
@@ -143,4 +140,13 @@ export function beamTableOf(csv: string, source: string): BeamTable {
   const cells = lines.map((line) => line.split(separator))
   const last = cells.findLastIndex((row) => !isBlank(row))
   return readSheet(new Sheet(cells.slice(0, last + 1)), source)
+}
+
+/** A table as CSV that `beamTableOf` reads again: figures as they are, also those of rows that are too long or missing. */
+export function beamCsv({ acrossDeg, alongDeg, intensity }: Omit<BeamTableData, 'kind' | 'source'>): string {
+  const rows = Array.from({ length: Math.max(acrossDeg.length, intensity.length) }, (_, i) => [
+    acrossDeg[i] ?? '',
+    ...(intensity[i] ?? []),
+  ])
+  return [['across \\ along', ...alongDeg], ...rows].map((cells) => `${cells.join(',')}\r\n`).join('')
 }

@@ -22,9 +22,19 @@ const clearanceSchema = z.object({
   below: positive.nullable(),
 })
 
+/** Relative intensity over across × along angles, degrees. */
+export const beamTableSchema = z.strictObject({
+  kind: z.literal('table'),
+  acrossDeg: z.array(z.number()).min(2),
+  alongDeg: z.array(z.number()).min(2),
+  /** One row per across angle, one column per along angle. */
+  intensity: z.array(z.array(z.number().nonnegative())),
+  source: z.string(),
+})
+
 /**
  * Relative radiant intensity as a data sheet gives it. `angles`: full angles between the directions of half the peak
- * intensity, fitted by a power of the cosine. `table`: relative intensity over across × along angles in degrees.
+ * intensity, fitted by a power of the cosine. `table`: as it was measured.
  */
 const beamDataSchema = z.discriminatedUnion('kind', [
   z.object({
@@ -33,15 +43,10 @@ const beamDataSchema = z.discriminatedUnion('kind', [
     alongFullAngleDeg: z.number().positive().lt(180),
     source: z.string(),
   }),
-  z.object({
-    kind: z.literal('table'),
-    acrossDeg: z.array(z.number()).min(2),
-    alongDeg: z.array(z.number()).min(2),
-    /** One row per across angle, one column per along angle. */
-    intensity: z.array(z.array(z.number().nonnegative())),
-    source: z.string(),
-  }),
+  beamTableSchema,
 ])
+/** A beam given as a table. */
+export type BeamTableData = z.infer<typeof beamTableSchema>
 export type BeamData = z.infer<typeof beamDataSchema>
 
 /** A heater model as its manual and data sheet state it. Lengths m, power W, temperatures °C, angles degrees. */

@@ -26,6 +26,7 @@ const actionWords: Record<Action, string> = {
   review: 'Review: approve, return, give exceptions with a reason',
   'edit-rules': 'Change rule sets',
   'edit-catalogue': 'Change the catalogue',
+  'edit-beams': 'Give a heater its measured beam',
   'edit-prices': 'Change prices',
   'send-offer': 'Send offers',
   export: 'Take pictures and tables away',
