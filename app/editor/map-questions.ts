@@ -1,6 +1,7 @@
 import type { Brief } from '#app/domain/brief/brief.ts'
 import { absorptanceOf } from '#app/domain/comfort/sources.ts'
 import { windOf } from '#app/domain/comfort/seat-warmth.ts'
+import { openSkyTemperature } from '#app/domain/comfort/surroundings.ts'
 import { emitterOf, type Emitter } from '#app/domain/flux/emitter.ts'
 import type { MapQuantity, MapQuestion } from '#app/domain/flux/map-question.ts'
 import { obstructionsOf } from '#app/domain/flux/shading.ts'
@@ -106,16 +107,14 @@ function quantityOf({ site, brief, layout, models, choice }: MapSubject, emitter
   if (map.kind === 'share') return { kind: 'share', emitterId: map.heaterId }
   if (map.kind !== 'feels-like') return map
   const waves = new Map(layout.heaters.map((heater) => [heater.id, models.get(heater.model)?.wave]))
-  const underCover = site.covers.length > 0
   const conditions = {
     airTemperature: brief.airTemperature,
-    surroundingsTemperature: underCover
-      ? brief.airTemperature
-      : (brief.surroundingsTemperature ?? brief.airTemperature),
+    surroundingsTemperature: openSkyTemperature(brief),
     wind: windOf(brief, map.wind),
     clothing: brief.clothing,
     posture: 'seated' as const,
     absorptance: emitters.map((emitter) => absorptanceOf(waves.get(emitter.id) ?? 'medium-wave')),
+    covers: site.covers,
   }
   return { kind: 'feels-like', conditions }
 }

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { largestExponent } from '#app/domain/flux/answerable.ts'
 import { emitterOf, groupEmitter, type Emitter } from '#app/domain/flux/emitter.ts'
 import { touchesElement } from '#app/domain/flux/irradiance.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
@@ -14,7 +15,7 @@ const most = { heaters: 200, elements: 12, points: 5000 } as const
 
 const coordinate = z.number().min(-10_000).max(10_000)
 const angle = z.number().min(-3600).max(3600)
-const exponent = z.number().min(0).max(50)
+const exponent = z.number().min(0).max(largestExponent)
 const voltage = z.number().positive().max(1000)
 const place = { at: z.strictObject({ x: coordinate, y: coordinate, z: coordinate }), turnDeg: angle, tiltDeg: angle }
 

@@ -1,12 +1,15 @@
 import type { Conditions } from '#app/domain/comfort/feels-like.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
+import type { Cover } from '#app/domain/site/site.ts'
 import type { Vec2 } from '#app/domain/vector.ts'
 
-/** What the feels-like map needs besides the emitters. */
+/** What the feels-like map needs besides the emitters; the surroundings are those of open sky. */
 export interface MapConditions extends Conditions {
   /** Share of the radiation that clothing and skin take up, one per emitter in the question's order. */
   readonly absorptance: readonly number[]
+  /** Where a body lies below one of them, the surroundings are as warm as the air. Absent: open sky everywhere. */
+  readonly covers?: readonly Cover[]
 }
 
 /**

@@ -1,10 +1,10 @@
+import { requireAnswerable } from '#app/domain/flux/answerable.ts'
 import { windowOf, type Extent, type Window } from '#app/domain/flux/cells.ts'
 import { cutOffFor, type Area } from '#app/domain/flux/cut-off.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { Grid } from '#app/domain/flux/grid.ts'
 import { addElement } from '#app/domain/flux/kernel.ts'
 import { seenOf } from '#app/domain/flux/shaded-cells.ts'
-import { maxHeaters } from '#app/domain/layout/limits.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
 import { sameData } from '#app/domain/same-data.ts'
 
@@ -58,21 +58,11 @@ function isSameGrid(a: Grid, b: Grid): boolean {
   )
 }
 
-/** Refuses what would give a map without meaning or without end. */
-function requireAnswerable(emitters: readonly Emitter[]): void {
-  if (emitters.length > maxHeaters) throw new RangeError(`a map has at most ${maxHeaters} heaters`)
-  const isFinite = ({ frame, elements }: Emitter) =>
-    [frame.u, frame.v, frame.w].flat().every(Number.isFinite) &&
-    elements.every((e) => [...e.centre, e.length, e.radiantPower].every(Number.isFinite))
-  const broken = emitters.find((emitter) => !isFinite(emitter))
-  if (broken) throw new RangeError(`figures of heater ${broken.id} are not finite`)
-}
-
 /**
  * The map of the emitters on a grid. From the map before, the layers of emitters that are the same by value, and the
  * sum as far as it holds, are kept: moving one heater costs one layer. The map before must not be used afterwards.
- * It is computed in a worker; on a page's main thread it throws. A RangeError for more than 200 emitters or figures that
- * are not finite.
+ * It is computed in a worker; on a page's main thread it throws. A RangeError as
+ * `requireAnswerable` gives it.
  */
 export function irradianceMap(
   before: FluxMap | null,

@@ -1,12 +1,16 @@
+import { coveredCells } from '#app/domain/comfort/covered-cells.ts'
 import { feelsLike, feelsLikePerField } from '#app/domain/comfort/feels-like.ts'
+import { requireConditions } from '#app/domain/comfort/map-conditions.ts'
 import { effectiveAreaShare, meanProjectedAreaFactor, type Posture } from '#app/domain/comfort/projected-area.ts'
+import { requireAnswerable } from '#app/domain/flux/answerable.ts'
 import { addDirected } from '#app/domain/flux/directed-map.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import { gridOf, type Grid } from '#app/domain/flux/grid.ts'
 import { irradianceMap, type FluxMap, type Layer } from '#app/domain/flux/map.ts'
-import type { MapConditions, MapQuestion } from '#app/domain/flux/map-question.ts'
+import type { MapConditions, MapQuantity, MapQuestion } from '#app/domain/flux/map-question.ts'
 import { seenOf } from '#app/domain/flux/shaded-cells.ts'
 import type { Obstruction } from '#app/domain/flux/shading.ts'
+import type { Cover } from '#app/domain/site/site.ts'
 import { sameData } from '#app/domain/same-data.ts'
 import { contoursOf, type HeatPicture } from '#app/drawing/heat/contours.ts'
 
@@ -36,15 +40,26 @@ interface FieldMap {
   readonly layers: readonly FieldLayer[]
 }
 
+/** Where a grid lies under the covers of the site: 1, else 0. */
+interface CoveredMap {
+  readonly grid: Grid
+  readonly covers: readonly Cover[]
+  readonly cells: Uint8Array
+}
+
 /** What is kept between questions; only changed emitters are computed anew. Make one with `emptyMapCache`. */
 export interface MapCache {
   asked: Pick<MapQuestion, 'floor' | 'z' | 'cell'> | null
   grid: Grid | null
   map: FluxMap | null
   field: FieldMap | null
+  covered: CoveredMap | null
 }
 
-export const emptyMapCache = (): MapCache => ({ asked: null, grid: null, map: null, field: null })
+export const emptyMapCache = (): MapCache => ({
+  ...{ asked: null, grid: null },
+  ...{ map: null, field: null, covered: null },
+})
 
 /** Altitudes for which the mean projected area is tabulated, by their sine. */
 const altitudeSteps = 512
@@ -84,13 +99,23 @@ function fieldMap(before: FieldMap | null, grid: Grid, question: MapQuestion, po
   return { grid, posture, obstructions, layers }
 }
 
-/** Feels-like temperature of a cell: linear in the absorbed field, of which each emitter gives its absorptance. */
-function feelsLikeValues(field: FieldMap, conditions: MapConditions): (at: number) => number {
-  const without = feelsLike(0, conditions)
+function coveredFor(grid: Grid, covers: readonly Cover[], before: CoveredMap | null): CoveredMap {
+  if (before?.grid === grid && sameData(before.covers, covers)) return before
+  return { grid, covers, cells: coveredCells(grid, covers) }
+}
+
+/**
+ * Feels-like temperature of a cell: linear in the absorbed field, of which each emitter gives its absorptance. What a
+ * cell feels like without heaters depends on what surrounds it: a cover or the open sky.
+ */
+function feelsLikeValues(field: FieldMap, conditions: MapConditions, covered: Uint8Array): (at: number) => number {
+  const openSky = feelsLike(0, conditions)
+  const underCover = feelsLike(0, { ...conditions, surroundingsTemperature: conditions.airTemperature })
   const perField = feelsLikePerField(conditions) * effectiveAreaShare[conditions.posture]
   const shares = field.layers.map(({ values }, i) => ({ values, absorptance: conditions.absorptance[i] ?? 0 }))
   return (at) =>
-    without + perField * shares.reduce((sum, { values, absorptance }) => sum + absorptance * (values[at] ?? 0), 0)
+    (covered[at] === 1 ? underCover : openSky) +
+    perField * shares.reduce((sum, { values, absorptance }) => sum + absorptance * (values[at] ?? 0), 0)
 }
 
 /** Value of a layer at a cell of the whole grid; 0 outside the layer's window. */
@@ -135,7 +160,8 @@ function writeQuantity(values: Float32Array, question: MapQuestion, grid: Grid, 
   if (quantity.kind === 'feels-like') {
     const field = fieldMap(cache.field, grid, question, quantity.conditions.posture)
     cache.field = field
-    return writeCells(values, grid, feelsLikeValues(field, quantity.conditions))
+    cache.covered = coveredFor(grid, quantity.conditions.covers ?? [], cache.covered)
+    return writeCells(values, grid, feelsLikeValues(field, quantity.conditions, cache.covered.cells))
   }
   const { total, layers } = fluxMapFor(question, grid, cache)
   if (quantity.kind === 'flux') return writeSum(values, grid, total)
@@ -153,14 +179,22 @@ function fluxMapFor(question: MapQuestion, grid: Grid, cache: MapCache): FluxMap
   return cache.map
 }
 
+function requireQuantity(quantity: MapQuantity, emitters: number): void {
+  if (quantity.kind === 'feels-like') requireConditions(quantity.conditions, emitters)
+  if (quantity.kind === 'overlap' && !Number.isFinite(quantity.threshold))
+    throw new RangeError('the threshold of overlap must be finite')
+}
+
 /**
  * Answers a question about the map: values on a grid over the floor, NaN outside it, and their fills and isolines (none
  * are traced when neither levels nor edges are asked for). The
- * cache is kept by the asker's worker and changed in place. Throws a RangeError for a floor, height, cell size or
- * emitter without meaning, and on a page's main thread.
+ * cache is kept by the asker's worker and changed in place. Throws a RangeError for a floor, height, cell size,
+ * emitter, threshold or conditions without meaning, and on a page's main thread.
  */
 export function answerMap(question: MapQuestion, cache: MapCache): MapAnswer {
   if ('document' in globalThis) throw new Error('the map is computed in a worker')
+  requireAnswerable(question.emitters)
+  requireQuantity(question.quantity, question.emitters.length)
   const grid = gridFor(question, cache)
   const values = new Float32Array(grid.columns * grid.rows)
   const peak = writeQuantity(values, question, grid, cache)

@@ -1,3 +1,4 @@
+import { requireAnswerable } from '#app/domain/flux/answerable.ts'
 import type { Emitter } from '#app/domain/flux/emitter.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
@@ -14,11 +15,12 @@ export interface SectionQuestion {
 }
 
 /**
- * Fills and isolines of irradiance in each section, in the order of the cuts; null without emitters. Throws on a page's
- * main thread.
+ * Fills and isolines of irradiance in each section, in the order of the cuts; null without emitters. Throws a RangeError
+ * as `requireAnswerable` does, and on a page's main thread.
  */
 export function answerSections({ emitters, site, cuts, levels, edges }: SectionQuestion): (SectionPicture | null)[] {
   if ('document' in globalThis) throw new Error('sections are computed in a worker')
+  requireAnswerable(emitters)
   const scale: Pick<QuantityScale, 'levels' | 'edges'> = { levels, edges }
   return cuts.map((cut) => {
     const field = sectionValues(emitters, site, cut)

@@ -145,6 +145,49 @@ describe('what a map shows', () => {
   })
 })
 
+describe('what has no meaning is refused with the limit', () => {
+  const given = { ...conditions, absorptance: [1, 1, 1] }
+  const quantities: readonly MapQuantity[] = [
+    { kind: 'flux' },
+    { kind: 'share', emitterId: 'b' },
+    { kind: 'overlap', threshold: 80 },
+    { kind: 'feels-like', conditions: given },
+  ]
+  const [a, b, c] = [emitters[0]!, emitters[1]!, emitters[2]!]
+  const refused = (quantity: MapQuantity, limit: string, more: Partial<MapQuestion> = {}) => {
+    const cache = emptyMapCache()
+    const ask = () => answerMap({ ...question, ...more, quantity }, cache)
+    expect(ask).toThrow(RangeError)
+    expect(ask).toThrow(limit)
+    expect(cache).toEqual(emptyMapCache())
+  }
+  const question = ask({ kind: 'flux' })
+
+  it.each(quantities)('$kind: heaters without meaning or without end, before anything is computed', (quantity) => {
+    const broken = { ...b, elements: [{ ...b.elements[0]!, radiantPower: NaN }] }
+    refused(quantity, 'figures of heater b are not finite', { emitters: [a, broken, c] })
+    refused(quantity, 'at most 200', { emitters: Array.from({ length: 10_000 }, () => a) })
+    const beam = { kind: 'cosine' as const, across: NaN, along: 1 }
+    refused(quantity, 'from 0 to 50', { emitters: [a, b, { ...c, beam }] })
+  })
+
+  it.each([
+    [{ airTemperature: NaN }, 'temperature must be finite'],
+    [{ surroundingsTemperature: -Infinity }, 'temperature must be finite'],
+    [{ wind: NaN }, '0 or more'],
+    [{ wind: -1 }, '0 or more'],
+    [{ clothing: -0.1 }, '0 or more'],
+    [{ clothing: Infinity }, '0 or more'],
+    [{ absorptance: [1, NaN, 1] }, 'from 0 to 1'],
+    [{ absorptance: [1, 1.1, 1] }, 'from 0 to 1'],
+    [{ absorptance: [1, 1] }, 'from 0 to 1'],
+  ])('feels-like: %o', (change, limit) => {
+    refused({ kind: 'feels-like', conditions: { ...given, ...change } }, limit)
+  })
+
+  it('overlap: a threshold that is not finite', () => refused({ kind: 'overlap', threshold: NaN }, 'threshold'))
+})
+
 describe('between questions', () => {
   it('the cache keeps what has not changed, whichever quantity is asked', () => {
     const cache = emptyMapCache()

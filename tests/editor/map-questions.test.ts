@@ -1,0 +1,106 @@
+import { describe, expect, it } from 'vitest'
+import { seatWarmth, windNames, type WindName } from '#app/domain/comfort/seat-warmth.ts'
+import { obstructionsOf } from '#app/domain/flux/shading.ts'
+import type { Cover } from '#app/domain/site/site.ts'
+import type { Vec3 } from '#app/domain/vector.ts'
+import { answerMap, emptyMapCache, type MapAnswer } from '#app/drawing/heat/map-picture.ts'
+import { mapQuestion, scaleOf, type MapSubject } from '#app/editor/map-questions.ts'
+import { mapValueAt } from '#app/editor/read-out.tsx'
+import { plainView, type ViewChoice } from '#app/editor/view-choice.ts'
+import { brief, heater, model, modelsOf, seat, site } from '#tests/domain/comfort/terrace.ts'
+
+const coverOf = (id: string, corners: Vec3[]): Cover => ({
+  ...{ id, name: id, material: 'non-combustible', opening: false, swing: 0, voidDepth: null, note: null },
+  corners: corners.map(([x, y, z]): [number, number, number] => [x, y, z]),
+})
+/** A level cover over the front half, and a low one, under whose height a body stands out, in the far corner. */
+const covers = [
+  coverOf('front', [
+    [-5, -5, 3],
+    [5, -5, 3],
+    [5, 0, 3],
+    [-5, 0, 3],
+  ]),
+  coverOf('low', [
+    [3, 3, 0.5],
+    [5, 3, 0.5],
+    [5, 5, 0.5],
+    [3, 5, 0.5],
+  ]),
+]
+const heaters = [heater('H1', { x: -0.6, y: 0.4, turnDeg: 30 }), heater('H2', { x: 1.2, y: -0.8, tiltDeg: 25 })]
+const cold = brief({ surroundingsTemperature: -8 })
+const subjectOf = (choice: Partial<ViewChoice>, change: Partial<MapSubject> = {}): MapSubject => ({
+  site: site([], { covers }),
+  brief: cold,
+  layout: { title: 'As drawn', heaters },
+  models: modelsOf(model()),
+  choice: { ...plainView, ...choice },
+  ...change,
+})
+const questionOf = (subject: MapSubject) =>
+  mapQuestion(subject, scaleOf(subject.choice, subject.brief, 'metric'), 'sharp')!
+const answerOf = (subject: MapSubject) => answerMap({ ...questionOf(subject), levels: [], edges: [] }, emptyMapCache())
+
+/** Centre of the cell at a place: where the cell's value is to be right. */
+function centreAt({ grid }: MapAnswer, x: number, y: number) {
+  const at = (from: number, value: number) => from + (Math.floor((value - from) / grid.cell) + 0.5) * grid.cell
+  return { x: at(grid.x0, x), y: at(grid.y0, y) }
+}
+
+/** What a seat at a place feels like before and after, °C, the mean over all facings: the map does not know which. */
+function meanSeat(subject: MapSubject, place: { x: number; y: number }, wind: WindName, isShaded: boolean) {
+  const facings = Array.from({ length: 72 }, (_, k) => k * 5)
+  const seats = facings.map((facingDeg) => seat(`S${facingDeg}`, { ...place, facingDeg }))
+  const { layout, models } = subject
+  const there = { ...subject.site, seats }
+  const obstructions = isShaded ? { obstructions: obstructionsOf(there, layout, models) } : {}
+  const warmth = seatWarmth({ site: there, brief: subject.brief, layout, models, ...obstructions })
+  const mean = (of: (each: (typeof warmth)[number]) => number) => warmth.reduce((sum, each) => sum + of(each), 0) / 72
+  return {
+    before: mean(({ feelsLike }) => feelsLike[wind].before),
+    after: mean(({ feelsLike }) => feelsLike[wind].after!),
+    underCover: warmth[0]!.surroundings.underCover,
+  }
+}
+
+describe('the feels-like map', () => {
+  const places = [
+    { where: 'under the cover', x: 0.4, y: -1.2, underCover: true },
+    { where: 'under the cover, at its edge', x: 0.4, y: -0.08, underCover: true },
+    { where: 'beside the cover, at its edge', x: 0.4, y: 0.08, underCover: false },
+    { where: 'under open sky', x: -1, y: 1.4, underCover: false },
+    { where: 'over a cover that is lower than the body', x: 4, y: 4, underCover: false },
+  ]
+  const cases = places.flatMap((place) => windNames.map((wind) => ({ ...place, wind })))
+
+  it.each(cases)('equals the seat $where, $wind', ({ x, y, wind, underCover }) => {
+    for (const shade of [false, true]) {
+      const subject = subjectOf({ map: { kind: 'feels-like', wind }, shade })
+      const answer = answerOf(subject)
+      const place = centreAt(answer, x, y)
+      const expected = meanSeat(subject, place, wind, shade)
+      expect(expected.underCover).toBe(underCover)
+      const value = mapValueAt(answer, [place.x, place.y])!
+      expect(Math.abs(value - expected.after)).toBeLessThan(0.005 * (expected.after - expected.before) + 0.01)
+    }
+  })
+
+  it('follows the covers and the height between questions', () => {
+    const cache = emptyMapCache()
+    const ask = (change: Partial<MapSubject>, height = 0.6) => {
+      const choice = { map: { kind: 'feels-like', wind: 'calm' }, plane: { kind: 'height', height } } as const
+      const answer = answerMap({ ...questionOf(subjectOf(choice, change)), levels: [], edges: [] }, cache)
+      return mapValueAt(answer, [-4.5, -4.5])!
+    }
+    const under = ask({})
+    expect(structuredClone(cache.covered!.cells).some((is) => is === 1)).toBe(true)
+    const kept = cache.covered
+    ask({ brief: brief({ surroundingsTemperature: -8, windDesign: 2 }) })
+    expect(cache.covered).toBe(kept)
+    expect(ask({ site: site([], { covers: [] }) })).toBeLessThan(under - 1)
+    expect(ask({ site: site([], { covers }) })).toBe(under)
+    const above = ask({}, 3.2)
+    expect(above).toBeLessThan(under - 1)
+  })
+})
