@@ -3,7 +3,7 @@ import { groupEmitter, type Emitter } from '#app/domain/flux/emitter.ts'
 import { irradianceAt } from '#app/domain/flux/irradiance.ts'
 import { gaussNodes } from '#app/domain/flux/nodes.ts'
 import type { Vec3 } from '#app/domain/vector.ts'
-import { cosine } from '#tests/support/emitters.ts'
+import { cosine, line } from '#tests/support/emitters.ts'
 
 /**
  * Configuration factors from a small plane to a diffuse surface, against closed forms of J. R. Howell, "A Catalog of
@@ -62,13 +62,20 @@ describe('a small plane and a disc', () => {
     within(irradianceAt(disc([0, 0, h], r), [0, 0, 0], up), (r * r) / (h * h + r * r))
   })
 
-  // The same rows as figures: 0.2 at h = 2, r = 1; 0.102284 at a = 1.5; 0.0656356 upright at l = 1.5.
+  // R7, R8, R9: the same as printed figures, to half of the last digit.
   it.each([
-    ['parallel, on the axis', [0, 0, 0], [0, 0, 1], 0.2],
-    ['parallel, 1.5 aside', [1.5, 0, 0], [0, 0, 1], 0.102284],
-    ['upright, 1.5 aside', [1.5, 0, 0], [-1, 0, 0], 0.0656356],
-  ] as const)('printed figures, h = 2, r = 1: %s', (_, point, normal, expected) => {
-    within(irradianceAt(disc([0, 0, 2], 1), point, normal), expected, 5e-6)
+    ['R7', 'parallel, on the axis', [0, 0, 0], [0, 0, 1], 0.2, 6],
+    ['R8', 'parallel, 1.5 aside', [1.5, 0, 0], [0, 0, 1], 0.102284, 6],
+    ['R9', 'upright, 1.5 aside', [1.5, 0, 0], [-1, 0, 0], 0.0656356, 7],
+  ] as const)('%s: printed figures, h = 2, r = 1: %s', (_, __, point, normal, expected, digits) => {
+    expect(irradianceAt(disc([0, 0, 2], 1), point, normal)).toBeCloseTo(expected, digits)
+  })
+
+  // R26: the five-times rule for a Lambert disc: R²/h² of a point against R²/(h² + R²), five diameters away, 1e-6.
+  it('R26: a point in place of a disc errs by 1.000 % five diameters away', () => {
+    const point = line(cosine(1, 1), { length: 0, power: Math.PI * 0.3 ** 2, at: [0, 0, 3] })
+    const taken = irradianceAt(point, [0, 0, 0], up)
+    within(taken / irradianceAt(disc([0, 0, 3], 0.3), [0, 0, 0], up), 1.01)
   })
 
   // Parallel, a aside: ½ [1 − (1 + H² − R²) / √(Z² − 4R²)], H = h/a, R = r/a, Z = 1 + H² + R².
@@ -135,26 +142,27 @@ describe('a small plane and a rectangle', () => {
     within(irradianceAt(rectangle([a / 2, b / 2, c], a, b), [0, 0, 0], up), corner(a, b, c))
   })
 
-  it('printed figures: 0.138532 under the corner of a unit square, 0.0152626 for 1.0 × 0.2 m at 2 m', () => {
-    within(irradianceAt(rectangle([0.5, 0.5, 1], 1, 1), [0, 0, 0], up), 0.138532, 5e-6)
-    within(irradianceAt(rectangle([0, 0, 2], 1, 0.2), [0, 0, 0], up), 0.0152626, 5e-6)
+  // To half of the last digit printed; a superposed corner formula beside it to 1e-6.
+  it('R10, R12: 0.138532 under the corner of a unit square, 0.0152626 for 1.0 × 0.2 m at 2 m', () => {
+    expect(irradianceAt(rectangle([0.5, 0.5, 1], 1, 1), [0, 0, 0], up)).toBeCloseTo(0.138532, 6)
+    expect(irradianceAt(rectangle([0, 0, 2], 1, 0.2), [0, 0, 0], up)).toBeCloseTo(0.0152626, 7)
     within(irradianceAt(rectangle([0, 0, 2], 0.2, 1), [0, 0, 0], up), 4 * corner(0.1, 0.5, 2))
   })
 
-  // Perpendicular, at a corner: (1/2π)[atan(1/Y) − Y/√(X²+Y²) atan(1/√(X²+Y²))]: the plane lies c from the edge of a
+  // R13 is the first row. Perpendicular, at a corner: (1/2π)[atan(1/Y) − Y/√(X²+Y²) atan(1/√(X²+Y²))]: the plane lies c from the edge of a
   // rectangle that stands a high and b long; X = a/b, Y = c/b.
   it.each([
-    [1, 1, 1, 0.0557342],
-    [2, 1, 0.5, null],
-    [0.6, 2, 1.5, null],
-  ])('perpendicular, a = %d, b = %d, c = %d', (a, b, c, printed) => {
+    ['R13: ', 1, 1, 1, 0.0557342],
+    ['', 2, 1, 0.5, null],
+    ['', 0.6, 2, 1.5, null],
+  ])('%sperpendicular, a = %d, b = %d, c = %d', (_, a, b, c, printed) => {
     const [X, Y] = [a / b, c / b]
     const root = Math.hypot(X, Y)
     const expected = (Math.atan(1 / Y) - (Y / root) * Math.atan(1 / root)) / (2 * Math.PI)
     // The rectangle stands on the floor along y, its beam towards −x: turned 90°, tilted 90° to the left of +y.
     const wall = rectangle([c, b / 2, a / 2], b, a, 90, 90)
     within(irradianceAt(wall, [0, 0, 0], up), expected)
-    if (printed) within(expected, printed, 1e-6)
+    if (printed) expect(irradianceAt(wall, [0, 0, 0], up)).toBeCloseTo(printed, 7)
   })
 
   // An infinitely long strip seen between the angles φ1 and φ2 from the normal: ½ (sin φ2 − sin φ1).

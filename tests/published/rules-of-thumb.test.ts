@@ -60,12 +60,13 @@ const within = (value: number, expected: number, relative: number) =>
   expect(Math.abs(value / expected - 1), `${value} for ${expected}`).toBeLessThanOrEqual(relative)
 
 describe('two heaters at a spacing', () => {
+  // T1, T2, T4: ± 0.01, ± 0.05 m², 1 %.
   it.each([
     [1.2, 0.642, 3.27, 538.9],
     [2.1, 0.782, 0.8, 267.8],
     [2.4, 0.816, 0.26, 204.1],
   ])(
-    '%d m: share of the seating with 80 W/m² or more %d, overlap %d m², in the middle %d W/m²',
+    'T1, T2, T4: %d m: share of the seating with 80 W/m² or more %d, overlap %d m², in the middle %d W/m²',
     (spacing, share, overlap, middle) => {
       const both = pair(spacing)
       const seating = areaWhere(both, 5.4, 3.6, (parts) => sum(parts) >= 80)
@@ -77,23 +78,26 @@ describe('two heaters at a spacing', () => {
     },
   )
 
-  it('2.1 m: a middle seat gets 231.4 W/m², an edge seat about half, 118.9', () => {
+  // 1 %.
+  it('T7: 2.1 m: a middle seat gets 231.4 W/m², an edge seat about half, 118.9', () => {
     within(below(pair(2.1), 0.6, 0.9), 231.4, 0.01)
     within(below(pair(2.1), 1.95, 0.9), 118.9, 0.01)
   })
 })
 
 describe('height', () => {
+  // 1 %.
   it.each([
     [0.75, 305],
     [1.0, 405],
     [1.2, 524],
     [1.75, 1321],
-  ])('at %d m beneath one heater: %d W/m²', (z, expected) => {
+  ])('T10: at %d m beneath one heater: %d W/m²', (z, expected) => {
     within(below([heater(0)], 0, 0, z), expected, 0.01)
   })
 
-  it('0.20 m lower: the peak rises by 30 %, the outskirts and the overlap shrink, the spread at 150 W/m² grows', () => {
+  // Peaks and areas 1 %, the overlap 5 %.
+  it('T6, T11: 0.20 m lower: the peak rises by 30 %, the outskirts and the overlap shrink, the spread at 150 W/m² grows', () => {
     const [high, low] = [heater(0), heater(0, { underside: 2.3 })]
     within(below([high], 0, 0), 404.7, 0.01)
     within(below([low], 0, 0), 524.2, 0.01)
@@ -108,11 +112,12 @@ describe('height', () => {
 })
 
 describe('size', () => {
+  // 1 %.
   it.each([
     [3600, 3, 0.9, 7.45],
     [2400, 2, 0.75, 5.14],
     [1200, 1, 0.6, 1.99],
-  ])('%d W spreads 80 W/m² over its own area: smaller heaters over less', (power, elements, length, area) => {
+  ])('T8: %d W spreads 80 W/m² over its own area: smaller heaters over less', (power, elements, length, area) => {
     within(
       areaWhere([heater(0, { power, elements, length })], 8, 8, ([part]) => part! >= 80),
       area,
@@ -122,13 +127,14 @@ describe('size', () => {
 })
 
 describe('an upright edge that faces the long side', () => {
+  // 2 %.
   it.each([
     [0.1, 1373],
     [0.3, 558],
     [0.457, 330],
     [0.6, 223],
     [1.0, 98],
-  ])('%d m from the housing receives at most %d W/m²', (distance, expected) => {
+  ])('T9: %d m from the housing receives at most %d W/m²', (distance, expected) => {
     const x = 0.12 + distance
     const heights = Array.from({ length: 2500 }, (_, i) => i * 0.001)
     const peak = Math.max(...heights.map((z) => irradianceAt(heater(0), [x, 0, z], [-1, 0, 0])))

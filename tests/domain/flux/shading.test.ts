@@ -21,20 +21,6 @@ const obstruction = (shape: Shape, transmittance = 0): Obstruction => ({
   solids: solidsOf(shape),
 })
 
-const post = (top: number): Shape => ({ kind: 'box', x: [1.9, 2.1], y: [-0.1, 0.1], z: [0, top] })
-
-describe('a ray and a post', () => {
-  // Geometry: the ray (0, 0, 2.6) → (4, 0, 1) is at 1.8 m over the post.
-  it.each([
-    ['2.5 m high: blocked', 2.5, 0, 0],
-    ['1.7 m high: clear', 1.7, 0, 1],
-    ['2.5 m high, the ray 0.3 m aside: clear', 2.5, 0.3, 1],
-  ])('%s', (_, top, y, seen) => {
-    const source = line(cosine(1, 1), { at: [0, y, 2.6], length: 1e-4 })
-    expect(seenShare(source, [4, y, 1], [obstruction(post(top))])).toBe(seen)
-  })
-})
-
 describe('the hidden stretch of an element against rays of the test’s own', () => {
   /** Whether the straight way from a to b passes through a shape, by 4,000 steps. */
   const meets = (holds: (p: Vec3) => boolean, a: Vec3, b: Vec3) =>
