@@ -110,6 +110,40 @@ export const seatsInRows = (asked: Rows): Place[] =>
 export const facingTowards = (from: Vec2, to: Vec2): number =>
   from[0] === to[0] && from[1] === to[1] ? 90 : roundTurn(degrees(Math.atan2(to[1] - from[1], to[0] - from[0])))
 
+/** From a place to the nearest edge of a table, m; 0 on the table. */
+function edgeDistance({ centre, size, turnDeg, form }: Table, [x, y]: Vec2): number {
+  const at = turned([x - centre[0], y - centre[1]], -turnDeg)
+  if (form === 'round') return Math.max(0, Math.hypot(...at) - size[0] / 2)
+  return Math.hypot(Math.max(0, Math.abs(at[0]) - size[0] / 2), Math.max(0, Math.abs(at[1]) - size[1] / 2))
+}
+
+/** Farther than this from a table nobody sits at it, m (common practice, no source). */
+const farthestSetback = 1.2
+
+/** How far before a person tells at which of two tables they sit, m. */
+const reach = 0.5
+
+/** Seats of a group that are at a table: none of the site's others is nearer to what is before them. */
+export const seatsAtTable = (site: Site, table: Table, group: string): Seat[] =>
+  site.seats.filter((seat) => {
+    const [dx, dy] = turned([reach, 0], seat.facingDeg)
+    const before: Vec2 = [seat.x + dx, seat.y + dy]
+    const own = edgeDistance(table, before)
+    const isNear = edgeDistance(table, [seat.x, seat.y]) <= farthestSetback
+    return seat.group === group && isNear && site.tables.every((other) => own <= edgeDistance(other, before))
+  })
+
+/** The site with seats at places in place of those of the same group that are at the table, and the ids they were given. */
+export function setSeatsAt(
+  site: Site,
+  table: Table,
+  places: readonly Place[],
+  facts: SeatFacts,
+): { site: Site; ids: string[] } {
+  const before = new Set(seatsAtTable(site, table, facts.group))
+  return addSeats({ ...site, seats: site.seats.filter((seat) => !before.has(seat)) }, places, facts)
+}
+
 /** The site with seats at places, numbered within their group, and the ids they were given. */
 export function addSeats(site: Site, places: readonly Place[], facts: SeatFacts): { site: Site; ids: string[] } {
   const stem = facts.group === '' ? 'seat' : facts.group.slice(0, 30)

@@ -1,9 +1,10 @@
 import { useState } from 'react'
 import {
-  addSeats,
   seatsAlong,
   seatsAround,
   seatsAtSides,
+  seatsAtTable,
+  setSeatsAt,
   usualHeights,
   usualSetback,
 } from '#app/domain/site/seating.ts'
@@ -47,7 +48,8 @@ export function SeatsAtTable({ table, onChoose }: { table: Table; onChoose: (cho
     posture: standing ? ('standing' as const) : ('seated' as const),
     ...usualHeights[standing ? 'standing' : 'seated'],
   }
-  const add = (old: Site) => addSeats(old, sitting ?? [], facts)
+  const add = (old: Site) => setSeatsAt(old, table, sitting ?? [], facts)
+  const replaced = seatsAtTable(site, table, group).length
   const refusal = sitting ? refusalOf(site, add(site).site) : null
   const count = (name: keyof typeof counts, label: string) => (
     <CountField
@@ -95,6 +97,11 @@ export function SeatsAtTable({ table, onChoose }: { table: Table; onChoose: (cho
         >
           Set {sitting?.length ?? 0} seats
         </Button>
+        {replaced > 0 && (
+          <span className="ml-2 text-2xs text-ink-3">
+            In place of the {replaced} of {group} {replaced === 1 ? 'that is' : 'that are'} at this table.
+          </span>
+        )}
       </p>
     </fieldset>
   )

@@ -5,6 +5,8 @@ import {
   seatsAlong,
   seatsAround,
   seatsAtSides,
+  seatsAtTable,
+  setSeatsAt,
   seatsInRows,
   usualHeights,
 } from '#app/domain/site/seating.ts'
@@ -83,5 +85,46 @@ describe('adding seats to a site', () => {
     expect(twice.ids).toEqual(['seat-1'])
     expect(twice.site.seats).toHaveLength(5)
     expect(twice.site.seats[0]).toBe(site.seats[0])
+  })
+})
+
+describe('setting the seats of a table', () => {
+  const facts = { group: 'T', priority: 'primary', posture: 'seated', ...usualHeights.seated } as const
+  const tableAt = (id: string, x: number, form?: 'round') =>
+    ({ id, centre: [x, 1.5], size: [1.2, 0.8], turnDeg: 0, height: 0.74, material: 'unknown', ...(form ? { form } : {}) }) as const // prettier-ignore
+  const [one, two] = [tableAt('T1', 1), tableAt('T2', 2.6)]
+  const sides = (below: number) => ({ below, above: 2, left: 0, right: 1 })
+  const places = (table: typeof one, below: number) => seatsAtSides(table as never, sides(below), 0.25)
+  const bare = plainSite({ tables: [one, two] as never, seats: [] })
+  const set = (site: typeof bare, table: typeof one, below: number) =>
+    setSeatsAt(site, table as never, places(table, below), facts).site
+
+  it('twice leaves nobody upon another', () => {
+    const once = set(bare, one, 2)
+    expect(once.seats).toHaveLength(5)
+    expect(set(once, one, 2)).toEqual(once)
+  })
+  it('anew leaves the other table’s seats, other groups and what stands far away', () => {
+    const far = { id: 'X-1', ...facts, x: 1, y: 4, facingDeg: 90 }
+    const other = { id: 'Y-1', ...facts, group: 'Y', x: 1, y: 0.85, facingDeg: 90 }
+    const both = set(set({ ...bare, seats: [far, other] }, one, 1), two, 2)
+    expect(both.seats).toHaveLength(2 + 4 + 5)
+    const after = set(both, one, 2)
+    expect(after.seats).toHaveLength(2 + 5 + 5)
+    for (const kept of [far, other, ...seatsAtTable(both, two as never, 'T')]) expect(after.seats).toContainEqual(kept)
+    expect(new Set(after.seats.map(({ id }) => id)).size).toBe(12)
+  })
+  it('reaches around a round table to its edge, not to its square', () => {
+    const round = { ...tableAt('T1', 0, 'round'), size: [2, 2], centre: [0, 0] }
+    const at = (reach: number) => ({
+      id: 'T-1',
+      ...facts,
+      x: reach / Math.SQRT2,
+      y: reach / Math.SQRT2,
+      facingDeg: -135,
+    })
+    const found = (reach: number) =>
+      seatsAtTable(plainSite({ tables: [round] as never, seats: [at(reach)] }), round as never, 'T').length
+    expect([found(1.25), found(2.19), found(2.21)]).toEqual([1, 1, 0])
   })
 })
