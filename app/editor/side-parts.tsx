@@ -1,15 +1,13 @@
-import { useCallback, useMemo } from 'react'
+import { lazy, Suspense, useCallback, useMemo } from 'react'
 import type { Brief } from '#app/domain/brief/brief.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { HeaterChange } from '#app/domain/layout/edits.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
-import { obstructionsOf } from '#app/domain/flux/shading.ts'
 import { assumedInWords } from '#app/domain/site/size-source.ts'
 import type { Finding } from '#app/domain/rules/finding.ts'
 import { ButtonLink } from '#app/components/button.tsx'
 import { ArrangePanel } from '#app/editor/panels/arrange-panel.tsx'
-import { ExplainPanel } from '#app/editor/panels/explain-panel.tsx'
 import { FindingsList } from '#app/editor/panels/findings-list.tsx'
 import { HeaterFields } from '#app/editor/panels/heater-fields.tsx'
 import { HeatersTable } from '#app/editor/panels/heaters-table.tsx'
@@ -21,6 +19,8 @@ import type { ChangeSite } from '#app/editor/site-change.ts'
 import type { Editor } from '#app/editor/use-editor.ts'
 import type { ShownFigures } from '#app/editor/use-figures.ts'
 import type { ViewChoice } from '#app/editor/view-choice.ts'
+
+const ExplainPanel = lazy(() => import('#app/editor/panels/explain-panel.tsx'))
 
 /** What the panels beside and below the plan show and change. */
 export interface SideSubject {
@@ -79,28 +79,25 @@ export function Placing({ subject }: PartProps) {
 
 /** A seat’s figures taken apart; nothing until one is asked for. */
 export function Explained({ subject }: PartProps) {
-  const { editor, layout, site, brief, choice, explained, onExplain } = subject
+  const { editor, figures, layout, site, brief, choice, explained, onExplain } = subject
   const { models } = editor
   const input = useMemo(
-    () => ({
-      site,
-      brief,
-      layout,
-      models,
-      ...(choice.shade ? { obstructions: obstructionsOf(site, layout, models) } : {}),
-    }),
+    () => ({ site, brief, layout, models, shade: choice.shade ? ('in-place' as const) : ('none' as const) }),
     [site, brief, layout, models, choice.shade],
   )
   if (!explained) return null
   return (
-    <ExplainPanel
-      input={input}
-      rules={editor.house.rules}
-      seatId={explained}
-      units={site.displayUnits}
-      fluxUnit={choice.fluxUnit}
-      onClose={() => onExplain(null)}
-    />
+    <Suspense fallback={<p className="px-4.5 py-3.5 text-ink-2">Opening</p>}>
+      <ExplainPanel
+        input={input}
+        rules={editor.house.rules}
+        seatId={explained}
+        warmth={figures.warmth.find(({ seat }) => seat.id === explained) ?? null}
+        units={site.displayUnits}
+        fluxUnit={choice.fluxUnit}
+        onClose={() => onExplain(null)}
+      />
+    </Suspense>
   )
 }
 

@@ -210,11 +210,40 @@ describe('a figure explained', () => {
     expect(sum + explained.base).toBeCloseTo(explained.value, 6)
   })
 
+  it('says without shade that it is so, and with shade what the seat sees of each heater', async () => {
+    const address = `/api/variants/${(await variantIds('A')).get(2)!}/seats/W3-2/explain`
+    const of = async (query: string) => (await designer('GET', `${address}?${query}`)).json()
+    expect(await of('quantity=body')).toMatchObject({ shade: 'none', seen: null })
+    for (const shade of ['in-place', 'away']) {
+      const explained = await of(`quantity=body-largest&shade=${shade}`)
+      expect(explained).toMatchObject({ shade, figure: { quantity: 'body-largest' } })
+      expect(explained.seen.length).toBeGreaterThan(0)
+      for (const { seen, past } of explained.seen) expect(seen < 1).toBe(past.length > 0)
+      const sum = explained.parts.reduce((total: number, part: { value: number }) => total + part.value, 0)
+      expect(sum).toBeCloseTo(explained.value, 6)
+    }
+  })
+
+  it.each(['near-infrared', 'head-to-body', 'feels-like&wind=gust', 'sensation&wind=calm'])(
+    'answers for ?quantity=%s',
+    async (query) => {
+      const variantId = (await variantIds('A')).get(2)!
+      const response = await designer('GET', `/api/variants/${variantId}/seats/W3-2/explain?quantity=${query}`)
+      const explained = await response.json()
+      expect(response.status).toBe(200)
+      expect(explained.figure.quantity).toBe(query.split('&')[0])
+      expect(explained.formula).not.toBe('')
+    },
+  )
+
   it.each([
     ['quantity=colour', 'quantity'],
     ['quantity=feels-like', 'wind'],
     ['quantity=feels-like&wind=storm', 'wind'],
+    ['quantity=sensation', 'wind'],
     ['wind=calm', 'wind'],
+    ['shade=dark', 'shade'],
+    ['quantity=head&shade=in place', 'shade'],
   ])('400 for ?%s', async (query, path) => {
     const variantId = (await variantIds('A')).get(2)!
     const response = await designer('GET', `/api/variants/${variantId}/seats/W3-2/explain?${query}`)

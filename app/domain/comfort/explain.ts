@@ -1,32 +1,25 @@
-import type { Brief } from '#app/domain/brief/brief.ts'
-import { convectiveCoefficient } from '#app/domain/comfort/feels-like.ts'
+import { cautionLimits, type CautionLimit } from '#app/domain/comfort/cautions.ts'
+import { formulas, shadedFormula } from '#app/domain/comfort/explained-formulas.ts'
+import { inputsOf, type ExplainedInput } from '#app/domain/comfort/explained-inputs.ts'
 import { indoorsAt } from '#app/domain/comfort/indoors.ts'
-import { effectiveAreaShare } from '#app/domain/comfort/projected-area.ts'
 import { bodyPoint, headPoint } from '#app/domain/comfort/seat-heat.ts'
-import { conditionsAt, warmthOfSeat, type SeatWarmth, type WarmthInput } from '#app/domain/comfort/seat-warmth.ts'
-import { sourcesOf, type Source } from '#app/domain/comfort/sources.ts'
+import { warmthOfSeat, type SeatWarmth, type WarmthInput } from '#app/domain/comfort/seat-warmth.ts'
+import { seenHeaters, type SeenHeater } from '#app/domain/comfort/seen-heaters.ts'
+import type { SensationWord } from '#app/domain/comfort/sensation.ts'
+import { obstructionsUnder, type Shade } from '#app/domain/comfort/shade.ts'
+import { sourcesOf, type Source, type Sources } from '#app/domain/comfort/sources.ts'
 import {
   figureOf,
   figureParts,
   fluxTolerances,
+  heightsOf,
   seatTolerance,
   type FigureTolerance,
   type SeatFigure,
 } from '#app/domain/comfort/uncertainty.ts'
-import { electricalPower } from '#app/domain/heaters/power.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { HouseRules } from '#app/domain/rules/house-rules-schema.ts'
 import { lengthOf, subtract } from '#app/domain/vector.ts'
-
-/** One figure that went in, in SI and °C. */
-export interface ExplainedInput {
-  readonly name: string
-  readonly value: number
-  readonly unit: 'm' | '°' | '°C' | 'm/s' | 'clo' | 'W' | 'W/m²' | 'W/m²K' | 'V' | 'none'
-  readonly source: string
-  /** Nobody has confirmed it: it stays an assumption until somebody does. */
-  readonly assumed: boolean
-}
 
 /** What one element gives to the figure. */
 interface ExplainedPart {
@@ -41,47 +34,42 @@ interface ExplainedPart {
   readonly radiantPower: number
 }
 
-/** A figure of a seat taken apart: `value` is `base` plus the sum of the parts. */
+/** A figure of a seat taken apart: where it is a sum, `value` is `base` plus the sum of the parts. */
 export interface Explanation {
   readonly seatId: string
   readonly figure: SeatFigure
-  readonly unit: 'W/m²' | '°C'
-  /** Null when no heater that can be told is placed. */
+  readonly shade: Shade
+  readonly unit: 'W/m²' | '°C' | 'none'
+  /** Null when there is none: `whyNone` says why. */
   readonly value: number | null
-  /** The figure with every heater off: 0, or feels-like at the same wind. */
-  readonly base: number
+  readonly whyNone: string | null
+  /** The figure with every heater off: 0, or feels-like at the same wind. Null where the figure is no sum. */
+  readonly base: number | null
+  /** Of a sensation: its words with the heaters off and on. */
+  readonly words: { readonly before: SensationWord; readonly after: SensationWord | null } | null
   readonly formula: string
   readonly source: string
   readonly notModelled: string
+  /** What cautions judge the figure by. */
+  readonly limits: readonly (CautionLimit & { readonly name: 'stop line' | 'caution' })[]
   /** Of a feels-like temperature: what it would take to feel like indoors, in a sentence. */
   readonly indoors: string | null
   readonly inputs: readonly ExplainedInput[]
+  /** None where the figure is no sum: the inputs then make it. */
   readonly parts: readonly ExplainedPart[]
   readonly byHeater: readonly { readonly heaterId: string; readonly value: number; readonly share: number }[]
+  /** What the seat sees of each heater; null without shade. */
+  readonly seen: readonly SeenHeater[] | null
   readonly tolerance: FigureTolerance | null
   /** Heaters that the figure is without: unknown model or no beam data. */
   readonly cannotTell: readonly string[]
 }
 
-const formulas = {
-  body: {
-    formula:
-      'E = Σ elements I0 f(α) / (L h) · [n_h C(β) − n_u cos^(b+1) β / (b+1)], I0 = η_r P / (W(a) W(b+1)), n straight up at the body’s height',
-    source:
-      'Closed form for a tubular element with a separable beam; tabulated beams by the same integral of their table.',
-  },
-  head: {
-    formula: 'The same sum at the head’s height, n the direction in which it is largest',
-    source:
-      'Irradiance is convex in the direction of the plane; its largest value is found by turning to the net flux.',
-  },
-  'feels-like': {
-    formula:
-      't_eq = 33 − (33 − t_o) · (R_cl + 1/(f_cl (3.1 + h_r))) / (R_cl + 1/(f_cl (h_c + h_r))), t_o = (h_c t_a + h_r t_r + Σ elements α f_eff Σ f_p E_n) / (h_c + h_r)',
-    source:
-      'ASHRAE 55 Appendix C (effective radiant field, projected areas), ASHRAE Fundamentals (h_c = 8.3 v^0.6, at least 3.1), ISO 9920 (clothing).',
-  },
-} as const
+/** What an explanation rests on: shade makes what stands in the way. */
+export interface ExplainInput extends Omit<WarmthInput, 'obstructions' | 'layout'> {
+  readonly layout: Layout
+  readonly shade: Shade
+}
 
 const notModelled =
   'Reflector near field, reflection from floor and tables, loss of radiant efficiency in wind. Calculated, not measured.'
@@ -91,37 +79,75 @@ const notModelled =
  * the call that makes the figure everywhere else. Null for a seat that the site does not have.
  */
 export function explainSeat(
-  input: WarmthInput,
+  { shade, ...given }: ExplainInput,
   seatId: string,
   figure: SeatFigure,
   rules: HouseRules,
 ): Explanation | null {
-  const seat = input.site.seats.find(({ id }) => id === seatId)
+  const seat = given.site.seats.find(({ id }) => id === seatId)
   if (!seat) return null
+  const obstructions = obstructionsUnder(shade, given.site, given.layout, given.models)
+  const input: WarmthInput = { ...given, obstructions }
   const all = sourcesOf(input.layout, input.models)
   const { warmth, heat } = warmthOfSeat(seat, all, input)
   const values = figureParts(warmth, heat, figure, input)
-  const feelsLike = figure.quantity === 'feels-like'
-  const parts = explainedParts(warmth, all.sources, values, figure)
+  const seen = shade === 'none' ? null : seenHeaters(seat, figure, all.sources, obstructions)
+  const parts = values ? explainedParts(warmth, all.sources, values, figure) : []
+  const value = figureOf(warmth, figure)
+  const { formula, source } = formulas[figure.quantity]
   return {
     seatId,
     figure,
-    unit: feelsLike ? '°C' : 'W/m²',
-    value: figureOf(warmth, figure),
-    base: feelsLike ? warmth.feelsLike[figure.wind].before : 0,
-    ...formulas[figure.quantity],
+    shade,
+    unit: unitOf(figure),
+    value,
+    whyNone: value === null ? whyNone(figure, warmth, all) : null,
+    base: baseOf(warmth, figure),
+    words: figure.quantity === 'sensation' ? wordsOf(warmth.sensation[figure.wind]) : null,
+    formula: shade === 'none' ? formula : `${formula}. ${shadedFormula}`,
+    source,
     notModelled,
-    indoors: feelsLike ? indoorsAt(warmth, input.brief, figure.wind, rules).sentence : null,
-    inputs: [
-      ...seatInputs(warmth, figure),
-      ...(feelsLike ? feelingInputs(warmth, input.brief, figure) : []),
-      ...heaterInputs(input),
-    ],
+    limits: limitsOf(figure, input, rules),
+    indoors: figure.quantity === 'feels-like' ? indoorsAt(warmth, input.brief, figure.wind, rules).sentence : null,
+    inputs: inputsOf({ warmth, figure, input, sources: all.sources, shade, obstructions, seen }),
     parts,
     byHeater: heaterShares(parts),
-    tolerance: seatTolerance(input, seat, figure, 'everything', fluxTolerances(rules)),
+    seen,
+    tolerance: value === null ? null : seatTolerance(input, seat, figure, 'everything', fluxTolerances(rules)),
     cannotTell: all.cannotTell,
   }
+}
+
+function unitOf({ quantity }: SeatFigure): Explanation['unit'] {
+  if (quantity === 'head-to-body' || quantity === 'sensation') return 'none'
+  return quantity === 'feels-like' ? '°C' : 'W/m²'
+}
+
+function baseOf(warmth: SeatWarmth, figure: SeatFigure): number | null {
+  if (figure.quantity === 'feels-like') return warmth.feelsLike[figure.wind].before
+  return unitOf(figure) === 'none' ? null : 0
+}
+
+const wordsOf = ({ before, after }: SeatWarmth['sensation']['calm']): Explanation['words'] => ({
+  before: before.word,
+  after: after?.word ?? null,
+})
+
+/** Why a figure is not there, in a sentence. */
+function whyNone({ quantity }: SeatFigure, { body }: SeatWarmth, { sources }: Sources): string {
+  if (sources.length === 0) return 'No heater with beam data is placed.'
+  if (quantity === 'sensation') return 'Outside the range of the vote.'
+  if (quantity === 'head-to-body') return `Hardly any heat on the body plane (${(body ?? 0).toFixed(0)} W/m²).`
+  const unknown = new Set(sources.flatMap(({ heaterId, nearInfrared }) => (nearInfrared === null ? heaterId : [])))
+  return `Cannot tell: no element temperature of ${[...unknown].join(', ')}.`
+}
+
+function limitsOf({ quantity }: SeatFigure, { brief }: WarmthInput, rules: HouseRules): Explanation['limits'] {
+  const { stop, head, eye } = cautionLimits(brief, rules)
+  const line = { name: 'stop line', ...stop } as const
+  if (quantity === 'body-largest') return [line]
+  if (quantity === 'head') return [{ name: 'caution', ...head }, line]
+  return quantity === 'near-infrared' ? [{ name: 'caution', ...eye }] : []
 }
 
 function explainedParts(
@@ -130,7 +156,7 @@ function explainedParts(
   values: readonly number[],
   figure: SeatFigure,
 ): ExplainedPart[] {
-  const point = figure.quantity === 'head' ? headPoint(seat) : bodyPoint(seat)
+  const point = heightsOf(figure)[0] === 'headHeight' ? headPoint(seat) : bodyPoint(seat)
   const whole = values.reduce((sum, value) => sum + value, 0)
   return sources.map(({ heaterId, element, emitter }, i) => {
     const value = values[i] ?? 0
@@ -152,86 +178,4 @@ function heaterShares(parts: readonly ExplainedPart[]): Explanation['byHeater'] 
     const total = (pick: (part: ExplainedPart) => number) => own.reduce((sum, part) => sum + pick(part), 0)
     return { heaterId, value: total(({ value }) => value), share: total(({ share }) => share) }
   })
-}
-
-const known = (name: string, value: number, unit: ExplainedInput['unit'], source: string): ExplainedInput => ({
-  name,
-  value,
-  unit,
-  source,
-  assumed: false,
-})
-
-function seatInputs({ seat }: SeatWarmth, { quantity }: SeatFigure): ExplainedInput[] {
-  const height = quantity === 'head' ? known('head height', seat.headHeight, 'm', 'site') : null
-  return [
-    known('seat x', seat.x, 'm', 'site'),
-    known('seat y', seat.y, 'm', 'site'),
-    height ?? known('body height', seat.bodyHeight, 'm', 'site'),
-    ...(quantity === 'feels-like' ? [known('facing', seat.facingDeg, '°', 'site')] : []),
-  ]
-}
-
-function feelingInputs(
-  { seat, surroundings, field }: SeatWarmth,
-  brief: Brief,
-  { wind }: Extract<SeatFigure, { quantity: 'feels-like' }>,
-): ExplainedInput[] {
-  const conditions = conditionsAt(seat, brief, surroundings, wind)
-  const fromBrief = (name: string, value: number, unit: ExplainedInput['unit'], key: string): ExplainedInput => {
-    const assumed = brief.assumed.includes(key)
-    return { name, value, unit, source: assumed ? 'brief, assumed' : 'brief', assumed }
-  }
-  const windKey = { calm: null, design: 'windDesign', gust: 'windGust' }[wind]
-  return [
-    fromBrief('air temperature', brief.airTemperature, '°C', 'airTemperature'),
-    windKey
-      ? fromBrief(`wind, ${wind}`, conditions.wind, 'm/s', windKey)
-      : known('wind, calm', conditions.wind, 'm/s', 'house rule: air that hardly moves'),
-    fromBrief('clothing', brief.clothing, 'clo', 'clothing'),
-    {
-      name: 'surroundings',
-      value: surroundings.temperature,
-      unit: '°C',
-      source: surroundingsSource(surroundings),
-      assumed: surroundings.assumed,
-    },
-    known('convection h_c', convectiveCoefficient(conditions.wind), 'W/m²K', 'ASHRAE Fundamentals, seated'),
-    known(
-      'effective area share f_eff',
-      effectiveAreaShare[seat.posture],
-      'none',
-      `${seat.posture}, ASHRAE Fundamentals`,
-    ),
-    known('effective radiant field', field ?? 0, 'W/m²', 'sum of the elements, absorbed'),
-  ]
-}
-
-function surroundingsSource({ underCover, assumed }: SeatWarmth['surroundings']): string {
-  if (underCover) return 'under a cover: the air temperature'
-  return assumed ? 'open sky: the air temperature until it is entered' : 'brief, open sky'
-}
-
-/** Power, voltage and place of every heater that the figure is made with. */
-function heaterInputs({ layout, models }: WarmthInput): ExplainedInput[] {
-  return layout.heaters.flatMap((heater) => heaterInput(heater, models.get(heater.model)))
-}
-
-function heaterInput(
-  heater: Layout['heaters'][number],
-  model: ReturnType<WarmthInput['models']['get']>,
-): ExplainedInput[] {
-  if (!model?.beam) return []
-  const { power } = electricalPower(heater, model)
-  const of = (name: string) => `${heater.id} ${name}`
-  return [
-    known(of('x'), heater.x, 'm', 'layout'),
-    known(of('y'), heater.y, 'm', 'layout'),
-    known(of('lowest point'), heater.lowestPoint, 'm', 'layout'),
-    known(of('turn'), heater.turnDeg, '°', 'layout'),
-    known(of('tilt'), heater.tiltDeg, '°', 'layout'),
-    known(of('supply voltage'), heater.supplyVoltage, 'V', 'layout'),
-    known(of('power'), power, 'W', `${model.name}, data sheet: P ∝ V^${model.powerVoltageExponent}`),
-    known(of('radiant efficiency'), model.radiantEfficiency, 'none', `${model.name}, data sheet`),
-  ]
 }

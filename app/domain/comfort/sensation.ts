@@ -86,24 +86,31 @@ export function sensationWord(vote: number): SensationWord {
 /** Air speed that ISO 7730 takes for still air, m/s. */
 const stillAir = 0.1
 
+/** What a person brings to the vote: % of humidity in the air, met, clo. */
+interface Person {
+  readonly relativeHumidity: number
+  readonly activity: number
+  readonly clothing: number
+}
+
+/** The vote of a guest for whom it feels like `feelsLike` °C, in the standard's range or not. */
+export const predictedVote = (feelsLike: number, { relativeHumidity, activity, clothing }: Person): number =>
+  predictedMeanVote({
+    airTemperature: feelsLike,
+    radiantTemperature: feelsLike,
+    airSpeed: stillAir,
+    relativeHumidity,
+    activity,
+    clothing,
+  })
+
 /**
  * Sensation of a guest for whom it feels like `feelsLike` °C: the vote of still air and surroundings at that
  * temperature. ISO 7730 covers 10 to 30 °C below 1 m/s of wind, 0.8 to 4 met and at most 2 clo, votes from −2 to 2
  * (the last three from memory): outside it the word stands alone.
  */
-export function sensationOf(
-  feelsLike: number,
-  wind: number,
-  person: { readonly relativeHumidity: number; readonly activity: number; readonly clothing: number },
-): Sensation {
-  const vote = predictedMeanVote({
-    airTemperature: feelsLike,
-    radiantTemperature: feelsLike,
-    airSpeed: stillAir,
-    relativeHumidity: person.relativeHumidity,
-    activity: person.activity,
-    clothing: person.clothing,
-  })
+export function sensationOf(feelsLike: number, wind: number, person: Person): Sensation {
+  const vote = predictedVote(feelsLike, person)
   const word = sensationWord(vote)
   const inRange =
     feelsLike >= 10 &&

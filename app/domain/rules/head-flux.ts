@@ -1,6 +1,6 @@
 import { cautionLimits, type CautionLimit } from '#app/domain/comfort/cautions.ts'
 import type { SeatWarmth } from '#app/domain/comfort/seat-warmth.ts'
-import type { TolerancedFigure } from '#app/domain/comfort/uncertainty.ts'
+import type { SeatFigure } from '#app/domain/comfort/uncertainty.ts'
 import { findingOf, judgedBy, type LayoutCheck, type Rule } from '#app/domain/rules/check.ts'
 import type { Finding, Outcome } from '#app/domain/rules/finding.ts'
 import { mayReach, toleranceOfSeat } from '#app/domain/rules/seat-tolerance.ts'
@@ -8,7 +8,7 @@ import { mayReach, toleranceOfSeat } from '#app/domain/rules/seat-tolerance.ts'
 /** One figure of a seat that is judged. */
 interface Judged {
   readonly value: number
-  readonly figure: TolerancedFigure
+  readonly figure: SeatFigure
 }
 
 /**

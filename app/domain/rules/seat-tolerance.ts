@@ -1,4 +1,4 @@
-import { fluxTolerances, seatTolerance, type TolerancedFigure } from '#app/domain/comfort/uncertainty.ts'
+import { fluxTolerances, heightsOf, seatTolerance, type SeatFigure } from '#app/domain/comfort/uncertainty.ts'
 import type { LayoutCheck } from '#app/domain/rules/check.ts'
 import type { Seat } from '#app/domain/site/site.ts'
 import { shiftsOf } from '#app/domain/site/tolerance.ts'
@@ -10,19 +10,23 @@ import { shiftsOf } from '#app/domain/site/tolerance.ts'
 const steepest = 4
 
 /** Tolerance of a seat's figure from the sizes that place the seat, W/m²; null when it cannot be told. */
-export const toleranceOfSeat = (check: LayoutCheck, seat: Seat, figure: TolerancedFigure): number | null =>
+export const toleranceOfSeat = (check: LayoutCheck, seat: Seat, figure: SeatFigure): number | null =>
   seatTolerance(check, seat, figure, 'seat', fluxTolerances(check.house.rules))?.total ?? null
 
 /** Whether the sizes that place the seat could bring a figure to the limit: else its tolerance need not be found. */
 export function mayReach(
   { site, house }: LayoutCheck,
   seat: Seat,
-  { quantity }: TolerancedFigure,
+  figure: SeatFigure,
   value: number,
   limit: number,
 ): boolean {
-  const height = quantity === 'head' ? 'headHeight' : 'bodyHeight'
-  const shifts = shiftsOf(site, { of: 'seat', id: seat.id }, ['x', 'y', height], house.rules.toleranceUnstated)
+  const shifts = shiftsOf(
+    site,
+    { of: 'seat', id: seat.id },
+    ['x', 'y', ...heightsOf(figure)],
+    house.rules.toleranceUnstated,
+  )
   const most = steepest * Math.hypot(...shifts.flatMap(({ by }) => by))
   return Math.abs(limit - value) <= most * Math.max(limit, value)
 }

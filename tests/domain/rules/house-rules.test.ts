@@ -150,7 +150,7 @@ describe('a house’s own tolerances', () => {
     const lengthTolerance = (bare: number) => hangerTolerance(plainSite(), hanger, bare)!
     expect(lengthTolerance(0.05) / lengthTolerance(0.025)).toBeCloseTo(2, 6)
     expect(fluxTolerances(rules)).toMatchObject({ heaterPosition: 0.05, heaterHeight: 0.05, seat: 0.05 })
-    const input = { site: plainSite(), brief: plainBrief(), layout, models }
+    const input = { site: plainSite(), brief: plainBrief(), layout, models, shade: 'none' as const }
     const places = (each: HouseRules) =>
       explainSeat(input, 'S1', { quantity: 'body' }, each)!.tolerance!.shares.filter(({ unit }) => unit === 'm')
     const [twice, once] = [places(rules), places(plainHouseRules)].map((shares) => new Map(shares.map(({ of, change }) => [of, change]))) // prettier-ignore

@@ -1,0 +1,42 @@
+import type { Explanation } from '#app/domain/comfort/explain.ts'
+import type { SeenHeater } from '#app/domain/comfort/seen-heaters.ts'
+import type { Shade } from '#app/domain/comfort/shade.ts'
+import { ExplainedRows } from '#app/editor/panels/explained-rows.tsx'
+
+const shadeWords: Readonly<Record<Shade, string>> = {
+  none: 'Without shade: nothing is taken to stand in the way.',
+  'in-place': 'With shade. Movable things are in place, each filling all that it sweeps.',
+  away: 'With shade. Movable things are away.',
+}
+
+/** The share of each heater that the seat sees, and past what; without shade, that the figures are so. */
+export function SeenHeaters({ shade, seen }: Pick<Explanation, 'shade' | 'seen'>) {
+  const shown = (seen ?? []).filter(({ ofUnshaded }) => ofUnshaded >= 0.0005)
+  return (
+    <>
+      <p className="mt-2 text-ink-2">{shadeWords[shade]}</p>
+      {(['body', 'head'] as const).map((at) => (
+        <ExplainedRows
+          key={at}
+          caption={`Seen of each heater from the ${at}’s height`}
+          rows={shown
+            .filter((each) => each.at === at)
+            .toSorted((a, b) => b.ofUnshaded - a.ofUnshaded)
+            .map((each) => [each.heaterId, seenFigure(each), wayWords(each)])}
+        />
+      ))}
+    </>
+  )
+}
+
+/** Never 100 % with something in the way, nor 0 % while some is seen. */
+function seenFigure({ seen, past }: SeenHeater): string {
+  if (past.length === 0) return '100 %'
+  if (seen === 0) return '0 %'
+  return `${Math.min(99.9, Math.max(0.1, seen * 100)).toFixed(1)} %`
+}
+
+function wayWords({ seen, past }: SeenHeater): string {
+  if (past.length === 0) return 'nothing in the way'
+  return `${seen === 0 ? 'hidden by' : 'past'} ${past.join(', ')}`
+}
