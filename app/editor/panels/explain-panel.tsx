@@ -51,14 +51,16 @@ export default function ExplainPanel({ input, rules, seatId, warmth, units, flux
           Close
         </Button>
       </header>
-      <SelectField
-        label="Figure"
-        value={name}
-        onChange={(event) => isFigure(event.target.value) && setName(event.target.value)}
-        options={Object.entries(figures).map(([value, { label }]) => ({ value, label }))}
-      />
-      {explained && <ExplainedFigure {...{ explained, units, fluxUnit }} />}
       {warmth && <SeatSensation {...warmth} />}
+      <div className="mt-3">
+        <SelectField
+          label="Figure"
+          value={name}
+          onChange={(event) => isFigure(event.target.value) && setName(event.target.value)}
+          options={Object.entries(figures).map(([value, { label }]) => ({ value, label }))}
+        />
+      </div>
+      {explained && <ExplainedFigure {...{ explained, units, fluxUnit }} />}
     </section>
   )
 }

@@ -75,12 +75,10 @@ function Value({ explained, units, fluxUnit }: ExplainedFigureProps) {
       {whyNone && <p className="text-slate">{whyNone}</p>}
       {unit === '°C' && <p className="text-ink-2">With the heaters off, {text(base)} at the same wind.</p>}
       {words && <p className="text-ink-2">With the heaters off, {words.before} at the same wind.</p>}
-      {limits.map(({ name, value: limit, source, note }) => (
+      {limits.map(({ name, value: limit, source }) => (
         <p key={name} className="text-ink-2">
           {name === 'caution' ? 'Caution' : 'Stop line'} at {fluxText(limit, fluxUnit)}.{' '}
-          <span className="text-2xs text-ink-3">
-            {source}. {note}
-          </span>
+          <span className="text-2xs text-ink-3">{source}.</span>
         </p>
       ))}
       {indoors && <p className="text-ink-2">{indoors}</p>}

@@ -6,19 +6,17 @@ const windWords: Readonly<Record<WindName, string>> = { calm: 'Calm', design: 'D
 
 /** How a guest of this seat would rate it at each wind, heaters off and on, and the head against the body. */
 export function SeatSensation({ headToBody, sensation }: Pick<SeatFigures, 'headToBody' | 'sensation'>) {
+  const sensed = windNames.map((wind) => {
+    const { before, after } = sensation[wind]
+    return [windWords[wind], `${before.word} → ${after?.word ?? noFigure}`, after ? voteWords(after.vote) : ''] as const
+  })
   return (
     <>
-      <ExplainedRows
-        caption="Sensation, heaters off → on"
-        rows={windNames.map((wind) => {
-          const { before, after } = sensation[wind]
-          return [windWords[wind], `${before.word} → ${after?.word ?? noFigure}`, after ? voteWords(after.vote) : '']
-        })}
-      />
-      <ExplainedRows
-        caption="Horizontal irradiance"
-        rows={[['Head to body', headToBody === null ? noFigure : headToBody.toFixed(2), '']]}
-      />
+      <ExplainedRows caption="Sensation, heaters off → on" rows={sensed} />
+      <p className="mt-2 text-ink-2">
+        Head to body, horizontal irradiance:{' '}
+        <span className="font-medium text-ink">{headToBody === null ? noFigure : headToBody.toFixed(2)}</span>
+      </p>
     </>
   )
 }

@@ -4,7 +4,7 @@ import type { Shade } from '#app/domain/comfort/shade.ts'
 import { ExplainedRows } from '#app/editor/panels/explained-rows.tsx'
 
 const shadeWords: Readonly<Record<Shade, string>> = {
-  none: 'Without shade: nothing is taken to stand in the way.',
+  none: 'Without shade: nothing is taken to stand in the way. Tick Shade at the map to count it.',
   'in-place': 'With shade. Movable things are in place, each filling all that it sweeps.',
   away: 'With shade. Movable things are away.',
 }
