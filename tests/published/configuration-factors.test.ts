@@ -1,8 +1,11 @@
 import { describe, expect, it } from 'vitest'
+import type { Beam } from '#app/domain/flux/beam.ts'
 import { groupEmitter, type Emitter } from '#app/domain/flux/emitter.ts'
 import { irradianceAt } from '#app/domain/flux/irradiance.ts'
 import { gaussNodes } from '#app/domain/flux/nodes.ts'
 import type { Vec3 } from '#app/domain/vector.ts'
+import { adaptive } from '#tests/support/adaptive-integrator.ts'
+import { demoBeams } from '#tests/support/demo-beams.ts'
 import { cosine, line } from '#tests/support/emitters.ts'
 
 /**
@@ -19,11 +22,13 @@ interface Surface {
   readonly tiltDeg: number
   /** Offsets along v, lengths along u and widths of the strips. */
   readonly strips: readonly { offset: number; length: number; width: number }[]
+  /** Of every element; Lambert's unless stated. */
+  readonly beam?: Beam
 }
 
-function emitterOfSurface({ centre, turnDeg, tiltDeg, strips }: Surface): Emitter {
+function emitterOfSurface({ centre, turnDeg, tiltDeg, strips, beam = cosine(1, 1) }: Surface): Emitter {
   const elements = strips.map(({ offset, length, width }) => ({ offset, length, radiantPower: length * width }))
-  return groupEmitter({ id: 'surface', at: centre, turnDeg, tiltDeg, beam: cosine(1, 1), elements })
+  return groupEmitter({ id: 'surface', at: centre, turnDeg, tiltDeg, beam, elements })
 }
 
 /** Chords of a disc, their places by the angle so that the ends are smooth. */
@@ -37,13 +42,13 @@ function disc(centre: Vec3, radius: number, turnDeg = 0, tiltDeg = 0): Emitter {
 }
 
 /** A rectangle of `length` along u and `width` along v about its centre. */
-function rectangle(centre: Vec3, length: number, width: number, turnDeg = 0, tiltDeg = 0): Emitter {
+function rectangle(centre: Vec3, length: number, width: number, turnDeg = 0, tiltDeg = 0, beam?: Beam): Emitter {
   const strips = gaussNodes(60).map(({ place, weight }) => ({
     offset: (place * width) / 2,
     length,
     width: (weight * width) / 2,
   }))
-  return emitterOfSurface({ centre, turnDeg, tiltDeg, strips })
+  return emitterOfSurface({ centre, turnDeg, tiltDeg, strips, ...(beam && { beam }) })
 }
 
 const up: Vec3 = [0, 0, 1]
@@ -196,5 +201,32 @@ describe('exchange of energy', () => {
       return sum + (weight / 2) * 2 * Math.PI * r * irradianceAt(upper, [r, 0, 0], up)
     }, 0)
     within(received / Math.PI, (3 - Math.sqrt(5)) / 2, 1e-6)
+  })
+})
+
+describe.each(demoBeams)('a surface that radiates as $code does', ({ model, beam }) => {
+  // Each line of an endless strip sends its power through the cylinders about it, f(α)/∫f of it per angle, whatever the
+  // beam lengthwise; over the strip the distances cancel: ∫ f(α) dα between its edges over the whole ∫ f(α) dα. The
+  // beam from the data sheet: half the intensity at half of the full angle.
+  const half = model.beam?.kind === 'angles' ? (model.beam.acrossFullAngleDeg * Math.PI) / 360 : Number.NaN
+  const across = (alpha: number) => 0.5 ** (Math.log(Math.cos(alpha)) / Math.log(Math.cos(half)))
+  const whole = 2 * adaptive(across, 0, Math.PI / 2 - 1e-9, 1e-10)
+
+  it.each([
+    [-0.5, 0.5, 1],
+    [0.2, 1.4, 0.8],
+    [1, 6, 1],
+  ])('an endless strip from %d to %d at height %d', (from, to, h) => {
+    const strip = rectangle([0, -(from + to) / 2, h], 40_000, to - from, 0, 0, beam)
+    const share = adaptive(across, Math.atan(from / h), Math.atan(to / h), 1e-10) / whole
+    within(irradianceAt(strip, [0, 0, 0], up), share, 2e-6)
+  })
+
+  it('is the sum of its parts', () => {
+    const normal: Vec3 = [0.3, -0.4, 1]
+    const point: Vec3 = [0.9, -0.2, 0]
+    const parts = [-0.25, 0.25].flatMap((x) => [-0.2, 0.2].map((y) => rectangle([x, y, 1.1], 0.5, 0.4, 0, 0, beam)))
+    const sum = parts.reduce((total, part) => total + irradianceAt(part, point, normal), 0)
+    within(sum, irradianceAt(rectangle([0, 0, 1.1], 1, 0.8, 0, 0, beam), point, normal), 1e-9)
   })
 })

@@ -4,6 +4,8 @@ import { wholeCosineIntegral } from '#app/domain/flux/cosine-integral.ts'
 import { irradianceAt, scalarIrradianceAt, sphereMeanAt } from '#app/domain/flux/irradiance.ts'
 import { gaussNodes } from '#app/domain/flux/nodes.ts'
 import type { Vec3 } from '#app/domain/vector.ts'
+import { adaptive, bruteIrradiance } from '#tests/support/adaptive-integrator.ts'
+import { demoBeams } from '#tests/support/demo-beams.ts'
 import { cosine, line } from '#tests/support/emitters.ts'
 
 /**
@@ -204,5 +206,88 @@ describe('long and far lines', () => {
     const exact = irradianceAt(line(cosine(1, 1)), [0, 0, -d], up)
     const taken = irradianceAt(pointSource(1, 1), [0, 0, -d], up)
     expect(Math.abs(100 * (taken / exact - 1) - percent)).toBeLessThanOrEqual(within)
+  })
+})
+
+/** Laws that hold for any beam, for each of the invented catalogue; the data sheet states the angles of half intensity. */
+describe.each(demoBeams)('the beam of $code', ({ model, beam }) => {
+  const lamp = line(beam, { length: 0 })
+  /** Irradiance of a plane that faces the lamp from 1 m away, in the direction of α and β. */
+  const facing = (alpha: number, beta: number) => {
+    const towards: Vec3 = [Math.sin(beta), -Math.cos(beta) * Math.sin(alpha), -Math.cos(beta) * Math.cos(alpha)]
+    return irradianceAt(lamp, towards, [-towards[0], -towards[1], -towards[2]])
+  }
+  const halfAngles =
+    model.beam?.kind === 'angles'
+      ? [model.beam.acrossFullAngleDeg, model.beam.alongFullAngleDeg].map((full) => (full * Math.PI) / 360)
+      : []
+  const [across = Number.NaN, along = Number.NaN] = halfAngles
+
+  it('sends 1000 W through the half sphere in front of it, nothing behind', () => {
+    const nodes = gaussNodes(60).map(({ place, weight }) => ({
+      angle: (place * Math.PI) / 2,
+      width: (weight * Math.PI) / 2,
+    }))
+    const power = nodes.reduce(
+      (sum, alpha) =>
+        sum +
+        nodes.reduce(
+          (row, beta) => row + facing(alpha.angle, beta.angle) * Math.cos(beta.angle) * alpha.width * beta.width,
+          0,
+        ),
+      0,
+    )
+    within(power, 1000, 1e-6)
+    expect(facing(2, 0.3)).toBe(0)
+  })
+
+  it('has half of its intensity at half of the angles on the data sheet, either side', () => {
+    for (const side of [-1, 1]) {
+      within(facing(side * across, 0) / facing(0, 0), 0.5, 1e-9)
+      within(facing(0, side * along) / facing(0, 0), 0.5, 1e-9)
+    }
+  })
+
+  it('as a point, falls by the square of the distance and the cosine of the plane', () => {
+    const near = irradianceAt(lamp, [0.3, -0.4, -1.2], [-0.3, 0.4, 1.2])
+    within(irradianceAt(lamp, [0.6, -0.8, -2.4], [-0.3, 0.4, 1.2]), near / 4, 1e-9)
+    within(irradianceAt(lamp, [0.3, -0.4, -1.2], up), (near * 1.2) / 1.3, 1e-9)
+    within(scalarIrradianceAt([lamp], [0.3, -0.4, -1.2]), near, 1e-9)
+  })
+
+  it('as a line, errs as a point by the square of its length over the distance', () => {
+    const error = (d: number) => irradianceAt(lamp, [0, 0, -d], up) / irradianceAt(line(beam), [0, 0, -d], up) - 1
+    expect(error(10)).toBeLessThan(0.01)
+    expect(error(10) / error(20)).toBeCloseTo(4, 1)
+  })
+
+  // By energy through the cylinders about it: Φ/L · f(α) / ∫ f, over h, whatever the beam lengthwise.
+  it('as an endless line, falls with the distance and not its square', () => {
+    const profile = (alpha: number) => 0.5 ** (Math.log(Math.cos(alpha)) / Math.log(Math.cos(across)))
+    const whole = 2 * adaptive(profile, 0, Math.PI / 2 - 1e-9, 1e-10)
+    const endless = line(beam, { length: 4000, power: 4e6 })
+    for (const h of [0.5, 1, 2, 4]) within(irradianceAt(endless, [0, 0, -h], up), 1000 / whole / h, 1e-6)
+    within(irradianceAt(endless, [0, 1, -1], [0, -1, 1]), (1000 * profile(Math.PI / 4)) / whole / Math.SQRT2, 1e-6)
+  })
+
+  it.each([
+    [[0, 0, -2], up],
+    [[0.5, 1, -2], up],
+    [[0, 2, -2], up],
+    [
+      [0.5, 1, -2],
+      [0, -1, 0],
+    ],
+    [
+      [0.5, 1, -2],
+      [-1, 0, 0],
+    ],
+    [
+      [0, 0, -0.3],
+      [1, 0, 0],
+    ],
+  ] as const)('as a line, agrees with the integral at the places of R15 to R21: %j facing %j', (point, normal) => {
+    const whole = line(beam)
+    within(irradianceAt(whole, point, normal), bruteIrradiance(whole, point, normal), 1e-6)
   })
 })

@@ -1,9 +1,11 @@
 import { describe, expect, it } from 'vitest'
-import { groupEmitter } from '#app/domain/flux/emitter.ts'
+import { groupEmitter, type Emitter } from '#app/domain/flux/emitter.ts'
 import { gridOf } from '#app/domain/flux/grid.ts'
 import { irradianceAt } from '#app/domain/flux/irradiance.ts'
 import { irradianceMap } from '#app/domain/flux/map.ts'
 import type { Vec3 } from '#app/domain/vector.ts'
+import { bruteIrradiance } from '#tests/support/adaptive-integrator.ts'
+import { demoBeams, hungHeater } from '#tests/support/demo-beams.ts'
 import { cosine } from '#tests/support/emitters.ts'
 
 /**
@@ -32,15 +34,16 @@ function heater(x: number, { power = 3600, elements = 3, length = 0.9, underside
 }
 
 const up: Vec3 = [0, 0, 1]
-const below = (emitters: readonly ReturnType<typeof heater>[], x: number, y: number, z = 1) =>
+const below = (emitters: readonly Emitter[], x: number, y: number, z = 1) =>
   emitters.reduce((sum, each) => sum + irradianceAt(each, [x, y, z], up), 0)
 
 /** Area, m², over which `holds` is true of the heaters' separate irradiances, by the engine's own map. */
 function areaWhere(
-  emitters: readonly ReturnType<typeof heater>[],
+  emitters: readonly Emitter[],
   width: number,
   depth: number,
   holds: (e: number[]) => boolean,
+  cell = 0.02,
 ) {
   const floor = [
     [-width / 2, -depth / 2],
@@ -48,10 +51,10 @@ function areaWhere(
     [width / 2, depth / 2],
     [-width / 2, depth / 2],
   ] as const
-  const map = irradianceMap(null, gridOf(floor, 1, 0.02), emitters)
+  const map = irradianceMap(null, gridOf(floor, 1, cell), emitters)
   let count = 0
   for (let at = 0; at < map.total.length; at++) if (holds(map.layers.map(({ values }) => values[at]!))) count++
-  return count * 0.02 * 0.02
+  return count * cell * cell
 }
 
 const pair = (spacing: number, size: Size = {}) => [heater(-spacing / 2, size), heater(spacing / 2, size)]
@@ -101,7 +104,7 @@ describe('height', () => {
     const [high, low] = [heater(0), heater(0, { underside: 2.3 })]
     within(below([high], 0, 0), 404.7, 0.01)
     within(below([low], 0, 0), 524.2, 0.01)
-    const spread = (one: ReturnType<typeof heater>, least: number) => areaWhere([one], 8, 8, ([part]) => part! >= least)
+    const spread = (one: Emitter, least: number) => areaWhere([one], 8, 8, ([part]) => part! >= least)
     within(spread(high, 80), 7.45, 0.01)
     within(spread(low, 80), 7.03, 0.01)
     within(spread(high, 150), 4.06, 0.01)
@@ -139,5 +142,98 @@ describe('an upright edge that faces the long side', () => {
     const heights = Array.from({ length: 2500 }, (_, i) => i * 0.001)
     const peak = Math.max(...heights.map((z) => irradianceAt(heater(0), [x, 0, z], [-1, 0, 0])))
     within(peak, expected, 0.02)
+  })
+})
+
+/** The rules without their figures, for every model of the invented catalogue at the greatest height recommended. */
+describe.each(demoBeams)('$code at its height', ({ model }) => {
+  const height = model.mountingHeight.recommendedMax ?? 2.5
+  const hung = (x = 0, lowestPoint = height, stage?: number) =>
+    hungHeater(model, { x, lowestPoint, turnDeg: 90, ...(stage && { stage }) })
+  const radiated = model.supplyOptions[0]!.ratedPower * model.radiantEfficiency
+  const pairOf = (spacing: number) => [hung(-spacing / 2), hung(spacing / 2)]
+  const peak = below([hung()], 0, 0)
+  const spread = (emitters: readonly Emitter[], least: number) =>
+    areaWhere(emitters, 12, 12, (parts) => sum(parts) >= least, 0.05)
+
+  it('gives more the nearer the plane, as the integral does', () => {
+    const planes = [0.75, 1, 1.2, 1.75].map((z) => {
+      const own = below([hung()], 0, 0, z)
+      within(own, bruteIrradiance(hung(), [0, 0, z], up), 1e-6)
+      return own
+    })
+    expect(planes).toEqual([...planes].sort((a, b) => a - b))
+  })
+
+  // Between 1/h of an endless line and 1/h² of a point.
+  it('0.20 m lower: the peak rises by more than a line’s and less than a point’s', () => {
+    const above = hung().elements[0]!.centre[2] - 1
+    const rise = below([hung(0, height - 0.2)], 0, 0) / peak
+    expect(rise).toBeGreaterThan(above / (above - 0.2))
+    expect(rise).toBeLessThan((above / (above - 0.2)) ** 2)
+  })
+
+  it('two give twice of one in the middle, less the wider they hang; an edge seat gets less than a middle one', () => {
+    const middles = [1.2, 2.1, 2.4].map((spacing) => below(pairOf(spacing), 0, 0))
+    within(middles[1]!, 2 * below([hung()], 1.05, 0), 1e-9)
+    expect(middles).toEqual([...middles].sort((a, b) => b - a))
+    expect(below(pairOf(2.1), 1.95, 0.9)).toBeLessThan(below(pairOf(2.1), 0.6, 0.9))
+  })
+
+  it('two hung wider overlap less, and never over more than one of them spreads', () => {
+    const least = peak / 4
+    const overlaps = [0.4, 0.8, 1.2].map((spacing) =>
+      areaWhere(pairOf(spacing), 12, 12, (parts) => parts.every((part) => part >= least), 0.05),
+    )
+    expect(overlaps[0]).toBeGreaterThan(overlaps[1]!)
+    expect(overlaps[1]).toBeGreaterThan(overlaps[2]!)
+    expect(overlaps[0]).toBeLessThan(spread([hung()], least))
+  })
+
+  it('spreads no more than its radiant power can pay for, and less at a higher figure', () => {
+    const areas = [10, 20, 40, 80].map((least) => ({ least, area: spread([hung()], least) }))
+    for (const { least, area } of areas) expect(least * area).toBeLessThan(radiated)
+    for (const [i, { area }] of areas.slice(1).entries()) expect(area).toBeLessThan(areas[i]!.area)
+  })
+
+  it.each(model.stages.slice(0, -1).map((watts, i) => [watts, i + 1] as const))(
+    'at the stage of %d W gives as much less everywhere as it draws, and spreads less',
+    (watts, stage) => {
+      const low = hung(0, height, stage)
+      within(below([low], 0.4, 0.3), (below([hung()], 0.4, 0.3) * watts) / model.stages.at(-1)!, 1e-9)
+      expect(spread([low], peak / 4)).toBeLessThan(spread([hung()], peak / 4))
+    },
+  )
+
+  // Similarity: all lengths k times, power k² times, the same figures over k² times the area.
+  it('made twice as large with four times the power, spreads over four times the area about the plane', () => {
+    const one = hung()
+    const large: Emitter = {
+      ...one,
+      elements: one.elements.map(({ centre: [x, y, z], length, radiantPower }) => ({
+        centre: [2 * x, 2 * y, 1 + 2 * (z - 1)],
+        length: 2 * length,
+        radiantPower: 4 * radiantPower,
+      })),
+    }
+    const [small, big] = [[one], [large]].map((each, i) =>
+      areaWhere(each, 8 * (i + 1), 8 * (i + 1), ([part]) => part! >= peak / 3, 0.05 * (i + 1)),
+    )
+    within(big!, 4 * small!, 0.005)
+  })
+
+  it('heats an upright edge that faces it the more the nearer it stands, as the integral does', () => {
+    const peaks = [0.1, 0.3, 0.457, 0.6, 1].map((distance) => {
+      const x = model.body.width / 2 + distance
+      const heights = Array.from({ length: 40 }, (_, i) => (i / 40) * height)
+      return Math.max(
+        ...heights.map((z) => {
+          const own = irradianceAt(hung(), [x, 0, z], [-1, 0, 0])
+          within(own, bruteIrradiance(hung(), [x, 0, z], [-1, 0, 0]), 1e-6)
+          return own
+        }),
+      )
+    })
+    expect(peaks).toEqual([...peaks].sort((a, b) => b - a))
   })
 })
