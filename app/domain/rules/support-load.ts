@@ -20,7 +20,7 @@ export function supportLoad(check: HeaterCheck): Finding[] {
   const names = [...new Set(judged.map(({ name }) => name))].join(' and ')
   const load = unknown ? Math.max(...judged.map((each) => each.load)) : tightest.load
   const status = tightest.status
-  const rule = heaterRule(check, 'support-load', 'hard stop', 'N', `Load status on ${site.name}: ${status}`)
+  const rule = heaterRule(check, 'support-load', 'hard stop', 'N', `Site, load status of ${names}: ${status}`)
   const finding = judgedBy(
     rule,
     {
@@ -34,7 +34,7 @@ export function supportLoad(check: HeaterCheck): Finding[] {
       limit: tightest.allowed,
       margin: tightest.allowed === null ? null : tightest.allowed - load,
       tolerance: 0,
-      remedy: unknown ? `Confirm the allowed load: ${status}.` : 'Spread the load, or strengthen the support.',
+      remedy: unknown ? 'The maker of the structure must confirm it.' : 'Spread the load, or strengthen the support.',
     },
   )
   const alone = finding.outcome === 'pass' ? aloneTooMuch(check, judged) : null

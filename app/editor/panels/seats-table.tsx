@@ -98,7 +98,8 @@ function ordered(warmth: readonly SeatFigures[], order: Order): readonly SeatFig
     return warmth.toSorted((a, b) => a.seat.group.localeCompare(b.seat.group, 'en', { numeric: true }) || byName(a, b))
   const sign = order === 'coolest' ? 1 : -1
   const figure = ({ body }: SeatFigures) => Math.round(fromSi(body ?? 0, 'irradiance', 'metric'))
-  return warmth.toSorted((a, b) => sign * (figure(a) - figure(b)) || byName(a, b))
+  const uncounted = ({ onFloor, target }: SeatFigures) => Number(!onFloor || target === 'not heated')
+  return warmth.toSorted((a, b) => uncounted(a) - uncounted(b) || sign * (figure(a) - figure(b)) || byName(a, b))
 }
 
 function asideOf({ onFloor, target, seat }: SeatFigures): string | null {

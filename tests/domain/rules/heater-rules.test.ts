@@ -510,7 +510,8 @@ describe('support-load by statics', () => {
   it('is not known on a rail that was only proposed, nor on walls and poles', () => {
     const rail = { ...beam, kind: 'rail', allowedPointLoad: null, loadStatus: 'span and load to be confirmed' }
     const [load] = found('support-load', { site: { members: [rail] } })
-    expect([load?.outcome, load?.remedy]).toEqual(['cannot tell', 'Confirm the allowed load: span and load to be confirmed.']) // prettier-ignore
+    expect([load?.outcome, load?.remedy]).toEqual(['cannot tell', 'The maker of the structure must confirm it.'])
+    expect(load?.source).toContain('span and load to be confirmed')
     const wall = { id: 'wall', name: 'wall', from: [0, 0] as [number, number], to: [6, 0] as [number, number], top: 3, material: 'non-combustible' as const, loadStatus: 'sound' } // prettier-ignore
     expect(outcome('support-load', { site: { walls: [wall] }, heater: { mount: 'wall bracket', y: 0.2, memberId: 'wall' } })).toBe('cannot tell') // prettier-ignore
   })
