@@ -52,6 +52,21 @@ test('the engineer reads body and head heat at the edge seats and the findings',
     .loose()
     .parse(await (await page.request.get(`/api/variants/${variant.id}/seats/R1-1/explain?quantity=body`)).json())
   expect(explained.byHeater.reduce((sum, part) => sum + part.value, 0)).toBeCloseTo(explained.value, 6)
+
+  await expect(panel).toContainText('Without shade: nothing is taken to stand in the way.')
+  await page.getByLabel('Shade', { exact: true }).check()
+  await expect(panel.getByRole('table', { name: 'Seen of each heater from the body’s height' })).toContainText('H1')
+  const shaded = z
+    .object({ value: z.number(), seen: z.array(z.object({ heaterId: z.string(), seen: z.number() })) })
+    .parse(
+      await (
+        await page.request.get(`/api/variants/${variant.id}/seats/R1-1/explain?quantity=body-largest&shade=in-place`)
+      ).json(),
+    )
+  await panel.getByLabel('Figure').selectOption({ label: 'Largest irradiance at the body' })
+  await expect(panel).toContainText(`${Math.round(shaded.value)} W/m²`)
+  await expect(panel).toContainText('Stop line at 1580 W/m²')
+  expect(shaded.seen.length).toBeGreaterThan(0)
   expect(seen.violations).toEqual([])
   expect(seen.errors).toEqual([])
 })
