@@ -45,7 +45,7 @@ describe('a closed box of 8 m receives what an element radiates', () => {
     [3.3, 0.5, -70, -60],
     [0, 0, 10, 45],
     [12.5, 8.1, 155, 90],
-  ])('R29: cos^%d α cos^%d β, turned %d°, tilted %d°: 1000 W within 0.1 %%', (a, b, turnDeg, tiltDeg) => {
+  ])('R29: cos^%d α cos^%d β, turned %d°, tilted %d°: 1000 W within 0.1 percent', (a, b, turnDeg, tiltDeg) => {
     const power = powerThroughBox(line(cosine(a, b), { turnDeg, tiltDeg }), 8, 120)
     expect(Math.abs(power - 1000)).toBeLessThan(1)
   })

@@ -13,7 +13,7 @@ describe('Gauss-Legendre nodes in place of an element', () => {
     ['R28', 1.8, 3, 1.9],
     ['R28', 1.8, 4, 0.34],
     ['R28', 1.8, 6, 0.01],
-  ])('%s: an element of %d m, 1 m above: %d nodes err by %d %%', (_, length, count, percent) => {
+  ])('%s: an element of %d m, 1 m above: %d nodes err by %d percent', (_, length, count, percent) => {
     const own = 100 * worstNodeError(1, length, 1, count)
     expect(own).toBeLessThan(2 * percent)
     expect(own).toBeGreaterThan(percent / 2)
