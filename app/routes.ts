@@ -20,6 +20,7 @@ export default [
   route('jobs/:jobId/variants/:variantId/picture.svg', 'routes/job/picture-svg.ts'),
   route('jobs/:jobId/variants/:variantId/hang', 'routes/job/hang.tsx'),
   route('heaters', 'routes/heaters/list.tsx'),
+  route('heaters/:code', 'routes/heaters/heater.tsx'),
   route('rules', 'routes/rules/list.tsx'),
   route('rules/house', 'routes/rules/house.tsx'),
   route('rules/hanging', 'routes/rules/hanging.tsx'),

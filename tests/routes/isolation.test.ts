@@ -44,18 +44,20 @@ async function plantCanary(slug: string, text: string): Promise<Ids> {
     `update heater_models set body = jsonb_set(body, '{note}', to_jsonb($2::text)) where organisation_id = $1`,
     of,
   )
+  // The catalogues of both are the same; this one model each has alone.
+  const alone = [of[0], `only-${slug}`]
   await admin.query(
-    `insert into heater_models (organisation_id, code, body) select organisation_id, 'only-' || $2, jsonb_set(body, '{code}', to_jsonb('only-' || $2))
+    `insert into heater_models (organisation_id, code, body) select organisation_id, $2, jsonb_set(body, '{code}', to_jsonb($2::text))
       from heater_models where organisation_id = $1 and code = 'betony-3-0'`,
-    of,
+    alone,
   )
   await admin.query('update photos set name = $2 where organisation_id = $1', of)
   await admin.query('update rule_sets set name = $2, place = $2 where organisation_id = $1', of)
   const found = await admin.query(
-    `select v.job_id as "jobId", v.id as "variantId", p.id as "photoId", r.id as "setId", 'only-' || $2 as code from variants v
+    `select v.job_id as "jobId", v.id as "variantId", p.id as "photoId", r.id as "setId", $2::text as code from variants v
      join rule_sets r on r.organisation_id = v.organisation_id join photos p
      on p.organisation_id = v.organisation_id and p.job_id = v.job_id where v.organisation_id = $1 order by v.id limit 1`,
-    of,
+    alone,
   )
   return found.rows[0]
 }

@@ -27,6 +27,7 @@ export const reachOf: Record<string, Reach> = {
   '/jobs/:jobId/compare.png': { GET: 'export' },
   '/jobs/:jobId/compare.svg': { GET: 'export' },
   '/heaters': { GET: 'view' },
+  '/heaters/:code': { GET: 'view', POST: 'edit-beams' },
   '/rules': { GET: 'view' },
   '/rules/house': { GET: 'view', POST: 'edit-rules' },
   '/rules/hanging': { GET: 'view', POST: 'edit-rules' },

@@ -12,7 +12,7 @@ export interface CellFault {
 export type BeamTable = { readonly beam: BeamTableData } | { readonly faults: readonly CellFault[] }
 
 /** After so many places the rest is not looked at. */
-const mostFaults = 50
+export const mostFaults = 50
 /** Most rows and columns of angles: every degree of ±90°. */
 const mostAngles = 181
 /** Angles nearer to each other than this are one angle, degrees. */

@@ -8,6 +8,6 @@ export function beamData(check: HeaterCheck): Finding {
     ? findingOf(rule, 'pass', { title: 'Beam data given' })
     : findingOf(rule, 'cannot tell', {
         title: `No beam data for ${check.model.name}`,
-        remedy: 'Enter its beam angles, or choose a model that has them.',
+        remedy: 'Give it a measured beam in Heaters, or choose a model that has one.',
       })
 }

@@ -1,3 +1,4 @@
+import { beamInWords } from '#app/domain/heaters/beam-in-words.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { HeaterChange } from '#app/domain/layout/edits.ts'
 import type { MountedHeater } from '#app/domain/layout/layout.ts'
@@ -55,6 +56,9 @@ export function HeaterFields(props: HeaterFieldsProps) {
           </Button>
         )}
       </header>
+      {single && model?.beam?.kind === 'table' && (
+        <p className="mb-2 text-2xs text-ink-3">Beam {beamInWords(model.beam)}</p>
+      )}
       <fieldset disabled={readOnly} className="m-0 border-0 p-0">
         <legend className="sr-only">Place and aim</legend>
         <div

@@ -1,4 +1,6 @@
 import { useState } from 'react'
+import { Link } from 'react-router'
+import { beamInWords } from '#app/domain/heaters/beam-in-words.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import { formatMoney } from '#app/domain/comparison/list-price.ts'
 import { formatLength, formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
@@ -20,12 +22,6 @@ export async function loader({ request }: Route.LoaderArgs) {
 
 const none = '–'
 const degrees = (value: number) => `${value}°`
-
-function beamWords({ beam }: HeaterModel): string {
-  if (!beam) return 'no beam data'
-  if (beam.kind === 'table') return 'measured table'
-  return `${degrees(beam.acrossFullAngleDeg)} × ${degrees(beam.alongFullAngleDeg)}`
-}
 
 const supplyWords = ({ supplyOptions }: HeaterModel) =>
   supplyOptions.map(({ voltage, phases }) => `${voltage} V${phases === 3 ? ' three-phase' : ''}`).join(', ')
@@ -62,9 +58,11 @@ function columnsFor(units: DisplayUnits): Column<HeaterModel>[] {
       names: true,
       className: 'min-w-44',
       sortBy: ({ name }) => name,
-      cell: ({ name, note }) => (
+      cell: ({ code, name, note }) => (
         <>
-          {name}
+          <Link to={`/heaters/${code}`} className="inline-flex min-h-6 items-center underline pointer-coarse:min-h-11">
+            {name}
+          </Link>
           {note && <span className="block max-w-56 text-2xs font-regular text-ink-3">{note}</span>}
         </>
       ),
@@ -111,7 +109,7 @@ function columnsFor(units: DisplayUnits): Column<HeaterModel>[] {
         </>
       ),
     },
-    { key: 'beam', heading: 'Beam, across × along', cell: beamWords },
+    { key: 'beam', heading: 'Beam, across × along', cell: ({ beam }) => beamInWords(beam) },
     {
       key: 'height',
       heading: 'Mounting height',
@@ -161,8 +159,8 @@ export default function HeatersPage({ loaderData: { viewer, models } }: Route.Co
         <div>
           <h1 className="text-xl font-strong">Heaters</h1>
           <p className="mt-0.5 text-ink-2">
-            As the data sheets and manuals state them. What is not stated is never assumed: a check that needs it says
-            “cannot tell”.
+            As the data sheets and manuals state them; a beam of your own measurement comes before the data sheet’s.
+            What is not stated is never assumed: a check that needs it says “cannot tell”.
           </p>
         </div>
         <Choice

@@ -20,7 +20,7 @@ import { contentHash } from '#drizzle/content-hash.ts'
 import { heaterModels } from '#drizzle/schema.ts'
 
 /** A model of the catalogue that the person who asks may see, and that person. */
-interface OpenHeater {
+export interface OpenHeater {
   readonly code: string
   readonly member: Member
 }
@@ -45,7 +45,7 @@ export interface BeamRevision {
 }
 
 /** A model with the beam that is in use, what its data sheet states, and how it came so, newest first. */
-export interface HeaterWithBeam {
+interface HeaterWithBeam {
   readonly model: HeaterModel
   readonly dataSheetBeam: BeamData | null
   readonly revision: number
