@@ -255,7 +255,7 @@ function PlanNotes({ state, site, flux, touch }: PlanNotesProps) {
   const say = (metres: number) => formatLength(metres, site.displayUnits)
   const reason = state.draft?.reason
   return (
-    <div className="pointer-events-none absolute inset-x-0 top-2 flex flex-col items-center gap-1.5 px-4 text-center">
+    <div className="pointer-events-none absolute inset-x-0 top-2 flex flex-col items-center gap-1.5 px-4 text-center max-desk:px-14">
       {state.draft && lead && (
         <p className="rounded-sm bg-[#fbf7f0] px-2 py-1 text-xs text-[#1d2233]">
           <b className="font-strong">
@@ -265,7 +265,9 @@ function PlanNotes({ state, site, flux, touch }: PlanNotesProps) {
         </p>
       )}
       {layout.heaters.length === 0 && (
-        <p className="mt-6 text-base text-dusk-line">No heaters yet. Place one on a beam to see the map.</p>
+        <p className="mt-6 bg-dusk-ground/80 px-2 text-base text-dusk-line max-desk:mt-12">
+          No heaters yet. Place one on a beam to see the map.
+        </p>
       )}
       <MapNote flux={flux} />
     </div>
