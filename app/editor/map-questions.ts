@@ -2,7 +2,7 @@ import type { Brief } from '#app/domain/brief/brief.ts'
 import { absorptanceOf } from '#app/domain/comfort/sources.ts'
 import { windOf } from '#app/domain/comfort/seat-warmth.ts'
 import { openSkyTemperature } from '#app/domain/comfort/surroundings.ts'
-import { emitterOf, type Emitter } from '#app/domain/flux/emitter.ts'
+import { emitterOf, type Efficiency, type Emitter } from '#app/domain/flux/emitter.ts'
 import type { MapQuantity, MapQuestion } from '#app/domain/flux/map-question.ts'
 import { obstructionsOf } from '#app/domain/flux/shading.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
@@ -38,32 +38,47 @@ export function cellOf(site: Site, sharpness: keyof typeof cells): number {
   return Math.max(0.02, Math.round(side * 1000) / 1000)
 }
 
-const remembered = new WeakMap<MountedHeater, { model: HeaterModel; emitter: Emitter | null }>()
+interface Remembered {
+  readonly model: HeaterModel
+  readonly efficiency: Efficiency
+  readonly emitter: Emitter | null
+}
+const remembered = new WeakMap<MountedHeater, Remembered>()
 
-/** Emitter of a heater; the same object for the same heater and model. */
-function emitterFor(heater: MountedHeater, model: HeaterModel): Emitter | null {
+/** Emitter of a heater; the same object for the same heater, model and efficiency. */
+function emitterFor(heater: MountedHeater, model: HeaterModel, efficiency: Efficiency): Emitter | null {
   const known = remembered.get(heater)
-  if (known?.model === model) return known.emitter
-  const emitter = emitterOf(heater, model)
-  remembered.set(heater, { model, emitter })
+  if (known?.model === model && known.efficiency === efficiency) return known.emitter
+  const emitter = emitterOf(heater, model, efficiency)
+  remembered.set(heater, { model, efficiency, emitter })
   return emitter
 }
 
-/** The heaters whose heat can be told, as emitters. */
-export function emittersOf(layout: Layout, models: ReadonlyMap<string, HeaterModel>): Emitter[] {
+/** The heaters whose heat can be told, as emitters with the low, nominal or high figure of their radiant efficiency. */
+export function emittersOf(
+  layout: Layout,
+  models: ReadonlyMap<string, HeaterModel>,
+  efficiency: Efficiency = 'nominal',
+): Emitter[] {
   return layout.heaters.flatMap((heater) => {
     const model = models.get(heater.model)
-    return (model && emitterFor(heater, model)) ?? []
+    return (model && emitterFor(heater, model, efficiency)) ?? []
   })
 }
 
-/** How the chosen quantity is coloured and written; irradiance in the person's unit. */
+/** How the chosen quantity is coloured and written; irradiance in the person's unit, an efficiency that is not nominal said. */
 export function scaleOf(
   choice: ViewChoice,
   brief: Brief,
   units: Site['displayUnits'],
   theme: Theme = 'dusk',
 ): QuantityScale {
+  const scale = quantityScale(choice, brief, units, theme)
+  const { efficiency } = choice
+  return efficiency === 'nominal' ? scale : { ...scale, name: `${scale.name}, ${efficiency} radiant efficiency` }
+}
+
+function quantityScale(choice: ViewChoice, brief: Brief, units: Site['displayUnits'], theme: Theme): QuantityScale {
   switch (choice.map.kind) {
     case 'flux':
       return inUnit(irradianceScale(theme, brief.target), choice.fluxUnit)
@@ -86,7 +101,7 @@ export function mapQuestion(
   sharpness: keyof typeof cells,
 ): MapQuestion | null {
   const { site, layout, models, choice } = subject
-  const emitters = emittersOf(layout, models)
+  const emitters = emittersOf(layout, models, choice.efficiency)
   if (emitters.length === 0) return null
   const z = planeHeight(choice.plane, site)
   return {

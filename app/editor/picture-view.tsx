@@ -26,6 +26,8 @@ interface PictureViewProps {
   readonly choice: ViewChoice
   /** The map as it is chosen; null without heat and while it is computed. */
   readonly picture: HeatPicture | null
+  /** What stands beside the map's scale. */
+  readonly notes: readonly string[]
   /** Address of the picture as a file, without its ending; null for who may not take one away. */
   readonly exports: string | null
 }
@@ -41,6 +43,7 @@ export default function PictureView({
   rules,
   choice,
   picture,
+  notes,
   exports,
 }: PictureViewProps) {
   const [corner, setCorner] = useState<Corner>('lower left')
@@ -99,7 +102,7 @@ export default function PictureView({
       </div>
       <p className="border-t border-rule bg-paper px-4 py-1.5 text-xs text-ink-2">
         {quantity.name} at {plane}, laid on the floor. Parallel projection: turned {turnedDeg}° and seen from {downDeg}°
-        above; walls in front are dashed.
+        above; walls in front are dashed. {notes.join(' ')}
       </p>
     </section>
   )

@@ -88,7 +88,7 @@ export function PlanSurface(props: PlanSurfaceProps) {
   const layout = shownLayout(state)
   const kept = state.history.present
   const plane = planeHeight(choice.plane, site)
-  const emitters = useMemo(() => emittersOf(layout, models), [layout, models])
+  const emitters = useMemo(() => emittersOf(layout, models, choice.efficiency), [layout, models, choice.efficiency])
   const selected = useMemo(() => new Set(state.selected), [state.selected])
   const say = (metres: number) => formatLength(metres, site.displayUnits)
   const gestures = usePlanGestures(box, svg, {

@@ -11,6 +11,7 @@ import { ButtonLink } from '#app/components/button.tsx'
 import { JobFrame, type Viewer } from '#app/components/page-frame.tsx'
 import { shownLayout } from '#app/editor/editor-state.ts'
 import type { Kept, Keeping } from '#app/editor/keeping.ts'
+import { mapNotes } from '#app/editor/map-notes.ts'
 import { emittersOf, mapQuestion, scaleOf } from '#app/editor/map-questions.ts'
 import { FiguresRow } from '#app/editor/panels/figures-row.tsx'
 import { ConflictPanel } from '#app/editor/panels/conflict-panel.tsx'
@@ -35,7 +36,7 @@ import { useFigures } from '#app/editor/use-figures.ts'
 import { useFlux } from '#app/editor/use-flux.ts'
 import { useAlive, useMedia, useRoom } from '#app/editor/use-media.ts'
 import { useBeat, usePaced } from '#app/editor/use-paced.ts'
-import { plainView, planeHeight } from '#app/editor/view-choice.ts'
+import { offeredView, plainView, planeHeight } from '#app/editor/view-choice.ts'
 
 /** Everything the variant page brings to its editor. */
 export interface VariantEditorProps {
@@ -81,7 +82,8 @@ export function VariantEditor(props: VariantEditorProps) {
   const { state, dispatch, models } = editor
   const kept = state.history.present
   const layout = shownLayout(state)
-  const [choice, setChoice] = useState(plainView)
+  const [wanted, setChoice] = useState(plainView)
+  const choice = useMemo(() => offeredView(wanted, layout, models), [wanted, layout, models])
   const [hold, setHold] = useState(true)
   const [explained, setExplained] = useState<string | null>(null)
   const [placing, setPlacing] = useState(false)
@@ -113,7 +115,7 @@ export function VariantEditor(props: VariantEditorProps) {
     [site, brief, layout, models, choice, scale, moving],
   )
   const cutting = useCutting(
-    { site, brief, layout: kept, models, selected: state.selected, room, touch },
+    { site, brief, layout: kept, models, efficiency: choice.efficiency, selected: state.selected, room, touch },
     props.variantId,
   )
   const { cuts, heat } = cutting
@@ -131,7 +133,8 @@ export function VariantEditor(props: VariantEditorProps) {
   ) : (
     <p className="px-4.5 py-3.5 text-ink-2">Place a heater to see the section through it.</p>
   )
-  const emitters = useMemo(() => emittersOf(layout, models), [layout, models])
+  const emitters = useMemo(() => emittersOf(layout, models, choice.efficiency), [layout, models, choice.efficiency])
+  const notes = mapNotes(choice, flux.answer)
   const onSeat = useCallback((id: string | null) => dispatch({ type: 'seat', id }), [dispatch])
   const explain = useCallback(
     (id: string) => {
@@ -169,9 +172,10 @@ export function VariantEditor(props: VariantEditorProps) {
     plane: planeHeight(choice.plane, site),
     answer: flux.answer,
     isFlux: choice.map.kind === 'flux',
+    notes,
   }
   const tools = {
-    ...{ site, layout, choice, readOnly, legend, placing },
+    ...{ site, layout, models, choice, readOnly, legend, placing },
     threshold: rules.overlapThreshold,
     selected: state.selected,
     onChoice: setChoice,
@@ -250,7 +254,7 @@ export function VariantEditor(props: VariantEditorProps) {
           {seen === 'picture' ? (
             <Suspense fallback={<p className="p-4 text-ink-2">Drawing the picture</p>}>
               <PictureView
-                {...{ site, brief, layout, models, rules, choice }}
+                {...{ site, brief, layout, models, rules, choice, notes }}
                 picture={flux.answer?.picture ?? null}
                 exports={props.pictureHref}
               />

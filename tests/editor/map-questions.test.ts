@@ -4,9 +4,10 @@ import { obstructionsOf } from '#app/domain/flux/shading.ts'
 import type { Cover } from '#app/domain/site/site.ts'
 import type { Vec3 } from '#app/domain/vector.ts'
 import { answerMap, emptyMapCache, type MapAnswer } from '#app/drawing/heat/map-picture.ts'
-import { mapQuestion, scaleOf, type MapSubject } from '#app/editor/map-questions.ts'
+import { mapNotes } from '#app/editor/map-notes.ts'
+import { emittersOf, mapQuestion, scaleOf, type MapSubject } from '#app/editor/map-questions.ts'
 import { mapValueAt } from '#app/editor/read-out.tsx'
-import { plainView, type ViewChoice } from '#app/editor/view-choice.ts'
+import { hasEfficiencyRange, offeredView, plainView, type ViewChoice } from '#app/editor/view-choice.ts'
 import { brief, heater, model, modelsOf, seat, site } from '#tests/domain/comfort/terrace.ts'
 
 const coverOf = (id: string, corners: Vec3[]): Cover => ({
@@ -102,5 +103,100 @@ describe('the feels-like map', () => {
     expect(ask({ site: site([], { covers }) })).toBe(under)
     const above = ask({}, 3.2)
     expect(above).toBeLessThan(under - 1)
+  })
+})
+
+describe('radiant efficiency with a range', () => {
+  const ranged = modelsOf(model({ radiantEfficiencyRange: { low: 0.4, high: 0.6 } }))
+  const layout = { title: 'As drawn', heaters }
+  const flux = (efficiency: ViewChoice['efficiency'], models = ranged) =>
+    answerOf(subjectOf({ efficiency }, { models }))
+
+  it('the map goes with the chosen figure, nominal unless another one is chosen', () => {
+    const [low, nominal, high] = [flux('low'), flux('nominal'), flux('high')]
+    expect(nominal.peak!).toBeGreaterThan(100)
+    expect(answerOf(subjectOf({}, { models: ranged })).values).toEqual(nominal.values)
+    // 0.4, 0.5 and 0.6 of the electrical power
+    low.values.forEach((value, at) => expect(value).toBeCloseTo(0.8 * nominal.values[at]!, 3))
+    high.values.forEach((value, at) => expect(value).toBeCloseTo(1.2 * nominal.values[at]!, 3))
+    const asked = emittersOf(layout, ranged, 'low')
+    expect(emittersOf(layout, ranged, 'low')[0]).toBe(asked[0])
+    expect(emittersOf(layout, ranged)[0]).not.toBe(asked[0])
+  })
+
+  it('every kind of map takes it', () => {
+    const maps: ViewChoice['map'][] = [
+      { kind: 'share', heaterId: 'H1' },
+      { kind: 'feels-like', wind: 'design' },
+    ]
+    for (const map of maps) {
+      const peak = (efficiency: ViewChoice['efficiency']) =>
+        answerOf(subjectOf({ map, efficiency }, { models: ranged })).peak!
+      expect(peak('low')).toBeLessThan(peak('nominal'))
+      expect(peak('nominal')).toBeLessThan(peak('high'))
+    }
+  })
+
+  it('a model without a range stays as it is', () =>
+    expect(flux('low', modelsOf(model())).peak).toBe(flux('nominal').peak))
+
+  it('is offered only where a heater of the layout has a range; a choice does not outlive it', () => {
+    const low: ViewChoice = { ...plainView, efficiency: 'low' }
+    const other = model({ code: 'other', radiantEfficiencyRange: { low: 0.4, high: 0.6 } })
+    expect(hasEfficiencyRange(layout, ranged)).toBe(true)
+    expect(offeredView(low, layout, ranged)).toBe(low)
+    for (const models of [modelsOf(model()), modelsOf(model(), other), modelsOf()]) {
+      expect(hasEfficiencyRange(layout, models)).toBe(false)
+      expect(offeredView(low, layout, models)).toEqual(plainView)
+    }
+    expect(hasEfficiencyRange({ ...layout, heaters: [] }, ranged)).toBe(false)
+    expect(plainView.efficiency).toBe('nominal')
+  })
+
+  it('is said in the name of the scale and beside it', () => {
+    for (const map of [plainView.map, { kind: 'feels-like', wind: 'calm' } as const]) {
+      const named = (efficiency: ViewChoice['efficiency']) =>
+        scaleOf({ ...plainView, map, efficiency }, cold, 'metric').name
+      expect(named('low')).toBe(`${named('nominal')}, low radiant efficiency`)
+      expect(named('high')).toBe(`${named('nominal')}, high radiant efficiency`)
+      expect(named('nominal')).not.toContain('efficiency')
+    }
+    expect(mapNotes({ ...plainView, efficiency: 'high' }, null)).toEqual([
+      'Heat with high radiant efficiency; seat figures stay nominal.',
+    ])
+  })
+})
+
+describe('far heaters that a map leaves out', () => {
+  const noted = (errorBound: number, fluxUnit: ViewChoice['fluxUnit'] = 'W/m²') =>
+    mapNotes({ ...plainView, fluxUnit }, { errorBound })
+
+  it('are spoken of with what may be missing, rounded up', () => {
+    expect(noted(8.2)).toEqual(['Far heaters left out: at most 9 W/m² missing at any place.'])
+    expect(noted(9)).toEqual(['Far heaters left out: at most 9 W/m² missing at any place.'])
+    expect(noted(0.01)).toEqual(['Far heaters left out: at most 1 W/m² missing at any place.'])
+    // 9 W/m² are 0.836 W/ft²
+    expect(noted(9, 'W/ft²')).toEqual(['Far heaters left out: at most 0.9 W/ft² missing at any place.'])
+  })
+
+  it('are not spoken of where none are', () => {
+    expect(noted(0)).toEqual([])
+    expect(mapNotes(plainView, null)).toEqual([])
+  })
+
+  it('on a site of 100 × 60 m with 200 heaters', () => {
+    const rows = Array.from({ length: 200 }, (_, i) =>
+      heater(`H${i}`, { x: (i % 20) * 5 - 47, y: Math.floor(i / 20) * 6 - 27 }),
+    )
+    const floor: [number, number][] = [
+      [-50, -30],
+      [50, -30],
+      [50, 30],
+      [-50, 30],
+    ]
+    const subject = subjectOf({}, { site: site([], { floor }), layout: { title: 'Large', heaters: rows } })
+    const answer = answerOf(subject)
+    expect(answer.errorBound).toBeGreaterThan(0)
+    expect(mapNotes(plainView, answer)).toEqual([expect.stringMatching(/^Far heaters left out: at most \d+ W\/m²/)])
   })
 })

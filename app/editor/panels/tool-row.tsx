@@ -1,4 +1,5 @@
 import { memo, useState } from 'react'
+import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import { planesOf } from '#app/domain/site/planes.ts'
 import type { Site } from '#app/domain/site/site.ts'
@@ -9,15 +10,22 @@ import type { QuantityScale } from '#app/drawing/heat/quantity.ts'
 import { screenPen } from '#app/drawing/pen.ts'
 import { Button } from '#app/components/button.tsx'
 import { Choice } from '#app/components/choice.tsx'
-import type { Emitter } from '#app/domain/flux/emitter.ts'
+import type { Efficiency, Emitter } from '#app/domain/flux/emitter.ts'
 import type { MapAnswer } from '#app/drawing/heat/map-picture.ts'
 import { usePointed, type PointedStore } from '#app/editor/pointed.ts'
 import { mapValueAt, readingAt } from '#app/editor/read-out.tsx'
-import { planeHeight, type FluxUnit, type MapChoice, type ViewChoice } from '#app/editor/view-choice.ts'
+import {
+  hasEfficiencyRange,
+  planeHeight,
+  type FluxUnit,
+  type MapChoice,
+  type ViewChoice,
+} from '#app/editor/view-choice.ts'
 
 interface ToolRowProps {
   readonly site: Site
   readonly layout: Layout
+  readonly models: ReadonlyMap<string, HeaterModel>
   readonly selected: readonly string[]
   readonly choice: ViewChoice
   /** Threshold of overlap, W/m². */
@@ -68,7 +76,7 @@ const mapChoices = {
 type MapName = keyof typeof mapChoices
 
 /** What the map shows; one heater's share follows the chosen heater. */
-function MapSelect({ layout, selected, choice, threshold, onChoice }: ToolRowProps) {
+function MapSelect({ layout, models, selected, choice, threshold, onChoice }: ToolRowProps) {
   const { map } = choice
   const value: MapName = map.kind === 'feels-like' ? map.wind : map.kind
   const heaterId = selected[0] ?? layout.heaters[0]?.id ?? ''
@@ -111,7 +119,33 @@ function MapSelect({ layout, selected, choice, threshold, onChoice }: ToolRowPro
         />
         Shade
       </label>
+      {hasEfficiencyRange(layout, models) && <EfficiencySelect choice={choice} onChoice={onChoice} />}
     </span>
+  )
+}
+
+const efficiencies = {
+  low: 'Low efficiency',
+  nominal: 'Nominal efficiency',
+  high: 'High efficiency',
+} as const satisfies Record<Efficiency, string>
+const isEfficiency = (text: string): text is Efficiency => text in efficiencies
+
+/** Which end of the data sheets' range of radiant efficiency the heat is drawn with. */
+function EfficiencySelect({ choice, onChoice }: Pick<ToolRowProps, 'choice' | 'onChoice'>) {
+  return (
+    <select
+      aria-label="Radiant efficiency of the heat shown"
+      value={choice.efficiency}
+      onChange={({ target: { value } }) => isEfficiency(value) && onChoice({ ...choice, efficiency: value })}
+      className={selectClass}
+    >
+      {Object.entries(efficiencies).map(([name, label]) => (
+        <option key={name} value={name}>
+          {label}
+        </option>
+      ))}
+    </select>
   )
 }
 
@@ -217,6 +251,8 @@ export interface LegendReading {
   readonly plane: number
   readonly answer: MapAnswer | null
   readonly isFlux: boolean
+  /** Lines below the scale where the map is not plain. */
+  readonly notes: readonly string[]
 }
 
 const pen = screenPen('dusk')
@@ -225,21 +261,28 @@ const pen = screenPen('dusk')
 const StillLegend = memo(LegendDrawing)
 
 /** The one scale with a tick at the figure that is pointed at. */
-export function MapLegend({ scale, store, site, emitters, plane, answer, isFlux }: LegendReading) {
+export function MapLegend({ scale, store, site, emitters, plane, answer, isFlux, notes }: LegendReading) {
   const pointed = usePointed(store)
   const flux = pointed && isFlux ? (readingAt(site, emitters, plane, pointed.at)?.irradiance ?? null) : null
   const reading = pointed && !isFlux && answer ? mapValueAt(answer, pointed.at) : flux
   return (
-    <span className="inline-block h-10 w-78 flex-none overflow-hidden max-tablet:order-last">
-      <StillLegend
-        name="scale"
-        quantity={scale}
-        pen={pen}
-        width={312}
-        ink="var(--color-ink)"
-        zoneWords={false}
-        reading={reading}
-      />
+    <span className="w-78 flex-none max-tablet:order-last">
+      <span className="block h-10 overflow-hidden">
+        <StillLegend
+          name="scale"
+          quantity={scale}
+          pen={pen}
+          width={312}
+          ink="var(--color-ink)"
+          zoneWords={false}
+          reading={reading}
+        />
+      </span>
+      {notes.map((note) => (
+        <span key={note} className="block pb-1 pl-3 text-2xs text-ink-2">
+          {note}
+        </span>
+      ))}
     </span>
   )
 }

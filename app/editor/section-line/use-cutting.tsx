@@ -1,5 +1,6 @@
 import { lazy, Suspense, useMemo, useState, type ReactNode } from 'react'
 import type { Brief } from '#app/domain/brief/brief.ts'
+import type { Efficiency } from '#app/domain/flux/emitter.ts'
 import type { HeaterModel } from '#app/domain/heaters/heater-model.ts'
 import type { Layout } from '#app/domain/layout/layout.ts'
 import type { Site } from '#app/domain/site/site.ts'
@@ -20,6 +21,8 @@ interface Cut {
   readonly brief: Brief
   readonly layout: Layout
   readonly models: ReadonlyMap<string, HeaterModel>
+  /** The radiant efficiency that the heat is drawn with. */
+  readonly efficiency: Efficiency
   readonly selected: readonly string[]
   readonly room: Room
   readonly touch: boolean
@@ -41,14 +44,15 @@ export interface Cutting {
 }
 
 /** The sections through a layout: those of its heaters and one along a line that the person places. */
-export function useCutting({ site, brief, layout, models, selected, room, touch }: Cut, variantId: string): Cutting {
+export function useCutting(cut: Cut, variantId: string): Cutting {
+  const { site, brief, layout, models, efficiency, selected, room, touch } = cut
   const [wanted, onWanted] = useState(false)
   const [placed, place] = usePlacedCut(variantId)
   const cuts = useMemo(() => cutsOf(site, layout, selected, placed), [site, layout, selected, placed])
   const heat = useMemo(() => irradianceScale('dusk', brief.target), [brief])
   const about = useMemo(
-    () => ({ emitters: emittersOf(layout, models), site, cuts, levels: heat.levels, edges: heat.edges }),
-    [layout, models, site, cuts, heat],
+    () => ({ emitters: emittersOf(layout, models, efficiency), site, cuts, levels: heat.levels, edges: heat.edges }),
+    [layout, models, efficiency, site, cuts, heat],
   )
   const line = useMemo(() => <SectionLinePanel cut={placed} site={site} onChange={place} />, [placed, site, place])
   const isShown = (room === 'desk' || wanted) && cuts.length > 0
