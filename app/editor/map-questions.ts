@@ -75,7 +75,7 @@ export function scaleOf(
 ): QuantityScale {
   const scale = quantityScale(choice, brief, units, theme)
   const { efficiency } = choice
-  return efficiency === 'nominal' ? scale : { ...scale, name: `${scale.name}, ${efficiency} radiant efficiency` }
+  return efficiency === 'nominal' ? scale : { ...scale, name: `${scale.name} with ${efficiency} radiant efficiency` }
 }
 
 function quantityScale(choice: ViewChoice, brief: Brief, units: Site['displayUnits'], theme: Theme): QuantityScale {

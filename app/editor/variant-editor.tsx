@@ -15,7 +15,7 @@ import { mapNotes } from '#app/editor/map-notes.ts'
 import { emittersOf, mapQuestion, scaleOf } from '#app/editor/map-questions.ts'
 import { FiguresRow } from '#app/editor/panels/figures-row.tsx'
 import { ConflictPanel } from '#app/editor/panels/conflict-panel.tsx'
-import { MapLegend, ToolRow } from '#app/editor/panels/tool-row.tsx'
+import { MapLegend, MapNotes, ToolRow } from '#app/editor/panels/tool-row.tsx'
 import { VariantTabs, type VariantTab } from '#app/editor/panels/variant-tabs.tsx'
 import { PhoneSections } from '#app/editor/phone-sections.tsx'
 import { PlanSurface } from '#app/editor/plan-surface.tsx'
@@ -172,10 +172,9 @@ export function VariantEditor(props: VariantEditorProps) {
     plane: planeHeight(choice.plane, site),
     answer: flux.answer,
     isFlux: choice.map.kind === 'flux',
-    notes,
   }
   const tools = {
-    ...{ site, layout, models, choice, readOnly, legend, placing },
+    ...{ site, layout, models, choice, readOnly, legend, notes, placing },
     threshold: rules.overlapThreshold,
     selected: state.selected,
     onChoice: setChoice,
@@ -261,7 +260,13 @@ export function VariantEditor(props: VariantEditorProps) {
             </Suspense>
           ) : (
             <>
-              {room !== 'tablet' && <ToolRow {...tools} />}
+              {room === 'tablet' ? (
+                <div className="px-4.5">
+                  <MapNotes notes={notes} />
+                </div>
+              ) : (
+                <ToolRow {...tools} />
+              )}
               <PlanSurface
                 {...{ state, dispatch, site, models, rules, choice, scale, flux, readOnly, hold, touch, pointed }}
                 warmth={figures.warmth}

@@ -157,8 +157,8 @@ describe('radiant efficiency with a range', () => {
     for (const map of [plainView.map, { kind: 'feels-like', wind: 'calm' } as const]) {
       const named = (efficiency: ViewChoice['efficiency']) =>
         scaleOf({ ...plainView, map, efficiency }, cold, 'metric').name
-      expect(named('low')).toBe(`${named('nominal')}, low radiant efficiency`)
-      expect(named('high')).toBe(`${named('nominal')}, high radiant efficiency`)
+      expect(named('low')).toBe(`${named('nominal')} with low radiant efficiency`)
+      expect(named('high')).toBe(`${named('nominal')} with high radiant efficiency`)
       expect(named('nominal')).not.toContain('efficiency')
     }
     expect(mapNotes({ ...plainView, efficiency: 'high' }, null)).toEqual([

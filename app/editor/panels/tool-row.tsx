@@ -35,13 +35,15 @@ interface ToolRowProps {
   readonly onPlacing: () => void
   readonly readOnly: boolean
   readonly legend: LegendReading
+  /** What stands beside the scale. */
+  readonly notes: readonly string[]
   /** In a sheet: without its own scale and without placing. */
   readonly bare?: boolean
 }
 
 /** What the row above the plan holds: placing, what the map shows, the plane, the scale. */
 export function ToolRow(props: ToolRowProps) {
-  const { site, choice, onChoice, placing, onPlacing, readOnly, legend, bare = false } = props
+  const { site, choice, onChoice, placing, onPlacing, readOnly, legend, notes, bare = false } = props
   return (
     <div
       className={`flex min-h-10.5 flex-none flex-wrap items-center gap-x-2.5 gap-y-1 ${bare ? 'py-3' : 'border-b border-rule'} px-3.5`}
@@ -58,6 +60,7 @@ export function ToolRow(props: ToolRowProps) {
         {!bare && <MapLegend {...legend} />}
         <UnitChooser choice={choice} onChoice={onChoice} scale={legend.scale} />
       </span>
+      {!bare && <MapNotes notes={notes} />}
     </div>
   )
 }
@@ -85,7 +88,7 @@ function MapSelect({ layout, models, selected, choice, threshold, onChoice }: To
     if (next) onChoice({ ...choice, map: next })
   }
   return (
-    <span className="flex items-center gap-1.5">
+    <span className="flex flex-wrap items-center gap-1.5">
       <select
         aria-label="The map shows"
         value={value}
@@ -251,8 +254,6 @@ export interface LegendReading {
   readonly plane: number
   readonly answer: MapAnswer | null
   readonly isFlux: boolean
-  /** Lines below the scale where the map is not plain. */
-  readonly notes: readonly string[]
 }
 
 const pen = screenPen('dusk')
@@ -261,28 +262,27 @@ const pen = screenPen('dusk')
 const StillLegend = memo(LegendDrawing)
 
 /** The one scale with a tick at the figure that is pointed at. */
-export function MapLegend({ scale, store, site, emitters, plane, answer, isFlux, notes }: LegendReading) {
+export function MapLegend({ scale, store, site, emitters, plane, answer, isFlux }: LegendReading) {
   const pointed = usePointed(store)
   const flux = pointed && isFlux ? (readingAt(site, emitters, plane, pointed.at)?.irradiance ?? null) : null
   const reading = pointed && !isFlux && answer ? mapValueAt(answer, pointed.at) : flux
   return (
-    <span className="w-78 flex-none max-tablet:order-last">
-      <span className="block h-10 overflow-hidden">
-        <StillLegend
-          name="scale"
-          quantity={scale}
-          pen={pen}
-          width={312}
-          ink="var(--color-ink)"
-          zoneWords={false}
-          reading={reading}
-        />
-      </span>
-      {notes.map((note) => (
-        <span key={note} className="block pb-1 pl-3 text-2xs text-ink-2">
-          {note}
-        </span>
-      ))}
+    <span className="inline-block h-10 w-78 flex-none overflow-hidden max-tablet:order-last">
+      <StillLegend
+        name="scale"
+        quantity={scale}
+        pen={pen}
+        width={312}
+        ink="var(--color-ink)"
+        zoneWords={false}
+        reading={reading}
+      />
     </span>
   )
+}
+
+/** What is to be known of a map that is not plain, beside its scale. */
+export function MapNotes({ notes }: { notes: readonly string[] }) {
+  if (notes.length === 0) return null
+  return <p className="py-1 text-xs text-ink-2 max-tablet:order-last">{notes.join(' ')}</p>
 }
