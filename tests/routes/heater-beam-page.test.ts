@@ -63,6 +63,7 @@ describe('the page of a heater', () => {
     expect(html).not.toContain('name="csv"')
     expect((await open('engineer')).html).toContain('name="csv"')
     expect((await open('engineer', '/heaters/no-such')).status).toBe(404)
+    expect((await open('designer', '/heaters/dulse-3-0')).text).toContain('No beam data Without a beam')
   })
 
   it('names each wrong place beside the table, keeps what was typed and stores nothing', async () => {

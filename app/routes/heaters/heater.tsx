@@ -112,7 +112,7 @@ function BeamInUse({ beam, dataSheetBeam, measured, revision, revisions }: Loade
   return (
     <section aria-labelledby="beam">
       <h2 id="beam" className="mb-1 text-lg font-strong">
-        Beam {beamInWords(beam)}
+        {beam ? `Beam ${beamInWords(beam)}` : 'No beam data'}
       </h2>
       <p className="mb-2.5 text-ink-2">
         {beam?.source ?? 'Without a beam the heater can be seen, not placed.'}
