@@ -9,14 +9,23 @@ function boundText(irradiance: number, unit: FluxUnit): string {
   return `${(Math.ceil(fromSi(irradiance, 'irradiance', system) * whole) / whole).toFixed(digits)} ${unit}`
 }
 
+/** What maps may lack, the most of them, because they leave far heaters out; null where none does. */
+export function farHeatersNote(
+  answers: readonly (Pick<MapAnswer, 'errorBound'> | null)[],
+  unit: FluxUnit,
+): string | null {
+  const bound = Math.max(0, ...answers.map((answer) => answer?.errorBound ?? 0))
+  return bound > 0 ? `Far heaters left out: at most ${boundText(bound, unit)} missing at any place.` : null
+}
+
 /** What stands beside the scale where a map is not plain: which efficiency it takes, what it leaves out. */
 export function mapNotes(
   { efficiency, fluxUnit }: ViewChoice,
   answer: Pick<MapAnswer, 'errorBound'> | null,
 ): readonly string[] {
-  const bound = answer?.errorBound ?? 0
+  const far = farHeatersNote([answer], fluxUnit)
   return [
     ...(efficiency === 'nominal' ? [] : [`Heat with ${efficiency} radiant efficiency; seat figures stay nominal.`]),
-    ...(bound > 0 ? [`Far heaters left out: at most ${boundText(bound, fluxUnit)} missing at any place.`] : []),
+    ...(far === null ? [] : [far]),
   ]
 }

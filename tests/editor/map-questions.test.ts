@@ -4,7 +4,7 @@ import { obstructionsOf } from '#app/domain/flux/shading.ts'
 import type { Cover } from '#app/domain/site/site.ts'
 import type { Vec3 } from '#app/domain/vector.ts'
 import { answerMap, emptyMapCache, type MapAnswer } from '#app/drawing/heat/map-picture.ts'
-import { mapNotes } from '#app/editor/map-notes.ts'
+import { farHeatersNote, mapNotes } from '#app/editor/map-notes.ts'
 import { emittersOf, mapQuestion, scaleOf, type MapSubject } from '#app/editor/map-questions.ts'
 import { mapValueAt } from '#app/editor/read-out.tsx'
 import { hasEfficiencyRange, offeredView, plainView, type ViewChoice } from '#app/editor/view-choice.ts'
@@ -177,6 +177,12 @@ describe('far heaters that a map leaves out', () => {
     expect(noted(0.01)).toEqual(['Far heaters left out: at most 1 W/m² missing at any place.'])
     // 9 W/m² are 0.836 W/ft²
     expect(noted(9, 'W/ft²')).toEqual(['Far heaters left out: at most 0.9 W/ft² missing at any place.'])
+  })
+
+  it('of maps beside each other, the most of them', () => {
+    const [less, more, none] = [{ errorBound: 2 }, { errorBound: 7.5 }, { errorBound: 0 }]
+    expect(farHeatersNote([less, null, more, none], 'W/m²')).toContain('at most 8 W/m²')
+    expect(farHeatersNote([null, none], 'W/m²')).toBeNull()
   })
 
   it('are not spoken of where none are', () => {

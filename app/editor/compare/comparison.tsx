@@ -10,6 +10,7 @@ import { houseFigure } from '#app/domain/rules/house-rules.ts'
 import { planesOf } from '#app/domain/site/planes.ts'
 import type { Site } from '#app/domain/site/site.ts'
 import { formatLength, formatQuantity } from '#app/domain/units.ts'
+import { farHeatersNote } from '#app/editor/map-notes.ts'
 import { LegendDrawing } from '#app/drawing/heat/legend.tsx'
 import { differenceScale, irradianceScale, overlapScale } from '#app/drawing/heat/quantity.ts'
 import { screenPen } from '#app/drawing/pen.ts'
@@ -89,6 +90,10 @@ export function Comparison({ site, brief, models: list, house, chosen, picker }:
   const words = first && complete ? compared.slice(1).map((other) => differencesInWords(first, other, terms)) : []
   const height = (metres: number) => formatLength(metres, site.displayUnits)
   const difference = show === 'difference'
+  const far = farHeatersNote(
+    maps.map(({ flux }) => flux),
+    'W/m²',
+  )
   const warmths = maps.map(({ figures }) => figures?.warmth ?? null)
   const signs = useMemo(() => {
     const all = maps.map(({ figures }) => figures?.warmth ?? null)
@@ -177,6 +182,7 @@ export function Comparison({ site, brief, models: list, house, chosen, picker }:
             ink="var(--color-ink)"
             width={Math.min(560, size.width)}
           />
+          {far && <span className="text-xs text-ink-2">{far}</span>}
         </div>
         {show === 'irradiance' && <RingLegend />}
         <p className="flex items-center print:hidden">
