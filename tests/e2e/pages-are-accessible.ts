@@ -34,6 +34,7 @@ for (const width of widths)
       '/jobs',
       '/jobs/new',
       '/heaters',
+      '/heaters/betony-2-0',
       '/rules',
       '/rules/house',
       '/rules/hanging',
