@@ -45,7 +45,7 @@ export function solidsOf(site: Site): Solid[] {
       const parts = keptParts(pole, () => [uprightCylinder(pole.at, pole.diameter / 2, [0, pole.top])])
       return fixed({ of: 'pole', id: pole.id }, pole.name, pole.material, parts)
     }),
-    ...site.obstacles.flatMap((obstacle) => obstacleSolids(obstacle, nameOf(site, obstacle))),
+    ...site.obstacles.flatMap((obstacle) => obstacleSolids(obstacle, obstacleName(site, obstacle))),
     ...site.tables.map(tableSolid),
   ]
 }
@@ -156,7 +156,7 @@ const there: Partial<Record<Obstacle['kind'], string>> = {
 }
 
 /** The obstacle's name, with its id where several have the same name. */
-function nameOf({ obstacles }: Site, { id, name }: Obstacle): string {
+export function obstacleName({ obstacles }: Site, { id, name }: Obstacle): string {
   return obstacles.some((other) => other.name === name && other.id !== id) ? `${name} (${id})` : name
 }
 
@@ -192,7 +192,7 @@ function statesOf(obstacle: Obstacle, name: string): readonly StateOf[] {
 
 /** The states of a movable thing in the words of conditions of use; a fixed thing has none. */
 export const stateWords = (site: Site, obstacle: Obstacle): readonly string[] =>
-  statesOf(obstacle, nameOf(site, obstacle)).flatMap(({ words }) => words ?? [])
+  statesOf(obstacle, obstacleName(site, obstacle)).flatMap(({ words }) => words ?? [])
 
 /** Convex solids that make up a shape, m. */
 function shapeParts(shape: Shape): Convex[] {

@@ -60,7 +60,7 @@ export default function ExplainPanel({ input, rules, seatId, warmth, units, flux
           options={Object.entries(figures).map(([value, { label }]) => ({ value, label }))}
         />
       </div>
-      {explained && <ExplainedFigure {...{ explained, units, fluxUnit }} />}
+      {explained && <ExplainedFigure {...{ explained, units, fluxUnit }} site={input.site} />}
     </section>
   )
 }

@@ -1,5 +1,6 @@
 import type { Explanation } from '#app/domain/comfort/explain.ts'
 import type { ExplainedInput } from '#app/domain/comfort/explained-inputs.ts'
+import type { Site } from '#app/domain/site/site.ts'
 import { formatLength, formatQuantity, type DisplayUnits } from '#app/domain/units.ts'
 import { ExplainedRows } from '#app/editor/panels/explained-rows.tsx'
 import { SeenHeaters } from '#app/editor/panels/seen-heaters.tsx'
@@ -8,12 +9,13 @@ import type { FluxUnit } from '#app/editor/view-choice.ts'
 
 interface ExplainedFigureProps {
   readonly explained: Explanation
+  readonly site: Site
   readonly units: DisplayUnits
   readonly fluxUnit: FluxUnit
 }
 
 /** One figure taken apart: its value and tolerance, each heater's share, what is seen of it, inputs, formula, source. */
-export function ExplainedFigure({ explained, units, fluxUnit }: ExplainedFigureProps) {
+export function ExplainedFigure({ explained, site, units, fluxUnit }: ExplainedFigureProps) {
   const difference = (value: number) => inUnit(value, explained.unit, 'temperature difference', units, fluxUnit)
   return (
     <>
@@ -25,7 +27,7 @@ export function ExplainedFigure({ explained, units, fluxUnit }: ExplainedFigureP
           .toSorted((a, b) => b.share - a.share)
           .map(({ heaterId, value, share }) => [heaterId, `${(share * 100).toFixed(1)} %`, difference(value)])}
       />
-      <SeenHeaters {...explained} />
+      <SeenHeaters {...explained} site={site} />
       {explained.tolerance && (
         <ExplainedRows
           caption="What its tolerance rests on"
@@ -60,7 +62,7 @@ export function ExplainedFigure({ explained, units, fluxUnit }: ExplainedFigureP
 }
 
 /** The figure with its tolerance, what it is with the heaters off, and what it is judged by. */
-function Value({ explained, units, fluxUnit }: ExplainedFigureProps) {
+function Value({ explained, units, fluxUnit }: Omit<ExplainedFigureProps, 'site'>) {
   const { value, base, unit, tolerance, words, whyNone, indoors, limits, cannotTell } = explained
   const text = (figure: number | null) =>
     figure === null ? noFigure : inUnit(figure, unit, 'temperature', units, fluxUnit)

@@ -35,7 +35,12 @@ const textOf = (markup: string) => markup.replaceAll(/<[^>]+>/g, ' ').replaceAll
 const shown = (given: ExplainInput, figure: SeatFigure) =>
   textOf(
     renderToStaticMarkup(
-      <ExplainedFigure explained={explainSeat(given, 'S1', figure, plainHouseRules)!} units="metric" fluxUnit="W/m²" />,
+      <ExplainedFigure
+        explained={explainSeat(given, 'S1', figure, plainHouseRules)!}
+        site={given.site}
+        units="metric"
+        fluxUnit="W/m²"
+      />,
     ),
   )
 
@@ -44,7 +49,7 @@ describe('a figure taken apart on the page', () => {
     const text = shown(input(), { quantity: 'body' })
     expect(text).toContain('With shade')
     expect(text).toContain('Seen of each heater from the body’s height')
-    expect(text).toContain('H1 50.0 % past awning-1')
+    expect(text).toContain('H1 50.0 % past Awning')
     expect(text).toContain('H2 100 % nothing in the way')
     expect(text).not.toContain('from the head’s height')
   })
@@ -60,15 +65,22 @@ describe('a figure taken apart on the page', () => {
       },
     }))
     expect(shown(input({ site: { ...input().site, obstacles: over } }), { quantity: 'body' })).toContain(
-      'H1 0 % hidden by awning-1',
+      'H1 0 % hidden by Awning',
     )
+  })
+
+  it('tells two things of one name by their ids', () => {
+    const [awning] = input().site.obstacles
+    const both = [awning!, { ...awning!, id: 'awning-2' }]
+    const text = shown(input({ site: { ...input().site, obstacles: both } }), { quantity: 'body' })
+    expect(text).toContain('past Awning (awning-1), Awning (awning-2)')
   })
 
   it('says without shade that it is so, and nothing of what is seen', () => {
     const text = shown(input({ shade: 'none' }), { quantity: 'body' })
     expect(text).toContain('Without shade: nothing is taken to stand in the way.')
     expect(text).not.toContain('Seen of each heater')
-    expect(text).not.toContain('awning-1')
+    expect(text).not.toMatch(/awning/i)
   })
 
   it('has the stop line with the largest irradiance at the body', () => {
